@@ -1,0 +1,3 @@
+export { closeDatabase, type Database, database, openDatabase } from './pool';
+export { inTransaction, type SiteTransaction } from './in-transaction';
+export * from './gate';
