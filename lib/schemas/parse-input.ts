@@ -1,5 +1,5 @@
 import { ServiceError } from '@/lib/domain/errors';
-import type * as z from './zod';
+import type * as z from 'zod';
 
 /** First message per field: one control shows one error. `''` is the form as a whole. */
 export function fieldErrorsOf(error: z.ZodError): Record<string, string> {
