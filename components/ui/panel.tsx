@@ -1,0 +1,71 @@
+'use client';
+
+import { useId, useState, type ReactNode } from 'react';
+import { cx } from './class-names';
+import { ChevronRightIcon } from './icons';
+
+export interface PanelProps {
+  title: ReactNode;
+  /** Beside the title: where values come from, a link. */
+  aside?: ReactNode;
+  children: ReactNode;
+  /** One line that stands in for the content while the panel is collapsed. */
+  summary?: ReactNode;
+  collapsible?: boolean;
+  defaultOpen?: boolean;
+  /** Controlled, when the open group follows something else. */
+  open?: boolean;
+  onOpenChange?: (open: boolean) => void;
+  /** Small capitals on cloth (bench) or a plain heading on paper (forms). */
+  tone?: 'bench' | 'paper';
+  level?: 2 | 3;
+  className?: string;
+  id?: string;
+}
+
+/** A titled group that can roll up to one line. Its content stays mounted, so nothing typed is lost. */
+export function Panel(props: PanelProps) {
+  const { title, aside, children, summary, collapsible = false, tone = 'paper', level = 2, className, id } = props;
+  const [ownOpen, setOwnOpen] = useState(props.defaultOpen ?? true);
+  const open = !collapsible || (props.open ?? ownOpen);
+  const contentId = useId();
+  const Heading = level === 2 ? 'h2' : 'h3';
+  const toggle = () => {
+    setOwnOpen(!open);
+    props.onOpenChange?.(!open);
+  };
+  const heading = tone === 'bench' ? 'text-sm font-semibold tracking-wider uppercase' : 'text-lg font-semibold';
+  return (
+    <section
+      id={id}
+      className={cx(tone === 'paper' ? 'rounded-md border border-line bg-paper' : 'border-b border-line', className)}
+    >
+      <div className={cx('flex items-baseline justify-between gap-4 px-4', open ? 'pt-3' : 'py-3')}>
+        <Heading className={cx('min-w-0', heading, tone === 'bench' && 'text-ink-soft')}>
+          {collapsible ? (
+            <button
+              type="button"
+              aria-expanded={open}
+              aria-controls={contentId}
+              onClick={toggle}
+              className="-mx-1 flex items-center gap-2 rounded px-1 text-left"
+            >
+              <ChevronRightIcon className={cx('transition-transform', open && 'rotate-90')} />
+              <span>{title}</span>
+            </button>
+          ) : (
+            title
+          )}
+        </Heading>
+        {!open && summary ? (
+          <p className="min-w-0 truncate text-sm text-ink-soft">{summary}</p>
+        ) : (
+          aside && <div className="flex-none text-sm">{aside}</div>
+        )}
+      </div>
+      <div id={contentId} hidden={!open} className="px-4 pt-2 pb-4">
+        {children}
+      </div>
+    </section>
+  );
+}
