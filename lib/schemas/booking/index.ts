@@ -1,0 +1,71 @@
+import '@/lib/schemas/fields/jitless';
+import * as z from 'zod';
+import type { BodyRegion, Verdict } from '@/lib/domain/case/model';
+import type { PlanState } from '@/lib/domain/plan/states';
+import type { PlanView } from '@/lib/schemas/plan';
+import type { PolicyView } from '@/lib/schemas/site-policy';
+import type { ProtocolView } from '@/lib/schemas/protocol';
+import type { ScannerView } from '@/lib/schemas/scanner';
+import type { SizeRecordView } from '@/lib/schemas/size-reading';
+import { count, day, refused, strict, words } from '@/lib/schemas/fields/fields';
+import { idSchema } from '@/lib/schemas/fields/ids';
+
+export const createBookingInput = strict({
+  accession: words(64, 'Accession or request number exactly as the worklist shows it; never a name or a date.'),
+  scheduledAt: z.iso
+    .datetime({ offset: true, error: refused('a moment with its offset, such as 2026-12-01T10:40:00+01:00') })
+    .describe('Start of the slot.'),
+  slotMinutes: count({ min: 5, max: 480, unit: 'minutes', text: 'Length of the slot' }),
+  scannerId: idSchema.describe('Booked scanner.'),
+  protocolId: idSchema.describe('Booked protocol.'),
+});
+export type CreateBooking = z.output<typeof createBookingInput>;
+
+export const listBookingsInput = strict({
+  from: day('First day, YYYY-MM-DD.').optional(),
+  to: day('Last day, YYYY-MM-DD.').optional(),
+  limit: count({ min: 1, max: 200, text: 'Most bookings in one answer' }).default(50),
+  after: z
+    .string({ error: refused('the cursor of the page before') })
+    .max(200, { error: refused('the cursor of the page before') })
+    .describe('Cursor of the page before.')
+    .optional(),
+});
+export type ListBookings = z.output<typeof listBookingsInput>;
+
+export interface BookingListItem {
+  readonly id: string;
+  readonly accession: string;
+  readonly scheduledAt: string;
+  readonly slotMinutes: number;
+  readonly region: BodyRegion;
+  readonly scannerId: string;
+  readonly scannerName: string;
+  readonly protocolId: string;
+  readonly protocolName: string;
+  /** Worst verdict of its sequences, with the plan if there is one; absent until it was worked out. */
+  readonly verdict?: Verdict;
+  readonly planState?: PlanState;
+  readonly planId?: string;
+  readonly planShortCode?: string;
+  /** Scan minutes of all sequences; absent until worked out. */
+  readonly minutesNeeded?: number;
+  readonly changedAt: string;
+}
+
+export interface BookingPage {
+  readonly bookings: readonly BookingListItem[];
+  /** Give as `after` for the next page; absent on the last. */
+  readonly next?: string;
+}
+
+/** Everything the bench needs, in one answer. */
+export interface BenchView {
+  readonly booking: BookingListItem;
+  readonly sizeRecord: SizeRecordView;
+  readonly scanner: ScannerView;
+  readonly protocol: ProtocolView;
+  readonly policy: PolicyView;
+  /** Newest plan of the booking, if any. */
+  readonly plan?: PlanView;
+}
