@@ -1,0 +1,23 @@
+import type { Case } from '@/lib/physics/model/case';
+import type { Remedy } from '@/lib/physics/model/remedy';
+import { keepClearOf, type BenchDocument, type BenchSequence, type BenchSetting } from './bench-document';
+
+/** The question one sequence of the bench puts to the engine. */
+export function caseOf(document: BenchDocument, setting: BenchSetting, sequence: BenchSequence): Case {
+  return {
+    patient: document.patient,
+    prescription: sequence.prescription,
+    keepClear: keepClearOf(document, sequence),
+    scanner: document.scanner,
+    policy: setting.policy,
+  };
+}
+
+/** The same question after a remedy, for drawing what is tried. */
+export function triedCase(present: Case, remedy: Remedy): Case {
+  return {
+    ...present,
+    patient: { ...present.patient, arms: { ...present.patient.arms, position: remedy.arms } },
+    prescription: remedy.prescription,
+  };
+}
