@@ -63,6 +63,8 @@ export interface Slab {
   readonly timeBandwidthProduct?: number;
   /** Pulse duration, ms; absent: fat's slab shift is not worked out and said so. */
   readonly pulseDurationMs?: number;
+  /** Slab end (low: towards −slice axis) that fat's slab is shifted to; absent: unknown, both are taken. */
+  readonly fatShiftTowards?: 'low-end' | 'high-end';
   /** End partitions given up each end, out of the keep-clear area. */
   readonly droppedPartitionsPerEnd: number;
 }
