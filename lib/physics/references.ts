@@ -167,4 +167,22 @@ export const REFERENCES: readonly Reference[] = [
     pages: 'MR Image Module; Percent Phase Field of View, Percent Sampling; patient coordinate system',
     standing: 'from memory',
   },
+  {
+    key: 'codata-2018',
+    authors: 'Tiesinga E, Mohr PJ, Newell DB, Taylor BN',
+    year: 2021,
+    title: 'CODATA recommended values of the fundamental physical constants: 2018',
+    where: 'Rev Mod Phys 93',
+    pages: '025010 (proton gyromagnetic ratio)',
+    standing: 'from memory',
+  },
+  {
+    key: 'ernst-1966',
+    authors: 'Ernst RR, Anderson WA',
+    year: 1966,
+    title: 'Application of Fourier transform spectroscopy to magnetic resonance',
+    where: 'Rev Sci Instrum 37',
+    pages: '93–102',
+    standing: 'from memory',
+  },
 ];

@@ -6,7 +6,7 @@ import { FAT_WATER_SHIFT_PPM, PROTON_GYROMAGNETIC_RATIO_MHZ_PER_T } from './prot
  * @param fieldStrengthT B0 [T], > 0
  * @returns [MHz]; 63.87 at 1.5 T, 127.73 at 3 T
  * @throws DomainError "field-strength-not-positive"
- * Source: [CODATA2018], from memory.
+ * Source: [codata-2018], from memory.
  */
 export function larmorFrequencyMhz(fieldStrengthT: number): number {
   if (!(fieldStrengthT > 0) || !Number.isFinite(fieldStrengthT)) {
@@ -20,7 +20,7 @@ export function larmorFrequencyMhz(fieldStrengthT: number): number {
  * @param fieldStrengthT B0 [T], > 0
  * @returns [Hz] > 0; 223.5 at 1.5 T, 447.1 at 3 T
  * @throws DomainError "field-strength-not-positive"
- * Valid: the main methylene peak; fat's other peaks are not modelled. Source: [Bernstein2004], from memory.
+ * Valid: the main methylene peak; fat's other peaks are not modelled. Source: [bernstein-2004], from memory.
  */
 export function fatWaterShiftHz(fieldStrengthT: number): number {
   return FAT_WATER_SHIFT_PPM * larmorFrequencyMhz(fieldStrengthT);

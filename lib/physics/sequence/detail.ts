@@ -9,7 +9,7 @@ import { requirePositive, requireRange, requireWhole } from './check-argument';
  * zero-filled at nominal voxel h = 1/√f (the noise of the missing lines is missing too; the picture is blurred).
  * @param fraction 0.5 < f ≤ 1
  * @returns [1]; 1 at f = 1
- * Source: [Noll1991], [Macovski1996]; measured in fixtures/published/snr-time.
+ * Source: [noll-1991], [macovski-1996]; measured in fixtures/published/snr-time.
  */
 export function partialFourierSnr(fraction: number, fill: 'conjugate' | 'zero-filled'): number {
   if (!(fraction > 0.5)) requireRange('partial-fourier-out-of-range', 'partialFourier', fraction, 0.5 + 1e-9, 1);
@@ -21,7 +21,7 @@ export function partialFourierSnr(fraction: number, fill: 'conjugate' | 'zero-fi
  * SNR factor of parallel imaging: 1/√(R·g²·(1 − ρ) + ρ), ρ the share of used k-space in reference lines that enter
  * the image. N 64, R 2, ref 16 (ρ = 0.25), g 1.22: 0.635.
  * @param factor R = R_y·R_z ≥ 1; geometryFactor g ≥ 1; referenceShare 0 ≤ ρ ≤ 1
- * Source: [Pruessmann1999].
+ * Source: [pruessmann-1999].
  */
 export function parallelImagingSnr(factor: number, geometryFactor: number, referenceShare: number): number {
   requireRange('acceleration-out-of-range', 'factor', factor, 1, 4096);
@@ -68,7 +68,7 @@ export interface DetailOptions {
  * value at the middle of g.
  * @throws DomainError naming the argument
  * Valid: same coil, field, tissue, TR, TE and flip in both assessments compared. For single-shot trains √(1+s) is an
- * upper bound (later echoes carry less signal). Source: [Edelstein1986], [Macovski1996], [Pruessmann1999], [Noll1991].
+ * upper bound (later echoes carry less signal). Source: [edelstein-1986], [macovski-1996], [pruessmann-1999], [noll-1991].
  */
 export function detail(prescription: Prescription, { geometryFactor }: DetailOptions): DetailResult {
   const p = prescription;

@@ -9,7 +9,7 @@ import { ceilCount, requirePositive, requireWhole } from './check-argument';
  * @param echoSpacingMs ESP [ms] > 0; acquiredWidthMm W [mm] > 0; factor R ≥ 1; shots whole ≥ 1
  * @returns [mm], signed like Δf
  * @throws DomainError for a width, spacing or factor that is not positive
- * Valid: Cartesian blipped EPI, one polarity of the blips. Source: [Bernstein2004], from memory.
+ * Valid: Cartesian blipped EPI, one polarity of the blips. Source: [bernstein-2004], from memory.
  */
 export function epiDisplacementMm(
   offResonanceHz: number,
@@ -28,7 +28,7 @@ export function epiDisplacementMm(
 /**
  * Shift of fat along the readout direction: Δx = Δf/(bandwidth per pixel) · pixel.
  * @returns pixels and mm, both > 0
- * Source: [Bernstein2004], from memory.
+ * Source: [bernstein-2004], from memory.
  */
 export function chemicalShift(
   fieldStrengthT: number,

@@ -2,7 +2,7 @@ import { ceilCount } from './check-argument';
 
 /*
  * The textbook forms, one a family; TR in seconds, counts whole, result in seconds.
- * Source: [Bernstein2004], from memory. Arguments are checked where a prescription is read (scan-time.ts).
+ * Source: [bernstein-2004], from memory. Arguments are checked where a prescription is read (scan-time.ts).
  */
 
 /** Spin echo, gradient echo, interleaved 2D: TR·Y_acq·averages·batches. */

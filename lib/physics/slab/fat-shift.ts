@@ -6,7 +6,7 @@ import { fatWaterShiftHz } from '../constants/larmor';
  * @param fieldStrengthT [T] > 0; pulseDurationMs T_rf [ms] > 0; timeBandwidthProduct TBW > 0
  * @returns [1] > 0; TBW 8, 1 ms, 3 T: 0.056
  * @throws DomainError "pulse-duration-not-positive", "time-bandwidth-out-of-range", "field-strength-not-positive"
- * Valid: magnitude only; the side depends on the gradient's polarity. Source: [Bernstein2004], from memory.
+ * Valid: magnitude only; the side depends on the gradient's polarity. Source: [bernstein-2004], from memory.
  */
 export function fatShiftShare(fieldStrengthT: number, pulseDurationMs: number, timeBandwidthProduct: number): number {
   if (!(pulseDurationMs > 0) || !Number.isFinite(pulseDurationMs)) {

@@ -11,16 +11,16 @@ export const SINGLE_PULSE_SKIRT_RULE: Readonly<Record<1 | 2 | 5 | 10, number>> =
 /** k for a spoiled 3D gradient echo at 10–15°, 5 % of plateau. Source: fixtures/published/slab-profile. */
 export const SPOILED_SKIRT_RULE_5_PCT = 1.55;
 
-/** Full transition of a minimax pulse, D∞(1 %, 1 %), and how much wider a Hamming sinc's is. Source: [Pauly1991]. */
+/** Full transition of a minimax pulse, D∞(1 %, 1 %), and how much wider a Hamming sinc's is. Source: [pauly-1991]. */
 export const HAMMING_SINC_TRANSITION_RATIO = 1.5;
 
 /**
  * D∞(δ1, δ2) of the equiripple filter, which a minimax slab pulse's full transition width follows: width/slab = D∞/TBW.
- * log10 form with the published coefficients; D∞(0.01, 0.01) = 1.944.
+ * A polynomial in log10 δ1 times log10 δ2 with the published coefficients; D∞(0.01, 0.01) = 1.944.
  * @param passbandRipple δ1, stopbandRipple δ2: 1e-5 … 0.1 of plateau
  * @returns [1]
  * @throws DomainError "ripple-out-of-range"
- * Source: [Pauly1991] (coefficients from memory; the value at 1 % is the check).
+ * Source: [pauly-1991] (coefficients from memory; the value at 1 % is the check).
  */
 export function transitionProduct(passbandRipple: number, stopbandRipple: number): number {
   for (const [argument, ripple] of [

@@ -49,7 +49,7 @@ function requireSpec(spec: SlabProfileSpec): void {
  * further 2e-5 for single-pulse) and skirtShare(threshold)
  * @throws DomainError "time-bandwidth-out-of-range", "flip-out-of-range", "tr-not-positive", "t1-not-positive"
  * Valid: one pulse shape; no relaxation during the pulse, no off-resonance (fat: shift the slab, fat-shift.ts).
- * Source: [Pauly1989], [Pauly1991]; measured in fixtures/published/slab-profile.
+ * Source: [pauly-1989], [pauly-1991]; measured in fixtures/published/slab-profile.
  */
 export function slabProfile(spec: SlabProfileSpec): SlabProfile {
   requireSpec(spec);

@@ -4,7 +4,7 @@
  * turns on-resonant spins by the flip angle.
  * @param timeBandwidthProduct TBW > 0; flipDeg [degree]; steps whole, steps of the half
  * @returns 2·steps numbers
- * Source: [Pauly1991].
+ * Source: [pauly-1991].
  */
 export function halfPulse(timeBandwidthProduct: number, flipDeg: number, steps: number): Float64Array {
   const shape = new Float64Array(steps);

@@ -16,7 +16,7 @@ const PAD = 2;
  * symmetric and the pulse is symmetric in time, so the whole pulse is U = Hᵀ·H with H its first half: half the steps do,
  * and β = 2i·Im(a*·b) is purely imaginary and even in z. β is band-limited in z because the pulse is limited in time, so
  * β, not |Mxy| with its cusps, is what is tabulated and interpolated.
- * Source: [Pauly1991]; deviations: none.
+ * Source: [pauly-1991]; deviations: none.
  */
 export class SlabResponse {
   private readonly tips: Float64Array;
