@@ -48,8 +48,11 @@ export function linkActor(siteId: string, subjectId: string): LinkActor {
   return { kind: 'link', siteId, userId: null, subjectId, roles: [] };
 }
 
+/** Stands for the worker where an id is needed. */
+export const NOBODY_ID = '00000000-0000-0000-0000-000000000000';
+
 /** How the audit log names who acted. */
-export function actorReference(actor: Actor): { kind: Actor['kind']; id: string | null } {
+export function actorReference(actor: Actor): { readonly kind: Actor['kind']; readonly id: string } {
   switch (actor.kind) {
     case 'user':
       return { kind: actor.kind, id: actor.userId };
@@ -58,6 +61,6 @@ export function actorReference(actor: Actor): { kind: Actor['kind']; id: string 
     case 'link':
       return { kind: actor.kind, id: actor.subjectId };
     case 'system':
-      return { kind: actor.kind, id: null };
+      return { kind: actor.kind, id: NOBODY_ID };
   }
 }

@@ -1,0 +1,2 @@
+export * from './password-rule';
+export * from './person';
