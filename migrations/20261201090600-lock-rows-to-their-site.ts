@@ -20,7 +20,7 @@ const APP_GRANTS: Record<string, string> = {
   plan_version: 'select, insert',
   sign_off: 'select, insert',
   outcome: 'select, insert',
-  mail_outbox: 'select, insert, update (status, attempts, next_attempt_at, sent_at, last_error)',
+  mail_outbox: 'select, insert, update (status, attempts, next_attempt_at, sent_at, last_error, payload)',
   audit_event: 'select, insert',
 };
 

@@ -1,0 +1,24 @@
+import { execFile } from 'node:child_process';
+import { createHash } from 'node:crypto';
+import { mkdir } from 'node:fs/promises';
+import path from 'node:path';
+import { promisify } from 'node:util';
+
+const execFileAsync = promisify(execFile);
+
+/**
+ * The data folder itself, unless root started us in a place that the postgres account cannot enter
+ * (root's home is closed to others): then a folder of our own under /var/lib, named after the data folder.
+ */
+export async function placeForCluster(dataDir: string): Promise<string> {
+  if (process.getuid?.() !== 0) return dataDir;
+  const reachable = await execFileAsync('runuser', ['-u', 'postgres', '--', 'test', '-x', dataDir], { cwd: '/' }).then(
+    () => true,
+    () => false,
+  );
+  if (reachable) return dataDir;
+  const name = createHash('sha256').update(path.resolve(dataDir)).digest('hex').slice(0, 12);
+  const place = path.join('/var/lib/selvedge', name);
+  await mkdir(place, { recursive: true, mode: 0o755 });
+  return place;
+}

@@ -1,0 +1,1 @@
+export { type Environment, EnvironmentError, environment, parseEnvironment } from './environment';

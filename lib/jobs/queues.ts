@@ -1,0 +1,14 @@
+import * as z from 'zod';
+
+/**
+ * Every queue with the shape of its payload: the site and ids, nothing else. The handler opens a transaction for that
+ * site and reads the rest, so a job can never carry stale or foreign data.
+ */
+export const QUEUES = {
+  'deliver-mail': z.strictObject({ siteId: z.uuid(), outboxId: z.uuid() }),
+} as const;
+
+export type QueueName = keyof typeof QUEUES;
+export type JobPayload<Name extends QueueName> = z.infer<(typeof QUEUES)[Name]>;
+
+export const QUEUE_NAMES = Object.keys(QUEUES) as QueueName[];
