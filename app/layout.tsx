@@ -1,7 +1,6 @@
 import type { Metadata, Viewport } from 'next';
-import { cookies } from 'next/headers';
 import type { ReactNode } from 'react';
-import { parseTheme, THEME_COOKIE } from '@/components/shell/theme';
+import { currentTheme } from '@/components/shell/read-theme';
 import { StatusProvider } from '@/components/ui/status';
 import { fontVariables } from './fonts';
 import './globals.css';
@@ -13,14 +12,13 @@ export const metadata: Metadata = {
   title: { default: 'Selvedge', template: '%s · Selvedge' },
   description:
     'Works out what will wrap around in an MR picture of a given patient, and ranks the cheapest ways to keep it out of the part that matters.',
-  icons: { icon: '/mark.svg' },
   robots: { index: false, follow: false },
 };
 
 export const viewport: Viewport = { width: 'device-width', initialScale: 1, colorScheme: 'light dark' };
 
 export default async function RootLayout({ children }: { children: ReactNode }) {
-  const theme = parseTheme((await cookies()).get(THEME_COOKIE)?.value);
+  const theme = await currentTheme();
   return (
     <html lang="en-GB" className={fontVariables} data-theme={theme === 'system' ? undefined : theme}>
       <body className="bg-cloth text-ink antialiased">
