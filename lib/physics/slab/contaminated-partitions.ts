@@ -2,12 +2,12 @@ import type { PartitionResult } from '../model/assessment';
 import { DomainError } from '../model/domain-error';
 import type { SlabQuestion, SlabSource, TissueAlongSlab } from './slab-types';
 
-/** Grid decisions compare after rounding to this (signal shares), so that browser and server agree. */
-const SHARE_QUANTUM = 1e-6;
+/** Shares are rounded to 1 / this before they are compared, so that browser and server agree. */
+const SHARES_PER_UNIT = 1e6;
 const DIM_BELOW = 0.9;
 const BRIGHT_ABOVE = 1.1;
 
-const rounded = (share: number): number => Math.round(share / SHARE_QUANTUM) * SHARE_QUANTUM;
+const rounded = (share: number): number => Math.round(share * SHARES_PER_UNIT) / SHARES_PER_UNIT;
 
 function tissueWeight(tissue: TissueAlongSlab, offsetMm: number): number {
   if (offsetMm < tissue.rangeMm[0] || offsetMm > tissue.rangeMm[1]) return 0;

@@ -1,7 +1,7 @@
 import { halfPulse } from './slab-pulse';
 
 /** Hard pulses in half the pulse: enough that the profile is within 2e-5 of the continuous Bloch equations. */
-const HALF_STEPS_PER_TBW = 50;
+const HALF_STEPS_PER_TBW = 80;
 const LEAST_HALF_STEPS = 300;
 /** Grid points a slab thickness; keeps six-point interpolation of β within 1e-6. */
 const POINTS_PER_TBW = 12;

@@ -1,0 +1,50 @@
+import { readFileSync } from 'node:fs';
+
+/** Splits one CSV line; double quotes protect commas, a doubled quote stands for itself. */
+function splitLine(line: string): string[] {
+  const cells: string[] = [];
+  let cell = '';
+  let quoted = false;
+  for (let i = 0; i < line.length; i += 1) {
+    const character = line[i]!;
+    if (quoted) {
+      if (character !== '"') cell += character;
+      else if (line[i + 1] === '"') {
+        cell += '"';
+        i += 1;
+      } else quoted = false;
+    } else if (character === '"') quoted = true;
+    else if (character === ',') {
+      cells.push(cell);
+      cell = '';
+    } else cell += character;
+  }
+  cells.push(cell);
+  return cells;
+}
+
+export interface PublishedRow {
+  text(column: string): string;
+  number(column: string): number;
+}
+
+/** Rows of fixtures/published/<key>/values.csv; a missing column or a cell that is no number fails the test. */
+export function readPublished(key: string): readonly PublishedRow[] {
+  const file = new URL(`../../fixtures/published/${key}/values.csv`, import.meta.url);
+  const [head, ...lines] = readFileSync(file, 'utf8').trim().split(/\r?\n/).map(splitLine);
+  return lines.map((cells) => {
+    const text = (column: string): string => {
+      const cell = cells[head!.indexOf(column)];
+      if (cell === undefined) throw new Error(`${key}: no column ${column}`);
+      return cell;
+    };
+    return {
+      text,
+      number: (column) => {
+        const value = Number(text(column));
+        if (text(column) === '' || Number.isNaN(value)) throw new Error(`${key}: ${column} is "${text(column)}"`);
+        return value;
+      },
+    };
+  });
+}
