@@ -9,24 +9,36 @@ export interface Service {
   readonly child: ChildProcess;
   /** Resolves when the process is gone, with how it went. */
   readonly gone: Promise<string>;
+  /** The last of what it printed. */
+  lastWords(): string;
 }
+
+export type Env = Record<string, string | undefined>;
 
 /**
  * Starts a Node process in a process group of its own, so that Ctrl-C at the terminal reaches the supervisor only and
  * the supervisor stops everything in order; what the process itself starts dies with its group.
  */
-export function startService(name: string, args: readonly string[], env: NodeJS.ProcessEnv): Service {
+export function startService(
+  name: string,
+  args: readonly string[],
+  env: Env,
+  options: { readonly quiet?: boolean } = {},
+): Service {
   const child = spawn(process.execPath, ['--import', EXIT_WITH_PARENT, ...args], {
     cwd: ROOT,
-    env,
+    env: env as NodeJS.ProcessEnv,
     detached: true,
     stdio: ['ignore', 'pipe', 'pipe', 'ipc'],
   });
+  let heard = '';
   for (const [stream, out] of [[child.stdout, process.stdout], [child.stderr, process.stderr]] as const) {
     let rest = '';
     stream?.setEncoding('utf8').on('data', (text: string) => {
       const lines = (rest + text).split('\n');
       rest = lines.pop() ?? '';
+      heard = `${heard}${text}`.slice(-8000);
+      if (options.quiet) return;
       for (const line of lines) if (line.trim()) out.write(`${name.padEnd(6)} ${line}\n`);
     });
   }
@@ -34,7 +46,7 @@ export function startService(name: string, args: readonly string[], env: NodeJS.
     child.once('error', (error) => resolve(error.message));
     child.once('exit', (code, signal) => resolve(signal ?? `exit code ${code}`));
   });
-  return { name, child, gone };
+  return { name, child, gone, lastWords: () => heard };
 }
 
 function signalGroup(service: Service, signal: NodeJS.Signals): void {

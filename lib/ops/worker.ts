@@ -1,0 +1,66 @@
+import PgBoss from 'pg-boss';
+import { closeDatabase, dueWork, requireSchema } from '@/db/client';
+import { environment } from '@/lib/env';
+import { type JobPayload, QUEUES } from '@/lib/jobs';
+import { smtpTransport } from '@/lib/mail';
+import { deliverMail } from '@/lib/services/mail/deliver-mail';
+
+/**
+ * The process that does slow and outward work. A queued job is only a wake-up call: what is due is in our own tables,
+ * and a sweep of them finds whatever a lost or expired job left behind.
+ */
+const SWEEP_SECONDS = Number(process.env.SELVEDGE_SWEEP_SECONDS ?? 5);
+
+async function main(): Promise<void> {
+  const { databaseUrl } = environment();
+  await requireSchema();
+  const transport = smtpTransport();
+  const boss = new PgBoss({ connectionString: databaseUrl, max: 4, migrate: false, schedule: false });
+  boss.on('error', (error) => console.error(`queue: ${error.message}`));
+  await boss.start();
+
+  const deliver = async (payload: JobPayload<'deliver-mail'>) => {
+    const result = await deliverMail(payload, transport);
+    if (result !== 'nothing to do') console.log(`mail ${payload.outboxId}: ${result}`);
+  };
+  await boss.work('deliver-mail', { batchSize: 5, pollingIntervalSeconds: 1 }, async (jobs) => {
+    for (const job of jobs) await deliver(QUEUES['deliver-mail'].parse(job.data));
+  });
+
+  let stopping = false;
+  const sweep = async () => {
+    for (const { siteId, id } of await dueWork('mail', 50)) {
+      if (stopping) return;
+      await deliver({ siteId, outboxId: id });
+    }
+  };
+  let timer: NodeJS.Timeout | undefined;
+  let sweeping: Promise<void> = Promise.resolve();
+  const again = () => {
+    timer = setTimeout(() => {
+      sweeping = sweep()
+        .catch((error: Error) => console.error(`sweep: ${error.message}`))
+        .finally(() => !stopping && again());
+    }, SWEEP_SECONDS * 1000);
+  };
+  again();
+  console.log('working');
+
+  const stop = async () => {
+    if (stopping) return;
+    stopping = true;
+    clearTimeout(timer);
+    await sweeping;
+    await boss.stop({ graceful: true, timeout: 5000 });
+    transport.close();
+    await closeDatabase();
+    process.exit(0);
+  };
+  process.on('SIGTERM', () => void stop());
+  process.on('SIGINT', () => void stop());
+}
+
+await main().catch((error: Error) => {
+  console.error(error.message);
+  process.exit(1);
+});
