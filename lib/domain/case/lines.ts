@@ -1,32 +1,32 @@
-import type { LineStep, PatientAxis, Plane } from '@/lib/domain/case/model';
+import type { PatientAxis, Plane, Prescription, Scanner } from '@/lib/domain/case/model';
+import { acquiredLines, acquiredPartitions, nextAcquiredLines } from '@/lib/physics/fold/acquired-lines';
+import type { LineStep } from '@/lib/physics/model/scanner';
 
-/** Rounding noise of N·(1 + s): 7 % of 300 is 321.00000000000006 in binary and must stay 321. */
-const LINE_NOISE = 1e-9;
-
-/**
- * Acquired lines a request for phase oversampling becomes: ⌈N(1 + s) − 1e-9⌉, then up to the scanner's own step.
- * A doubling switch knows only N and 2N.
- */
+/** Acquired lines a request for phase oversampling in percent becomes. @throws DomainError beyond a doubling switch */
 export function acquiredLinesFor(linesAcrossFov: number, oversamplingPct: number, step: LineStep): number {
-  const asked = Math.ceil(linesAcrossFov * (1 + oversamplingPct / 100) - LINE_NOISE);
-  switch (step.kind) {
-    case 'line':
-      return asked;
-    case 'even-lines':
-      return asked + (asked % 2);
-    case 'percent': {
-      const steps = Math.ceil(oversamplingPct / step.percent - LINE_NOISE);
-      return Math.ceil(linesAcrossFov * (1 + (steps * step.percent) / 100) - LINE_NOISE);
-    }
-    case 'doubling':
-      return asked <= linesAcrossFov ? linesAcrossFov : 2 * linesAcrossFov;
-  }
+  return acquiredLines(linesAcrossFov, oversamplingPct / 100, step);
 }
 
 /** Whole partitions a request for slice oversampling becomes, in the scanner's own step. */
 export function acquiredPartitionsFor(partitions: number, oversamplingPct: number, partitionStep: number): number {
-  const extra = Math.ceil((partitions * oversamplingPct) / 100 - LINE_NOISE);
-  return partitions + Math.ceil(extra / partitionStep) * partitionStep;
+  return acquiredPartitions(partitions, oversamplingPct / 100, partitionStep);
+}
+
+/**
+ * A protocol's sequence as this scanner can take it: the lines it asks for on the scanner's own step (never fewer),
+ * and what the scanner says about unfolding when the protocol does not. A request beyond a doubling switch stays as
+ * it is; the engine then says why it cannot be scanned.
+ */
+export function onScanner(prescription: Prescription, scanner: Scanner): Prescription {
+  const { linesAcrossFov, acquiredLines: wanted, acceleration } = prescription;
+  return {
+    ...prescription,
+    acquiredLines: nextAcquiredLines(linesAcrossFov, wanted, scanner.lineStep) ?? wanted,
+    acceleration: {
+      ...acceleration,
+      unfolding: acceleration.unfolding === 'unknown' ? scanner.unfolding : acceleration.unfolding,
+    },
+  };
 }
 
 /** The two patient axes a plane shows. */

@@ -51,12 +51,14 @@ export const slabShape = {
     .optional(),
   pulseDurationMs: quantity({ min: 0.05, max: 30, unit: 'ms', text: 'Duration of the slab pulse; left out: unknown' })
     .optional(),
+  fatShiftTowards: choice(['low-end', 'high-end'], 'Slab end fat’s slab is shifted to (low: towards right, anterior or inferior); left out: unknown, both are taken.')
+    .optional(),
   droppedPartitionsPerEnd: count({ min: 0, max: 256, unit: 'partitions', text: 'End partitions given up each end' }),
 } satisfies ShapeOf<Slab>;
 
 export const presaturationShape = {
   side: choice(SIDE_NAMES, 'Side of the patient the band lies on.'),
-  innerEdgeMm: quantity({ min: 0, max: 1000, unit: 'mm', text: 'Distance of the inner edge from the origin' }),
+  innerEdgeMm: quantity({ min: -1000, max: 1000, unit: 'mm', text: 'Distance of the inner edge from the origin' }),
   thicknessMm: quantity({ min: 1, max: 500, unit: 'mm', text: 'Band thickness' }),
   nominalFlipDeg: quantity({ min: 1, max: 180, unit: 'degrees', text: 'Nominal flip angle' }),
   delayMs: quantity({ min: 0, max: 1000, unit: 'ms', text: 'Delay from the band’s pulse to excitation' }),
@@ -88,7 +90,7 @@ export const prescriptionShape = {
   trMs: quantity({ min: 0.5, max: 60000, unit: 'ms', text: 'Repetition time; for single-shot, time per slice' }),
   teMs: quantity({ min: 0.01, max: 2000, unit: 'ms', text: 'Echo time' }),
   flipDeg: quantity({ min: 0.1, max: 180, unit: 'degrees', text: 'Excitation flip angle' }),
-  averages: quantity({ min: 0.5, max: 64, unit: '1', text: 'Averages' }),
+  averages: count({ min: 1, max: 256, text: 'Averages' }),
   partialFourierPhase: fraction('Fraction of lines acquired along phase'),
   partialFourierSlice: fraction('Fraction of partitions acquired along slice'),
   partialFourierFill: choice(['conjugate', 'zero-filled'], 'How missing lines are filled.'),
@@ -129,6 +131,9 @@ export function refinePrescription(value: Prescription, report: (path: string[],
     if (2 * droppedPartitionsPerEnd >= partitions) {
       report(['slices', 'droppedPartitionsPerEnd'], `${droppedPartitionsPerEnd} given; allowed: fewer than half of ${partitions}`);
     }
+  }
+  if (!is3d && value.acceleration.factorSlice !== 1) {
+    report(['acceleration', 'factorSlice'], `${value.acceleration.factorSlice} given; allowed for a stack of slices: 1`);
   }
   if (value.acceleration.referenceLines > value.acquiredLines) {
     report(['acceleration', 'referenceLines'], `${value.acceleration.referenceLines} given; allowed: up to the ${value.acquiredLines} lines acquired`);

@@ -1,7 +1,7 @@
 import '@/lib/schemas/fields/jitless';
 import { acquiredLinesFor, acquiredPartitionsFor } from '@/lib/domain/case/lines';
 import {
-  DEFAULT_POLICY, SIDES, type Case, type KeepClear, type Patient, type PatientBox, type Prescription, type Reading,
+  DEFAULT_POLICY, DomainError, SIDES, type Case, type KeepClear, type Patient, type PatientBox, type Prescription, type Reading,
   type Scanner, type Side, type SitePolicy, type SolidPart,
 } from '@/lib/domain/case/model';
 import { CASE_DEFAULTS, caseInput, type CaseInput, type ParsedCaseInput } from '@/lib/schemas/case/case-input';
@@ -69,6 +69,17 @@ function either<T>(report: Report, path: string, name: string, value: T | undefi
   return value ?? fromOther;
 }
 
+/** A request the scanner's step cannot meet is an issue of the field that asked for it. */
+function onStep(report: Report, path: string, work: () => number): number | undefined {
+  try {
+    return work();
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error;
+    report(path, error.message);
+    return undefined;
+  }
+}
+
 function toSlices(input: ParsedCaseInput['prescription'], scanner: Scanner, report: Report): Prescription['slices'] {
   const { slices } = input;
   if (slices === undefined) return { mode: 'stack', slices: 1, thicknessMm: 5, gapMm: 0 };
@@ -94,7 +105,11 @@ function toPrescription(input: ParsedCaseInput['prescription'], scanner: Scanner
       percentSampling === undefined ? undefined : Math.round((squareLines * percentSampling) / 100)) ?? Math.round(squareLines);
   const acquiredLines =
     either(report, path, 'acquiredLines', input.acquiredLines, 'phaseOversamplingPct',
-      phaseOversamplingPct === undefined ? undefined : acquiredLinesFor(linesAcrossFov, phaseOversamplingPct, scanner.lineStep)) ?? linesAcrossFov;
+      phaseOversamplingPct === undefined
+        ? undefined
+        : onStep(report, `${path}.phaseOversamplingPct`, () =>
+            acquiredLinesFor(linesAcrossFov, phaseOversamplingPct, scanner.lineStep),
+          )) ?? linesAcrossFov;
   return {
     ...rest,
     phaseAxis: input.phaseAxis ?? (input.plane === 'coronal' ? 'RL' : 'AP'),

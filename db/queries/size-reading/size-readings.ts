@@ -1,0 +1,51 @@
+import type { SiteTransaction } from '@/db/client';
+import type { ReadingSource } from '@/lib/domain/case/model';
+import type { SizeQuantity } from '@/lib/domain/size-reading/quantities';
+import type { SizeReading } from '@/lib/domain/size-reading/size-reading';
+
+/** All readings of a booking, newest first. They are only ever added, so the newest of a quantity is what counts. */
+export async function listSizeReadings(trx: SiteTransaction, siteId: string, bookingId: string): Promise<SizeReading[]> {
+  const rows = await trx
+    .selectFrom('size_reading')
+    .select(['id', 'quantity', 'value', 'source', 'spread', 'taken_on', 'recorded_at'])
+    .where('site_id', '=', siteId)
+    .where('booking_id', '=', bookingId)
+    .orderBy('recorded_at', 'desc')
+    .orderBy('id')
+    .execute();
+  return rows.map((row) => ({
+    id: row.id,
+    quantity: row.quantity as SizeQuantity,
+    value: row.value,
+    source: row.source as ReadingSource,
+    spread: row.spread,
+    takenOn: row.taken_on,
+    recordedAt: row.recorded_at,
+  }));
+}
+
+export async function insertSizeReadings(
+  trx: SiteTransaction,
+  siteId: string,
+  bookingId: string,
+  readings: readonly Omit<SizeReading, 'id' | 'recordedAt'>[],
+  recorded: { readonly by: string; readonly at: Date },
+): Promise<void> {
+  if (readings.length === 0) return;
+  await trx
+    .insertInto('size_reading')
+    .values(
+      readings.map((reading) => ({
+        site_id: siteId,
+        booking_id: bookingId,
+        quantity: reading.quantity,
+        value: reading.value,
+        source: reading.source,
+        spread: reading.spread,
+        taken_on: reading.takenOn,
+        recorded_by: recorded.by,
+        recorded_at: recorded.at,
+      })),
+    )
+    .execute();
+}

@@ -1,0 +1,46 @@
+import type { Assessment, SitePolicy } from '@/lib/domain/case/model';
+import type { PlanState } from '@/lib/domain/plan/states';
+
+/** Verdicts with which a plan may not be put for use: nothing says what would come out. */
+const BARRED: readonly Assessment['verdict'][] = ['cannot-be-scanned', 'not-modelled'];
+
+/** A radiologist decides when fold is left in the keep-clear area, or always when the policy says so. */
+export function needsSignOff(assessments: readonly Assessment[], policy: Pick<SitePolicy, 'signOffAlways'>): boolean {
+  return policy.signOffAlways || assessments.some((assessment) => assessment.verdict === 'fold-in-keep-clear');
+}
+
+export interface PlanSituation {
+  readonly state: PlanState;
+  readonly assessments: readonly Assessment[];
+  readonly policy: Pick<SitePolicy, 'signOffAlways'>;
+}
+
+/**
+ * Why a plan may not move to a state; undefined when it may.
+ * draft → for use → signed off → used; a plan that needs no sign-off goes from for use straight to used;
+ * anything but a used plan can go back to draft.
+ */
+export function refusalToMove({ state, assessments, policy }: PlanSituation, to: PlanState): string | undefined {
+  if (state === 'used') return 'A used plan stays as it was used. Make a new plan instead.';
+  if (state === to) return `The plan is ${to} already.`;
+  switch (to) {
+    case 'draft':
+      return undefined;
+    case 'for use': {
+      if (state !== 'draft') return `Only a draft can be put for use; this plan is ${state}.`;
+      const barred = assessments.findIndex((assessment) => BARRED.includes(assessment.verdict));
+      return barred < 0 ? undefined : `Sequence ${barred + 1} cannot be scanned as planned or is not modelled: ${assessments[barred]?.reasons[0]?.text ?? ''}`.trim();
+    }
+    case 'signed off':
+      return state === 'for use' ? undefined : `Only a plan for use can be signed off; this plan is ${state}.`;
+    case 'used':
+      if (state === 'signed off') return undefined;
+      if (state !== 'for use') return `Only a plan for use can be marked as used; this plan is ${state}.`;
+      return needsSignOff(assessments, policy) ? 'A radiologist has to sign this plan off before it is used.' : undefined;
+  }
+}
+
+/** A new version of a plan was made by hand: whatever was agreed on was agreed on something else. */
+export function stateAfterSave(state: PlanState): PlanState {
+  return state === 'used' ? 'used' : 'draft';
+}

@@ -1,0 +1,5 @@
+export interface SiteRecord {
+  readonly siteId: string;
+  readonly name: string;
+  readonly accessionMask: string;
+}

@@ -1,0 +1,21 @@
+import type { ReadingSource } from '@/lib/domain/case/model';
+import type { SizeQuantity } from '@/lib/domain/size-reading/quantities';
+
+/** One number that was written down about a patient; never changed, only followed by a newer one. */
+export interface SizeReading {
+  readonly id: string;
+  readonly quantity: SizeQuantity;
+  readonly value: number;
+  readonly source: ReadingSource;
+  readonly spread: number;
+  /** YYYY-MM-DD. */
+  readonly takenOn: string;
+  readonly recordedAt: Date;
+}
+
+const DAY_MS = 86_400_000;
+
+/** Older than the policy allows on the day it is used. */
+export function isExpired(reading: Pick<SizeReading, 'takenOn'>, now: Date, expiryDays: number): boolean {
+  return (now.getTime() - Date.parse(`${reading.takenOn}T00:00:00Z`)) / DAY_MS > expiryDays;
+}
