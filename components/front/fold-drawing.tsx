@@ -103,7 +103,7 @@ export function FoldDrawing({ worked, description }: { worked: WorkedFold; descr
         strokeWidth="1.75"
         strokeDasharray="7 5"
       />
-      <text x={keepClear.fromXMm + 8} y={keepClear.posteriorMm - 9} className="fill-ink text-[14px]">
+      <text x={keepClear.fromXMm + 8} y={keepClear.posteriorMm - 10} className="fill-ink text-[25px] sm:text-[17px]">
         keep-clear area
       </text>
 
@@ -114,7 +114,7 @@ export function FoldDrawing({ worked, description }: { worked: WorkedFold; descr
         </g>
       )}
 
-      <g className="fill-ink text-[19px] font-bold" textAnchor="middle">
+      <g className="fill-ink text-[28px] font-bold sm:text-[20px]" textAnchor="middle">
         <text y="-192">A</text>
         <text y="208">P</text>
         <text x="-304" y="7">
@@ -127,7 +127,7 @@ export function FoldDrawing({ worked, description }: { worked: WorkedFold; descr
       <g className="stroke-ink" strokeWidth="1.75" fill="none">
         <path d="M170 204 H270 M170 199 V209 M270 199 V209" />
       </g>
-      <text x="220" y="196" textAnchor="middle" className="figures fill-ink text-[14px]">
+      <text x="220" y="196" textAnchor="middle" className="figures fill-ink text-[25px] sm:text-[17px]">
         100 mm
       </text>
     </svg>

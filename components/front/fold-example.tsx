@@ -35,7 +35,7 @@ export function FoldExample() {
     `Axial section of an abdomen 480 by 340 mm in a picture 300 mm deep, ${Math.round(worked.widthMm)} mm acquired. ` +
     `${VERDICT_WORDS[worked.verdict]}: ${reason}`;
   return (
-    <figure className="rounded-md border border-line bg-cloth">
+    <figure className="self-start overflow-hidden rounded-md border border-line bg-cloth">
       <FoldDrawing worked={worked} description={description} />
       <figcaption className="border-t border-line bg-paper px-5 py-4">
         <p className="flex min-h-14 items-start gap-2.5" aria-live="polite">

@@ -19,7 +19,7 @@ const PARTS = [
 export function FrontText({ entry }: { entry: { href: string; label: string } }) {
   return (
     <div>
-      <h1 className="text-3xl sm:text-4xl">
+      <h1 className="text-3xl">
         What will wrap around, and the cheapest way to keep it out of the part that matters
       </h1>
       <p className="mt-5 max-w-prose text-lg text-ink-soft">

@@ -59,7 +59,7 @@ export function NumberField(props: NumberFieldProps) {
     take(formatPlain(next), next);
   };
 
-  const own = touched ? numberProblem(text, parseNumber(text, unit), { min, max, whole, unit, optional }) : undefined;
+  const own = touched || error ? numberProblem(text, parseNumber(text, unit), { min, max, whole, unit, optional }) : undefined;
   const shown = own ?? error;
   const finite = value !== null && Number.isFinite(value) ? value : undefined;
   return (

@@ -1,0 +1,179 @@
+'use client';
+
+import { type ReactNode } from 'react';
+import { Controller, FormProvider, useFormContext, type FieldValues, type UseFormReturn } from 'react-hook-form';
+import type * as z from 'zod';
+import { Checkbox, Segmented, Switch, type RadioOption } from './choice';
+import { NumberField, type NumberFieldProps } from './number-field';
+import { numberFacts } from './schema-facts';
+import { Select, type SelectOption } from './select';
+import { TextArea, TextInput, type TextInputProps } from './text-input';
+
+/**
+ * Fields bound to React Hook Form by name. The browser's own validation is off: the schema speaks, beside the
+ * control, and what was typed stays.
+ */
+export function Form<T extends FieldValues>({
+  form,
+  onSubmit,
+  children,
+  label,
+  className,
+}: {
+  form: UseFormReturn<T, unknown, T>;
+  onSubmit: (values: T) => Promise<void> | void;
+  children: ReactNode;
+  label: string;
+  className?: string;
+}) {
+  return (
+    <FormProvider {...form}>
+      <form
+        noValidate
+        aria-label={label}
+        // Asked for even before the script has run, so that nothing typed ends up in an address.
+        method="post"
+        onSubmit={(event) => void form.handleSubmit(onSubmit)(event)}
+        className={className}
+      >
+        {children}
+      </form>
+    </FormProvider>
+  );
+}
+
+interface Bound {
+  name: string;
+  hint?: ReactNode;
+  className?: string;
+}
+
+export interface FormNumberProps
+  extends Bound, Pick<NumberFieldProps, 'step' | 'layout' | 'compact' | 'disabled' | 'labelHidden' | 'placeholder'> {
+  /** Judges the value; gives unit, limits and, unless `label` is given, the words. */
+  schema: z.ZodType;
+  label?: ReactNode;
+  /** Said under the control; the allowed range unless something else is given, nothing with null. */
+  hint?: ReactNode;
+}
+
+export function FormNumber({ name, schema, label, hint, ...rest }: FormNumberProps) {
+  const facts = numberFacts(schema);
+  const { control } = useFormContext();
+  const range = facts.min !== undefined && facts.max !== undefined ? `${facts.min} to ${facts.max}` : undefined;
+  return (
+    <Controller
+      control={control}
+      name={name}
+      render={({ field, fieldState }) => (
+        <NumberField
+          {...rest}
+          ref={field.ref}
+          name={name}
+          label={label ?? facts.text}
+          unit={facts.unit}
+          min={facts.min}
+          max={facts.max}
+          whole={facts.whole}
+          optional={facts.optional}
+          required={!facts.optional}
+          hint={hint === undefined ? range : hint}
+          error={fieldState.error?.message}
+          value={(field.value as number | null | undefined) ?? null}
+          onChange={(value) => field.onChange(value ?? (facts.optional ? undefined : null))}
+          onBlur={field.onBlur}
+        />
+      )}
+    />
+  );
+}
+
+export interface FormTextProps extends Bound, Omit<TextInputProps, 'name' | 'error' | 'hint' | 'className'> {}
+
+export function FormText({ name, ...rest }: FormTextProps) {
+  const { register, getFieldState, formState } = useFormContext();
+  return <TextInput {...rest} {...register(name)} error={getFieldState(name, formState).error?.message} />;
+}
+
+export function FormTextArea({ name, label, hint, rows, optional, className }: Bound & { label: ReactNode; rows?: number; optional?: boolean }) {
+  const { register, getFieldState, formState } = useFormContext();
+  const error = getFieldState(name, formState).error?.message;
+  return <TextArea {...{ label, hint, rows, optional, className, error }} {...register(name)} />;
+}
+
+export interface FormSelectProps extends Bound {
+  label: ReactNode;
+  options: readonly SelectOption[];
+  placeholder?: string;
+  labelHidden?: boolean;
+  disabled?: boolean;
+  /** After the value is in the form: other fields that must follow. */
+  onChosen?: (value: string) => void;
+}
+
+export function FormSelect({ name, onChosen, ...rest }: FormSelectProps) {
+  const { control } = useFormContext();
+  return (
+    <Controller
+      control={control}
+      name={name}
+      render={({ field, fieldState }) => (
+        <Select
+          {...rest}
+          ref={field.ref}
+          name={name}
+          value={(field.value as string | undefined) ?? ''}
+          onBlur={field.onBlur}
+          onChange={(event) => {
+            field.onChange(event.target.value);
+            onChosen?.(event.target.value);
+          }}
+          error={fieldState.error?.message}
+        />
+      )}
+    />
+  );
+}
+
+export function FormSegmented<T extends string>({
+  name,
+  legend,
+  options,
+  hint,
+  onChosen,
+  className,
+}: Bound & { legend: ReactNode; options: readonly RadioOption<T>[]; onChosen?: (value: T) => void }) {
+  const { control } = useFormContext();
+  return (
+    <Controller
+      control={control}
+      name={name}
+      render={({ field, fieldState }) => (
+        <Segmented<T>
+          legend={legend}
+          options={options}
+          hint={hint}
+          className={className}
+          value={field.value as T}
+          error={fieldState.error?.message}
+          onChange={(value) => {
+            field.onChange(value);
+            onChosen?.(value);
+          }}
+        />
+      )}
+    />
+  );
+}
+
+export function FormCheckbox({ name, label, hint, className, as = 'checkbox' }: Bound & { label: ReactNode; as?: 'checkbox' | 'switch' }) {
+  const { register, getFieldState, formState } = useFormContext();
+  const Control = as === 'switch' ? Switch : Checkbox;
+  return (
+    <Control
+      {...{ label, hint, className }}
+      error={getFieldState(name, formState).error?.message}
+      {...register(name)}
+    />
+  );
+}
