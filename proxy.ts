@@ -9,6 +9,8 @@ export function proxy(request: NextRequest): NextResponse {
   const headers = new Headers(request.headers);
   headers.set('x-nonce', nonce);
   headers.set('content-security-policy', policy);
+  // Where to come back to after signing in; a page cannot see its own address otherwise.
+  headers.set('x-selvedge-path', `${request.nextUrl.pathname}${request.nextUrl.search}`);
 
   const response = NextResponse.next({ request: { headers } });
   response.headers.set('content-security-policy', policy);

@@ -5,7 +5,7 @@ const NEVER = [/^\/sign-in(\/|$)/, /^\/set-password(\/|$)/, /^\/api\//];
  * Where to go after signing in: a path of our own, else the start page. Everything is decided on the URL as a
  * browser would read it, so `//host`, `/\host`, `https:host`, control characters and encoded tricks all end here.
  */
-export function safeReturnPath(wanted: unknown, fallback = '/today'): string {
+export function safeReturnPath(wanted: unknown, fallback = '/'): string {
   if (typeof wanted !== 'string' || wanted.length > 2048) return fallback;
   // Browsers drop tabs and line breaks and read a backslash as a slash: nothing of ours contains them.
   if (!wanted.startsWith('/') || /[\\\p{Cc}]/u.test(wanted)) return fallback;

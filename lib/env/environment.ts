@@ -18,6 +18,8 @@ const schema = z.object({
   MAIL_FROM: z.string().min(3).default('Selvedge <selvedge@localhost>'),
   /** Where the local mail catcher keeps what it caught; set by "npm start" with the local cluster only. */
   SELVEDGE_MAIL_DIR: z.string().min(1).optional(),
+  /** How many reverse proxies of our own stand in front and append to X-Forwarded-For. */
+  SELVEDGE_TRUSTED_PROXIES: z.coerce.number('must be a whole number').int().min(0).max(10).default(0),
 });
 
 export interface Environment {
@@ -28,6 +30,7 @@ export interface Environment {
   readonly smtpUrl: string;
   readonly mailFrom: string;
   readonly caughtMailFolder: string | null;
+  readonly trustedProxies: number;
 }
 
 export class EnvironmentError extends Error {
@@ -53,6 +56,7 @@ export function parseEnvironment(variables: Record<string, string | undefined>):
     smtpUrl: value.SMTP_URL,
     mailFrom: value.MAIL_FROM,
     caughtMailFolder: value.SELVEDGE_MAIL_DIR ?? null,
+    trustedProxies: value.SELVEDGE_TRUSTED_PROXIES,
   };
 }
 

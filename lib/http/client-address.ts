@@ -1,3 +1,5 @@
+import { environment } from '@/lib/env';
+
 /**
  * The network address a request came from, for slowing down repeated sign-in failures.
  * Anyone can write a forwarding header, so it is believed only as far as our own proxies reach: with n trusted
@@ -7,7 +9,7 @@
  */
 export function clientAddress(
   forwardedFor: string | null | undefined,
-  trustedProxies: number = Number(process.env.SELVEDGE_TRUSTED_PROXIES ?? 0),
+  trustedProxies: number = environment().trustedProxies,
 ): string {
   if (!Number.isInteger(trustedProxies) || trustedProxies < 1) return 'direct';
   const hops = (forwardedFor ?? '').split(',').map((hop) => hop.trim()).filter(Boolean);
