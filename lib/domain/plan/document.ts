@@ -1,10 +1,13 @@
-import type { ArmPosition, Assessment, KeepClear, Patient, Prescription } from '@/lib/domain/case/model';
+import type { Assessment, KeepClear, Patient, Prescription } from '@/lib/domain/case/model';
 import { readDocument, type Upcasts } from '@/lib/domain/document/read-document';
 
 export interface PlannedSequenceDocument {
+  /** The protocol's sequence id, or one made on the bench. */
+  readonly id: string;
   readonly prescription: Prescription;
-  readonly arms: ArmPosition;
-  readonly adopted: { readonly key: string; readonly sentence: string } | null;
+  /** What the whole picture was before a remedy changed the window. */
+  readonly frozenKeepClear?: KeepClear;
+  readonly adopted: readonly { readonly key: string; readonly sentence: string; readonly costTenths: number }[];
 }
 
 /** What is stored for one version of a plan: all the engine was asked, with the versions it rests on. */
@@ -22,8 +25,9 @@ export interface PlanDocument {
 
 /** Where bench and server did not agree; the server's value is what counts. */
 export interface PlanDifference {
+  /** Name of the sequence; empty where the difference is in what all of them rest on. */
   readonly sequence: string;
-  readonly field: 'verdict' | 'scanS';
+  readonly field: 'verdict' | 'scanS' | 'scanner' | 'policy';
   readonly bench: string;
   readonly server: string;
 }

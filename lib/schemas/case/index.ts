@@ -1,6 +1,6 @@
 export { CASE_DEFAULTS, caseInput, type CaseInput } from '@/lib/schemas/case/case-input';
 export { caseSchema } from '@/lib/schemas/case/case-schema';
-export { displayedBox, stackWidthMm } from '@/lib/schemas/case/displayed-box';
+export { displayedBox, stackWidthMm } from '@/lib/domain/case/displayed-box';
 export { keepClearSchema, patientBoxSchema } from '@/lib/schemas/case/keep-clear';
 export { patientSchema, readingSchema } from '@/lib/schemas/case/patient';
 export { policySchema } from '@/lib/schemas/case/policy';

@@ -66,7 +66,7 @@ export const tissueT1Shape = {
 } satisfies ShapeOf<SitePolicy['tissueT1Ms']>;
 
 export const policyShape = {
-  version: count({ min: 1, max: 1_000_000, text: 'Version of the policy' }),
+  version: count({ min: 0, max: 1_000_000, text: 'Version of the policy; 0 is the standard one of a new site' }),
   marginMm: strict(marginShape, 'Safety margin each side: breathing moves the front wall most [mm].'),
   tissueTolerance: quantity({ min: 0, max: 1, unit: '1', text: 'Tissue lighter than this share of trunk signal does not count' }),
   slabTolerance: quantity({ min: 0.001, max: 1, unit: '1', text: 'A partition is contaminated above this share of plateau' }),

@@ -6,7 +6,7 @@ import {
 } from '@/lib/domain/case/model';
 import { CASE_DEFAULTS, caseInput, type CaseInput, type ParsedCaseInput } from '@/lib/schemas/case/case-input';
 import { caseSchema } from '@/lib/schemas/case/case-schema';
-import { displayedBox } from '@/lib/schemas/case/displayed-box';
+import { displayedBox } from '@/lib/domain/case/displayed-box';
 import { boundsOfParts } from '@/lib/schemas/case/part-bounds';
 import { fieldIssues, type FieldIssue } from '@/lib/schemas/fields/field-issues';
 

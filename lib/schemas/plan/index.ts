@@ -3,7 +3,7 @@ import * as z from 'zod';
 import type { Assessment, KeepClear, Patient, Prescription, Scanner, SitePolicy } from '@/lib/domain/case/model';
 import type { PlanState } from '@/lib/domain/plan/states';
 import { keepClearSchema } from '@/lib/schemas/case/keep-clear';
-import { ARM_POSITIONS, patientSchema } from '@/lib/schemas/case/patient';
+import { patientSchema } from '@/lib/schemas/case/patient';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import { choice, count, quantity, refused, strict, words } from '@/lib/schemas/fields/fields';
 import { expectedVersionSchema, idSchema } from '@/lib/schemas/fields/ids';
@@ -18,14 +18,21 @@ const seenResult = strict({
 });
 
 export const plannedSequenceSchema = strict({
+  id: words(80, 'Stable name of the sequence inside the plan: the protocol’s sequence id, or one made on the bench.'),
   prescription: prescriptionSchema,
-  arms: choice(ARM_POSITIONS, 'Arms this sequence is planned with.'),
-  adopted: strict({
-    key: words(120, 'Key of the adopted remedy.'),
-    sentence: words(400, 'The remedy as it was read.'),
-  })
-    .nullable()
-    .describe('Remedy adopted on the bench, if any.'),
+  frozenKeepClear: keepClearSchema
+    .describe('Keep-clear area of this sequence alone: what the whole picture was before a remedy changed the window.')
+    .optional(),
+  adopted: z
+    .array(
+      strict({
+        key: words(120, 'Key of the adopted remedy.'),
+        sentence: words(600, 'The remedy as it was read.'),
+        costTenths: count({ min: 0, max: 10_000_000, text: 'Its cost in tenths of a point' }),
+      }),
+    )
+    .max(50)
+    .describe('Remedies adopted on the bench, in order.'),
   seen: seenResult.optional(),
 });
 
@@ -36,7 +43,7 @@ export const planInput = strict({
   scannerVersion: count({ min: 1, max: 1_000_000, text: 'Version of the scanner the bench worked with' }),
   protocolId: idSchema.nullable(),
   protocolVersion: count({ min: 0, max: 1_000_000, text: 'Version of the protocol the bench began with; 0 without one' }),
-  policyVersion: count({ min: 1, max: 1_000_000, text: 'Version of the policy the bench worked with' }),
+  policyVersion: count({ min: 0, max: 1_000_000, text: 'Version of the policy the bench worked with' }),
   patient: patientSchema,
   keepClear: keepClearSchema,
   sequences: z
@@ -68,16 +75,24 @@ export const signOffInput = strict({
   reason: z.string().trim().max(2000, { error: refused('text of up to 2000 characters') }).default(''),
 });
 
+export interface AdoptedView {
+  readonly key: string;
+  readonly sentence: string;
+  readonly costTenths: number;
+}
+
 export interface PlannedSequence {
+  readonly id: string;
   readonly prescription: Prescription;
-  readonly arms: Patient['arms']['position'];
-  readonly adopted: { readonly key: string; readonly sentence: string } | null;
+  readonly frozenKeepClear?: KeepClear;
+  readonly adopted: readonly AdoptedView[];
 }
 
 /** Where the bench and the server did not agree; the server's value is the one stored. */
 export interface ResultDifference {
+  /** Name of the sequence; empty where the difference is in what all of them rest on. */
   readonly sequence: string;
-  readonly field: 'verdict' | 'scanS';
+  readonly field: 'verdict' | 'scanS' | 'scanner' | 'policy';
   readonly bench: string;
   readonly server: string;
 }
