@@ -1,6 +1,8 @@
-import type { Side } from '@/lib/physics/model/axes';
+import { screenFrame, sideVector, toPatient, toScreen, type ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { fromWindow, inWindow, windowFrame } from '@/components/schematic/scene/window-frame';
-import { dot, frameOf, sidesOfAxis, sideVector, toPatient, toScreen, type ScreenPoint } from '@/components/schematic/scene/section-frame';
+import { sectionFrame } from '@/lib/physics/geometry/section-frame';
+import { AXIS_SIDES, dot } from '@/lib/physics/geometry/vector';
+import type { Side } from '@/lib/physics/model/axes';
 import { AXIS_WORDS } from '@/lib/presentation/anatomy-words';
 import { keepClearOf, sequenceById, type BenchSetting } from './bench-document';
 import type { BenchAction, BenchState } from './bench-state';
@@ -29,16 +31,17 @@ export function benchHandles(state: BenchState): readonly BenchHandle[] {
   const sequence = sequenceById(state.document, state.activeId);
   const { prescription } = sequence;
   const window = windowFrame(prescription);
+  const { phaseAxis, readoutAxis } = sectionFrame(prescription);
   const [low, high] = [-1, 1] as const;
   const fovEdges = ([['phase', low], ['phase', high], ['readout', low], ['readout', high]] as const).map(
     ([direction, sign]): BenchHandle => {
       const isPhase = direction === 'phase';
       const half = isPhase ? window.halfPhaseMm : window.halfReadoutMm;
-      const axis = isPhase ? prescription.phaseAxis : readoutAxisOf(state);
+      const axis = isPhase ? phaseAxis : readoutAxis;
       return {
         id: `fov-${direction}-${sign < 0 ? 'low' : 'high'}`,
         kind: 'fov-edge',
-        label: `FOV edge, ${edgeSide(state, direction, sign)}`,
+        label: `FOV edge, ${AXIS_SIDES[axis][sign < 0 ? 0 : 1]}`,
         at: isPhase ? inWindow(window, sign * half, 0) : inWindow(window, 0, sign * half),
         along: isPhase ? window.phase : window.readout,
         figure: `FOV ${AXIS_WORDS[axis]} ${MM(2 * half)}`,
@@ -59,7 +62,7 @@ function keepClearHandles(state: BenchState): BenchHandle[] {
   const sequence = sequenceById(state.document, state.activeId);
   const keepClear = keepClearOf(state.document, sequence);
   if (keepClear.area.kind !== 'box') return [];
-  const frame = frameOf(sequence.prescription.plane);
+  const frame = screenFrame(sequence.prescription);
   const { box } = keepClear.area;
   const middle = toScreen(frame, [mean(box.xMm), mean(box.yMm), mean(box.zMm)]);
   return Object.values(frame.sides).map((side): BenchHandle => {
@@ -80,7 +83,7 @@ function keepClearHandles(state: BenchState): BenchHandle[] {
 function extentHandles(state: BenchState): BenchHandle[] {
   const { patient } = state.document;
   if (patient.parts) return []; // Outlines replace the body that the extents would build.
-  const frame = frameOf(sequenceById(state.document, state.activeId).prescription.plane);
+  const frame = screenFrame(sequenceById(state.document, state.activeId).prescription);
   const value = (side: Side): number => patient.extents[side].value;
   const middle = toScreen(frame, [
     (value('left') - value('right')) / 2,
@@ -114,13 +117,13 @@ export function moveHandle(
 ): BenchAction | null {
   const sequence = sequenceById(state.document, state.activeId);
   const { prescription } = sequence;
-  const frame = frameOf(prescription.plane);
+  const frame = screenFrame(prescription);
   const window = windowFrame(prescription);
   const withStep = step === undefined ? {} : { step };
   if (id === 'fov-centre') {
     const along = dot(frame.normal, prescription.centreMm);
-    const [x, y, z] = toPatient(frame, [Math.round(to[0]), Math.round(to[1])], along);
-    return { type: 'edit-prescription', patch: { centreMm: [zero(x), zero(y), zero(z)] }, ...withStep };
+    const centreMm = toPatient(frame, [Math.round(to[0]), Math.round(to[1])], along);
+    return { type: 'edit-prescription', patch: { centreMm }, ...withStep };
   }
   if (id.startsWith('fov-')) {
     const [phase, readout] = fromWindow(window, to);
@@ -159,30 +162,6 @@ export function nudgeHandle(
   return moveHandle(state, setting, id, [handle.at[0] + by[0], handle.at[1] + by[1]], step);
 }
 
-function readoutAxisOf(state: BenchState) {
-  const { prescription } = sequenceById(state.document, state.activeId);
-  const axes = { axial: ['RL', 'AP'], coronal: ['RL', 'SI'], sagittal: ['AP', 'SI'] } as const;
-  const [first, second] = axes[prescription.plane];
-  return prescription.phaseAxis === first ? second : first;
-}
-
-/** Side of the patient an edge of the window lies on; the window's low end is where its unit vector comes from. */
-function edgeSide(state: BenchState, direction: 'phase' | 'readout', sign: -1 | 1): Side {
-  const { prescription } = sequenceById(state.document, state.activeId);
-  const window = windowFrame(prescription);
-  const unit = direction === 'phase' ? window.phase : window.readout;
-  const axis = direction === 'phase' ? prescription.phaseAxis : readoutAxisOf(state);
-  const [negative, positive] = sidesOfAxis(axis);
-  const towards = toScreen(frameOf(prescription.plane), sideVector(positive));
-  const same = unit[0] * towards[0] + unit[1] * towards[1] > 0;
-  return (sign > 0) === same ? positive : negative;
-}
-
 function mean([low, high]: readonly [number, number]): number {
   return (low + high) / 2;
-}
-
-/** −0 would be stored and shown as a different number from 0. */
-function zero(value: number): number {
-  return value === 0 ? 0 : value;
 }

@@ -1,9 +1,11 @@
+import { sectionFrame } from '@/lib/physics/geometry/section-frame';
 import type { Prescription } from '@/lib/physics/model/prescription';
-import { frameOf, screenAxes, toScreen, type ScreenPoint } from './section-frame';
+import { screenFrame, toScreen, type ScreenPoint } from './section-frame';
 
 /** The displayed window on the screen: its centre, the unit vectors of phase and readout, and its half-lengths. */
 export interface WindowFrame {
   readonly centre: ScreenPoint;
+  /** Towards the positive end of the patient axis it runs along: left, posterior or superior. */
   readonly phase: ScreenPoint;
   readonly readout: ScreenPoint;
   readonly halfPhaseMm: number;
@@ -11,22 +13,13 @@ export interface WindowFrame {
   readonly halfAcquiredMm: number;
 }
 
-/**
- * In-plane rotation turns phase and readout together, right-handed about the slice normal. Tilts lean the whole
- * plane: the picture is drawn in the plane itself, so they do not turn the window in it.
- */
 export function windowFrame(prescription: Prescription): WindowFrame {
-  const frame = frameOf(prescription.plane);
-  const vertical = prescription.phaseAxis === screenAxes(prescription.plane).vertical;
-  const angle = (prescription.inPlaneRotationDeg * Math.PI) / 180;
-  const cos = Math.cos(angle);
-  const sin = Math.sin(angle);
-  const across: ScreenPoint = [cos, sin];
-  const down: ScreenPoint = [-sin, cos];
+  const screen = screenFrame(prescription);
+  const section = sectionFrame(prescription);
   return {
-    centre: toScreen(frame, prescription.centreMm),
-    phase: vertical ? down : across,
-    readout: vertical ? across : down,
+    centre: toScreen(screen, prescription.centreMm),
+    phase: toScreen(screen, section.phase),
+    readout: toScreen(screen, section.readout),
     halfPhaseMm: prescription.fovPhaseMm / 2,
     halfReadoutMm: prescription.fovReadoutMm / 2,
     halfAcquiredMm: (prescription.acquiredLines * prescription.fovPhaseMm) / prescription.linesAcrossFov / 2,
@@ -45,8 +38,5 @@ export function inWindow(window: WindowFrame, alongPhaseMm: number, alongReadout
 export function fromWindow(window: WindowFrame, point: ScreenPoint): readonly [number, number] {
   const du = point[0] - window.centre[0];
   const dv = point[1] - window.centre[1];
-  return [
-    du * window.phase[0] + dv * window.phase[1],
-    du * window.readout[0] + dv * window.readout[1],
-  ];
+  return [du * window.phase[0] + dv * window.phase[1], du * window.readout[0] + dv * window.readout[1]];
 }

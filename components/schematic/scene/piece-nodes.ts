@@ -1,0 +1,173 @@
+import type { GhostDrawing, PieceDrawing, SectionRing } from '@/lib/physics/section/section-drawing';
+import type { Side } from '@/lib/physics/model/axes';
+import { centroidOf, hatch } from './rings';
+import type { AreaNode, LinesNode, Ring, SceneNode, Stroke } from './scene';
+import type { ScreenPoint } from './section-frame';
+
+export interface PieceContext {
+  readonly toRing: (ring: SectionRing) => Ring;
+  /** Unit vector of the phase direction on the screen. */
+  readonly phase: ScreenPoint;
+  readonly readout: ScreenPoint;
+  readonly mmPerPx: number;
+}
+
+const HATCH_PX = 8;
+
+/** Tissue is told apart by the direction of its hatching as well: each side of the patient has its own. */
+const HATCH_DEG: Readonly<Record<Side, number>> = {
+  posterior: -45,
+  anterior: 45,
+  right: -60,
+  left: 60,
+  superior: 30,
+  inferior: -30,
+};
+
+function edgeOf(piece: Pick<PieceDrawing, 'estimated' | 'placeUncertain'>): Stroke['edge'] {
+  return piece.placeUncertain ? 'dashed' : piece.estimated ? 'dotted' : 'solid';
+}
+
+/** Where the tissue is: outlined, outside the picture. */
+export function sourceNodes(piece: PieceDrawing, context: PieceContext, focused: boolean): SceneNode[] {
+  if (piece.source.length === 0) return [];
+  return [
+    {
+      kind: 'area',
+      name: `${piece.name}/source`,
+      rings: piece.source.map(context.toRing),
+      fill: 'cloth',
+      fillOpacity: 0.35,
+      stroke: { colour: 'ink', widthPx: focused ? 2.25 : 1.25, edge: edgeOf(piece) },
+      hover: piece.name,
+    },
+  ];
+}
+
+/** Where it lands: hatched, the same outline moved; what reaches the keep-clear area is red and hatched across. */
+export function landedNodes(piece: PieceDrawing, context: PieceContext, focused: boolean): SceneNode[] {
+  const landed = piece.landed.map(context.toRing);
+  if (landed.length === 0) return [];
+  const from = slideVector(piece, context);
+  const spacing = HATCH_PX * context.mmPerPx;
+  const nodes: SceneNode[] = [
+    area(`${piece.name}/landed`, landed, 'ochre', focused ? 2.25 : 1.25, edgeOf(piece), piece.name, from),
+    strokes(`${piece.name}/landed/hatch`, landed, HATCH_DEG[piece.side], spacing, 'ochre', from),
+  ];
+  const inside = piece.inKeepClear.map(context.toRing);
+  if (inside.length > 0) {
+    nodes.push(
+      area(`${piece.name}/in-keep-clear`, inside, 'thread', focused ? 2.25 : 1.5, edgeOf(piece), piece.name, from),
+      strokes(`${piece.name}/in-keep-clear/hatch`, inside, HATCH_DEG[piece.side] + 90, spacing, 'thread', from),
+    );
+  }
+  return nodes;
+}
+
+export function ghostNodes(ghost: GhostDrawing, context: PieceContext, focused: boolean): SceneNode[] {
+  const landed = ghost.landed.map(context.toRing);
+  if (landed.length === 0) return [];
+  const spacing = HATCH_PX * context.mmPerPx;
+  const nodes: SceneNode[] = [
+    area(ghost.name, landed, 'ochre', focused ? 2.25 : 1, 'dashed', ghost.name),
+    strokes(`${ghost.name}/hatch`, landed, 90, spacing, 'ochre'),
+  ];
+  const inside = ghost.inKeepClear.map(context.toRing);
+  if (inside.length > 0) {
+    nodes.push(
+      area(`${ghost.name}/in-keep-clear`, inside, 'thread', focused ? 2.25 : 1, 'dashed', ghost.name),
+      strokes(`${ghost.name}/in-keep-clear/hatch`, inside, 0, spacing, 'thread'),
+    );
+  }
+  return nodes;
+}
+
+/** A straight thread from where the tissue is to where it lands, and what it says. */
+export function threadNodes(
+  piece: PieceDrawing | undefined,
+  ghost: GhostDrawing | undefined,
+  context: PieceContext,
+): SceneNode[] {
+  const held = ghost ?? piece;
+  if (!held) return [];
+  const inside = held.inKeepClear.length > 0;
+  const target = centroidOf((inside ? held.inKeepClear : held.landed).map(context.toRing));
+  if (!target) return [];
+  const shift = ghost ? ghostVector(ghost, context) : slideVector(piece!, context);
+  const origin: ScreenPoint = [target[0] + shift[0], target[1] + shift[1]];
+  const colour = inside ? 'thread' : 'ochre';
+  const side = held.side;
+  const where = held.placeUncertain
+    ? `from the ${side} side, place uncertain`
+    : `from the ${side} side, ${Math.round(held.distanceMm)} mm away`;
+  const down = shift[1] > 0;
+  return [
+    { kind: 'lines', name: 'thread', lines: [[origin, target]], stroke: { colour, widthPx: 1.5, edge: 'dotted' } },
+    { kind: 'marker', name: 'thread/origin', at: origin, shape: 'ring', colour },
+    { kind: 'marker', name: 'thread/landing', at: target, shape: 'dot', colour },
+    {
+      kind: 'text',
+      name: 'thread/label',
+      text: ghost ? `ghost of tissue ${where}` : where,
+      at: origin,
+      offsetPx: Math.abs(shift[1]) >= Math.abs(shift[0]) ? [10, down ? 22 : -14] : [0, -14],
+      anchor: Math.abs(shift[1]) >= Math.abs(shift[0]) ? 'start' : 'middle',
+      size: 'note',
+      colour,
+    },
+  ];
+}
+
+/** From where a piece lands back to where it is: n·W along phase; a neighbour in the slab lies elsewhere in depth. */
+export function slideVector(piece: PieceDrawing, context: PieceContext): ScreenPoint {
+  if (piece.order === 0) return [0, 0];
+  const back = -Math.sign(piece.order) * piece.distanceMm;
+  return [plain(context.phase[0] * back), plain(context.phase[1] * back)];
+}
+
+function ghostVector(ghost: GhostDrawing, context: PieceContext): ScreenPoint {
+  const back = -Math.sign(ghost.multiple) * ghost.distanceMm;
+  return [plain(context.phase[0] * back), plain(context.phase[1] * back)];
+}
+
+function plain(value: number): number {
+  return value === 0 ? 0 : value;
+}
+
+function area(
+  name: string,
+  rings: readonly Ring[],
+  colour: 'ochre' | 'thread',
+  widthPx: number,
+  edge: Stroke['edge'],
+  hover: string,
+  slideFrom?: ScreenPoint,
+): AreaNode {
+  return {
+    kind: 'area',
+    name,
+    rings,
+    fill: colour === 'ochre' ? 'ochre-wash' : 'thread-wash',
+    fillOpacity: 0.8,
+    stroke: { colour, widthPx, edge },
+    hover,
+    ...(slideFrom ? { slideFrom } : {}),
+  };
+}
+
+function strokes(
+  name: string,
+  rings: readonly Ring[],
+  angleDeg: number,
+  spacingMm: number,
+  colour: 'ochre' | 'thread',
+  slideFrom?: ScreenPoint,
+): LinesNode {
+  return {
+    kind: 'lines',
+    name,
+    lines: hatch(rings, angleDeg, spacingMm),
+    stroke: { colour, widthPx: 1.25, edge: 'solid' },
+    ...(slideFrom ? { slideFrom } : {}),
+  };
+}
