@@ -27,7 +27,7 @@ export function startService(
 ): Service {
   const child = spawn(process.execPath, ['--import', EXIT_WITH_PARENT, ...args], {
     cwd: ROOT,
-    env: env as NodeJS.ProcessEnv,
+    env: { ...env, SELVEDGE_SUPERVISED: '1' } as unknown as NodeJS.ProcessEnv,
     detached: true,
     stdio: ['ignore', 'pipe', 'pipe', 'ipc'],
   });
