@@ -42,7 +42,8 @@ export function readPublished(key: string): readonly PublishedRow[] {
       text,
       number: (column) => {
         const value = Number(text(column));
-        if (text(column) === '' || Number.isNaN(value)) throw new Error(`${key}: ${column} is "${text(column)}"`);
+        if (text(column) === '' || Number.isNaN(value))
+          throw new Error(`${key}: ${column} is "${text(column)}"`);
         return value;
       },
     };

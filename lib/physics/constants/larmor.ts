@@ -10,7 +10,12 @@ import { FAT_WATER_SHIFT_PPM, PROTON_GYROMAGNETIC_RATIO_MHZ_PER_T } from './prot
  */
 export function larmorFrequencyMhz(fieldStrengthT: number): number {
   if (!(fieldStrengthT > 0) || !Number.isFinite(fieldStrengthT)) {
-    throw new DomainError('field-strength-not-positive', 'fieldStrengthT', fieldStrengthT, 'a number above 0 T');
+    throw new DomainError(
+      'field-strength-not-positive',
+      'fieldStrengthT',
+      fieldStrengthT,
+      'a number above 0 T',
+    );
   }
   return PROTON_GYROMAGNETIC_RATIO_MHZ_PER_T * fieldStrengthT;
 }

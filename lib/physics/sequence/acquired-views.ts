@@ -2,6 +2,14 @@ import { DomainError } from '../model/domain-error';
 import type { Prescription } from '../model/prescription';
 import { ceilCount, requireRange, requireWhole } from './check-argument';
 
+/** Returns the fraction when 0.5 < f ≤ 1; DomainError "partial-fourier-out-of-range" otherwise. */
+export function requirePartialFourier(fraction: number): number {
+  if (!(fraction > 0.5 && fraction <= 1)) {
+    throw new DomainError('partial-fourier-out-of-range', 'partialFourier', fraction, 'above 0.5, at most 1');
+  }
+  return fraction;
+}
+
 /**
  * Lines left after partial Fourier: Y = ⌈L·f⌉.
  * @param lines L, whole, ≥ 1
@@ -11,17 +19,19 @@ import { ceilCount, requireRange, requireWhole } from './check-argument';
  */
 export function partialFourierLines(lines: number, fraction: number): number {
   requireWhole('lines-not-whole', 'lines', lines, 1);
-  if (!(fraction > 0.5 && fraction <= 1)) {
-    throw new DomainError('partial-fourier-out-of-range', 'partialFourier', fraction, 'above 0.5, at most 1');
-  }
-  return ceilCount(lines * fraction);
+  return ceilCount(lines * requirePartialFourier(fraction));
 }
 
 /**
  * Integrated reference lines must lie in the centre that partial Fourier samples on both sides: ref ≤ min(Y, L(2f−1)).
  * @throws DomainError "reference-lines-too-many"
  */
-export function requireReferenceFits(argument: string, reference: number, lines: number, fraction: number): number {
+export function requireReferenceFits(
+  argument: string,
+  reference: number,
+  lines: number,
+  fraction: number,
+): number {
   requireWhole('reference-lines-not-whole', argument, reference, 0);
   const most = Math.min(partialFourierLines(lines, fraction), lines * (2 * fraction - 1));
   if (reference > most + 1e-9) {
@@ -37,7 +47,12 @@ export function requireReferenceFits(argument: string, reference: number, lines:
  * @returns whole
  * @throws DomainError "acceleration-out-of-range", "reference-lines-too-many"
  */
-export function acquiredLinesOneWay(lines: number, fraction: number, factor: number, reference: number): number {
+export function acquiredLinesOneWay(
+  lines: number,
+  fraction: number,
+  factor: number,
+  reference: number,
+): number {
   const kept = partialFourierLines(lines, fraction);
   requireRange('acceleration-out-of-range', 'factorPhase', factor, 1, 64);
   if (factor === 1) return kept;

@@ -1,7 +1,13 @@
 import { DomainError } from '../model/domain-error';
 
 /** Returns `value` when it is a finite number in [low, high]; throws DomainError `code` otherwise. */
-export function requireRange(code: string, argument: string, value: number, low: number, high: number): number {
+export function requireRange(
+  code: string,
+  argument: string,
+  value: number,
+  low: number,
+  high: number,
+): number {
   if (!(value >= low && value <= high)) {
     throw new DomainError(code, argument, value, `${low} to ${high}`);
   }
@@ -10,7 +16,8 @@ export function requireRange(code: string, argument: string, value: number, low:
 
 /** Returns `value` when it is finite and above 0. */
 export function requirePositive(code: string, argument: string, value: number): number {
-  if (!(value > 0) || !Number.isFinite(value)) throw new DomainError(code, argument, value, 'a number above 0');
+  if (!(value > 0) || !Number.isFinite(value))
+    throw new DomainError(code, argument, value, 'a number above 0');
   return value;
 }
 

@@ -1,7 +1,7 @@
 import type { DetailResult } from '../model/assessment';
 import type { RangeMm } from '../model/axes';
 import type { Prescription } from '../model/prescription';
-import { partialFourierLines, partitionsOf } from './acquired-views';
+import { partialFourierLines, partitionsOf, requirePartialFourier } from './acquired-views';
 import { requirePositive, requireRange, requireWhole } from './check-argument';
 
 /**
@@ -12,8 +12,7 @@ import { requirePositive, requireRange, requireWhole } from './check-argument';
  * Source: [noll-1991], [macovski-1996]; measured in fixtures/published/snr-time.
  */
 export function partialFourierSnr(fraction: number, fill: 'conjugate' | 'zero-filled'): number {
-  if (!(fraction > 0.5)) requireRange('partial-fourier-out-of-range', 'partialFourier', fraction, 0.5 + 1e-9, 1);
-  requireRange('partial-fourier-out-of-range', 'partialFourier', fraction, 0.5, 1);
+  requirePartialFourier(fraction);
   return fill === 'conjugate' ? Math.sqrt(0.5 / (1.5 - fraction)) : 1 / Math.sqrt(fraction);
 }
 
@@ -35,7 +34,8 @@ export function referenceShareOf(p: Prescription): number {
   const a = p.acceleration;
   if (!a.referenceInImage || a.factorPhase * a.factorSlice === 1) return 0;
   const usedY = partialFourierLines(p.acquiredLines, p.partialFourierPhase);
-  const usedZ = p.slices.mode === 'slab' ? partialFourierLines(p.slices.acquiredPartitions, p.partialFourierSlice) : 1;
+  const usedZ =
+    p.slices.mode === 'slab' ? partialFourierLines(p.slices.acquiredPartitions, p.partialFourierSlice) : 1;
   // A direction without acceleration is sampled whole, so the reference block spans it.
   const y = a.factorPhase === 1 ? usedY : Math.min(a.referenceLines, usedY);
   const z = p.slices.mode === 'stack' || a.factorSlice === 1 ? usedZ : Math.min(a.referencePartitions, usedZ);
@@ -89,14 +89,20 @@ export function detail(prescription: Prescription, { geometryFactor }: DetailOpt
   return {
     voxelMm,
     snr: plain * parallelImagingSnr(factor, (low + high) / 2, share),
-    snrRange: [plain * parallelImagingSnr(factor, high, share), plain * parallelImagingSnr(factor, low, share)],
+    snrRange: [
+      plain * parallelImagingSnr(factor, high, share),
+      plain * parallelImagingSnr(factor, low, share),
+    ],
   };
 }
 
 /**
  * SNR after over SNR before, and its range from g. One coil decides both g's, so low goes with low and high with high.
  */
-export function snrRatio(before: DetailResult, after: DetailResult): { readonly ratio: number; readonly range: RangeMm } {
+export function snrRatio(
+  before: DetailResult,
+  after: DetailResult,
+): { readonly ratio: number; readonly range: RangeMm } {
   const ends = [after.snrRange[0] / before.snrRange[0], after.snrRange[1] / before.snrRange[1]] as const;
   return { ratio: after.snr / before.snr, range: [Math.min(...ends), Math.max(...ends)] };
 }

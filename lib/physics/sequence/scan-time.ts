@@ -28,7 +28,13 @@ function encodingOf(p: Prescription): Encoding {
   switch (p.family) {
     case 'echo-train-spin-echo':
     case 'echo-train-spin-echo-3d':
-      return { views, shots: echoTrainShots(views, requireWhole('echo-train-not-whole', 'echoTrainLength', p.echoTrainLength, 1)) };
+      return {
+        views,
+        shots: echoTrainShots(
+          views,
+          requireWhole('echo-train-not-whole', 'echoTrainLength', p.echoTrainLength, 1),
+        ),
+      };
     case 'single-shot-echo-train':
       return { views, shots: 1 };
     case 'echo-planar':
@@ -47,8 +53,14 @@ interface Untriggered {
 
 function untriggered(p: Prescription, { views, shots }: Encoding, limitS: number): Untriggered {
   const trS = p.trMs / 1000;
-  const oneHold = (scanS: number): Untriggered => ({ scanS, batches: 1, breathHolds: 1, longestHoldS: scanS });
-  const slices = p.slices.mode === 'stack' ? requireWhole('slices-not-whole', 'slices', p.slices.slices, 1) : 1;
+  const oneHold = (scanS: number): Untriggered => ({
+    scanS,
+    batches: 1,
+    breathHolds: 1,
+    longestHoldS: scanS,
+  });
+  const slices =
+    p.slices.mode === 'stack' ? requireWhole('slices-not-whole', 'slices', p.slices.slices, 1) : 1;
 
   switch (p.family) {
     case 'spin-echo':
@@ -92,7 +104,13 @@ export function scanTime(prescription: Prescription, patient: Patient, scanner: 
   requireWhole('averages-not-whole', 'averages', p.averages, 1);
   requireRange('preparation-out-of-range', 'preparationMs', p.preparationMs, 0, 60_000);
   requireWhole('segments-not-whole', 'segments', p.segments, 0);
-  const calibrationS = requireRange('calibration-out-of-range', 'calibrationS', p.acceleration.calibrationS, 0, 3600);
+  const calibrationS = requireRange(
+    'calibration-out-of-range',
+    'calibrationS',
+    p.acceleration.calibrationS,
+    0,
+    3600,
+  );
 
   const encoding = encodingOf(p);
   const train = trainMs(p);
@@ -105,21 +123,42 @@ export function scanTime(prescription: Prescription, patient: Patient, scanner: 
       ? {}
       : {
           trainMs: train,
-          minimumTeMs: minimumTeMs(p.partialFourierPhase, p.acquiredLines, p.echoSpacingMs, factor, echoPlanar ? p.shots : 1),
+          minimumTeMs: minimumTeMs(
+            p.partialFourierPhase,
+            p.acquiredLines,
+            p.echoSpacingMs,
+            factor,
+            echoPlanar ? p.shots : 1,
+          ),
         }),
     ...(echoPlanar
-      ? { displacementPer100HzMm: epiDisplacementMm(100, p.echoSpacingMs, acquiredWidthMmOf(p), factor, p.shots) }
+      ? {
+          displacementPer100HzMm: epiDisplacementMm(
+            100,
+            p.echoSpacingMs,
+            acquiredWidthMmOf(p),
+            factor,
+            p.shots,
+          ),
+        }
       : {}),
   };
 
   if (p.breathing === 'triggered') {
-    const { scanS, rangeS, batches } = triggeredTime(p, encoding, patient.breathPeriodS, scanner.respiratoryWindow);
+    const { scanS, rangeS, batches } = triggeredTime(
+      p,
+      encoding,
+      patient.breathPeriodS,
+      scanner.respiratoryWindow,
+    );
     const scanRangeS: RangeMm = [rangeS[0] + calibrationS, rangeS[1] + calibrationS];
     return { ...common, scanS: scanS + calibrationS, scanRangeS, batches, breathHolds: 0, longestHoldS: 0 };
   }
   const held = p.breathing === 'breath-hold';
   // Held freely the limit plays no part; any positive number keeps the arithmetic defined.
-  const limitS = held ? requirePositive('breath-hold-not-positive', 'breathHoldS', patient.breathHoldS.value) : 1;
+  const limitS = held
+    ? requirePositive('breath-hold-not-positive', 'breathHoldS', patient.breathHoldS.value)
+    : 1;
   const { scanS, batches, breathHolds, longestHoldS } = untriggered(p, encoding, limitS);
   return {
     ...common,

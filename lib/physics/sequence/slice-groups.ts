@@ -29,7 +29,12 @@ export function slicesPerTrigger(window: number, breathS: number, sliceTimeMs: n
 export function sliceBatches(slices: number, perBatch: number): number {
   requireWhole('slices-not-whole', 'slices', slices, 1);
   if (perBatch < 1) {
-    throw new DomainError('slice-does-not-fit', 'slices in one TR or trigger', perBatch, 'room for at least one slice');
+    throw new DomainError(
+      'slice-does-not-fit',
+      'slices in one TR or trigger',
+      perBatch,
+      'room for at least one slice',
+    );
   }
   return ceilCount(slices / perBatch);
 }

@@ -21,7 +21,12 @@ function triggersPerGroup(p: Prescription, views: number, shots: number): number
       return shots * p.volumes;
     case 'gradient-echo-3d':
       if (p.segments < 1) {
-        throw new DomainError('triggered-needs-segments', 'segments', p.segments, 'at least 1 segment a triggered 3D scan');
+        throw new DomainError(
+          'triggered-needs-segments',
+          'segments',
+          p.segments,
+          'at least 1 segment a triggered 3D scan',
+        );
       }
       return p.segments * p.averages;
     default:
@@ -68,7 +73,8 @@ export function triggeredTime(
     const step = sliceMs / 1000 / window;
     for (let k = Math.ceil(low / step); k <= stack && k * step <= high; k += 1) {
       times.push(timeAt(k * step));
-      if (k * step > low && k > 1) times.push(p.breathsPerTr * k * step * triggers * sliceBatches(stack, k - 1));
+      if (k * step > low && k > 1)
+        times.push(p.breathsPerTr * k * step * triggers * sliceBatches(stack, k - 1));
     }
   }
   return { scanS, rangeS: [Math.min(...times), Math.max(...times)], batches: batchesAt(breath.value) };

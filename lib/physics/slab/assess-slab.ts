@@ -26,17 +26,36 @@ export function profileKindOf(p: Prescription, slab: Slab): SlabProfileSpec['kin
  * Tissues that can wrap: parenchyma in the nominal slab, fat with its own T1 in its shifted slab; the worse counts.
  * Where the gradient's polarity is unknown (slab.fatShiftTowards absent) fat is taken shifted either way.
  */
-export function slabSources(p: Prescription, slab: Slab, scanner: Scanner, policy: SitePolicy): readonly SlabSource[] {
+export function slabSources(
+  p: Prescription,
+  slab: Slab,
+  scanner: Scanner,
+  policy: SitePolicy,
+): readonly SlabSource[] {
   const kind = profileKindOf(p, slab);
   const timeBandwidthProduct = timeBandwidthProductOf(slab, policy);
   const flipDeg = p.family === 'gradient-echo-3d' ? p.flipDeg : ECHO_TRAIN_EXCITATION_DEG;
   const profile = (t1Ms: number) => slabProfile({ timeBandwidthProduct, flipDeg, kind, trMs: p.trMs, t1Ms });
-  const parenchyma: SlabSource = { tissue: 'parenchyma', profile: profile(policy.tissueT1Ms.parenchyma), shiftShare: 0 };
+  const parenchyma: SlabSource = {
+    tissue: 'parenchyma',
+    profile: profile(policy.tissueT1Ms.parenchyma),
+    shiftShare: 0,
+  };
   if (kind === 'non-selective') return [parenchyma];
   const fat = profile(policy.tissueT1Ms.fat);
   const share = fatShiftOf(slab, scanner, policy) ?? 0;
-  const sides = share === 0 ? [0] : slab.fatShiftTowards === 'low-end' ? [-1] : slab.fatShiftTowards === 'high-end' ? [1] : [-1, 1];
-  return [parenchyma, ...sides.map((side): SlabSource => ({ tissue: 'fat', profile: fat, shiftShare: side * share }))];
+  const sides =
+    share === 0
+      ? [0]
+      : slab.fatShiftTowards === 'low-end'
+        ? [-1]
+        : slab.fatShiftTowards === 'high-end'
+          ? [1]
+          : [-1, 1];
+  return [
+    parenchyma,
+    ...sides.map((side): SlabSource => ({ tissue: 'fat', profile: fat, shiftShare: side * share })),
+  ];
 }
 
 /** |Δz|/S of fat, or undefined when the pulse's duration is unknown or the slab is not selective. */
@@ -49,7 +68,10 @@ export function fatShiftOf(slab: Slab, scanner: Scanner, policy: SitePolicy): nu
  * Reach of any source beyond the nominal low and high edge at the policy's tolerance, as shares of the slab.
  * Both 0.5-based: [low, high], each ≥ 0; infinite for a non-selective slab.
  */
-export function slabSkirts(sources: readonly SlabSource[], tolerance: number): { readonly low: number; readonly high: number } {
+export function slabSkirts(
+  sources: readonly SlabSource[],
+  tolerance: number,
+): { readonly low: number; readonly high: number } {
   let low = 0;
   let high = 0;
   for (const { profile, shiftShare } of sources) {

@@ -53,7 +53,12 @@ export function requireSlabQuestion(q: SlabQuestion): void {
   whole('acquiredPartitions', q.acquiredPartitions, q.partitions);
   whole('droppedPartitionsPerEnd', q.droppedPartitionsPerEnd, 0);
   if (!(q.partitionThicknessMm > 0) || !Number.isFinite(q.partitionThicknessMm)) {
-    throw new DomainError('thickness-not-positive', 'partitionThicknessMm', q.partitionThicknessMm, 'a number above 0 mm');
+    throw new DomainError(
+      'thickness-not-positive',
+      'partitionThicknessMm',
+      q.partitionThicknessMm,
+      'a number above 0 mm',
+    );
   }
   if (!(q.tolerance > 0 && q.tolerance < 1)) {
     throw new DomainError('tolerance-out-of-range', 'tolerance', q.tolerance, 'between 0 and 1');
@@ -81,7 +86,8 @@ function keptIndices(q: SlabQuestion): readonly boolean[] {
 function worstAlias(q: SlabQuestion, offsetMm: number, acquiredSlabMm: number): number {
   const slabMm = q.partitions * q.partitionThicknessMm;
   let worst = 0;
-  for (const source of q.sources) worst = Math.max(worst, aliasAt(offsetMm, slabMm, acquiredSlabMm, source, q.tissue));
+  for (const source of q.sources)
+    worst = Math.max(worst, aliasAt(offsetMm, slabMm, acquiredSlabMm, source, q.tissue));
   return rounded(worst);
 }
 
@@ -93,7 +99,12 @@ function worstAlias(q: SlabQuestion, offsetMm: number, acquiredSlabMm: number): 
 export function slabPartitionsAt(q: SlabQuestion, sliceOversampling: number): readonly PartitionResult[] {
   requireSlabQuestion(q);
   if (!(sliceOversampling >= 0) || !Number.isFinite(sliceOversampling)) {
-    throw new DomainError('oversampling-negative', 'sliceOversampling', sliceOversampling, 'a number, 0 or more');
+    throw new DomainError(
+      'oversampling-negative',
+      'sliceOversampling',
+      sliceOversampling,
+      'a number, 0 or more',
+    );
   }
   const slabMm = q.partitions * q.partitionThicknessMm;
   const kept = keptIndices(q);
@@ -135,7 +146,8 @@ function allKeptClean(q: SlabQuestion, kept: readonly boolean[], acquiredPartiti
   return kept.every(
     (inKeepClear, index) =>
       !inKeepClear ||
-      worstAlias(q, partitionCentreMm(index, q.partitions, q.partitionThicknessMm), acquiredSlabMm) <= q.tolerance,
+      worstAlias(q, partitionCentreMm(index, q.partitions, q.partitionThicknessMm), acquiredSlabMm) <=
+        q.tolerance,
   );
 }
 
@@ -153,7 +165,12 @@ export function smallestCleanPartitions(
 ): number | undefined {
   requireSlabQuestion(q);
   if (!Number.isInteger(grid.partitionStep) || grid.partitionStep < 1) {
-    throw new DomainError('partition-step-not-whole', 'partitionStep', grid.partitionStep, 'a whole number, 1 or more');
+    throw new DomainError(
+      'partition-step-not-whole',
+      'partitionStep',
+      grid.partitionStep,
+      'a whole number, 1 or more',
+    );
   }
   const kept = keptIndices(q);
   for (let acquired = q.partitions; acquired <= grid.mostPartitions; acquired += grid.partitionStep) {

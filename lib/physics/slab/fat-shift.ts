@@ -8,12 +8,26 @@ import { fatWaterShiftHz } from '../constants/larmor';
  * @throws DomainError "pulse-duration-not-positive", "time-bandwidth-out-of-range", "field-strength-not-positive"
  * Valid: magnitude only; the side depends on the gradient's polarity. Source: [bernstein-2004], from memory.
  */
-export function fatShiftShare(fieldStrengthT: number, pulseDurationMs: number, timeBandwidthProduct: number): number {
+export function fatShiftShare(
+  fieldStrengthT: number,
+  pulseDurationMs: number,
+  timeBandwidthProduct: number,
+): number {
   if (!(pulseDurationMs > 0) || !Number.isFinite(pulseDurationMs)) {
-    throw new DomainError('pulse-duration-not-positive', 'pulseDurationMs', pulseDurationMs, 'a number above 0 ms');
+    throw new DomainError(
+      'pulse-duration-not-positive',
+      'pulseDurationMs',
+      pulseDurationMs,
+      'a number above 0 ms',
+    );
   }
   if (!(timeBandwidthProduct > 0) || !Number.isFinite(timeBandwidthProduct)) {
-    throw new DomainError('time-bandwidth-out-of-range', 'timeBandwidthProduct', timeBandwidthProduct, 'a number above 0');
+    throw new DomainError(
+      'time-bandwidth-out-of-range',
+      'timeBandwidthProduct',
+      timeBandwidthProduct,
+      'a number above 0',
+    );
   }
   return (fatWaterShiftHz(fieldStrengthT) * (pulseDurationMs / 1000)) / timeBandwidthProduct;
 }

@@ -6,7 +6,12 @@ import { DomainError } from '../model/domain-error';
  */
 
 /** k of skirt ≈ k/TBW for one pulse at 10°, by threshold in percent of plateau. Source: fixtures/published/slab-profile. */
-export const SINGLE_PULSE_SKIRT_RULE: Readonly<Record<1 | 2 | 5 | 10, number>> = { 1: 1.48, 2: 1.36, 5: 1.14, 10: 0.91 };
+export const SINGLE_PULSE_SKIRT_RULE: Readonly<Record<1 | 2 | 5 | 10, number>> = {
+  1: 1.48,
+  2: 1.36,
+  5: 1.14,
+  10: 0.91,
+};
 
 /** k for a spoiled 3D gradient echo at 10–15°, 5 % of plateau. Source: fixtures/published/slab-profile. */
 export const SPOILED_SKIRT_RULE_5_PCT = 1.55;
@@ -27,9 +32,12 @@ export function transitionProduct(passbandRipple: number, stopbandRipple: number
     ['passbandRipple', passbandRipple],
     ['stopbandRipple', stopbandRipple],
   ] as const) {
-    if (!(ripple >= 1e-5 && ripple <= 0.1)) throw new DomainError('ripple-out-of-range', argument, ripple, '0.00001 to 0.1');
+    if (!(ripple >= 1e-5 && ripple <= 0.1))
+      throw new DomainError('ripple-out-of-range', argument, ripple, '0.00001 to 0.1');
   }
   const l1 = Math.log10(passbandRipple);
   const l2 = Math.log10(stopbandRipple);
-  return (5.309e-3 * l1 * l1 + 7.114e-2 * l1 - 4.761e-1) * l2 + (-2.66e-3 * l1 * l1 - 5.941e-1 * l1 - 4.278e-1);
+  return (
+    (5.309e-3 * l1 * l1 + 7.114e-2 * l1 - 4.761e-1) * l2 + (-2.66e-3 * l1 * l1 - 5.941e-1 * l1 - 4.278e-1)
+  );
 }

@@ -36,8 +36,10 @@ function requireSpec(spec: SlabProfileSpec): void {
     throw new DomainError('flip-out-of-range', 'flipDeg', flipDeg, 'above 0 to 150 degrees');
   }
   if (kind === 'spoiled') {
-    if (!(trMs! > 0) || !Number.isFinite(trMs)) throw new DomainError('tr-not-positive', 'trMs', trMs, 'a number above 0 ms');
-    if (!(t1Ms! > 0) || !Number.isFinite(t1Ms)) throw new DomainError('t1-not-positive', 't1Ms', t1Ms, 'a number above 0 ms');
+    if (!(trMs! > 0) || !Number.isFinite(trMs))
+      throw new DomainError('tr-not-positive', 'trMs', trMs, 'a number above 0 ms');
+    if (!(t1Ms! > 0) || !Number.isFinite(t1Ms))
+      throw new DomainError('t1-not-positive', 't1Ms', t1Ms, 'a number above 0 ms');
   }
 }
 
@@ -66,7 +68,13 @@ export function slabProfile(spec: SlabProfileSpec): SlabProfile {
   };
   const centre = signal(0);
   const at = (zOverSlab: number): number => signal(zOverSlab) / centre;
-  return { kind, timeBandwidthProduct, flipDeg, at, skirtShare: (threshold) => skirtOf(at, timeBandwidthProduct, threshold) };
+  return {
+    kind,
+    timeBandwidthProduct,
+    flipDeg,
+    at,
+    skirtShare: (threshold) => skirtOf(at, timeBandwidthProduct, threshold),
+  };
 }
 
 /** Outermost crossing, looked for inwards from SEARCH_END and then closed in by bisection to 1e-7 of the slab. */

@@ -20,9 +20,15 @@ describe('fat', () => {
     expect(larmorFrequencyMhz(1.5)).toBeCloseTo(63.866, 3);
   });
   it('is refused without a pulse duration or a field', () => {
-    expect(() => fatShiftShare(3, 0, 8)).toThrow(expect.objectContaining({ code: 'pulse-duration-not-positive' }));
-    expect(() => fatShiftShare(3, 1, 0)).toThrow(expect.objectContaining({ code: 'time-bandwidth-out-of-range' }));
-    expect(() => fatShiftShare(-1, 1, 8)).toThrow(expect.objectContaining({ code: 'field-strength-not-positive' }));
+    expect(() => fatShiftShare(3, 0, 8)).toThrow(
+      expect.objectContaining({ code: 'pulse-duration-not-positive' }),
+    );
+    expect(() => fatShiftShare(3, 1, 0)).toThrow(
+      expect.objectContaining({ code: 'time-bandwidth-out-of-range' }),
+    );
+    expect(() => fatShiftShare(-1, 1, 8)).toThrow(
+      expect.objectContaining({ code: 'field-strength-not-positive' }),
+    );
   });
   it('counts on the side its shift is known to be, on both when it is not', () => {
     const skirts = (fatShiftTowards?: 'low-end' | 'high-end') =>
@@ -35,7 +41,12 @@ describe('fat', () => {
 
 describe('a slab as prescribed', () => {
   it('takes the worse tissue: long T1 widens the skirt', () => {
-    const sources = slabSources(gradientEcho, slabOf({ pulseDurationMs: undefined }), scanner, DEFAULT_POLICY);
+    const sources = slabSources(
+      gradientEcho,
+      slabOf({ pulseDurationMs: undefined }),
+      scanner,
+      DEFAULT_POLICY,
+    );
     expect(sources.map(({ tissue }) => tissue)).toEqual(['parenchyma', 'fat']);
     const [liver, fat] = sources.map(({ profile }) => profile.skirtShare(0.05));
     expect(liver).toBeGreaterThan(fat!);
@@ -45,13 +56,29 @@ describe('a slab as prescribed', () => {
   it('reports contaminated partitions, and adopting its answer leaves none in the keep-clear area', () => {
     const slab = slabOf();
     const now = assessSlab(gradientEcho, slab, scanner, DEFAULT_POLICY, everywhere);
-    expect(now).toMatchObject({ profileKind: 'spoiled', timeBandwidthProduct: 8, fatShiftShare: expect.closeTo(0.0559, 4) as number });
+    expect(now).toMatchObject({
+      profileKind: 'spoiled',
+      timeBandwidthProduct: 8,
+      fatShiftShare: expect.closeTo(0.0559, 4) as number,
+    });
     expect(now.contaminatedInKeepClear).toBeGreaterThan(0);
     expect(now.contaminated).toBe(now.partitions.filter(({ state }) => state === 'contaminated').length);
     const acquiredPartitions = now.smallestCleanPartitions!;
-    const then = assessSlab(gradientEcho, { ...slab, acquiredPartitions }, scanner, DEFAULT_POLICY, everywhere);
+    const then = assessSlab(
+      gradientEcho,
+      { ...slab, acquiredPartitions },
+      scanner,
+      DEFAULT_POLICY,
+      everywhere,
+    );
     expect(then.contaminatedInKeepClear).toBe(0);
-    const oneLess = assessSlab(gradientEcho, { ...slab, acquiredPartitions: acquiredPartitions - 1 }, scanner, DEFAULT_POLICY, everywhere);
+    const oneLess = assessSlab(
+      gradientEcho,
+      { ...slab, acquiredPartitions: acquiredPartitions - 1 },
+      scanner,
+      DEFAULT_POLICY,
+      everywhere,
+    );
     expect(oneLess.contaminatedInKeepClear).toBeGreaterThan(0);
   });
 
@@ -70,8 +97,20 @@ describe('a slab as prescribed', () => {
   });
 
   it('uses the policy’s cautious sharpness when the pulse is unknown, and never does better for it', () => {
-    const unknown = assessSlab(gradientEcho, slabOf({ timeBandwidthProduct: undefined, pulseDurationMs: undefined }), scanner, DEFAULT_POLICY, everywhere);
-    const known = assessSlab(gradientEcho, slabOf({ pulseDurationMs: undefined }), scanner, DEFAULT_POLICY, everywhere);
+    const unknown = assessSlab(
+      gradientEcho,
+      slabOf({ timeBandwidthProduct: undefined, pulseDurationMs: undefined }),
+      scanner,
+      DEFAULT_POLICY,
+      everywhere,
+    );
+    const known = assessSlab(
+      gradientEcho,
+      slabOf({ pulseDurationMs: undefined }),
+      scanner,
+      DEFAULT_POLICY,
+      everywhere,
+    );
     expect(unknown.timeBandwidthProduct).toBe(DEFAULT_POLICY.unknownTimeBandwidthProduct);
     expect(unknown.fatShiftShare).toBeUndefined();
     expect(unknown.contaminated).toBeGreaterThan(known.contaminated);

@@ -24,7 +24,8 @@ export function integrateBloch(
     const ox = scale * shape(t);
     return [y! * oz, z! * ox - x! * oz, -y! * ox];
   };
-  const along = (m: readonly number[], k: readonly number[], h: number): number[] => m.map((v, i) => v + h * k[i]!);
+  const along = (m: readonly number[], k: readonly number[], h: number): number[] =>
+    m.map((v, i) => v + h * k[i]!);
   const h = 1 / steps;
   let m: number[] = [0, 0, 1];
   for (let s = 0; s < steps; s += 1) {
@@ -48,7 +49,10 @@ export function smallTip(timeBandwidthProduct: number, zOverSlab: number): numbe
       const x = Math.PI * timeBandwidthProduct * t;
       const shape = (0.54 + 0.46 * Math.cos(2 * Math.PI * t)) * (Math.abs(x) < 1e-12 ? 1 : Math.sin(x) / x);
       // The pulse is even, so the sine part vanishes.
-      sum += shape * Math.cos(2 * Math.PI * timeBandwidthProduct * z * t) * (k === 0 || k === n ? 1 : k % 2 ? 4 : 2);
+      sum +=
+        shape *
+        Math.cos(2 * Math.PI * timeBandwidthProduct * z * t) *
+        (k === 0 || k === n ? 1 : k % 2 ? 4 : 2);
     }
     return sum;
   };

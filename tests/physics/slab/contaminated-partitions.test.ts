@@ -48,7 +48,9 @@ describe('contaminated partitions against fixtures/published/slab-partitions', (
 
   it('reads 432 rows; those at 0, 25 and 50 % are whole partitions', () => {
     expect(rows).toHaveLength(432);
-    const whole = rows.filter((row) => isWhole(row.number('partitions') * (1 + row.number('slice_oversampling_pct') / 100)));
+    const whole = rows.filter((row) =>
+      isWhole(row.number('partitions') * (1 + row.number('slice_oversampling_pct') / 100)),
+    );
     expect(whole).toHaveLength(144);
   });
 
@@ -86,14 +88,18 @@ describe('alias into a partition', () => {
     expect(aliasAt(45, 100, 110, source, { rangeMm: [-500, 500] })).toBeCloseTo(0.3, 12);
     expect(aliasAt(0, 100, 110, source, { rangeMm: [-500, 500] })).toBe(0);
     expect(aliasAt(45, 100, 110, source, { rangeMm: [-60, 500] })).toBe(0);
-    expect(aliasAt(45, 100, 110, source, { rangeMm: [-500, 500], weightAt: (z) => (z < 0 ? 0.5 : 1) })).toBeCloseTo(0.15, 12);
+    expect(
+      aliasAt(45, 100, 110, source, { rangeMm: [-500, 500], weightAt: (z) => (z < 0 ? 0.5 : 1) }),
+    ).toBeCloseTo(0.15, 12);
   });
 
   it('a non-selective slab takes in tissue as far as the body reaches', () => {
     const q = question(NON_SELECTIVE, { tissue: { rangeMm: [-200, 90] } });
     // S = 128 = W_z: every multiple of 128 that lands in the tissue adds one.
     for (const { offsetMm, alias } of slabPartitions(q)) {
-      expect(alias).toBe([-256, -128, 128, 256].filter((w) => offsetMm + w <= 90 && offsetMm + w >= -200).length);
+      expect(alias).toBe(
+        [-256, -128, 128, 256].filter((w) => offsetMm + w <= 90 && offsetMm + w >= -200).length,
+      );
     }
     expect(smallestCleanPartitions(q, { partitionStep: 1, mostPartitions: 128 })).toBe(
       // W_z must exceed 62 + 200 (partition centre at +62): 66 · 4 = 264.
@@ -115,8 +121,13 @@ describe('alias into a partition', () => {
     const [low, high] = counts(question(profile, { sources: [water, fat] }));
     // Fat reaches further beyond the high end, and that folds onto the low end.
     expect(low).toBeGreaterThan(high);
-    expect([low, high]).toEqual(counts(question(profile, { sources: [water, { ...fat, shiftShare: -0.056 }] })).reverse());
-    const clean = smallestCleanPartitions(question(profile, { sources: [water, fat] }), { partitionStep: 1, mostPartitions: 64 })!;
+    expect([low, high]).toEqual(
+      counts(question(profile, { sources: [water, { ...fat, shiftShare: -0.056 }] })).reverse(),
+    );
+    const clean = smallestCleanPartitions(question(profile, { sources: [water, fat] }), {
+      partitionStep: 1,
+      mostPartitions: 64,
+    })!;
     const needed = profile.skirtShare(0.05) + 0.056;
     // Partition centres sit half a partition inside the edge, and L_z is whole: at most one partition less.
     expect(clean).toBeLessThanOrEqual(Math.ceil(32 * (1 + needed)));
@@ -124,7 +135,13 @@ describe('alias into a partition', () => {
   });
 
   it('reports dim and bright partitions apart from wrap', () => {
-    const spoiled = slabProfile({ timeBandwidthProduct: 8, flipDeg: 20, kind: 'spoiled', trMs: 4, t1Ms: 800 });
+    const spoiled = slabProfile({
+      timeBandwidthProduct: 8,
+      flipDeg: 20,
+      kind: 'spoiled',
+      trMs: 4,
+      t1Ms: 800,
+    });
     const list = slabPartitions(question(spoiled, { acquiredPartitions: 64 }));
     expect(list.every(({ state }) => state === 'clean')).toBe(true);
     expect(list.some(({ bright, signal }) => bright && signal > 1.1)).toBe(true);
@@ -157,7 +174,12 @@ describe('smallest slice oversampling', () => {
         fc.integer({ min: 0, max: 3 }),
         fc.constantFrom(0.02, 0.05, 0.1),
         (tbw, flip, partitions, partitionStep, droppedPartitionsPerEnd, tolerance) => {
-          const q = question(single(tbw, flip), { partitions, acquiredPartitions: partitions, droppedPartitionsPerEnd, tolerance });
+          const q = question(single(tbw, flip), {
+            partitions,
+            acquiredPartitions: partitions,
+            droppedPartitionsPerEnd,
+            tolerance,
+          });
           const answer = smallestCleanPartitions(q, { partitionStep, mostPartitions: 3 * partitions });
           let expected: number | undefined;
           for (let l = partitions; l <= 3 * partitions && expected === undefined; l += partitionStep) {
@@ -174,7 +196,8 @@ describe('smallest slice oversampling', () => {
   it('never asks for more when partitions are given up, the tolerance grows, or tissue ends sooner', () => {
     const base = question(single(6, 10));
     const grid = { partitionStep: 1, mostPartitions: 96 };
-    const least = (overrides: Partial<SlabQuestion>): number => smallestCleanPartitions({ ...base, ...overrides }, grid)!;
+    const least = (overrides: Partial<SlabQuestion>): number =>
+      smallestCleanPartitions({ ...base, ...overrides }, grid)!;
     let previous = Number.POSITIVE_INFINITY;
     for (const droppedPartitionsPerEnd of [0, 1, 2, 3, 4]) {
       expect(least({ droppedPartitionsPerEnd })).toBeLessThanOrEqual(previous);
@@ -185,7 +208,9 @@ describe('smallest slice oversampling', () => {
   });
 
   it('is undefined when the scanner cannot add enough', () => {
-    expect(smallestCleanPartitions(question(NON_SELECTIVE), { partitionStep: 1, mostPartitions: 64 })).toBeUndefined();
+    expect(
+      smallestCleanPartitions(question(NON_SELECTIVE), { partitionStep: 1, mostPartitions: 64 }),
+    ).toBeUndefined();
   });
 
   it('does not change when slab, tissue and keep-clear are scaled together', () => {
@@ -219,7 +244,9 @@ describe('slab questions that make no sense', () => {
     expect(() => slabPartitions({ ...q, ...overrides })).toThrow(expect.objectContaining({ code, argument }));
   });
   it('refuses a negative oversampling and a step that is not whole', () => {
-    expect(() => slabPartitionsAt(q, -0.1)).toThrow(expect.objectContaining({ code: 'oversampling-negative' }));
+    expect(() => slabPartitionsAt(q, -0.1)).toThrow(
+      expect.objectContaining({ code: 'oversampling-negative' }),
+    );
     expect(() => smallestCleanPartitions(q, { partitionStep: 0.5, mostPartitions: 64 })).toThrow(
       expect.objectContaining({ code: 'partition-step-not-whole' }),
     );

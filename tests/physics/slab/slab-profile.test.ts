@@ -36,10 +36,20 @@ describe('slab profile against fixtures/published/slab-profile', () => {
     it(`TBW ${tbw}, ${flip}°: single pulse, spoiled and plateau`, () => {
       const one = single(tbw, flip);
       const trMs = 1000 * TR_OVER_T1[flip]!;
-      const spoiled = slabProfile({ timeBandwidthProduct: tbw, flipDeg: flip, kind: 'spoiled', trMs, t1Ms: 1000 });
+      const spoiled = slabProfile({
+        timeBandwidthProduct: tbw,
+        flipDeg: flip,
+        kind: 'spoiled',
+        trMs,
+        t1Ms: 1000,
+      });
       for (const [threshold, column] of THRESHOLDS) {
-        expect(Math.abs(one.skirtShare(threshold) - row.number(`skirt_${column}`))).toBeLessThanOrEqual(SKIRT_TOLERANCE);
-        expect(Math.abs(spoiled.skirtShare(threshold) - row.number(`spoiled_${column}`))).toBeLessThanOrEqual(SKIRT_TOLERANCE);
+        expect(Math.abs(one.skirtShare(threshold) - row.number(`skirt_${column}`))).toBeLessThanOrEqual(
+          SKIRT_TOLERANCE,
+        );
+        expect(Math.abs(spoiled.skirtShare(threshold) - row.number(`spoiled_${column}`))).toBeLessThanOrEqual(
+          SKIRT_TOLERANCE,
+        );
       }
       const beta = new SlabResponse(tbw, flip).exactBetaAt(0);
       // The printed plateau is an average near the centre: 5e-4 covers its ripple.
@@ -71,7 +81,9 @@ describe('slab profile against an independent integration of the Bloch equations
           // 400 Runge–Kutta steps a unit of TBW: its own error is below 1e-8 here.
           const truth = integrateBloch(tbw, flip, z, Math.ceil(400 * tbw));
           const beta = response.exactBetaAt(z);
-          expect(Math.abs(2 * Math.abs(beta) * Math.sqrt(1 - beta * beta) - truth.transverse)).toBeLessThan(2e-5);
+          expect(Math.abs(2 * Math.abs(beta) * Math.sqrt(1 - beta * beta) - truth.transverse)).toBeLessThan(
+            2e-5,
+          );
           expect(Math.abs(1 - 2 * beta * beta - truth.longitudinal)).toBeLessThan(2e-5);
         }
       });
@@ -107,7 +119,13 @@ describe('slab profile: interpolation and shape', () => {
             const transverse = 2 * Math.abs(beta) * Math.sqrt(1 - beta * beta);
             return spoiled ? spoiledSignal(transverse, 2 * beta * beta, 0.005) : transverse;
           };
-          const spoiled = slabProfile({ timeBandwidthProduct: tbw, flipDeg: flip, kind: 'spoiled', trMs: 5, t1Ms: 1000 });
+          const spoiled = slabProfile({
+            timeBandwidthProduct: tbw,
+            flipDeg: flip,
+            kind: 'spoiled',
+            trMs: 5,
+            t1Ms: 1000,
+          });
           expect(Math.abs(single(tbw, flip).at(z) - exact(z, false) / exact(0, false))).toBeLessThan(1e-4);
           expect(Math.abs(spoiled.at(z) - exact(z, true) / exact(0, true))).toBeLessThan(1e-4);
         },
@@ -134,7 +152,13 @@ describe('slab profile: interpolation and shape', () => {
   });
 
   it('the skirt of a spoiled sequence above its Ernst angle is brighter than the plateau', () => {
-    const spoiled = slabProfile({ timeBandwidthProduct: 8, flipDeg: 15, kind: 'spoiled', trMs: 4, t1Ms: 800 });
+    const spoiled = slabProfile({
+      timeBandwidthProduct: 8,
+      flipDeg: 15,
+      kind: 'spoiled',
+      trMs: 4,
+      t1Ms: 800,
+    });
     expect(ernstAngleDeg(4 / 800)).toBeLessThan(15);
     let most = 0;
     for (let z = 0.4; z < 0.7; z += 0.005) most = Math.max(most, spoiled.at(z));
@@ -147,7 +171,11 @@ describe('slab profile: interpolation and shape', () => {
   });
 
   it.each([
-    [{ timeBandwidthProduct: 0.5, flipDeg: 10, kind: 'single-pulse' }, 'time-bandwidth-out-of-range', 'timeBandwidthProduct'],
+    [
+      { timeBandwidthProduct: 0.5, flipDeg: 10, kind: 'single-pulse' },
+      'time-bandwidth-out-of-range',
+      'timeBandwidthProduct',
+    ],
     [{ timeBandwidthProduct: 8, flipDeg: 180, kind: 'single-pulse' }, 'flip-out-of-range', 'flipDeg'],
     [{ timeBandwidthProduct: 8, flipDeg: Number.NaN, kind: 'single-pulse' }, 'flip-out-of-range', 'flipDeg'],
     [{ timeBandwidthProduct: 8, flipDeg: 10, kind: 'spoiled', t1Ms: 800 }, 'tr-not-positive', 'trMs'],
@@ -158,7 +186,9 @@ describe('slab profile: interpolation and shape', () => {
   });
 
   it('refuses a threshold at which a skirt has no meaning', () => {
-    expect(() => single(8, 10).skirtShare(0)).toThrow(expect.objectContaining({ code: 'threshold-out-of-range' }));
+    expect(() => single(8, 10).skirtShare(0)).toThrow(
+      expect.objectContaining({ code: 'threshold-out-of-range' }),
+    );
   });
 });
 
@@ -168,7 +198,9 @@ describe('rules of thumb', () => {
       const profile = single(tbw, 10);
       for (const percent of [1, 2, 5, 10] as const) {
         // Printed to two digits of k; 0.02/TBW of the slab.
-        expect(Math.abs(profile.skirtShare(percent / 100) - SINGLE_PULSE_SKIRT_RULE[percent] / tbw)).toBeLessThan(0.02 / tbw);
+        expect(
+          Math.abs(profile.skirtShare(percent / 100) - SINGLE_PULSE_SKIRT_RULE[percent] / tbw),
+        ).toBeLessThan(0.02 / tbw);
       }
     }
   });
