@@ -1,6 +1,6 @@
 import { DomainError } from '../model/domain-error';
 import type { Prescription } from '../model/prescription';
-import { ceilCount, requireRange, requireWhole } from './check-argument';
+import { ceilCount, requireRange, requireWhole } from '../model/require-argument';
 
 /** Returns the fraction when 0.5 < f ≤ 1; DomainError "partial-fourier-out-of-range" otherwise. */
 export function requirePartialFourier(fraction: number): number {

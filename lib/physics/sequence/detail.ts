@@ -2,7 +2,7 @@ import type { DetailResult } from '../model/assessment';
 import type { RangeMm } from '../model/axes';
 import type { Prescription } from '../model/prescription';
 import { partialFourierLines, partitionsOf, requirePartialFourier } from './acquired-views';
-import { requirePositive, requireRange, requireWhole } from './check-argument';
+import { requirePositive, requireRange, requireWhole } from '../model/require-argument';
 
 /**
  * SNR factor of partial Fourier: conjugate synthesis h = √(0.5/(1.5 − f)) (6/8: 0.8165; √f would say 0.866);

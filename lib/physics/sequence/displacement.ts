@@ -1,7 +1,7 @@
 import type { Prescription } from '../model/prescription';
 import { fatWaterShiftHz } from '../constants/larmor';
 import { acquiredViewsOf } from './acquired-views';
-import { ceilCount, requirePositive, requireWhole } from './check-argument';
+import { ceilCount, requirePositive, requireWhole } from '../model/require-argument';
 
 /**
  * Displacement along phase of an off-resonant spin in EPI: Δy = Δf·ESP·W/(R·shots).

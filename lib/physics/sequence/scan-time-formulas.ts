@@ -1,4 +1,4 @@
-import { ceilCount } from './check-argument';
+import { ceilCount } from '../model/require-argument';
 
 /*
  * The textbook forms, one a family; TR in seconds, counts whole, result in seconds.

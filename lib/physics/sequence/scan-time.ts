@@ -4,7 +4,7 @@ import type { Patient } from '../model/patient';
 import type { Prescription } from '../model/prescription';
 import type { Scanner } from '../model/scanner';
 import { acquiredViewsOf } from './acquired-views';
-import { ceilCount, requirePositive, requireRange, requireWhole } from './check-argument';
+import { ceilCount, requirePositive, requireRange, requireWhole } from '../model/require-argument';
 import { acquiredWidthMmOf, epiDisplacementMm, minimumTeMs, trainMs } from './displacement';
 import {
   echoPlanarTimeS,

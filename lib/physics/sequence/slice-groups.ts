@@ -1,5 +1,5 @@
 import { DomainError } from '../model/domain-error';
-import { ceilCount, floorCount, requirePositive, requireWhole } from './check-argument';
+import { ceilCount, floorCount, requirePositive, requireWhole } from '../model/require-argument';
 
 /**
  * Slices that fit into one TR: ⌊TR/t_slice⌋; 0 when not even one fits.

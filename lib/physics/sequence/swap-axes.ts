@@ -1,4 +1,4 @@
-import { ceilCount, requirePositive, requireWhole } from './check-argument';
+import { ceilCount, requirePositive, requireWhole } from '../model/require-argument';
 
 export interface InPlaneSampling {
   readonly fovPhaseMm: number;

@@ -1,7 +1,7 @@
 import { DomainError } from '../model/domain-error';
 import type { Reading } from '../model/patient';
 import type { Prescription } from '../model/prescription';
-import { requirePositive, requireRange, requireWhole } from './check-argument';
+import { requirePositive, requireRange, requireWhole } from '../model/require-argument';
 import { sliceBatches, slicesPerTrigger } from './slice-groups';
 
 export interface TriggeredTime {

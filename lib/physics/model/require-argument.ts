@@ -1,4 +1,4 @@
-import { DomainError } from '../model/domain-error';
+import { DomainError } from './domain-error';
 
 /** Returns `value` when it is a finite number in [low, high]; throws DomainError `code` otherwise. */
 export function requireRange(
