@@ -1,0 +1,2 @@
+export { ownerDatabase } from './owner-database';
+export { createTestSite, type TestSite } from './test-site';
