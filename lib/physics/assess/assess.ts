@@ -1,0 +1,142 @@
+import { sizesAt } from '../certainty/sizes-at';
+import { PLANE_AXES } from '../geometry/section-frame';
+import type { Assessment, FoldResult, Reason, SamplingResult, SlabResult, TimeResult, Verdict } from '../model/assessment';
+import type { PatientAxis } from '../model/axes';
+import type { Case } from '../model/case';
+import { DomainError } from '../model/domain-error';
+import type { KeepClear } from '../model/keep-clear';
+import type { Patient } from '../model/patient';
+import type { SitePolicy } from '../model/policy';
+import type { Prescription } from '../model/prescription';
+import type { Scanner } from '../model/scanner';
+import { scanTime } from '../sequence/scan-time';
+import { assumptionsFor } from './assumptions';
+import { ENGINE_VERSION } from './engine-version';
+import { solveClass, type FrozenCase } from './geometry-class';
+import { detailOf } from './detail-of';
+import { hardLimits } from './hard-limits';
+import { notModelledReason } from './not-modelled';
+import { reasonsFor } from './reasons';
+import { unfoldingOf, withUnfolding } from './resolve-unfolding';
+import { slabResultOf } from './slab-result';
+import { validateCase } from './validate-case';
+
+const readoutAxisOf = (p: Prescription): PatientAxis =>
+  PLANE_AXES[p.plane][0] === p.phaseAxis ? PLANE_AXES[p.plane][1] : PLANE_AXES[p.plane][0];
+
+function samplingOf(p: Prescription): SamplingResult {
+  return {
+    acquiredLines: p.acquiredLines,
+    acquiredWidthMm: (p.acquiredLines * p.fovPhaseMm) / p.linesAcrossFov,
+    phaseOversampling: p.acquiredLines / p.linesAcrossFov - 1,
+    ...(p.slices.mode === 'stack'
+      ? {}
+      : {
+          acquiredPartitions: p.slices.acquiredPartitions,
+          acquiredSlabMm: p.slices.acquiredPartitions * p.slices.partitionThicknessMm,
+          sliceOversampling: p.slices.acquiredPartitions / p.slices.partitions - 1,
+        }),
+  };
+}
+
+/** Scan time, or the reason why it cannot be played at all. */
+function timeOf({ prescription, patient, scanner }: Case): { readonly time?: TimeResult; readonly stops: readonly Reason[] } {
+  try {
+    return { time: scanTime(prescription, patient, scanner), stops: [] };
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error;
+    return { stops: [{ code: error.code, text: `${error.message}.` }] };
+  }
+}
+
+function verdictOf(hard: readonly Reason[], fold: FoldResult, slab: SlabResult | undefined): Verdict {
+  if (hard.length > 0) return 'cannot-be-scanned';
+  if (fold.inKeepClear || (slab?.contaminatedInKeepClear ?? 0) > 0) return 'fold-in-keep-clear';
+  if (fold.outsideKeepClear || (slab?.contaminated ?? 0) > 0) return 'fold-outside-keep-clear';
+  return 'no-fold-expected';
+}
+
+/** The case the geometry sees: sizes at the policy's certainty, unknown unfolding taken cautiously. */
+export function geometryCase(given: FrozenCase): FrozenCase {
+  return {
+    ...given,
+    patient: sizesAt(given.patient, given.policy.sureAt),
+    prescription: withUnfolding(given, unfoldingOf(given)),
+  };
+}
+
+/**
+ * Answers a case that is already known to be inside its domain.
+ * @param withAssumptions false leaves them out: in a ranking they are those of the case itself
+ */
+export function assessChecked(given: FrozenCase, withAssumptions: boolean): Assessment {
+  const { prescription: p, policy } = given;
+  const common = {
+    engineVersion: ENGINE_VERSION,
+    policyVersion: policy.version,
+    phaseAxis: p.phaseAxis,
+    readoutAxis: readoutAxisOf(p),
+  };
+  const unmodelled = notModelledReason(p);
+  if (unmodelled !== undefined) return { ...common, verdict: 'not-modelled', reasons: [unmodelled], assumptions: [] };
+
+  const { time, stops } = timeOf(given);
+  const hard = [...hardLimits(given, time), ...stops];
+  const posed = geometryCase(given);
+  const solved = solveClass(posed);
+  const partitions = p.slices.mode === 'slab' ? p.slices.acquiredPartitions : undefined;
+  const width = solved.requirement(partitions);
+  const fold = solved.leftover(p.acquiredLines, partitions);
+  const slab = slabResultOf(posed);
+  const verdict = verdictOf(hard, fold, slab);
+  return {
+    ...common,
+    verdict,
+    reasons: reasonsFor({
+      verdict,
+      hard,
+      prescription: p,
+      width,
+      fold,
+      ...(slab === undefined ? {} : { slab }),
+      keepClearIsDisplayed: solved.keepClearIsDisplayed,
+    }),
+    assumptions: withAssumptions ? assumptionsFor(given) : [],
+    sampling: samplingOf(p),
+    width,
+    fold,
+    ...(slab === undefined ? {} : { slab }),
+    ...(time === undefined ? {} : { time }),
+    detail: detailOf(posed),
+  };
+}
+
+/**
+ * The one question: what folds where, whether it can be scanned, how long it takes and what it shows.
+ *
+ * Also callable as assess(patient, prescription, keepClear, scanner, policy).
+ * @returns lengths mm, times s, shares [1]; verdict with the deciding reason first; 'not-modelled' where sampling is not
+ * Cartesian, never "no fold"
+ * @throws DomainError naming the argument, the value given and what is allowed
+ * Valid: Cartesian sampling; planning estimate for rigid tissue and a margin that stands for breathing.
+ */
+export function assess(given: Case): Assessment;
+export function assess(
+  patient: Patient,
+  prescription: Prescription,
+  keepClear: KeepClear,
+  scanner: Scanner,
+  policy: SitePolicy,
+): Assessment;
+export function assess(
+  first: Case | Patient,
+  prescription?: Prescription,
+  keepClear?: KeepClear,
+  scanner?: Scanner,
+  policy?: SitePolicy,
+): Assessment {
+  const given =
+    prescription === undefined ? (first as Case) : ({ patient: first, prescription, keepClear, scanner, policy } as Case);
+  validateCase(given);
+  return assessChecked(given, true);
+}

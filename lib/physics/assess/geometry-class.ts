@@ -1,0 +1,118 @@
+import { foldProblem, type FoldProblem } from '../fold/fold-problem';
+import { solveFold } from '../fold/solve-fold';
+import type { SolvedFold } from '../fold/solved-fold';
+import { keepClearRegion, type OrientedRegion } from '../geometry/oriented-region';
+import type { Case } from '../model/case';
+import type { Prescription, Slab } from '../model/prescription';
+import { slabSources } from '../slab/assess-slab';
+import type { SlabSource } from '../slab/slab-types';
+
+/**
+ * A case whose keep-clear area is fixed in the patient, so that a remedy may change the window without moving it.
+ * Absent: the area as the case says it.
+ */
+export interface FrozenCase extends Case {
+  readonly frozen?: OrientedRegion;
+}
+
+/** Answers kept by key, oldest dropped first: a ranking needs a few dozen, a drag makes new ones every frame. */
+export class KeptAnswers<T> {
+  private readonly answers = new Map<string, T>();
+
+  constructor(private readonly most: number) {}
+
+  get(key: string, workOut: () => T): T {
+    const known = this.answers.get(key);
+    if (known !== undefined) return known;
+    const made = workOut();
+    this.answers.set(key, made);
+    if (this.answers.size > this.most) this.answers.delete(this.answers.keys().next().value!);
+    return made;
+  }
+}
+
+/** The keep-clear area fixed where it is now. */
+export const freeze = (given: Case): FrozenCase => ({
+  ...given,
+  frozen: keepClearRegion(given.keepClear, given.prescription),
+});
+
+const identities = new WeakMap<object, number>();
+let nextIdentity = 0;
+
+/** A number for an object that is never changed in place. */
+function identityOf(object: object): number {
+  let identity = identities.get(object);
+  if (identity === undefined) {
+    identity = nextIdentity++;
+    identities.set(object, identity);
+  }
+  return identity;
+}
+
+/** Everything of a prescription on which fold depends, but the number of acquired lines and partitions. */
+function prescriptionKey(p: Prescription): string {
+  const { acceleration: a, slices } = p;
+  const stack =
+    slices.mode === 'stack'
+      ? `${slices.slices}/${slices.thicknessMm}/${slices.gapMm}`
+      : `${slices.partitions}/${slices.partitionThicknessMm}/${slices.selective}/${slices.timeBandwidthProduct}/` +
+        `${slices.pulseDurationMs}/${slices.droppedPartitionsPerEnd}/${slices.fatShiftTowards}/${p.flipDeg}/${p.trMs}/${p.family}`;
+  const bands = p.presaturation
+    .map((band) => `${band.side}/${band.innerEdgeMm}/${band.thicknessMm}/${band.nominalFlipDeg}/${band.delayMs}`)
+    .join(';');
+  return [
+    p.plane,
+    p.phaseAxis,
+    p.centreMm.join('/'),
+    p.tiltAboutReadoutDeg,
+    p.tiltAboutPhaseDeg,
+    p.inPlaneRotationDeg,
+    p.fovPhaseMm,
+    p.fovReadoutMm,
+    p.linesAcrossFov,
+    stack,
+    a.factorPhase,
+    a.factorSlice,
+    a.factorPhase * a.factorSlice > 1 ? a.unfolding : '',
+    bands,
+    p.coil,
+    p.family === 'echo-planar' ? `${p.echoSpacingMs}/${p.shots}/${p.fatSuppressed}` : '',
+  ].join('|');
+}
+
+export function classKey(given: FrozenCase): string {
+  return [
+    identityOf(given.patient.extents),
+    JSON.stringify(given.patient.arms),
+    given.patient.parts === undefined ? '' : identityOf(given.patient.parts),
+    given.patient.lateralOffsetMm,
+    given.patient.isocentreZMm,
+    given.patient.position,
+    identityOf(given.frozen ?? given.keepClear),
+    identityOf(given.scanner),
+    identityOf(given.policy),
+    prescriptionKey(given.prescription),
+  ].join('#');
+}
+
+/** Signal of the worst tissue at an offset from the slab centre, relative to the slab centre. */
+function worstSlabWeight(sources: readonly SlabSource[], slab: Slab): (offsetMm: number) => number {
+  const slabMm = slab.partitions * slab.partitionThicknessMm;
+  return (offsetMm) =>
+    sources.reduce((worst, source) => Math.max(worst, source.profile.at(offsetMm / slabMm - source.shiftShare)), 0);
+}
+
+function problemOf(given: FrozenCase): FoldProblem {
+  const { prescription: p, scanner, policy } = given;
+  const slab = p.slices.mode === 'slab' ? p.slices : undefined;
+  return foldProblem(given, {
+    ...(given.frozen === undefined ? {} : { keepClear: given.frozen }),
+    ...(slab === undefined ? {} : { slabWeight: worstSlabWeight(slabSources(p, slab, scanner, policy), slab) }),
+  });
+}
+
+const solved = new KeptAnswers<SolvedFold>(256);
+
+/** The geometry class of a case, solved once; the key is every value the solution depends on. */
+export const solveClass = (given: FrozenCase): SolvedFold => solved.get(classKey(given), () => solveFold(problemOf(given)));

@@ -1,0 +1,103 @@
+import type { FoldResult, Reason, SlabResult, Verdict, WidthRequirement } from '../model/assessment';
+import type { Prescription } from '../model/prescription';
+import { AXIS_LETTERS, capitalised, figure, millimetres, OPPOSITE_SIDE, percentBeyond, squareCentimetres } from './words';
+
+/** "Posterior tissue": the trunk goes by its side, every other part by its name. */
+function intruder(from: NonNullable<FoldResult['from']>): string {
+  return capitalised(from.part === 'trunk' ? `${from.side} tissue` : from.part);
+}
+
+/** How far the fold reaches, saying which figure counts the margin. */
+function depthWords(fold: FoldResult): string {
+  if (fold.depthMm <= 0) return `only within the margin, ${millimetres(fold.depthWithMarginMm)} deep with margin`;
+  return `${millimetres(fold.depthWithMarginMm)} deep with margin`;
+}
+
+function foldInReason(fold: FoldResult): Reason {
+  const { from } = fold;
+  const where = from === undefined ? 'Tissue' : intruder(from);
+  if (fold.ghosts && fold.depthWithMarginMm <= 0) {
+    return {
+      code: 'ghosts-in-keep-clear',
+      text: `${where} lies beyond the acquired width, and unfolding leaves ghosts of it in the keep-clear area.`,
+    };
+  }
+  const lands = from === undefined ? 'lands in the keep-clear area' : `lands on the ${OPPOSITE_SIDE[from.side]} side`;
+  const place = fold.placeUncertain ? ' Beyond the usable FOV its place is uncertain.' : '';
+  return { code: 'fold-in-keep-clear', text: `${where} ${lands}, ${depthWords(fold)}.${place}` };
+}
+
+function foldOutsideReason(fold: FoldResult): Reason {
+  const { from } = fold;
+  const where = from === undefined ? 'Tissue lands' : `${intruder(from)} lands on the ${OPPOSITE_SIDE[from.side]} side,`;
+  const share = squareCentimetres(fold.displayedAreaMm2);
+  return { code: 'fold-outside-keep-clear', text: `${where} outside the keep-clear area: ${share} of the picture.` };
+}
+
+function slabReason(slab: SlabResult): Reason {
+  const inside = slab.contaminatedInKeepClear;
+  const count = inside > 0 ? inside : slab.contaminated;
+  const where = inside > 0 ? 'in the keep-clear area' : 'outside the keep-clear area';
+  return {
+    code: inside > 0 ? 'slab-wrap-in-keep-clear' : 'slab-wrap-outside-keep-clear',
+    text: `${count} of ${slab.partitions.length} partitions ${where} ${count === 1 ? 'holds' : 'hold'} tissue from the other end of the slab.`,
+  };
+}
+
+/** What is enough, and what covering the whole body would take. */
+function enoughReason(p: Prescription, width: WidthRequirement): Reason {
+  const cover = percentBeyond(Math.max(width.coverBodyMm, p.fovPhaseMm), p.fovPhaseMm);
+  const lines = width.firstCleanLines;
+  if (lines === undefined) {
+    return {
+      code: 'no-width-on-grid',
+      text:
+        `${percentBeyond(width.firstCleanMm, p.fovPhaseMm)} oversampling (${figure(width.firstCleanMm)} mm acquired) would be ` +
+        `enough, more than this scanner can be set to.`,
+    };
+  }
+  const widthMm = (lines * p.fovPhaseMm) / p.linesAcrossFov;
+  const enough =
+    lines === p.linesAcrossFov
+      ? `No oversampling is needed (${figure(widthMm)} mm acquired).`
+      : `${percentBeyond(lines, p.linesAcrossFov)} oversampling is enough (${figure(widthMm)} mm acquired).`;
+  return { code: 'enough-width', text: `${enough} Covering the whole body would take ${cover}.` };
+}
+
+function noFoldReason(p: Prescription, width: WidthRequirement): Reason {
+  const acquiredMm = (p.acquiredLines * p.fovPhaseMm) / p.linesAcrossFov;
+  const spare = acquiredMm - width.alwaysCleanMm;
+  const extra = spare >= 1 ? `, ${Math.floor(spare)} mm more than needed` : '';
+  return {
+    code: 'no-fold-expected',
+    text: `${figure(acquiredMm)} mm acquired ${AXIS_LETTERS[p.phaseAxis]} is enough with margin${extra}.`,
+  };
+}
+
+export interface ReasonInputs {
+  readonly verdict: Verdict;
+  readonly hard: readonly Reason[];
+  readonly prescription: Prescription;
+  readonly width?: WidthRequirement;
+  readonly fold?: FoldResult;
+  readonly slab?: SlabResult;
+  readonly keepClearIsDisplayed: boolean;
+}
+
+/** The sentences beside the verdict, the deciding one first. */
+export function reasonsFor({ hard, prescription, width, fold, slab, keepClearIsDisplayed }: ReasonInputs): readonly Reason[] {
+  const reasons: Reason[] = [...hard];
+  const slabInside = (slab?.contaminatedInKeepClear ?? 0) > 0;
+  if (fold?.inKeepClear && !(slabInside && fold.depthWithMarginMm <= 0 && !fold.ghosts)) reasons.push(foldInReason(fold));
+  if (slab !== undefined && slabInside) reasons.push(slabReason(slab));
+  if (fold?.outsideKeepClear && !fold.inKeepClear) reasons.push(foldOutsideReason(fold));
+  if (slab !== undefined && !slabInside && slab.contaminated > 0) reasons.push(slabReason(slab));
+  if (width !== undefined) {
+    const folds = fold !== undefined && (fold.inKeepClear || fold.outsideKeepClear);
+    reasons.push(folds ? enoughReason(prescription, width) : noFoldReason(prescription, width));
+  }
+  if (!keepClearIsDisplayed) {
+    reasons.push({ code: 'keep-clear-not-displayed', text: 'The keep-clear area lies outside every displayed slice.' });
+  }
+  return reasons;
+}

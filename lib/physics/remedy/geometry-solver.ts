@@ -1,0 +1,133 @@
+import { assessChecked, geometryCase } from '../assess/assess';
+import { solveClass, type FrozenCase } from '../assess/geometry-class';
+import { partAlong } from '../assess/part-along';
+import { slabResultOf } from '../assess/slab-result';
+import { buildBody } from '../body/build-body';
+import { regionCorners, regionOfBox, windowRegion, type OrientedRegion } from '../geometry/oriented-region';
+import { sectionFrame } from '../geometry/section-frame';
+import { AXIS_SIDES, AXIS_VECTOR, dot, scale } from '../geometry/vector';
+import { toMicrometres } from '../geometry/micrometres';
+import type { Reason } from '../model/assessment';
+import type { PatientAxis, RangeMm, Side, Vec3 } from '../model/axes';
+import type { Case } from '../model/case';
+import { nextAcquiredPartitions } from '../fold/acquired-lines';
+import type { SolvedFold } from '../fold/solved-fold';
+import type { Solver, TargetedCase } from './change';
+
+const SIDE_AXIS: Readonly<Record<Side, PatientAxis>> = {
+  right: 'RL',
+  left: 'RL',
+  anterior: 'AP',
+  posterior: 'AP',
+  superior: 'SI',
+  inferior: 'SI',
+};
+
+/** Unit vector towards a side. */
+const towards = (side: Side): Vec3 => scale(AXIS_VECTOR[SIDE_AXIS[side]], AXIS_SIDES[SIDE_AXIS[side]][1] === side ? 1 : -1);
+
+const partitionsOf = ({ prescription: { slices } }: Case): number | undefined =>
+  slices.mode === 'slab' ? slices.acquiredPartitions : undefined;
+
+/** The case a change is sized in: against what it has to keep free. */
+const posedFor = (given: TargetedCase): FrozenCase =>
+  geometryCase(given.target === undefined ? given : { ...given, frozen: given.target });
+
+const solvedFor = (given: TargetedCase): SolvedFold => solveClass(posedFor(given));
+
+const slabIsClean = (given: TargetedCase): boolean => (slabResultOf(posedFor(given))?.contaminatedInKeepClear ?? 0) === 0;
+
+function isClean(given: TargetedCase): boolean {
+  return solvedFor(given).isClean(given.prescription.acquiredLines, partitionsOf(given)) && slabIsClean(given);
+}
+
+/**
+ * First L_z that keeps the slab's own partitions clean; where the phase direction is clean as well, one that is also
+ * clean for fold in both directions at once.
+ */
+function cleanPartitions(given: TargetedCase): number | undefined {
+  const { slices } = given.prescription;
+  if (slices.mode !== 'slab') return undefined;
+  const alone = slabResultOf(posedFor(given))?.smallestCleanPartitions;
+  if (alone === undefined) return undefined;
+  const together = solvedFor(given).smallestCleanPartitions(given.prescription.acquiredLines);
+  if (together === undefined || together <= alone) return alone;
+  const most = Math.floor(slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9);
+  for (let acquired = together; acquired <= most; ) {
+    const planned = { ...given, prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } } };
+    if (isClean(planned)) return acquired;
+    acquired = nextAcquiredPartitions(slices.partitions, acquired + 1, given.scanner.partitionStep);
+  }
+  return alone;
+}
+
+/** Range of a region along a direction [mm]. */
+function alongDirection(region: OrientedRegion, direction: Vec3): RangeMm {
+  const along = regionCorners(region).map((corner) => dot(corner, direction));
+  return [Math.min(...along), Math.max(...along)];
+}
+
+/** Whether what of `area` was displayed in `before` is still displayed in `after`, axis by axis of the window. */
+function staysInside(area: OrientedRegion, before: OrientedRegion, after: OrientedRegion, skip: number | undefined): boolean {
+  return after.axes.every((axis, i) => {
+    if (i === skip) return true;
+    const [areaLow, areaHigh] = alongDirection(area, axis);
+    const [seenLow, seenHigh] = alongDirection(before, axis);
+    const [low, high] = after.rangesMm[i as 0 | 1 | 2];
+    const from = Math.max(areaLow, seenLow);
+    const to = Math.min(areaHigh, seenHigh);
+    return from >= to || (toMicrometres(low) <= toMicrometres(from) && toMicrometres(high) >= toMicrometres(to));
+  });
+}
+
+const SLICE = 2;
+
+function leavesPictureOf(original: FrozenCase, before: OrientedRegion) {
+  return (planned: TargetedCase): Reason | undefined => {
+    const after = windowRegion(planned.prescription);
+    const { area, mustStayDisplayed } = original.keepClear;
+    const reason = (what: string): Reason => ({ code: 'area-leaves-picture', text: `Not possible: ${what} leaves the picture.` });
+    if (mustStayDisplayed !== undefined && !staysInside(regionOfBox(mustStayDisplayed), before, after, undefined)) {
+      return reason('the anatomy that must stay displayed');
+    }
+    const keepClear = planned.frozen ?? original.frozen;
+    // A whole picture has no anatomy of its own at its ends: end partitions may be given up, at their price.
+    const skip = area.kind === 'whole-picture' ? SLICE : undefined;
+    return keepClear !== undefined && !staysInside(keepClear, before, after, skip) ? reason('the keep-clear area') : undefined;
+  };
+}
+
+function bodyEdge(given: TargetedCase, direction: Vec3): number {
+  const { patient, scanner } = geometryCase(given);
+  return Math.max(...buildBody(patient, scanner).map((part) => partAlong(part, direction, { ...given, patient })[1]));
+}
+
+function bodyAlongPhase(given: TargetedCase): RangeMm {
+  const { phase } = sectionFrame(given.prescription, 0);
+  const [lowSide, highSide] = AXIS_SIDES[given.prescription.phaseAxis];
+  const { marginMm } = given.policy;
+  return [-bodyEdge(given, scale(phase, -1)) - marginMm[lowSide], bodyEdge(given, phase) + marginMm[highSide]];
+}
+
+/**
+ * Everything a change is worked out with, for a case whose keep-clear area is fixed where it is now.
+ * @param original the case before any change, frozen
+ */
+export function geometrySolver(original: FrozenCase): Solver {
+  return {
+    requirement: (asked) => solvedFor(asked).requirement(partitionsOf(asked)),
+    isClean,
+    slabIsClean,
+    cleanPartitions,
+    intruder: (asked) => solvedFor(asked).leftover(asked.prescription.acquiredLines, partitionsOf(asked)).from,
+    leavesPicture: leavesPictureOf(original, windowRegion(original.prescription)),
+    windowEdgeMm: (asked, side) =>
+      Math.max(
+        alongDirection(windowRegion(asked.prescription), towards(side))[1],
+        asked.frozen === undefined ? -Infinity : alongDirection(asked.frozen, towards(side))[1],
+      ),
+    bodyEdgeMm: (asked, side) => bodyEdge(asked, towards(side)),
+    bodyAlongPhaseMm: bodyAlongPhase,
+    assess: (asked) => assessChecked(asked, false),
+  };
+}
