@@ -27,6 +27,6 @@ export async function runCommand(name: string, args: readonly string[]): Promise
     if (error instanceof LocalError || error instanceof EnvironmentError) console.error(`\n${error.message}\n`);
     else if ((error as NodeJS.ErrnoException).code === 'ENOSPC') console.error(`\nThe disk is full: ${String(error)}\n`);
     else console.error(error);
-    process.exitCode = 1;
+    process.exitCode ||= 1;
   }
 }

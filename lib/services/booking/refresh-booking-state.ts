@@ -1,0 +1,37 @@
+import type { SiteTransaction } from '@/db/client';
+import { writeBookingState } from '@/db/queries/booking/bookings';
+import { scanMinutes, worstVerdict, type BookingState } from '@/lib/domain/booking/booking';
+import { ServiceError } from '@/lib/domain/errors';
+import { assessAsBooked } from './assess-as-booked';
+import { readBookingSetup, type BookingSetup } from './read-booking-setup';
+
+/** A plan says what will be scanned; without one it is the protocol as booked, once the sizes are known. */
+function stateOf({ plan, protocol, scanner, policy, sizeRecord }: BookingSetup): BookingState {
+  if (!plan && !sizeRecord.patient) return {};
+  const assessments = plan
+    ? plan.result.assessments
+    : assessAsBooked({
+        patient: sizeRecord.patient!,
+        protocol: protocol.document,
+        sequences: protocol.sequences,
+        scanner: scanner.document.scanner,
+        policy: policy.policy,
+      });
+  const verdict = worstVerdict(assessments);
+  return {
+    ...(verdict ? { verdict } : {}),
+    ...(plan ? { planState: plan.state } : {}),
+    minutesNeeded: Math.round(scanMinutes(assessments) * 100) / 100,
+  };
+}
+
+/** Works out what lists show of a booking and writes it, in the transaction of the change it follows from. */
+export async function refreshBookingState(
+  trx: SiteTransaction,
+  where: { readonly siteId: string; readonly bookingId: string; readonly now: Date },
+): Promise<BookingSetup> {
+  const setup = await readBookingSetup(trx, where);
+  if (!setup) throw new ServiceError('not-found');
+  await writeBookingState(trx, where.siteId, where.bookingId, stateOf(setup), where.now);
+  return setup;
+}
