@@ -29,7 +29,7 @@ export function ScannerForm({ stored, save, readCurrent, mayEdit }: ScannerFormP
     save,
     readCurrent,
     onSaved: ({ version }) => {
-      say(stored ? `Saved as version ${version}.` : 'The scanner was added.');
+      say(!stored ? 'The scanner was added.' : version === state.version ? 'Nothing had changed.' : `Saved as version ${version}.`);
       router.push('/site/scanners');
       router.refresh();
     },

@@ -4,22 +4,11 @@ import * as Menu from '@radix-ui/react-dropdown-menu';
 import { useState } from 'react';
 import { buttonClass } from '@/components/ui/button';
 import { ChevronDownIcon } from '@/components/ui/icons';
-import { menuItemClass, menuPanelClass } from './menu-style';
-import { parseTheme, THEME_COOKIE, THEME_LABELS, THEMES, type Theme } from './theme';
+import { menuPanelClass } from './menu-style';
+import { THEME_LABELS, type Theme } from './theme';
+import { ThemeItems } from './theme-items';
 
-const YEAR_S = 365 * 24 * 60 * 60;
-
-/** The cookie lets the server render the same theme next time, so nothing flashes. */
-function setTheme(theme: Theme): void {
-  if (theme === 'system') {
-    document.cookie = `${THEME_COOKIE}=; path=/; max-age=0; samesite=lax`;
-    delete document.documentElement.dataset.theme;
-  } else {
-    document.cookie = `${THEME_COOKIE}=${theme}; path=/; max-age=${YEAR_S}; samesite=lax`;
-    document.documentElement.dataset.theme = theme;
-  }
-}
-
+/** Two halves of one face: day and dark. */
 function ThemeIcon() {
   return (
     <svg viewBox="0 0 16 16" aria-hidden="true" className="size-4 flex-none">
@@ -30,7 +19,7 @@ function ThemeIcon() {
 }
 
 export function ThemeSwitch({ initial }: { initial: Theme }) {
-  const [theme, setOwn] = useState(initial);
+  const [theme, setTheme] = useState(initial);
   return (
     <Menu.Root modal={false}>
       <Menu.Trigger className={buttonClass('quiet', 'sm', 'border border-line font-medium text-ink-soft')}>
@@ -41,25 +30,7 @@ export function ThemeSwitch({ initial }: { initial: Theme }) {
       </Menu.Trigger>
       <Menu.Portal>
         <Menu.Content align="end" sideOffset={6} collisionPadding={8} className={menuPanelClass}>
-          <Menu.RadioGroup
-            value={theme}
-            onValueChange={(value) => {
-              const next = value === 'system' ? 'system' : parseTheme(value);
-              setOwn(next);
-              setTheme(next);
-            }}
-          >
-            {THEMES.map((option) => (
-              <Menu.RadioItem key={option} value={option} className={menuItemClass}>
-                <span className="flex-1">{THEME_LABELS[option]}</span>
-                <Menu.ItemIndicator>
-                  <svg viewBox="0 0 16 16" aria-hidden="true" className="size-4">
-                    <path d="M3 8.5 6.5 12 13 4.5" fill="none" stroke="currentColor" strokeWidth="1.75" />
-                  </svg>
-                </Menu.ItemIndicator>
-              </Menu.RadioItem>
-            ))}
-          </Menu.RadioGroup>
+          <ThemeItems theme={theme} onChoose={setTheme} />
         </Menu.Content>
       </Menu.Portal>
     </Menu.Root>

@@ -4,8 +4,9 @@ import { type ReactNode } from 'react';
 import { Controller, FormProvider, useFormContext, type FieldValues, type UseFormReturn } from 'react-hook-form';
 import type * as z from 'zod';
 import { Checkbox, Segmented, Switch, type RadioOption } from './choice';
+import { FieldError } from './field';
 import { NumberField, type NumberFieldProps } from './number-field';
-import { numberFacts } from './schema-facts';
+import { numberFacts, type NumberFacts } from './schema-facts';
 import { Select, type SelectOption } from './select';
 import { TextArea, TextInput, type TextInputProps } from './text-input';
 
@@ -55,10 +56,23 @@ export interface FormNumberProps
   label?: ReactNode;
   /** Said under the control; the allowed range unless something else is given, nothing with null. */
   hint?: ReactNode;
+  /** Stored with the other sign: a distance to the right is kept as a negative position. */
+  negated?: boolean;
 }
 
-export function FormNumber({ name, schema, label, hint, ...rest }: FormNumberProps) {
-  const facts = numberFacts(schema);
+/** 0 − v and not −v: a negative zero would compare as a change. */
+const flip = (value: number) => 0 - value;
+
+function negatedFacts(facts: NumberFacts): NumberFacts {
+  return {
+    ...facts,
+    min: facts.max === undefined ? undefined : flip(facts.max),
+    max: facts.min === undefined ? undefined : flip(facts.min),
+  };
+}
+
+export function FormNumber({ name, schema, label, hint, negated = false, ...rest }: FormNumberProps) {
+  const facts = negated ? negatedFacts(numberFacts(schema)) : numberFacts(schema);
   const { control } = useFormContext();
   const range = facts.min !== undefined && facts.max !== undefined ? `${facts.min} to ${facts.max}` : undefined;
   return (
@@ -79,13 +93,25 @@ export function FormNumber({ name, schema, label, hint, ...rest }: FormNumberPro
           required={!facts.optional}
           hint={hint === undefined ? range : hint}
           error={fieldState.error?.message}
-          value={(field.value as number | null | undefined) ?? null}
-          onChange={(value) => field.onChange(value ?? (facts.optional ? undefined : null))}
+          value={shownValue(field.value as number | null | undefined, negated)}
+          onChange={(value) => field.onChange(shownValue(value, negated) ?? (facts.optional ? undefined : null))}
           onBlur={field.onBlur}
         />
       )}
     />
   );
+}
+
+function shownValue(value: number | null | undefined, negated: boolean): number | null {
+  return value === null || value === undefined ? null : negated ? flip(value) : value;
+}
+
+/** The message of something that is not one control, such as a pair or a list. */
+export function FormMessage({ name }: { name: string }) {
+  const { getFieldState, formState } = useFormContext();
+  const error = getFieldState(name, formState).error as { message?: string; root?: { message?: string } } | undefined;
+  const message = error?.root?.message ?? error?.message;
+  return <div aria-live="polite">{typeof message === 'string' && <FieldError>{message}</FieldError>}</div>;
 }
 
 export interface FormTextProps extends Bound, Omit<TextInputProps, 'name' | 'error' | 'hint' | 'className'> {}
