@@ -47,7 +47,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
         select u.site_id, u.id, u.password_hash
         from gate.sign_in_identity i
         join public.app_user u on u.site_id = i.site_id and u.id = i.user_id
-        where i.email_normalised = gate.normalise_email(email)
+        where i.email_normalised = gate.normalise_email(resolve_sign_in.email)
           and u.disabled_at is null
       $$`.execute(db);
 
@@ -134,6 +134,13 @@ export async function up(db: Kysely<unknown>): Promise<void> {
   await sql`revoke create on schema gate from selvedge_gate`.execute(db);
 
   await sql`
+    do $$ begin
+      execute format('grant execute on function gate.keep_sign_in_identity() to %I', current_user);
+    end $$`.execute(db);
+  await sql`
     create trigger keep_sign_in_identity after insert or update of email on app_user
       for each row execute function gate.keep_sign_in_identity()`.execute(db);
+
+  // A member of the gate's role would see every site through the gate's policies: the owner must not stay one.
+  await sql`do $$ begin execute format('revoke selvedge_gate from %I', current_user); end $$`.execute(db);
 }
