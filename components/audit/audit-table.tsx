@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
 import type { AuditEvent } from '@/lib/domain/audit/audit-event';
 import { auditWords } from '@/lib/presentation/audit-words';
-import { momentText } from '@/lib/presentation/moment';
+import { formatMoment } from '@/lib/presentation/moment';
 
 const KINDS: Readonly<Record<AuditEvent['actorKind'], string>> = {
   user: 'person',
@@ -41,7 +41,7 @@ export function AuditTable({ events }: { events: readonly AuditEvent[] }) {
         {events.map((event) => (
           <Tr key={event.id}>
             <Td className="figures text-sm whitespace-nowrap">
-              <time dateTime={event.at.toISOString()}>{momentText(event.at)}</time>
+              <time dateTime={event.at.toISOString()}>{formatMoment(event.at)}</time>
             </Td>
             <Td>
               <Actor event={event} />

@@ -3,7 +3,7 @@ import { Badge } from '@/components/ui/badge';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
 import { ROLE_LABELS } from '@/lib/domain/access';
 import type { Person, PersonStatus } from '@/lib/domain/people';
-import { dayText } from '@/lib/presentation/moment';
+import { formatDate } from '@/lib/presentation/moment';
 
 /** Dotted: not there yet; dashed: no longer. */
 const STATUS: Readonly<Record<PersonStatus, { label: string; edge: 'solid' | 'dotted' | 'dashed' }>> = {
@@ -42,7 +42,7 @@ export function PeopleTable({ people }: { people: readonly Person[] }) {
             <Td>
               <PersonStatusBadge status={person.status} />
             </Td>
-            <Td className="figures whitespace-nowrap">{dayText(person.createdAt)}</Td>
+            <Td className="figures whitespace-nowrap">{formatDate(person.createdAt)}</Td>
           </Tr>
         ))}
       </tbody>

@@ -1,7 +1,7 @@
 'use server';
 
 import { runAction } from '@/lib/http/run-action';
-import { dayText } from '@/lib/presentation/moment';
+import { formatDate } from '@/lib/presentation/moment';
 import type { CreateApiTokenInput } from '@/lib/schemas/api-token/api-token';
 import { createApiToken } from '@/lib/services/api-token/create-api-token';
 import { revokeApiToken } from '@/lib/services/api-token/revoke-api-token';
@@ -9,7 +9,7 @@ import { revokeApiToken } from '@/lib/services/api-token/revoke-api-token';
 export async function createTokenAction(input: CreateApiTokenInput) {
   return runAction('make an API token', async (context) => {
     const { secret, expiresAt } = await createApiToken(context, input);
-    return { secret, expiresOn: dayText(expiresAt) };
+    return { secret, expiresOn: formatDate(expiresAt) };
   });
 }
 

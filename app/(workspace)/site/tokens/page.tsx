@@ -3,7 +3,7 @@ import { TokenTable } from '@/components/api-token/token-table';
 import { LinkButton } from '@/components/ui/button';
 import { EmptyState, PageBody, PageHeader } from '@/components/ui/page';
 import { loadPage } from '@/lib/http/load-page';
-import { dayText } from '@/lib/presentation/moment';
+import { formatDate } from '@/lib/presentation/moment';
 import { listApiTokens } from '@/lib/services/api-token/list-api-tokens';
 import { revokeTokenAction } from './actions';
 
@@ -37,8 +37,8 @@ export default async function TokensPage() {
             scopes,
             state,
             madeBy: createdByName,
-            madeOn: dayText(createdAt),
-            expiresOn: dayText(expiresAt),
+            madeOn: formatDate(createdAt),
+            expiresOn: formatDate(expiresAt),
           }))}
         />
       )}
