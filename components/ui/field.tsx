@@ -28,7 +28,7 @@ export interface FieldChrome {
 export const controlClass = cx(
   'w-full rounded border border-line-strong bg-paper text-ink placeholder:text-ink-soft',
   'aria-invalid:rounded-b-none aria-invalid:border-2 aria-invalid:border-ink',
-  'disabled:cursor-not-allowed disabled:bg-sunk disabled:text-ink-soft read-only:bg-sunk',
+  'disabled:cursor-not-allowed disabled:bg-sunk disabled:text-ink-soft [&[readonly]]:bg-sunk',
 );
 
 export function FieldError({ id, children }: { id?: string; children: ReactNode }) {
