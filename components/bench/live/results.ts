@@ -1,6 +1,5 @@
 import type { Assessment } from '@/lib/physics/model/assessment';
 import type { Case } from '@/lib/physics/model/case';
-import { DomainError } from '@/lib/physics/model/domain-error';
 import type { Ranking } from '@/lib/physics/model/remedy';
 
 /** What the engine says about one sequence as it stands. */
@@ -8,38 +7,30 @@ export interface SequenceResult {
   /** The question that was answered; another object means the answer is stale. */
   readonly question: Case;
   readonly assessment?: Assessment;
-  readonly ranking?: Ranking;
   /** Why the question could not be put: which value, and what is allowed. */
   readonly refusal?: string;
+  /** The newest ranking there is, with the question it answers: it follows the assessment from a Worker. */
+  readonly ranked?: { readonly question: Case; readonly ranking: Ranking };
 }
 
 export type Results = Readonly<Record<string, SequenceResult>>;
 
-export interface Engine {
-  readonly assess: (question: Case) => Assessment;
-  readonly rankRemedies: (question: Case) => Ranking;
+export interface Answer {
+  readonly assessment?: Assessment;
+  readonly refusal?: string;
 }
 
 /** A refused value is an answer a person can act on; anything else is a fault and goes on up. */
 export function refusalOf(error: unknown): string {
-  if (error instanceof DomainError || (error instanceof Error && error.name === 'DomainError')) return error.message;
+  if (error instanceof Error && error.name === 'DomainError') return error.message;
   throw error;
 }
 
-export function assessed(engine: Pick<Engine, 'assess'>, question: Case): SequenceResult {
+export function answerTo(assess: (question: Case) => Assessment, question: Case): Answer {
   try {
-    return { question, assessment: engine.assess(question) };
+    return { assessment: assess(question) };
   } catch (error) {
-    return { question, refusal: refusalOf(error) };
-  }
-}
-
-export function ranked(engine: Pick<Engine, 'rankRemedies'>, question: Case): SequenceResult {
-  try {
-    const ranking = engine.rankRemedies(question);
-    return { question, assessment: ranking.now, ranking };
-  } catch (error) {
-    return { question, refusal: refusalOf(error) };
+    return { refusal: refusalOf(error) };
   }
 }
 
@@ -53,4 +44,9 @@ export function sameQuestion(a: Case | undefined, b: Case): boolean {
     a.scanner === b.scanner &&
     a.policy === b.policy
   );
+}
+
+/** The ranking, if it answers the very question that is on the bench: only then may a remedy be tried or adopted. */
+export function presentRanking(result: SequenceResult): Ranking | undefined {
+  return result.ranked && sameQuestion(result.ranked.question, result.question) ? result.ranked.ranking : undefined;
 }

@@ -1,4 +1,4 @@
-import { screenFrame, sideVector, toPatient, toScreen, type ScreenPoint } from '@/components/schematic/scene/section-frame';
+import { screenFrame, sidesOnScreen, sideVector, toPatient, toScreen, type ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { fromWindow, inWindow, windowFrame } from '@/components/schematic/scene/window-frame';
 import { sectionFrame } from '@/lib/physics/geometry/section-frame';
 import { AXIS_SIDES, dot } from '@/lib/physics/geometry/vector';
@@ -23,15 +23,21 @@ export interface BenchHandle {
   readonly along?: ScreenPoint;
   /** The figure shown while it is held or focused. */
   readonly figure: string;
+  /** The value of the twin field, with its range; absent for the centre, which moves both ways. */
+  readonly value?: { readonly now: number; readonly min: number; readonly max: number };
 }
+
+/** All that a handle depends on. */
+export type HandleState = Pick<BenchState, 'document' | 'activeId'>;
 
 const MM = (value: number): string => `${Math.round(value)} mm`;
 
-export function benchHandles(state: BenchState): readonly BenchHandle[] {
+export function benchHandles(state: HandleState): readonly BenchHandle[] {
   const sequence = sequenceById(state.document, state.activeId);
   const { prescription } = sequence;
   const window = windowFrame(prescription);
   const { phaseAxis, readoutAxis } = sectionFrame(prescription);
+  const { limits } = state.document.scanner;
   const [low, high] = [-1, 1] as const;
   const fovEdges = ([['phase', low], ['phase', high], ['readout', low], ['readout', high]] as const).map(
     ([direction, sign]): BenchHandle => {
@@ -45,6 +51,7 @@ export function benchHandles(state: BenchState): readonly BenchHandle[] {
         at: isPhase ? inWindow(window, sign * half, 0) : inWindow(window, 0, sign * half),
         along: isPhase ? window.phase : window.readout,
         figure: `FOV ${AXIS_WORDS[axis]} ${MM(2 * half)}`,
+        value: { now: 2 * half, min: limits.fovMinMm, max: limits.fovMaxMm },
       };
     },
   );
@@ -58,14 +65,14 @@ export function benchHandles(state: BenchState): readonly BenchHandle[] {
   return [...fovEdges, centre, ...keepClearHandles(state), ...extentHandles(state)];
 }
 
-function keepClearHandles(state: BenchState): BenchHandle[] {
+function keepClearHandles(state: HandleState): BenchHandle[] {
   const sequence = sequenceById(state.document, state.activeId);
   const keepClear = keepClearOf(state.document, sequence);
   if (keepClear.area.kind !== 'box') return [];
   const frame = screenFrame(sequence.prescription);
   const { box } = keepClear.area;
   const middle = toScreen(frame, [mean(box.xMm), mean(box.yMm), mean(box.zMm)]);
-  return Object.values(frame.sides).map((side): BenchHandle => {
+  return sidesOnScreen(frame).map((side): BenchHandle => {
     const direction = toScreen(frame, sideVector(side));
     const reach = edgeOf(box, side);
     const along = middle[0] * direction[0] + middle[1] * direction[1];
@@ -76,11 +83,12 @@ function keepClearHandles(state: BenchState): BenchHandle[] {
       at: [middle[0] + direction[0] * (reach - along), middle[1] + direction[1] * (reach - along)],
       along: direction,
       figure: `keep-clear ${side} ${MM(reach)}`,
+      value: { now: reach, min: -400, max: 400 },
     };
   });
 }
 
-function extentHandles(state: BenchState): BenchHandle[] {
+function extentHandles(state: HandleState): BenchHandle[] {
   const { patient } = state.document;
   if (patient.parts) return []; // Outlines replace the body that the extents would build.
   const frame = screenFrame(sequenceById(state.document, state.activeId).prescription);
@@ -90,7 +98,7 @@ function extentHandles(state: BenchState): BenchHandle[] {
     (value('posterior') - value('anterior')) / 2,
     (value('superior') - value('inferior')) / 2,
   ]);
-  return Object.values(frame.sides)
+  return sidesOnScreen(frame)
     .filter((side) => side !== 'superior' && side !== 'inferior')
     .map((side): BenchHandle => {
       const direction = toScreen(frame, sideVector(side));
@@ -103,13 +111,14 @@ function extentHandles(state: BenchState): BenchHandle[] {
         at: [middle[0] + direction[0] * reach, middle[1] + direction[1] * reach],
         along: direction,
         figure: `body ${side} ${MM(value(side))}`,
+        value: { now: value(side), min: 0, max: 1000 },
       };
     });
 }
 
 /** The edit that putting a handle at a point of the picture means; whole millimetres. */
 export function moveHandle(
-  state: BenchState,
+  state: HandleState,
   setting: BenchSetting,
   id: string,
   to: ScreenPoint,
@@ -147,7 +156,7 @@ export function moveHandle(
 
 /** One arrow key: `byMm` along the key's direction on the screen; null when this handle does not move that way. */
 export function nudgeHandle(
-  state: BenchState,
+  state: HandleState,
   setting: BenchSetting,
   id: string,
   by: ScreenPoint,

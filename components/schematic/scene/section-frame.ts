@@ -54,6 +54,11 @@ export function screenFrame(prescription: Prescription): ScreenFrame {
   };
 }
 
+/** Left, right, top, bottom. */
+export function sidesOnScreen({ sides }: ScreenFrame): readonly Side[] {
+  return [sides.left, sides.right, sides.top, sides.bottom];
+}
+
 export function toScreen(frame: ScreenFrame, point: Vec3): ScreenPoint {
   return [plain(dot(frame.u, point)), plain(dot(frame.v, point))];
 }

@@ -33,6 +33,11 @@ function screener(drawing: SectionDrawing, screen: ScreenFrame): (ring: SectionR
   return (ring) => ring.map(([r, p]) => [readout[0] * r + phase[0] * p, readout[1] * r + phase[1] * p] as const);
 }
 
+/** From section coordinates to the screen, for one drawing. */
+export function ringOnScreen(drawing: SectionDrawing, prescription: Case['prescription']): (ring: SectionRing) => Ring {
+  return screener(drawing, screenFrame(prescription));
+}
+
 /** Geometry → picture of one section: where tissue is, where it lands, and what was asked to stay free of it. */
 export function sectionScene(input: SectionSceneInput): Scene {
   const { question, drawing, tried, bounds, mmPerPx } = input;

@@ -1,10 +1,13 @@
 import { describe, expect, it } from 'vitest';
 import { createLatestWins } from '@/components/bench/live/latest-wins';
-import { createLiveAssessor, type OtherAnswer, type OtherQuestion } from '@/components/bench/live/live-assessor';
+import { createLiveAssessor, type Asked } from '@/components/bench/live/live-assessor';
+import { presentRanking, type Answer } from '@/components/bench/live/results';
 import { startBench } from '@/components/bench/state/bench-state';
 import { createBenchStore } from '@/components/bench/state/bench-store';
 import type { Assessment } from '@/lib/physics/model/assessment';
 import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
+import type { Case } from '@/lib/physics/model/case';
+import type { Ranking } from '@/lib/physics/model/remedy';
 import { benchDocument } from '@/tests/support/bench-documents';
 
 /** Animation frames that come when the test says so. */
@@ -24,33 +27,36 @@ function later<J, R>() {
   return { open, run };
 }
 
+const verdict = (word: Assessment['verdict']) => ({ verdict: word }) as Assessment;
 const settle = () => new Promise<void>((resolve) => setImmediate(resolve));
 
 function bench() {
   const store = createBenchStore(startBench(benchDocument(), 'a', null));
   const clock = frames();
-  const worker = later<readonly OtherQuestion[], readonly OtherAnswer[]>();
+  const worker = later<readonly Asked[], readonly Answer[]>();
+  const ranker = later<Case, Ranking>();
   const worked: string[] = [];
   const asked: number[] = [];
   const faults: unknown[] = [];
   const live = createLiveAssessor({
     store,
     setting: { policy: DEFAULT_POLICY, today: '2026-03-02' },
-    engine: {
-      assess: () => ({ verdict: 'no-fold-expected' }) as Assessment,
-      rankRemedies: (question) => {
-        asked.push(question.prescription.fovPhaseMm);
-        return { now: { verdict: 'no-fold-expected' } as Assessment, remedies: [], notPossible: [], candidates: 0 };
-      },
+    assess: (question) => {
+      asked.push(question.prescription.fovPhaseMm);
+      return verdict('no-fold-expected');
     },
+    rank: ranker.run,
     initial: {},
     assessOthers: worker.run,
     requestFrame: clock.request,
     cancelFrame: () => {},
-    onWork: (id) => worked.push(id),
+    onWork: (id, work) => {
+      worked.push(id);
+      work();
+    },
     onFault: (error) => faults.push(error),
   });
-  return { store, clock, worker, worked, asked, faults, live };
+  return { store, clock, worker, ranker, worked, asked, faults, live };
 }
 
 describe('answering edits', () => {
@@ -83,7 +89,7 @@ describe('answering edits', () => {
     live.start();
     clock.run();
     expect(worker.open[0]?.job.map(({ id }) => id)).toEqual(['b', 'c']);
-    worker.open[0]?.resolve(worker.open[0].job.map(({ id }) => ({ id, assessment: { verdict: 'not-modelled' } as Assessment })));
+    worker.open[0]?.resolve(worker.open[0].job.map(() => ({ assessment: verdict('not-modelled') })));
     await settle();
     expect(live.read()['b']?.assessment?.verdict).toBe('not-modelled');
 
@@ -102,7 +108,7 @@ describe('answering edits', () => {
     clock.run();
     store.dispatch({ type: 'edit-patient', patch: { lateralOffsetMm: 10 } });
     clock.run();
-    worker.open[0]?.resolve([{ id: 'b', assessment: { verdict: 'not-modelled' } as Assessment }]);
+    worker.open[0]?.resolve([{ assessment: verdict('not-modelled') }]);
     await settle();
     expect(live.read()['b']).toBeUndefined();
     expect(worker.open[1]?.job[0]?.question.patient.lateralOffsetMm).toBe(10);
@@ -116,6 +122,38 @@ describe('answering edits', () => {
     await settle();
     expect(faults).toHaveLength(1);
     expect(live.read()['a']?.assessment?.verdict).toBe('no-fold-expected');
+  });
+});
+
+describe('ranking', () => {
+  const ranking = { now: verdict('no-fold-expected'), remedies: [], notPossible: [], candidates: 7 } as Ranking;
+
+  it('follows the assessment, the latest question only, and counts as present only for that question', async () => {
+    const { store, clock, ranker, live } = bench();
+    live.start();
+    clock.run();
+    for (const fov of [310, 320, 330]) {
+      store.dispatch({ type: 'edit-prescription', patch: { fovPhaseMm: fov } });
+      clock.run();
+    }
+    ranker.open[0]?.resolve(ranking);
+    await settle();
+    expect(presentRanking(live.read()['a']!)).toBeUndefined();
+    expect(ranker.open.map(({ job }) => job.prescription.fovPhaseMm)).toEqual([300, 330]);
+    ranker.open[1]?.resolve(ranking);
+    await settle();
+    expect(presentRanking(live.read()['a']!)?.candidates).toBe(7);
+  });
+
+  it('is not asked again when nothing the question contains has changed', async () => {
+    const { store, clock, ranker, live } = bench();
+    live.start();
+    clock.run();
+    ranker.open[0]?.resolve(ranking);
+    await settle();
+    store.dispatch({ type: 'choose-view', view: 'slab' });
+    clock.run();
+    expect(ranker.open).toHaveLength(1);
   });
 });
 

@@ -1,0 +1,46 @@
+'use client';
+
+import { centroidOf } from '@/components/schematic/scene/rings';
+import { toPixels, type Fit } from '@/components/schematic/scene/scene';
+import { ringOnScreen } from '@/components/schematic/scene/section-scene';
+import type { Prescription } from '@/lib/physics/model/prescription';
+import type { SectionDrawing } from '@/lib/physics/section/section-drawing';
+import { describeGhost, describePiece } from '@/lib/presentation/describe-section';
+
+/** Landed pieces can be focused, so that the thread to where they come from is not only for a mouse. */
+export function PieceOverlay({
+  drawing,
+  prescription,
+  fit,
+  onFocus,
+}: {
+  drawing: SectionDrawing;
+  prescription: Prescription;
+  fit: Fit;
+  onFocus: (name: string | undefined) => void;
+}) {
+  const toRing = ringOnScreen(drawing, prescription);
+  const pieces = [
+    ...drawing.pieces.map((piece) => ({ ...piece, words: describePiece(piece) })),
+    ...drawing.ghosts.map((ghost) => ({ ...ghost, words: describeGhost(ghost) })),
+  ];
+  return pieces.map(({ name, landed, inKeepClear, words }) => {
+    const at = centroidOf((inKeepClear.length > 0 ? inKeepClear : landed).map(toRing));
+    if (!at) return null;
+    const [x, y] = toPixels(fit, at);
+    return (
+      <button
+        key={name}
+        type="button"
+        data-piece={name}
+        aria-label={words}
+        onFocus={() => onFocus(name)}
+        onBlur={() => onFocus(undefined)}
+        onPointerEnter={() => onFocus(name)}
+        onPointerLeave={() => onFocus(undefined)}
+        style={{ left: x, top: y }}
+        className="absolute -m-3 size-6 rounded-full"
+      />
+    );
+  });
+}

@@ -1,0 +1,56 @@
+'use client';
+
+import { useState } from 'react';
+import { prescriptionSchema } from '@/lib/schemas/case/prescription';
+import type { Prescription } from '@/lib/physics/model/prescription';
+import { useActiveSequence, useBench, useBenchState } from './bench-context';
+import { BenchForm, withLeaf } from './bench-form';
+import { AccelerationGroup, OversamplingGroup, SlicesGroup, TimingGroup, WindowGroup } from './prescription-groups';
+import { sequenceById } from './state/bench-document';
+import { FAMILIES_3D } from './state/prescription-edit';
+
+export type GroupKey = 'window' | 'oversampling' | 'slices' | 'timing' | 'acceleration';
+
+/** What is usually changed first in a family, so that its group is the one that lies open. */
+function firstGroup({ family, breathing }: Prescription): GroupKey {
+  if (FAMILIES_3D.includes(family)) return 'slices';
+  if (breathing === 'breath-hold' && family === 'balanced') return 'window';
+  return 'oversampling';
+}
+
+/** Every field of the active sequence; groups roll up to one line, and the open one follows the sequence. */
+export function PrescriptionPanel({ source }: { source: string }) {
+  const sequence = useActiveSequence();
+  // A form of its own for each sequence: a refused value waits where it was typed.
+  return <SequenceForm key={sequence.id} id={sequence.id} source={source} />;
+}
+
+function SequenceForm({ id, source }: { id: string; source: string }) {
+  const { store } = useBench();
+  const prescription = useBenchState((state) => sequenceById(state.document, id).prescription);
+  const [open, setOpen] = useState<GroupKey | null>(firstGroup(prescription));
+  const onEdit = (path: string, value: unknown, step?: string) => {
+    const now = sequenceById(store.read().document, id).prescription;
+    const after = withLeaf(now, path.split('.'), value);
+    const head = path.split('.')[0] as keyof Prescription;
+    store.dispatch({ type: 'edit-prescription', patch: { [head]: after[head] }, ...(step === undefined ? {} : { step }) });
+  };
+  const group = (key: GroupKey) => ({
+    prescription,
+    open: open === key,
+    onOpenChange: (next: boolean) => setOpen(next ? key : null),
+  });
+  return (
+    <BenchForm schema={prescriptionSchema as never} value={prescription} label={`Prescription, ${prescription.name}`} onEdit={onEdit}>
+      <div className="flex items-baseline justify-between gap-4 px-4 pt-3 pb-1">
+        <h2 className="text-sm font-semibold tracking-wider text-ink-soft uppercase">Prescription</h2>
+        <p className="min-w-0 truncate text-sm text-ink-soft">{source}</p>
+      </div>
+      <OversamplingGroup {...group('oversampling')} />
+      <WindowGroup {...group('window')} />
+      <SlicesGroup {...group('slices')} />
+      <TimingGroup {...group('timing')} />
+      <AccelerationGroup {...group('acceleration')} />
+    </BenchForm>
+  );
+}

@@ -1,0 +1,97 @@
+'use client';
+
+import { Button } from '@/components/ui/button';
+import { cx } from '@/components/ui/class-names';
+import { Figure } from '@/components/ui/figure';
+import { useStatus } from '@/components/ui/status';
+import type { Assessment } from '@/lib/physics/model/assessment';
+import type { Remedy } from '@/lib/physics/model/remedy';
+import { foldFigure, scanTimeFigure, voxelFigure } from '@/lib/presentation/assessment-figures';
+import { costBreakdown, formatCost } from '@/lib/presentation/cost-words';
+import { formatSignedPercent } from '@/lib/presentation/percent';
+import { remedyChange, remedyTitle } from '@/lib/presentation/remedy-words';
+import { useActiveSequence, useBench } from './bench-context';
+import { CostBar } from './cost-bar';
+import { VerdictWords } from './verdict-words';
+
+export interface RemedyCardProps {
+  readonly remedy: Remedy;
+  readonly now: Assessment;
+  readonly tried: boolean;
+  /** Tenths of a point that fill the bar. */
+  readonly scale: number;
+}
+
+export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
+  const { store } = useBench();
+  const { say } = useStatus();
+  const present = useActiveSequence().prescription;
+  const title = remedyTitle(remedy);
+  const after = remedy.assessment;
+  const adopt = () => {
+    store.dispatch({ type: 'adopt', remedy });
+    say(`Adopted: ${title}. Undo takes it back.`);
+  };
+  return (
+    <li
+      data-remedy={remedy.key}
+      className={cx('relative border-b border-line px-4 py-3', tried && 'bg-wash shadow-[inset_3px_0_0_var(--indigo)]')}
+    >
+      <div className="flex items-baseline justify-between gap-4">
+        <h3 className="min-w-0">
+          <button
+            type="button"
+            aria-pressed={tried}
+            aria-describedby={`cost-${remedy.key}`}
+            onClick={() => store.dispatch(tried ? { type: 'leave-trial' } : { type: 'try', remedy })}
+            className="text-left font-semibold after:absolute after:inset-0"
+          >
+            {title}
+          </button>
+        </h3>
+        <span id={`cost-${remedy.key}`} className="figures font-semibold">
+          <span className="sr-only">costs </span>
+          {formatCost(remedy.costTenths)}
+          <span className="sr-only"> points</span>
+        </span>
+      </div>
+      <p className="figures text-sm text-ink-soft">{remedyChange(present, remedy)}</p>
+      <dl className="mt-1.5 grid grid-cols-[1.35fr_0.8fr_1.25fr] gap-x-3 text-sm">
+        <Cell name="time" now={scanTimeFigure(now, present)} then={scanTimeFigure(after, remedy.prescription)} />
+        <Cell name="SNR" now={now.detail && after.detail ? formatSignedPercent(now.detail.snr, after.detail.snr) : '—'} />
+        <Cell name="voxel" now={voxelFigure(now)} then={voxelFigure(after)} same="same" />
+      </dl>
+      {after.verdict !== 'no-fold-expected' && (
+        <p className="mt-1 flex flex-wrap gap-x-2 text-sm">
+          <VerdictWords verdict={after.verdict} />
+          <span className="figures text-ink-soft">{foldFigure(after)}</span>
+        </p>
+      )}
+      {remedy.sideEffects.length > 0 && <p className="mt-1 text-sm text-ink-soft">{remedy.sideEffects.join(' ')}</p>}
+      <CostBar terms={remedy.terms} scale={scale} className="mt-2" />
+      <div className="mt-2 flex items-center justify-between gap-3">
+        <Button
+          size="sm"
+          variant={tried ? 'primary' : 'quiet'}
+          aria-label={`Adopt: ${title}`}
+          onClick={adopt}
+          className={cx('relative', !tried && '-ml-3')}
+        >
+          Adopt
+        </Button>
+        <p className="min-w-0 text-right text-sm text-ink-soft">{costBreakdown(remedy.terms)}</p>
+      </div>
+    </li>
+  );
+}
+
+/** Now → then, or one word when nothing changes. */
+function Cell({ name, now, then, same }: { name: string; now: string; then?: string; same?: string }) {
+  const unchanged = then === undefined || then === now;
+  return (
+    <div className="min-w-0">
+      <dt className="text-ink-soft">{name}</dt>
+      <dd>{unchanged ? <Figure value={same ?? now} /> : <Figure value={now} tried={then} className="max-w-full whitespace-normal" />}</dd>
+    </div>
+  );
+}

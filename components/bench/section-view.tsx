@@ -1,0 +1,116 @@
+'use client';
+
+import { useMemo, useRef, useState, type PointerEvent } from 'react';
+import { SceneCanvas } from '@/components/schematic/canvas/scene-canvas';
+import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
+import { fitScene, fromPixels, type Fit } from '@/components/schematic/scene/scene';
+import { screenFrame } from '@/components/schematic/scene/section-frame';
+import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
+import { drawSection } from '@/lib/physics/section/draw-section';
+import type { Case } from '@/lib/physics/model/case';
+import { describeSection, describePlace } from '@/lib/presentation/describe-section';
+import { useActiveResult, useActiveSequence, useBenchState } from './bench-context';
+import { HandleOverlay } from './handle-overlay';
+import { PieceOverlay } from './piece-overlay';
+import { SliceSlider } from './slice-slider';
+import { triedCase } from './state/case-of';
+import { benchHandles } from './state/handles';
+import { shownSlice } from './state/slices';
+
+/** The section of the active sequence: where tissue is and where it lands, now and with what is tried. */
+export function SectionView() {
+  const { question, assessment } = useActiveResult();
+  const sequence = useActiveSequence();
+  const trial = useBenchState((state) => state.trial);
+  const chosen = useBenchState((state) => state.sliceIndex[state.activeId]);
+  const handles = useHandles();
+  const box = useRef<HTMLDivElement>(null);
+  const place = useRef<HTMLParagraphElement>(null);
+  const size = useBoxSize(box);
+  const [focus, setFocus] = useState<string | undefined>(undefined);
+  const [held, setHeld] = useState<string | null>(null);
+  const slice = shownSlice(question.prescription, chosen);
+
+  const now = useMemo(() => drawn(question, slice.offsetMm), [question, slice.offsetMm]);
+  const tried = useMemo(() => {
+    if (!trial || trial.sequenceId !== sequence.id) return undefined;
+    return drawn(triedCase(question, trial.remedy), slice.offsetMm);
+  }, [trial, question, sequence.id, slice.offsetMm]);
+
+  const fitNow = useMemo(() => (size && now ? fitScene(sectionBounds(now, tried), size.widthPx, size.heightPx) : null), [size, now, tried]);
+  // The picture keeps its scale while a handle is held: what is dragged must stay under the pointer.
+  const heldFit = useRef<Fit | null>(null);
+  if (held === null) heldFit.current = fitNow;
+  const fit = heldFit.current ?? fitNow;
+
+  const scene = useMemo(() => {
+    if (!fit || !now) return null;
+    const bounds = visibleBounds(fit, size!.widthPx, size!.heightPx);
+    return sectionScene({ ...now, ...(tried ? { tried } : {}), bounds, focus, handles, mmPerPx: 1 / fit.scale });
+  }, [fit, size, now, tried, focus, handles]);
+
+  const shown = tried ?? now;
+  // Written past React: it changes with every pixel.
+  const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
+    if (!place.current || !fit) return;
+    const edge = event.currentTarget.getBoundingClientRect();
+    const [u, v] = fromPixels(fit, [event.clientX - edge.left, event.clientY - edge.top]);
+    place.current.textContent = describePlace(u, v, screenFrame(question.prescription).sides);
+  };
+  return (
+    <div className="flex min-h-0 flex-1 flex-col">
+      <div
+        ref={box}
+        role="group"
+        aria-label={`Section, ${question.prescription.plane}`}
+        aria-describedby="section-in-words"
+        onPointerMove={onPointerMove}
+        onPointerLeave={() => place.current && (place.current.textContent = '')}
+        className="relative h-96 min-h-80 flex-1 touch-none overflow-hidden select-none sm:h-[34rem] xl:h-auto"
+      >
+        {scene && fit && size && (
+          <>
+            <SceneCanvas name="section" scene={scene} fit={fit} {...size} still={held !== null} onHover={(name) => setFocus(name ?? undefined)} />
+            <PieceOverlay drawing={shown!.drawing} prescription={question.prescription} fit={fit} onFocus={setFocus} />
+            <HandleOverlay handles={handles} fit={fit} onHold={setHeld} />
+            <p ref={place} aria-hidden="true" className="figures pointer-events-none absolute top-1 left-2 text-sm text-ink-soft" />
+          </>
+        )}
+        {!now && <p className="p-4 text-ink-soft">The picture follows as soon as every value is allowed.</p>}
+      </div>
+      <SliceSlider prescription={question.prescription} slice={slice} />
+      <div id="section-in-words" className="sr-only" aria-live="off">
+        {shown && assessment && (
+          <ul>
+            {describeSection(shown.drawing, assessment.phaseAxis, assessment.readoutAxis).map((line) => (
+              <li key={line}>{line}</li>
+            ))}
+          </ul>
+        )}
+      </div>
+    </div>
+  );
+}
+
+/** What the engine refuses to assess cannot be drawn either; the refusal is told beside the verdict. */
+function drawn(question: Case, sliceOffsetMm: number): DrawnSection | undefined {
+  try {
+    return { question, drawing: drawSection(question, { sliceOffsetMm }) };
+  } catch (error) {
+    if (error instanceof Error && error.name === 'DomainError') return undefined;
+    throw error;
+  }
+}
+
+function useHandles() {
+  const document = useBenchState((state) => state.document);
+  const activeId = useBenchState((state) => state.activeId);
+  return useMemo(() => benchHandles({ document, activeId }), [document, activeId]);
+}
+
+/** The whole canvas in mm: letters and scale bar sit in its corners, whatever its shape. */
+function visibleBounds(fit: Fit, widthPx: number, heightPx: number) {
+  const [left, top] = fromPixels(fit, [0, 0]);
+  const [right, bottom] = fromPixels(fit, [widthPx, heightPx]);
+  return { left, top, right, bottom };
+}
