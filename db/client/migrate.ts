@@ -23,7 +23,7 @@ export async function migrationNames(): Promise<string[]> {
 }
 
 /** Brings the schema up to this source tree, as the owner. Throws the first failure; returns what was run. */
-export async function migrateToLatest(owner: Kysely<any>): Promise<string[]> {
+export async function migrateToLatest(owner: Kysely<unknown>): Promise<string[]> {
   const migrator = new Migrator({ db: owner, provider });
   const { error, results } = await migrator.migrateToLatest();
   if (error) {

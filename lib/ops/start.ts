@@ -52,7 +52,7 @@ async function firstGone(services: readonly Service[]): Promise<string> {
 }
 
 async function begin(mode: Mode, realServices: boolean, undo: Undo[], signal: AbortSignal): Promise<Service[]> {
-  const { env, accounts } = realServices ? await useRealServices() : await useLocalServices(undo);
+  const { env, accounts } = realServices ? await onRealServices() : await onLocalServices(undo);
   const services: Service[] = [];
   const launch = (name: string, args: string[], extra: Env = {}) => {
     signal.throwIfAborted();
@@ -84,14 +84,14 @@ async function begin(mode: Mode, realServices: boolean, undo: Undo[], signal: Ab
   return services;
 }
 
-async function useRealServices(): Promise<{ env: Env; accounts: DemoAccount[] }> {
+async function onRealServices(): Promise<{ env: Env; accounts: DemoAccount[] }> {
   parseEnvironment(process.env);
   const owner = process.env.MIGRATION_DATABASE_URL;
   if (owner) await prepareDatabase(owner);
   return { env: { ...process.env }, accounts: [] };
 }
 
-async function useLocalServices(undo: Undo[]): Promise<{ env: Env; accounts: DemoAccount[] }> {
+async function onLocalServices(undo: Undo[]): Promise<{ env: Env; accounts: DemoAccount[] }> {
   const folder = dataFolder();
   undo.push(await takeRunLock(folder));
   console.log('Starting the database …');
