@@ -38,7 +38,13 @@ interface Span {
 
 const widthOf = (span: Span): number => span.low.value + span.high.value;
 
-/** Two sides measured apart, or one whole size taken as centred: both halves then share its error. */
+/** A whole size taken as centred: the two halves share its one error. */
+function halves(whole: Reading): Pick<Span, 'low' | 'high'> {
+  const half: Reading = { ...whole, value: whole.value / 2, spread: whole.spread / 2 };
+  return { low: half, high: half };
+}
+
+/** Every way the size is known by measurement: two sides apart, or one whole size. */
 function spans(newest: NewestReadings, low: Side, high: Side, whole: 'breadth-mm' | 'depth-mm'): Span[] {
   const found: Span[] = [];
   const [a, b] = [newest.get(`extent-${low}-mm`), newest.get(`extent-${high}-mm`)];
@@ -48,8 +54,7 @@ function spans(newest: NewestReadings, low: Side, high: Side, whole: 'breadth-mm
   }
   const size = newest.get(whole);
   if (size) {
-    const half: Reading = { ...newest.reading(size), value: size.value / 2, spread: size.spread / 2 };
-    found.push({ low: half, high: half, at: size.recordedAt.getTime(), route: whole === 'breadth-mm' ? 'breadth' : 'depth' });
+    found.push({ ...halves(newest.reading(size)), at: size.recordedAt.getTime(), route: whole === 'breadth-mm' ? 'breadth' : 'depth' });
   }
   return found;
 }
@@ -90,10 +95,12 @@ export function composePatient(question: Question): ComposedPatient {
   const { region, tissueReachMm } = question;
   const newest = new NewestReadings(question.readings);
   const remarks = expiryRemarks(question, newest);
-  const derived = deriveSizes(newest, region);
-  const across = choose(spans(newest, 'right', 'left', 'breadth-mm'), remarks) ?? derived.across;
-  const depth = choose(spans(newest, 'anterior', 'posterior', 'depth-mm'), remarks) ?? derived.depth;
-  if (across === derived.across || depth === derived.depth) remarks.push(...derived.remarks);
+  const measuredAcross = choose(spans(newest, 'right', 'left', 'breadth-mm'), remarks);
+  const measuredDepth = choose(spans(newest, 'anterior', 'posterior', 'depth-mm'), remarks);
+  const derived = measuredAcross && measuredDepth ? undefined : deriveSizes(newest, region);
+  if (derived) remarks.push(...derived.remarks);
+  const across = measuredAcross ?? (derived?.breadth && halves(derived.breadth));
+  const depth = measuredDepth ?? (derived?.depth && halves(derived.depth));
   const missing = [
     ...(across ? [] : ['right–left size: breadth, or girth with sex']),
     ...(depth ? [] : ['front–back size: depth, or girth with sex']),

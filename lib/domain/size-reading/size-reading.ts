@@ -15,7 +15,11 @@ export interface SizeReading {
 
 const DAY_MS = 86_400_000;
 
+/** Facts that do not wear off. */
+const LASTING: readonly SizeQuantity[] = ['sex', 'height-cm'];
+
 /** Older than the policy allows on the day it is used. */
-export function isExpired(reading: Pick<SizeReading, 'takenOn'>, now: Date, expiryDays: number): boolean {
+export function isExpired(reading: Pick<SizeReading, 'takenOn' | 'quantity'>, now: Date, expiryDays: number): boolean {
+  if (LASTING.includes(reading.quantity)) return false;
   return (now.getTime() - Date.parse(`${reading.takenOn}T00:00:00Z`)) / DAY_MS > expiryDays;
 }

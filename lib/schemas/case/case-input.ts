@@ -168,7 +168,9 @@ export const prescriptionInput = strict(
     shots: orElse(prescriptionShape.shots, 1),
     volumes: orElse(prescriptionShape.volumes, 1),
     bandwidthHzPerPixel: orElse(prescriptionShape.bandwidthHzPerPixel, CASE_DEFAULTS.prescription.bandwidthHzPerPixel),
-    sliceTimeMs: orElse(prescriptionShape.sliceTimeMs, 0),
+    sliceTimeMs: prescriptionShape.sliceTimeMs
+      .describe('Time one slice takes inside TR [ms], 0 to 60000 ms; left out: all slices just fit one TR.')
+      .optional(),
     preparationMs: orElse(prescriptionShape.preparationMs, 0),
     segments: orElse(prescriptionShape.segments, 0),
     fatSuppressed: orElse(prescriptionShape.fatSuppressed, false),

@@ -110,13 +110,15 @@ function toPrescription(input: ParsedCaseInput['prescription'], scanner: Scanner
         : onStep(report, `${path}.phaseOversamplingPct`, () =>
             acquiredLinesFor(linesAcrossFov, phaseOversamplingPct, scanner.lineStep),
           )) ?? linesAcrossFov;
+  const slices = toSlices(input, scanner, report);
   return {
     ...rest,
     phaseAxis: input.phaseAxis ?? (input.plane === 'coronal' ? 'RL' : 'AP'),
     fovPhaseMm,
     linesAcrossFov,
     acquiredLines,
-    slices: toSlices(input, scanner, report),
+    slices,
+    sliceTimeMs: input.sliceTimeMs ?? (slices.mode === 'slab' ? 0 : input.trMs / slices.slices),
     acceleration: { ...acceleration, unfolding: acceleration.unfolding ?? scanner.unfolding },
   };
 }

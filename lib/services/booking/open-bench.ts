@@ -6,7 +6,7 @@ import { nowOf, type ServiceContext } from '../context';
 import { toPlanView } from '../plan/to-plan-view';
 import { toProtocolView } from '../protocol/to-protocol-view';
 import { toScannerView } from '../scanner/to-scanner-view';
-import { keepClearFor } from './assess-as-booked';
+import { keepClearFor } from '@/lib/domain/booking/assess-as-booked';
 import { readBookingSetup, readPlannedSetup } from './read-booking-setup';
 import { toBookingListItem } from './to-booking-view';
 

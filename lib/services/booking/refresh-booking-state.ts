@@ -1,8 +1,8 @@
 import type { SiteTransaction } from '@/db/client';
 import { writeBookingState } from '@/db/queries/booking/bookings';
-import { scanMinutes, worstVerdict, type BookingState } from '@/lib/domain/booking/booking';
+import type { BookingState } from '@/lib/domain/booking/booking';
 import { ServiceError } from '@/lib/domain/errors';
-import { assessAsBooked } from './assess-as-booked';
+import { assessAsBooked, stateOfAssessments } from '@/lib/domain/booking/assess-as-booked';
 import { readBookingSetup, type BookingSetup } from './read-booking-setup';
 
 /** A plan says what will be scanned; without one it is the protocol as booked, once the sizes are known. */
@@ -17,12 +17,7 @@ function stateOf({ plan, protocol, scanner, policy, sizeRecord }: BookingSetup):
         scanner: scanner.document.scanner,
         policy: policy.policy,
       });
-  const verdict = worstVerdict(assessments);
-  return {
-    ...(verdict ? { verdict } : {}),
-    ...(plan ? { planState: plan.state } : {}),
-    minutesNeeded: Math.round(scanMinutes(assessments) * 100) / 100,
-  };
+  return { ...stateOfAssessments(assessments), ...(plan ? { planState: plan.state } : {}) };
 }
 
 /** Works out what lists show of a booking and writes it, in the transaction of the change it follows from. */

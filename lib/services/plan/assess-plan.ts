@@ -74,7 +74,7 @@ function differencesOf(plan: PlanInput, assessments: readonly Assessment[], toda
 export function assessPlan(plan: PlanInput, today: Today): AssessedPlan {
   const document = toDocument(plan, today);
   const cases = casesOfPlan(document, today);
-  const assessments = cases.map(assess);
+  const assessments = cases.map((question) => assess(question));
   return {
     document,
     result: { schemaVersion: 1, assessments, differences: differencesOf(plan, assessments, today) },

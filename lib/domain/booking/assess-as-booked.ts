@@ -1,3 +1,4 @@
+import { scanMinutes, worstVerdict, type BookingState } from '@/lib/domain/booking/booking';
 import { onScanner } from '@/lib/domain/case/lines';
 import type { Assessment, Case, KeepClear, Patient, Prescription, Scanner, Side, SitePolicy } from '@/lib/domain/case/model';
 import { keepClearOfPreset } from '@/lib/domain/protocol/keep-clear-presets';
@@ -33,5 +34,14 @@ export function casesAsBooked({ patient, protocol, sequences, scanner, policy }:
 }
 
 export function assessAsBooked(booked: Booked): Assessment[] {
-  return casesAsBooked(booked).map(assess);
+  return casesAsBooked(booked).map((question) => assess(question));
+}
+
+/** What lists show of these assessments. */
+export function stateOfAssessments(assessments: readonly Assessment[]): BookingState {
+  const verdict = worstVerdict(assessments);
+  return {
+    ...(verdict ? { verdict } : {}),
+    minutesNeeded: Math.round(scanMinutes(assessments) * 100) / 100,
+  };
 }
