@@ -1,0 +1,19 @@
+import { appendFileSync, mkdirSync } from 'node:fs';
+import path from 'node:path';
+
+/** Tells the long run how many cases a test really tried, for its table. Silent in the short run. */
+export function tally(name: string, cases: number, note = ''): void {
+  const folder = process.env.SELVEDGE_TALLIES;
+  if (!folder) return;
+  mkdirSync(folder, { recursive: true });
+  appendFileSync(path.join(folder, `${process.pid}.jsonl`), `${JSON.stringify({ name, cases, note })}\n`);
+}
+
+/** How many cases to try: the short count here, more when the variable asks for it. */
+export function countOf(variable: string, short: number): number {
+  const asked = process.env[variable];
+  if (asked === undefined || asked === '') return short;
+  const count = Number(asked);
+  if (!Number.isInteger(count) || count < 1) throw new Error(`${variable} is "${asked}"; allowed is a whole number from 1.`);
+  return count;
+}
