@@ -1,7 +1,6 @@
 'use client';
 
-import { Button } from '@/components/ui/button';
-import { MessagePage } from '@/components/shell/message-page';
+import { SomethingWrong } from '@/components/shell/something-wrong';
 import { fontVariables } from './fonts';
 import './globals.css';
 
@@ -11,22 +10,7 @@ export default function GlobalError({ error, reset }: { error: Error & { digest?
     <html lang="en-GB" className={fontVariables}>
       <body className="bg-cloth text-ink antialiased">
         <title>This page could not be shown · Selvedge</title>
-        <MessagePage
-          title="This page could not be shown"
-          actions={
-            <Button variant="primary" onClick={reset}>
-              Try again
-            </Button>
-          }
-        >
-          <p>Something went wrong on our side. Nothing was stored in part.</p>
-          {error.digest && (
-            <p className="text-base">
-              If it happens again, tell whoever runs this installation the number{' '}
-              <span className="figures text-ink">{error.digest}</span>.
-            </p>
-          )}
-        </MessagePage>
+        <SomethingWrong digest={error.digest} reset={reset} />
       </body>
     </html>
   );

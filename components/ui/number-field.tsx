@@ -68,7 +68,7 @@ export function NumberField(props: NumberFieldProps) {
         <span
           className={cx(
             'flex items-baseline gap-1.5 text-ink',
-            compact ? 'border-b px-1' : 'h-10 items-center rounded border bg-paper px-3',
+            compact ? 'border-b px-1' : 'h-10 max-w-52 items-center rounded border bg-paper px-3',
             shown ? 'rounded-b-none border-2 border-ink' : compact ? 'border-ink' : 'border-line-strong',
             EDGE[certainty],
             (props.disabled || props.readOnly) && 'bg-sunk text-ink-soft',
