@@ -19,7 +19,7 @@ export function RemediesPanel() {
   return (
     <section aria-labelledby="remedies-title" className="flex min-h-0 flex-1 flex-col">
       <div className="flex items-baseline justify-between gap-4 border-b border-line px-4 py-2.5">
-        <h2 id="remedies-title" className="text-sm font-semibold tracking-wider text-ink-soft uppercase">
+        <h2 id="remedies-title" tabIndex={-1} className="text-sm font-semibold tracking-wider text-ink-soft uppercase">
           Remedies
         </h2>
         <CostPoints />
@@ -28,7 +28,7 @@ export function RemediesPanel() {
         {result.refusal ? (
           <p className="px-4 py-3 text-ink-soft">Remedies follow as soon as every value is allowed.</p>
         ) : ranking ? (
-          <div aria-busy={!present} inert={!present}>
+          <div aria-busy={!present}>
             <RankedList key={id} ranking={ranking} />
           </div>
         ) : (

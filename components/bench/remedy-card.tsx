@@ -11,6 +11,7 @@ import { costBreakdown, formatCost } from '@/lib/presentation/cost-words';
 import { formatSignedPercent } from '@/lib/presentation/percent';
 import { remedyChange, remedyTitle } from '@/lib/presentation/remedy-words';
 import { useActiveSequence, useBench } from './bench-context';
+import { presentRanking } from './live/results';
 import { CostBar } from './cost-bar';
 import { VerdictWords } from './verdict-words';
 
@@ -23,14 +24,26 @@ export interface RemedyCardProps {
 }
 
 export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
-  const { store } = useBench();
+  const { store, live } = useBench();
   const { say } = useStatus();
-  const present = useActiveSequence().prescription;
+  const { id, prescription: present } = useActiveSequence();
   const title = remedyTitle(remedy);
   const after = remedy.assessment;
+  // For the moment in which a newer ranking is on its way, a remedy would write an older prescription back.
+  const isPresent = () => {
+    const result = live.read()[id];
+    return result !== undefined && presentRanking(result)?.remedies.includes(remedy) === true;
+  };
+  const toggleTrial = () => {
+    if (tried) store.dispatch({ type: 'leave-trial' });
+    else if (isPresent()) store.dispatch({ type: 'try', remedy });
+  };
   const adopt = () => {
+    if (!isPresent()) return;
     store.dispatch({ type: 'adopt', remedy });
     say(`Adopted: ${title}. Undo takes it back.`);
+    // The pressed button goes with its card; whoever works by keyboard stays in this column.
+    document.getElementById('remedies-title')?.focus();
   };
   return (
     <li
@@ -43,7 +56,7 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
             type="button"
             aria-pressed={tried}
             aria-describedby={`cost-${remedy.key}`}
-            onClick={() => store.dispatch(tried ? { type: 'leave-trial' } : { type: 'try', remedy })}
+            onClick={toggleTrial}
             className="text-left font-semibold after:absolute after:inset-0"
           >
             {title}

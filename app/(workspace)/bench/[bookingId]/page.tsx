@@ -1,0 +1,43 @@
+import type { Metadata } from 'next';
+import { Bench } from '@/components/bench/bench';
+import { BookingHeading } from '@/components/bench/booking-heading';
+import { identityOf } from '@/components/bench/saving/plan-identity';
+import { SizeNeeded } from '@/components/bench/size-needed';
+import { firstView } from '@/components/bench/state/first-view';
+import { basisOfBooking, documentOfBooking } from '@/components/bench/state/plan-document';
+import { mayAttempt } from '@/lib/domain/access';
+import { loadPage } from '@/lib/http/load-page';
+import { openBench } from '@/lib/services/booking/open-bench';
+
+export const metadata: Metadata = { title: 'Bench' };
+
+export default async function BookingBenchPage({ params }: { params: Promise<{ bookingId: string }> }) {
+  const { bookingId } = await params;
+  const { view, userId, mayEdit } = await loadPage(async (context) => ({
+    view: await openBench(context, { bookingId }),
+    userId: context.actor.userId ?? '',
+    mayEdit: mayAttempt(context.actor, 'plan.edit'),
+  }));
+  const document = documentOfBooking(view);
+  const heading = (
+    <BookingHeading booking={view.booking} scannerName={view.scanner.scanner.name} opening={view.scanner.scanner.boreDiameterMm} />
+  );
+  if (!document) return <SizeNeeded bookingId={bookingId} accession={view.booking.accession} missing={view.sizeRecord.missing} />;
+  const setting = { policy: view.policy.policy, today: new Date().toISOString().slice(0, 10) };
+  return (
+    <Bench
+      key={bookingId}
+      document={document}
+      setting={setting}
+      {...firstView(document, setting)}
+      basis={basisOfBooking(view)}
+      plan={identityOf(view.plan)}
+      userId={userId}
+      mayEdit={mayEdit}
+      keepClearPreset={view.protocol.keepClear}
+      protocolLabel={`${view.protocol.name} v${view.protocol.version}`}
+    >
+      {heading}
+    </Bench>
+  );
+}

@@ -1,0 +1,57 @@
+import type { Metadata } from 'next';
+import { Bench } from '@/components/bench/bench';
+import { BenchChoiceHeading } from '@/components/bench/bench-choice-heading';
+import { NothingSetUp } from '@/components/bench/nothing-set-up';
+import { identityOf } from '@/components/bench/saving/plan-identity';
+import { firstView } from '@/components/bench/state/first-view';
+import { documentOfProtocol } from '@/components/bench/state/plan-document';
+import { mayAttempt } from '@/lib/domain/access';
+import { loadPage } from '@/lib/http/load-page';
+import { getPolicy } from '@/lib/services/site-policy/get-policy';
+import { getProtocol } from '@/lib/services/protocol/get-protocol';
+import { listProtocols } from '@/lib/services/protocol/list-protocols';
+import { listScanners } from '@/lib/services/scanner/list-scanners';
+
+export const metadata: Metadata = { title: 'Bench' };
+
+export default async function FreeBenchPage({ searchParams }: { searchParams: Promise<{ scanner?: string; protocol?: string }> }) {
+  const wanted = await searchParams;
+  const { scanners, protocols, scanner, protocol, policy, actor } = await loadPage(async (context) => {
+    const [scanners, protocols, policy] = await Promise.all([listScanners(context), listProtocols(context), getPolicy(context)]);
+    const scanner = scanners.find(({ id }) => id === wanted.scanner) ?? scanners[0];
+    const chosen = protocols.find(({ id }) => id === wanted.protocol) ?? protocols[0];
+    const protocol = chosen && (await getProtocol(context, { id: chosen.id }));
+    return { scanners, protocols, scanner, protocol, policy, actor: context.actor };
+  });
+  if (!scanner || !protocol) return <NothingSetUp scanner={scanner !== undefined} mayEdit={mayAttempt(actor, 'scanner.edit')} />;
+  const document = documentOfProtocol(protocol, scanner.scanner);
+  const setting = { policy: policy.policy, today: new Date().toISOString().slice(0, 10) };
+  return (
+    <Bench
+      key={`${scanner.id}/${protocol.id}`}
+      document={document}
+      setting={setting}
+      {...firstView(document, setting)}
+      basis={{
+        bookingId: null,
+        scannerId: scanner.id,
+        scannerVersion: scanner.version,
+        protocolId: protocol.id,
+        protocolVersion: protocol.version,
+        policyVersion: policy.version,
+      }}
+      plan={identityOf(undefined)}
+      userId={actor.userId ?? ''}
+      mayEdit={mayAttempt(actor, 'plan.edit')}
+      keepClearPreset={protocol.keepClear}
+      protocolLabel={`${protocol.name} v${protocol.version}`}
+    >
+      <BenchChoiceHeading
+        scanners={scanners.map(({ id, scanner: { name } }) => ({ id, name }))}
+        protocols={protocols.map(({ id, name }) => ({ id, name }))}
+        scannerId={scanner.id}
+        protocolId={protocol.id}
+      />
+    </Bench>
+  );
+}

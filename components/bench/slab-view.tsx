@@ -1,0 +1,67 @@
+'use client';
+
+import { useMemo, useRef } from 'react';
+import { SceneCanvas } from '@/components/schematic/canvas/scene-canvas';
+import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
+import { fitScene, fromPixels } from '@/components/schematic/scene/scene';
+import { slabBounds, slabScene } from '@/components/schematic/scene/slab-scene';
+import { sliceAxisOf } from '@/lib/domain/case/lines';
+import type { SlabResult } from '@/lib/physics/model/assessment';
+import { AXIS_WORDS } from '@/lib/presentation/anatomy-words';
+import { describeSlab } from '@/lib/presentation/describe-slab';
+import { phaseOversamplingSetting, sliceOversamplingSetting } from '@/lib/presentation/oversampling-form';
+import { useActiveResult, useBenchState } from './bench-context';
+
+/** The slice direction of a 3D sequence, now or as it would be with what is tried. */
+export function SlabView({ slab }: { slab: SlabResult }) {
+  const { question } = useActiveResult();
+  const remedy = useBenchState((state) => state.trial?.remedy);
+  const prescription = remedy?.prescription ?? question.prescription;
+  const shown = remedy?.assessment.slab ?? slab;
+  const box = useRef<HTMLDivElement>(null);
+  const size = useBoxSize(box);
+  const { slices } = prescription;
+
+  const picture = useMemo(() => {
+    if (!size || slices.mode !== 'slab') return null;
+    const acquiredSlabMm = slices.acquiredPartitions * slices.partitionThicknessMm;
+    const fit = fitScene(slabBounds(acquiredSlabMm), size.widthPx, size.heightPx);
+    const [left, top] = fromPixels(fit, [0, 0]);
+    const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
+    const scene = slabScene({
+      slab: shown,
+      sliceAxis: sliceAxisOf(prescription.plane),
+      partitionThicknessMm: slices.partitionThicknessMm,
+      acquiredSlabMm,
+      bounds: { left, top, right, bottom },
+      mmPerPx: 1 / fit.scale,
+    });
+    return { scene, fit };
+  }, [size, shown, slices, prescription.plane]);
+
+  const { scanner } = question;
+  const slice = sliceOversamplingSetting(prescription, scanner);
+  const phase = phaseOversamplingSetting(prescription, scanner);
+  return (
+    <div className="flex min-h-0 flex-1 flex-col">
+      <div
+        ref={box}
+        role="group"
+        aria-label="Slab, along the slice direction"
+        aria-describedby="slab-in-words"
+        className="relative h-80 min-h-64 flex-1 overflow-hidden xl:h-auto"
+      >
+        {picture && size && <SceneCanvas name="slab" {...picture} {...size} still />}
+      </div>
+      <div id="slab-in-words" className="px-5 pb-3 text-sm text-ink-soft">
+        <p>
+          Slice oversampling, {AXIS_WORDS[sliceAxisOf(prescription.plane)]}: <span className="figures text-ink">{slice?.value}</span>
+          {' · '}phase oversampling, {AXIS_WORDS[prescription.phaseAxis]}: <span className="figures text-ink">{phase.value}</span>
+        </p>
+        {describeSlab(shown).map((line) => (
+          <p key={line}>{line}</p>
+        ))}
+      </div>
+    </div>
+  );
+}

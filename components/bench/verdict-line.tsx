@@ -1,0 +1,50 @@
+'use client';
+
+import { cx } from '@/components/ui/class-names';
+import { formatPercent } from '@/lib/presentation/percent';
+import { VERDICT_WORDS } from '@/lib/presentation/verdict-words';
+import { useActiveResult, useBenchState } from './bench-context';
+import { VERDICT_COLOUR } from './verdict-words';
+
+/** The verdict of the active sequence in full words, with the reason, the number, and how sure it is. */
+export function VerdictLine({ className }: { className?: string }) {
+  const { assessment, refusal, question } = useActiveResult();
+  const tried = useBenchState((state) => state.trial?.remedy.assessment);
+  const [first, ...more] = assessment?.reasons ?? [];
+  return (
+    <div className={cx('px-5 py-3', className)}>
+      <div aria-live="polite" aria-atomic="true">
+        <p className="text-lg leading-snug">
+          {assessment && (
+            <>
+              <strong className={cx('font-bold', VERDICT_COLOUR[assessment.verdict])} data-verdict={assessment.verdict}>
+                {VERDICT_WORDS[assessment.verdict]}
+              </strong>
+              {first && `: ${first.text}`}
+            </>
+          )}
+          {refusal && <strong className="font-bold">A value needs another look: {refusal}</strong>}
+        </p>
+        {tried && (
+          <p className="text-sm text-indigo">
+            With what is tried: <strong>{VERDICT_WORDS[tried.verdict]}</strong>
+          </p>
+        )}
+      </div>
+      <div className="flex items-start justify-between gap-6 text-sm text-ink-soft">
+        <p className="max-sm:hidden">{more.map(({ text }) => text).join(' ')}</p>
+        <p className="flex-none">sure at {formatPercent(question.policy.sureAt * 100, 1)}</p>
+      </div>
+      {assessment && assessment.assumptions.length > 0 && (
+        <details className="text-sm text-ink-soft max-lg:hidden">
+          <summary>{assessment.assumptions.length === 1 ? '1 assumption' : `${assessment.assumptions.length} assumptions`}</summary>
+          <ul className="mt-1 list-disc pl-5">
+            {assessment.assumptions.map(({ field, text }) => (
+              <li key={field}>{text}</li>
+            ))}
+          </ul>
+        </details>
+      )}
+    </div>
+  );
+}
