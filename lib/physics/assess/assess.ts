@@ -1,6 +1,8 @@
+import { foldShareWithMargin } from '../certainty/fold-probability';
 import { sizesAt } from '../certainty/sizes-at';
+import { toMicrometres } from '../geometry/micrometres';
 import { PLANE_AXES } from '../geometry/section-frame';
-import type { Assessment, FoldResult, Reason, SamplingResult, SlabResult, TimeResult, Verdict } from '../model/assessment';
+import type { Assessment, FoldResult, Reason, SamplingResult, SlabResult, TimeResult, Verdict, WidthRequirement } from '../model/assessment';
 import type { PatientAxis } from '../model/axes';
 import type { Case } from '../model/case';
 import { DomainError } from '../model/domain-error';
@@ -20,6 +22,7 @@ import { reasonsFor } from './reasons';
 import { unfoldingOf, withUnfolding } from './resolve-unfolding';
 import { slabResultOf } from './slab-result';
 import { validateCase } from './validate-case';
+import { figure } from './words';
 
 const readoutAxisOf = (p: Prescription): PatientAxis =>
   PLANE_AXES[p.plane][0] === p.phaseAxis ? PLANE_AXES[p.plane][1] : PLANE_AXES[p.plane][0];
@@ -49,11 +52,30 @@ function timeOf({ prescription, patient, scanner }: Case): { readonly time?: Tim
   }
 }
 
-function verdictOf(hard: readonly Reason[], fold: FoldResult, slab: SlabResult | undefined): Verdict {
+function verdictOf(hard: readonly Reason[], fold: FoldResult, slab: SlabResult | undefined, gap: Reason | undefined): Verdict {
   if (hard.length > 0) return 'cannot-be-scanned';
-  if (fold.inKeepClear || (slab?.contaminatedInKeepClear ?? 0) > 0) return 'fold-in-keep-clear';
+  if (fold.inKeepClear || gap !== undefined || (slab?.contaminatedInKeepClear ?? 0) > 0) return 'fold-in-keep-clear';
   if (fold.outsideKeepClear || (slab?.contaminated ?? 0) > 0) return 'fold-outside-keep-clear';
   return 'no-fold-expected';
+}
+
+/**
+ * A width that is clean only in a gap between two forbidden intervals has its gap elsewhere in a patient of another
+ * size: it counts as clean only where it is so for the asked share of sizes.
+ */
+function gapReason(given: FrozenCase, width: WidthRequirement, fold: FoldResult): Reason | undefined {
+  const { prescription: p, policy, patient } = given;
+  const widthMm = (p.acquiredLines * p.fovPhaseMm) / p.linesAcrossFov;
+  if (fold.inKeepClear || toMicrometres(widthMm) >= toMicrometres(width.alwaysCleanMm)) return undefined;
+  if (sizesAt(patient, policy.sureAt) === patient) return undefined;
+  const share = foldShareWithMargin({ ...given, prescription: withUnfolding(given, unfoldingOf(given)) });
+  if (share <= 1 - policy.sureAt + 1e-9) return undefined;
+  return {
+    code: 'clean-only-at-this-size',
+    text:
+      `${figure(widthMm)} mm lies in a gap between trunk and arm that moves with the size: it folds in ` +
+      `${figure(share * 100)} % of such patients. From ${figure(width.alwaysCleanMm)} mm on it holds.`,
+  };
 }
 
 /** The case the geometry sees: sizes at the policy's certainty, unknown unfolding taken cautiously. */
@@ -88,13 +110,14 @@ export function assessChecked(given: FrozenCase, withAssumptions: boolean): Asse
   const width = solved.requirement(partitions);
   const fold = solved.leftover(p.acquiredLines, partitions);
   const slab = slabResultOf(posed);
-  const verdict = verdictOf(hard, fold, slab);
+  const gap = gapReason(given, width, fold);
+  const verdict = verdictOf(hard, fold, slab, gap);
   return {
     ...common,
     verdict,
     reasons: reasonsFor({
       verdict,
-      hard,
+      hard: gap === undefined ? hard : [...hard, gap],
       prescription: p,
       width,
       fold,

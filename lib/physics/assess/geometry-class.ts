@@ -4,6 +4,7 @@ import type { SolvedFold } from '../fold/solved-fold';
 import { keepClearRegion, type OrientedRegion } from '../geometry/oriented-region';
 import type { Case } from '../model/case';
 import type { Prescription, Slab } from '../model/prescription';
+import { mostAcquiredLines } from './line-grid';
 import { slabSources } from '../slab/assess-slab';
 import type { SlabSource } from '../slab/slab-types';
 
@@ -107,6 +108,7 @@ function problemOf(given: FrozenCase): FoldProblem {
   const { prescription: p, scanner, policy } = given;
   const slab = p.slices.mode === 'slab' ? p.slices : undefined;
   return foldProblem(given, {
+    acquiredLinesMax: mostAcquiredLines(p.linesAcrossFov, scanner.limits),
     ...(given.frozen === undefined ? {} : { keepClear: given.frozen }),
     ...(slab === undefined ? {} : { slabWeight: worstSlabWeight(slabSources(p, slab, scanner, policy), slab) }),
   });
@@ -116,3 +118,6 @@ const solved = new KeptAnswers<SolvedFold>(256);
 
 /** The geometry class of a case, solved once; the key is every value the solution depends on. */
 export const solveClass = (given: FrozenCase): SolvedFold => solved.get(classKey(given), () => solveFold(problemOf(given)));
+
+/** As solveClass, for sizes asked about once: nothing is kept. */
+export const solveOnce = (given: FrozenCase): SolvedFold => solveFold(problemOf(given));

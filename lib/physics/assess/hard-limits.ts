@@ -1,12 +1,10 @@
-import type { Reason } from '../model/assessment';
-import type { TimeResult } from '../model/assessment';
+import type { Reason, TimeResult } from '../model/assessment';
 import type { Case } from '../model/case';
 import type { Prescription } from '../model/prescription';
-import { isOnLineGrid } from './line-grid';
+import { isOnLineGrid, mostAcquiredLines } from './line-grid';
 import { minimumTrMs } from '../sequence/scan-time';
+import { figure } from './words';
 
-/** One decimal at most, without a trailing zero: what a person reads. */
-const n = (value: number): string => (Math.round(value * 10) / 10).toFixed(1).replace(/\.0$/, '');
 
 /** Slack for numbers that went through a multiplication: far above a double's rounding, far below 1 µm. */
 const SLACK = 1e-9;
@@ -21,13 +19,13 @@ function samplingLimits({ prescription: p, scanner }: Case): Reason[] {
     ['Phase', p.fovPhaseMm],
     ['Readout', p.fovReadoutMm],
   ] as const) {
-    if (over(fov, limits.fovMaxMm)) add('fov-over-maximum', `${name} FOV ${n(fov)} mm is over this scanner's ${n(limits.fovMaxMm)} mm.`);
-    if (over(limits.fovMinMm, fov)) add('fov-under-minimum', `${name} FOV ${n(fov)} mm is under this scanner's ${n(limits.fovMinMm)} mm.`);
+    if (over(fov, limits.fovMaxMm)) add('fov-over-maximum', `${name} FOV ${figure(fov)} mm is over this scanner's ${figure(limits.fovMaxMm)} mm.`);
+    if (over(limits.fovMinMm, fov)) add('fov-under-minimum', `${name} FOV ${figure(fov)} mm is under this scanner's ${figure(limits.fovMinMm)} mm.`);
   }
   if (!scanner.phaseFovMayExceedReadoutFov && over(p.fovPhaseMm, p.fovReadoutMm)) {
     add(
       'phase-fov-over-readout-fov',
-      `Phase FOV ${n(p.fovPhaseMm)} mm is larger than readout FOV ${n(p.fovReadoutMm)} mm, which this scanner does not allow.`,
+      `Phase FOV ${figure(p.fovPhaseMm)} mm is larger than readout FOV ${figure(p.fovReadoutMm)} mm, which this scanner does not allow.`,
     );
   }
   const matrix = Math.max(p.linesAcrossFov, p.readoutMatrix);
@@ -36,8 +34,8 @@ function samplingLimits({ prescription: p, scanner }: Case): Reason[] {
     add('lines-over-maximum', `${p.acquiredLines} acquired lines are over this scanner's ${limits.acquiredLinesMax}.`);
   }
   const phasePct = (p.acquiredLines / p.linesAcrossFov - 1) * 100;
-  if (over(phasePct, limits.phaseOversamplingMaxPct) && !isFirstStepPast(p.acquiredLines, p.linesAcrossFov, limits.phaseOversamplingMaxPct)) {
-    add('phase-oversampling-over-maximum', `Phase oversampling ${n(phasePct)} % is over this scanner's ${n(limits.phaseOversamplingMaxPct)} %.`);
+  if (p.acquiredLines <= limits.acquiredLinesMax && p.acquiredLines > mostAcquiredLines(p.linesAcrossFov, limits)) {
+    add('phase-oversampling-over-maximum', `Phase oversampling ${figure(phasePct)} % is over this scanner's ${figure(limits.phaseOversamplingMaxPct)} %.`);
   }
   if (!isOnLineGrid(p.acquiredLines, p.linesAcrossFov, scanner.lineStep)) {
     add('lines-off-grid', `${p.acquiredLines} acquired lines are not on this scanner's own step.`);
@@ -45,15 +43,10 @@ function samplingLimits({ prescription: p, scanner }: Case): Reason[] {
   if (p.slices.mode === 'slab') {
     const slicePct = (p.slices.acquiredPartitions / p.slices.partitions - 1) * 100;
     if (over(slicePct, limits.sliceOversamplingMaxPct)) {
-      add('slice-oversampling-over-maximum', `Slice oversampling ${n(slicePct)} % is over this scanner's ${n(limits.sliceOversamplingMaxPct)} %.`);
+      add('slice-oversampling-over-maximum', `Slice oversampling ${figure(slicePct)} % is over this scanner's ${figure(limits.sliceOversamplingMaxPct)} %.`);
     }
   }
   return reasons;
-}
-
-/** The maximum percentage itself, rounded up to whole lines, is still the maximum: 33.3 % of 100 lines is 134. */
-function isFirstStepPast(acquiredLines: number, linesAcrossFov: number, maximumPct: number): boolean {
-  return acquiredLines <= Math.ceil(linesAcrossFov * (1 + maximumPct / 100) - SLACK);
 }
 
 function speedLimits({ prescription: p, scanner }: Case, time: TimeResult | undefined): Reason[] {
@@ -62,10 +55,10 @@ function speedLimits({ prescription: p, scanner }: Case, time: TimeResult | unde
   const add = (code: string, text: string): void => void reasons.push({ code, text });
   const { factorPhase, factorSlice } = p.acceleration;
   if (over(factorPhase, limits.accelerationPhaseMax)) {
-    add('acceleration-over-maximum', `Acceleration ${n(factorPhase)} along phase is over this scanner's ${n(limits.accelerationPhaseMax)}.`);
+    add('acceleration-over-maximum', `Acceleration ${figure(factorPhase)} along phase is over this scanner's ${figure(limits.accelerationPhaseMax)}.`);
   }
   if (over(factorSlice, limits.accelerationSliceMax)) {
-    add('acceleration-over-maximum', `Acceleration ${n(factorSlice)} along slice is over this scanner's ${n(limits.accelerationSliceMax)}.`);
+    add('acceleration-over-maximum', `Acceleration ${figure(factorSlice)} along slice is over this scanner's ${figure(limits.accelerationSliceMax)}.`);
   }
   const fraction = Math.min(p.partialFourierPhase, p.partialFourierSlice);
   if (over(limits.partialFourierMin, fraction)) {
@@ -76,10 +69,10 @@ function speedLimits({ prescription: p, scanner }: Case, time: TimeResult | unde
   if (over(echoes, limits.echoTrainMax)) add('train-over-maximum', `A train of ${echoes} echoes is over this scanner's ${limits.echoTrainMax}.`);
   const trMs = minimumTrMs(p);
   if (p.breathing !== 'triggered' && over(trMs, p.trMs)) {
-    add('tr-under-minimum', `TR ${n(p.trMs)} ms is under the ${n(trMs)} ms this needs.`);
+    add('tr-under-minimum', `TR ${figure(p.trMs)} ms is under the ${figure(trMs)} ms this needs.`);
   }
   if (time?.minimumTeMs !== undefined && over(time.minimumTeMs, p.teMs)) {
-    add('te-under-minimum', `TE ${n(p.teMs)} ms is under the ${n(time.minimumTeMs)} ms this echo train needs.`);
+    add('te-under-minimum', `TE ${figure(p.teMs)} ms is under the ${figure(time.minimumTeMs)} ms this echo train needs.`);
   }
   return reasons;
 }
@@ -105,14 +98,14 @@ function patientLimits({ patient, prescription, scanner, policy }: Case, time: T
   if (weight !== undefined && over(weight, scanner.limits.tableLimitKg)) {
     reasons.push({
       code: 'table-load-over-limit',
-      text: `Weight ${n(weight)} kg is over this scanner's table limit of ${n(scanner.limits.tableLimitKg)} kg.`,
+      text: `Weight ${figure(weight)} kg is over this scanner's table limit of ${figure(scanner.limits.tableLimitKg)} kg.`,
     });
   }
   const hold = time?.longestHoldS ?? 0;
   if (policy.strictBreathHold && prescription.breathing === 'breath-hold' && over(hold, patient.breathHoldS.value)) {
     reasons.push({
       code: 'breath-hold-over-limit',
-      text: `A breath-hold of ${n(hold)} s is over the ${n(patient.breathHoldS.value)} s this patient can hold.`,
+      text: `A breath-hold of ${figure(hold)} s is over the ${figure(patient.breathHoldS.value)} s this patient can hold.`,
     });
   }
   return reasons;

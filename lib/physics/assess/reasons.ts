@@ -1,4 +1,6 @@
 import type { FoldResult, Reason, SlabResult, Verdict, WidthRequirement } from '../model/assessment';
+import { AXIS_SIDES } from '../geometry/vector';
+import type { PatientAxis, Side } from '../model/axes';
 import type { Prescription } from '../model/prescription';
 import { AXIS_LETTERS, capitalised, figure, millimetres, OPPOSITE_SIDE, percentBeyond, squareCentimetres } from './words';
 
@@ -48,6 +50,9 @@ function slabReason(slab: SlabResult): Reason {
 function enoughReason(p: Prescription, width: WidthRequirement): Reason {
   const cover = percentBeyond(Math.max(width.coverBodyMm, p.fovPhaseMm), p.fovPhaseMm);
   const lines = width.firstCleanLines;
+  if (!Number.isFinite(width.firstCleanMm)) {
+    return { code: 'wraps-along-slab', text: 'No phase oversampling is enough while tissue wraps along the slab.' };
+  }
   if (lines === undefined) {
     return {
       code: 'no-width-on-grid',
@@ -74,6 +79,8 @@ function noFoldReason(p: Prescription, width: WidthRequirement): Reason {
   };
 }
 
+const sidesOf = (axis: PatientAxis): readonly Side[] => AXIS_SIDES[axis];
+
 export interface ReasonInputs {
   readonly verdict: Verdict;
   readonly hard: readonly Reason[];
@@ -88,7 +95,8 @@ export interface ReasonInputs {
 export function reasonsFor({ hard, prescription, width, fold, slab, keepClearIsDisplayed }: ReasonInputs): readonly Reason[] {
   const reasons: Reason[] = [...hard];
   const slabInside = (slab?.contaminatedInKeepClear ?? 0) > 0;
-  if (fold?.inKeepClear && !(slabInside && fold.depthWithMarginMm <= 0 && !fold.ghosts)) reasons.push(foldInReason(fold));
+  const alongSlab = slabInside && fold?.from !== undefined && !sidesOf(prescription.phaseAxis).includes(fold.from.side);
+  if (fold?.inKeepClear && !alongSlab) reasons.push(foldInReason(fold));
   if (slab !== undefined && slabInside) reasons.push(slabReason(slab));
   if (fold?.outsideKeepClear && !fold.inKeepClear) reasons.push(foldOutsideReason(fold));
   if (slab !== undefined && !slabInside && slab.contaminated > 0) reasons.push(slabReason(slab));

@@ -27,7 +27,7 @@ function upperTail(x: number): number {
  * Cumulative standard normal Φ(x).
  * @param x any number; ±Infinity gives 0 or 1.
  * @returns [1], absolute error below 1e-14.
- * Valid: everywhere. Source: series and continued fraction of the error function, [ABRAMOWITZ1964] 26.2.11, 26.2.14.
+ * Valid: everywhere. Source: series and continued fraction of the error function, [abramowitz-1964] 26.2.11, 26.2.14.
  */
 export function normalCumulative(x: number): number {
   if (x === Infinity) return 1;

@@ -20,7 +20,7 @@ export function radicalInverse(n: number, base: number): number {
  * The first 20 points are left out: in bases 11 and 13 they still lie on one diagonal.
  * @param dimensions 1 to 6
  * @throws DomainError "dimensions-out-of-range"
- * Source: [HALTON1960] Numer Math 2:84, from memory.
+ * Source: [halton-1960], from memory.
  */
 export function haltonPoints(count: number, dimensions: number): readonly (readonly number[])[] {
   if (!Number.isInteger(dimensions) || dimensions < 1 || dimensions > PRIMES.length) {

@@ -98,31 +98,35 @@ function effortPrice(given: Case, planned: Case): Price[] {
   return prices;
 }
 
-/** Share of partitions under slab wrap, in percent: in the keep-clear area, and elsewhere among those displayed. */
-function slabShares(then: Assessment): { readonly inKeepClear: number; readonly elsewhere: number } {
-  const { slab } = then;
-  if (slab === undefined || slab.partitions.length === 0) return { inKeepClear: 0, elsewhere: 0 };
-  const perPartition = 100 / slab.partitions.length;
+interface FoldShares {
+  readonly displayedPct: number;
+  readonly keepClearPct: number;
+}
+
+/**
+ * Shares under fold in percent. In a plane the worst slice stands for all. Along a slab only the contaminated
+ * partitions are wholly under fold, so the displayed share is theirs; in the keep-clear area the worst one counts.
+ */
+function foldShares({ fold, slab }: Assessment): FoldShares {
+  const displayed = Math.min(1, fold?.displayedShare ?? 0);
+  const keepClear = Math.min(1, fold?.keepClearShare ?? 0);
+  const partitions = slab?.partitions.length ?? 0;
+  if (slab === undefined || slab.contaminated === 0) return { displayedPct: displayed * 100, keepClearPct: keepClear * 100 };
   return {
-    inKeepClear: slab.contaminatedInKeepClear * perPartition,
-    elsewhere: (slab.contaminated - slab.contaminatedInKeepClear) * perPartition,
+    displayedPct: (displayed * 100 * slab.contaminated) / partitions,
+    keepClearPct: Math.max(keepClear * 100, (100 * slab.contaminatedInKeepClear) / partitions),
   };
 }
 
 /** Whether anything, in plane or through the slab, still folds onto the keep-clear area. */
 export const leavesFoldInKeepClear = (assessment: Assessment): boolean =>
-  (assessment.fold?.inKeepClear ?? false) || (assessment.slab?.contaminatedInKeepClear ?? 0) > 0;
+  assessment.verdict === 'fold-in-keep-clear' || (assessment.fold?.inKeepClear ?? false) || (assessment.slab?.contaminatedInKeepClear ?? 0) > 0;
 
 function foldPrice(given: Case, then: Assessment): Price[] {
   const { weights } = given.policy;
-  const { fold } = then;
-  const slab = slabShares(then);
-  const displayed = (fold?.displayedShare ?? 0) * 100 + slab.inKeepClear + slab.elsewhere;
+  const { displayedPct: displayed, keepClearPct } = foldShares(then);
   // Fold that only the margin catches has no area of its own, yet must never look free: it counts as 1 %.
-  const inKeepClear = Math.max(
-    (fold?.keepClearShare ?? 0) * 100 + slab.inKeepClear,
-    leavesFoldInKeepClear(then) ? 1 : 0,
-  );
+  const inKeepClear = Math.max(keepClearPct, leavesFoldInKeepClear(then) ? 1 : 0);
   const prices: Price[] = [];
   if (displayed > 0) prices.push({ points: displayed * weights.foldDisplayedPct, text: `${shown(displayed)} % of the picture under fold` });
   if (inKeepClear > 0) {

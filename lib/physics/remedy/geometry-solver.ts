@@ -41,19 +41,20 @@ function isClean(given: TargetedCase): boolean {
   return solvedFor(given).isClean(given.prescription.acquiredLines, partitionsOf(given)) && slabIsClean(given);
 }
 
+/** So many partitions that hardly anything of a slab's profile is left to wrap along it. */
+const NO_SLAB_WRAP = 8;
+
 /**
- * First L_z that keeps the slab's own partitions clean; where the phase direction is clean as well, one that is also
- * clean for fold in both directions at once.
+ * First L_z that keeps the slab's own partitions clean and lets nothing fold in both directions at once. Where the
+ * phase direction folds by itself no L_z can help that: then the first one that keeps the partitions clean.
  */
 function cleanPartitions(given: TargetedCase): number | undefined {
-  const { slices } = given.prescription;
+  const { slices, acquiredLines } = given.prescription;
   if (slices.mode !== 'slab') return undefined;
   const alone = slabResultOf(posedFor(given))?.smallestCleanPartitions;
-  if (alone === undefined) return undefined;
-  const together = solvedFor(given).smallestCleanPartitions(given.prescription.acquiredLines);
-  if (together === undefined || together <= alone) return alone;
+  if (alone === undefined || !solvedFor(given).isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)) return alone;
   const most = Math.floor(slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9);
-  for (let acquired = together; acquired <= most; ) {
+  for (let acquired = alone; acquired <= most; ) {
     const planned = { ...given, prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } } };
     if (isClean(planned)) return acquired;
     acquired = nextAcquiredPartitions(slices.partitions, acquired + 1, given.scanner.partitionStep);

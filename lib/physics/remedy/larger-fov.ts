@@ -23,6 +23,11 @@ function readoutFor(given: Case, fovPhaseMm: number, keepPixel: boolean): Partia
   };
 }
 
+const WRAPS_ALONG_SLAB = refused(
+  'wraps-along-slab',
+  'No larger FOV is enough: tissue from the other end of the slab lands in the keep-clear area.',
+);
+
 /**
  * Larger phase FOV at the same lines: the voxel grows, the time stays. The smallest whole-millimetre F' ≥ F whose
  * acquired width L·F'/N is clean for the frozen keep-clear area.
@@ -30,6 +35,7 @@ function readoutFor(given: Case, fovPhaseMm: number, keepPixel: boolean): Partia
 export const largerFovSameMatrix: Change = (given, solver) => {
   const { prescription: p, scanner } = given;
   const requirement = solver.requirement(given);
+  if (!Number.isFinite(requirement.alwaysCleanMm)) return WRAPS_ALONG_SLAB;
   const share = p.acquiredLines / p.linesAcrossFov;
   let fovMm = p.fovPhaseMm;
   for (let hit = forbiddenAround(fovMm * share, requirement.forbiddenMm); hit !== undefined; ) {
@@ -50,6 +56,7 @@ export const largerFovSameMatrix: Change = (given, solver) => {
 export const largerFovSameVoxel: Change = (given, solver) => {
   const { prescription: p, scanner } = given;
   const requirement = solver.requirement(given);
+  if (!Number.isFinite(requirement.alwaysCleanMm)) return WRAPS_ALONG_SLAB;
   const pixel = p.fovPhaseMm / p.linesAcrossFov;
   const share = p.acquiredLines / p.linesAcrossFov;
   if (forbiddenAround(p.acquiredLines * pixel, requirement.forbiddenMm) === undefined) return NOTHING_TO_CHANGE;

@@ -1,4 +1,4 @@
-import { floorToLineGrid } from '../assess/line-grid';
+import { floorToLineGrid, mostAcquiredLines } from '../assess/line-grid';
 import { figure } from '../assess/words';
 import type { PaybackKind } from '../model/remedy';
 import type { TargetedCase } from './change';
@@ -76,11 +76,7 @@ export const PAYBACK_KINDS: readonly PaybackKind[] = ['fewer-averages', 'more-ac
 /** L on the grid at or below `lines`, at least as many as there are now. */
 export const fillTo = (given: TargetedCase, lines: number): number | undefined => {
   const { prescription: p, scanner } = given;
-  const most = Math.min(
-    lines,
-    scanner.limits.acquiredLinesMax,
-    Math.ceil(p.linesAcrossFov * (1 + scanner.limits.phaseOversamplingMaxPct / 100) - 1e-9),
-  );
+  const most = Math.min(lines, mostAcquiredLines(p.linesAcrossFov, scanner.limits));
   const filled = floorToLineGrid(most, p.linesAcrossFov, scanner.lineStep);
   return filled === undefined || filled <= p.acquiredLines ? undefined : filled;
 };

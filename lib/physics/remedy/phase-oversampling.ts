@@ -10,6 +10,9 @@ function toLines(given: Case, requirement: WidthRequirement, target: WidthTarget
   const { prescription: p, scanner } = given;
   const widthMm = target === 'first-clean' ? requirement.firstCleanMm : requirement.alwaysCleanMm;
   const lines = target === 'first-clean' ? requirement.firstCleanLines : requirement.alwaysCleanLines;
+  if (!Number.isFinite(widthMm)) {
+    return refused('wraps-along-slab', 'No phase oversampling is enough: tissue from the other end of the slab lands in the keep-clear area.');
+  }
   if (lines === undefined) {
     const percent = figure((widthMm / p.fovPhaseMm - 1) * 100);
     return refused(

@@ -16,7 +16,8 @@ export interface PlannedCandidate {
 export type Planning =
   | { readonly outcome: 'planned'; readonly candidate: PlannedCandidate }
   | { readonly outcome: 'nothing-to-change' }
-  | { readonly outcome: 'refused'; readonly reason: Reason };
+  /** paybackAlone: whatever it would pay for, this payback is not to be had. */
+  | { readonly outcome: 'refused'; readonly reason: Reason; readonly paybackAlone?: true };
 
 const NOTHING: Planning = { outcome: 'nothing-to-change' };
 
@@ -122,11 +123,8 @@ function planPaidBack(question: Question, payback: PaybackKind, solver: Solver):
   let owed = debt(given, now, settledTime(given, unpaid.candidate.planned));
   if (isPaid(owed)) return NOTHING;
   const choice = PAYBACKS[payback](given);
-  if (choice.outcome === 'refused') return { outcome: 'refused', reason: choice };
-  let best: Planning = {
-    outcome: 'refused',
-    reason: { code: `${payback}-pays-nothing`, text: 'It would buy no time back here.' },
-  };
+  if (choice.outcome === 'refused') return { outcome: 'refused', reason: choice, paybackAlone: true };
+  let best: Planning = NOTHING;
   for (const level of choice.levels) {
     const planning = planAt(question, level, solver);
     if (planning.outcome !== 'planned') continue;

@@ -39,6 +39,6 @@ export const presaturation: Change = (given, solver) => {
   return changed(
     withPrescription(given, { presaturation: [...p.presaturation, band], ...timing }),
     `${figure(thicknessMm)} mm band on the ${side} side: more SAR and ${BAND_TIME_MS} ms more a slice`,
-    `Fold from the ${side} onto the ${OPPOSITE_SIDE[side]} side is dimmed, not removed`,
+    `Fold from the ${side} onto the ${OPPOSITE_SIDE[side]} side is dimmed, not removed: 3 % stays at a true 90°, 20 % at 80°`,
   );
 };

@@ -123,7 +123,7 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
       const planning = planCandidate({ given: start, now: now.time, options, ...(payback === undefined ? {} : { payback }) }, solver);
       if (planning.outcome === 'nothing-to-change') continue;
       if (planning.outcome === 'refused') {
-        refuse(options, payback, planning.reason);
+        refuse(planning.paybackAlone ? [] : options, payback, planning.reason);
         continue;
       }
       candidates++;

@@ -48,7 +48,7 @@ function changePhrase(kind: RemedyKind, given: TargetedCase, planned: TargetedCa
       return `move the FOV centre ${figure(Math.hypot(...after.centreMm.map((value, index) => value - before.centreMm[index]!)))} mm ${side}`;
     }
     case 'arms-up':
-      return 'raise the arms, if the patient can keep them there';
+      return 'raise the arms (confirm with the patient)';
     case 'presaturation': {
       const band = after.presaturation.at(-1);
       return `put a ${figure(band?.thicknessMm ?? 0)} mm presaturation band over the ${band?.side ?? ''} side`;
