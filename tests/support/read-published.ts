@@ -28,14 +28,13 @@ export interface PublishedRow {
   number(column: string): number;
 }
 
-/** Rows of fixtures/published/<key>/values.csv; a missing column or a cell that is no number fails the test. */
-export function readPublished(key: string): readonly PublishedRow[] {
-  const file = new URL(`../../fixtures/published/${key}/values.csv`, import.meta.url);
-  const [head, ...lines] = readFileSync(file, 'utf8').trim().split(/\r?\n/).map(splitLine);
+/** Rows of a CSV text with a head line; a missing column or a cell that is no number fails the test. */
+export function parseRows(name: string, csv: string): readonly PublishedRow[] {
+  const [head, ...lines] = csv.trim().split(/\r?\n/).map(splitLine);
   return lines.map((cells) => {
     const text = (column: string): string => {
       const cell = cells[head!.indexOf(column)];
-      if (cell === undefined) throw new Error(`${key}: no column ${column}`);
+      if (cell === undefined) throw new Error(`${name}: no column ${column}`);
       return cell;
     };
     return {
@@ -43,9 +42,15 @@ export function readPublished(key: string): readonly PublishedRow[] {
       number: (column) => {
         const value = Number(text(column));
         if (text(column) === '' || Number.isNaN(value))
-          throw new Error(`${key}: ${column} is "${text(column)}"`);
+          throw new Error(`${name}: ${column} is "${text(column)}"`);
         return value;
       },
     };
   });
+}
+
+/** Rows of fixtures/published/<key>/values.csv. */
+export function readPublished(key: string): readonly PublishedRow[] {
+  const file = new URL(`../../fixtures/published/${key}/values.csv`, import.meta.url);
+  return parseRows(key, readFileSync(file, 'utf8'));
 }
