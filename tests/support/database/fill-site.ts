@@ -44,7 +44,7 @@ async function insertAll(
   const site_id = ids.siteId;
   const by = ids.userId;
   const later = new Date('2030-01-01T00:00:00Z');
-  await trx.insertInto('site').values({ id: site_id, name: 'Filled', accession_pattern: '^F' }).execute();
+  await trx.insertInto('site').values({ id: site_id, name: 'Filled', accession_pattern: '@#' }).execute();
   await trx
     .insertInto('app_user')
     .values({ site_id, id: by, email: `${by}@filled.example`, display_name: 'Filler', roles: ['lead'] })

@@ -24,7 +24,7 @@ export async function createTestSite(
         .values({
           id: siteId,
           name: options.name ?? `Site ${siteId.slice(0, 8)}`,
-          accession_pattern: options.accessionPattern ?? '^[A-Z]{2}[0-9]{8}$',
+          accession_pattern: options.accessionPattern ?? '@@########',
         })
         .execute(),
     ownerDatabase(),
