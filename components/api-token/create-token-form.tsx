@@ -2,7 +2,7 @@
 
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { Button, LinkButton } from '@/components/ui/button';
 import { Checkbox, RadioGroup } from '@/components/ui/choice';
 import { FieldError, FieldGroup } from '@/components/ui/field';
@@ -28,6 +28,7 @@ export function CreateTokenForm({
     resolver: zodResolver(createApiTokenSchema),
     defaultValues: { name: '', scopes: [], days: 90 },
   });
+  const days = useWatch({ control: form.control, name: 'days' });
   const [created, setCreated] = useState<(CreatedToken & { name: string }) | null>(null);
   const { submit, problem } = useFormAction(form, create, (data, { name }) => setCreated({ ...data, name }));
   if (created) return <NewToken token={created} />;
@@ -55,9 +56,9 @@ export function CreateTokenForm({
       <RadioGroup
         legend="Works for"
         name="days"
-        value={String(form.watch('days'))}
-        onChange={(days) => form.setValue('days', Number(days))}
-        options={TOKEN_DAYS_CHOICES.map((days) => ({ value: String(days), label: `${days} days` }))}
+        value={String(days)}
+        onChange={(chosen) => form.setValue('days', Number(chosen))}
+        options={TOKEN_DAYS_CHOICES.map((choice) => ({ value: String(choice), label: `${choice} days` }))}
         error={form.formState.errors.days?.message}
       />
       <FormProblem problem={problem} />

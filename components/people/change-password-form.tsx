@@ -1,6 +1,7 @@
 'use client';
 
 import { zodResolver } from '@hookform/resolvers/zod';
+import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
@@ -20,6 +21,7 @@ export function ChangePasswordForm({
   email: string;
   changePassword: (input: ChangePasswordInput) => Promise<ActionResult<{ email: string }>>;
 }) {
+  const router = useRouter();
   const form = useForm<ChangePasswordInput>({
     resolver: zodResolver(changePasswordSchema),
     defaultValues: { currentPassword: '', newPassword: '', repeatPassword: '' },
@@ -29,7 +31,8 @@ export function ChangePasswordForm({
     setDone(true);
     // Every session has ended, this one too: begin a new one with the new password.
     await signInWith(data.email, values.newPassword);
-    window.location.assign('/account?changed=1');
+    router.replace('/account?changed=1');
+    router.refresh();
   });
 
   return (

@@ -2,6 +2,7 @@
 
 import { zodResolver } from '@hookform/resolvers/zod';
 import Link from 'next/link';
+import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
@@ -23,6 +24,7 @@ export function SetPasswordForm({
   email: string;
   setPassword: (input: SetPasswordInput) => Promise<ActionResult<{ email: string }>>;
 }) {
+  const router = useRouter();
   const form = useForm<SetPasswordInput>({
     resolver: zodResolver(setPasswordSchema),
     defaultValues: { token, newPassword: '', repeatPassword: '' },
@@ -34,7 +36,7 @@ export function SetPasswordForm({
     window.history.replaceState(null, '', '/set-password');
     await signInWith(data.email, values.newPassword);
     // Signed in, the page leads on; if that failed, the person signs in there with the new password.
-    window.location.assign('/sign-in');
+    router.replace('/sign-in');
   });
 
   return (

@@ -32,7 +32,7 @@ export interface AuditFilter {
   readonly subjectType?: string;
   readonly subjectId?: string;
   readonly actorId?: string;
-  /** Position after which to go on: moment in microseconds as text (a Date would lose three digits) and id. */
+  /** Position after which to go on: microseconds since 1970 as text (a Date would lose three digits) and id. */
   readonly before?: { readonly at: string; readonly id: string };
   readonly limit: number;
 }
@@ -53,7 +53,7 @@ export async function listAuditEvents(trx: SiteTransaction, siteId: string, filt
       join.onRef('t.site_id', '=', 'e.site_id').onRef('t.id', '=', 'e.actor_id').on('e.actor_kind', '=', 'token'),
     )
     .select(['e.id', 'e.at', 'e.actor_kind', 'e.actor_id', 'e.action', 'e.subject_type', 'e.subject_id', 'e.fields'])
-    .select([sql<string>`e.at::text`.as('at_exact'), sql<string | null>`coalesce(u.display_name, t.name)`.as('actor_name')])
+    .select([sql<string>`(extract(epoch from e.at) * 1000000)::bigint::text`.as('at_exact'), sql<string | null>`coalesce(u.display_name, t.name)`.as('actor_name')])
     .where('e.site_id', '=', siteId)
     .orderBy('e.at', 'desc')
     .orderBy('e.id', 'desc')
@@ -64,7 +64,7 @@ export async function listAuditEvents(trx: SiteTransaction, siteId: string, filt
   if (filter.actorId) query = query.where('e.actor_id', '=', filter.actorId);
   if (filter.before) {
     const { at, id } = filter.before;
-    query = query.where(sql<boolean>`(e.at, e.id) < (${at}::timestamptz, ${id}::uuid)`);
+    query = query.where(sql<boolean>`(e.at, e.id) < (timestamptz 'epoch' + ${at}::bigint * interval '1 microsecond', ${id}::uuid)`);
   }
   const rows = await query.execute();
   const page = rows.slice(0, filter.limit);

@@ -7,10 +7,10 @@ export const auditFilterSchema = z.object({
   subject: z.string().regex(/^[a-z-]+$/).optional().catch(undefined),
   id: z.uuid().optional().catch(undefined),
   by: z.uuid().optional().catch(undefined),
-  /** Position of the last line of the page before: `moment~id`. */
+  /** Position of the last line of the page before: microseconds since 1970 and id. */
   before: z
     .string()
-    .regex(/^\d{4}-\d\d-\d\d \d\d:\d\d:\d\d(\.\d{1,6})?[+-]\d\d(:\d\d)?~[0-9a-f-]{36}$/)
+    .regex(/^\d{1,16}~[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/)
     .optional()
     .catch(undefined),
 });
