@@ -61,6 +61,8 @@ export function outlineTrapezoids(rings: readonly (readonly OutlinePoint[])[]): 
     for (let k = 0; k + 1 < crossing.length; k += 2) {
       const lower = crossing[k]!;
       const upper = crossing[k + 1]!;
+      // Two rings along one line cancel under the even-odd rule and leave nothing between them.
+      if (upper.offset + upper.slope * middle - (lower.offset + lower.slope * middle) < 1e-6) continue;
       trapezoids.push({ u0, u1, lower: [lower.offset, lower.slope], upper: [upper.offset, upper.slope] });
     }
   }
