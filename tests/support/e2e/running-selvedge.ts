@@ -1,5 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
-import { mkdtemp, readFile, rm } from 'node:fs/promises';
+import { chmod, mkdtemp, readFile, rm } from 'node:fs/promises';
 import os from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -24,7 +24,10 @@ export interface StartOptions {
 }
 
 export async function newDataFolder(): Promise<string> {
-  return mkdtemp(path.join(os.tmpdir(), 'selvedge-e2e-'));
+  const folder = await mkdtemp(path.join(os.tmpdir(), 'selvedge-e2e-'));
+  // As a folder in a working copy is: the postgres account may pass through.
+  await chmod(folder, 0o755);
+  return folder;
 }
 
 export async function removeDataFolder(folder: string): Promise<void> {
