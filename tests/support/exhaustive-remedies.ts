@@ -1,15 +1,18 @@
 /**
  * The remedy search written a second time, the slow and plain way: every setting is found by trying them one after
- * another through assess(), prices are added up from the policy's words. It shares no code with lib/physics/remedy.
+ * another in the solved geometry, prices are added up from the policy's words. It shares no code with lib/physics/remedy.
  * Valid for keep-clear boxes, sizes without spread and untilted planes.
  */
 import { assess } from '@/lib/physics';
+import { geometryCase } from '@/lib/physics/assess/assess';
+import { solveClass } from '@/lib/physics/assess/geometry-class';
+import { slabResultOf } from '@/lib/physics/assess/slab-result';
 import type { Assessment } from '@/lib/physics/model/assessment';
 import type { Case } from '@/lib/physics/model/case';
 import { DomainError } from '@/lib/physics/model/domain-error';
 import type { Prescription } from '@/lib/physics/model/prescription';
 import type { PaybackKind, RemedyKind } from '@/lib/physics/model/remedy';
-import { carryTiming } from '@/lib/physics/sequence/scan-time';
+import { carryTiming, scanTime } from '@/lib/physics/sequence/scan-time';
 
 export interface Outcome {
   readonly prescription: Prescription;
@@ -25,8 +28,12 @@ const change = (given: Case, values: Partial<Prescription>): Case => ({
   prescription: { ...given.prescription, ...values },
 });
 
-const planeFolds = (given: Case): boolean => assess(given).fold!.inKeepClear;
-const slabFolds = (given: Case): boolean => (assess(given).slab?.contaminatedInKeepClear ?? 0) > 0;
+// The questions asked thousands of times go to the solved geometry that assess() itself uses; areas are left out.
+const partitionsOf = ({ prescription: { slices } }: Case): number | undefined =>
+  slices.mode === 'slab' ? slices.acquiredPartitions : undefined;
+const planeFolds = (given: Case): boolean =>
+  !solveClass(geometryCase(given)).isClean(given.prescription.acquiredLines, partitionsOf(given));
+const slabFolds = (given: Case): boolean => (slabResultOf(geometryCase(given))?.contaminatedInKeepClear ?? 0) > 0;
 
 /** Lines the scanner can be set to, ascending, from N to its maximum. */
 function grid({ scanner }: Case, n: number): number[] {
@@ -71,7 +78,7 @@ function readout({ prescription: p, scanner }: Case, fovPhaseMm: number, keepPix
 }
 
 /** Whether any width at all stops the fold: not where tissue wraps along the slab. */
-const widthHelps = (given: Case): boolean => Number.isFinite(assess(given).width!.alwaysCleanMm);
+const widthHelps = (given: Case): boolean => Number.isFinite(solveClass(geometryCase(given)).requirement(partitionsOf(given)).alwaysCleanMm);
 
 const fovMatrix: Step = (given) => {
   if (!widthHelps(given)) return 'refused';
@@ -167,12 +174,11 @@ const STEPS: readonly Named[] = [
 export const SEARCHED_KINDS: readonly RemedyKind[] = [...new Set(STEPS.map(({ kind }) => kind))];
 
 const timeOf = (original: Case, planned: Case) =>
-  assess({ ...planned, prescription: carryTiming(original.prescription, planned.prescription) }).time;
+  scanTime(carryTiming(original.prescription, planned.prescription), planned.patient, planned.scanner);
 
-function debt(original: Case, planned: Case): number[] | undefined {
-  const now = assess(original).time!;
+function debt(original: Case, planned: Case): number[] {
+  const now = timeOf(original, original);
   const then = timeOf(original, planned);
-  if (then === undefined) return undefined;
   const beyond = (value: number, limit: number): number => (value > limit + 5e-7 ? value - limit : 0);
   const held = original.prescription.breathing === 'breath-hold';
   return [held ? beyond(then.longestHoldS, original.patient.breathHoldS.value) : 0, beyond(then.scanS, now.scanS), beyond(then.trainMs ?? 0, now.trainMs ?? 0)];
@@ -218,7 +224,7 @@ function spend(original: Case, planned: Case): Case {
   const lines = grid(planned, planned.prescription.linesAcrossFov).filter((l) => l > planned.prescription.acquiredLines);
   for (const l of lines.reverse()) {
     const filled = change(planned, { acquiredLines: l });
-    if (debt(original, filled)?.every((owed) => owed === 0) && !planeFolds(filled) && !slabFolds(filled)) return filled;
+    if (debt(original, filled).every((owed) => owed === 0) && !planeFolds(filled) && !slabFolds(filled)) return filled;
   }
   return planned;
 }
@@ -227,17 +233,16 @@ function planPaid(given: Case, steps: readonly Named[], payback: PaybackKind): C
   const unpaid = plan(given, steps, undefined);
   if (unpaid === undefined) return undefined;
   let owed = debt(given, unpaid);
-  if (owed === undefined || owed.every((value) => value === 0)) return undefined;
+  if (owed.every((value) => value === 0)) return undefined;
   let best: Case | undefined;
   for (const level of levels(given, payback)) {
     let planned = plan(given, steps, level);
     if (planned === undefined) continue;
     let left = debt(given, planned);
-    if (left === undefined) return undefined;
     const oversamples = steps.some(({ kind }) => kind === 'phase-oversampling');
-    if (payback === 'fewer-averages' && oversamples && left.every((value) => value === 0) && assess(given).time!.trainMs === undefined) {
+    if (payback === 'fewer-averages' && oversamples && left.every((value) => value === 0) && timeOf(given, given).trainMs === undefined) {
       planned = spend(given, planned);
-      left = debt(given, planned)!;
+      left = debt(given, planned);
     }
     if (less(left, owed)) [best, owed] = [planned, left];
     if (left.every((value) => value === 0)) break;
@@ -329,7 +334,7 @@ export function searchRemedies(given: Case): Outcome[] {
       }
       if (planned === undefined || !staysShown(given, planned)) continue;
       let settled = change(planned, carryTiming(given.prescription, planned.prescription));
-      const minimumTe = assess(settled).time?.minimumTeMs ?? 0;
+      const minimumTe = timeOf(settled, settled).minimumTeMs ?? 0;
       if (minimumTe > settled.prescription.teMs) settled = change(settled, { teMs: Math.ceil(minimumTe) });
       const then = assess(settled);
       if (then.verdict === 'cannot-be-scanned') continue;

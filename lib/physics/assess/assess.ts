@@ -78,13 +78,18 @@ function gapReason(given: FrozenCase, width: WidthRequirement, fold: FoldResult)
   };
 }
 
+const posed = new WeakMap<FrozenCase, FrozenCase>();
+
 /** The case the geometry sees: sizes at the policy's certainty, unknown unfolding taken cautiously. */
 export function geometryCase(given: FrozenCase): FrozenCase {
-  return {
-    ...given,
-    patient: sizesAt(given.patient, given.policy.sureAt),
-    prescription: withUnfolding(given, unfoldingOf(given)),
-  };
+  let seen = posed.get(given);
+  if (seen === undefined) {
+    const patient = sizesAt(given.patient, given.policy.sureAt);
+    const prescription = withUnfolding(given, unfoldingOf(given));
+    seen = patient === given.patient && prescription === given.prescription ? given : { ...given, patient, prescription };
+    posed.set(given, seen);
+  }
+  return seen;
 }
 
 /**
@@ -104,12 +109,12 @@ export function assessChecked(given: FrozenCase, withAssumptions: boolean): Asse
 
   const { time, stops } = timeOf(given);
   const hard = [...hardLimits(given, time), ...stops];
-  const posed = geometryCase(given);
-  const solved = solveClass(posed);
+  const seen = geometryCase(given);
+  const solved = solveClass(seen);
   const partitions = p.slices.mode === 'slab' ? p.slices.acquiredPartitions : undefined;
   const width = solved.requirement(partitions);
   const fold = solved.leftover(p.acquiredLines, partitions);
-  const slab = slabResultOf(posed);
+  const slab = slabResultOf(seen);
   const gap = gapReason(given, width, fold);
   const verdict = verdictOf(hard, fold, slab, gap);
   return {
@@ -130,7 +135,7 @@ export function assessChecked(given: FrozenCase, withAssumptions: boolean): Asse
     fold,
     ...(slab === undefined ? {} : { slab }),
     ...(time === undefined ? {} : { time }),
-    detail: detailOf(posed),
+    detail: detailOf(seen),
   };
 }
 

@@ -82,10 +82,23 @@ function prescriptionKey(p: Prescription): string {
   ].join('|');
 }
 
+const keys = new WeakMap<FrozenCase, string>();
+
+/** The key of a case's geometry class; cases are never changed in place, so each is spelled out once. */
 export function classKey(given: FrozenCase): string {
+  let key = keys.get(given);
+  if (key === undefined) {
+    key = spellOut(given);
+    keys.set(given, key);
+  }
+  return key;
+}
+
+function spellOut(given: FrozenCase): string {
+  const { position, breadthMm, depthMm, gapMm } = given.patient.arms;
   return [
     identityOf(given.patient.extents),
-    JSON.stringify(given.patient.arms),
+    `${position}/${breadthMm}/${depthMm}/${gapMm}`,
     given.patient.parts === undefined ? '' : identityOf(given.patient.parts),
     given.patient.lateralOffsetMm,
     given.patient.isocentreZMm,

@@ -6,9 +6,10 @@ import { normalQuantile } from './normal';
 // A pure cache, so that asking twice gives the same object and caches by identity still hit.
 const grownExtents = new WeakMap<Patient['extents'], { readonly sureAt: number; readonly extents: Patient['extents'] }>();
 
-function extentsAt(extents: Patient['extents'], sureAt: number, z: number): Patient['extents'] {
+function extentsAt(extents: Patient['extents'], sureAt: number): Patient['extents'] {
   const known = grownExtents.get(extents);
   if (known?.sureAt === sureAt) return known.extents;
+  const z = normalQuantile(sureAt);
   const grown = (reading: Reading): Reading =>
     reading.spread === 0 ? reading : { ...reading, value: reading.value + z * reading.spread, spread: 0 };
   const made = Object.fromEntries(SIDES.map((side) => [side, grown(extents[side])])) as Record<Side, Reading>;
@@ -25,8 +26,7 @@ function extentsAt(extents: Patient['extents'], sureAt: number, z: number): Pati
  * same quantile does. A body given as parts has no spread and is returned as it is.
  */
 export function sizesAt(patient: Patient, sureAt: number): Patient {
-  const z = normalQuantile(sureAt);
-  if (patient.parts !== undefined || z <= 0) return patient;
+  if (patient.parts !== undefined || sureAt <= 0.5) return patient;
   if (SIDES.every((side) => patient.extents[side].spread === 0)) return patient;
-  return { ...patient, extents: extentsAt(patient.extents, sureAt, z) };
+  return { ...patient, extents: extentsAt(patient.extents, sureAt) };
 }

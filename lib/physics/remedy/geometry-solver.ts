@@ -30,8 +30,17 @@ const partitionsOf = ({ prescription: { slices } }: Case): number | undefined =>
   slices.mode === 'slab' ? slices.acquiredPartitions : undefined;
 
 /** The case a change is sized in: against what it has to keep free. */
-const posedFor = (given: TargetedCase): FrozenCase =>
-  geometryCase(given.target === undefined ? given : { ...given, frozen: given.target });
+function posedFor(given: TargetedCase): FrozenCase {
+  if (given.target === undefined) return geometryCase(given);
+  let retargeted = againstTarget.get(given);
+  if (retargeted === undefined) {
+    retargeted = { ...given, frozen: given.target };
+    againstTarget.set(given, retargeted);
+  }
+  return geometryCase(retargeted);
+}
+
+const againstTarget = new WeakMap<TargetedCase, FrozenCase>();
 
 const solvedFor = (given: TargetedCase): SolvedFold => solveClass(posedFor(given));
 

@@ -5,7 +5,7 @@ import { carryTiming, scanTime } from '../sequence/scan-time';
 import { figure } from '../assess/words';
 import type { Change, ChangeResult, Solver, TargetedCase } from './change';
 import type { ChangeOption } from './change-list';
-import { fillTo, PAYBACKS, type PaybackLevel } from './paybacks';
+import { fillTo, PAYBACKS, type PaybackChoice, type PaybackLevel } from './paybacks';
 
 /** A candidate worked out but not yet assessed. */
 export interface PlannedCandidate {
@@ -21,11 +21,53 @@ export type Planning =
 
 const NOTHING: Planning = { outcome: 'nothing-to-change' };
 
+/**
+ * Results of changes by the case they were applied to: pairs share their first change, so most of a ranking's steps
+ * have been taken before.
+ */
+const taken = new WeakMap<TargetedCase, Map<Change, ChangeResult>>();
+
+function take(change: Change, given: TargetedCase, solver: Solver): ChangeResult {
+  const steps = taken.get(given) ?? new Map<Change, ChangeResult>();
+  taken.set(given, steps);
+  let result = steps.get(change);
+  if (result === undefined) {
+    result = change(given, solver);
+    steps.set(change, result);
+  }
+  return result;
+}
+
+const levelled = new WeakMap<TargetedCase, Map<PaybackLevel, TargetedCase>>();
+
+function applyLevel(level: PaybackLevel, given: TargetedCase): TargetedCase {
+  const known = levelled.get(given) ?? new Map<PaybackLevel, TargetedCase>();
+  levelled.set(given, known);
+  let applied = known.get(level);
+  if (applied === undefined) {
+    applied = level.apply(given);
+    known.set(level, applied);
+  }
+  return applied;
+}
+
+const choices = new WeakMap<TargetedCase, Map<PaybackKind, PaybackChoice>>();
+
+function choiceOf(payback: PaybackKind, given: TargetedCase): PaybackChoice {
+  const known = choices.get(given) ?? new Map<PaybackKind, PaybackChoice>();
+  choices.set(given, known);
+  const choice = known.get(payback) ?? PAYBACKS[payback](given);
+  known.set(payback, choice);
+  return choice;
+}
+
+const times = new WeakMap<TargetedCase, TimeResult>();
+
 /** Applies changes one after another; one that finds nothing to change means the set is really a smaller one. */
 function applyAll(start: PlannedCandidate, changes: readonly Change[], solver: Solver): Planning {
   let candidate = start;
   for (const change of changes) {
-    const result: ChangeResult = change(candidate.planned, solver);
+    const result: ChangeResult = take(change, candidate.planned, solver);
     if (result.outcome !== 'changed') return result;
     candidate = { planned: result.planned, sideEffects: [...candidate.sideEffects, ...result.sideEffects] };
   }
@@ -45,8 +87,14 @@ function settle(given: TargetedCase, { planned, sideEffects }: PlannedCandidate)
 }
 
 /** Scan time after settling; what a payback is judged by. */
-const settledTime = (given: TargetedCase, planned: TargetedCase): TimeResult =>
-  scanTime(carryTiming(given.prescription, planned.prescription), planned.patient, planned.scanner);
+function settledTime(given: TargetedCase, planned: TargetedCase): TimeResult {
+  let time = times.get(planned);
+  if (time === undefined) {
+    time = scanTime(carryTiming(given.prescription, planned.prescription), planned.patient, planned.scanner);
+    times.set(planned, time);
+  }
+  return time;
+}
 
 /** What has been paid too much, worst first: hold beyond the limit, scan time and train beyond what they are now. */
 function debt(given: TargetedCase, now: TimeResult, time: TimeResult): readonly [number, number, number] {
@@ -104,7 +152,7 @@ function planAt(question: Question, level: PaybackLevel | undefined, solver: Sol
   const paid =
     level === undefined
       ? set.candidate
-      : { planned: level.apply(set.candidate.planned), sideEffects: [...set.candidate.sideEffects, level.sideEffect] };
+      : { planned: applyLevel(level, set.candidate.planned), sideEffects: [...set.candidate.sideEffects, level.sideEffect] };
   const sized = applyAll(paid, changesOf(options, 'sizing'), solver);
   if (sized.outcome !== 'planned') return sized;
   const fills =
@@ -122,7 +170,7 @@ function planPaidBack(question: Question, payback: PaybackKind, solver: Solver):
   if (unpaid.outcome !== 'planned') return unpaid;
   let owed = debt(given, now, settledTime(given, unpaid.candidate.planned));
   if (isPaid(owed)) return NOTHING;
-  const choice = PAYBACKS[payback](given);
+  const choice = choiceOf(payback, given);
   if (choice.outcome === 'refused') return { outcome: 'refused', reason: choice, paybackAlone: true };
   let best: Planning = NOTHING;
   for (const level of choice.levels) {

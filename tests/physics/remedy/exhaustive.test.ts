@@ -71,5 +71,6 @@ describe('ranking against a search written independently', () => {
       const best = Math.min(...(without.length > 0 ? without : searched).map((outcome) => outcome.costTenths));
       if (searched.length > 0) expect(ranking.remedies[0]!.costTenths, `seed ${seed}`).toBe(best);
     }
-  });
+    // 2 s a case at most: every line and partition is tried one after another.
+  }, CASES * 4000);
 });
