@@ -21,17 +21,30 @@ export const createBookingInput = strict({
 });
 export type CreateBooking = z.output<typeof createBookingInput>;
 
-export const listBookingsInput = strict({
-  from: day('First day, YYYY-MM-DD.').optional(),
-  to: day('Last day, YYYY-MM-DD.').optional(),
+const listBookingsShape = {
+  from: day('First day, YYYY-MM-DD; left out: today.').optional(),
+  to: day('Last day, YYYY-MM-DD; left out: two weeks from the first.').optional(),
   limit: count({ min: 1, max: 200, text: 'Most bookings in one answer' }).default(50),
   after: z
     .string({ error: refused('the cursor of the page before') })
     .max(200, { error: refused('the cursor of the page before') })
     .describe('Cursor of the page before.')
     .optional(),
-});
+};
+export const listBookingsInput = strict(listBookingsShape);
 export type ListBookings = z.output<typeof listBookingsInput>;
+
+/** The same as search parameters, where every value is text. */
+export const listBookingsQuery = strict({
+  ...listBookingsShape,
+  limit: z
+    .string()
+    .regex(/^[0-9]{1,3}$/, { error: refused('a whole number, 1 to 200') })
+    .transform(Number)
+    .pipe(listBookingsShape.limit.unwrap())
+    .describe('Most bookings in one answer, 1 to 200; left out: 50.')
+    .optional(),
+});
 
 export interface BookingListItem {
   readonly id: string;

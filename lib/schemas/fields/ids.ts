@@ -9,3 +9,6 @@ export const expectedVersionSchema = z
   .int({ error: refused('the version that was read') })
   .min(0, { error: refused('the version that was read') })
   .describe('Version the change was made on.');
+
+/** Path parameters of every route about one record. */
+export const idParams = z.object({ id: idSchema });

@@ -63,17 +63,32 @@ export const idempotencyKeySchema = z
   .regex(/^[A-Za-z0-9_-]{8,128}$/, { error: refused('8 to 128 letters, digits, - or _') })
   .describe('The same key again returns the first answer and saves nothing twice.');
 
-export const movePlanInput = strict({
-  id: idSchema,
+const movePlanShape = {
   expectedVersion: expectedVersionSchema,
   to: choice(['draft', 'for use', 'used'], 'State to move the plan to.'),
-});
-export const signOffInput = strict({
-  id: idSchema,
+};
+export const movePlanBody = strict(movePlanShape);
+export const movePlanInput = strict({ id: idSchema, ...movePlanShape });
+
+const signOffShape = {
   expectedVersion: expectedVersionSchema,
   decision: choice(['signed off', 'sent back'], 'The radiologist’s decision.'),
   reason: z.string().trim().max(2000, { error: refused('text of up to 2000 characters') }).default(''),
+};
+export const signOffBody = strict(signOffShape);
+export const signOffInput = strict({ id: idSchema, ...signOffShape });
+
+/** Search parameters of a plan: digits, because that is what a link carries. */
+export const planQuery = strict({
+  version: z
+    .string()
+    .regex(/^[1-9][0-9]{0,6}$/, { error: refused('a version, a whole number from 1') })
+    .transform(Number)
+    .pipe(z.int())
+    .describe('A version of the plan; left out: the newest.')
+    .optional(),
 });
+export const codeParams = z.object({ code: z.string().min(1).max(20).describe('Short code of a plan sheet.') });
 
 export interface AdoptedView {
   readonly key: string;

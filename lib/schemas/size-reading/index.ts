@@ -23,14 +23,15 @@ export const sizeReadingInput = strict({
   }
 });
 
-export const recordReadingsInput = strict({
-  bookingId: idSchema,
+const readingList = {
   readings: z
     .array(sizeReadingInput)
     .min(1, { error: refused('1 to 40 readings') })
     .max(40, { error: refused('1 to 40 readings') })
     .describe('Readings to add; earlier ones stay.'),
-});
+};
+export const addReadingsBody = strict(readingList);
+export const recordReadingsInput = strict({ bookingId: idSchema, ...readingList });
 export type RecordReadings = z.output<typeof recordReadingsInput>;
 
 export interface SizeReadingView {

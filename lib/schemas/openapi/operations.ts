@@ -1,0 +1,100 @@
+import '@/lib/schemas/fields/jitless';
+import * as z from 'zod';
+import type { Scope } from '@/lib/domain/access';
+import { listBookingsQuery } from '@/lib/schemas/booking';
+import { idParams } from '@/lib/schemas/fields/ids';
+import { CHECK_EXAMPLES, NEW_BOOKING_EXAMPLES, NEW_READING_EXAMPLES, SAVE_PLAN_EXAMPLES } from '@/lib/schemas/openapi/examples';
+import type { AnswerName, RequestName } from '@/lib/schemas/openapi/components';
+import { codeParams, idempotencyKeySchema, planQuery } from '@/lib/schemas/plan';
+
+export interface Operation {
+  readonly method: 'get' | 'post' | 'put';
+  readonly path: string;
+  readonly id: string;
+  readonly summary: string;
+  /** Scope a token needs; absent: people only, through their session. */
+  readonly scope?: Scope;
+  readonly params?: z.ZodObject;
+  readonly query?: z.ZodObject;
+  readonly headers?: z.ZodObject;
+  readonly request?: RequestName;
+  readonly examples?: Readonly<Record<string, { readonly summary: string; readonly value: unknown }>>;
+  readonly answer: AnswerName;
+  readonly status?: number;
+}
+
+const saveHeaders = z.object({ 'Idempotency-Key': idempotencyKeySchema });
+
+/** Every route of the API; a test compares the list with the folders. */
+export const OPERATIONS: readonly Operation[] = [
+  {
+    method: 'post', path: '/api/v1/check', id: 'checkCase', scope: 'check:run', request: 'CaseInput', answer: 'CheckAnswer',
+    summary: 'What folds for one patient and one sequence, and the remedies by cost. Nothing is stored.', examples: CHECK_EXAMPLES,
+  },
+  {
+    method: 'get', path: '/api/v1/bookings', id: 'listBookings', scope: 'bookings:read', query: listBookingsQuery,
+    answer: 'BookingPage', summary: 'Bookings between two days, by time.',
+  },
+  {
+    method: 'post', path: '/api/v1/bookings', id: 'createBooking', scope: 'bookings:write', request: 'NewBooking',
+    answer: 'Booking', status: 201, summary: 'Adds a booking under its accession number.', examples: NEW_BOOKING_EXAMPLES,
+  },
+  {
+    method: 'get', path: '/api/v1/bookings/{id}', id: 'getBooking', scope: 'bookings:read', params: idParams,
+    answer: 'Booking', summary: 'One booking.',
+  },
+  {
+    method: 'get', path: '/api/v1/bookings/{id}/bench', id: 'openBench', scope: 'plans:read', params: idParams,
+    answer: 'Bench', summary: 'Everything the bench needs of a booking.',
+  },
+  {
+    method: 'get', path: '/api/v1/bookings/{id}/size-readings', id: 'getSizeRecord', scope: 'bookings:read',
+    params: idParams, answer: 'SizeRecord', summary: 'Sizes of a booking’s patient.',
+  },
+  {
+    method: 'post', path: '/api/v1/bookings/{id}/size-readings', id: 'recordReadings', scope: 'sizes:write',
+    params: idParams, request: 'NewSizeReadings', answer: 'SizeRecord', summary: 'Adds size readings; earlier ones stay.',
+    examples: NEW_READING_EXAMPLES,
+  },
+  {
+    method: 'get', path: '/api/v1/plans/{id}', id: 'getPlan', scope: 'plans:read', params: idParams, query: planQuery,
+    answer: 'Plan', summary: 'A plan in its newest version, or in the one that is named.',
+  },
+  {
+    method: 'put', path: '/api/v1/plans/{id}', id: 'savePlan', scope: 'plans:write', params: idParams, headers: saveHeaders,
+    request: 'SavePlan', answer: 'Plan', examples: SAVE_PLAN_EXAMPLES,
+    summary: 'Saves a whole plan as its next version; the server works everything out again. The id is the caller’s, a new one makes a plan.',
+  },
+  {
+    method: 'post', path: '/api/v1/plans/{id}/state', id: 'movePlan', params: idParams, request: 'MovePlan', answer: 'Plan',
+    summary: 'Puts a plan for use, takes it back to draft, or marks it as used.',
+  },
+  {
+    method: 'post', path: '/api/v1/plans/{id}/sign-off', id: 'signOffPlan', params: idParams, request: 'SignOff',
+    answer: 'Plan', summary: 'A radiologist’s decision on one version of a plan.',
+  },
+  {
+    method: 'get', path: '/api/v1/plans/by-code/{code}', id: 'getPlanByCode', scope: 'plans:read', params: codeParams,
+    query: planQuery, answer: 'Plan', summary: 'The plan behind the short link of a sheet.',
+  },
+  {
+    method: 'get', path: '/api/v1/scanners', id: 'listScanners', scope: 'setup:read', answer: 'ScannerList',
+    summary: 'The site’s scanners.',
+  },
+  {
+    method: 'get', path: '/api/v1/scanners/{id}', id: 'getScanner', scope: 'setup:read', params: idParams,
+    answer: 'ScannerVersion', summary: 'One scanner.',
+  },
+  {
+    method: 'get', path: '/api/v1/protocols', id: 'listProtocols', scope: 'setup:read', answer: 'ProtocolList',
+    summary: 'The site’s protocols.',
+  },
+  {
+    method: 'get', path: '/api/v1/protocols/{id}', id: 'getProtocol', scope: 'setup:read', params: idParams,
+    answer: 'ProtocolVersion', summary: 'One protocol with its sequences.',
+  },
+  {
+    method: 'get', path: '/api/v1/policy', id: 'getPolicy', scope: 'setup:read', answer: 'PolicyVersion',
+    summary: 'The site’s policy.',
+  },
+];
