@@ -48,7 +48,7 @@ export function Panel(props: PanelProps) {
               aria-expanded={open}
               aria-controls={contentId}
               onClick={toggle}
-              className="-mx-1 flex items-center gap-2 rounded px-1 text-left"
+              className="-mx-1 flex items-center gap-2 rounded px-1 text-left [text-transform:inherit]"
             >
               <ChevronRightIcon className={cx('transition-transform', open && 'rotate-90')} />
               <span>{title}</span>

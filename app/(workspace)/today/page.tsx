@@ -1,0 +1,40 @@
+import type { Metadata } from 'next';
+import { TodayView } from '@/components/booking/today-view';
+import { toBookingRow } from '@/components/booking/booking-row';
+import { LinkButton } from '@/components/ui/button';
+import { PageBody, PageHeader } from '@/components/ui/page';
+import { mayAttempt } from '@/lib/domain/access';
+import { loadPage } from '@/lib/http/load-page';
+import { addDays, dayKey, formatLongDay } from '@/lib/presentation/moment';
+import { listBookings } from '@/lib/services/booking/list-bookings';
+
+export const metadata: Metadata = { title: 'Today' };
+
+/** A week ahead is as far as a worklist is looked at from here; the rest is under Bookings. */
+const DAYS_AHEAD = 7;
+
+export default async function TodayPage() {
+  const now = new Date();
+  const { page, mayAdd } = await loadPage(async (context) => ({
+    page: await listBookings(context, { from: dayKey(now), to: dayKey(addDays(now, DAYS_AHEAD)), limit: 200 }),
+    mayAdd: mayAttempt(context.actor, 'booking.create'),
+  }));
+  const rows = page.bookings.map(toBookingRow);
+  return (
+    <PageBody>
+      <PageHeader
+        title="Today"
+        lead={formatLongDay(now)}
+        actions={
+          <>
+            {mayAdd && <LinkButton href="/bookings/new">Add a booking</LinkButton>}
+            <LinkButton href="/bookings" variant="quiet">
+              All bookings
+            </LinkButton>
+          </>
+        }
+      />
+      <TodayView rows={rows} today={dayKey(now)} now={now.toISOString()} mayAdd={mayAdd} />
+    </PageBody>
+  );
+}

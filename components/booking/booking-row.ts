@@ -1,0 +1,59 @@
+import type { Verdict } from '@/lib/physics/model/assessment';
+import { REGION_WORDS } from '@/lib/presentation/anatomy-words';
+import { dayKey, formatDay, formatTime } from '@/lib/presentation/moment';
+import type { BookingListItem } from '@/lib/schemas/booking';
+
+/** A booking as lists print it. Made on the server, so that every browser prints the same time. */
+export interface BookingRow {
+  readonly id: string;
+  readonly accession: string;
+  readonly at: string;
+  readonly dayKey: string;
+  readonly day: string;
+  readonly time: string;
+  readonly slotMinutes: number;
+  readonly scanner: string;
+  readonly protocol: string;
+  readonly region: string;
+  readonly verdict?: Verdict;
+  readonly minutesNeeded?: number;
+  readonly plan: string;
+  readonly next: { readonly label: string; readonly href: string };
+}
+
+/** The one thing to do with a booking now. */
+export function nextStep(booking: Pick<BookingListItem, 'id' | 'verdict' | 'planState' | 'planId'>): BookingRow['next'] {
+  const bench = `/bench/${booking.id}`;
+  if (booking.planId && booking.planState && booking.planState !== 'draft') {
+    return { label: 'Open the plan', href: `/plans/${booking.planId}` };
+  }
+  if (booking.planState === 'draft') return { label: 'Finish the plan', href: bench };
+  if (!booking.verdict) return { label: 'Enter sizes', href: `/bookings/${booking.id}#sizes` };
+  return booking.verdict === 'no-fold-expected'
+    ? { label: 'Look at the bench', href: bench }
+    : { label: 'Plan on the bench', href: bench };
+}
+
+export function planWords(state: BookingListItem['planState']): string {
+  return state ? `plan ${state}` : 'no plan yet';
+}
+
+export function toBookingRow(booking: BookingListItem): BookingRow {
+  const at = new Date(booking.scheduledAt);
+  return {
+    id: booking.id,
+    accession: booking.accession,
+    at: booking.scheduledAt,
+    dayKey: dayKey(at),
+    day: formatDay(at),
+    time: formatTime(at),
+    slotMinutes: booking.slotMinutes,
+    scanner: booking.scannerName,
+    protocol: booking.protocolName,
+    region: REGION_WORDS[booking.region],
+    ...(booking.verdict ? { verdict: booking.verdict } : {}),
+    ...(booking.minutesNeeded === undefined ? {} : { minutesNeeded: booking.minutesNeeded }),
+    plan: planWords(booking.planState),
+    next: nextStep(booking),
+  };
+}
