@@ -18,11 +18,11 @@ export interface BoreSizes {
   /** Over both elbows with the arms up. */
   readonly elbowBreadthMm?: Reading;
   readonly arms: ArmSize;
-  /** Along the body from the target, mm, positive towards the head. */
-  readonly hipsZMm: number;
-  readonly trunkZMm: number;
-  readonly shouldersZMm: number;
-  readonly elbowsZMm: number;
+  /** Along the body from the target, mm, positive towards the head; absent: at the target, so that it always counts. */
+  readonly hipsZMm?: number;
+  readonly trunkZMm?: number;
+  readonly shouldersZMm?: number;
+  readonly elbowsZMm?: number;
 }
 
 export interface BodySections {
@@ -71,14 +71,14 @@ export function bodySections(
   const sections: BoreSection[] = [
     {
       name: 'trunk',
-      zFromTargetMm: sizes.trunkZMm,
+      zFromTargetMm: sizes.trunkZMm ?? 0,
       parts: [part('trunk', sizes.trunkBreadthMm, sizes.trunkDepthMm, coilOn === 'trunk')],
     },
   ];
   if (arms !== 'up') {
     sections.push({
       name: 'arms',
-      zFromTargetMm: sizes.trunkZMm,
+      zFromTargetMm: sizes.trunkZMm ?? 0,
       parts: armsBeside(sizes.trunkBreadthMm, sizes.arms),
     });
   }
@@ -86,7 +86,7 @@ export function bodySections(
     const depth = sizes.hipDepthMm ?? sizes.trunkDepthMm;
     sections.push({
       name: 'hips',
-      zFromTargetMm: sizes.hipsZMm,
+      zFromTargetMm: sizes.hipsZMm ?? 0,
       parts: [part('hips', sizes.hipBreadthMm, depth, coilOn === 'hips')],
     });
   } else unknown.push('hip breadth');
@@ -95,7 +95,7 @@ export function bodySections(
       const depth = sizes.shoulderDepthMm ?? sizes.trunkDepthMm;
       sections.push({
         name: 'shoulders',
-        zFromTargetMm: sizes.shouldersZMm,
+        zFromTargetMm: sizes.shouldersZMm ?? 0,
         parts: [part('shoulders', sizes.shoulderBreadthMm, depth, false)],
       });
     } else unknown.push('shoulder breadth');
@@ -104,7 +104,7 @@ export function bodySections(
         const depth: Reading = { value: sizes.arms.depthMm, spread: 0, source: 'policy-default' };
         sections.push({
           name: 'elbows',
-          zFromTargetMm: sizes.elbowsZMm,
+          zFromTargetMm: sizes.elbowsZMm ?? 0,
           parts: [part('elbows', sizes.elbowBreadthMm, depth, false)],
         });
       } else unknown.push('breadth over the elbows');

@@ -9,9 +9,13 @@ import { parseRows, readPublished, type PublishedRow } from '@/tests/support/rea
  * Debian packages r-base-core and r-cran-gclus; where they are absent the committed values stand in.
  */
 const script = fileURLToPath(new URL('compute-regressions.R', import.meta.url));
-const available = spawnSync('Rscript', ['--vanilla', '-e', 'library(gclus)'], { stdio: 'ignore' }).status === 0;
+const available =
+  spawnSync('Rscript', ['--vanilla', '-e', 'library(gclus)'], { stdio: 'ignore' }).status === 0;
 const computed: readonly PublishedRow[] | undefined = available
-  ? parseRows('Rscript', execFileSync('Rscript', ['--vanilla', script], { encoding: 'utf8', timeout: 60_000 }))
+  ? parseRows(
+      'Rscript',
+      execFileSync('Rscript', ['--vanilla', script], { encoding: 'utf8', timeout: 60_000 }),
+    )
   : undefined;
 const published = readPublished('body-regressions');
 
