@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { solveFold } from '@/lib/physics/fold/solve-fold';
-import { latticeSample } from './lattice-case';
+import { latticeSample, seeded } from './lattice-case';
 import { latticeOracle } from './oracle-lattice';
 
 /** Cases in 2D; a fifth as many in 3D. test:long sets 100,000. */
@@ -53,15 +53,15 @@ describe('oracle A: the engine and an independent count of lattice cells never d
         const { lattice, problem, lineUnits, lines, partitions, partitionMultiple } = latticeSample(1e6 + seed, true);
         const oracle = latticeOracle(lattice);
         const solved = solveFold(problem);
-        for (let lz = partitions!; lz <= partitions! + 16; lz += 1 + (seed % 4)) {
-          if (lz % partitionMultiple !== 0) continue;
-          for (let l = lines; l <= lines + Math.ceil(60 / lineUnits); l += 2 + (seed % 3)) {
-            const expected = oracle(l * lineUnits, lz);
-            if (expected) clean++;
-            else fouled++;
-            if (solved.isClean(l, lz) !== expected) {
-              expect.fail(`seed ${1e6 + seed}, ${l} lines, ${lz} partitions: oracle ${expected}`);
-            }
+        const random = seeded(seed);
+        for (let k = 0; k < 10; k++) {
+          const l = lines + random.whole(0, Math.ceil(60 / lineUnits));
+          const lz = Math.ceil(random.whole(partitions!, partitions! + 16) / partitionMultiple) * partitionMultiple;
+          const expected = oracle(l * lineUnits, lz);
+          if (expected) clean++;
+          else fouled++;
+          if (solved.isClean(l, lz) !== expected) {
+            expect.fail(`seed ${1e6 + seed}, ${l} lines, ${lz} partitions: oracle ${expected}`);
           }
         }
       }

@@ -43,9 +43,10 @@ export interface LatticeCase {
   readonly ghosts?: { readonly ry: number; readonly rz: number };
 }
 
+// Room for every case: r ±5, p ±40, s ±12, each grown by its margin.
 const R = 16;
-const P = 160;
-const S = 48;
+const P = 100;
+const S = 32;
 const ORIGIN = { r: R / 2, p: P / 2, s: S / 2 };
 const index = (r: number, p: number, s: number) => (s * R + r) * P + p;
 
@@ -113,11 +114,9 @@ export function latticeOracle(question: LatticeCase): (w: number, wz?: number) =
           if (sourceS < 0 || sourceS >= S) continue;
           if (j !== 0 && !excited(sourceS, weight)) continue;
           if (unfoldSlices && j !== 0 && Math.abs(offsetHalf(sourceS)) > wz!) continue;
-          const iMax = Math.ceil(P / stepP);
-          for (let i = -iMax; i <= iMax; i++) {
-            if (i === 0 && j === 0) continue;
-            const sourceP = p + i * stepP;
-            if (sourceP < 0 || sourceP >= P || !cells[index(r, sourceP, sourceS)]) continue;
+          for (let sourceP = p % stepP; sourceP < P; sourceP += stepP) {
+            if (sourceP === p && j === 0) continue;
+            if (!cells[index(r, sourceP, sourceS)]) continue;
             // Image-domain unfolding ghosts only what lies beyond the acquired width (or came along the slab).
             const beyond = Math.abs(2 * (sourceP - ORIGIN.p) + 1 - question.centrePHalf) > w;
             if (ghosts && (unfoldSlices || j === 0) && !beyond) continue;
