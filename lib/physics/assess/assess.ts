@@ -1,5 +1,6 @@
 import { foldShareWithMargin } from '../certainty/fold-probability';
 import { sizesAt } from '../certainty/sizes-at';
+import type { SolvedFold } from '../fold/solved-fold';
 import { toMicrometres } from '../geometry/micrometres';
 import { PLANE_AXES } from '../geometry/section-frame';
 import type { Assessment, FoldResult, Reason, SamplingResult, SlabResult, TimeResult, Verdict, WidthRequirement } from '../model/assessment';
@@ -78,25 +79,30 @@ function gapReason(given: FrozenCase, width: WidthRequirement, fold: FoldResult)
   };
 }
 
-const posed = new WeakMap<FrozenCase, FrozenCase>();
-
 /** The case the geometry sees: sizes at the policy's certainty, unknown unfolding taken cautiously. */
 export function geometryCase(given: FrozenCase): FrozenCase {
-  let seen = posed.get(given);
-  if (seen === undefined) {
-    const patient = sizesAt(given.patient, given.policy.sureAt);
-    const prescription = withUnfolding(given, unfoldingOf(given));
-    seen = patient === given.patient && prescription === given.prescription ? given : { ...given, patient, prescription };
-    posed.set(given, seen);
-  }
-  return seen;
+  const patient = sizesAt(given.patient, given.policy.sureAt);
+  const prescription = withUnfolding(given, unfoldingOf(given));
+  return patient === given.patient && prescription === given.prescription ? given : { ...given, patient, prescription };
+}
+
+/** A case's geometry, solved: what assessing and sizing start from. */
+export interface SolvedGeometry {
+  readonly seen: FrozenCase;
+  readonly solved: SolvedFold;
+}
+
+export function solveGeometry(given: FrozenCase): SolvedGeometry {
+  const seen = geometryCase(given);
+  return { seen, solved: solveClass(seen) };
 }
 
 /**
  * Answers a case that is already known to be inside its domain.
  * @param withAssumptions false leaves them out: in a ranking they are those of the case itself
+ * @param geometry the solved geometry, where it is at hand
  */
-export function assessChecked(given: FrozenCase, withAssumptions: boolean): Assessment {
+export function assessChecked(given: FrozenCase, withAssumptions: boolean, geometry?: SolvedGeometry): Assessment {
   const { prescription: p, policy } = given;
   const common = {
     engineVersion: ENGINE_VERSION,
@@ -109,8 +115,7 @@ export function assessChecked(given: FrozenCase, withAssumptions: boolean): Asse
 
   const { time, stops } = timeOf(given);
   const hard = [...hardLimits(given, time), ...stops];
-  const seen = geometryCase(given);
-  const solved = solveClass(seen);
+  const { seen, solved } = geometry ?? solveGeometry(given);
   const partitions = p.slices.mode === 'slab' ? p.slices.acquiredPartitions : undefined;
   const width = solved.requirement(partitions);
   const fold = solved.leftover(p.acquiredLines, partitions);

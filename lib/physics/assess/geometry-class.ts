@@ -82,19 +82,8 @@ function prescriptionKey(p: Prescription): string {
   ].join('|');
 }
 
-const keys = new WeakMap<FrozenCase, string>();
-
-/** The key of a case's geometry class; cases are never changed in place, so each is spelled out once. */
+/** The key of a case's geometry class. */
 export function classKey(given: FrozenCase): string {
-  let key = keys.get(given);
-  if (key === undefined) {
-    key = spellOut(given);
-    keys.set(given, key);
-  }
-  return key;
-}
-
-function spellOut(given: FrozenCase): string {
   const { position, breadthMm, depthMm, gapMm } = given.patient.arms;
   return [
     identityOf(given.patient.extents),
@@ -127,7 +116,7 @@ function problemOf(given: FrozenCase): FoldProblem {
   });
 }
 
-const solved = new KeptAnswers<SolvedFold>(256);
+const solved = new KeptAnswers<SolvedFold>(96);
 
 /** The geometry class of a case, solved once; the key is every value the solution depends on. */
 export const solveClass = (given: FrozenCase): SolvedFold => solved.get(classKey(given), () => solveFold(problemOf(given)));

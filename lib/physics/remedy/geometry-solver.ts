@@ -1,5 +1,5 @@
-import { assessChecked, geometryCase } from '../assess/assess';
-import { solveClass, type FrozenCase } from '../assess/geometry-class';
+import { assessChecked, geometryCase, solveGeometry, type SolvedGeometry } from '../assess/assess';
+import type { FrozenCase } from '../assess/geometry-class';
 import { partAlong } from '../assess/part-along';
 import { slabResultOf } from '../assess/slab-result';
 import { buildBody } from '../body/build-body';
@@ -11,7 +11,6 @@ import type { Reason } from '../model/assessment';
 import type { PatientAxis, RangeMm, Side, Vec3 } from '../model/axes';
 import type { Case } from '../model/case';
 import { nextAcquiredPartitions } from '../fold/acquired-lines';
-import type { SolvedFold } from '../fold/solved-fold';
 import type { Solver, TargetedCase } from './change';
 
 const SIDE_AXIS: Readonly<Record<Side, PatientAxis>> = {
@@ -29,25 +28,39 @@ const towards = (side: Side): Vec3 => scale(AXIS_VECTOR[SIDE_AXIS[side]], AXIS_S
 const partitionsOf = ({ prescription: { slices } }: Case): number | undefined =>
   slices.mode === 'slab' ? slices.acquiredPartitions : undefined;
 
-/** The case a change is sized in: against what it has to keep free. */
-function posedFor(given: TargetedCase): FrozenCase {
-  if (given.target === undefined) return geometryCase(given);
-  let retargeted = againstTarget.get(given);
-  if (retargeted === undefined) {
-    retargeted = { ...given, frozen: given.target };
-    againstTarget.set(given, retargeted);
+/** Geometry of the cases one ranking meets, by the case itself: each is solved once and forgotten with the ranking. */
+class RankingGeometry {
+  private readonly toSize = new Map<TargetedCase, SolvedGeometry>();
+  private readonly toAssess = new Map<TargetedCase, SolvedGeometry>();
+
+  /** Against what sizing has to keep free. */
+  forSizing(given: TargetedCase): SolvedGeometry {
+    if (given.target === undefined) return this.forAssessing(given);
+    return kept(this.toSize, given, () => solveGeometry({ ...given, frozen: given.target! }));
   }
-  return geometryCase(retargeted);
+
+  /** Against the keep-clear area. */
+  forAssessing(given: TargetedCase): SolvedGeometry {
+    return kept(this.toAssess, given, () => solveGeometry(given));
+  }
+
+  slabIsClean(given: TargetedCase): boolean {
+    return (slabResultOf(this.forSizing(given).seen)?.contaminatedInKeepClear ?? 0) === 0;
+  }
+
+  isClean(given: TargetedCase): boolean {
+    const { solved } = this.forSizing(given);
+    return solved.isClean(given.prescription.acquiredLines, partitionsOf(given)) && this.slabIsClean(given);
+  }
 }
 
-const againstTarget = new WeakMap<TargetedCase, FrozenCase>();
-
-const solvedFor = (given: TargetedCase): SolvedFold => solveClass(posedFor(given));
-
-const slabIsClean = (given: TargetedCase): boolean => (slabResultOf(posedFor(given))?.contaminatedInKeepClear ?? 0) === 0;
-
-function isClean(given: TargetedCase): boolean {
-  return solvedFor(given).isClean(given.prescription.acquiredLines, partitionsOf(given)) && slabIsClean(given);
+function kept<T>(known: Map<TargetedCase, T>, given: TargetedCase, workOut: () => T): T {
+  let value = known.get(given);
+  if (value === undefined) {
+    value = workOut();
+    known.set(given, value);
+  }
+  return value;
 }
 
 /** So many partitions that hardly anything of a slab's profile is left to wrap along it. */
@@ -57,15 +70,15 @@ const NO_SLAB_WRAP = 8;
  * First L_z that keeps the slab's own partitions clean and lets nothing fold in both directions at once. Where the
  * phase direction folds by itself no L_z can help that: then the first one that keeps the partitions clean.
  */
-function cleanPartitions(given: TargetedCase): number | undefined {
+function cleanPartitions(given: TargetedCase, geometry: RankingGeometry): number | undefined {
   const { slices, acquiredLines } = given.prescription;
   if (slices.mode !== 'slab') return undefined;
-  const alone = slabResultOf(posedFor(given))?.smallestCleanPartitions;
-  if (alone === undefined || !solvedFor(given).isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)) return alone;
+  const alone = slabResultOf(geometry.forSizing(given).seen)?.smallestCleanPartitions;
+  if (alone === undefined || !geometry.forSizing(given).solved.isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)) return alone;
   const most = Math.floor(slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9);
   for (let acquired = alone; acquired <= most; ) {
     const planned = { ...given, prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } } };
-    if (isClean(planned)) return acquired;
+    if (geometry.isClean(planned)) return acquired;
     acquired = nextAcquiredPartitions(slices.partitions, acquired + 1, given.scanner.partitionStep);
   }
   return alone;
@@ -124,12 +137,13 @@ function bodyAlongPhase(given: TargetedCase): RangeMm {
  * @param original the case before any change, frozen
  */
 export function geometrySolver(original: FrozenCase): Solver {
+  const geometry = new RankingGeometry();
   return {
-    requirement: (asked) => solvedFor(asked).requirement(partitionsOf(asked)),
-    isClean,
-    slabIsClean,
-    cleanPartitions,
-    intruder: (asked) => solvedFor(asked).leftover(asked.prescription.acquiredLines, partitionsOf(asked)).from,
+    requirement: (asked) => geometry.forSizing(asked).solved.requirement(partitionsOf(asked)),
+    isClean: (asked) => geometry.isClean(asked),
+    slabIsClean: (asked) => geometry.slabIsClean(asked),
+    cleanPartitions: (asked) => cleanPartitions(asked, geometry),
+    intruder: (asked) => geometry.forSizing(asked).solved.leftover(asked.prescription.acquiredLines, partitionsOf(asked)).from,
     leavesPicture: leavesPictureOf(original, windowRegion(original.prescription)),
     windowEdgeMm: (asked, side) =>
       Math.max(
@@ -138,6 +152,6 @@ export function geometrySolver(original: FrozenCase): Solver {
       ),
     bodyEdgeMm: (asked, side) => bodyEdge(asked, towards(side)),
     bodyAlongPhaseMm: bodyAlongPhase,
-    assess: (asked) => assessChecked(asked, false),
+    assess: (asked) => assessChecked(asked, false, geometry.forAssessing(asked)),
   };
 }

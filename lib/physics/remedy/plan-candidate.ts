@@ -22,52 +22,59 @@ export type Planning =
 const NOTHING: Planning = { outcome: 'nothing-to-change' };
 
 /**
- * Results of changes by the case they were applied to: pairs share their first change, so most of a ranking's steps
- * have been taken before.
+ * What one ranking has worked out already, by the case it was asked about: pairs share their first change, so most of a
+ * ranking's steps have been taken before. Forgotten with the ranking.
  */
-const taken = new WeakMap<TargetedCase, Map<Change, ChangeResult>>();
+export class TakenSteps {
+  private readonly results = new Map<TargetedCase, Map<Change, ChangeResult>>();
+  private readonly levels = new Map<TargetedCase, Map<PaybackLevel, TargetedCase>>();
+  private readonly choices = new Map<PaybackKind, PaybackChoice>();
+  private readonly times = new Map<TargetedCase, TimeResult>();
 
-function take(change: Change, given: TargetedCase, solver: Solver): ChangeResult {
-  const steps = taken.get(given) ?? new Map<Change, ChangeResult>();
-  taken.set(given, steps);
-  let result = steps.get(change);
-  if (result === undefined) {
-    result = change(given, solver);
-    steps.set(change, result);
+  /** @param given the case before any change; solver what changes are worked out with */
+  constructor(
+    readonly given: TargetedCase,
+    readonly now: TimeResult,
+    readonly solver: Solver,
+  ) {}
+
+  change(change: Change, planned: TargetedCase): ChangeResult {
+    return within(this.results, planned, change, () => change(planned, this.solver));
   }
-  return result;
-}
 
-const levelled = new WeakMap<TargetedCase, Map<PaybackLevel, TargetedCase>>();
-
-function applyLevel(level: PaybackLevel, given: TargetedCase): TargetedCase {
-  const known = levelled.get(given) ?? new Map<PaybackLevel, TargetedCase>();
-  levelled.set(given, known);
-  let applied = known.get(level);
-  if (applied === undefined) {
-    applied = level.apply(given);
-    known.set(level, applied);
+  level(level: PaybackLevel, planned: TargetedCase): TargetedCase {
+    return within(this.levels, planned, level, () => level.apply(planned));
   }
-  return applied;
+
+  choice(payback: PaybackKind): PaybackChoice {
+    return orMake(this.choices, payback, () => PAYBACKS[payback](this.given));
+  }
+
+  /** Scan time after settling; what a payback is judged by. */
+  time(planned: TargetedCase): TimeResult {
+    return orMake(this.times, planned, () =>
+      scanTime(carryTiming(this.given.prescription, planned.prescription), planned.patient, planned.scanner),
+    );
+  }
 }
 
-const choices = new WeakMap<TargetedCase, Map<PaybackKind, PaybackChoice>>();
-
-function choiceOf(payback: PaybackKind, given: TargetedCase): PaybackChoice {
-  const known = choices.get(given) ?? new Map<PaybackKind, PaybackChoice>();
-  choices.set(given, known);
-  const choice = known.get(payback) ?? PAYBACKS[payback](given);
-  known.set(payback, choice);
-  return choice;
+function orMake<K, V>(known: Map<K, V>, key: K, make: () => V): V {
+  let value = known.get(key);
+  if (value === undefined) {
+    value = make();
+    known.set(key, value);
+  }
+  return value;
 }
 
-const times = new WeakMap<TargetedCase, TimeResult>();
+const within = <A, B, V>(known: Map<A, Map<B, V>>, outer: A, inner: B, make: () => V): V =>
+  orMake(orMake(known, outer, () => new Map<B, V>()), inner, make);
 
 /** Applies changes one after another; one that finds nothing to change means the set is really a smaller one. */
-function applyAll(start: PlannedCandidate, changes: readonly Change[], solver: Solver): Planning {
+function applyAll(start: PlannedCandidate, changes: readonly Change[], steps: TakenSteps): Planning {
   let candidate = start;
   for (const change of changes) {
-    const result: ChangeResult = take(change, candidate.planned, solver);
+    const result: ChangeResult = steps.change(change, candidate.planned);
     if (result.outcome !== 'changed') return result;
     candidate = { planned: result.planned, sideEffects: [...candidate.sideEffects, ...result.sideEffects] };
   }
@@ -86,18 +93,8 @@ function settle(given: TargetedCase, { planned, sideEffects }: PlannedCandidate)
   };
 }
 
-/** Scan time after settling; what a payback is judged by. */
-function settledTime(given: TargetedCase, planned: TargetedCase): TimeResult {
-  let time = times.get(planned);
-  if (time === undefined) {
-    time = scanTime(carryTiming(given.prescription, planned.prescription), planned.patient, planned.scanner);
-    times.set(planned, time);
-  }
-  return time;
-}
-
 /** What has been paid too much, worst first: hold beyond the limit, scan time and train beyond what they are now. */
-function debt(given: TargetedCase, now: TimeResult, time: TimeResult): readonly [number, number, number] {
+function debt({ given, now }: TakenSteps, time: TimeResult): readonly [number, number, number] {
   const over = (value: number, limit: number): number => Math.max(0, Math.round((value - limit) * 1e6) / 1e6);
   const holdLimit = given.prescription.breathing === 'breath-hold' ? given.patient.breathHoldS.value : Infinity;
   return [over(time.longestHoldS, holdLimit), over(time.scanS, now.scanS), over(time.trainMs ?? 0, now.trainMs ?? 0)];
@@ -114,7 +111,7 @@ const isLess = (a: readonly number[], b: readonly number[]): boolean => {
  * Averages given up leave time over: it is spent on as many clean lines as fit, which keeps the SNR (100 % with half
  * the averages costs nothing of either).
  */
-function spendOnLines(given: TargetedCase, now: TimeResult, candidate: PlannedCandidate, solver: Solver): PlannedCandidate {
+function spendOnLines(steps: TakenSteps, candidate: PlannedCandidate): PlannedCandidate {
   const { planned } = candidate;
   const needed = planned.prescription.acquiredLines;
   const withLines = (acquiredLines: number): TargetedCase => ({
@@ -125,18 +122,17 @@ function spendOnLines(given: TargetedCase, now: TimeResult, candidate: PlannedCa
   let most = fillTo(planned, 2 * planned.prescription.linesAcrossFov) ?? needed;
   while (least < most) {
     const middle = Math.ceil((least + most) / 2);
-    if (isPaid(debt(given, now, settledTime(given, withLines(middle))))) least = middle;
+    if (isPaid(debt(steps, steps.time(withLines(middle))))) least = middle;
     else most = middle - 1;
   }
   for (let lines = fillTo(planned, least); lines !== undefined; lines = fillTo(planned, lines - 1)) {
-    if (solver.isClean(withLines(lines))) return { ...candidate, planned: withLines(lines) };
+    const filled = withLines(lines);
+    if (steps.solver.isClean(filled)) return { ...candidate, planned: filled };
   }
   return candidate;
 }
 
 interface Question {
-  readonly given: TargetedCase;
-  readonly now: TimeResult;
   readonly options: readonly ChangeOption[];
   readonly payback?: PaybackKind;
 }
@@ -145,38 +141,36 @@ const changesOf = (options: readonly ChangeOption[], stage: ChangeOption['stage'
   options.filter((option) => option.stage === stage).map((option) => option.change);
 
 /** Settings, then the payback (if any), then sizing in the geometry those two make. */
-function planAt(question: Question, level: PaybackLevel | undefined, solver: Solver): Planning {
-  const { given, options, now, payback } = question;
-  const set = applyAll({ planned: given, sideEffects: [] }, changesOf(options, 'setting'), solver);
+function planAt({ options, payback }: Question, level: PaybackLevel | undefined, steps: TakenSteps): Planning {
+  const set = applyAll({ planned: steps.given, sideEffects: [] }, changesOf(options, 'setting'), steps);
   if (set.outcome !== 'planned') return set;
   const paid =
     level === undefined
       ? set.candidate
-      : { planned: applyLevel(level, set.candidate.planned), sideEffects: [...set.candidate.sideEffects, level.sideEffect] };
-  const sized = applyAll(paid, changesOf(options, 'sizing'), solver);
+      : { planned: steps.level(level, set.candidate.planned), sideEffects: [...set.candidate.sideEffects, level.sideEffect] };
+  const sized = applyAll(paid, changesOf(options, 'sizing'), steps);
   if (sized.outcome !== 'planned') return sized;
   const fills =
     payback === 'fewer-averages' &&
-    now.trainMs === undefined &&
+    steps.now.trainMs === undefined &&
     options.some((option) => option.kind === 'phase-oversampling') &&
-    isPaid(debt(given, now, settledTime(given, sized.candidate.planned)));
-  return { outcome: 'planned', candidate: fills ? spendOnLines(given, now, sized.candidate, solver) : sized.candidate };
+    isPaid(debt(steps, steps.time(sized.candidate.planned)));
+  return { outcome: 'planned', candidate: fills ? spendOnLines(steps, sized.candidate) : sized.candidate };
 }
 
 /** The mildest level that pays everything back; where none does, the one that leaves least owed. */
-function planPaidBack(question: Question, payback: PaybackKind, solver: Solver): Planning {
-  const { given, now } = question;
-  const unpaid = planAt(question, undefined, solver);
+function planPaidBack(question: Question, payback: PaybackKind, steps: TakenSteps): Planning {
+  const unpaid = planAt(question, undefined, steps);
   if (unpaid.outcome !== 'planned') return unpaid;
-  let owed = debt(given, now, settledTime(given, unpaid.candidate.planned));
+  let owed = debt(steps, steps.time(unpaid.candidate.planned));
   if (isPaid(owed)) return NOTHING;
-  const choice = choiceOf(payback, given);
+  const choice = steps.choice(payback);
   if (choice.outcome === 'refused') return { outcome: 'refused', reason: choice, paybackAlone: true };
   let best: Planning = NOTHING;
   for (const level of choice.levels) {
-    const planning = planAt(question, level, solver);
+    const planning = planAt(question, level, steps);
     if (planning.outcome !== 'planned') continue;
-    const left = debt(given, now, settledTime(given, planning.candidate.planned));
+    const left = debt(steps, steps.time(planning.candidate.planned));
     if (isLess(left, owed)) {
       owed = left;
       best = planning;
@@ -190,14 +184,14 @@ function planPaidBack(question: Question, payback: PaybackKind, solver: Solver):
  * Works out one candidate: which prescription and arms a set of changes and a payback lead to.
  * A combination the sequence cannot play is refused with the reason the timing gives.
  */
-export function planCandidate(question: Question, solver: Solver): Planning {
-  const { given, options, payback } = question;
+export function planCandidate(question: Question, steps: TakenSteps): Planning {
+  const { options, payback } = question;
   if (options.length === 0 && payback === undefined) return NOTHING;
   try {
-    const planning = payback === undefined ? planAt(question, undefined, solver) : planPaidBack(question, payback, solver);
+    const planning = payback === undefined ? planAt(question, undefined, steps) : planPaidBack(question, payback, steps);
     if (planning.outcome !== 'planned') return planning;
-    const candidate = settle(given, planning.candidate);
-    const leaves = solver.leavesPicture(candidate.planned);
+    const candidate = settle(steps.given, planning.candidate);
+    const leaves = steps.solver.leavesPicture(candidate.planned);
     return leaves === undefined ? { outcome: 'planned', candidate } : { outcome: 'refused', reason: leaves };
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;

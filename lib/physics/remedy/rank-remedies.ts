@@ -12,7 +12,7 @@ import { markDominated } from './dominance';
 import { geometrySolver } from './geometry-solver';
 import { outcomeKey } from './outcome-key';
 import { PAYBACK_KINDS } from './paybacks';
-import { planCandidate, type PlannedCandidate } from './plan-candidate';
+import { planCandidate, TakenSteps, type PlannedCandidate } from './plan-candidate';
 import { remedySentence } from './sentence';
 
 export interface RankFilters {
@@ -104,6 +104,7 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
   if (!needsRemedy(given, now) || now.time === undefined) return { now, remedies: [], notPossible: [], candidates: 0 };
   const start = targeted(given, now);
   const solver = geometrySolver(start);
+  const steps = new TakenSteps(start, now.time, solver);
   const remedies: Remedy[] = [];
   const notPossible: RemedyNotPossible[] = [];
   const seen = new Set<string>([outcomeKey(start)]);
@@ -120,7 +121,7 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
 
   for (const payback of [undefined, ...paybacks]) {
     for (const options of allowed) {
-      const planning = planCandidate({ given: start, now: now.time, options, ...(payback === undefined ? {} : { payback }) }, solver);
+      const planning = planCandidate({ options, ...(payback === undefined ? {} : { payback }) }, steps);
       if (planning.outcome === 'nothing-to-change') continue;
       if (planning.outcome === 'refused') {
         refuse(planning.paybackAlone ? [] : options, payback, planning.reason);
