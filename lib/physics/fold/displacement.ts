@@ -70,8 +70,10 @@ export function hullBands(points: readonly (readonly [number, number])[]): RowBa
       }
       kept.push(point);
     }
-    // Edges along phase limit no row.
-    return kept.filter((point, i) => i + 1 === kept.length || kept[i + 1]![0] - point[0] > TOUCH_MM);
+    // Edges along phase limit no row: the lower chain may end with one, the upper may begin with one.
+    return sign > 0
+      ? kept.filter((point, i) => i === 0 || point[0] - kept[i - 1]![0] > TOUCH_MM)
+      : kept.filter((point, i) => i + 1 === kept.length || kept[i + 1]![0] - point[0] > TOUCH_MM);
   };
   const edges = (corners: (readonly [number, number])[]) =>
     corners.slice(1).map((to, i) => {
