@@ -53,7 +53,7 @@ const foldSchema = z.strictObject({
   keepClearShare: share('Share of the keep-clear area'),
   from: z
     .strictObject({
-      part: z.string(), side: z.enum(SIDE_NAMES), order: z.int(), distanceMm: mm('Distance travelled'),
+      part: z.string(), side: z.enum(SIDE_NAMES), order: z.number().describe('Widths travelled; a fraction for a ghost of unfolding.'), distanceMm: mm('Distance travelled'),
     })
     .describe('Where the deepest intruder comes from.')
     .optional(),

@@ -289,7 +289,7 @@ export const policyInput = strict(
     tolerateFoldOutsidePct: policyShape.tolerateFoldOutsidePct.optional(),
     readingExpiryDays: policyShape.readingExpiryDays.optional(),
     signOffAlways: policyShape.signOffAlways.optional(),
-    weights: strict({ ...weightsShape, swap: strict(swapShape).partial() })
+    weights: strict({ ...weightsShape, swap: strict(swapShape).partial().describe('Swapping the phase direction, by body part [points].') })
       .partial()
       .describe('Cost points; 1 point is as bad as 1 % more scan time.')
       .optional(),

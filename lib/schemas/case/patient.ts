@@ -114,7 +114,7 @@ export const partShapeSchema = z
 export const partShape = {
   name: words(40, 'Unique in its body, shown to people: "trunk", "right arm".'),
   kind: choice(['trunk', 'arm', 'head', 'nose', 'breast', 'leg', 'other'], 'What the part is.'),
-  shape: partShapeSchema,
+  shape: partShapeSchema.describe('Elliptic cylinder, ellipsoid or outline prism [mm].'),
   signalWeight: quantity({ min: 0, max: 10, unit: '1', text: 'Signal relative to trunk tissue; unknown is 1' }),
   estimated: flag('True when the part was not measured.'),
 } satisfies ShapeOf<SolidPart>;
