@@ -26,7 +26,8 @@ export function CreateTokenForm({
 }) {
   const form = useForm<CreateApiTokenInput>({
     resolver: zodResolver(createApiTokenSchema),
-    defaultValues: { name: '', scopes: [], days: 90 },
+    // None for the name: it would wipe what was typed before the script had loaded.
+    defaultValues: { scopes: [], days: 90 },
   });
   const days = useWatch({ control: form.control, name: 'days' });
   const [created, setCreated] = useState<(CreatedToken & { name: string }) | null>(null);

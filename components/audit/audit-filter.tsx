@@ -13,7 +13,13 @@ const OFFERED = [...AUDIT_ONLY_ACTIONS, ...ACTIONS.filter((action) => !/\.(read|
 export function AuditFilter({ filter }: { filter: AuditFilterInput }) {
   const filtered = Boolean(filter.action ?? filter.subject ?? filter.id ?? filter.by);
   return (
-    <form method="get" aria-label="Filter the log" className="mb-5 grid items-end gap-4 sm:grid-cols-2 lg:grid-cols-4">
+    <form
+      method="get"
+      aria-label="Filter the log"
+      // Else the browser puts old choices back after "back", and they would not match what is listed.
+      autoComplete="off"
+      className="mb-5 grid grid-cols-[minmax(0,1fr)] items-end gap-4 sm:grid-cols-2 lg:grid-cols-4"
+    >
       <Select
         label="Action"
         name="action"

@@ -12,10 +12,8 @@ import type { ActionResult } from '@/lib/schemas/action-result';
 import { type AskPasswordLinkInput, askPasswordLinkSchema } from '@/lib/schemas/session/password';
 
 export function AskLinkForm({ askForLink }: { askForLink: (input: AskPasswordLinkInput) => Promise<ActionResult> }) {
-  const form = useForm<AskPasswordLinkInput>({
-    resolver: zodResolver(askPasswordLinkSchema),
-    defaultValues: { email: '' },
-  });
+  // No default value: it would wipe what was typed before the script had loaded.
+  const form = useForm<AskPasswordLinkInput>({ resolver: zodResolver(askPasswordLinkSchema) });
   const [asked, setAsked] = useState<string | null>(null);
   const { submit, problem } = useFormAction(form, askForLink, (_, { email }) => setAsked(email));
 

@@ -22,15 +22,14 @@ export function ChangePasswordForm({
   changePassword: (input: ChangePasswordInput) => Promise<ActionResult<{ email: string }>>;
 }) {
   const router = useRouter();
-  const form = useForm<ChangePasswordInput>({
-    resolver: zodResolver(changePasswordSchema),
-    defaultValues: { currentPassword: '', newPassword: '', repeatPassword: '' },
-  });
+  const form = useForm<ChangePasswordInput>({ resolver: zodResolver(changePasswordSchema) });
   const [done, setDone] = useState(false);
   const { submit, problem } = useFormAction(form, changePassword, async (data, values) => {
     setDone(true);
     // Every session has ended, this one too: begin a new one with the new password.
     await signInWith(data.email, values.newPassword);
+    form.reset();
+    setDone(false);
     router.replace('/account?changed=1');
     router.refresh();
   });

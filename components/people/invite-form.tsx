@@ -21,7 +21,8 @@ export function InviteForm({
   const { say } = useStatus();
   const form = useForm<InvitePersonInput>({
     resolver: zodResolver(invitePersonSchema),
-    defaultValues: { email: '', displayName: '', roles: [] },
+    // None for the texts: they would wipe what was typed before the script had loaded.
+    defaultValues: { roles: [] },
   });
   const { submit, problem } = useFormAction(form, invite, (_, { email }) => {
     say(`Invitation on its way to ${email}.`);

@@ -10,10 +10,8 @@ import { type SignInInput, signInSchema } from '@/lib/schemas/session/sign-in';
 import { signInWith } from './sign-in';
 
 export function SignInForm() {
-  const form = useForm<SignInInput>({
-    resolver: zodResolver(signInSchema),
-    defaultValues: { email: '', password: '' },
-  });
+  // No default values: they would wipe what a person or the browser filled in before the script had loaded.
+  const form = useForm<SignInInput>({ resolver: zodResolver(signInSchema) });
   const [problem, setProblem] = useState<string | null>(null);
   const { isSubmitting, isSubmitSuccessful } = form.formState;
 

@@ -8,7 +8,7 @@ export function Table({ caption, children, className }: { caption: string; child
       role="region"
       aria-label={caption}
       tabIndex={0}
-      className={cx('overflow-x-auto rounded-md border border-line bg-paper', className)}
+      className={cx('relative overflow-x-auto rounded-md border border-line bg-paper', className)}
     >
       <table className="w-full border-collapse text-left">
         <caption className="sr-only">{caption}</caption>

@@ -1,0 +1,19 @@
+import { expect } from '@playwright/test';
+import { type CaughtMail, listCaughtMail } from '@/lib/mail';
+import { caughtMailFolder } from '@/lib/ops/local-database';
+
+/** The newest caught mail to an address, as soon as the worker has sent it. */
+export async function mailTo(address: string): Promise<CaughtMail> {
+  const folder = caughtMailFolder(String(process.env.SELVEDGE_E2E_DATA_DIR));
+  const find = async () => (await listCaughtMail(folder))?.find((mail) => mail.to === address);
+  await expect.poll(find, { message: `mail to ${address}`, timeout: 30_000 }).toBeTruthy();
+  return (await find())!;
+}
+
+/** The one link of a mail; text and HTML must agree on it. */
+export function linkIn(mail: CaughtMail): string {
+  const links = [...new Set(mail.text.match(/https?:\/\/\S+/g) ?? [])];
+  expect(links).toHaveLength(1);
+  expect(mail.html).toContain(links[0]);
+  return links[0]!;
+}
