@@ -121,6 +121,15 @@ describe('detail', () => {
     expect(detail(typicalPrescription(), { geometryFactor: 1 }).voxelMm).toEqual([1.25, 1.25, 5]);
     expect(detail(slab, { geometryFactor: 1 }).voxelMm[2]).toBe(3.5);
   });
+  it('is voxel · √(samples), mm³·√s, for a stack and a slab', () => {
+    // 1 · 1 · 5 mm, 256 lines at 200 Hz a pixel.
+    expect(detail(base, { geometryFactor: 1 }).snr).toBeCloseTo(5 * Math.sqrt(256 / 200), 9);
+    // 1.25 · 1.25 · 3.5 mm, 240 lines, 64 partitions, 2 averages.
+    expect(detail(slab, { geometryFactor: 1 }).snr).toBeCloseTo(
+      1.25 * 1.25 * 3.5 * Math.sqrt((240 * 64 * 2) / 200),
+      9,
+    );
+  });
   it('turns a range of g into a range of SNR, and leaves an unaccelerated scan alone', () => {
     const fast = { ...base, acceleration: accelerated(2, { referenceLines: 0 }) };
     const range = detail(fast, { geometryFactor: [1, 1.3] });

@@ -70,7 +70,12 @@ describe('trunk from girth (NHANES 2013–16)', () => {
       Math.sqrt((13 ** 2 + 15 ** 2) / 2 + ((man!.value - woman!.value) / 2) ** 2),
       9,
     );
-    expect(either!.words).toContain('women and men');
+    expect([man, woman, either].map((answer) => answer!.words)).toEqual([
+      'depth from girth at the iliac crest (men, all)',
+      'depth from girth at the iliac crest (women, all)',
+      'depth from girth at the iliac crest (women and men, all)',
+    ]);
+    expect(depthFromGirth(measured(1200), 'male', 36, 'iliac-crest').words).toContain('BMI 35 and over');
   });
   it('grows with the girth', () => {
     fc.assert(
@@ -171,6 +176,15 @@ describe('population (NHANES 2013–16; men’s depth p95 31.2 in Kahn 2014 PLoS
     expect(answer.spread).toBeCloseTo((10 * (p95 - p50)) / 1.6448536, 5);
     expect(answer.source).toBe('population');
     expect(answer.cautions).toHaveLength(1);
+  });
+  it('says whose median it is', () => {
+    expect(
+      (['male', 'female', undefined] as const).map((sex) => populationEstimate('girth', sex).words),
+    ).toEqual([
+      'median of adults (men), not of this patient',
+      'median of adults (women), not of this patient',
+      'median of adults, not of this patient',
+    ]);
   });
   it('rises with p, and refuses percentiles the table does not hold', () => {
     let previous = 0;

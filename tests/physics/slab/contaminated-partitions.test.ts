@@ -150,6 +150,16 @@ describe('alias into a partition', () => {
     expect(single10[16]).toMatchObject({ dim: false, bright: false, signal: expect.closeTo(1, 2) as number });
   });
 
+  it('exactly at a limit is neither dim, bright nor contaminated', () => {
+    const at = (share: number): SlabProfile => ({ ...shelf(0), at: (z) => (Math.abs(z) <= 0.5 ? share : 0) });
+    const own = (share: number) => slabPartitions(question(at(share)))[0]!;
+    expect([own(0.9), own(0.899999)].map(({ dim }) => dim)).toEqual([false, true]);
+    expect([own(1.1), own(1.100001)].map(({ bright }) => bright)).toEqual([false, true]);
+    const wrap = (tolerance: number) =>
+      slabPartitions(question(shelf(0.5), { tolerance, acquiredPartitions: 40 }))[0]!.state;
+    expect([wrap(0.3), wrap(0.299999)]).toEqual(['clean', 'contaminated']);
+  });
+
   it('keep-clear is the partitions that overlap its range, less the ends given up', () => {
     const inside = (overrides: Partial<SlabQuestion>): number[] =>
       slabPartitions(question(single(8, 10), { partitions: 8, acquiredPartitions: 8, ...overrides }))
