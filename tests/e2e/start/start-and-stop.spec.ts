@@ -2,11 +2,13 @@ import { readdir, readFile, stat } from 'node:fs/promises';
 import net from 'node:net';
 import path from 'node:path';
 import { expect, test } from '@playwright/test';
+import { freePort } from '@/db/local';
 import {
   demoAccountsOf,
   newDataFolder,
   removeDataFolder,
   type RunningSelvedge,
+  spawnSelvedge,
   startSelvedge,
 } from '@/tests/support/e2e/running-selvedge';
 
@@ -129,4 +131,11 @@ test('says in words that the port asked for is taken, and leaves nothing running
   } finally {
     await new Promise((resolve) => server.close(resolve));
   }
+});
+
+test('stops as asked while it is still starting', async () => {
+  const child = spawnSelvedge({ dataDir, port: await freePort() });
+  await child.prints('Starting the database');
+  expect(await child.stop()).toBe(0);
+  expect(await processesOf(dataDir)).toEqual([]);
 });

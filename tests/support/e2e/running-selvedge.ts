@@ -1,4 +1,4 @@
-import { type ChildProcess, spawn } from 'node:child_process';
+import { spawn } from 'node:child_process';
 import { chmod, mkdtemp, readFile, rm } from 'node:fs/promises';
 import os from 'node:os';
 import path from 'node:path';
@@ -34,41 +34,57 @@ export async function removeDataFolder(folder: string): Promise<void> {
   await rm(folder, { recursive: true, force: true });
 }
 
+export interface SpawnedSelvedge {
+  readonly pid: number;
+  readonly exited: Promise<number | null>;
+  printed(): string;
+  /** Resolves when it has printed these words; rejects when it ends without. */
+  prints(words: string): Promise<void>;
+  stop(signal?: NodeJS.Signals): Promise<number | null>;
+}
+
+const SERVICES = ['DATABASE_URL', 'MIGRATION_DATABASE_URL', 'SMTP_URL', 'NEXTAUTH_URL', 'NEXTAUTH_SECRET'];
+
+/** Runs "npm start" on this folder and port, with no services but those given. */
+export function spawnSelvedge(options: {
+  readonly dataDir: string;
+  readonly port: number;
+  readonly env?: Readonly<Record<string, string>>;
+}): SpawnedSelvedge {
+  const inherited = Object.fromEntries(Object.entries(process.env).filter(([name]) => !SERVICES.includes(name)));
+  const child = spawn(process.execPath, ['lib/ops/bootstrap.mjs', 'start'], {
+    cwd: ROOT,
+    env: { ...(inherited as NodeJS.ProcessEnv), ...options.env, SELVEDGE_DATA_DIR: options.dataDir, PORT: String(options.port) },
+    stdio: ['ignore', 'pipe', 'pipe'],
+  });
+  let text = '';
+  const exited = new Promise<number | null>((resolve) => child.once('close', resolve));
+  for (const stream of [child.stdout, child.stderr]) stream.on('data', (chunk: Buffer) => (text += chunk.toString()));
+  return {
+    pid: child.pid!,
+    exited,
+    printed: () => text,
+    prints: (words) =>
+      new Promise((resolve, reject) => {
+        const look = () => text.includes(words) && resolve();
+        for (const stream of [child.stdout, child.stderr]) stream.on('data', look);
+        void exited.then((code) => reject(new Error(`"npm start" ended with ${code}:\n${text}`)));
+        look();
+      }),
+    stop: (signal = 'SIGTERM') => {
+      child.kill(signal);
+      return exited;
+    },
+  };
+}
+
 /** Starts the product as a person does, on a folder and port of its own, and waits for it to announce itself. */
 export async function startSelvedge(options: StartOptions = {}): Promise<RunningSelvedge> {
   const dataDir = options.dataDir ?? (await newDataFolder());
   const port = options.port ?? (await freePort());
-  const { DATABASE_URL, SMTP_URL, NEXTAUTH_URL, NEXTAUTH_SECRET, MIGRATION_DATABASE_URL, ...env } = process.env;
-  void [DATABASE_URL, SMTP_URL, NEXTAUTH_URL, NEXTAUTH_SECRET, MIGRATION_DATABASE_URL];
-  const child = spawn(process.execPath, ['lib/ops/bootstrap.mjs', 'start'], {
-    cwd: ROOT,
-    env: { ...env, SELVEDGE_DATA_DIR: dataDir, PORT: String(port) },
-    stdio: ['ignore', 'pipe', 'pipe'],
-  });
-  let printed = '';
-  const exited = new Promise<number | null>((resolve) => child.once('exit', resolve));
-  await new Promise<void>((resolve, reject) => {
-    for (const stream of [child.stdout, child.stderr]) {
-      stream.on('data', (text: Buffer) => {
-        printed += text.toString();
-        if (printed.includes('Ctrl-C stops everything.')) resolve();
-      });
-    }
-    child.once('error', reject);
-    child.once('exit', (code) => reject(new Error(`"npm start" ended with ${code}:\n${printed}`)));
-  });
-  return {
-    address: `http://127.0.0.1:${port}`,
-    dataDir,
-    pid: child.pid!,
-    printed: () => printed,
-    stop: (signal = 'SIGTERM') => stop(child, exited, signal),
-  };
-}
-
-async function stop(child: ChildProcess, exited: Promise<number | null>, signal: NodeJS.Signals): Promise<number | null> {
-  child.kill(signal);
-  return exited;
+  const { pid, printed, prints, stop } = spawnSelvedge({ dataDir, port });
+  await prints('Ctrl-C stops everything.');
+  return { address: `http://127.0.0.1:${port}`, dataDir, pid, printed, stop };
 }
 
 export interface DemoAccount {
