@@ -1,6 +1,7 @@
 'use client';
 
 import Link from 'next/link';
+import type { ReactNode } from 'react';
 import { DataTable, type DataColumn } from '@/components/ui/data-table';
 import { Figure } from '@/components/ui/figure';
 import { VERDICT_WORDS } from '@/lib/presentation/verdict-words';
@@ -60,13 +61,14 @@ const COLUMNS: readonly DataColumn<BookingRow>[] = [
   },
 ];
 
-export function BookingTable({ rows }: { rows: readonly BookingRow[] }) {
+export function BookingTable({ rows, days }: { rows: readonly BookingRow[]; days: ReactNode }) {
   return (
     <DataTable
       caption="Bookings"
       columns={COLUMNS}
       rows={rows}
       searchLabel="Find in these bookings"
+      aside={days}
       empty="No booking matches. Change the search, or widen the days above."
     />
   );

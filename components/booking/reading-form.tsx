@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import { useWatch } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
 import { Form, FormNumber, FormSelect, FormText } from '@/components/ui/form';
@@ -79,11 +79,13 @@ export function ReadingForm({
   const router = useRouter();
   const { say } = useStatus();
   const [open, setOpen] = useState(true);
+  const saved = useRef<number | null>(null);
   const state = useVersionedForm<Values, unknown>({
     schema: sizeReadingInput,
     initial: { quantity: 'breadth-mm', source: 'measured', spread: 0, takenOn: today },
     version: 0,
     save: async (_version, values) => {
+      saved.current = values.value;
       const result = await add([values]);
       if (result.ok || !result.error.fields) return result;
       // The service names its fields in the list it was given.
@@ -92,8 +94,9 @@ export function ReadingForm({
     },
     onSaved: () => {
       say('The reading was added. Earlier ones stay.');
-      const { source, takenOn, quantity } = state.form.getValues();
-      state.form.reset({ quantity, source, takenOn, spread: 0 });
+      // What was typed while the answer was on its way belongs to the next reading.
+      const { value, ...rest } = state.form.getValues();
+      state.form.reset({ ...rest, ...(value === saved.current ? { spread: 0, value: undefined } : { value }) });
       router.refresh();
     },
   });

@@ -70,7 +70,7 @@ export function slicesSummary(draft: Draft): string {
 
 export function timingSummary(draft: Draft): string {
   const train = draft.echoTrainLength && draft.echoTrainLength > 1 ? `, train of ${say(draft.echoTrainLength)}` : '';
-  return `TR ${say(draft.trMs)} ms, TE ${say(draft.teMs)} ms, ${say(draft.averages)} averages${train}`;
+  return `TR ${say(draft.trMs)} ms, TE ${say(draft.teMs)} ms, ${say(draft.averages)} ${draft.averages === 1 ? 'average' : 'averages'}${train}`;
 }
 
 export function breathingSummary(draft: Draft): string {

@@ -33,7 +33,7 @@ export function KindGroup({ at, refused }: GroupProps) {
   const axes = axesOfPlane(sequence.plane);
   const keys = ['name', 'family', 'plane', 'phaseAxis', 'trajectory', 'coil'];
   return (
-    <Panel level={3} title="What it is" collapsible summary={kindSummary(sequence)} open={refused(keys) || undefined}>
+    <Panel level={4} title="What it is" collapsible summary={kindSummary(sequence)} open={refused(keys) || undefined}>
       <div className={GRID}>
         <FormText name={`${at}.name`} label="Name" hint="As the worklist or the team says it" required />
         <FormSelect
@@ -91,7 +91,7 @@ export function WindowGroup({ at, refused }: GroupProps) {
   const centre = vec3Schema('FOV centre');
   return (
     <Panel
-      level={3}
+      level={4}
       title="Window and lines"
       collapsible
       summary={windowSummary(sequence)}
@@ -130,7 +130,7 @@ export function SlicesGroup({ at, refused }: GroupProps) {
   const slab = familyFields(sequence.family).slab;
   return (
     <Panel
-      level={3}
+      level={4}
       title={slab ? 'Slab' : 'Slices'}
       collapsible
       defaultOpen={false}

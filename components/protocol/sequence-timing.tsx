@@ -21,7 +21,7 @@ export function TimingGroup({ at, refused }: GroupProps) {
   const singleShot = sequence.family === 'single-shot-echo-train';
   return (
     <Panel
-      level={3}
+      level={4}
       title="Timing and breathing"
       collapsible
       defaultOpen={false}
@@ -92,7 +92,7 @@ export function SavingGroup({ at, refused }: GroupProps) {
   const { slab } = familyFields(sequence.family);
   return (
     <Panel
-      level={3}
+      level={4}
       title="Acceleration and partial Fourier"
       collapsible
       defaultOpen={false}
@@ -129,7 +129,7 @@ export function PresaturationGroup({ at, refused }: GroupProps) {
   const { fields, append, remove } = useFieldArray({ control, name: `${at}.presaturation` });
   return (
     <Panel
-      level={3}
+      level={4}
       title="Presaturation bands"
       collapsible
       defaultOpen={false}

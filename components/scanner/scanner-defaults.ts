@@ -18,6 +18,8 @@ export const NEW_SCANNER: DefaultValues<ScannerForm> = {
     respiratoryWindow: 0.4,
     limits: {
       fovMinMm: 50,
+      // Three empty fields, each with its own message, instead of one missing list.
+      usableFovMm: [null, null, null] as never,
       matrixMax: 512,
       acquiredLinesMax: 1024,
       phaseOversamplingMaxPct: 100,

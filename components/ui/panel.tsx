@@ -18,7 +18,7 @@ export interface PanelProps {
   onOpenChange?: (open: boolean) => void;
   /** Small capitals on cloth (bench) or a plain heading on paper (forms). */
   tone?: 'bench' | 'paper';
-  level?: 2 | 3;
+  level?: 2 | 3 | 4;
   className?: string;
   id?: string;
 }
@@ -29,12 +29,15 @@ export function Panel(props: PanelProps) {
   const [ownOpen, setOwnOpen] = useState(props.defaultOpen ?? true);
   const open = !collapsible || (props.open ?? ownOpen);
   const contentId = useId();
-  const Heading = level === 2 ? 'h2' : 'h3';
+  const Heading = `h${level}` as const;
   const toggle = () => {
     setOwnOpen(!open);
     props.onOpenChange?.(!open);
   };
-  const heading = tone === 'bench' ? 'text-sm font-semibold tracking-wider uppercase' : 'text-lg font-semibold';
+  const heading =
+    tone === 'bench'
+      ? 'text-sm font-semibold tracking-wider uppercase'
+      : cx('font-semibold', level === 4 ? 'text-base' : 'text-lg');
   return (
     <section
       id={id}

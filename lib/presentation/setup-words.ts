@@ -23,10 +23,10 @@ export const SLICE_OVERSAMPLING_FORM_WORDS: Readonly<Record<SliceOversamplingFor
 };
 
 export const UNFOLDING_WORDS: Readonly<Record<Unfolding, string>> = {
-  unknown: 'not known: the cautious rule is used and said',
+  unknown: 'not known (cautious rule)',
   'k-space-self-calibrating': 'in k-space, self-calibrating',
-  'image-domain-grid-ends': 'in the image, the grid ends at the acquired width',
-  'image-domain-beyond': 'in the image, tissue beyond the acquired width is solved for',
+  'image-domain-grid-ends': 'in the image, grid ends at the acquired width',
+  'image-domain-beyond': 'in the image, also beyond the acquired width',
 };
 
 export const TRAJECTORY_WORDS: Readonly<Record<Trajectory, string>> = {

@@ -28,16 +28,19 @@ export default async function BookingsPage({ searchParams }: Props) {
       Add a booking
     </LinkButton>
   );
+  const days = <DayRange from={from} to={to} />;
   return (
     <PageBody>
       <PageHeader title="Bookings" lead="Under accession numbers; no names, no dates of birth." actions={add} />
-      <DayRange from={from} to={to} />
       {page.bookings.length === 0 ? (
-        <EmptyState title="No bookings on these days" action={add}>
-          Choose other days above{mayAdd ? ', or add one' : ''}.
-        </EmptyState>
+        <div className="space-y-4">
+          {days}
+          <EmptyState title="No bookings on these days" action={add}>
+            Choose other days above{mayAdd ? ', or add one' : ''}.
+          </EmptyState>
+        </div>
       ) : (
-        <BookingTable rows={page.bookings.map(toBookingRow)} />
+        <BookingTable rows={page.bookings.map(toBookingRow)} days={days} />
       )}
       {page.next && (
         <p className="mt-4">

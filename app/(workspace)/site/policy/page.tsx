@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { PolicyForm } from '@/components/site-policy/policy-form';
 import { policyHistory, toPolicyForm } from '@/components/site-policy/to-policy-form';
+import { ReadOnlyNote } from '@/components/site/read-only-note';
 import { Notice } from '@/components/ui/notice';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { VersionHistory } from '@/components/ui/version-history';
@@ -44,6 +45,7 @@ export default async function PolicyPage({ searchParams }: { searchParams: Promi
           Plans that rest on it still read it. It cannot be changed.
         </Notice>
       )}
+      {!mayEdit && <ReadOnlyNote />}
       <PolicyForm
         key={shown.version}
         stored={toPolicyForm(shown)}

@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { ProtocolForm } from '@/components/protocol/protocol-form';
 import { protocolHistory, toProtocolForm } from '@/components/protocol/to-protocol-form';
 import { ArchiveButton } from '@/components/ui/archive-button';
+import { ReadOnlyNote } from '@/components/site/read-only-note';
 import { Notice } from '@/components/ui/notice';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { VersionHistory } from '@/components/ui/version-history';
@@ -55,6 +56,7 @@ export default async function ProtocolPage({ params, searchParams }: Props) {
           Plans that rest on it still read it. It cannot be changed.
         </Notice>
       )}
+      {!mayEdit && <ReadOnlyNote />}
       <ProtocolForm
         key={shown.version}
         stored={toProtocolForm(shown)}

@@ -3,6 +3,7 @@ import { ScannerForm } from '@/components/scanner/scanner-form';
 import { scannerHistory } from '@/components/scanner/scanner-history';
 import { toScannerForm } from '@/components/scanner/to-scanner-form';
 import { ArchiveButton } from '@/components/ui/archive-button';
+import { ReadOnlyNote } from '@/components/site/read-only-note';
 import { Notice } from '@/components/ui/notice';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { VersionHistory } from '@/components/ui/version-history';
@@ -56,6 +57,7 @@ export default async function ScannerPage({ params, searchParams }: Props) {
           Plans that rest on it still read it. It cannot be changed.
         </Notice>
       )}
+      {!mayEdit && <ReadOnlyNote />}
       <ScannerForm
         key={shown.version}
         stored={toScannerForm(shown)}
