@@ -329,18 +329,33 @@ describe('triggered', () => {
     expect(time(triggered({ averages: 2 }), breathing(4.2, 0)).scanS).toBeCloseTo(378, 9);
   });
   it('gives the range that the breath’s spread allows, with its jumps', () => {
-    const { scanRangeS } = time(triggered(), breathing(4.2, 0.5));
-    const p = triggered();
-    let low = Number.POSITIVE_INFINITY;
-    let high = 0;
-    // Brute force; 1e-4 s of breath times 45 triggers is 4.5 ms of scan.
-    for (let b = 3.7; b <= 4.7 + 1e-9; b += 1e-4) {
-      const scan = b * 15 * Math.ceil(30 / Math.floor((0.4 * b * 1000) / p.sliceTimeMs));
-      low = Math.min(low, scan);
-      high = Math.max(high, scan);
+    // At 4.225 s a 13th slice fits, which saves 25 slices a batch; 12 and 30 slices have no jump within the spread.
+    for (const slices of [12, 25, 30, 40, 47]) {
+      const p = triggered({ slices: stackOf(slices, 5) });
+      const { scanRangeS } = time(p, breathing(4.2, 0.5));
+      let low = Number.POSITIVE_INFINITY;
+      let high = 0;
+      // Brute force; 1e-4 s of breath times 60 triggers is 6 ms of scan.
+      for (let b = 3.7; b <= 4.7 + 1e-9; b += 1e-4) {
+        const scan = b * 15 * Math.ceil(slices / Math.floor((0.4 * b * 1000) / p.sliceTimeMs + 1e-9));
+        low = Math.min(low, scan);
+        high = Math.max(high, scan);
+      }
+      expect(Math.abs(scanRangeS![0] - low)).toBeLessThan(0.01);
+      expect(Math.abs(scanRangeS![1] - high)).toBeLessThan(0.01);
     }
-    expect(Math.abs(scanRangeS![0] - low)).toBeLessThan(0.005);
-    expect(Math.abs(scanRangeS![1] - high)).toBeLessThan(0.01);
+  });
+  it('leaves out breaths too short for one slice, and has no such end for a slab', () => {
+    // A 130 ms slice needs a breath of 0.325 s; 240/16 shots and one slice.
+    const one = time(triggered({ slices: stackOf(1, 5) }), breathing(1, 0.9)).scanRangeS!;
+    expect(one[0]).toBeCloseTo(0.325 * 15, 9);
+    expect(one[1]).toBeCloseTo(1.9 * 15, 9);
+    const slab = time(
+      triggered({ family: 'gradient-echo-3d', slices: slabOf(), segments: 40 }),
+      breathing(1, 0.5),
+    ).scanRangeS!;
+    expect(slab[0]).toBeCloseTo(20, 9);
+    expect(slab[1]).toBeCloseTo(60, 9);
   });
   it('is a single value without spread, and holds the plain value within the range otherwise', () => {
     fc.assert(
