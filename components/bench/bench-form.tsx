@@ -63,7 +63,9 @@ export function BenchForm<T extends FieldValues>({
   });
   const shown = useRef(value);
   const edit = useRef(onEdit);
-  edit.current = onEdit;
+  useEffect(() => {
+    edit.current = onEdit;
+  }, [onEdit]);
 
   useEffect(() => {
     const changed = changedLeaves(shown.current, value);

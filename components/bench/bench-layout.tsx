@@ -24,7 +24,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
     <div className="flex flex-col xl:h-[calc(100dvh-3.5rem-1px)] xl:min-h-[40rem]">
       <SequenceStrip>{props.children}</SequenceStrip>
       <SaveNotices plan={plan} />
-      <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[18.25rem_minmax(0,1fr)] xl:grid-cols-[18.25rem_minmax(0,1fr)_23.25rem]">
+      <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,1fr)_23.25rem]">
         <VerdictLine className="sticky top-0 z-20 border-b border-line bg-cloth lg:hidden" />
         <div className="flex min-h-0 min-w-0 flex-col lg:order-2">
           <VerdictLine className="max-lg:hidden" />

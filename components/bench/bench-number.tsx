@@ -13,6 +13,13 @@ import { useCommit } from './bench-form';
 /** Spread of a step key: one drag of a slider, or one run of typing in a field, is one undo. */
 let gestures = 0;
 
+/** Two numbers side by side in a bench column: the figures take what four digits and a point need. */
+export const PAIR_CLASS =
+  'grid grid-cols-2 gap-x-4 [&_input]:w-[4ch] [&_[data-field]>div]:gap-x-1 [&_label+div>span]:gap-1 [&_label+div>span]:px-0.5';
+
+/** Counts whose label is their unit: "Partitions 48". */
+const SAID_BY_LABEL: readonly string[] = ['lines', 'partitions'];
+
 interface Shown {
   readonly label: string;
   readonly className?: string;
@@ -91,7 +98,7 @@ export function BenchNumber({ path, schema, step, ...shown }: BenchNumberProps) 
           {...shown}
           name={path}
           value={field.value as number}
-          unit={facts.unit}
+          unit={facts.unit !== undefined && SAID_BY_LABEL.includes(facts.unit) ? undefined : facts.unit}
           min={facts.min ?? 0}
           max={facts.max ?? 1000}
           whole={facts.whole}

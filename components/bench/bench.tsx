@@ -1,17 +1,13 @@
 'use client';
 
-import { useEffect, useMemo, useState, type KeyboardEvent, type ReactNode } from 'react';
-import { assess } from '@/lib/physics';
+import { useEffect, useState, type KeyboardEvent, type ReactNode } from 'react';
 import type { KeepClear } from '@/lib/physics/model/keep-clear';
 import { BenchProvider } from './bench-context';
 import { BenchLayout } from './bench-layout';
-import { createLiveAssessor } from './live/live-assessor';
+import { createBench } from './create-bench';
 import type { Results } from './live/results';
-import { startEngineWorker, type RunningEngine } from './live/start-engine-worker';
 import type { PlanIdentity } from './saving/use-plan-saving';
 import type { BenchDocument, BenchSetting } from './state/bench-document';
-import { startBench } from './state/bench-state';
-import { createBenchStore } from './state/bench-store';
 import type { PlanBasis } from './state/plan-document';
 
 export interface BenchProps {
@@ -31,52 +27,13 @@ export interface BenchProps {
   readonly children: ReactNode;
 }
 
-const WORK_MEASURE = 'selvedge:assess';
-
-/** Kept as a performance measure for whoever observes it; not collected, or a long day would fill memory. */
-function measured(_id: string, work: () => void): void {
-  const start = performance.now();
-  work();
-  performance.measure(WORK_MEASURE, { start, end: performance.now() });
-  performance.clearMeasures(WORK_MEASURE);
-}
-
 export function Bench({ children, ...props }: BenchProps) {
   const [fault, setFault] = useState<unknown>(null);
   if (fault) throw fault;
 
-  const bench = useMemo(() => {
-    const store = createBenchStore(startBench(props.document, props.activeId, props.plan.version > 0 ? props.document : null));
-    let running: RunningEngine | null = null;
-    const engine = () => (running ??= startEngineWorker(setFault)).engine;
-    const live = createLiveAssessor({
-      store,
-      setting: props.setting,
-      initial: props.initial,
-      assess,
-      rank: (question) => engine().rank(question),
-      assessOthers: (questions) => engine().assessAll(questions.map(({ question }) => question)),
-      requestFrame: (callback) => requestAnimationFrame(callback),
-      cancelFrame: (handle) => cancelAnimationFrame(handle),
-      onWork: measured,
-      onFault: setFault,
-    });
-    const stopEngine = () => {
-      running?.stop();
-      running = null;
-    };
-    return { store, live, setting: props.setting, stopEngine };
-    // A bench lives as long as its page: another booking is another page, with its own key.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, []);
-
-  useEffect(() => {
-    const stop = bench.live.start();
-    return () => {
-      stop();
-      bench.stopEngine();
-    };
-  }, [bench]);
+  // A bench lives as long as its page: another booking is another page, with its own key.
+  const [bench] = useState(() => createBench({ ...props, stored: props.plan.version > 0, onFault: setFault }));
+  useEffect(() => bench.run(), [bench]);
 
   const onKeyDown = (event: KeyboardEvent<HTMLElement>) => {
     const { store } = bench;

@@ -5,6 +5,7 @@ import { fromPixels, toPixels, type Fit } from '@/components/schematic/scene/sce
 import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { cx } from '@/components/ui/class-names';
 import { useBench } from './bench-context';
+import { usePlaced } from './use-placed';
 import { moveHandle, nudgeHandle, type BenchHandle } from './state/handles';
 
 const ARROWS: Readonly<Record<string, ScreenPoint>> = {
@@ -37,6 +38,7 @@ function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold
   const grab = useRef<{ offset: ScreenPoint; step: string } | null>(null);
   const keyStep = useRef('');
   const [x, y] = toPixels(fit, handle.at);
+  const placed = usePlaced<HTMLDivElement>(x, y);
 
   const pointAt = (event: PointerEvent<HTMLElement>): ScreenPoint => {
     const box = event.currentTarget.parentElement!.getBoundingClientRect();
@@ -83,6 +85,7 @@ function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold
   };
   return (
     <div
+      ref={placed}
       {...(slider ?? { role: 'button', 'aria-description': 'Arrow keys move it 1 mm, with Shift 10 mm' })}
       tabIndex={0}
       aria-label={slider ? handle.label : `${handle.label}, ${handle.figure}`}
@@ -96,7 +99,6 @@ function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold
         keyStep.current = '';
         store.dispatch({ type: 'settle' });
       }}
-      style={{ left: x, top: y }}
       className={cx('group absolute -m-3 size-6 touch-none rounded-sm outline-offset-0', cursor)}
     >
       <span className="figures pointer-events-none absolute top-5 left-4 z-10 hidden rounded bg-ink px-2 py-0.5 text-sm whitespace-nowrap text-paper group-hover:block group-focus:block">

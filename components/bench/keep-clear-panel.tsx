@@ -6,7 +6,7 @@ import { screenFrame, sidesOnScreen } from '@/components/schematic/scene/section
 import type { Side } from '@/lib/physics/model/axes';
 import type { KeepClear } from '@/lib/physics/model/keep-clear';
 import { useActiveSequence, useBench, useBenchState } from './bench-context';
-import { PlainNumber } from './bench-number';
+import { PAIR_CLASS, PlainNumber } from './bench-number';
 import { keepClearOf } from './state/bench-document';
 import { edgeOf, windowBox, withEdge } from './state/window-box';
 
@@ -46,7 +46,7 @@ export function KeepClearPanel({ preset }: { preset: KeepClear }) {
         }}
       />
       {area.kind === 'box' ? (
-        <div className="mt-2 grid grid-cols-2 gap-x-5">
+        <div className={`mt-2 ${PAIR_CLASS}`}>
           {sides.map((side) => (
             <PlainNumber
               key={side}

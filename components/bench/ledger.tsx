@@ -32,11 +32,11 @@ export function Ledger({ children }: { children?: ReactNode }) {
   const slice = sliceOversamplingSetting(now, scanner);
   const sliceNext = next && sliceOversamplingSetting(next, scanner);
   const adopted = sequence.adopted.at(-1);
-  const told = (a: typeof phase, b: typeof slice): string => (b ? `${a.value}, ${b.value}` : a.value);
+  const told = (a: typeof phase, b: typeof slice): string => (b ? `phase ${a.value}, slice ${b.value}` : a.value);
   const range = assessment && scanRangeFigure(after ?? assessment);
   return (
     <section aria-label="Ledger, now and tried" className="flex flex-wrap border-t border-line bg-paper xl:flex-nowrap">
-      <Cell name={remedy ? 'Ledger, now → tried' : 'Ledger'} className="lg:w-73 lg:flex-none">
+      <Cell name={remedy ? 'Ledger, now → tried' : 'Ledger'} className="lg:w-78 lg:flex-none">
         <span className="line-clamp-2 font-semibold">
           {remedy ? remedyTitle(remedy) : adopted ? adopted.sentence : 'As planned, nothing tried'}
         </span>

@@ -11,7 +11,7 @@ import { ARM_WORDS, isMeasured, SOURCE_WORDS } from '@/lib/presentation/anatomy-
 import { useBench, useBenchState } from './bench-context';
 import { BenchChoice, optionsOf } from './bench-choice';
 import { BenchForm, withLeaf } from './bench-form';
-import { BenchNumber } from './bench-number';
+import { BenchNumber, PAIR_CLASS } from './bench-number';
 import { withSource, withValue } from './state/reading-edit';
 
 const PAIRS: readonly (readonly [Side, Side])[] = [
@@ -54,7 +54,7 @@ export function PatientPanel() {
       aside={<HowGot patient={patient} />}
     >
       <BenchForm schema={patientSchema as never} value={patient} label="Patient" onEdit={onEdit}>
-        <div className="grid grid-cols-2 gap-x-5">
+        <div className={PAIR_CLASS}>
           {PAIRS.flat().map((side) => (
             <BenchNumber
               key={side}

@@ -2,10 +2,12 @@
 
 import { centroidOf } from '@/components/schematic/scene/rings';
 import { toPixels, type Fit } from '@/components/schematic/scene/scene';
+import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { ringOnScreen } from '@/components/schematic/scene/section-scene';
 import type { Prescription } from '@/lib/physics/model/prescription';
 import type { SectionDrawing } from '@/lib/physics/section/section-drawing';
 import { describeGhost, describePiece } from '@/lib/presentation/describe-section';
+import { usePlaced } from './use-placed';
 
 /** Landed pieces can be focused, so that the thread to where they come from is not only for a mouse. */
 export function PieceOverlay({
@@ -26,21 +28,32 @@ export function PieceOverlay({
   ];
   return pieces.map(({ name, landed, inKeepClear, words }) => {
     const at = centroidOf((inKeepClear.length > 0 ? inKeepClear : landed).map(toRing));
-    if (!at) return null;
-    const [x, y] = toPixels(fit, at);
-    return (
-      <button
-        key={name}
-        type="button"
-        data-piece={name}
-        aria-label={words}
-        onFocus={() => onFocus(name)}
-        onBlur={() => onFocus(undefined)}
-        onPointerEnter={() => onFocus(name)}
-        onPointerLeave={() => onFocus(undefined)}
-        style={{ left: x, top: y }}
-        className="absolute -m-3 size-6 rounded-full"
-      />
-    );
+    return at && <PieceButton key={name} name={name} words={words} at={toPixels(fit, at)} onFocus={onFocus} />;
   });
+}
+
+function PieceButton({
+  name,
+  words,
+  at: [x, y],
+  onFocus,
+}: {
+  name: string;
+  words: string;
+  at: ScreenPoint;
+  onFocus: (name: string | undefined) => void;
+}) {
+  return (
+    <button
+      ref={usePlaced<HTMLButtonElement>(x, y)}
+      type="button"
+      data-piece={name}
+      aria-label={words}
+      onFocus={() => onFocus(name)}
+      onBlur={() => onFocus(undefined)}
+      onPointerEnter={() => onFocus(name)}
+      onPointerLeave={() => onFocus(undefined)}
+      className="absolute -m-3 size-6 rounded-full"
+    />
+  );
 }

@@ -12,7 +12,7 @@ import { phaseOversamplingSetting, sliceOversamplingSetting } from '@/lib/presen
 import { formatPercent } from '@/lib/presentation/percent';
 import { useBench, useBenchState } from './bench-context';
 import { BenchChoice, optionsOf } from './bench-choice';
-import { BenchNumber, PlainNumber } from './bench-number';
+import { BenchNumber, PAIR_CLASS, PlainNumber } from './bench-number';
 import {
   percentPhaseFov,
   percentSampling,
@@ -36,7 +36,7 @@ function Group({ title, summary, children, open, onOpenChange }: Omit<GroupProps
   );
 }
 
-const Pair = ({ children }: { children: ReactNode }) => <div className="grid grid-cols-2 gap-x-5">{children}</div>;
+const Pair = ({ children }: { children: ReactNode }) => <div className={PAIR_CLASS}>{children}</div>;
 
 function usePatch() {
   const { store } = useBench();
@@ -98,7 +98,7 @@ export function WindowGroup({ prescription: p, ...panel }: GroupProps) {
   return (
     <Group
       title="Window"
-      summary={`${AXIS_WORDS[p.phaseAxis]} ${Math.round(p.fovPhaseMm)} × ${AXIS_WORDS[readout]} ${Math.round(p.fovReadoutMm)} mm, ${p.linesAcrossFov} lines`}
+      summary={`${Math.round(p.fovPhaseMm)} × ${Math.round(p.fovReadoutMm)} mm, ${AXIS_WORDS[p.phaseAxis]}`}
       {...panel}
     >
       <Pair>
@@ -121,9 +121,10 @@ export function WindowGroup({ prescription: p, ...panel }: GroupProps) {
         <BenchChoice<PatientAxis> path="phaseAxis" label="Phase direction" options={optionsOf(phaseAxes)} />
         <BenchChoice<Plane> path="plane" label="Plane" options={optionsOf(PLANE_WORDS)} />
       </div>
-      <div className="mt-1 grid grid-cols-3 gap-x-4">
+      <p className="mt-2 text-sm text-ink-soft">Centre from the origin, mm</p>
+      <div className="grid grid-cols-3 gap-x-3 [&_input]:w-[3.5ch] [&_label+div]:-ml-2 [&_span[aria-hidden]]:hidden">
         {(['L', 'P', 'S'] as const).map((letter, i) => (
-          <BenchNumber key={letter} path={`centreMm.${i}`} schema={prescriptionShape.centreMm.def.items[i as 0]} label={`C ${letter}`} sliderMin={-200} sliderMax={200} />
+          <BenchNumber key={letter} path={`centreMm.${i}`} schema={prescriptionShape.centreMm.def.items[i as 0]} label={letter} sliderMin={-200} sliderMax={200} />
         ))}
       </div>
       <Pair>

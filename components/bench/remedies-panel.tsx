@@ -52,7 +52,7 @@ function RankedList({ ranking }: { ranking: Ranking }) {
   return (
     <>
       {filters && (
-        <div className="flex flex-wrap gap-x-5 border-b border-line px-4 py-1">
+        <div className="flex flex-wrap gap-x-5 border-b border-line px-4 py-1 text-sm">
           <Checkbox label="Keep the breath-hold" checked={keepHold} onChange={(event) => setKeepHold(event.target.checked)} />
           <Checkbox label="Keep the voxel" checked={keepVoxel} onChange={(event) => setKeepVoxel(event.target.checked)} />
         </div>

@@ -6,7 +6,7 @@ import { Figure } from '@/components/ui/figure';
 import { useStatus } from '@/components/ui/status';
 import type { Assessment } from '@/lib/physics/model/assessment';
 import type { Remedy } from '@/lib/physics/model/remedy';
-import { foldFigure, scanTimeFigure, voxelFigure } from '@/lib/presentation/assessment-figures';
+import { foldFigure, scanTimeFigure, voxelChange } from '@/lib/presentation/assessment-figures';
 import { costBreakdown, formatCost } from '@/lib/presentation/cost-words';
 import { formatSignedPercent } from '@/lib/presentation/percent';
 import { remedyChange, remedyTitle } from '@/lib/presentation/remedy-words';
@@ -29,6 +29,7 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
   const { id, prescription: present } = useActiveSequence();
   const title = remedyTitle(remedy);
   const after = remedy.assessment;
+  const voxel = voxelChange(now, after);
   // For the moment in which a newer ranking is on its way, a remedy would write an older prescription back.
   const isPresent = () => {
     const result = live.read()[id];
@@ -72,7 +73,7 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
       <dl className="mt-1.5 grid grid-cols-[1.35fr_0.8fr_1.25fr] gap-x-3 text-sm">
         <Cell name="time" now={scanTimeFigure(now, present)} then={scanTimeFigure(after, remedy.prescription)} />
         <Cell name="SNR" now={now.detail && after.detail ? formatSignedPercent(now.detail.snr, after.detail.snr) : '—'} />
-        <Cell name="voxel" now={voxelFigure(now)} then={voxelFigure(after)} same="same" />
+        <Cell name="voxel" now={voxel?.now ?? 'same'} then={voxel?.tried} />
       </dl>
       {after.verdict !== 'no-fold-expected' && (
         <p className="mt-1 flex flex-wrap gap-x-2 text-sm">
@@ -80,7 +81,7 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
           <span className="figures text-ink-soft">{foldFigure(after)}</span>
         </p>
       )}
-      {remedy.sideEffects.length > 0 && <p className="mt-1 text-sm text-ink-soft">{remedy.sideEffects.join(' ')}</p>}
+      {remedy.sideEffects.length > 0 && <p className="mt-1 text-sm text-ink-soft">{remedy.sideEffects.map((effect) => effect.replace(/\.?$/, '.')).join(' ')}</p>}
       <CostBar terms={remedy.terms} scale={scale} className="mt-2" />
       <div className="mt-2 flex items-center justify-between gap-3">
         <Button
@@ -99,12 +100,12 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
 }
 
 /** Now → then, or one word when nothing changes. */
-function Cell({ name, now, then, same }: { name: string; now: string; then?: string; same?: string }) {
+function Cell({ name, now, then }: { name: string; now: string; then?: string }) {
   const unchanged = then === undefined || then === now;
   return (
     <div className="min-w-0">
       <dt className="text-ink-soft">{name}</dt>
-      <dd>{unchanged ? <Figure value={same ?? now} /> : <Figure value={now} tried={then} className="max-w-full whitespace-normal" />}</dd>
+      <dd>{unchanged ? <Figure value={now} /> : <Figure value={now} tried={then} className="max-w-full whitespace-normal" />}</dd>
     </div>
   );
 }

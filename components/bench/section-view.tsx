@@ -6,6 +6,7 @@ import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
 import { fitScene, fromPixels, type Fit } from '@/components/schematic/scene/scene';
 import { screenFrame } from '@/components/schematic/scene/section-frame';
 import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
+import { geometryCase } from '@/lib/physics/assess/assess';
 import { drawSection } from '@/lib/physics/section/draw-section';
 import type { Case } from '@/lib/physics/model/case';
 import { describeSection, describePlace } from '@/lib/presentation/describe-section';
@@ -28,7 +29,8 @@ export function SectionView() {
   const place = useRef<HTMLParagraphElement>(null);
   const size = useBoxSize(box);
   const [focus, setFocus] = useState<string | undefined>(undefined);
-  const [held, setHeld] = useState<string | null>(null);
+  // The picture keeps its scale while a handle is held: what is dragged must stay under the pointer.
+  const [heldFit, setHeldFit] = useState<Fit | null>(null);
   const slice = shownSlice(question.prescription, chosen);
 
   const now = useMemo(() => drawn(question, slice.offsetMm), [question, slice.offsetMm]);
@@ -38,10 +40,7 @@ export function SectionView() {
   }, [trial, question, sequence.id, slice.offsetMm]);
 
   const fitNow = useMemo(() => (size && now ? fitScene(sectionBounds(now, tried), size.widthPx, size.heightPx) : null), [size, now, tried]);
-  // The picture keeps its scale while a handle is held: what is dragged must stay under the pointer.
-  const heldFit = useRef<Fit | null>(null);
-  if (held === null) heldFit.current = fitNow;
-  const fit = heldFit.current ?? fitNow;
+  const fit = heldFit ?? fitNow;
 
   const scene = useMemo(() => {
     if (!fit || !now) return null;
@@ -70,9 +69,9 @@ export function SectionView() {
       >
         {scene && fit && size && (
           <>
-            <SceneCanvas name="section" scene={scene} fit={fit} {...size} still={held !== null} onHover={(name) => setFocus(name ?? undefined)} />
+            <SceneCanvas name="section" scene={scene} fit={fit} {...size} still={heldFit !== null} onHover={(name) => setFocus(name ?? undefined)} />
             <PieceOverlay drawing={shown!.drawing} prescription={question.prescription} fit={fit} onFocus={setFocus} />
-            <HandleOverlay handles={handles} fit={fit} onHold={setHeld} />
+            <HandleOverlay handles={handles} fit={fit} onHold={(id) => setHeldFit(id === null ? null : fit)} />
             <p ref={place} aria-hidden="true" className="figures pointer-events-none absolute top-1 left-2 text-sm text-ink-soft" />
           </>
         )}
@@ -95,7 +94,8 @@ export function SectionView() {
 /** What the engine refuses to assess cannot be drawn either; the refusal is told beside the verdict. */
 function drawn(question: Case, sliceOffsetMm: number): DrawnSection | undefined {
   try {
-    return { question, drawing: drawSection(question, { sliceOffsetMm }) };
+    const drawing = drawSection(geometryCase(question), { sliceOffsetMm });
+    return { question, drawing, asGiven: drawSection(question, { sliceOffsetMm }).tissue };
   } catch (error) {
     if (error instanceof Error && error.name === 'DomainError') return undefined;
     throw error;

@@ -14,7 +14,7 @@ import { VerdictWords } from './verdict-words';
 export function SequenceStrip({ children }: { children: ReactNode }) {
   const ids = useBenchState((state) => state.document.sequences);
   return (
-    <div className="border-b border-line bg-paper lg:grid lg:grid-cols-[18.25rem_minmax(0,1fr)]">
+    <div className="border-b border-line bg-paper lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)]">
       <div className="border-line px-4 py-3 max-lg:border-b lg:border-r">{children}</div>
       <ul
         aria-label="Sequences"

@@ -14,7 +14,7 @@ export function VerdictLine({ className }: { className?: string }) {
   return (
     <div className={cx('px-5 py-3', className)}>
       <div aria-live="polite" aria-atomic="true">
-        <p className="text-lg leading-snug">
+        <p className="text-lg leading-snug lg:min-h-[2lh]">
           {assessment && (
             <>
               <strong className={cx('font-bold', VERDICT_COLOUR[assessment.verdict])} data-verdict={assessment.verdict}>
@@ -25,14 +25,17 @@ export function VerdictLine({ className }: { className?: string }) {
           )}
           {refusal && <strong className="font-bold">A value needs another look: {refusal}</strong>}
         </p>
-        {tried && (
-          <p className="text-sm text-indigo">
-            With what is tried: <strong>{VERDICT_WORDS[tried.verdict]}</strong>
-          </p>
-        )}
       </div>
       <div className="flex items-start justify-between gap-6 text-sm text-ink-soft">
-        <p className="max-sm:hidden">{more.map(({ text }) => text).join(' ')}</p>
+        <p aria-live="polite" className={cx(!tried && 'max-sm:hidden')}>
+          {tried ? (
+            <span className="text-indigo">
+              With what is tried: <strong>{VERDICT_WORDS[tried.verdict]}</strong>. Esc goes back.
+            </span>
+          ) : (
+            more.map(({ text }) => text).join(' ')
+          )}
+        </p>
         <p className="flex-none">sure at {formatPercent(question.policy.sureAt * 100, 1)}</p>
       </div>
       {assessment && assessment.assumptions.length > 0 && (

@@ -39,6 +39,16 @@ export function voxelFigure({ detail }: Assessment): string {
   return detail.voxelMm.map((side) => formatShort(side, 0.01)).join('×');
 }
 
+/** Only the sides that change, "1.25 → 1.34": three figures twice are more than a card has room for. */
+export function voxelChange(now: Assessment, after: Assessment): NowTried | null {
+  if (!now.detail || !after.detail) return null;
+  const sides = now.detail.voxelMm.map((side, i) => [formatShort(side, 0.01), formatShort(after.detail!.voxelMm[i] ?? side, 0.01)] as const);
+  const changed = sides.filter(([a, b]) => a !== b);
+  if (changed.length === 0) return null;
+  const once = new Map(changed.map(([a, b]) => [`${a}/${b}`, [a, b] as const]));
+  return { now: [...once.values()].map(([a]) => a).join('×'), tried: [...once.values()].map(([, b]) => b).join('×') };
+}
+
 /** Area under fold in the worst slice, or the number of contaminated partitions; "none" when there is none. */
 export function foldFigure({ fold, slab }: Assessment): string {
   const parts: string[] = [];

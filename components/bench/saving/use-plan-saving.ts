@@ -1,15 +1,16 @@
 'use client';
 
-import { useCallback, useEffect, useRef, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import type { PlanView } from '@/lib/schemas/plan';
 import { useBench } from '../bench-context';
+import type { BenchDocument } from '../state/bench-document';
 import { documentOfPlan, planInputOf, type PlanBasis } from '../state/plan-document';
-import { keptEditsKey, readKeptEdits, writeKeptEdits } from './kept-edits';
-import { getStoredPlan, putPlan, type Problem, type PutPlan } from './put-plan';
+import { keptEditsKey, readKeptEdits, writeKeptEdits, type KeptEdits } from './kept-edits';
+import { getStoredPlan, putPlan, type Problem, type PutPlan, type PutResult } from './put-plan';
 
 export interface PlanIdentity {
   readonly planId: string;
-  /** 0 before the first save. */
+  /** The version the bench rests on; 0 before the first save. */
   readonly version: number;
   readonly state: PlanView['state'] | null;
   readonly shortCode: string | null;
@@ -23,6 +24,7 @@ export type Saving =
   | { readonly kind: 'overtaken'; readonly theirs: PlanView };
 
 const RETRY_MS = [1000, 2000, 4000, 8000, 15000];
+const KEEP_AFTER_MS = 300;
 
 export interface PlanSaving {
   readonly identity: PlanIdentity;
@@ -34,72 +36,98 @@ export interface PlanSaving {
   readonly takeTheirs: () => void;
 }
 
+/** The plan that kept edits belong to: saving them must meet whatever was saved in between, never go round it. */
+export function identityOfKept(kept: KeptEdits, stored: PlanIdentity): PlanIdentity {
+  if (kept.planId === stored.planId) return { ...stored, version: Math.min(kept.version, stored.version) };
+  return stored.version > 0 ? { ...stored, version: 0 } : { ...stored, planId: kept.planId, version: kept.version };
+}
+
 export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: string): PlanSaving {
   const { store, live } = useBench();
   const [identity, setIdentity] = useState(first);
   const [saving, setSaving] = useState<Saving>({ kind: 'idle' });
   const [differences, setDifferences] = useState<PlanView['differences']>([]);
   const [restored, setRestored] = useState(false);
-  const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
-  const key = keptEditsKey(userId, basis.bookingId ?? `${basis.scannerId}/${basis.protocolId ?? ''}`);
   const known = useRef(identity);
-  known.current = identity;
+  const gone = useRef(false);
+  const key = keptEditsKey(userId, basis.bookingId ?? `${basis.scannerId}/${basis.protocolId ?? ''}`);
 
   useEffect(() => {
-    const kept = readKeptEdits(sessionStorage, key);
-    if (kept) {
-      store.dispatch({ type: 'replace-document', document: kept.document, saved: false });
-      if (kept.version <= known.current.version) setIdentity((now) => ({ ...now, planId: kept.planId }));
-      setRestored(true);
-    }
+    known.current = identity;
+  }, [identity]);
+
+  useEffect(() => {
+    gone.current = false;
+    return () => {
+      gone.current = true;
+    };
+  }, []);
+
+  useEffect(() => {
     let waiting: ReturnType<typeof setTimeout> | null = null;
+    let closed = false;
     const keep = (): void => {
       waiting = null;
-      const { document, saved } = store.read();
+      const { document, saved, past } = store.read();
+      const untouched = document === saved || (saved === null && past.length === 0);
       const { planId, version } = known.current;
-      const initial = saved === null && store.read().past.length === 0;
-      writeKeptEdits(sessionStorage, key, document === saved || initial ? null : { shape: 1, planId, version, document });
+      writeKeptEdits(sessionStorage, key, untouched ? null : { shape: 1, planId, version, document });
     };
+    // After the first paint: the page that came from the server is the one that hydrates.
+    queueMicrotask(() => {
+      const kept = closed ? null : readKeptEdits(sessionStorage, key);
+      if (!kept) return;
+      store.dispatch({ type: 'replace-document', document: kept.document, saved: false });
+      setIdentity((now) => identityOfKept(kept, now));
+      setRestored(true);
+    });
     const unsubscribe = store.subscribe(() => {
-      waiting ??= setTimeout(keep, 300);
+      waiting ??= setTimeout(keep, KEEP_AFTER_MS);
     });
     return () => {
+      closed = true;
       unsubscribe();
-      if (waiting !== null) {
-        clearTimeout(waiting);
-        keep();
-      }
+      if (waiting === null) return;
+      clearTimeout(waiting);
+      keep();
     };
   }, [key, store]);
 
-  useEffect(() => () => void (timer.current && clearTimeout(timer.current)), []);
+  const settle = async (result: Exclude<PutResult, { kind: 'unreached' }>, put: PutPlan, document: BenchDocument) => {
+    if (result.kind === 'saved') {
+      const { id, version, state, shortCode } = result.plan;
+      setIdentity({ planId: id, version, state, shortCode });
+      setDifferences(result.plan.differences);
+      setSaving({ kind: 'idle' });
+      setRestored(false);
+      store.dispatch({ type: 'mark-saved', document });
+      return;
+    }
+    const { problem } = result;
+    if (problem.code === 'conflict' && typeof problem.details?.currentVersion === 'number') {
+      const theirs = await getStoredPlan(put.id);
+      if (theirs) return setSaving({ kind: 'overtaken', theirs });
+    }
+    setSaving({ kind: 'refused', problem });
+  };
 
-  const attempt = useCallback(
-    async (put: PutPlan, document: ReturnType<typeof store.read>['document'], count: number): Promise<void> => {
-      setSaving({ kind: 'saving', attempt: count });
+  const save = async (expectedVersion: number): Promise<void> => {
+    const { document } = store.read();
+    // The same key and body at every attempt: an answer lost on the way does not save a second version.
+    const put: PutPlan = {
+      id: identity.planId,
+      expectedVersion,
+      idempotencyKey: crypto.randomUUID(),
+      plan: planInputOf(document, basis, live.read()),
+    };
+    for (let attempt = 1; !gone.current; attempt += 1) {
+      setSaving({ kind: 'saving', attempt });
       const result = await putPlan(put);
-      if (result.kind === 'saved') {
-        const { id, version, state, shortCode } = result.plan;
-        setIdentity({ planId: id, version, state, shortCode });
-        setDifferences(result.plan.differences);
-        setSaving({ kind: 'idle' });
-        setRestored(false);
-        store.dispatch({ type: 'mark-saved', document });
-        return;
-      }
-      if (result.kind === 'unreached') {
-        // The same key and body: an answer that was lost on the way does not save a second version.
-        timer.current = setTimeout(() => void attempt(put, document, count + 1), RETRY_MS[Math.min(count, RETRY_MS.length) - 1]);
-        return;
-      }
-      if (result.problem.code === 'conflict' && typeof result.problem.details?.currentVersion === 'number') {
-        const theirs = await getStoredPlan(put.id);
-        if (theirs) return setSaving({ kind: 'overtaken', theirs });
-      }
-      setSaving({ kind: 'refused', problem: result.problem });
-    },
-    [store],
-  );
+      if (result.kind !== 'unreached') return settle(result, put, document);
+      const pause = RETRY_MS[Math.min(attempt, RETRY_MS.length) - 1];
+      await new Promise((resolve) => setTimeout(resolve, pause));
+    }
+  };
 
   return {
     identity,
@@ -107,18 +135,7 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
     differences,
     restored,
     save(expectedVersion) {
-      if (saving.kind === 'saving') return;
-      const { document } = store.read();
-      void attempt(
-        {
-          id: identity.planId,
-          expectedVersion: expectedVersion ?? identity.version,
-          idempotencyKey: crypto.randomUUID(),
-          plan: planInputOf(document, basis, live.read()),
-        },
-        document,
-        1,
-      );
+      if (saving.kind !== 'saving') void save(expectedVersion ?? identity.version);
     },
     takeTheirs() {
       if (saving.kind !== 'overtaken') return;

@@ -129,6 +129,11 @@ export function TextShape({ node, fit, palette, family }: Painted<TextNode> & { 
       fontSize={size}
       fontStyle={node.size === 'letter' ? '650' : '500'}
       fill={palette(node.colour)}
+      // Words over hatching stay legible: a rim of the ground round each letter.
+      stroke={palette('cloth')}
+      strokeWidth={4}
+      lineJoin="round"
+      fillAfterStrokeEnabled
       wrap="none"
     />
   );

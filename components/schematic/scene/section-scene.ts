@@ -1,18 +1,23 @@
-import { SIDE_LETTERS } from '@/lib/presentation/anatomy-words';
 import type { Case } from '@/lib/physics/model/case';
-import type { PieceDrawing, SectionDrawing, SectionRing } from '@/lib/physics/section/section-drawing';
+import type { PieceDrawing, SectionDrawing, SectionRing, TissueDrawing } from '@/lib/physics/section/section-drawing';
 import { anatomySketch } from './anatomy';
 import { ghostNodes, landedNodes, sourceNodes, threadNodes } from './piece-nodes';
+import { letterNodes, scaleNodes } from './frame-nodes';
 import { boundsOf, joinBounds, rectangle } from './rings';
-import type { AreaNode, Bounds, LinesNode, MarkerNode, Ring, Scene, SceneNode, TextNode } from './scene';
-import { screenFrame, screenAxes, toScreen, type ScreenFrame, type ScreenPoint } from './section-frame';
+import type { AreaNode, Bounds, MarkerNode, Ring, Scene, SceneNode, Stroke, TextNode } from './scene';
+import { screenFrame, toScreen, type ScreenFrame, type ScreenPoint } from './section-frame';
 import { inWindow, windowFrame, type WindowFrame } from './window-frame';
-import { triedEdge, wovenEdge } from './woven-edge';
+import { OVERHANG_MM, triedEdge, wovenEdge } from './woven-edge';
 
-/** One question with the section the engine cut for it. */
+/**
+ * One question with the section the engine cut for it, at the sizes that the site's certainty asks for: the picture
+ * and the verdict are about the same body.
+ */
 export interface DrawnSection {
   readonly question: Case;
   readonly drawing: SectionDrawing;
+  /** The tissue at the sizes as given; apart from the above where a size is uncertain. */
+  readonly asGiven?: readonly TissueDrawing[];
 }
 
 export interface SectionSceneInput extends DrawnSection {
@@ -56,8 +61,8 @@ export function sectionScene(input: SectionSceneInput): Scene {
   const focused = focusedPiece(pieces, input.focus);
   const nodes: SceneNode[] = [
     { kind: 'area', name: 'picture', rings: [windowRing], fill: 'paper' },
-    ...tissueNodes(drawing, toRing),
-    ...sketchNodes(question, drawing, toRing),
+    ...tissueNodes(drawing, input.asGiven, toRing),
+    ...sketchNodes(question, input.asGiven ?? drawing.tissue, toRing),
     veil(bounds, windowRing),
     ...pieces.flatMap((piece) => sourceNodes(piece, pieceContext, piece === focused)),
     ...pieces.flatMap((piece) => landedNodes(piece, pieceContext, piece === focused)),
@@ -101,24 +106,47 @@ export function sectionBounds(now: DrawnSection, tried?: DrawnSection): Bounds {
   };
 }
 
-function tissueNodes(drawing: SectionDrawing, toRing: (ring: SectionRing) => Ring): AreaNode[] {
-  return drawing.tissue
+/** Filled to the size that is counted on; inside it the size as given, so that the band between them is seen. */
+function tissueNodes(
+  drawing: SectionDrawing,
+  asGiven: readonly TissueDrawing[] | undefined,
+  toRing: (ring: SectionRing) => Ring,
+): AreaNode[] {
+  const edgeOf = (tissue: TissueDrawing): Stroke['edge'] =>
+    tissue.placeUncertain ? 'dashed' : tissue.estimated ? 'dotted' : 'solid';
+  const outlines = drawing.tissue
     .filter(({ rings }) => rings.length > 0)
-    .map((tissue) => ({
+    .map((tissue): AreaNode => ({
       kind: 'area',
       name: tissue.name,
       rings: tissue.rings.map(toRing),
       fill: 'tissue-fat',
-      stroke: {
-        colour: 'ink-soft',
-        widthPx: 1.25,
-        edge: tissue.placeUncertain ? 'dashed' : tissue.estimated ? 'dotted' : 'solid',
-      },
+      stroke: { colour: 'ink-soft', widthPx: 1.25, edge: edgeOf(tissue) },
     }));
+  const given = (asGiven ?? [])
+    .filter((tissue) => tissue.rings.length > 0 && differs(tissue, drawing.tissue))
+    .map((tissue): AreaNode => ({
+      kind: 'area',
+      name: `${tissue.name}/as-given`,
+      rings: tissue.rings.map(toRing),
+      stroke: { colour: 'ink-soft', widthPx: 1, edge: 'solid', opacity: 0.45 },
+    }));
+  return [...outlines, ...given];
 }
 
-function sketchNodes(question: Case, drawing: SectionDrawing, toRing: (ring: SectionRing) => Ring): readonly AreaNode[] {
-  const trunk = drawing.tissue.find(({ kind }) => kind === 'trunk');
+/** Less than this apart, two outlines would only look like a thick line, mm. */
+const BAND_MM = 1;
+
+function differs(tissue: TissueDrawing, sure: readonly TissueDrawing[]): boolean {
+  const other = sure.find(({ name }) => name === tissue.name);
+  const a = boundsOf(tissue.rings);
+  const b = other ? boundsOf(other.rings) : null;
+  if (!a || !b) return true;
+  return (['left', 'right', 'top', 'bottom'] as const).some((edge) => Math.abs(a[edge] - b[edge]) > BAND_MM);
+}
+
+function sketchNodes(question: Case, tissue: readonly TissueDrawing[], toRing: (ring: SectionRing) => Ring): readonly AreaNode[] {
+  const trunk = tissue.find(({ kind }) => kind === 'trunk');
   const bounds = trunk ? boundsOf(trunk.rings.map(toRing)) : null;
   return bounds ? anatomySketch(question.patient.region, question.prescription.plane, bounds) : [];
 }
@@ -135,35 +163,48 @@ function veil(bounds: Bounds, window: Ring): AreaNode {
   return { kind: 'area', name: 'outside-the-picture', rings: [all, window], fill: 'cloth', fillOpacity: 0.6 };
 }
 
-function edgeNodes(
-  window: WindowFrame,
-  question: Case,
-  tried: SectionSceneInput['tried'],
-  mmPerPx: number,
-): SceneNode[] {
+function edgeNodes(window: WindowFrame, question: Case, tried: SectionSceneInput['tried'], mmPerPx: number): SceneNode[] {
   const edges: SceneNode[] = [...wovenEdge(window, -1, mmPerPx), ...wovenEdge(window, 1, mmPerPx)];
-  if (!tried) return edges;
+  if (!tried) return [...edges, edgeLabel('acquired-edge/label', `acquired ${widthWords(window)}`, window, 'ink-soft', 'now')];
   const next = windowFrame(tried.question.prescription);
-  if (tried.question.prescription.phaseAxis !== question.prescription.phaseAxis || next.halfPhaseMm !== window.halfPhaseMm || next.centre[0] !== window.centre[0] || next.centre[1] !== window.centre[1] || next.halfReadoutMm !== window.halfReadoutMm) {
+  if (!sameWindow(window, next)) {
     const ring = rectangle((a, b) => inWindow(next, a, b), next.halfPhaseMm, next.halfReadoutMm);
     edges.push({ kind: 'area', name: 'tried-fov', rings: [ring], stroke: { colour: 'indigo', widthPx: 1.5, edge: 'solid' } });
   }
-  edges.push(triedEdge(next, -1), triedEdge(next, 1));
-  const upper = (frame: WindowFrame): -1 | 1 => (frame.phase[1] > 0 || (frame.phase[1] === 0 && frame.phase[0] > 0) ? -1 : 1);
-  const label = (name: string, text: string, frame: WindowFrame, colour: 'indigo' | 'ink-soft', below: boolean): TextNode => ({
+  return [
+    ...edges,
+    triedEdge(next, -1),
+    triedEdge(next, 1),
+    edgeLabel('tried-edge/label', `tried ${widthWords(next)}`, next, 'indigo', 'tried'),
+    edgeLabel('acquired-edge/label', `now ${widthWords(window)}`, window, 'ink-soft', 'now'),
+  ];
+}
+
+const widthWords = (frame: WindowFrame): string => `${Math.round(2 * frame.halfAcquiredMm)} mm`;
+
+function sameWindow(a: WindowFrame, b: WindowFrame): boolean {
+  const figures = (frame: WindowFrame): number[] => [...frame.centre, ...frame.phase, frame.halfPhaseMm, frame.halfReadoutMm];
+  return figures(a).every((figure, i) => Math.abs(figure - figures(b)[i]!) < 1e-6);
+}
+
+/** Beside the end of the edge, off the picture: now below the line, what is tried above it. */
+function edgeLabel(name: string, text: string, frame: WindowFrame, colour: 'indigo' | 'ink-soft', which: 'now' | 'tried'): TextNode {
+  const across = Math.abs(frame.phase[1]) > Math.abs(frame.phase[0]);
+  const towards = across ? frame.phase[1] : frame.phase[0];
+  // The upper of two level edges, the right-hand one of two upright ones.
+  const sign = across === towards > 0 ? -1 : 1;
+  const readoutSign = across ? Math.sign(frame.readout[0]) : -Math.sign(frame.readout[1]);
+  const end = readoutSign * (frame.halfReadoutMm + OVERHANG_MM);
+  return {
     kind: 'text',
     name,
     text,
-    at: inWindow(frame, upper(frame) * frame.halfAcquiredMm, -frame.halfReadoutMm),
-    offsetPx: [8, below ? 16 : -8],
-    anchor: 'start',
+    at: inWindow(frame, sign * frame.halfAcquiredMm, end),
+    offsetPx: across ? [8, which === 'now' ? 13 : -5] : [0, which === 'now' ? -10 : -26],
+    anchor: across ? 'start' : 'middle',
     size: 'note',
     colour,
-  });
-  const mm = (frame: WindowFrame): string => `${Math.round(2 * frame.halfAcquiredMm)} mm`;
-  edges.push(label('tried-edge/label', `tried: acquired ${mm(next)}`, next, 'indigo', false));
-  edges.push(label('acquired-edge/label', `now: ${mm(window)}`, window, 'ink-soft', true));
-  return edges;
+  };
 }
 
 function areaNodes(drawing: SectionDrawing, question: Case, toRing: (ring: SectionRing) => Ring): SceneNode[] {
@@ -204,83 +245,6 @@ function areaNodes(drawing: SectionDrawing, question: Case, toRing: (ring: Secti
     colour: 'indigo',
   });
   return nodes;
-}
-
-function letterNodes(bounds: Bounds, question: Case, window: WindowFrame, mmPerPx: number): SceneNode[] {
-  const { sides } = screenFrame(question.prescription);
-  const [u, v] = window.centre;
-  const inset = 13 * mmPerPx;
-  const letter = (side: keyof typeof sides, at: ScreenPoint): TextNode => ({
-    kind: 'text',
-    name: `letter/${side}`,
-    text: SIDE_LETTERS[sides[side]],
-    at,
-    offsetPx: [0, 6],
-    anchor: 'middle',
-    size: 'letter',
-    colour: 'ink',
-  });
-  const down = question.prescription.phaseAxis === screenAxes(question.prescription.plane).vertical;
-  const corner: ScreenPoint = [bounds.left + 10 * mmPerPx, bounds.bottom - 10 * mmPerPx];
-  const length = 40 * mmPerPx;
-  const tip: ScreenPoint = down ? [corner[0], corner[1] - length] : [corner[0] + length, corner[1]];
-  const head = (at: ScreenPoint, sign: number): (readonly ScreenPoint[])[] => {
-    const a = 5 * mmPerPx;
-    return down
-      ? [[[at[0] - a, at[1] + sign * a], at, [at[0] + a, at[1] + sign * a]]]
-      : [[[at[0] - sign * a, at[1] - a], at, [at[0] - sign * a, at[1] + a]]];
-  };
-  const arrow: LinesNode = {
-    kind: 'lines',
-    name: 'phase-direction',
-    lines: [[corner, tip], ...head(tip, 1), ...head(corner, -1)],
-    stroke: { colour: 'ink', widthPx: 1.5, edge: 'solid' },
-  };
-  return [
-    letter('left', [bounds.left + inset, v]),
-    letter('right', [bounds.right - inset, v]),
-    letter('top', [u, bounds.top + inset]),
-    letter('bottom', [u, bounds.bottom - inset]),
-    arrow,
-    {
-      kind: 'text',
-      name: 'phase-direction/label',
-      text: 'phase',
-      at: down ? [corner[0], corner[1] - length / 2] : [tip[0], tip[1]],
-      offsetPx: down ? [12, 5] : [12, 5],
-      anchor: 'start',
-      size: 'note',
-      colour: 'ink-soft',
-    },
-  ];
-}
-
-function scaleNodes(bounds: Bounds, mmPerPx: number): SceneNode[] {
-  const right = bounds.right - 10 * mmPerPx;
-  const at = bounds.bottom - 10 * mmPerPx;
-  const tick = 5 * mmPerPx;
-  return [
-    {
-      kind: 'lines',
-      name: 'scale-bar',
-      lines: [
-        [[right - 100, at], [right, at]],
-        [[right - 100, at - tick], [right - 100, at + tick]],
-        [[right, at - tick], [right, at + tick]],
-      ],
-      stroke: { colour: 'ink', widthPx: 1.5, edge: 'solid' },
-    },
-    {
-      kind: 'text',
-      name: 'scale-bar/label',
-      text: '100 mm',
-      at: [right - 50, at],
-      offsetPx: [0, -8],
-      anchor: 'middle',
-      size: 'note',
-      colour: 'ink-soft',
-    },
-  ];
 }
 
 /** The hovered piece; else the one that matters most, so that its thread is drawn without asking. */

@@ -3,7 +3,7 @@ import type { ScreenPoint } from './section-frame';
 import { inWindow, type WindowFrame } from './window-frame';
 
 /** How far the edge runs past the displayed window along readout, mm. */
-const OVERHANG_MM = 26;
+export const OVERHANG_MM = 26;
 
 /**
  * The acquired edge: an ink double line with woven ticks, the outer line away from the picture. Distances that are

@@ -78,6 +78,10 @@ function SvgNode({ node, fit, ground }: { node: SceneNode; fit: Fit; ground: Gro
           fontSize={node.size === 'letter' ? 19 : 14}
           fontWeight={node.size === 'letter' ? 650 : 500}
           fill={colourOf(node.colour, ground)}
+          stroke={colourOf('cloth', ground)}
+          strokeWidth={4}
+          strokeLinejoin="round"
+          paintOrder="stroke"
         >
           {node.text}
         </text>
