@@ -24,16 +24,16 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
     <div className="flex flex-col xl:h-[calc(100dvh-3.5rem-1px)] xl:min-h-[40rem]">
       <SequenceStrip>{props.children}</SequenceStrip>
       <SaveNotices plan={plan} />
-      <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,1fr)_23.25rem]">
+      <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)] lg:max-xl:grid-rows-[auto_1fr] xl:grid-cols-[19.5rem_minmax(0,1fr)_23.25rem]">
         <VerdictLine className="sticky top-0 z-20 border-b border-line bg-cloth lg:hidden" />
         <div className="flex min-h-0 min-w-0 flex-col lg:order-2">
           <VerdictLine className="max-lg:hidden" />
           <PictureColumn />
         </div>
-        <div className="flex min-h-0 flex-col border-line bg-paper max-xl:border-t lg:col-span-2 lg:order-3 xl:col-span-1 xl:border-l">
+        <div className="flex min-h-0 flex-col border-line bg-paper max-xl:border-t lg:order-3 xl:border-l">
           <RemediesPanel />
         </div>
-        <div className="min-h-0 border-line max-lg:border-t lg:order-1 lg:border-r xl:overflow-y-auto">
+        <div className="min-h-0 border-line max-lg:border-t lg:order-1 lg:border-r lg:max-xl:row-span-2 xl:overflow-y-auto">
           <PatientPanel />
           <PrescriptionPanel source={props.protocolLabel} />
           <KeepClearPanel preset={props.keepClearPreset} />

@@ -65,7 +65,7 @@ export function SectionView() {
         aria-describedby="section-in-words"
         onPointerMove={onPointerMove}
         onPointerLeave={() => place.current && (place.current.textContent = '')}
-        className="relative h-96 min-h-80 flex-1 touch-none overflow-hidden select-none sm:h-[34rem] xl:h-auto"
+        className="relative h-80 touch-none overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-h-80 xl:flex-1"
       >
         {scene && fit && size && (
           <>

@@ -14,7 +14,7 @@ import { VerdictWords } from './verdict-words';
 export function SequenceStrip({ children }: { children: ReactNode }) {
   const ids = useBenchState((state) => state.document.sequences);
   return (
-    <div className="border-b border-line bg-paper lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)]">
+    <div className="border-b border-line bg-paper lg:grid lg:grid-cols-[12.5rem_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,1fr)]">
       <div className="border-line px-4 py-3 max-lg:border-b lg:border-r">{children}</div>
       <ul
         aria-label="Sequences"
@@ -46,7 +46,7 @@ function SequenceTab({ id }: { id: string }) {
   return (
     <li
       className={cx(
-        'min-w-44 flex-1 border-line max-sm:min-w-0 max-sm:border-b sm:not-last:border-r',
+        'min-w-36 flex-1 border-line max-sm:min-w-0 max-sm:border-b sm:not-last:border-r',
         active && 'bg-cloth shadow-[inset_0_-3px_0_var(--ink)] max-sm:shadow-[inset_3px_0_0_var(--ink)]',
       )}
     >
@@ -55,7 +55,7 @@ function SequenceTab({ id }: { id: string }) {
         aria-pressed={active}
         data-sequence={id}
         onClick={() => store.dispatch({ type: 'choose-sequence', id })}
-        className="flex h-full w-full flex-col items-start gap-0.5 px-4 py-3 text-left"
+        className="flex h-full w-full flex-col items-start gap-0.5 px-4 py-3 text-left max-xl:px-3"
       >
         <span className="font-semibold">{prescription.name}</span>
         <span className="text-sm text-ink-soft">{timeWords(prescription, assessment?.time)}</span>

@@ -49,7 +49,7 @@ export function SlabView({ slab }: { slab: SlabResult }) {
         role="group"
         aria-label="Slab, along the slice direction"
         aria-describedby="slab-in-words"
-        className="relative h-80 min-h-64 flex-1 overflow-hidden xl:h-auto"
+        className="relative h-80 overflow-hidden xl:h-auto xl:min-h-64 xl:flex-1"
       >
         {picture && size && <SceneCanvas name="slab" {...picture} {...size} still />}
       </div>

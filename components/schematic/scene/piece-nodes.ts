@@ -1,7 +1,8 @@
 import type { GhostDrawing, PieceDrawing, SectionRing } from '@/lib/physics/section/section-drawing';
 import type { Side } from '@/lib/physics/model/axes';
 import { centroidOf, hatch } from './rings';
-import type { AreaNode, LinesNode, Ring, SceneNode, Stroke } from './scene';
+import { anchorWithin } from './place-text';
+import type { AreaNode, Bounds, LinesNode, Ring, SceneNode, Stroke } from './scene';
 import type { ScreenPoint } from './section-frame';
 
 export interface PieceContext {
@@ -10,6 +11,7 @@ export interface PieceContext {
   readonly phase: ScreenPoint;
   readonly readout: ScreenPoint;
   readonly mmPerPx: number;
+  readonly bounds: Bounds;
 }
 
 const HATCH_PX = 8;
@@ -101,6 +103,9 @@ export function threadNodes(
     ? `from the ${side} side, place uncertain`
     : `from the ${side} side, ${Math.round(held.distanceMm)} mm away`;
   const down = shift[1] > 0;
+  const upright = Math.abs(shift[1]) >= Math.abs(shift[0]);
+  const text = ghost ? `ghost of tissue ${where}` : where;
+  const { anchor, sign } = anchorWithin(text, origin, context.bounds, context.mmPerPx);
   return [
     { kind: 'lines', name: 'thread', lines: [[origin, target]], stroke: { colour, widthPx: 1.5, edge: 'dotted' } },
     { kind: 'marker', name: 'thread/origin', at: origin, shape: 'ring', colour },
@@ -108,10 +113,10 @@ export function threadNodes(
     {
       kind: 'text',
       name: 'thread/label',
-      text: ghost ? `ghost of tissue ${where}` : where,
+      text,
       at: origin,
-      offsetPx: Math.abs(shift[1]) >= Math.abs(shift[0]) ? [10, down ? 22 : -14] : [0, -14],
-      anchor: Math.abs(shift[1]) >= Math.abs(shift[0]) ? 'start' : 'middle',
+      offsetPx: upright ? [10 * sign, down ? 22 : -14] : [0, -14],
+      anchor: upright || anchor !== 'start' ? anchor : 'middle',
       size: 'note',
       colour,
     },

@@ -3,6 +3,7 @@ import type { PieceDrawing, SectionDrawing, SectionRing, TissueDrawing } from '@
 import { anatomySketch } from './anatomy';
 import { ghostNodes, landedNodes, sourceNodes, threadNodes } from './piece-nodes';
 import { letterNodes, scaleNodes } from './frame-nodes';
+import { anchorWithin } from './place-text';
 import { boundsOf, joinBounds, rectangle } from './rings';
 import type { AreaNode, Bounds, MarkerNode, Ring, Scene, SceneNode, Stroke, TextNode } from './scene';
 import { screenFrame, toScreen, type ScreenFrame, type ScreenPoint } from './section-frame';
@@ -56,6 +57,7 @@ export function sectionScene(input: SectionSceneInput): Scene {
     phase: toScreen(screen, shown.drawing.frame.phase),
     readout: toScreen(screen, shown.drawing.frame.readout),
     mmPerPx,
+    bounds,
   };
   const pieces = shown.drawing.pieces;
   const focused = focusedPiece(pieces, input.focus);
@@ -67,7 +69,7 @@ export function sectionScene(input: SectionSceneInput): Scene {
     ...pieces.flatMap((piece) => sourceNodes(piece, pieceContext, piece === focused)),
     ...pieces.flatMap((piece) => landedNodes(piece, pieceContext, piece === focused)),
     ...shown.drawing.ghosts.flatMap((ghost) => ghostNodes(ghost, pieceContext, ghost.name === input.focus)),
-    ...edgeNodes(window, question, tried, mmPerPx),
+    ...edgeNodes(window, input),
     { kind: 'area', name: 'fov', rings: [windowRing], stroke: { colour: 'ink', widthPx: 1.75, edge: 'solid' } },
     ...areaNodes(drawing, question, toRing),
     ...threadNodes(focused, shown.drawing.ghosts.find(({ name }) => name === input.focus), pieceContext),
@@ -163,9 +165,10 @@ function veil(bounds: Bounds, window: Ring): AreaNode {
   return { kind: 'area', name: 'outside-the-picture', rings: [all, window], fill: 'cloth', fillOpacity: 0.6 };
 }
 
-function edgeNodes(window: WindowFrame, question: Case, tried: SectionSceneInput['tried'], mmPerPx: number): SceneNode[] {
+function edgeNodes(window: WindowFrame, input: SectionSceneInput): SceneNode[] {
+  const { tried, mmPerPx } = input;
   const edges: SceneNode[] = [...wovenEdge(window, -1, mmPerPx), ...wovenEdge(window, 1, mmPerPx)];
-  if (!tried) return [...edges, edgeLabel('acquired-edge/label', `acquired ${widthWords(window)}`, window, 'ink-soft', 'now')];
+  if (!tried) return [...edges, edgeLabel('acquired-edge/label', `acquired ${widthWords(window)}`, window, 'now', input)];
   const next = windowFrame(tried.question.prescription);
   if (!sameWindow(window, next)) {
     const ring = rectangle((a, b) => inWindow(next, a, b), next.halfPhaseMm, next.halfReadoutMm);
@@ -175,8 +178,8 @@ function edgeNodes(window: WindowFrame, question: Case, tried: SectionSceneInput
     ...edges,
     triedEdge(next, -1),
     triedEdge(next, 1),
-    edgeLabel('tried-edge/label', `tried ${widthWords(next)}`, next, 'indigo', 'tried'),
-    edgeLabel('acquired-edge/label', `now ${widthWords(window)}`, window, 'ink-soft', 'now'),
+    edgeLabel('tried-edge/label', `tried ${widthWords(next)}`, next, 'tried', input),
+    edgeLabel('acquired-edge/label', `now ${widthWords(window)}`, window, 'now', input),
   ];
 }
 
@@ -188,22 +191,26 @@ function sameWindow(a: WindowFrame, b: WindowFrame): boolean {
 }
 
 /** Beside the end of the edge, off the picture: now below the line, what is tried above it. */
-function edgeLabel(name: string, text: string, frame: WindowFrame, colour: 'indigo' | 'ink-soft', which: 'now' | 'tried'): TextNode {
+function edgeLabel(name: string, text: string, frame: WindowFrame, which: 'now' | 'tried', input: SectionSceneInput): TextNode {
   const across = Math.abs(frame.phase[1]) > Math.abs(frame.phase[0]);
   const towards = across ? frame.phase[1] : frame.phase[0];
   // The upper of two level edges, the right-hand one of two upright ones.
   const sign = across === towards > 0 ? -1 : 1;
   const readoutSign = across ? Math.sign(frame.readout[0]) : -Math.sign(frame.readout[1]);
   const end = readoutSign * (frame.halfReadoutMm + OVERHANG_MM);
+  const at = inWindow(frame, sign * frame.halfAcquiredMm, end);
+  const { anchor } = anchorWithin(text, at, input.bounds, input.mmPerPx);
+  const beside = across && anchor === 'start';
+  const above = which === 'now' ? -10 : -26;
   return {
     kind: 'text',
     name,
     text,
-    at: inWindow(frame, sign * frame.halfAcquiredMm, end),
-    offsetPx: across ? [8, which === 'now' ? 13 : -5] : [0, which === 'now' ? -10 : -26],
-    anchor: across ? 'start' : 'middle',
+    at,
+    offsetPx: beside ? [8, which === 'now' ? 13 : -5] : [0, above],
+    anchor: across ? anchor : 'middle',
     size: 'note',
-    colour,
+    colour: which === 'now' ? 'ink-soft' : 'indigo',
   };
 }
 
