@@ -1,4 +1,5 @@
 import { readFile } from 'node:fs/promises';
+import { text as readText } from 'node:stream/consumers';
 import { LocalError } from '@/db/local';
 import { ServiceError } from '@/lib/domain/errors';
 import { checkCase, renderAnswer } from '@/lib/services/check/check-case';
@@ -15,7 +16,9 @@ function unreadable(message: string): LocalError {
 
 async function readInput(file: string): Promise<unknown> {
   const name = file === '-' ? 'Standard input' : file;
-  const text = await readFile(file === '-' ? '/dev/stdin' : file, 'utf8').catch((error: Error) => {
+  // The stream and not /dev/stdin: that name cannot be opened when the input is a socket.
+  const reading = file === '-' ? readText(process.stdin) : readFile(file, 'utf8');
+  const text = await reading.catch((error: Error) => {
     throw unreadable(`${name} could not be read: ${error.message}`);
   });
   try {

@@ -96,6 +96,8 @@ export const patientInput = strict(
       { value: CASE_DEFAULTS.patient.breathPeriodS, source: 'policy-default' },
     ),
     position: orElse(patientShape.position, CASE_DEFAULTS.patient.position),
+    pairedSide: patientShape.pairedSide,
+    legGapMm: patientShape.legGapMm,
     lateralOffsetMm: orElse(patientShape.lateralOffsetMm, 0),
     isocentreZMm: orElse(patientShape.isocentreZMm, 0),
     parts: z

@@ -141,6 +141,9 @@ export const patientShape = {
     quantity({ min: 1, max: 15, unit: 's', text: 'Time from breath to breath' }), 10, 'Breath period.',
   ),
   position: choice(PATIENT_POSITIONS, 'How the patient lies.'),
+  pairedSide: choice(['right', 'left'], 'Which of a pair is imaged (knee); left out: not known, the other one is assumed on either side.')
+    .optional(),
+  legGapMm: quantity({ min: 0, max: 500, unit: 'mm', text: 'Gap between the knees; left out: 20' }).optional(),
   lateralOffsetMm: quantity({
     min: -300, max: 300, unit: 'mm', text: 'Patient’s mid-line from the scanner’s mid-line, positive to the patient’s left',
   }),
