@@ -18,7 +18,7 @@ export function BookingList({ rows, label }: { rows: readonly BookingRow[]; labe
             <span className="block text-sm text-ink-soft">{row.slotMinutes} min</span>
           </p>
           <div className="min-w-0">
-            <Link href={`/bookings/${row.id}`} className="text-link figures font-semibold">
+            <Link href={`/bookings/${row.id}`} className="text-link figures font-semibold whitespace-nowrap">
               {row.accession}
             </Link>
             <p className="truncate text-sm text-ink-soft">

@@ -24,7 +24,7 @@ const COLUMNS: readonly DataColumn<BookingRow>[] = [
     header: 'Accession',
     value: (row) => row.accession,
     cell: (row) => (
-      <Link href={`/bookings/${row.id}`} className="text-link figures font-semibold">
+      <Link href={`/bookings/${row.id}`} className="text-link figures font-semibold whitespace-nowrap">
         {row.accession}
       </Link>
     ),

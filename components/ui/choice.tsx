@@ -18,7 +18,7 @@ export function Checkbox({ label, hint, error, className, ref, ...input }: Choic
   return (
     <div className={className}>
       <label className="flex items-start gap-3 py-1">
-        <span className="relative mt-0.5 size-5 flex-none">
+        <span className="relative flex h-[1lh] w-5 flex-none items-center">
           <input
             {...input}
             ref={ref}
@@ -30,7 +30,7 @@ export function Checkbox({ label, hint, error, className, ref, ...input }: Choic
           <svg
             viewBox="0 0 20 20"
             aria-hidden="true"
-            className="pointer-events-none absolute inset-0 hidden size-5 text-on-indigo peer-checked:block"
+            className="pointer-events-none absolute inset-x-0 hidden size-5 text-on-indigo peer-checked:block"
           >
             <path d="M4.5 10.5 8.5 14.5 15.5 6" fill="none" stroke="currentColor" strokeWidth="2" />
           </svg>
@@ -113,7 +113,7 @@ export function RadioGroup<T extends string>(props: RadioGroupProps<T>) {
             checked={option.value === value}
             disabled={option.disabled}
             onChange={() => onChange(option.value)}
-            className="mt-0.5 size-5 flex-none appearance-none rounded-full border border-line-strong bg-paper checked:border-6 checked:border-indigo"
+            className="my-[calc((1lh-1.25rem)/2)] size-5 flex-none appearance-none rounded-full border border-line-strong bg-paper checked:border-6 checked:border-indigo"
           />
           <span>
             {option.label}

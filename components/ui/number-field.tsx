@@ -40,6 +40,7 @@ export function NumberField(props: NumberFieldProps) {
   // A value set from outside (slider, remedy, stored record) replaces the text; our own echo does not.
   if (!Object.is(known, value)) {
     setKnown(value);
+    setTouched(false);
     if (!Number.isNaN(value)) setText(formatPlain(value));
   }
 

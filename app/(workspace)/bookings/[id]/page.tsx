@@ -37,7 +37,7 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
           </>
         }
       />
-      <div className="grid items-start gap-6 lg:grid-cols-[minmax(0,2fr)_minmax(0,3fr)]">
+      <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 lg:grid-cols-[minmax(0,5fr)_minmax(0,9fr)]">
         <BookingFacts row={row} />
         <section id="sizes" aria-labelledby="sizes-title" className="space-y-4">
           <h2 id="sizes-title" className="text-xl">
