@@ -83,6 +83,10 @@ export interface Patient {
   readonly breathHoldS: Reading;
   readonly breathPeriodS: Reading;
   readonly position: PatientPosition;
+  /** Which of a pair is imaged (knee); absent: not known, and the other one is assumed on either side. */
+  readonly pairedSide?: 'right' | 'left';
+  /** Gap between the knees, mm; absent: 20. */
+  readonly legGapMm?: number;
   /** Patient's mid-line from the scanner's mid-line, mm, positive to the patient's left. */
   readonly lateralOffsetMm: number;
   /** z of the magnet's isocentre in patient coordinates, mm. */

@@ -13,13 +13,13 @@ import { NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-proble
 
 /** Cases in `npm test`; test:long sets 20,000. */
 const CASES = Number(process.env.SELVEDGE_ORACLE_B ?? 500);
-const STEP_MM = 12;
-const FINE_MM = 1.5;
+/** Steps in readout and phase, mm: coarse first, finer only where the engine says fold and no point was found yet. */
+const STEPS: readonly (readonly [number, number])[] = [[12, 12], [4, 4], [1.5, 1.5], [0.1, 1], [1, 0.05]];
 /**
- * How close to the end of a forbidden interval a width may lie for a step of 1.5 mm to miss the sliver of tissue that
- * still folds: the step itself along phase, and as much again per unit of slope of an oblique edge (up to 4 here).
+ * How close to the end of a forbidden interval a width may lie for the finest points to miss what still folds: 1 mm along
+ * phase, and 0.1 mm along readout times the slope of an oblique edge (sharp outlines reach 60).
  */
-const NEAR_MM = 7.5;
+const NEAR_MM = 7;
 
 function sampleCase(seed: number): { problem: FoldProblem; slab: number | undefined; partitions: number | undefined } {
   const random = seeded(seed);
@@ -138,21 +138,23 @@ describe('oracle B: general shapes, tilted planes and slabs, by looking at point
         for (const width of widths) {
           judged++;
           const clean = solved.isWidthClean(width, partitions);
-          const hit = sampledHit(problem, margin, width, slab, STEP_MM);
+          const hit = sampledHit(problem, margin, width, slab, STEPS[0]!);
           if (hit) hits++;
           // A hit is a proof, however close.
           if (hit && clean) expect.fail(`seed ${seed}, W ${width}: a point folds into keep-clear, the engine says none`);
           if (hit || clean) continue;
-          if ([4, FINE_MM].some((step) => sampledHit(problem, margin, width, slab, step))) continue;
+          if (STEPS.slice(1).some((steps) => sampledHit(problem, margin, width, slab, steps))) continue;
           const held = forbiddenMm.find(([low, high]) => width > low && width < high);
           const gap = held ? Math.min(held[1] - width, width - held[0]) : Infinity;
-          if (!(gap < NEAR_MM)) expect.fail(`seed ${seed}, W ${width}: forbidden by ${gap} mm, yet no point folds`);
+          // A ghost needs tissue beyond W/2 whose ghost is also inside keep-clear: with R = 2 and an edge of keep-clear beside
+          // the FOV centre both leave a sliver of any thinness over many mm of W, so these are counted, not judged.
+          if (problem.prescription.acceleration.factorPhase === 1 && !(gap < NEAR_MM)) expect.fail(`seed ${seed}, W ${width}: forbidden by ${gap} mm, yet no point folds`);
           near++;
         }
       }
       expect(hits).toBeGreaterThan(CASES / 2);
       // Cases too near to an end to be judged by points stay rare.
-      expect(near / judged).toBeLessThan(0.05);
+      expect(near / judged).toBeLessThan(0.02);
     },
     60 * 60_000,
   );

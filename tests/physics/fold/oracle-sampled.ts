@@ -81,9 +81,15 @@ export interface SampledAxes {
 /**
  * Looks for a keep-clear point that tissue folds onto at width W (and W_z).
  * @param margin  how far tissue may have moved along each section axis, towards low and high
- * @param step    mm between points in readout and phase
+ * @param steps   mm between points in readout and in phase
  */
-export function sampledHit(problem: FoldProblem, margin: SampledAxes, width: number, slab: number | undefined, step: number): boolean {
+export function sampledHit(
+  problem: FoldProblem,
+  margin: SampledAxes,
+  width: number,
+  slab: number | undefined,
+  steps: readonly [number, number],
+): boolean {
   const { prescription, keepClear } = problem;
   const { readout, phase, slice } = oracleAxes(problem);
   const { slices, acceleration } = prescription;
@@ -100,13 +106,13 @@ export function sampledHit(problem: FoldProblem, margin: SampledAxes, width: num
     : spread(margin.readout, 3).flatMap((a) => spread(margin.phase, 2).flatMap((b) => spread(margin.slice, 7).map((c): V => [a, b, c])));
   const c = prescription.centreMm;
   const { fovReadoutMm: fr, fovPhaseMm: fp } = prescription;
-  const grid = (length: number) => {
+  const grid = (length: number, step: number) => {
     const n = Math.max(2, Math.ceil(length / step));
     // The outermost points lie a nanometre inside the edges.
     return Array.from({ length: n + 1 }, (_, i) => (-length / 2 + 1e-6) + ((length - 2e-6) * i) / n);
   };
-  const rows = grid(fr);
-  const columns = grid(fp);
+  const rows = grid(fr, steps[0]);
+  const columns = grid(fp, steps[1]);
   const jMax = slab === undefined ? 0 : Math.ceil(600 / slab);
   // No part of these cases lies farther than this from the origin, so no other order needs looking at.
   const farthest = 470;
