@@ -2,7 +2,7 @@ import { describe, expect, expectTypeOf, it } from 'vitest';
 import * as z from 'zod';
 import type { Case } from '@/lib/domain/case/model';
 import { assess } from '@/lib/physics';
-import { caseInput, CaseInputError, caseSchema, parseCase, toCase, type CaseInput } from '@/lib/schemas/case';
+import { caseInput, CaseInputError, type caseSchema, parseCase, toCase, type CaseInput } from '@/lib/schemas/case';
 import { typicalCase } from '@/tests/support/physics-cases';
 
 /** The least that makes a case. */

@@ -1,5 +1,5 @@
 import type { KyselyPlugin } from 'kysely';
-import { closeDatabase, database, openDatabase } from '@/db/client';
+import { closeDatabase, type database, openDatabase } from '@/db/client';
 
 /** Runs `work` with a database that counts what is sent to it, transaction statements not included. */
 export async function countQueries<T>(work: () => Promise<T>): Promise<{ result: T; queries: number }> {

@@ -1,5 +1,5 @@
 import '@/lib/schemas/fields/jitless';
-import * as z from 'zod';
+import type * as z from 'zod';
 import type { Case } from '@/lib/domain/case/model';
 import { keepClearSchema } from '@/lib/schemas/case/keep-clear';
 import { patientSchema } from '@/lib/schemas/case/patient';

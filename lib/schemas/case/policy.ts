@@ -1,5 +1,5 @@
 import '@/lib/schemas/fields/jitless';
-import * as z from 'zod';
+import type * as z from 'zod';
 import type { CostWeights, PerSide, SitePolicy } from '@/lib/domain/case/model';
 import { count, flag, quantity, range, strict } from '@/lib/schemas/fields/fields';
 

@@ -1,5 +1,5 @@
 import '@/lib/schemas/fields/jitless';
-import * as z from 'zod';
+import type * as z from 'zod';
 
 /** What is wrong with one field: dotted path ('' is the whole), and what was given and is allowed. */
 export interface FieldIssue {

@@ -34,7 +34,7 @@ describe('POST /api/v1/check', () => {
     const answer = await response.text();
     expect(checkAnswerSchema.safeParse(JSON.parse(answer)).error?.issues).toBeUndefined();
     const printed = execFileSync(process.execPath, ['lib/ops/bootstrap.mjs', 'check', FOLDER + name], {
-      cwd: ROOT, encoding: 'utf8', env: { PATH: process.env.PATH, HOME: process.env.HOME },
+      cwd: ROOT, encoding: 'utf8', env: { ...process.env, DATABASE_URL: undefined },
     });
     expect(printed).toBe(answer);
     expect(command(['-'], text).stdout).toBe(answer);
