@@ -5,3 +5,6 @@ export { roundAssessment } from './assess/round-assessment';
 export { foldProbability, type FoldProbability } from './certainty/fold-probability';
 export { sizesAt } from './certainty/sizes-at';
 export { compareRemedies, rankRemedies, type RankFilters } from './remedy/rank-remedies';
+export { drawSection } from './assess/draw-case';
+export type { DrawSectionOptions } from './section/draw-section';
+export { simulateImage, toGreyLevels, type ImageOptions, type SimulatedImage } from './image/simulate-image';

@@ -86,7 +86,9 @@ function prescriptionKey(p: Prescription): string {
 export function classKey(given: FrozenCase): string {
   const { position, breadthMm, depthMm, gapMm } = given.patient.arms;
   return [
+    given.patient.region,
     identityOf(given.patient.extents),
+    `${given.patient.weightKg?.value}/${given.patient.heightCm?.value}/${given.patient.sex}`,
     `${position}/${breadthMm}/${depthMm}/${gapMm}`,
     given.patient.parts === undefined ? '' : identityOf(given.patient.parts),
     given.patient.lateralOffsetMm,
@@ -106,13 +108,18 @@ function worstSlabWeight(sources: readonly SlabSource[], slab: Slab): (offsetMm:
     sources.reduce((worst, source) => Math.max(worst, source.profile.at(offsetMm / slabMm - source.shiftShare)), 0);
 }
 
+/** Signal of a slab relative to its centre, by offset from it [mm]; undefined for a stack. */
+export function slabWeightFor({ prescription: p, scanner, policy }: Case): ((offsetMm: number) => number) | undefined {
+  return p.slices.mode === 'slab' ? worstSlabWeight(slabSources(p, p.slices, scanner, policy), p.slices) : undefined;
+}
+
 function problemOf(given: FrozenCase): FoldProblem {
-  const { prescription: p, scanner, policy } = given;
-  const slab = p.slices.mode === 'slab' ? p.slices : undefined;
+  const { prescription: p, scanner } = given;
+  const slabWeight = slabWeightFor(given);
   return foldProblem(given, {
     acquiredLinesMax: mostAcquiredLines(p.linesAcrossFov, scanner.limits),
     ...(given.frozen === undefined ? {} : { keepClear: given.frozen }),
-    ...(slab === undefined ? {} : { slabWeight: worstSlabWeight(slabSources(p, slab, scanner, policy), slab) }),
+    ...(slabWeight === undefined ? {} : { slabWeight }),
   });
 }
 

@@ -4,7 +4,7 @@ import type { PerSide } from '../model/axes';
 import type { Case } from '../model/case';
 import { normalCumulative, normalQuantile } from './normal';
 import { haltonPoints } from './quasi-random';
-import { patientAtDraw, sizeVariables, type SizeVariable } from './size-variables';
+import { isTrunkOnly, patientAtDraw, sizeVariables, type SizeVariable } from './size-variables';
 
 export interface FoldProbability {
   /** Share of such patients in whom something folds into the keep-clear area, [0, 1]. */
@@ -45,7 +45,8 @@ function threshold(folds: (draw: number) => boolean): number {
 }
 
 /** Only a trunk: it grows about what it covers, so fold once begun stays. */
-const onlyGrows = ({ patient }: Case): boolean => patient.arms.position === 'up' || patient.arms.breadthMm * patient.arms.depthMm === 0;
+const onlyGrows = ({ patient }: Case): boolean =>
+  isTrunkOnly(patient) && (patient.arms.position === 'up' || patient.arms.breadthMm * patient.arms.depthMm === 0);
 
 /** Whether moving the other variables leaves the first one's threshold where it is. */
 function decidesAlone(folds: Folds, variables: readonly SizeVariable[], which: number): number | undefined {

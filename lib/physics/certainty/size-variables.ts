@@ -15,12 +15,18 @@ function pair(patient: Patient, low: Side, high: Side): SizeVariable[] {
   return a.source === b.source ? [[low, high]] : [[low], [high]];
 }
 
+/** Only a trunk and arms, reaching along z as far as coil and magnet see. */
+export const isTrunkOnly = ({ region }: Patient): boolean => region === 'abdomen' || region === 'pelvis';
+
 /**
- * The independent random variables of a patient's sizes. Along z the body reaches as far as coil and magnet see, so
- * superior and inferior extents play no part. A body given as parts has no spread.
+ * The independent random variables of a patient's sizes. A trunk's superior and inferior extents play no part. A body
+ * given as parts has no spread.
  */
-export const sizeVariables = (patient: Patient): readonly SizeVariable[] =>
-  patient.parts !== undefined ? [] : [...pair(patient, 'anterior', 'posterior'), ...pair(patient, 'right', 'left')];
+export function sizeVariables(patient: Patient): readonly SizeVariable[] {
+  if (patient.parts !== undefined) return [];
+  const across = [...pair(patient, 'anterior', 'posterior'), ...pair(patient, 'right', 'left')];
+  return isTrunkOnly(patient) ? across : [...across, ...pair(patient, 'inferior', 'superior')];
+}
 
 /** The patient with each variable at its number of spreads from the mean; spread itself then counts no more. */
 export function patientAtDraw(patient: Patient, variables: readonly SizeVariable[], draws: readonly number[]): Patient {
