@@ -30,6 +30,9 @@ export interface BenchHandle {
 /** All that a handle depends on. */
 export type HandleState = Pick<BenchState, 'document' | 'activeId'>;
 
+/** Beside the furthest point of the body: there the edge of the window often lies. */
+const ASIDE_MM = 34;
+
 const MM = (value: number): string => `${Math.round(value)} mm`;
 
 export function benchHandles(state: HandleState): readonly BenchHandle[] {
@@ -62,7 +65,8 @@ export function benchHandles(state: HandleState): readonly BenchHandle[] {
     at: window.centre,
     figure: `centre ${prescription.centreMm.map((c) => Math.round(c)).join(', ')} mm`,
   };
-  return [...fovEdges, centre, ...keepClearHandles(state), ...extentHandles(state)];
+  // The last lies on top where handles meet: the window is what is moved most.
+  return [...extentHandles(state), ...keepClearHandles(state), centre, ...fovEdges];
 }
 
 function keepClearHandles(state: HandleState): BenchHandle[] {
@@ -108,7 +112,10 @@ function extentHandles(state: HandleState): BenchHandle[] {
         id: `extent-${side}`,
         kind: 'extent',
         label: `Body extent, ${side}`,
-        at: [middle[0] + direction[0] * reach, middle[1] + direction[1] * reach],
+        at: [
+          middle[0] + direction[0] * reach - direction[1] * ASIDE_MM,
+          middle[1] + direction[1] * reach + direction[0] * ASIDE_MM,
+        ],
         along: direction,
         figure: `body ${side} ${MM(value(side))}`,
         value: { now: value(side), min: 0, max: 1000 },

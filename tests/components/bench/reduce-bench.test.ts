@@ -172,9 +172,9 @@ describe('handles', () => {
 
   it('have one for every edge of FOV, keep-clear area and body, and the centre', () => {
     expect(benchHandles(start()).map(({ id }) => id)).toEqual([
-      'fov-phase-low', 'fov-phase-high', 'fov-readout-low', 'fov-readout-high', 'fov-centre',
-      'keep-clear-right', 'keep-clear-left', 'keep-clear-anterior', 'keep-clear-posterior',
       'extent-right', 'extent-left', 'extent-anterior', 'extent-posterior',
+      'keep-clear-right', 'keep-clear-left', 'keep-clear-anterior', 'keep-clear-posterior',
+      'fov-centre', 'fov-phase-low', 'fov-phase-high', 'fov-readout-low', 'fov-readout-high',
     ]);
     expect(at(start(), 'fov-phase-low')).toMatchObject({ label: 'FOV edge, anterior', at: [0, -150] });
     expect(at(start(), 'keep-clear-right')?.at).toEqual([-190, -22.5]);

@@ -5,7 +5,9 @@ const css = readFileSync(new URL('../../../app/globals.css', import.meta.url), '
 
 /** The `--name: #rrggbb` declarations of the text given. */
 function tokensOf(text: string): Map<string, string> {
-  return new Map([...text.matchAll(/--([a-z-]+):\s*(#[0-9a-f]{6});/g)].map((match) => [match[1]!, match[2]!]));
+  return new Map(
+    [...text.matchAll(/--([a-z-]+):\s*(#[0-9a-f]{6});/g)].map((match) => [match[1]!, match[2]!]),
+  );
 }
 
 const night = css.slice(css.indexOf('@variant control-room {'), css.indexOf('@layer base'));
@@ -39,7 +41,10 @@ const TEXT_PAIRS: [string, string][] = [
   ['ochre', 'ochre-wash'],
   ['ink', 'thread-wash'],
   ['ink', 'ochre-wash'],
-  ...['fat', 'lean', 'organ', 'gland', 'vessel', 'bone'].map((tissue): [string, string] => ['ink', `tissue-${tissue}`]),
+  ...['fat', 'lean', 'organ', 'gland', 'vessel', 'bone'].map((tissue): [string, string] => [
+    'ink',
+    `tissue-${tissue}`,
+  ]),
 ];
 // The boundary of a control: success criterion 1.4.11, 3:1.
 const BOUNDARY_PAIRS: [string, string][] = GROUNDS.map((ground) => ['line-strong', ground]);
@@ -66,7 +71,11 @@ it('black on white is 21:1, so the formula itself can fail', () => {
 it('no token is green: its green channel never leads both others', () => {
   for (const tokens of Object.values(themes)) {
     for (const [name, hex] of tokens) {
-      const [r, g, b] = [1, 3, 5].map((at) => Number.parseInt(hex.slice(at, at + 2), 16)) as [number, number, number];
+      const [r, g, b] = [1, 3, 5].map((at) => Number.parseInt(hex.slice(at, at + 2), 16)) as [
+        number,
+        number,
+        number,
+      ];
       expect(g > r && g > b, `${name} ${hex}`).toBe(false);
     }
   }

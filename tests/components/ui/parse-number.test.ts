@@ -19,19 +19,26 @@ describe('reading a typed number', () => {
     expect(parseNumber(text, 'mm')).toBe(expected);
   });
 
-  it.each(['abc', '1,234.5', '1.2.3', '12 5', '1e3', 'Infinity', '--3', '0x10', '12cm'])('%j is not a number', (text) => {
-    expect(parseNumber(text, 'mm')).toBeNaN();
-  });
+  it.each(['abc', '1,234.5', '1.2.3', '12 5', '1e3', 'Infinity', '--3', '0x10', '12cm'])(
+    '%j is not a number',
+    (text) => {
+      expect(parseNumber(text, 'mm')).toBeNaN();
+    },
+  );
 
   it('reads back what it writes, with comma or point', () => {
     fc.assert(
-      fc.property(fc.integer({ min: -9_999_999, max: 9_999_999 }), fc.integer({ min: 0, max: 6 }), (whole, places) => {
-        const value = whole / 10 ** places;
-        const text = formatPlain(value);
-        // Six decimals are kept and 7-digit integers have at most six places here, so nothing is lost.
-        expect(parseNumber(text)).toBe(value === 0 ? 0 : value);
-        expect(parseNumber(text.replace('.', ','))).toBe(value === 0 ? 0 : value);
-      }),
+      fc.property(
+        fc.integer({ min: -9_999_999, max: 9_999_999 }),
+        fc.integer({ min: 0, max: 6 }),
+        (whole, places) => {
+          const value = whole / 10 ** places;
+          const text = formatPlain(value);
+          // Six decimals are kept and 7-digit integers have at most six places here, so nothing is lost.
+          expect(parseNumber(text)).toBe(value === 0 ? 0 : value);
+          expect(parseNumber(text.replace('.', ','))).toBe(value === 0 ? 0 : value);
+        },
+      ),
       { seed: 20_261_201 },
     );
   });

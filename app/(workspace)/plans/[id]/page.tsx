@@ -1,0 +1,58 @@
+import type { Metadata } from 'next';
+import { NewerVersion } from '@/components/plan/newer-version';
+import { PlanOverview } from '@/components/plan/plan-overview';
+import { PlanSteps } from '@/components/plan/plan-steps';
+import { PlanVersions } from '@/components/plan/plan-versions';
+import { SignOffForm } from '@/components/plan/sign-off-form';
+import { LinkButton } from '@/components/ui/button';
+import { PageBody, PageHeader } from '@/components/ui/page';
+import { mayAttempt } from '@/lib/domain/access';
+import { asVersion } from '@/lib/http/as-version';
+import { loadPage } from '@/lib/http/load-page';
+import { recentVersions } from '@/lib/presentation/recent-versions';
+import { getPlan } from '@/lib/services/plan/get-plan';
+import { movePlanAction, signOffAction } from '../actions';
+
+export const metadata: Metadata = { title: 'Plan' };
+
+interface Props {
+  params: Promise<{ id: string }>;
+  searchParams: Promise<{ version?: string }>;
+}
+
+export default async function PlanPage({ params, searchParams }: Props) {
+  const [{ id }, query] = await Promise.all([params, searchParams]);
+  const { plan, versions, mayPlan, maySign } = await loadPage(async (context) => {
+    const plan = await getPlan(context, { id, version: asVersion(query.version) });
+    return {
+      plan,
+      versions: await Promise.all(recentVersions(plan.currentVersion).map((version) => getPlan(context, { id, version }))),
+      mayPlan: mayAttempt(context.actor, 'plan.release'),
+      maySign: mayAttempt(context.actor, 'plan.sign-off'),
+    };
+  });
+  const sheet = `/plans/${id}/sheet${plan.newerVersionExists ? `?version=${plan.version}` : ''}`;
+  return (
+    <PageBody>
+      <PageHeader
+        title={plan.accession ?? 'Plan without a booking'}
+        lead={`Plan, version ${plan.version}, ${plan.state}`}
+        actions={
+          <>
+            {plan.bookingId && <LinkButton href={`/bench/${plan.bookingId}`}>Open on the bench</LinkButton>}
+            <LinkButton variant="primary" href={sheet}>
+              Plan sheet
+            </LinkButton>
+          </>
+        }
+      />
+      <NewerVersion plan={plan} href={`/plans/${id}`} />
+      <PlanOverview plan={plan} />
+      {mayPlan && !plan.newerVersionExists && <PlanSteps plan={plan} move={movePlanAction.bind(null, id, plan.version)} />}
+      {maySign && !plan.newerVersionExists && plan.state === 'for use' && (
+        <SignOffForm decide={signOffAction.bind(null, id, plan.version)} />
+      )}
+      <PlanVersions versions={versions} current={plan.version} href={`/plans/${id}`} />
+    </PageBody>
+  );
+}

@@ -1,0 +1,33 @@
+import type { Metadata } from 'next';
+import { NewerVersion } from '@/components/plan/newer-version';
+import { PlanSheet } from '@/components/plan/plan-sheet';
+import { PrintButton } from '@/components/plan/print-button';
+import { LinkButton } from '@/components/ui/button';
+import { environment } from '@/lib/env';
+import { asVersion } from '@/lib/http/as-version';
+import { loadPage } from '@/lib/http/load-page';
+import { getPlan } from '@/lib/services/plan/get-plan';
+
+export const metadata: Metadata = { title: 'Plan sheet' };
+
+interface Props {
+  params: Promise<{ id: string }>;
+  searchParams: Promise<{ version?: string }>;
+}
+
+export default async function PlanSheetPage({ params, searchParams }: Props) {
+  const [{ id }, query] = await Promise.all([params, searchParams]);
+  const plan = await loadPage((context) => getPlan(context, { id, version: asVersion(query.version) }));
+  const bench = plan.bookingId ? `/bench/${plan.bookingId}` : null;
+  return (
+    <div className="mx-auto max-w-5xl px-4 py-6 print:p-0">
+      <NewerVersion plan={plan} href={`/plans/${id}/sheet`} />
+      <div className="mb-4 flex flex-wrap gap-3 print:hidden">
+        <PrintButton />
+        {bench && <LinkButton href={bench}>Back to the bench</LinkButton>}
+        <LinkButton href={`/plans/${id}`}>Plan</LinkButton>
+      </div>
+      <PlanSheet plan={plan} link={`${environment().publicUrl}/p/${plan.shortCode}?v=${plan.version}`} />
+    </div>
+  );
+}

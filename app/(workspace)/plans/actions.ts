@@ -1,0 +1,28 @@
+'use server';
+
+import { revalidatePath } from 'next/cache';
+import { runAction } from '@/lib/http/run-action';
+import { movePlan } from '@/lib/services/plan/move-plan';
+import { signOffPlan } from '@/lib/services/plan/sign-off-plan';
+
+type Target = 'draft' | 'for use' | 'used';
+
+export async function movePlanAction(id: string, expectedVersion: number, to: Target) {
+  return runAction('move a plan', async (context) => {
+    const { state } = await movePlan(context, { id, expectedVersion, to });
+    revalidatePath(`/plans/${id}`);
+    return { state };
+  });
+}
+
+export async function signOffAction(
+  id: string,
+  expectedVersion: number,
+  values: { decision: 'signed off' | 'sent back'; reason: string },
+) {
+  return runAction('sign off a plan', async (context) => {
+    const { state } = await signOffPlan(context, { id, expectedVersion, ...values });
+    revalidatePath(`/plans/${id}`);
+    return { state };
+  });
+}

@@ -1,0 +1,142 @@
+import type { ReactNode } from 'react';
+import { Logo } from '@/components/ui/logo';
+import { VerdictWords } from '@/components/bench/verdict-words';
+import { formatDate, formatMoment } from '@/lib/presentation/moment';
+import { REGION_WORDS } from '@/lib/presentation/anatomy-words';
+import type { PlanView } from '@/lib/schemas/plan';
+import { CAUTIONS } from './cautions';
+import './plan-sheet.css';
+import { SheetPicture } from './sheet-picture';
+import { sheetSequence, type SheetSequence } from './sheet-facts';
+import { SheetSizes } from './sheet-sizes';
+
+/** One page for the scan room: reference large, values in the scanner's own form, what they rest on, who signs. */
+export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
+  const sequences = plan.sequences.map((sequence, i) => sheetSequence(sequence, plan.results[i]!, plan));
+  return (
+    <article className="plan-sheet mx-auto max-w-4xl border border-line bg-paper p-6">
+      <header className="grid grid-cols-[1fr_auto] gap-6 border-b border-ink pb-3">
+        <div>
+          <p className="flex items-center gap-2 text-sm">
+            <Logo className="size-5" />
+            <span className="font-semibold">Plan sheet</span> · {REGION_WORDS[plan.patient.region]} · {plan.scanner.name}
+          </p>
+          <h1 className="sheet-reference figures mt-1 text-4xl font-bold">{plan.accession ?? 'No booking'}</h1>
+          <p className="sheet-small mt-1 text-sm">
+            Version {plan.version}, {plan.state}. Saved {formatMoment(new Date(plan.savedAt))} by {plan.savedBy}.
+          </p>
+        </div>
+        <div className="sheet-small flex h-24 w-64 flex-col justify-between border border-dashed border-ink p-2 text-sm">
+          <p>patient label here</p>
+          <p>checked by</p>
+        </div>
+      </header>
+      <SequenceTable sequences={sequences} />
+      <div className="mt-3 grid gap-5 sm:grid-cols-[1.15fr_1fr] print:grid-cols-[1.15fr_1fr]">
+        <SheetPicture plan={plan} />
+        <SheetSizes plan={plan} />
+      </div>
+      <Block title="Cautions">
+        <ul className="sheet-small list-disc pl-5 text-sm">
+          {CAUTIONS.map((caution) => (
+            <li key={caution}>{caution}</li>
+          ))}
+        </ul>
+      </Block>
+      <SheetSignatures plan={plan} />
+      <footer className="sheet-small mt-3 flex flex-wrap justify-between gap-x-6 border-t border-ink pt-2 text-sm">
+        <p>
+          Newest version and whether this one is still it: <span className="figures font-semibold">{link}</span>
+        </p>
+        <p>
+          policy version {plan.policy.version} · engine {plan.engineVersion} · input{' '}
+          <span className="figures">{plan.inputHash.slice(0, 12)}</span>
+        </p>
+      </footer>
+    </article>
+  );
+}
+
+function Block({ title, children }: { title: string; children: ReactNode }) {
+  return (
+    <section className="mt-3">
+      <h2 className="text-sm font-semibold">{title}</h2>
+      {children}
+    </section>
+  );
+}
+
+function SequenceTable({ sequences }: { sequences: readonly SheetSequence[] }) {
+  return (
+    <div className="overflow-x-auto">
+      <table className="mt-3 w-full border-collapse text-left">
+        <caption className="sr-only">Sequences, as they are set at the scanner</caption>
+        <thead className="sheet-small text-sm">
+          <tr className="border-b border-ink align-bottom">
+            <th className="py-1 pr-3 font-semibold">Sequence</th>
+            <th className="py-1 pr-3 font-semibold">Phase oversampling</th>
+            <th className="py-1 pr-3 font-semibold">Slice oversampling</th>
+            <th className="py-1 pr-3 font-semibold">Av.</th>
+            <th className="py-1 pr-3 font-semibold">Time</th>
+            <th className="py-1 font-semibold">Verdict</th>
+          </tr>
+        </thead>
+        <tbody>
+          {sequences.map((row) => (
+            <tr key={row.id} data-sequence={row.id} className="border-b border-line align-top">
+              <th scope="row" className="py-1.5 pr-3 font-semibold">
+                {row.name}
+                <span className="sheet-small block text-sm font-normal">{row.geometry}</span>
+                {row.adopted.map((sentence) => (
+                  <span key={sentence} className="sheet-small block text-sm font-normal">
+                    Adopted: {sentence}
+                  </span>
+                ))}
+              </th>
+              <Setting setting={row.phase} />
+              {row.slice ? <Setting setting={row.slice} /> : <td className="py-1.5 pr-3">–</td>}
+              <td className="figures py-1.5 pr-3">{row.averages}</td>
+              <td className="figures py-1.5 pr-3 whitespace-nowrap">{row.time}</td>
+              <td className="py-1.5">
+                <VerdictWords verdict={row.verdict} className="sheet-small text-sm" />
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+function Setting({ setting }: { setting: { value: string; note: string } }) {
+  return (
+    <td className="py-1.5 pr-3">
+      <span className="figures text-lg font-bold whitespace-nowrap">{setting.value}</span>
+      {setting.note && <span className="sheet-small block text-sm">{setting.note}</span>}
+    </td>
+  );
+}
+
+function SheetSignatures({ plan }: { plan: PlanView }) {
+  const { signOff } = plan;
+  const radiologist = signOff
+    ? `${signOff.decision} by ${signOff.by}, ${formatDate(new Date(signOff.at))}`
+    : plan.needsSignOff
+      ? 'needed: fold is left in the keep-clear area, or site policy asks for it'
+      : 'not needed';
+  return (
+    <section aria-label="Signatures" className="sheet-small mt-4 grid grid-cols-3 gap-6 text-sm">
+      {[
+        ['Planned by', plan.savedBy],
+        ['Used at the scanner by', ''],
+        ['Radiologist’s sign-off', radiologist],
+      ].map(([title, note]) => (
+        <div key={title}>
+          <p className="h-8 border-b border-ink" />
+          <p className="font-semibold">{title}</p>
+          <p>{note}</p>
+        </div>
+      ))}
+    </section>
+  );
+}
