@@ -41,4 +41,6 @@ const figuresExtended = localFont({
   adjustFontFallback: false,
 });
 
-export const fontVariables = [text, textExtended, figures, figuresExtended].map((font) => font.variable).join(' ');
+export const fontVariables = [text, textExtended, figures, figuresExtended]
+  .map((font) => font.variable)
+  .join(' ');

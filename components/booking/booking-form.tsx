@@ -66,13 +66,23 @@ export function BookingForm({
           <FormNumber name="slotMinutes" schema={bookingFormSchema.shape.slotMinutes} step={5} />
           <span className="hidden sm:block" />
           <FormSelect name="scannerId" label="Scanner" options={scanners} placeholder="Choose a scanner" />
-          <FormSelect name="protocolId" label="Protocol" options={protocols} placeholder="Choose a protocol" />
+          <FormSelect
+            name="protocolId"
+            label="Protocol"
+            options={protocols}
+            placeholder="Choose a protocol"
+          />
         </div>
       </Panel>
       <div className="mt-5 space-y-4">
         <FormOutcome state={state} schema={bookingFormSchema} noun="booking" />
         <div className="flex flex-wrap gap-3">
-          <Button type="submit" variant="primary" pending={state.form.formState.isSubmitting} pendingLabel="Adding…">
+          <Button
+            type="submit"
+            variant="primary"
+            pending={state.form.formState.isSubmitting}
+            pendingLabel="Adding…"
+          >
             Add this booking
           </Button>
           <LinkButton href="/bookings" variant="quiet">

@@ -7,7 +7,10 @@ import { BookingVerdict } from './booking-verdict';
 /** Bookings of one day, in the order of the day, each with its state and the next thing to do. */
 export function BookingList({ rows, label }: { rows: readonly BookingRow[]; label: string }) {
   return (
-    <ul aria-label={label} className="divide-y divide-line overflow-hidden rounded-md border border-line bg-paper">
+    <ul
+      aria-label={label}
+      className="divide-y divide-line overflow-hidden rounded-md border border-line bg-paper"
+    >
       {rows.map((row) => (
         <li
           key={row.id}

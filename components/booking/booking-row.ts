@@ -22,7 +22,9 @@ export interface BookingRow {
 }
 
 /** The one thing to do with a booking now. */
-export function nextStep(booking: Pick<BookingListItem, 'id' | 'verdict' | 'planState' | 'planId'>): BookingRow['next'] {
+export function nextStep(
+  booking: Pick<BookingListItem, 'id' | 'verdict' | 'planState' | 'planId'>,
+): BookingRow['next'] {
   const bench = `/bench/${booking.id}`;
   if (booking.planId && booking.planState && booking.planState !== 'draft') {
     return { label: 'Open the plan', href: `/plans/${booking.planId}` };
@@ -35,7 +37,7 @@ export function nextStep(booking: Pick<BookingListItem, 'id' | 'verdict' | 'plan
 }
 
 export function planWords(state: BookingListItem['planState']): string {
-  return state ? `plan ${state}` : 'no plan yet';
+  return state ? `plan: ${state}` : 'no plan yet';
 }
 
 export function toBookingRow(booking: BookingListItem): BookingRow {

@@ -30,31 +30,49 @@ const COLUMNS: readonly DataColumn<BookingRow>[] = [
     ),
   },
   { id: 'protocol', header: 'Protocol', value: (row) => row.protocol, cell: (row) => row.protocol },
-  { id: 'scanner', header: 'Scanner', value: (row) => row.scanner, cell: (row) => row.scanner },
+  {
+    id: 'scanner',
+    header: 'Scanner',
+    value: (row) => row.scanner,
+    cell: (row) => <span className="whitespace-nowrap">{row.scanner}</span>,
+  },
   {
     id: 'verdict',
     header: 'Worst verdict',
     value: (row) => (row.verdict ? VERDICT_WORDS[row.verdict] : 'Sizes needed'),
-    cell: (row) => <BookingVerdict verdict={row.verdict} />,
+    cell: (row) => (
+      <div className="min-w-44">
+        <BookingVerdict verdict={row.verdict} />
+      </div>
+    ),
   },
   {
     id: 'minutes',
     header: 'Needs, slot',
     value: (row) => row.minutesNeeded ?? -1,
     cell: (row) => (
-      <Figure
-        value={`${row.minutesNeeded === undefined ? '–' : Math.ceil(row.minutesNeeded)} / ${row.slotMinutes}`}
-        unit="min"
-      />
+      <span className="whitespace-nowrap">
+        <Figure value={row.minutesNeeded === undefined ? '–' : Math.ceil(row.minutesNeeded)} /> of{' '}
+        <Figure value={row.slotMinutes} unit="min" />
+      </span>
     ),
   },
-  { id: 'plan', header: 'Plan', value: (row) => row.plan, cell: (row) => row.plan },
+  {
+    id: 'plan',
+    header: 'Plan',
+    value: (row) => row.plan,
+    cell: (row) => <span className="whitespace-nowrap">{row.plan}</span>,
+  },
   {
     id: 'next',
     header: 'Next',
     value: (row) => row.next.label,
     cell: (row) => (
-      <Link href={row.next.href} className="text-link whitespace-nowrap" aria-label={`${row.next.label}, ${row.accession}`}>
+      <Link
+        href={row.next.href}
+        className="text-link whitespace-nowrap"
+        aria-label={`${row.next.label}, ${row.accession}`}
+      >
         {row.next.label}
       </Link>
     ),

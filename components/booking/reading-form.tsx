@@ -89,14 +89,23 @@ export function ReadingForm({
       const result = await add([values]);
       if (result.ok || !result.error.fields) return result;
       // The service names its fields in the list it was given.
-      const fields = Object.entries(result.error.fields).map(([path, text]) => [path.replace(/^readings\.0\.?/, ''), text]);
-      return { ok: false, error: { ...result.error, fields: Object.fromEntries(fields) as Record<string, string> } };
+      const fields = Object.entries(result.error.fields).map(([path, text]) => [
+        path.replace(/^readings\.0\.?/, ''),
+        text,
+      ]);
+      return {
+        ok: false,
+        error: { ...result.error, fields: Object.fromEntries(fields) as Record<string, string> },
+      };
     },
     onSaved: () => {
       say('The reading was added. Earlier ones stay.');
       // What was typed while the answer was on its way belongs to the next reading.
       const { value, ...rest } = state.form.getValues();
-      state.form.reset({ ...rest, ...(value === saved.current ? { spread: 0, value: undefined } : { value }) });
+      state.form.reset({
+        ...rest,
+        ...(value === saved.current ? { spread: 0, value: undefined } : { value }),
+      });
       router.refresh();
     },
   });
@@ -120,7 +129,12 @@ export function ReadingForm({
         </div>
         <div className="mt-5 space-y-4">
           <FormOutcome state={state} schema={sizeReadingInput} noun="reading" />
-          <Button type="submit" variant="primary" pending={state.form.formState.isSubmitting} pendingLabel="Adding…">
+          <Button
+            type="submit"
+            variant="primary"
+            pending={state.form.formState.isSubmitting}
+            pendingLabel="Adding…"
+          >
             Add this reading
           </Button>
         </div>

@@ -64,7 +64,9 @@ export function SizeRecord({ record }: { record: SizeRecordView }) {
                   <ReadingValue reading={reading} />
                 </Td>
                 <Td>
-                  <Badge edge={isMeasured(reading.source) ? 'solid' : 'dotted'} className="whitespace-normal">{SOURCE_WORDS[reading.source]}</Badge>
+                  <Badge edge={isMeasured(reading.source) ? 'solid' : 'dotted'} className="whitespace-normal">
+                    {SOURCE_WORDS[reading.source]}
+                  </Badge>
                 </Td>
                 <Td className="whitespace-nowrap">
                   {formatDate(new Date(`${reading.takenOn}T12:00:00`))}

@@ -46,7 +46,9 @@ export function TodayView({
             )
           }
         >
-          {coming.length > 0 ? 'The coming days are below.' : 'Nothing is booked for the next seven days either.'}
+          {coming.length > 0
+            ? 'The coming days are below.'
+            : 'Nothing is booked for the next seven days either.'}
         </EmptyState>
       )}
       {coming.map(([key, of]) => (

@@ -34,7 +34,12 @@ export function FoldDrawing({ worked, description }: { worked: WorkedFold; descr
   const half = worked.widthMm / 2;
   const name = (part: string) => `${id}${part}`;
   return (
-    <svg viewBox="-318 -222 636 444" role="img" aria-label={description} className="block h-auto w-full select-none">
+    <svg
+      viewBox="-318 -222 636 444"
+      role="img"
+      aria-label={description}
+      className="block h-auto w-full select-none"
+    >
       <defs>
         <pattern id={name('ticks')} width="6" height="5" patternUnits="userSpaceOnUse">
           <path d="M0 5 L4 0" className="stroke-ink" strokeWidth="0.75" />
@@ -103,7 +108,11 @@ export function FoldDrawing({ worked, description }: { worked: WorkedFold; descr
         strokeWidth="1.75"
         strokeDasharray="7 5"
       />
-      <text x={keepClear.fromXMm + 8} y={keepClear.posteriorMm - 10} className="fill-ink text-[25px] sm:text-[17px]">
+      <text
+        x={keepClear.fromXMm + 8}
+        y={keepClear.posteriorMm - 10}
+        className="fill-ink text-[25px] sm:text-[17px]"
+      >
         keep-clear area
       </text>
 

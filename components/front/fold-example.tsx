@@ -41,7 +41,8 @@ export function FoldExample() {
         <p className="flex min-h-14 items-start gap-2.5" aria-live="polite">
           <Mark kind={look.mark} className={cx('mt-1', look.tone)} />
           <span>
-            <strong className={cx('font-semibold', look.tone)}>{VERDICT_WORDS[worked.verdict]}</strong>: {reason}
+            <strong className={cx('font-semibold', look.tone)}>{VERDICT_WORDS[worked.verdict]}</strong>:{' '}
+            {reason}
           </span>
         </p>
         <NumberSlider

@@ -23,9 +23,9 @@ export function FrontText({ entry }: { entry: { href: string; label: string } })
         What will wrap around, and the cheapest way to keep it out of the part that matters
       </h1>
       <p className="mt-5 max-w-prose text-lg text-ink-soft">
-        A radiographer about to scan a large-habitus abdomen has to choose a field of view, a phase direction and an
-        oversampling that keep tissue outside the picture from folding onto the organ under question, inside one
-        breath-hold, on a scanner whose opening and table the patient must fit.
+        A radiographer about to scan a large-habitus abdomen has to choose a field of view, a phase direction
+        and an oversampling that keep tissue outside the picture from folding onto the organ under question,
+        inside one breath-hold, on a scanner whose opening and table the patient must fit.
       </p>
       <dl className="mt-8 divide-y divide-line border-y border-line">
         {PARTS.map((part) => (
@@ -41,8 +41,8 @@ export function FrontText({ entry }: { entry: { href: string; label: string } })
         </LinkButton>
       </p>
       <p className="mt-6 max-w-prose text-sm text-ink-soft">
-        Planning aid. Trained staff, implant screening, equipment labelling and local policy decide. Licensed practice
-        prevails.
+        Planning aid. Trained staff, implant screening, equipment labelling and local policy decide. Licensed
+        practice prevails.
       </p>
     </div>
   );

@@ -2,7 +2,14 @@
 
 import { useFormContext, useWatch } from 'react-hook-form';
 import { Checkbox } from '@/components/ui/choice';
-import { FormCheckbox, FormMessage, FormNumber, FormSelect, FormText } from '@/components/ui/form';
+import {
+  useReadOnly,
+  FormCheckbox,
+  FormMessage,
+  FormNumber,
+  FormSelect,
+  FormText,
+} from '@/components/ui/form';
 import { Panel } from '@/components/ui/panel';
 import { schemaAt } from '@/components/ui/schema-facts';
 import { keepClearOfPreset, keepClearPresetsFor } from '@/lib/domain/protocol/keep-clear-presets';
@@ -21,7 +28,14 @@ const EDGES = [
 ] as const;
 
 // An organ does not grow with the fat around it: for a body of any size this large the preset's own edges count.
-const ANY_LARGE_BODY = { right: 1000, left: 1000, anterior: 1000, posterior: 1000, superior: 1000, inferior: 1000 };
+const ANY_LARGE_BODY = {
+  right: 1000,
+  left: 1000,
+  anterior: 1000,
+  posterior: 1000,
+  superior: 1000,
+  inferior: 1000,
+};
 
 type KeepClearForm = ProtocolForm['keepClear'];
 type BoxForm = NonNullable<KeepClearForm['mustStayDisplayed']>;
@@ -59,22 +73,28 @@ export function KeepClearGroup() {
   const { setValue, getValues } = useFormContext<ProtocolForm>();
   const region = useWatch<ProtocolForm, 'region'>({ name: 'region' });
   const kind = useWatch<ProtocolForm, 'keepClear.area.kind'>({ name: 'keepClear.area.kind' });
-  const displayed = useWatch<ProtocolForm, 'keepClear.mustStayDisplayed'>({ name: 'keepClear.mustStayDisplayed' });
+  const displayed = useWatch<ProtocolForm, 'keepClear.mustStayDisplayed'>({
+    name: 'keepClear.mustStayDisplayed',
+  });
+  const readOnly = useReadOnly();
   const presets = keepClearPresetsFor(region as BodyRegion);
 
   const follow = (key: string) => {
-    if (key === 'whole-picture') return setValue('keepClear.area', { kind: 'whole-picture' }, { shouldDirty: true });
+    if (key === 'whole-picture')
+      return setValue('keepClear.area', { kind: 'whole-picture' }, { shouldDirty: true });
     const area = getValues('keepClear.area');
     const box = presetBox(key) ?? (area.kind === 'box' ? area.box : START_BOX);
     const label = presets.find((preset) => preset.key === key)?.label;
-    setValue('keepClear.area', label ? { kind: 'box', box, label } : { kind: 'box', box }, { shouldDirty: true });
+    setValue('keepClear.area', label ? { kind: 'box', box, label } : { kind: 'box', box }, {
+      shouldDirty: true,
+    });
   };
 
   return (
     <Panel title="Keep-clear area">
       <p className="mb-4 max-w-prose text-ink-soft">
-        What must stay free of fold, fixed in the patient. Distances in mm from the point the sizes are taken from; a
-        negative one lies beyond it, on the other side.
+        What must stay free of fold, fixed in the patient. Distances in mm from the point the sizes are taken
+        from; a negative one lies beyond it, on the other side.
       </p>
       <div className="grid gap-x-6 gap-y-5 sm:grid-cols-3">
         <FormSelect
@@ -96,11 +116,16 @@ export function KeepClearGroup() {
       <div className="mt-5 space-y-2">
         <Checkbox
           label="More anatomy must stay displayed than the area itself"
+          disabled={readOnly}
           checked={displayed !== undefined}
           onChange={(event) =>
-            setValue('keepClear.mustStayDisplayed', event.target.checked ? structuredClone(START_BOX) : undefined, {
-              shouldDirty: true,
-            })
+            setValue(
+              'keepClear.mustStayDisplayed',
+              event.target.checked ? structuredClone(START_BOX) : undefined,
+              {
+                shouldDirty: true,
+              },
+            )
           }
         />
         {displayed && <BoxFields name="keepClear.mustStayDisplayed" />}

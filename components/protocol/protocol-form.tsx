@@ -38,19 +38,34 @@ export function ProtocolForm({ stored, save, readCurrent, mayEdit }: ProtocolFor
     save,
     readCurrent,
     onSaved: ({ version }) => {
-      say(!stored ? 'The protocol was added.' : version === state.version ? 'Nothing had changed.' : `Saved as version ${version}.`);
+      say(
+        !stored
+          ? 'The protocol was added.'
+          : version === state.version
+            ? 'Nothing had changed.'
+            : `Saved as version ${version}.`,
+      );
       router.push('/site/protocols');
       router.refresh();
     },
   });
-  const { fields, append, insert, remove, move } = useFieldArray({ control: state.form.control, name: 'sequences' });
+  const { fields, append, insert, remove, move } = useFieldArray({
+    control: state.form.control,
+    name: 'sequences',
+  });
   // What was just added is open; what was stored is one line each.
   const [opened, setOpened] = useState<string | null>(null);
-  const startsOpen = (id: string, index: number) => !stored || fields.length === 1 || index.toString() === opened || id === opened;
+  const startsOpen = (id: string, index: number) =>
+    !stored || fields.length === 1 || index.toString() === opened || id === opened;
 
   return (
-    <Form form={state.form} onSubmit={state.submit} label={stored ? 'Edit protocol' : 'Add a protocol'}>
-      <fieldset disabled={!mayEdit} className="min-w-0 space-y-5">
+    <Form
+      form={state.form}
+      onSubmit={state.submit}
+      readOnly={!mayEdit}
+      label={stored ? 'Edit protocol' : 'Add a protocol'}
+    >
+      <div className="space-y-5">
         <Panel title="The protocol">
           <div className="grid gap-x-6 gap-y-5 sm:grid-cols-3">
             <FormText name="name" label="Name" className="sm:col-span-2" required />
@@ -97,12 +112,17 @@ export function ProtocolForm({ stored, save, readCurrent, mayEdit }: ProtocolFor
             </Button>
           )}
         </section>
-      </fieldset>
+      </div>
       <div className="mt-5 space-y-4">
         <FormOutcome state={state} schema={protocolFormSchema} noun="protocol" />
         {mayEdit && !state.stale && (
           <div className="flex flex-wrap gap-3">
-            <Button type="submit" variant="primary" pending={state.form.formState.isSubmitting} pendingLabel="Saving…">
+            <Button
+              type="submit"
+              variant="primary"
+              pending={state.form.formState.isSubmitting}
+              pendingLabel="Saving…"
+            >
               {stored ? `Save as version ${state.version + 1}` : 'Add this protocol'}
             </Button>
             <LinkButton href="/site/protocols" variant="quiet">

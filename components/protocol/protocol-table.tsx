@@ -7,7 +7,13 @@ import { REGION_WORDS } from '@/lib/presentation/anatomy-words';
 import { formatMoment } from '@/lib/presentation/moment';
 import type { ProtocolListItem } from '@/lib/schemas/protocol';
 
-export function ProtocolTable({ protocols, mayEdit }: { protocols: readonly ProtocolListItem[]; mayEdit: boolean }) {
+export function ProtocolTable({
+  protocols,
+  mayEdit,
+}: {
+  protocols: readonly ProtocolListItem[];
+  mayEdit: boolean;
+}) {
   if (protocols.length === 0) {
     return (
       <EmptyState

@@ -34,7 +34,9 @@ export const FILL_WORDS: Readonly<Record<Prescription['partialFourierFill'], str
 };
 
 /** While a form is being filled any number may still be missing. */
-export type Partially<T> = { readonly [K in keyof T]?: T[K] extends object ? Partially<T[K]> | null : T[K] | null };
+export type Partially<T> = {
+  readonly [K in keyof T]?: T[K] extends object ? Partially<T[K]> | null : T[K] | null;
+};
 type Draft = Partially<Prescription>;
 
 const say = (value: unknown): string =>
@@ -43,7 +45,8 @@ const say = (value: unknown): string =>
 export function kindSummary(draft: Draft): string {
   const plane = draft.plane ? PLANE_WORDS[draft.plane] : '–';
   const phase = draft.phaseAxis ? `phase ${AXIS_WORDS[draft.phaseAxis]}` : '–';
-  const way = draft.trajectory && draft.trajectory !== 'cartesian' ? `, ${TRAJECTORY_WORDS[draft.trajectory]}` : '';
+  const way =
+    draft.trajectory && draft.trajectory !== 'cartesian' ? `, ${TRAJECTORY_WORDS[draft.trajectory]}` : '';
   return `${draft.family ? FAMILY_WORDS[draft.family] : '–'}, ${plane}, ${phase}${way}`;
 }
 
@@ -69,7 +72,8 @@ export function slicesSummary(draft: Draft): string {
 }
 
 export function timingSummary(draft: Draft): string {
-  const train = draft.echoTrainLength && draft.echoTrainLength > 1 ? `, train of ${say(draft.echoTrainLength)}` : '';
+  const train =
+    draft.echoTrainLength && draft.echoTrainLength > 1 ? `, train of ${say(draft.echoTrainLength)}` : '';
   return `TR ${say(draft.trMs)} ms, TE ${say(draft.teMs)} ms, ${say(draft.averages)} ${draft.averages === 1 ? 'average' : 'averages'}${train}`;
 }
 
@@ -82,7 +86,8 @@ export function savingSummary(draft: Draft): string {
   const r = draft.acceleration?.factorPhase;
   const rz = draft.acceleration?.factorSlice;
   const factor = (r ?? 1) > 1 || (rz ?? 1) > 1 ? `accelerated ${say(r)} × ${say(rz)}` : 'not accelerated';
-  const partial = (draft.partialFourierPhase ?? 1) < 1 ? `partial Fourier ${say(draft.partialFourierPhase)}` : 'all lines';
+  const partial =
+    (draft.partialFourierPhase ?? 1) < 1 ? `partial Fourier ${say(draft.partialFourierPhase)}` : 'all lines';
   return `${factor}, ${partial}`;
 }
 
@@ -90,4 +95,3 @@ export function savingSummary(draft: Draft): string {
 export function sequenceSummary(draft: Draft): string {
   return `${kindSummary(draft)} · ${windowSummary(draft)}`;
 }
-

@@ -33,7 +33,13 @@ export function KindGroup({ at, refused }: GroupProps) {
   const axes = axesOfPlane(sequence.plane);
   const keys = ['name', 'family', 'plane', 'phaseAxis', 'trajectory', 'coil'];
   return (
-    <Panel level={4} title="What it is" collapsible summary={kindSummary(sequence)} open={refused(keys) || undefined}>
+    <Panel
+      level={4}
+      title="What it is"
+      collapsible
+      summary={kindSummary(sequence)}
+      open={refused(keys) || undefined}
+    >
       <div className={GRID}>
         <FormText name={`${at}.name`} label="Name" hint="As the worklist or the team says it" required />
         <FormSelect
@@ -42,7 +48,9 @@ export function KindGroup({ at, refused }: GroupProps) {
           options={optionsOf(FAMILY_WORDS)}
           hint="Sets which fields are asked for"
           onChosen={(family) =>
-            setValue(at, asFamily(getValues(at) as SequenceForm, family as SequenceFamily), { shouldDirty: true })
+            setValue(at, asFamily(getValues(at) as SequenceForm, family as SequenceFamily), {
+              shouldDirty: true,
+            })
           }
         />
         <FormSelect
@@ -85,8 +93,15 @@ export function WindowGroup({ at, refused }: GroupProps) {
   const sequence = useSequence(at);
   const shape = prescriptionShape;
   const keys = [
-    'fovPhaseMm', 'fovReadoutMm', 'linesAcrossFov', 'readoutMatrix', 'acquiredLines', 'centreMm', 'tiltAboutReadoutDeg',
-    'tiltAboutPhaseDeg', 'inPlaneRotationDeg',
+    'fovPhaseMm',
+    'fovReadoutMm',
+    'linesAcrossFov',
+    'readoutMatrix',
+    'acquiredLines',
+    'centreMm',
+    'tiltAboutReadoutDeg',
+    'tiltAboutPhaseDeg',
+    'inPlaneRotationDeg',
   ];
   const centre = vec3Schema('FOV centre');
   return (
@@ -100,7 +115,11 @@ export function WindowGroup({ at, refused }: GroupProps) {
       <div className={GRID}>
         <FormNumber name={`${at}.fovPhaseMm`} schema={shape.fovPhaseMm} label="FOV, phase" />
         <FormNumber name={`${at}.fovReadoutMm`} schema={shape.fovReadoutMm} label="FOV, readout" />
-        <FormNumber name={`${at}.linesAcrossFov`} schema={shape.linesAcrossFov} label="Lines across the phase FOV" />
+        <FormNumber
+          name={`${at}.linesAcrossFov`}
+          schema={shape.linesAcrossFov}
+          label="Lines across the phase FOV"
+        />
         <FormNumber name={`${at}.readoutMatrix`} schema={shape.readoutMatrix} label="Matrix, readout" />
         <FormNumber
           name={`${at}.acquiredLines`}
@@ -117,9 +136,21 @@ export function WindowGroup({ at, refused }: GroupProps) {
             hint="Offset from the size record’s origin"
           />
         ))}
-        <FormNumber name={`${at}.tiltAboutReadoutDeg`} schema={shape.tiltAboutReadoutDeg} label="Tilt about readout" />
-        <FormNumber name={`${at}.tiltAboutPhaseDeg`} schema={shape.tiltAboutPhaseDeg} label="Tilt about phase" />
-        <FormNumber name={`${at}.inPlaneRotationDeg`} schema={shape.inPlaneRotationDeg} label="Rotation in the plane" />
+        <FormNumber
+          name={`${at}.tiltAboutReadoutDeg`}
+          schema={shape.tiltAboutReadoutDeg}
+          label="Tilt about readout"
+        />
+        <FormNumber
+          name={`${at}.tiltAboutPhaseDeg`}
+          schema={shape.tiltAboutPhaseDeg}
+          label="Tilt about phase"
+        />
+        <FormNumber
+          name={`${at}.inPlaneRotationDeg`}
+          schema={shape.inPlaneRotationDeg}
+          label="Rotation in the plane"
+        />
       </div>
     </Panel>
   );
@@ -140,7 +171,11 @@ export function SlicesGroup({ at, refused }: GroupProps) {
       {slab ? (
         <>
           <div className={GRID}>
-            <FormNumber name={`${at}.slices.partitions`} schema={slabShape.partitions} label="Partitions in the slab" />
+            <FormNumber
+              name={`${at}.slices.partitions`}
+              schema={slabShape.partitions}
+              label="Partitions in the slab"
+            />
             <FormNumber
               name={`${at}.slices.partitionThicknessMm`}
               schema={slabShape.partitionThicknessMm}

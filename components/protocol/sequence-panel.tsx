@@ -2,7 +2,7 @@
 
 import { useFormContext, useFormState } from 'react-hook-form';
 import { IconButton } from '@/components/ui/button';
-import { FormMessage } from '@/components/ui/form';
+import { FormMessage, useReadOnly } from '@/components/ui/form';
 import { ArrowDownIcon, ArrowUpIcon, CrossIcon, PlusIcon } from '@/components/ui/icons';
 import { Panel } from '@/components/ui/panel';
 import { KindGroup, SlicesGroup, useSequence, WindowGroup } from './sequence-groups';
@@ -22,46 +22,49 @@ export interface SequencePanelProps {
 export function SequencePanel({ index, count, startsOpen, onMove, onRemove, onRepeat }: SequencePanelProps) {
   const at = `sequences.${index}`;
   const sequence = useSequence(at);
+  const readOnly = useReadOnly();
   const { getFieldState } = useFormContext();
   const formState = useFormState();
-  const refused = (keys: readonly string[]) => keys.some((key) => getFieldState(`${at}.${key}`, formState).invalid);
+  const refused = (keys: readonly string[]) =>
+    keys.some((key) => getFieldState(`${at}.${key}`, formState).invalid);
   if (!sequence) return null;
   const name = sequence.name || `Sequence ${index + 1}`;
   const invalid = getFieldState(at, formState).invalid;
+  const actions = (
+    <>
+      <IconButton label={`Move ${name} up`} disabled={index === 0} onClick={() => onMove(-1)}>
+        <ArrowUpIcon />
+      </IconButton>
+      <IconButton label={`Move ${name} down`} disabled={index === count - 1} onClick={() => onMove(1)}>
+        <ArrowDownIcon />
+      </IconButton>
+      <IconButton label={`Repeat ${name} as a new sequence`} onClick={onRepeat}>
+        <PlusIcon />
+      </IconButton>
+      <IconButton label={`Remove ${name}`} disabled={count === 1} onClick={onRemove}>
+        <CrossIcon />
+      </IconButton>
+    </>
+  );
   return (
-    <div className="relative">
-      <Panel
-        level={3}
-        title={<span className="pr-2">{`${index + 1}. ${name}`}</span>}
-        collapsible
-        defaultOpen={startsOpen}
-        open={invalid || undefined}
-        summary={<span className="hidden pr-40 md:inline">{sequenceSummary(sequence)}</span>}
-      >
-        <div className="space-y-3">
-          <KindGroup at={at} refused={refused} />
-          <WindowGroup at={at} refused={refused} />
-          <SlicesGroup at={at} refused={refused} />
-          <TimingGroup at={at} refused={refused} />
-          <SavingGroup at={at} refused={refused} />
-          <PresaturationGroup at={at} refused={refused} />
-          <FormMessage name={`${at}.slices.mode`} />
-        </div>
-      </Panel>
-      <div className="absolute top-2.5 right-2 flex">
-        <IconButton label={`Move ${name} up`} disabled={index === 0} onClick={() => onMove(-1)}>
-          <ArrowUpIcon />
-        </IconButton>
-        <IconButton label={`Move ${name} down`} disabled={index === count - 1} onClick={() => onMove(1)}>
-          <ArrowDownIcon />
-        </IconButton>
-        <IconButton label={`Repeat ${name} as a new sequence`} onClick={onRepeat}>
-          <PlusIcon />
-        </IconButton>
-        <IconButton label={`Remove ${name}`} disabled={count === 1} onClick={onRemove}>
-          <CrossIcon />
-        </IconButton>
+    <Panel
+      level={3}
+      title={`${index + 1}. ${name}`}
+      collapsible
+      defaultOpen={startsOpen}
+      open={invalid || undefined}
+      summary={<span className="hidden lg:inline">{sequenceSummary(sequence)}</span>}
+      actions={!readOnly && actions}
+    >
+      <div className="space-y-3">
+        <KindGroup at={at} refused={refused} />
+        <WindowGroup at={at} refused={refused} />
+        <SlicesGroup at={at} refused={refused} />
+        <TimingGroup at={at} refused={refused} />
+        <SavingGroup at={at} refused={refused} />
+        <PresaturationGroup at={at} refused={refused} />
+        <FormMessage name={`${at}.slices.mode`} />
       </div>
-    </div>
+    </Panel>
   );
 }

@@ -2,21 +2,44 @@
 
 import { useFieldArray, useFormContext } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
-import { FormCheckbox, FormNumber, FormSegmented, FormSelect } from '@/components/ui/form';
+import { FormCheckbox, FormNumber, FormSegmented, FormSelect, useReadOnly } from '@/components/ui/form';
 import { PlusIcon } from '@/components/ui/icons';
 import { optionsOf } from '@/components/ui/options';
 import { Panel } from '@/components/ui/panel';
 import { UNFOLDING_WORDS } from '@/lib/presentation/setup-words';
-import { accelerationShape, presaturationShape, prescriptionShape as shape } from '@/lib/schemas/case/prescription';
-import { BREATHING_WORDS, breathingSummary, familyFields, FILL_WORDS, savingSummary, timingSummary } from './sequence-facts';
+import {
+  accelerationShape,
+  presaturationShape,
+  prescriptionShape as shape,
+} from '@/lib/schemas/case/prescription';
+import {
+  BREATHING_WORDS,
+  breathingSummary,
+  familyFields,
+  FILL_WORDS,
+  savingSummary,
+  timingSummary,
+} from './sequence-facts';
 import { GRID, useSequence, type GroupProps } from './sequence-groups';
 
 export function TimingGroup({ at, refused }: GroupProps) {
   const sequence = useSequence(at);
   const fields = familyFields(sequence.family);
   const keys = [
-    'trMs', 'teMs', 'flipDeg', 'averages', 'bandwidthHzPerPixel', 'echoTrainLength', 'echoSpacingMs', 'shots', 'volumes',
-    'sliceTimeMs', 'preparationMs', 'segments', 'breathing', 'breathsPerTr',
+    'trMs',
+    'teMs',
+    'flipDeg',
+    'averages',
+    'bandwidthHzPerPixel',
+    'echoTrainLength',
+    'echoSpacingMs',
+    'shots',
+    'volumes',
+    'sliceTimeMs',
+    'preparationMs',
+    'segments',
+    'breathing',
+    'breathsPerTr',
   ];
   const singleShot = sequence.family === 'single-shot-echo-train';
   return (
@@ -45,14 +68,29 @@ export function TimingGroup({ at, refused }: GroupProps) {
           step={10}
         />
         {fields.train && !singleShot && (
-          <FormNumber name={`${at}.echoTrainLength`} schema={shape.echoTrainLength} label="Echo train length" hint="1 to 1024 echoes" />
+          <FormNumber
+            name={`${at}.echoTrainLength`}
+            schema={shape.echoTrainLength}
+            label="Echo train length"
+            hint="1 to 1024 echoes"
+          />
         )}
         {(fields.train || fields.echoPlanar) && (
-          <FormNumber name={`${at}.echoSpacingMs`} schema={shape.echoSpacingMs} label="Echo spacing" step={0.1} />
+          <FormNumber
+            name={`${at}.echoSpacingMs`}
+            schema={shape.echoSpacingMs}
+            label="Echo spacing"
+            step={0.1}
+          />
         )}
         {fields.echoPlanar && (
           <>
-            <FormNumber name={`${at}.shots`} schema={shape.shots} label="Shots" hint="1 to 256; 1 is single shot" />
+            <FormNumber
+              name={`${at}.shots`}
+              schema={shape.shots}
+              label="Shots"
+              hint="1 to 256; 1 is single shot"
+            />
             <FormNumber
               name={`${at}.volumes`}
               schema={shape.volumes}
@@ -71,18 +109,37 @@ export function TimingGroup({ at, refused }: GroupProps) {
         )}
         {fields.slab && (
           <>
-            <FormNumber name={`${at}.preparationMs`} schema={shape.preparationMs} label="Preparation per segment" />
-            <FormNumber name={`${at}.segments`} schema={shape.segments} label="Segments" hint="0 when there is no preparation" />
+            <FormNumber
+              name={`${at}.preparationMs`}
+              schema={shape.preparationMs}
+              label="Preparation per segment"
+            />
+            <FormNumber
+              name={`${at}.segments`}
+              schema={shape.segments}
+              label="Segments"
+              hint="0 when there is no preparation"
+            />
           </>
         )}
       </div>
       <div className="mt-5 flex flex-wrap items-start gap-x-6 gap-y-4">
         <FormSegmented name={`${at}.breathing`} legend="Breathing" options={optionsOf(BREATHING_WORDS)} />
         {sequence.breathing === 'triggered' && (
-          <FormNumber className="w-40" name={`${at}.breathsPerTr`} schema={shape.breathsPerTr} label="Breaths per TR" />
+          <FormNumber
+            className="w-40"
+            name={`${at}.breathsPerTr`}
+            schema={shape.breathsPerTr}
+            label="Breaths per TR"
+          />
         )}
       </div>
-      <FormCheckbox className="mt-4" name={`${at}.fatSuppressed`} label="Fat-suppressed" hint="Rim fat still counts as bright unless it was measured." />
+      <FormCheckbox
+        className="mt-4"
+        name={`${at}.fatSuppressed`}
+        label="Fat-suppressed"
+        hint="Rim fat still counts as bright unless it was measured."
+      />
     </Panel>
   );
 }
@@ -97,27 +154,87 @@ export function SavingGroup({ at, refused }: GroupProps) {
       collapsible
       defaultOpen={false}
       summary={savingSummary(sequence)}
-      open={refused(['acceleration', 'partialFourierPhase', 'partialFourierSlice', 'partialFourierFill']) || undefined}
+      open={
+        refused(['acceleration', 'partialFourierPhase', 'partialFourierSlice', 'partialFourierFill']) ||
+        undefined
+      }
     >
       <div className={GRID}>
-        <FormNumber name={`${at}.acceleration.factorPhase`} schema={accelerationShape.factorPhase} label="Factor along phase" hint="1 to 12; 1 is none" step={0.5} />
+        <FormNumber
+          name={`${at}.acceleration.factorPhase`}
+          schema={accelerationShape.factorPhase}
+          label="Factor along phase"
+          hint="1 to 12; 1 is none"
+          step={0.5}
+        />
         {slab && (
-          <FormNumber name={`${at}.acceleration.factorSlice`} schema={accelerationShape.factorSlice} label="Factor along slice" hint="1 to 8; 1 is none" step={0.5} />
+          <FormNumber
+            name={`${at}.acceleration.factorSlice`}
+            schema={accelerationShape.factorSlice}
+            label="Factor along slice"
+            hint="1 to 8; 1 is none"
+            step={0.5}
+          />
         )}
-        <FormNumber name={`${at}.acceleration.referenceLines`} schema={accelerationShape.referenceLines} label="Reference lines inside the scan" hint="0 to 256; 0 with its own calibration" />
+        <FormNumber
+          name={`${at}.acceleration.referenceLines`}
+          schema={accelerationShape.referenceLines}
+          label="Reference lines inside the scan"
+          hint="0 to 256; 0 with its own calibration"
+        />
         {slab && (
-          <FormNumber name={`${at}.acceleration.referencePartitions`} schema={accelerationShape.referencePartitions} label="Reference partitions" />
+          <FormNumber
+            name={`${at}.acceleration.referencePartitions`}
+            schema={accelerationShape.referencePartitions}
+            label="Reference partitions"
+          />
         )}
-        <FormNumber name={`${at}.acceleration.calibrationS`} schema={accelerationShape.calibrationS} label="Calibration scan of its own" />
-        <FormNumber name={`${at}.acceleration.geometryFactor`} schema={accelerationShape.geometryFactor} label="Geometry factor" hint="1 to 20; empty: the policy’s range" step={0.1} />
-        <FormSelect name={`${at}.acceleration.unfolding`} label="Unfolded" hint="Not known: the scanner’s own way is used" options={optionsOf(UNFOLDING_WORDS)} />
-        <FormNumber name={`${at}.partialFourierPhase`} schema={shape.partialFourierPhase} label="Partial Fourier, phase" hint="0.51 to 1; 1 is all lines" step={0.05} />
+        <FormNumber
+          name={`${at}.acceleration.calibrationS`}
+          schema={accelerationShape.calibrationS}
+          label="Calibration scan of its own"
+        />
+        <FormNumber
+          name={`${at}.acceleration.geometryFactor`}
+          schema={accelerationShape.geometryFactor}
+          label="Geometry factor"
+          hint="1 to 20; empty: the policy’s range"
+          step={0.1}
+        />
+        <FormSelect
+          name={`${at}.acceleration.unfolding`}
+          label="Unfolded"
+          hint="Not known: the scanner’s own way is used"
+          options={optionsOf(UNFOLDING_WORDS)}
+        />
+        <FormNumber
+          name={`${at}.partialFourierPhase`}
+          schema={shape.partialFourierPhase}
+          label="Partial Fourier, phase"
+          hint="0.51 to 1; 1 is all lines"
+          step={0.05}
+        />
         {slab && (
-          <FormNumber name={`${at}.partialFourierSlice`} schema={shape.partialFourierSlice} label="Partial Fourier, slice" hint="0.51 to 1; 1 is all" step={0.05} />
+          <FormNumber
+            name={`${at}.partialFourierSlice`}
+            schema={shape.partialFourierSlice}
+            label="Partial Fourier, slice"
+            hint="0.51 to 1; 1 is all"
+            step={0.05}
+          />
         )}
-        <FormSelect name={`${at}.partialFourierFill`} label="Missing lines are filled" options={optionsOf(FILL_WORDS)} />
+        <FormSelect
+          name={`${at}.partialFourierFill`}
+          label="Missing lines are filled"
+          options={optionsOf(FILL_WORDS)}
+        />
       </div>
-      <FormCheckbox className="mt-4" name={`${at}.acceleration.referenceInImage`} label="Reference lines enter the image" hint="They then raise its SNR." />
+      <FormCheckbox
+        className="mt-4"
+        name={`${at}.acceleration.referenceInImage`}
+        label="Reference lines enter the image"
+        hint="They then raise its SNR."
+      />
     </Panel>
   );
 }
@@ -127,6 +244,7 @@ const SIDES = ['anterior', 'posterior', 'right', 'left', 'superior', 'inferior']
 export function PresaturationGroup({ at, refused }: GroupProps) {
   const { control } = useFormContext();
   const { fields, append, remove } = useFieldArray({ control, name: `${at}.presaturation` });
+  const readOnly = useReadOnly();
   return (
     <Panel
       level={4}
@@ -144,23 +262,43 @@ export function PresaturationGroup({ at, refused }: GroupProps) {
               label="Side"
               options={SIDES.map((side) => ({ value: side, label: side }))}
             />
-            <FormNumber name={`${at}.presaturation.${index}.innerEdgeMm`} schema={presaturationShape.innerEdgeMm} label="Inner edge from the origin" />
-            <FormNumber name={`${at}.presaturation.${index}.thicknessMm`} schema={presaturationShape.thicknessMm} label="Thickness" />
-            <FormNumber name={`${at}.presaturation.${index}.nominalFlipDeg`} schema={presaturationShape.nominalFlipDeg} label="Flip angle" />
-            <FormNumber name={`${at}.presaturation.${index}.delayMs`} schema={presaturationShape.delayMs} label="Delay to excitation" />
+            <FormNumber
+              name={`${at}.presaturation.${index}.innerEdgeMm`}
+              schema={presaturationShape.innerEdgeMm}
+              label="Inner edge from the origin"
+            />
+            <FormNumber
+              name={`${at}.presaturation.${index}.thicknessMm`}
+              schema={presaturationShape.thicknessMm}
+              label="Thickness"
+            />
+            <FormNumber
+              name={`${at}.presaturation.${index}.nominalFlipDeg`}
+              schema={presaturationShape.nominalFlipDeg}
+              label="Flip angle"
+            />
+            <FormNumber
+              name={`${at}.presaturation.${index}.delayMs`}
+              schema={presaturationShape.delayMs}
+              label="Delay to excitation"
+            />
             <div className="self-center">
-              <Button variant="quiet" size="sm" onClick={() => remove(index)}>
-                Remove band {index + 1}
-              </Button>
+              {!readOnly && (
+                <Button variant="quiet" size="sm" onClick={() => remove(index)}>
+                  Remove band {index + 1}
+                </Button>
+              )}
             </div>
           </li>
         ))}
       </ul>
-      {fields.length < 6 && (
+      {!readOnly && fields.length < 6 && (
         <Button
           size="sm"
           className="mt-3"
-          onClick={() => append({ side: 'anterior', innerEdgeMm: 120, thicknessMm: 60, nominalFlipDeg: 90, delayMs: 10 })}
+          onClick={() =>
+            append({ side: 'anterior', innerEdgeMm: 120, thicknessMm: 60, nominalFlipDeg: 90, delayMs: 10 })
+          }
         >
           <PlusIcon /> Add a band
         </Button>

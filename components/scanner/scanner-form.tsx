@@ -29,21 +29,32 @@ export function ScannerForm({ stored, save, readCurrent, mayEdit }: ScannerFormP
     save,
     readCurrent,
     onSaved: ({ version }) => {
-      say(!stored ? 'The scanner was added.' : version === state.version ? 'Nothing had changed.' : `Saved as version ${version}.`);
+      say(
+        !stored
+          ? 'The scanner was added.'
+          : version === state.version
+            ? 'Nothing had changed.'
+            : `Saved as version ${version}.`,
+      );
       router.push('/site/scanners');
       router.refresh();
     },
   });
   const saving = state.form.formState.isSubmitting;
   return (
-    <Form form={state.form} onSubmit={state.submit} label={stored ? 'Edit scanner' : 'Add a scanner'}>
-      <fieldset disabled={!mayEdit} className="min-w-0 space-y-5">
+    <Form
+      form={state.form}
+      onSubmit={state.submit}
+      readOnly={!mayEdit}
+      label={stored ? 'Edit scanner' : 'Add a scanner'}
+    >
+      <div className="space-y-5">
         <OpeningGroup />
         <SamplingGroup />
         <UnfoldingGroup />
         <LimitsGroup />
         <OwnerGroup />
-      </fieldset>
+      </div>
       <div className="mt-5 space-y-4">
         <FormOutcome state={state} schema={scannerFormSchema} noun="scanner" />
         {mayEdit && !state.stale && (

@@ -55,10 +55,15 @@ export function SamplingGroup() {
 
   const followStep = (step: string) => {
     const form = getValues('scanner.oversamplingForm');
-    setValue('scanner.lineStep', (step === 'percent' ? { kind: 'percent', percent: 10 } : { kind: step }) as never, {
-      shouldDirty: true,
-    });
-    if (step === 'doubling' && !form.startsWith('doubling')) setValue('scanner.oversamplingForm', 'doubling-switch');
+    setValue(
+      'scanner.lineStep',
+      (step === 'percent' ? { kind: 'percent', percent: 10 } : { kind: step }) as never,
+      {
+        shouldDirty: true,
+      },
+    );
+    if (step === 'doubling' && !form.startsWith('doubling'))
+      setValue('scanner.oversamplingForm', 'doubling-switch');
     if (step !== 'doubling' && form.startsWith('doubling')) setValue('scanner.oversamplingForm', 'percent');
   };
   const followForm = (form: string) => {
@@ -138,12 +143,13 @@ export function UnfoldingGroup() {
         <summary className="text-link">Not known? A ten-minute check with a phantom</summary>
         <ol className="mt-2 list-decimal space-y-1 pl-6 text-ink-soft">
           <li>
-            Unfolding: one accelerated scan with the FOV smaller than the phantom along phase. A ghost in the centre of
-            the picture means the grid ends at the acquired width; no ghost means it does not.
+            Unfolding: one accelerated scan with the FOV smaller than the phantom along phase. A ghost in the
+            centre of the picture means the grid ends at the acquired width; no ghost means it does not.
           </li>
           <li>
-            Slab pulse: one 3D scan at 0 % slice oversampling of a phantom longer than the slab. Count the contaminated
-            partitions at each end; the wider they reach, the smaller the time-bandwidth product of the pulse.
+            Slab pulse: one 3D scan at 0 % slice oversampling of a phantom longer than the slab. Count the
+            contaminated partitions at each end; the wider they reach, the smaller the time-bandwidth product
+            of the pulse.
           </li>
         </ol>
       </details>
@@ -152,23 +158,39 @@ export function UnfoldingGroup() {
 }
 
 const LIMITS = [
-  'fovMinMm', 'fovMaxMm', 'matrixMax', 'acquiredLinesMax', 'phaseOversamplingMaxPct', 'sliceOversamplingMaxPct',
-  'accelerationPhaseMax', 'accelerationSliceMax', 'partialFourierMin', 'averagesMax', 'echoTrainMax',
+  'fovMinMm',
+  'fovMaxMm',
+  'matrixMax',
+  'acquiredLinesMax',
+  'phaseOversamplingMaxPct',
+  'sliceOversamplingMaxPct',
+  'accelerationPhaseMax',
+  'accelerationSliceMax',
+  'partialFourierMin',
+  'averagesMax',
+  'echoTrainMax',
 ] as const;
 const FINE: Partial<Record<(typeof LIMITS)[number], number>> = {
-  accelerationPhaseMax: 0.5, accelerationSliceMax: 0.5, partialFourierMin: 0.05,
+  accelerationPhaseMax: 0.5,
+  accelerationSliceMax: 0.5,
+  partialFourierMin: 0.05,
 };
 
 export function LimitsGroup() {
   return (
     <Panel title="Hard limits">
       <p className="mb-4 max-w-prose text-ink-soft">
-        A remedy beyond one of these moves to “not possible here” with the reason. Filled-in figures of a new scanner
-        are common ones, not yours: check each against the scanner.
+        A remedy beyond one of these moves to “not possible here” with the reason. Filled-in figures of a new
+        scanner are common ones, not yours: check each against the scanner.
       </p>
       <div className={GRID}>
         {LIMITS.map((key) => (
-          <FormNumber key={key} name={`scanner.limits.${key}`} schema={scannerLimitsShape[key]} step={FINE[key]} />
+          <FormNumber
+            key={key}
+            name={`scanner.limits.${key}`}
+            schema={scannerLimitsShape[key]}
+            step={FINE[key]}
+          />
         ))}
       </div>
       <FieldGroup

@@ -66,7 +66,12 @@ export function PersonMenu({ name, roles, siteName, theme: initial, signOutEvery
         <ChevronDownIcon className="size-3" />
       </Menu.Trigger>
       <Menu.Portal>
-        <Menu.Content align="end" sideOffset={6} collisionPadding={8} className={`${menuPanelClass} max-w-72`}>
+        <Menu.Content
+          align="end"
+          sideOffset={6}
+          collisionPadding={8}
+          className={`${menuPanelClass} max-w-72`}
+        >
           <Menu.Label className="px-3 py-2 text-sm text-ink-soft">
             <span className="block text-base font-semibold text-ink">{name}</span>
             <span className="block">{roles}</span>

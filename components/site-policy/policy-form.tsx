@@ -33,17 +33,22 @@ export function PolicyForm({ stored, save, readCurrent, mayEdit }: PolicyFormPro
     },
   });
   return (
-    <Form form={state.form} onSubmit={state.submit} label="Site policy">
-      <fieldset disabled={!mayEdit} className="min-w-0 space-y-5">
+    <Form form={state.form} onSubmit={state.submit} readOnly={!mayEdit} label="Site policy">
+      <div className="space-y-5">
         <MarginGroup />
         <CertaintyGroup />
         <ModelGroup />
         <WeightGroup />
-      </fieldset>
+      </div>
       <div className="mt-5 space-y-4">
         <FormOutcome state={state} schema={policyFormSchema} noun="policy" />
         {mayEdit && !state.stale && (
-          <Button type="submit" variant="primary" pending={state.form.formState.isSubmitting} pendingLabel="Saving…">
+          <Button
+            type="submit"
+            variant="primary"
+            pending={state.form.formState.isSubmitting}
+            pendingLabel="Saving…"
+          >
             Save as version {state.version + 1}
           </Button>
         )}

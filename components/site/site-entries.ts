@@ -31,10 +31,30 @@ export function siteEntries(actor: Actor, counts: Counts): SiteEntry[] {
       state: counts.policyVersion === 0 ? 'the standard' : `version ${counts.policyVersion}`,
       needs: 'policy.read',
     },
-    { href: '/site/details', title: 'Name and numbers', text: 'The site’s name, the form of its accession numbers', needs: 'site.edit' },
-    { href: '/site/people', title: 'People', text: 'Who has an account, and in which roles', needs: 'person.read' },
-    { href: '/site/tokens', title: 'API tokens', text: 'For machines that ask on the site’s behalf', needs: 'api-token.read' },
-    { href: '/site/audit', title: 'Audit log', text: 'Who changed which record, and when', needs: 'audit.read' },
+    {
+      href: '/site/details',
+      title: 'Name and numbers',
+      text: 'The site’s name, the form of its accession numbers',
+      needs: 'site.edit',
+    },
+    {
+      href: '/site/people',
+      title: 'People',
+      text: 'Who has an account, and in which roles',
+      needs: 'person.read',
+    },
+    {
+      href: '/site/tokens',
+      title: 'API tokens',
+      text: 'For machines that ask on the site’s behalf',
+      needs: 'api-token.read',
+    },
+    {
+      href: '/site/audit',
+      title: 'Audit log',
+      text: 'Who changed which record, and when',
+      needs: 'audit.read',
+    },
   ];
   return all.filter((entry) => mayAttempt(actor, entry.needs)).map(({ needs: _needs, ...entry }) => entry);
 }

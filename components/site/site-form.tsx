@@ -33,8 +33,8 @@ export function SiteForm({
     },
   });
   return (
-    <Form form={state.form} onSubmit={state.submit} label="Name and numbers">
-      <fieldset disabled={!mayEdit} className="min-w-0">
+    <Form form={state.form} onSubmit={state.submit} readOnly={!mayEdit} label="Name and numbers">
+      <div>
         <Panel title="This site">
           <div className="space-y-5">
             <FormText name="name" label="Name of the site" required />
@@ -47,11 +47,16 @@ export function SiteForm({
             />
           </div>
         </Panel>
-      </fieldset>
+      </div>
       <div className="mt-5 space-y-4">
         <FormOutcome state={state} schema={siteFormSchema} noun="form" />
         {mayEdit && (
-          <Button type="submit" variant="primary" pending={state.form.formState.isSubmitting} pendingLabel="Saving…">
+          <Button
+            type="submit"
+            variant="primary"
+            pending={state.form.formState.isSubmitting}
+            pendingLabel="Saving…"
+          >
             Save
           </Button>
         )}

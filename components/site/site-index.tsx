@@ -15,7 +15,10 @@ export function SiteIndex({ entries }: { entries: readonly SiteEntry[] }) {
     <ul className="divide-y divide-line overflow-hidden rounded-md border border-line bg-paper">
       {entries.map((entry) => (
         <li key={entry.href}>
-          <Link href={entry.href} className="flex items-center gap-4 px-5 py-3.5 hover:bg-sunk focus-visible:-outline-offset-2">
+          <Link
+            href={entry.href}
+            className="flex items-center gap-4 px-5 py-3.5 hover:bg-sunk focus-visible:-outline-offset-2"
+          >
             <span className="min-w-0 flex-1">
               <span className="block font-semibold">{entry.title}</span>
               <span className="block text-sm text-ink-soft">{entry.text}</span>

@@ -39,7 +39,10 @@ export function ActionButton({
     setProblem(null);
     const result = await action().catch(() => null);
     setPending(false);
-    if (!result) return setProblem({ message: 'The server did not answer. Nothing is known to have changed; try again shortly.' });
+    if (!result)
+      return setProblem({
+        message: 'The server did not answer. Nothing is known to have changed; try again shortly.',
+      });
     if (!result.ok) return setProblem(result.error);
     setAsking(false);
     onDone();
@@ -48,10 +51,21 @@ export function ActionButton({
   return (
     <div ref={opener} className="space-y-2">
       {asking && confirm ? (
-        <div role="group" aria-label={confirm.yes} onKeyDown={(event) => event.key === 'Escape' && back()} className="space-y-2">
+        <div
+          role="group"
+          aria-label={confirm.yes}
+          onKeyDown={(event) => event.key === 'Escape' && back()}
+          className="space-y-2"
+        >
           <p>{confirm.question}</p>
           <div className="flex flex-wrap gap-3">
-            <Button variant="primary" pending={pending} pendingLabel={pendingLabel} onClick={() => void run()} autoFocus>
+            <Button
+              variant="primary"
+              pending={pending}
+              pendingLabel={pendingLabel}
+              onClick={() => void run()}
+              autoFocus
+            >
               {confirm.yes}
             </Button>
             <Button onClick={back}>{confirm.no}</Button>

@@ -29,7 +29,11 @@ export function ArchiveButton({
     try {
       const result = await (archived ? restore() : archive());
       if (result.ok) {
-        say(archived ? `The ${noun} is back in the lists.` : `The ${noun} is out of the lists. Plans made with it stay.`);
+        say(
+          archived
+            ? `The ${noun} is back in the lists.`
+            : `The ${noun} is out of the lists. Plans made with it stay.`,
+        );
         router.refresh();
       } else {
         setProblem(result.error.message);

@@ -16,7 +16,11 @@ const SIZES: Record<ButtonSize, string> = {
   sm: 'min-h-8 px-3 text-sm',
 };
 
-export function buttonClass(variant: ButtonVariant = 'secondary', size: ButtonSize = 'md', extra?: string): string {
+export function buttonClass(
+  variant: ButtonVariant = 'secondary',
+  size: ButtonSize = 'md',
+  extra?: string,
+): string {
   return cx(
     'inline-flex items-center justify-center gap-2 rounded font-semibold no-underline transition-colors duration-100',
     'aria-disabled:cursor-not-allowed aria-disabled:opacity-60 disabled:cursor-not-allowed disabled:opacity-60',

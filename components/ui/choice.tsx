@@ -100,9 +100,24 @@ interface RadioGroupProps<T extends string> {
 
 export function RadioGroup<T extends string>(props: RadioGroupProps<T>) {
   const own = useId();
-  const { legend, legendHidden, name = own, value, onChange, options, hint, error, disabled, className } = props;
+  const {
+    legend,
+    legendHidden,
+    name = own,
+    value,
+    onChange,
+    options,
+    hint,
+    error,
+    disabled,
+    className,
+  } = props;
   return (
-    <fieldset className={className} disabled={disabled} aria-describedby={hint || error ? `${own}-note` : undefined}>
+    <fieldset
+      className={className}
+      disabled={disabled}
+      aria-describedby={hint || error ? `${own}-note` : undefined}
+    >
       <legend className={legendHidden ? 'sr-only' : 'mb-1 text-sm font-semibold'}>{legend}</legend>
       {options.map((option) => (
         <label key={option.value} className="flex items-start gap-3 py-1">
@@ -132,7 +147,18 @@ export function RadioGroup<T extends string>(props: RadioGroupProps<T>) {
 /** A few exclusive choices in one row: native radios, so arrow keys and forms work by themselves. */
 export function Segmented<T extends string>(props: RadioGroupProps<T> & { size?: 'md' | 'sm' }) {
   const own = useId();
-  const { legend, legendHidden, name = own, value, onChange, options, hint, error, disabled, size = 'md' } = props;
+  const {
+    legend,
+    legendHidden,
+    name = own,
+    value,
+    onChange,
+    options,
+    hint,
+    error,
+    disabled,
+    size = 'md',
+  } = props;
   return (
     <fieldset className={props.className} disabled={disabled}>
       <legend className={legendHidden ? 'sr-only' : 'mb-1 text-sm font-semibold'}>{legend}</legend>

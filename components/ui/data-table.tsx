@@ -66,7 +66,10 @@ export function DataTable<T extends object>({
   const router = useRouter();
   const path = usePathname();
   const params = useSearchParams();
-  const sorting = parseSort(params.get('sort'), columns.map((column) => column.id));
+  const sorting = parseSort(
+    params.get('sort'),
+    columns.map((column) => column.id),
+  );
   const search = params.get('find') ?? '';
 
   const setParam = (name: string, value: string) => {
@@ -79,14 +82,12 @@ export function DataTable<T extends object>({
   // New column objects would make the table start over on every render.
   const definitions = useMemo(
     () =>
-      columns.map(
-        (column): ColumnDef<typeof features, T> => ({
-          id: column.id,
-          accessorFn: column.value,
-          header: column.header,
-          cell: ({ row }) => column.cell(row.original),
-        }),
-      ),
+      columns.map((column): ColumnDef<typeof features, T> => ({
+        id: column.id,
+        accessorFn: column.value,
+        header: column.header,
+        cell: ({ row }) => column.cell(row.original),
+      })),
     [columns],
   );
   const table = useTable({
@@ -117,17 +118,21 @@ export function DataTable<T extends object>({
               {group.headers.map((header) => {
                 const now = sorting.find((sort) => sort.id === header.column.id);
                 return (
-                  <Th
-                    key={header.id}
-                    aria-sort={now ? (now.desc ? 'descending' : 'ascending') : undefined}
-                  >
+                  <Th key={header.id} aria-sort={now ? (now.desc ? 'descending' : 'ascending') : undefined}>
                     <button
                       type="button"
                       className="-mx-1 inline-flex min-h-6 items-center gap-1 rounded px-1 hover:text-ink"
-                      onClick={() => setParam('sort', now ? (now.desc ? '' : `-${header.column.id}`) : header.column.id)}
+                      onClick={() =>
+                        setParam('sort', now ? (now.desc ? '' : `-${header.column.id}`) : header.column.id)
+                      }
                     >
                       {String(header.column.columnDef.header)}
-                      {now && (now.desc ? <ArrowDownIcon className="size-3" /> : <ArrowUpIcon className="size-3" />)}
+                      {now &&
+                        (now.desc ? (
+                          <ArrowDownIcon className="size-3" />
+                        ) : (
+                          <ArrowUpIcon className="size-3" />
+                        ))}
                     </button>
                   </Th>
                 );

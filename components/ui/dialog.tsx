@@ -45,7 +45,9 @@ export function Dialog({
         </IconButton>
       </div>
       <div className="px-5 py-3">{children}</div>
-      {actions && <div className="flex flex-wrap justify-end gap-3 border-t border-line px-5 py-3">{actions}</div>}
+      {actions && (
+        <div className="flex flex-wrap justify-end gap-3 border-t border-line px-5 py-3">{actions}</div>
+      )}
     </dialog>
   );
 }

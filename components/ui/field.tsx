@@ -33,7 +33,10 @@ export const controlClass = cx(
 
 export function FieldError({ id, children }: { id?: string; children: ReactNode }) {
   return (
-    <p id={id} className="flex w-fit max-w-full gap-2 rounded-b bg-ink px-3 py-1.5 text-sm font-semibold text-paper">
+    <p
+      id={id}
+      className="flex w-fit max-w-full gap-2 rounded-b bg-ink px-3 py-1.5 text-sm font-semibold text-paper"
+    >
       <svg viewBox="0 0 8 16" aria-hidden="true" className="mt-0.5 h-4 w-2 flex-none">
         <path d="M1 2 L7 5 M1 6 L7 9 M1 10 L7 13" stroke="currentColor" strokeWidth="1.5" fill="none" />
       </svg>

@@ -23,7 +23,10 @@ function shown(value: unknown): string {
 
 /** "sequences.1.trMs" → "2 · Repetition time": the place in each list, then the schema's own words. */
 function wordsOf(schema: z.ZodType, path: readonly string[]): string {
-  const places = path.slice(0, -1).filter((key) => /^\d+$/.test(key)).map((key) => String(Number(key) + 1));
+  const places = path
+    .slice(0, -1)
+    .filter((key) => /^\d+$/.test(key))
+    .map((key) => String(Number(key) + 1));
   return [...places, wordsAt(schema, path) ?? path.at(-1)].join(' · ');
 }
 

@@ -12,7 +12,9 @@ import type { VersionedForm } from './use-versioned-form';
 function countErrors(errors: FieldErrors): number {
   return Object.values(errors).reduce<number>((sum, error) => {
     if (!error || typeof error !== 'object') return sum;
-    return sum + ('message' in error && typeof error.message === 'string' ? 1 : countErrors(error as FieldErrors));
+    return (
+      sum + ('message' in error && typeof error.message === 'string' ? 1 : countErrors(error as FieldErrors))
+    );
   }, 0);
 }
 
@@ -92,7 +94,11 @@ export function FormOutcome<T extends FieldValues>({
   }
   if (refused > 0) {
     return (
-      <Notice tone="error" live title={`The ${noun} was not saved: ${refused === 1 ? 'one field needs' : `${refused} fields need`} another look.`}>
+      <Notice
+        tone="error"
+        live
+        title={`The ${noun} was not saved: ${refused === 1 ? 'one field needs' : `${refused} fields need`} another look.`}
+      >
         Each is marked in inverse print, with what was given and what is allowed.
       </Notice>
     );

@@ -1,7 +1,13 @@
 'use client';
 
-import { type ReactNode } from 'react';
-import { Controller, FormProvider, useFormContext, type FieldValues, type UseFormReturn } from 'react-hook-form';
+import { createContext, useContext, type ReactNode } from 'react';
+import {
+  Controller,
+  FormProvider,
+  useFormContext,
+  type FieldValues,
+  type UseFormReturn,
+} from 'react-hook-form';
 import type * as z from 'zod';
 import { Checkbox, Segmented, Switch, type RadioOption } from './choice';
 import { FieldError } from './field';
@@ -9,6 +15,11 @@ import { NumberField, type NumberFieldProps } from './number-field';
 import { numberFacts, type NumberFacts } from './schema-facts';
 import { Select, type SelectOption } from './select';
 import { TextArea, TextInput, type TextInputProps } from './text-input';
+
+const ReadOnly = createContext(false);
+
+/** True where the form may be read but not changed; rolled-up groups still open. */
+export const useReadOnly = (): boolean => useContext(ReadOnly);
 
 /**
  * Fields bound to React Hook Form by name. The browser's own validation is off: the schema speaks, beside the
@@ -19,26 +30,30 @@ export function Form<T extends FieldValues>({
   onSubmit,
   children,
   label,
+  readOnly = false,
   className,
 }: {
   form: UseFormReturn<T, unknown, T>;
   onSubmit: (values: T) => Promise<void> | void;
   children: ReactNode;
   label: string;
+  readOnly?: boolean;
   className?: string;
 }) {
   return (
     <FormProvider {...form}>
-      <form
-        noValidate
-        aria-label={label}
-        // Asked for even before the script has run, so that nothing typed ends up in an address.
-        method="post"
-        onSubmit={(event) => void form.handleSubmit(onSubmit)(event)}
-        className={className}
-      >
-        {children}
-      </form>
+      <ReadOnly value={readOnly}>
+        <form
+          noValidate
+          aria-label={label}
+          // Asked for even before the script has run, so that nothing typed ends up in an address.
+          method="post"
+          onSubmit={(event) => void form.handleSubmit(onSubmit)(event)}
+          className={className}
+        >
+          {children}
+        </form>
+      </ReadOnly>
     </FormProvider>
   );
 }
@@ -50,7 +65,9 @@ interface Bound {
 }
 
 export interface FormNumberProps
-  extends Bound, Pick<NumberFieldProps, 'step' | 'layout' | 'compact' | 'disabled' | 'labelHidden' | 'placeholder'> {
+  extends
+    Bound,
+    Pick<NumberFieldProps, 'step' | 'layout' | 'compact' | 'disabled' | 'labelHidden' | 'placeholder'> {
   /** Judges the value; gives unit, limits and, unless `label` is given, the words. */
   schema: z.ZodType;
   label?: ReactNode;
@@ -74,7 +91,9 @@ function negatedFacts(facts: NumberFacts): NumberFacts {
 export function FormNumber({ name, schema, label, hint, negated = false, ...rest }: FormNumberProps) {
   const facts = negated ? negatedFacts(numberFacts(schema)) : numberFacts(schema);
   const { control } = useFormContext();
-  const range = facts.min !== undefined && facts.max !== undefined ? `${facts.min} to ${facts.max}` : undefined;
+  const readOnly = useReadOnly();
+  const range =
+    facts.min !== undefined && facts.max !== undefined ? `${facts.min} to ${facts.max}` : undefined;
   return (
     <Controller
       control={control}
@@ -83,6 +102,7 @@ export function FormNumber({ name, schema, label, hint, negated = false, ...rest
         <NumberField
           {...rest}
           ref={field.ref}
+          disabled={rest.disabled || readOnly}
           name={name}
           label={label ?? facts.text}
           unit={facts.unit}
@@ -94,7 +114,9 @@ export function FormNumber({ name, schema, label, hint, negated = false, ...rest
           hint={hint === undefined ? range : hint}
           error={fieldState.error?.message}
           value={shownValue(field.value as number | null | undefined, negated)}
-          onChange={(value) => field.onChange(shownValue(value, negated) ?? (facts.optional ? undefined : null))}
+          onChange={(value) =>
+            field.onChange(shownValue(value, negated) ?? (facts.optional ? undefined : null))
+          }
           onBlur={field.onBlur}
         />
       )}
@@ -109,7 +131,8 @@ function shownValue(value: number | null | undefined, negated: boolean): number 
 /** The message of something that is not one control, such as a pair or a list. */
 export function FormMessage({ name }: { name: string }) {
   const { getFieldState, formState } = useFormContext();
-  const error = getFieldState(name, formState).error as { message?: string; root?: { message?: string } } | undefined;
+  const error = getFieldState(name, formState).error as
+    { message?: string; root?: { message?: string } } | undefined;
   const message = error?.root?.message ?? error?.message;
   return <div aria-live="polite">{typeof message === 'string' && <FieldError>{message}</FieldError>}</div>;
 }
@@ -118,13 +141,35 @@ export interface FormTextProps extends Bound, Omit<TextInputProps, 'name' | 'err
 
 export function FormText({ name, ...rest }: FormTextProps) {
   const { register, getFieldState, formState } = useFormContext();
-  return <TextInput {...rest} {...register(name)} error={getFieldState(name, formState).error?.message} />;
+  const readOnly = useReadOnly();
+  return (
+    <TextInput
+      {...rest}
+      {...register(name)}
+      disabled={rest.disabled || readOnly}
+      error={getFieldState(name, formState).error?.message}
+    />
+  );
 }
 
-export function FormTextArea({ name, label, hint, rows, optional, className }: Bound & { label: ReactNode; rows?: number; optional?: boolean }) {
+export function FormTextArea({
+  name,
+  label,
+  hint,
+  rows,
+  optional,
+  className,
+}: Bound & { label: ReactNode; rows?: number; optional?: boolean }) {
   const { register, getFieldState, formState } = useFormContext();
   const error = getFieldState(name, formState).error?.message;
-  return <TextArea {...{ label, hint, rows, optional, className, error }} {...register(name)} />;
+  const readOnly = useReadOnly();
+  return (
+    <TextArea
+      {...{ label, hint, rows, optional, className, error }}
+      {...register(name)}
+      disabled={readOnly}
+    />
+  );
 }
 
 export interface FormSelectProps extends Bound {
@@ -139,6 +184,7 @@ export interface FormSelectProps extends Bound {
 
 export function FormSelect({ name, onChosen, ...rest }: FormSelectProps) {
   const { control } = useFormContext();
+  const readOnly = useReadOnly();
   return (
     <Controller
       control={control}
@@ -146,6 +192,7 @@ export function FormSelect({ name, onChosen, ...rest }: FormSelectProps) {
       render={({ field, fieldState }) => (
         <Select
           {...rest}
+          disabled={rest.disabled || readOnly}
           ref={field.ref}
           name={name}
           value={(field.value as string | undefined) ?? ''}
@@ -170,6 +217,7 @@ export function FormSegmented<T extends string>({
   className,
 }: Bound & { legend: ReactNode; options: readonly RadioOption<T>[]; onChosen?: (value: T) => void }) {
   const { control } = useFormContext();
+  const readOnly = useReadOnly();
   return (
     <Controller
       control={control}
@@ -177,6 +225,7 @@ export function FormSegmented<T extends string>({
       render={({ field, fieldState }) => (
         <Segmented<T>
           legend={legend}
+          disabled={readOnly}
           options={options}
           hint={hint}
           className={className}
@@ -192,14 +241,22 @@ export function FormSegmented<T extends string>({
   );
 }
 
-export function FormCheckbox({ name, label, hint, className, as = 'checkbox' }: Bound & { label: ReactNode; as?: 'checkbox' | 'switch' }) {
+export function FormCheckbox({
+  name,
+  label,
+  hint,
+  className,
+  as = 'checkbox',
+}: Bound & { label: ReactNode; as?: 'checkbox' | 'switch' }) {
   const { register, getFieldState, formState } = useFormContext();
+  const readOnly = useReadOnly();
   const Control = as === 'switch' ? Switch : Checkbox;
   return (
     <Control
       {...{ label, hint, className }}
       error={getFieldState(name, formState).error?.message}
       {...register(name)}
+      disabled={readOnly}
     />
   );
 }

@@ -11,7 +11,13 @@ export function Logo({ className }: { className?: string }) {
         strokeWidth="2.25"
         strokeLinejoin="round"
       />
-      <path d="M27.5 19.5 H19.5 V27.5" fill="none" stroke="currentColor" strokeWidth="2.25" strokeLinejoin="round" />
+      <path
+        d="M27.5 19.5 H19.5 V27.5"
+        fill="none"
+        stroke="currentColor"
+        strokeWidth="2.25"
+        strokeLinejoin="round"
+      />
       <path d="M9.5 4.5 V27.5" className="stroke-indigo" fill="none" strokeWidth="1.5" />
     </svg>
   );

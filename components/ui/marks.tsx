@@ -16,7 +16,11 @@ const PATHS: Record<MarkKind, { edge: string; fill?: string; thread?: string; da
   // The corner is gone.
   torn: { edge: 'M11 17.5 H3 V2.5 H17 V9.5 L14.8 10.6 L15.4 12.6 L12.8 13 L13 15.6 Z' },
   // Woven otherwise than this engine can work out.
-  unworked: { edge: 'M3 2.5 H17 V17.5 H3 Z', thread: 'M6.5 6 H13.5 M6.5 10 H13.5 M6.5 14 H13.5', dashed: true },
+  unworked: {
+    edge: 'M3 2.5 H17 V17.5 H3 Z',
+    thread: 'M6.5 6 H13.5 M6.5 10 H13.5 M6.5 14 H13.5',
+    dashed: true,
+  },
 };
 
 export function Mark({ kind, className, title }: { kind: MarkKind; className?: string; title?: string }) {
@@ -39,7 +43,13 @@ export function Mark({ kind, className, title }: { kind: MarkKind; className?: s
         strokeDasharray={path.dashed ? '2.5 2' : undefined}
       />
       {path.fill && (
-        <path d={path.fill} fill="currentColor" stroke="currentColor" strokeWidth="1" strokeLinejoin="round" />
+        <path
+          d={path.fill}
+          fill="currentColor"
+          stroke="currentColor"
+          strokeWidth="1"
+          strokeLinejoin="round"
+        />
       )}
       {path.thread && <path d={path.thread} fill="none" stroke="currentColor" strokeWidth="1.25" />}
     </svg>

@@ -34,7 +34,10 @@ export function Notice({
     >
       <span
         aria-hidden="true"
-        className={cx('w-1.5 flex-none', error ? 'woven-paper' : tone === 'done' ? 'bg-indigo' : 'bg-ink-soft')}
+        className={cx(
+          'w-1.5 flex-none',
+          error ? 'woven-paper' : tone === 'done' ? 'bg-indigo' : 'bg-ink-soft',
+        )}
       />
       <div className="min-w-0 flex-1 px-4 py-3">
         {title && <p className="font-semibold">{title}</p>}

@@ -60,7 +60,10 @@ export function NumberField(props: NumberFieldProps) {
     take(formatPlain(next), next);
   };
 
-  const own = touched || error ? numberProblem(text, parseNumber(text, unit), { min, max, whole, unit, optional }) : undefined;
+  const own =
+    touched || error
+      ? numberProblem(text, parseNumber(text, unit), { min, max, whole, unit, optional })
+      : undefined;
   const shown = own ?? error;
   const finite = value !== null && Number.isFinite(value) ? value : undefined;
   return (
@@ -85,7 +88,9 @@ export function NumberField(props: NumberFieldProps) {
             aria-valuenow={finite}
             aria-valuemin={min}
             aria-valuemax={max}
-            aria-valuetext={finite === undefined ? undefined : `${formatPlain(finite)}${unit ? ` ${unit}` : ''}`}
+            aria-valuetext={
+              finite === undefined ? undefined : `${formatPlain(finite)}${unit ? ` ${unit}` : ''}`
+            }
             autoComplete="off"
             spellCheck={false}
             name={props.name}

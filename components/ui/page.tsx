@@ -32,14 +32,37 @@ export function PageHeader({
 }
 
 /** Width and rhythm of every page but the bench. */
-export function PageBody({ children, narrow = false }: { children: ReactNode; narrow?: boolean }) {
+export function PageBody({
+  children,
+  narrow = false,
+  wide = false,
+}: {
+  children: ReactNode;
+  narrow?: boolean;
+  wide?: boolean;
+}) {
   return (
-    <div className={cx('mx-auto w-full px-4 py-8 sm:px-6', narrow ? 'max-w-3xl' : 'max-w-6xl')}>{children}</div>
+    <div
+      className={cx(
+        'mx-auto w-full px-4 py-8 sm:px-6',
+        narrow ? 'max-w-3xl' : wide ? 'max-w-[96rem]' : 'max-w-6xl',
+      )}
+    >
+      {children}
+    </div>
   );
 }
 
 /** Says why there is nothing and what to do next. */
-export function EmptyState({ title, children, action }: { title: ReactNode; children?: ReactNode; action?: ReactNode }) {
+export function EmptyState({
+  title,
+  children,
+  action,
+}: {
+  title: ReactNode;
+  children?: ReactNode;
+  action?: ReactNode;
+}) {
   return (
     <div className="rounded-md border border-dashed border-line-strong px-6 py-10 text-center">
       <p className="text-lg font-semibold">{title}</p>

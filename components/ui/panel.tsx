@@ -8,6 +8,8 @@ export interface PanelProps {
   title: ReactNode;
   /** Beside the title: where values come from, a link. */
   aside?: ReactNode;
+  /** Always at the end of the title line, open or rolled up. */
+  actions?: ReactNode;
   children: ReactNode;
   /** One line that stands in for the content while the panel is collapsed. */
   summary?: ReactNode;
@@ -25,7 +27,18 @@ export interface PanelProps {
 
 /** A titled group that can roll up to one line. Its content stays mounted, so nothing typed is lost. */
 export function Panel(props: PanelProps) {
-  const { title, aside, children, summary, collapsible = false, tone = 'paper', level = 2, className, id } = props;
+  const {
+    title,
+    aside,
+    actions,
+    children,
+    summary,
+    collapsible = false,
+    tone = 'paper',
+    level = 2,
+    className,
+    id,
+  } = props;
   const [ownOpen, setOwnOpen] = useState(props.defaultOpen ?? true);
   const open = !collapsible || (props.open ?? ownOpen);
   const contentId = useId();
@@ -41,10 +54,20 @@ export function Panel(props: PanelProps) {
   return (
     <section
       id={id}
-      className={cx(tone === 'paper' ? 'rounded-md border border-line bg-paper' : 'border-b border-line', className)}
+      className={cx(
+        tone === 'paper' ? 'rounded-md border border-line bg-paper' : 'border-b border-line',
+        className,
+      )}
     >
       <div className={cx('flex items-baseline justify-between gap-4 px-4', open ? 'pt-3' : 'py-3')}>
-        <Heading className={cx('min-w-0', heading, tone === 'bench' && 'text-ink-soft')}>
+        <Heading
+          className={cx(
+            'min-w-0',
+            Boolean(actions) && 'flex-1',
+            heading,
+            tone === 'bench' && 'text-ink-soft',
+          )}
+        >
           {collapsible ? (
             <button
               type="button"
@@ -65,6 +88,7 @@ export function Panel(props: PanelProps) {
         ) : (
           aside && <div className="flex-none text-sm">{aside}</div>
         )}
+        {actions && <div className="-my-1 -mr-2 flex flex-none self-center">{actions}</div>}
       </div>
       <div id={contentId} hidden={!open} className="px-4 pt-2 pb-4">
         {children}

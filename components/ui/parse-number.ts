@@ -46,8 +46,11 @@ export function numberProblem(
           : 'any number';
   if (value === null) return limits.optional ? undefined : `Nothing given. Allowed: ${allowed}.`;
   if (Number.isNaN(value)) return `“${text.trim()}” is not a number. Allowed: ${allowed}.`;
-  if (limits.whole && !Number.isInteger(value)) return `${text.trim()} is not a whole number. Allowed: ${allowed}.`;
-  if (limits.min !== undefined && value < limits.min) return `${text.trim()} is too small. Allowed: ${allowed}.`;
-  if (limits.max !== undefined && value > limits.max) return `${text.trim()} is too large. Allowed: ${allowed}.`;
+  if (limits.whole && !Number.isInteger(value))
+    return `${text.trim()} is not a whole number. Allowed: ${allowed}.`;
+  if (limits.min !== undefined && value < limits.min)
+    return `${text.trim()} is too small. Allowed: ${allowed}.`;
+  if (limits.max !== undefined && value > limits.max)
+    return `${text.trim()} is too large. Allowed: ${allowed}.`;
   return undefined;
 }

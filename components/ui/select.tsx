@@ -11,7 +11,9 @@ export interface SelectOption<T extends string = string> {
 }
 
 export interface SelectProps<T extends string = string>
-  extends FieldChrome, Omit<SelectHTMLAttributes<HTMLSelectElement>, 'id' | 'className' | 'required' | 'size'> {
+  extends
+    FieldChrome,
+    Omit<SelectHTMLAttributes<HTMLSelectElement>, 'id' | 'className' | 'required' | 'size'> {
   options: readonly SelectOption<T>[];
   /** Shown first with an empty value, when nothing is chosen yet. */
   placeholder?: string;

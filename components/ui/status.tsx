@@ -33,7 +33,10 @@ export function StatusProvider({ children }: { children: ReactNode }) {
   return (
     <StatusContext.Provider value={api}>
       {children}
-      <div role="status" className="pointer-events-none fixed inset-x-0 top-16 z-50 flex justify-end px-4 print:hidden">
+      <div
+        role="status"
+        className="pointer-events-none fixed inset-x-0 top-16 z-50 flex justify-end px-4 print:hidden"
+      >
         {message && (
           <div
             key={message.at}

@@ -2,7 +2,15 @@ import type { HTMLAttributes, ReactNode, TdHTMLAttributes, ThHTMLAttributes } fr
 import { cx } from './class-names';
 
 /** Dense table on paper. The scroller can be focused, so a wide table can be read with the keyboard. */
-export function Table({ caption, children, className }: { caption: string; children: ReactNode; className?: string }) {
+export function Table({
+  caption,
+  children,
+  className,
+}: {
+  caption: string;
+  children: ReactNode;
+  className?: string;
+}) {
   return (
     <div
       role="region"
@@ -23,13 +31,16 @@ export function Th({ className, scope = 'col', ...rest }: ThHTMLAttributes<HTMLT
     <th
       scope={scope}
       {...rest}
-      className={cx('border-b border-line px-4 py-2 text-sm font-semibold whitespace-nowrap text-ink-soft', className)}
+      className={cx(
+        'border-b border-line px-3 py-2 text-sm first:pl-4 last:pr-4 font-semibold whitespace-nowrap text-ink-soft',
+        className,
+      )}
     />
   );
 }
 
 export function Td({ className, ...rest }: TdHTMLAttributes<HTMLTableCellElement>) {
-  return <td {...rest} className={cx('px-4 py-2 align-middle', className)} />;
+  return <td {...rest} className={cx('px-3 py-2 align-middle first:pl-4 last:pr-4', className)} />;
 }
 
 export function Tr({ className, ...rest }: HTMLAttributes<HTMLTableRowElement>) {

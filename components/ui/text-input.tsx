@@ -12,7 +12,20 @@ export interface TextInputProps
 }
 
 export function TextInput(props: TextInputProps) {
-  const { label, hint, error, layout, labelHidden, optional, required, id, className, figures, ref, ...input } = props;
+  const {
+    label,
+    hint,
+    error,
+    layout,
+    labelHidden,
+    optional,
+    required,
+    id,
+    className,
+    figures,
+    ref,
+    ...input
+  } = props;
   return (
     <Field {...{ label, hint, error, layout, labelHidden, optional, required, id, className }}>
       {(control) => (
@@ -34,7 +47,20 @@ export interface TextAreaProps
 }
 
 export function TextArea(props: TextAreaProps) {
-  const { label, hint, error, layout, labelHidden, optional, required, id, className, ref, rows = 3, ...input } = props;
+  const {
+    label,
+    hint,
+    error,
+    layout,
+    labelHidden,
+    optional,
+    required,
+    id,
+    className,
+    ref,
+    rows = 3,
+    ...input
+  } = props;
   return (
     <Field {...{ label, hint, error, layout, labelHidden, optional, required, id, className }}>
       {(control) => (

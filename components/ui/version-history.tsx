@@ -37,7 +37,11 @@ export function VersionHistory({
           {rows.map((row) => (
             <Tr key={row.version}>
               <Td className="align-top">
-                <Link href={hrefOf(row.version)} className="text-link" aria-current={row.version === current || undefined}>
+                <Link
+                  href={hrefOf(row.version)}
+                  className="text-link"
+                  aria-current={row.version === current || undefined}
+                >
                   Version <span className="figures">{row.version}</span>
                 </Link>
               </Td>

@@ -20,7 +20,12 @@ export default async function BookingsPage({ searchParams }: Props) {
   const query = await searchParams;
   const { from, to } = dayRange(query, new Date());
   const { page, mayAdd } = await loadPage(async (context) => ({
-    page: await listBookings(context, { from, to, limit: 200, ...(query.after ? { after: query.after } : {}) }),
+    page: await listBookings(context, {
+      from,
+      to,
+      limit: 200,
+      ...(query.after ? { after: query.after } : {}),
+    }),
     mayAdd: mayAttempt(context.actor, 'booking.create'),
   }));
   const add = mayAdd && (
@@ -30,8 +35,12 @@ export default async function BookingsPage({ searchParams }: Props) {
   );
   const days = <DayRange from={from} to={to} />;
   return (
-    <PageBody>
-      <PageHeader title="Bookings" lead="Under accession numbers; no names, no dates of birth." actions={add} />
+    <PageBody wide>
+      <PageHeader
+        title="Bookings"
+        lead="Under accession numbers; no names, no dates of birth."
+        actions={add}
+      />
       {page.bookings.length === 0 ? (
         <div className="space-y-4">
           {days}
@@ -44,7 +53,10 @@ export default async function BookingsPage({ searchParams }: Props) {
       )}
       {page.next && (
         <p className="mt-4">
-          <Link className="text-link" href={`/bookings?${new URLSearchParams({ from, to, after: page.next })}`}>
+          <Link
+            className="text-link"
+            href={`/bookings?${new URLSearchParams({ from, to, after: page.next })}`}
+          >
             Later bookings of these days
           </Link>
         </p>

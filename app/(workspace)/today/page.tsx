@@ -16,7 +16,11 @@ const DAYS_AHEAD = 7;
 export default async function TodayPage() {
   const now = new Date();
   const { page, mayAdd } = await loadPage(async (context) => ({
-    page: await listBookings(context, { from: dayKey(now), to: dayKey(addDays(now, DAYS_AHEAD)), limit: 200 }),
+    page: await listBookings(context, {
+      from: dayKey(now),
+      to: dayKey(addDays(now, DAYS_AHEAD)),
+      limit: 200,
+    }),
     mayAdd: mayAttempt(context.actor, 'booking.create'),
   }));
   const rows = page.bookings.map(toBookingRow);

@@ -20,7 +20,11 @@ export default async function SiteDetailsPage() {
         lead="What the site is called, and the form its accession numbers have."
         back={{ href: '/site', label: 'Site' }}
       />
-      <SiteForm stored={{ name: site.name, accessionMask: site.accessionMask }} save={saveSite} mayEdit={mayEdit} />
+      <SiteForm
+        stored={{ name: site.name, accessionMask: site.accessionMask }}
+        save={saveSite}
+        mayEdit={mayEdit}
+      />
     </PageBody>
   );
 }

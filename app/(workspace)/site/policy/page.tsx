@@ -41,7 +41,10 @@ export default async function PolicyPage({ searchParams }: { searchParams: Promi
         back={{ href: '/site', label: 'Site' }}
       />
       {old && (
-        <Notice className="mb-5" title={`This is version ${shown.version}. The newest is version ${newest.version}.`}>
+        <Notice
+          className="mb-5"
+          title={`This is version ${shown.version}. The newest is version ${newest.version}.`}
+        >
           Plans that rest on it still read it. It cannot be changed.
         </Notice>
       )}
@@ -59,7 +62,9 @@ export default async function PolicyPage({ searchParams }: { searchParams: Promi
           <VersionHistory
             rows={trimHistory(policyHistory(versions))}
             current={shown.version}
-            hrefOf={(version) => (version === newest.version ? '/site/policy' : `/site/policy?version=${version}`)}
+            hrefOf={(version) =>
+              version === newest.version ? '/site/policy' : `/site/policy?version=${version}`
+            }
           />
         </>
       )}

@@ -27,13 +27,16 @@ export default async function ProtocolPage({ params, searchParams }: Props) {
     const wanted = asVersion(query.version) ?? newest.version;
     return {
       newest,
-      versions: await Promise.all(recentVersions(newest.version).map((version) => getProtocol(context, { id, version }))),
+      versions: await Promise.all(
+        recentVersions(newest.version).map((version) => getProtocol(context, { id, version })),
+      ),
       shown: await getProtocol(context, { id, version: wanted }),
       mayEdit: mayAttempt(context.actor, 'protocol.edit'),
     };
   });
   const old = shown.version !== newest.version;
-  const hrefOf = (version: number) => `/site/protocols/${id}${version === newest.version ? '' : `?version=${version}`}`;
+  const hrefOf = (version: number) =>
+    `/site/protocols/${id}${version === newest.version ? '' : `?version=${version}`}`;
   return (
     <PageBody>
       <PageHeader
@@ -52,7 +55,10 @@ export default async function ProtocolPage({ params, searchParams }: Props) {
         }
       />
       {old && (
-        <Notice className="mb-5" title={`This is version ${shown.version}. The newest is version ${newest.version}.`}>
+        <Notice
+          className="mb-5"
+          title={`This is version ${shown.version}. The newest is version ${newest.version}.`}
+        >
           Plans that rest on it still read it. It cannot be changed.
         </Notice>
       )}

@@ -28,13 +28,16 @@ export default async function ScannerPage({ params, searchParams }: Props) {
     const wanted = asVersion(query.version) ?? newest.version;
     return {
       newest,
-      versions: await Promise.all(recentVersions(newest.version).map((version) => getScanner(context, { id, version }))),
+      versions: await Promise.all(
+        recentVersions(newest.version).map((version) => getScanner(context, { id, version })),
+      ),
       shown: await getScanner(context, { id, version: wanted }),
       mayEdit: mayAttempt(context.actor, 'scanner.edit'),
     };
   });
   const old = shown.version !== newest.version;
-  const hrefOf = (version: number) => `/site/scanners/${id}${version === newest.version ? '' : `?version=${version}`}`;
+  const hrefOf = (version: number) =>
+    `/site/scanners/${id}${version === newest.version ? '' : `?version=${version}`}`;
   return (
     <PageBody>
       <PageHeader
@@ -53,7 +56,10 @@ export default async function ScannerPage({ params, searchParams }: Props) {
         }
       />
       {old && (
-        <Notice className="mb-5" title={`This is version ${shown.version}. The newest is version ${newest.version}.`}>
+        <Notice
+          className="mb-5"
+          title={`This is version ${shown.version}. The newest is version ${newest.version}.`}
+        >
           Plans that rest on it still read it. It cannot be changed.
         </Notice>
       )}
