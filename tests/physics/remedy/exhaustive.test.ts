@@ -4,6 +4,7 @@ import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
 import type { Case } from '@/lib/physics/model/case';
 import type { LineStep } from '@/lib/physics/model/scanner';
 import { SEARCHED_KINDS, searchRemedies } from '@/tests/support/exhaustive-remedies';
+import { countOf, tally } from '@/tests/support/tally';
 import { seededNumbers } from '@/tests/support/seeded-numbers';
 import {
   accelerated,
@@ -17,7 +18,7 @@ import {
   typicalScanner,
 } from '@/tests/support/physics-cases';
 
-const CASES = process.env.SELVEDGE_LONG === '1' ? 500 : 40;
+const CASES = countOf('SELVEDGE_RANKINGS', 40);
 
 const STEPS: readonly LineStep[] = [{ kind: 'line' }, { kind: 'even-lines' }, { kind: 'percent', percent: 5 }, { kind: 'doubling' }];
 
@@ -57,6 +58,7 @@ function drawCase(seed: number): Case {
 describe('ranking against a search written independently', () => {
   it(`finds the same outcomes at the same prices in ${CASES} seeded cases`, () => {
     let folding = 0;
+    let outcomes = 0;
     for (let seed = 1; folding < CASES; seed++) {
       const given = drawCase(seed);
       const ranking = rankRemedies(given, { filters: { changes: SEARCHED_KINDS } });
@@ -65,12 +67,14 @@ describe('ranking against a search written independently', () => {
       const listed = (entries: readonly { prescription: unknown; arms: string; costTenths: number }[]) =>
         entries.map(({ prescription, arms, costTenths }) => JSON.stringify([costTenths, arms, prescription])).sort();
       const searched = searchRemedies(given);
+      outcomes += searched.length;
       expect(listed(ranking.remedies), `seed ${seed}, ${given.prescription.family}`).toEqual(listed(searched));
       // The first in the list is a cheapest one, among those without fold in the keep-clear area where there are any.
       const without = searched.filter((outcome) => !outcome.leavesFold);
       const best = Math.min(...(without.length > 0 ? without : searched).map((outcome) => outcome.costTenths));
       if (searched.length > 0) expect(ranking.remedies[0]!.costTenths, `seed ${seed}`).toBe(best);
     }
+    tally('rankings against an exhaustive search', folding, `${outcomes} outcomes`);
     // 2 s a case at most: every line and partition is tried one after another.
   }, CASES * 4000);
 });
