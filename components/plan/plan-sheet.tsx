@@ -26,13 +26,13 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
             Version {plan.version}, {plan.state}. Saved {formatMoment(new Date(plan.savedAt))} by {plan.savedBy}.
           </p>
         </div>
-        <div className="sheet-small flex h-24 w-64 flex-col justify-between border border-dashed border-ink p-2 text-sm">
+        <div className="sheet-small flex h-24 w-64 flex-col print:h-20 justify-between border border-dashed border-ink p-2 text-sm">
           <p>patient label here</p>
           <p>checked by</p>
         </div>
       </header>
       <SequenceTable sequences={sequences} />
-      <div className="mt-3 grid gap-5 sm:grid-cols-[1.15fr_1fr] print:grid-cols-[1.15fr_1fr]">
+      <div className="mt-3 grid gap-5 print:mt-1 sm:grid-cols-[1.15fr_1fr] print:grid-cols-[1.15fr_1fr]">
         <SheetPicture plan={plan} />
         <SheetSizes plan={plan} />
       </div>
@@ -44,7 +44,7 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
         </ul>
       </Block>
       <SheetSignatures plan={plan} />
-      <footer className="sheet-small mt-3 flex flex-wrap justify-between gap-x-6 border-t border-ink pt-2 text-sm">
+      <footer className="sheet-small mt-3 flex flex-wrap justify-between gap-x-6 border-t border-ink pt-2 text-sm print:mt-1 print:pt-1">
         <p>
           Newest version and whether this one is still it: <span className="figures font-semibold">{link}</span>
         </p>
@@ -59,7 +59,7 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
 
 function Block({ title, children }: { title: string; children: ReactNode }) {
   return (
-    <section className="mt-3">
+    <section className="mt-3 print:mt-1">
       <h2 className="text-sm font-semibold">{title}</h2>
       {children}
     </section>
@@ -73,7 +73,7 @@ function SequenceTable({ sequences }: { sequences: readonly SheetSequence[] }) {
         <caption className="sr-only">Sequences, as they are set at the scanner</caption>
         <thead className="sheet-small text-sm">
           <tr className="border-b border-ink align-bottom">
-            <th className="py-1 pr-3 font-semibold">Sequence</th>
+            <th className="w-[46%] py-1 pr-3 font-semibold">Sequence</th>
             <th className="py-1 pr-3 font-semibold">Phase oversampling</th>
             <th className="py-1 pr-3 font-semibold">Slice oversampling</th>
             <th className="py-1 pr-3 font-semibold">Av.</th>
@@ -96,7 +96,7 @@ function SequenceTable({ sequences }: { sequences: readonly SheetSequence[] }) {
               <Setting setting={row.phase} />
               {row.slice ? <Setting setting={row.slice} /> : <td className="py-1.5 pr-3">–</td>}
               <td className="figures py-1.5 pr-3">{row.averages}</td>
-              <td className="figures py-1.5 pr-3 whitespace-nowrap">{row.time}</td>
+              <td className="figures py-1.5 pr-3 whitespace-nowrap print:text-sm">{row.time}</td>
               <td className="py-1.5">
                 <VerdictWords verdict={row.verdict} className="sheet-small text-sm" />
               </td>
@@ -111,7 +111,7 @@ function SequenceTable({ sequences }: { sequences: readonly SheetSequence[] }) {
 function Setting({ setting }: { setting: { value: string; note: string } }) {
   return (
     <td className="py-1.5 pr-3">
-      <span className="figures text-lg font-bold whitespace-nowrap">{setting.value}</span>
+      <span className="sheet-value figures text-lg font-bold whitespace-nowrap">{setting.value}</span>
       {setting.note && <span className="sheet-small block text-sm">{setting.note}</span>}
     </td>
   );
@@ -125,7 +125,7 @@ function SheetSignatures({ plan }: { plan: PlanView }) {
       ? 'needed: fold is left in the keep-clear area, or site policy asks for it'
       : 'not needed';
   return (
-    <section aria-label="Signatures" className="sheet-small mt-4 grid grid-cols-3 gap-6 text-sm">
+    <section aria-label="Signatures" className="sheet-small mt-4 grid grid-cols-3 gap-6 text-sm print:mt-1">
       {[
         ['Planned by', plan.savedBy],
         ['Used at the scanner by', ''],

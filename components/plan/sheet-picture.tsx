@@ -8,7 +8,7 @@ import { describeSection } from '@/lib/presentation/describe-section';
 import type { PlanView } from '@/lib/schemas/plan';
 
 const WIDTH_PX = 560;
-const HEIGHT_PX = 400;
+const HEIGHT_PX = 350;
 
 /** The section of the sequence that was changed, or the first: black on white, told apart by hatching and edges. */
 export function SheetPicture({ plan }: { plan: PlanView }) {
