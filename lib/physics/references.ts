@@ -117,7 +117,8 @@ export const REFERENCES: readonly Reference[] = [
     key: 'kahn-2014',
     authors: 'Kahn HS, Gu Q, Bullard KM, Freedman DS, Ahluwalia N, Ogden CL',
     year: 2014,
-    title: 'Population distribution of the sagittal abdominal diameter (SAD) from a representative sample of US adults',
+    title:
+      'Population distribution of the sagittal abdominal diameter (SAD) from a representative sample of US adults',
     where: 'PLoS One 9',
     pages: 'e108707',
     standing: 'read',

@@ -36,7 +36,13 @@ export function ghostWidths(
 }
 
 /** The region of (readout, W) where the pair leaves a ghost. */
-function widthBands(tissue: RowBand, clear: RowBand, margin: AxisMargin, centre: number, multiple: number): RowBand[] {
+function widthBands(
+  tissue: RowBand,
+  clear: RowBand,
+  margin: AxisMargin,
+  centre: number,
+  multiple: number,
+): RowBand[] {
   let r0 = Math.max(tissue.r0, clear.r0);
   let r1 = Math.min(tissue.r1, clear.r1);
   if (!(r1 - r0 > TOUCH_MM)) return [];
@@ -70,7 +76,11 @@ function difference(curve: Curve, line: Curve, factor: number): Curve {
 
 /** Bands mirrored along phase (p → −p), so that the low side can be asked like the high side. */
 export function mirrorPhase(bands: readonly RowBand[]): RowBand[] {
-  return bands.map((band) => ({ ...band, lower: affine(band.upper, -1, 0), upper: affine(band.lower, -1, 0) }));
+  return bands.map((band) => ({
+    ...band,
+    lower: affine(band.upper, -1, 0),
+    upper: affine(band.lower, -1, 0),
+  }));
 }
 
 export const mirrorMargin = (margin: AxisMargin): AxisMargin => [margin[1], margin[0]];

@@ -40,7 +40,9 @@ function requireExtents({ extents, arms }: Patient): void {
   }
   const breadth = extents.right.value + extents.left.value;
   const depth = extents.anterior.value + extents.posterior.value;
-  if (!(breadth > 0)) throw new DomainError('body-without-breadth', 'extents.right + extents.left', breadth, '> 0 mm');
-  if (!(depth > 0)) throw new DomainError('body-without-depth', 'extents.anterior + extents.posterior', depth, '> 0 mm');
+  if (!(breadth > 0))
+    throw new DomainError('body-without-breadth', 'extents.right + extents.left', breadth, '> 0 mm');
+  if (!(depth > 0))
+    throw new DomainError('body-without-depth', 'extents.anterior + extents.posterior', depth, '> 0 mm');
   if (!(arms.gapMm >= 0)) throw new DomainError('arm-gap-negative', 'arms.gapMm', arms.gapMm, '≥ 0 mm');
 }

@@ -1,5 +1,14 @@
 import type { Patient, SolidPart } from '../model/patient';
-import { ADULT, cylinder, endIsKnown, isEstimated, part, partBox, raisedArms, shoulderHalves } from './make-part';
+import {
+  ADULT,
+  cylinder,
+  endIsKnown,
+  isEstimated,
+  part,
+  partBox,
+  raisedArms,
+  shoulderHalves,
+} from './make-part';
 
 /** How far the nose stands out from the face, mm; from memory, rounded up. The anterior extent runs to its tip. */
 const NOSE_MM = 25;
@@ -42,7 +51,12 @@ export function headBody(patient: Patient): SolidPart[] {
       },
       true,
     ),
-    part('neck', 'other', cylinder(box.x, (y + backOfNeck) / 2, neckHalfX, neckHalfY, { fromMm: shoulderTop - 1, toMm: box.z }), true),
+    part(
+      'neck',
+      'other',
+      cylinder(box.x, (y + backOfNeck) / 2, neckHalfX, neckHalfY, { fromMm: shoulderTop - 1, toMm: box.z }),
+      true,
+    ),
     part('shoulders', 'trunk', cylinder(box.x, y, shoulderHalfX, shoulderHalfY, { toMm: shoulderTop }), true),
     ...(patient.arms.position === 'up' ? raisedArms(patient, box.x, y, shoulderTop, box.halfX) : []),
   ];

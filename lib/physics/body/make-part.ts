@@ -53,7 +53,11 @@ export function part(name: string, kind: PartKind, shape: PartShape, estimated: 
 }
 
 /** Both arms beside a part of half-breadth `halfX` about x, level with y. */
-export function armsBeside(patient: Patient, box: Pick<PartBox, 'x' | 'y' | 'halfX'>, ends: EndsMm = {}): SolidPart[] {
+export function armsBeside(
+  patient: Patient,
+  box: Pick<PartBox, 'x' | 'y' | 'halfX'>,
+  ends: EndsMm = {},
+): SolidPart[] {
   const { breadthMm, depthMm, gapMm } = patient.arms;
   if (!(breadthMm > 0) || !(depthMm > 0)) return [];
   const centre = box.halfX + gapMm + breadthMm / 2;
@@ -92,18 +96,33 @@ export function neckAndHead(x: number, y: number, shoulderTopMm: number): SolidP
   const chin = shoulderTopMm + ADULT.neckLength;
   const middle = chin + ADULT.headHalfHeight;
   return [
-    part('neck', 'other', cylinder(x, y, ADULT.neckHalfBreadth, ADULT.neckHalfDepth, { fromMm: shoulderTopMm - 1, toMm: middle }), true),
+    part(
+      'neck',
+      'other',
+      cylinder(x, y, ADULT.neckHalfBreadth, ADULT.neckHalfDepth, { fromMm: shoulderTopMm - 1, toMm: middle }),
+      true,
+    ),
     part(
       'head',
       'head',
-      { type: 'ellipsoid', centreMm: [x, y, middle], semiAxesMm: [ADULT.headHalfBreadth, ADULT.headHalfDepth, ADULT.headHalfHeight] },
+      {
+        type: 'ellipsoid',
+        centreMm: [x, y, middle],
+        semiAxesMm: [ADULT.headHalfBreadth, ADULT.headHalfDepth, ADULT.headHalfHeight],
+      },
       true,
     ),
   ];
 }
 
 /** Raised arms beside the head, from the shoulder top upwards. */
-export function raisedArms(patient: Patient, x: number, y: number, shoulderTopMm: number, headHalfBreadth: number): SolidPart[] {
+export function raisedArms(
+  patient: Patient,
+  x: number,
+  y: number,
+  shoulderTopMm: number,
+  headHalfBreadth: number,
+): SolidPart[] {
   return armsBeside(patient, { x, y, halfX: headHalfBreadth }, { fromMm: shoulderTopMm }).map((arm) => ({
     ...arm,
     name: `raised ${arm.name}`,

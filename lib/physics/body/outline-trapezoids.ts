@@ -25,10 +25,21 @@ export function outlineTrapezoids(rings: readonly (readonly OutlinePoint[])[]): 
   const edges: Edge[] = [];
   const breaks: number[] = [];
   rings.forEach((ring, index) => {
-    if (ring.length < 3) throw new DomainError('outline-too-short', `rings[${index}]`, `${ring.length} points`, 'at least 3 points');
+    if (ring.length < 3)
+      throw new DomainError(
+        'outline-too-short',
+        `rings[${index}]`,
+        `${ring.length} points`,
+        'at least 3 points',
+      );
     ring.forEach(([u, v], i) => {
       if (!Number.isFinite(u) || !Number.isFinite(v)) {
-        throw new DomainError('outline-not-finite', `rings[${index}][${i}]`, `${u}, ${v}`, 'finite millimetres');
+        throw new DomainError(
+          'outline-not-finite',
+          `rings[${index}][${i}]`,
+          `${u}, ${v}`,
+          'finite millimetres',
+        );
       }
       const [nextU, nextV] = ring[(i + 1) % ring.length]!;
       breaks.push(u);

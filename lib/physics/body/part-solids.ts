@@ -37,7 +37,8 @@ function between(index: number, fromMm: number, toMm: number): HalfSpace[] {
 }
 
 function requirePositive(argument: string, value: number): void {
-  if (!(value > 0) || !Number.isFinite(value)) throw new DomainError('semi-axis-not-positive', argument, value, '> 0 mm');
+  if (!(value > 0) || !Number.isFinite(value))
+    throw new DomainError('semi-axis-not-positive', argument, value, '> 0 mm');
 }
 
 /** The two axes across `along`, in the order x, y, z. */
@@ -63,7 +64,15 @@ function cylinderQuadric(shape: Extract<PartShape, { type: 'elliptic-cylinder' }
   m[first]![first] = c * c * ia + s * s * ib;
   m[second]![second] = s * s * ia + c * c * ib;
   m[first]![second] = m[second]![first] = c * s * (ia - ib);
-  return { centre: shape.centreMm, xx: m[0]![0]!, yy: m[1]![1]!, zz: m[2]![2]!, xy: m[0]![1]!, xz: m[0]![2]!, yz: m[1]![2]! };
+  return {
+    centre: shape.centreMm,
+    xx: m[0]![0]!,
+    yy: m[1]![1]!,
+    zz: m[2]![2]!,
+    xy: m[0]![1]!,
+    xz: m[0]![2]!,
+    yz: m[1]![2]!,
+  };
 }
 
 /** The convex pieces of a shape without the reach of coil and magnet. */
@@ -72,7 +81,15 @@ function shapeSolids(shape: PartShape, reachMm: number): ConvexSolid[] {
     case 'ellipsoid': {
       const [a, b, c] = shape.semiAxesMm;
       shape.semiAxesMm.forEach((value, i) => requirePositive(`semiAxesMm[${i}]`, value));
-      const quadric = { centre: shape.centreMm, xx: 1 / (a * a), yy: 1 / (b * b), zz: 1 / (c * c), xy: 0, xz: 0, yz: 0 };
+      const quadric = {
+        centre: shape.centreMm,
+        xx: 1 / (a * a),
+        yy: 1 / (b * b),
+        zz: 1 / (c * c),
+        xy: 0,
+        xz: 0,
+        yz: 0,
+      };
       return [{ quadric, halfSpaces: [] }];
     }
     case 'elliptic-cylinder':
@@ -101,7 +118,10 @@ function shapeSolids(shape: PartShape, reachMm: number): ConvexSolid[] {
 }
 
 /** Ends along the shape's own axis. Along z an open end is cut by the reach anyway; along x and y it needs one. */
-function axialEnds(shape: { readonly along: 'x' | 'y' | 'z'; readonly fromMm?: number; readonly toMm?: number }, reachMm: number): HalfSpace[] {
+function axialEnds(
+  shape: { readonly along: 'x' | 'y' | 'z'; readonly fromMm?: number; readonly toMm?: number },
+  reachMm: number,
+): HalfSpace[] {
   const axis = AXIS_INDEX[shape.along];
   const { fromMm, toMm } = shape;
   if (fromMm !== undefined && toMm !== undefined && !(fromMm < toMm)) {
@@ -153,7 +173,11 @@ export function partSolids(
   },
   tolerance: number,
 ): WeightedSolid[] {
-  const zEnds = between(2, reach.isocentreZMm - reach.tissueReachMm, reach.isocentreZMm + reach.tissueReachMm);
+  const zEnds = between(
+    2,
+    reach.isocentreZMm - reach.tissueReachMm,
+    reach.isocentreZMm + reach.tissueReachMm,
+  );
   const solids = parts.flatMap((part, index) => {
     if (!(part.signalWeight >= 0)) {
       throw new DomainError('weight-negative', `${part.name}.signalWeight`, part.signalWeight, '≥ 0');
@@ -166,11 +190,18 @@ export function partSolids(
     }));
     for (const band of saturation.bands) {
       if (!(band.thicknessMm > 0)) {
-        throw new DomainError('band-without-thickness', 'presaturation.thicknessMm', band.thicknessMm, '> 0 mm');
+        throw new DomainError(
+          'band-without-thickness',
+          'presaturation.thicknessMm',
+          band.thicknessMm,
+          '> 0 mm',
+        );
       }
       // The worst tissue under the band decides: fat recovers fastest, parenchyma is least inverted.
       const left = Math.max(
-        ...saturation.t1Ms.map((t1) => presaturatedWeight(band.nominalFlipDeg, saturation.b1Scale, band.delayMs, t1)),
+        ...saturation.t1Ms.map((t1) =>
+          presaturatedWeight(band.nominalFlipDeg, saturation.b1Scale, band.delayMs, t1),
+        ),
       );
       pieces = saturate(pieces, band, left);
     }

@@ -10,7 +10,12 @@ import { DomainError } from '../model/domain-error';
  * @throws DomainError "t1-not-positive", "delay-negative"
  * Valid: one pulse, transverse magnetisation crushed. Source: Bloch equation after one pulse; [bernstein-2004].
  */
-export function presaturatedWeight(nominalFlipDeg: number, b1Scale: number, delayMs: number, t1Ms: number): number {
+export function presaturatedWeight(
+  nominalFlipDeg: number,
+  b1Scale: number,
+  delayMs: number,
+  t1Ms: number,
+): number {
   if (!(t1Ms > 0)) throw new DomainError('t1-not-positive', 't1Ms', t1Ms, '> 0 ms');
   if (!(delayMs >= 0)) throw new DomainError('delay-negative', 'delayMs', delayMs, '≥ 0 ms');
   const theta = (nominalFlipDeg * b1Scale * Math.PI) / 180;

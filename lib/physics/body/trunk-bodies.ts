@@ -1,5 +1,15 @@
 import type { Patient, SolidPart } from '../model/patient';
-import { armsBeside, cylinder, endIsKnown, isEstimated, neckAndHead, part, partBox, raisedArms, ADULT } from './make-part';
+import {
+  armsBeside,
+  cylinder,
+  endIsKnown,
+  isEstimated,
+  neckAndHead,
+  part,
+  partBox,
+  raisedArms,
+  ADULT,
+} from './make-part';
 
 const extentsEstimated = ({ extents: { right, left, anterior, posterior } }: Patient) =>
   isEstimated(right, left, anterior, posterior);
@@ -7,7 +17,12 @@ const extentsEstimated = ({ extents: { right, left, anterior, posterior } }: Pat
 /** Abdomen, pelvis: one trunk, and the arms unless they are up. The trunk never ends along z. */
 export function abdomenBody(patient: Patient): SolidPart[] {
   const box = partBox(patient);
-  const trunk = part('trunk', 'trunk', cylinder(box.x, box.y, box.halfX, box.halfY), extentsEstimated(patient));
+  const trunk = part(
+    'trunk',
+    'trunk',
+    cylinder(box.x, box.y, box.halfX, box.halfY),
+    extentsEstimated(patient),
+  );
   return patient.arms.position === 'up' ? [trunk] : [trunk, ...armsBeside(patient, box)];
 }
 
@@ -25,7 +40,9 @@ export function chestBody(patient: Patient): SolidPart[] {
   return [
     part('trunk', 'trunk', cylinder(box.x, box.y, box.halfX, box.halfY, ends), extentsEstimated(patient)),
     ...neckAndHead(box.x, box.y, top),
-    ...(armsUp ? raisedArms(patient, box.x, box.y, top, ADULT.headHalfBreadth) : armsBeside(patient, box, ends)),
+    ...(armsUp
+      ? raisedArms(patient, box.x, box.y, top, ADULT.headHalfBreadth)
+      : armsBeside(patient, box, ends)),
   ];
 }
 
@@ -43,7 +60,8 @@ export function shoulderBody(patient: Patient): SolidPart[] {
   const box = partBox(patient);
   const { superior } = patient.extents;
   const estimated = extentsEstimated(patient);
-  if (!endIsKnown(superior)) return [part('shoulders', 'trunk', cylinder(box.x, box.y, box.halfX, box.halfY), estimated)];
+  if (!endIsKnown(superior))
+    return [part('shoulders', 'trunk', cylinder(box.x, box.y, box.halfX, box.halfY), estimated)];
   const top = superior.value;
   const full = top - SHOULDER_ROUND_MM;
   const { position, breadthMm, gapMm } = patient.arms;
@@ -54,10 +72,19 @@ export function shoulderBody(patient: Patient): SolidPart[] {
     part(
       'shoulders',
       'trunk',
-      { type: 'ellipsoid', centreMm: [box.x, box.y, full], semiAxesMm: [box.halfX, box.halfY, SHOULDER_ROUND_MM] },
+      {
+        type: 'ellipsoid',
+        centreMm: [box.x, box.y, full],
+        semiAxesMm: [box.halfX, box.halfY, SHOULDER_ROUND_MM],
+      },
       estimated,
     ),
-    part('trunk', 'trunk', cylinder(box.x, box.y, breadthMm > 0 ? trunkHalf : box.halfX, box.halfY, ends), true),
+    part(
+      'trunk',
+      'trunk',
+      cylinder(box.x, box.y, breadthMm > 0 ? trunkHalf : box.halfX, box.halfY, ends),
+      true,
+    ),
     ...(position === 'up'
       ? raisedArms(patient, box.x, box.y, top, ADULT.headHalfBreadth)
       : armsBeside(patient, { ...box, halfX: innerHalf }, ends)),
@@ -76,7 +103,12 @@ export function hipBody(patient: Patient): SolidPart[] {
     return part(`${side} leg`, 'leg', cylinder(x, box.y, box.halfX / 2, box.halfY, { toMm: crotch }), true);
   };
   return [
-    part('trunk', 'trunk', cylinder(box.x, box.y, box.halfX, box.halfY, { fromMm: crotch }), extentsEstimated(patient)),
+    part(
+      'trunk',
+      'trunk',
+      cylinder(box.x, box.y, box.halfX, box.halfY, { fromMm: crotch }),
+      extentsEstimated(patient),
+    ),
     thigh('right'),
     thigh('left'),
     ...(patient.arms.position === 'up' ? [] : armsBeside(patient, box)),

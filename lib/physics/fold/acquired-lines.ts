@@ -6,14 +6,19 @@ import type { LineStep } from '../model/scanner';
 const CEIL_GUARD = 1e-9;
 
 function requireWhole(argument: string, value: number): void {
-  if (!Number.isInteger(value) || value < 1) throw new DomainError('not-a-whole-number', argument, value, 'a whole number ≥ 1');
+  if (!Number.isInteger(value) || value < 1)
+    throw new DomainError('not-a-whole-number', argument, value, 'a whole number ≥ 1');
 }
 
 /**
  * Smallest number of lines on the scanner's grid that is ≥ `atLeast` and ≥ N.
  * @returns undefined when the grid ends before (doubling: beyond 2N)
  */
-export function nextAcquiredLines(linesAcrossFov: number, atLeast: number, step: LineStep): number | undefined {
+export function nextAcquiredLines(
+  linesAcrossFov: number,
+  atLeast: number,
+  step: LineStep,
+): number | undefined {
   requireWhole('linesAcrossFov', linesAcrossFov);
   const needed = Math.max(linesAcrossFov, Math.ceil(atLeast - CEIL_GUARD));
   switch (step.kind) {
@@ -25,7 +30,8 @@ export function nextAcquiredLines(linesAcrossFov: number, atLeast: number, step:
       if (needed <= linesAcrossFov) return linesAcrossFov;
       return needed <= 2 * linesAcrossFov ? 2 * linesAcrossFov : undefined;
     case 'percent': {
-      if (!(step.percent > 0)) throw new DomainError('step-not-positive', 'step.percent', step.percent, '> 0 %');
+      if (!(step.percent > 0))
+        throw new DomainError('step-not-positive', 'step.percent', step.percent, '> 0 %');
       const linesAt = (k: number) => Math.ceil(linesAcrossFov * (1 + (k * step.percent) / 100) - CEIL_GUARD);
       let k = Math.max(0, Math.floor(((needed / linesAcrossFov - 1) * 100) / step.percent) - 1);
       while (linesAt(k) < needed) k++;
@@ -41,7 +47,8 @@ export function nextAcquiredLines(linesAcrossFov: number, atLeast: number, step:
  * @throws DomainError "oversampling-negative", "oversampling-beyond-step"
  */
 export function acquiredLines(linesAcrossFov: number, oversampling: number, step: LineStep): number {
-  if (!(oversampling >= 0)) throw new DomainError('oversampling-negative', 'oversampling', oversampling, '≥ 0');
+  if (!(oversampling >= 0))
+    throw new DomainError('oversampling-negative', 'oversampling', oversampling, '≥ 0');
   if (step.kind === 'percent') {
     // The step is in percent of N, so the percentage is rounded up first and whole lines come last.
     const steps = Math.ceil((oversampling * 100) / step.percent - CEIL_GUARD);
@@ -50,7 +57,12 @@ export function acquiredLines(linesAcrossFov: number, oversampling: number, step
   }
   const lines = nextAcquiredLines(linesAcrossFov, linesAcrossFov * (1 + oversampling), step);
   if (lines === undefined) {
-    throw new DomainError('oversampling-beyond-step', 'oversampling', oversampling, 'at most 1 (doubling) on this scanner');
+    throw new DomainError(
+      'oversampling-beyond-step',
+      'oversampling',
+      oversampling,
+      'at most 1 (doubling) on this scanner',
+    );
   }
   return lines;
 }
@@ -94,7 +106,8 @@ export function nextAcquiredPartitions(partitions: number, atLeast: number, step
 
 /** Acquired partitions L_z for a requested slice oversampling [1], whole partitions on the scanner's step. */
 export function acquiredPartitions(partitions: number, oversampling: number, step: number): number {
-  if (!(oversampling >= 0)) throw new DomainError('oversampling-negative', 'oversampling', oversampling, '≥ 0');
+  if (!(oversampling >= 0))
+    throw new DomainError('oversampling-negative', 'oversampling', oversampling, '≥ 0');
   return nextAcquiredPartitions(partitions, partitions * (1 + oversampling), step);
 }
 

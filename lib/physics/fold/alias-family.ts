@@ -67,8 +67,12 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
   const lattices: Lattice[] = [];
   const ghosts: Ghost[] = [];
 
-  const reach = (tissue: TissueSolid, source: Source, evaluate: (bands: readonly RowBand[]) => Interval | undefined) =>
-    overSliceMargin(tissue, source.sMm, margin.slice, evaluate);
+  const reach = (
+    tissue: TissueSolid,
+    source: Source,
+    evaluate: (bands: readonly RowBand[]) => Interval | undefined,
+    covered?: Interval,
+  ) => overSliceMargin(tissue, source.sMm, margin.slice, evaluate, covered);
   const bandsOf = (target: TargetSection) => (withMargin ? target.grown : target.bands);
 
   const addLattice = (solid: number, sources: readonly Source[], factor: number) => {
@@ -76,7 +80,12 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
     const merged: Interval[] = [];
     forDistinct(tissue, sources, bandsOf, (source) => {
       const clear = bandsOf(source.target);
-      const moves = reach(tissue, source, (bands) => displacements(bands, clear, margin.phase));
+      const moves = reach(
+        tissue,
+        source,
+        (bands) => displacements(bands, clear, margin.phase),
+        merged[merged.length - 1],
+      );
       if (moves) mergeInto(merged, moves);
     });
     for (const moves of merged) lattices.push({ moves, solid, sliceOrder: sources[0]!.index, factor });
@@ -91,8 +100,11 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
       const phase = margin.phase;
       const sides = [
         ['high', (bands: readonly RowBand[], m: number) => ghostWidths(bands, clear, phase, centre, m)],
-        ['low', (bands: readonly RowBand[], m: number) =>
-          ghostWidths(mirrorPhase(bands), mirrored, mirrorMargin(phase), -centre, m)],
+        [
+          'low',
+          (bands: readonly RowBand[], m: number) =>
+            ghostWidths(mirrorPhase(bands), mirrored, mirrorMargin(phase), -centre, m),
+        ],
       ] as const;
       const moves = reach(tissue, source, (bands) => displacements(bands, clear, phase));
       if (!moves) return;
@@ -120,7 +132,13 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
     slabTooThin = unfoldSlices && excitedBeyond(question, slabMm / 2);
     const repeat = unfoldSlices ? slabMm / rule.factorSlice : slabMm;
     sections.tissue.forEach((tissue, solid) => {
-      for (const sources of alongSlab(question, tissue, targets, repeat, unfoldSlices ? slabMm / 2 : Infinity)) {
+      for (const sources of alongSlab(
+        question,
+        tissue,
+        targets,
+        repeat,
+        unfoldSlices ? slabMm / 2 : Infinity,
+      )) {
         if (unfoldSlices) addGhosts(solid, sources);
         else addLattice(solid, sources, ghosting ? rule.factorPhase : 1);
       }
@@ -176,7 +194,8 @@ function alongSlab(
     for (const target of targets) {
       const offset = target.offsetMm + j * repeatMm;
       if (Math.abs(offset) > withinMm) continue;
-      if (tissue.weight * weight(offset) > problem.slabTolerance) list.push({ sMm: target.sMm + j * repeatMm, target, index: j });
+      if (tissue.weight * weight(offset) > problem.slabTolerance)
+        list.push({ sMm: target.sMm + j * repeatMm, target, index: j });
     }
     if (list.length) lists.push(list);
   }
@@ -249,7 +268,8 @@ function excitedBeyond({ problem, sections, withMargin }: FamilyQuestion, halfMm
     const extent = sliceExtent(tissue, problem);
     const low = extent[0] - slice[0] - sections.frame.sliceMm;
     const high = extent[1] + slice[1] - sections.frame.sliceMm;
-    const bright = (offset: number) => offset > low && offset < high && tissue.weight * weight(offset) > problem.slabTolerance;
+    const bright = (offset: number) =>
+      offset > low && offset < high && tissue.weight * weight(offset) > problem.slabTolerance;
     for (let offset = halfMm + step / 2; offset < Math.max(high, -low); offset += step) {
       if (bright(offset) || bright(-offset)) return present(tissue, sections.frame.sliceMm, offset, slice);
     }
@@ -257,14 +277,24 @@ function excitedBeyond({ problem, sections, withMargin }: FamilyQuestion, halfMm
   });
 }
 
-function present(tissue: TissueSolid, centreMm: number, offsetMm: number, slice: readonly [number, number]): boolean {
+function present(
+  tissue: TissueSolid,
+  centreMm: number,
+  offsetMm: number,
+  slice: readonly [number, number],
+): boolean {
   if (!tissue.coupled) return true;
   return [offsetMm, -offsetMm].some((offset) =>
     [-slice[1], 0, slice[0]].some((moved) => sectionAt(tissue, centreMm + offset + moved).length > 0),
   );
 }
 
-function forbidden(lattices: readonly Lattice[], ghosts: readonly Ghost[], slabTooThin: boolean, fov: number): WidthSet {
+function forbidden(
+  lattices: readonly Lattice[],
+  ghosts: readonly Ghost[],
+  slabTooThin: boolean,
+  fov: number,
+): WidthSet {
   if (slabTooThin) return EVERY_WIDTH;
   const pairs: number[] = [];
   for (const { moves, factor, sliceOrder } of lattices) {

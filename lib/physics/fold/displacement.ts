@@ -23,7 +23,11 @@ export function bandDisplacements(tissue: RowBand, clear: RowBand): Interval | u
 }
 
 /** Hull of the displacements of all pairs: exact for one convex solid and one convex area. */
-export function displacements(tissue: readonly RowBand[], clear: readonly RowBand[], margin: AxisMargin): Interval | undefined {
+export function displacements(
+  tissue: readonly RowBand[],
+  clear: readonly RowBand[],
+  margin: AxisMargin,
+): Interval | undefined {
   let low = Infinity;
   let high = -Infinity;
   for (const a of tissue) {
@@ -53,7 +57,15 @@ export function growInReadout(bands: readonly RowBand[], margin: AxisMargin): re
       [r, valueAt(band.upper, r)],
     ]),
   ) as [number, number][];
-  return hullBands(corners.flatMap(([r, p]) => [[r - margin[1], p], [r + margin[0], p]] as [number, number][]));
+  return hullBands(
+    corners.flatMap(
+      ([r, p]) =>
+        [
+          [r - margin[1], p],
+          [r + margin[0], p],
+        ] as [number, number][],
+    ),
+  );
 }
 
 /** Row bands of the convex hull of points. */

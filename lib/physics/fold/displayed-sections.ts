@@ -97,4 +97,3 @@ function windowBand(fovReadoutMm: number, fovPhaseMm: number, frame: SectionFram
     upper: straight(frame.centrePhaseMm + fovPhaseMm / 2),
   };
 }
-

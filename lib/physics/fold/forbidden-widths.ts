@@ -34,7 +34,9 @@ export function appendInterval(lowMm: number, highMm: number, into: number[]): v
 /** Merges overlapping open intervals. Two that only touch leave the width between them clean. */
 export function mergeWidths(pairs: readonly number[]): WidthSet {
   if (pairs.length <= 2) return pairs;
-  const order = Array.from({ length: pairs.length / 2 }, (_, i) => i).sort((a, b) => pairs[2 * a]! - pairs[2 * b]!);
+  const order = Array.from({ length: pairs.length / 2 }, (_, i) => i).sort(
+    (a, b) => pairs[2 * a]! - pairs[2 * b]!,
+  );
   const merged: number[] = [];
   for (const i of order) {
     const low = pairs[2 * i]!;

@@ -69,7 +69,7 @@ function deepest(family: AliasFamily, widthMm: number): Deepest | undefined {
  * `from.order` is n of fold(p) = p + n·W, a fraction m/R for a ghost.
  */
 export function leftoverFold(question: LeftoverQuestion): FoldResult {
-  const { problem, sections, rule, widthMm, slabMm, clear, window } = question;
+  const { problem, sections, widthMm, slabMm, clear, window } = question;
   const inKeepClear = forbiddenUntilMm(clear.widths, widthMm) !== undefined;
   const inWindow = inKeepClear || forbiddenUntilMm(window.widths, widthMm) !== undefined;
   if (!inWindow) return NOTHING_LEFT;
@@ -120,7 +120,9 @@ const NOTHING_LEFT: FoldResult = {
 
 function deepestIsGhost(family: AliasFamily, widthMm: number): boolean {
   const width = toMicrometres(widthMm);
-  return family.ghosts.some(({ widths }) => width > toMicrometres(widths[0]) && width < toMicrometres(widths[1]));
+  return family.ghosts.some(
+    ({ widths }) => width > toMicrometres(widths[0]) && width < toMicrometres(widths[1]),
+  );
 }
 
 function sideOf(intruder: Deepest, sections: DisplayedSections) {
@@ -157,7 +159,9 @@ function worstAreas({ problem, sections, rule, widthMm, slabMm }: LeftoverQuesti
       const bands = sectionAt(tissue, sMm);
       if (bands.length === 0) return;
       solids.push({ bands, sMm, fromElsewhere });
-      key += tissue.varies ? `|${solid}@${index}` : `|${solid}${fromElsewhere ? '+' : sMm === target.sMm ? '' : '~'}`;
+      key += tissue.varies
+        ? `|${solid}@${index}`
+        : `|${solid}${fromElsewhere ? '+' : sMm === target.sMm ? '' : '~'}`;
     };
     sections.tissue.forEach((_, solid) => add(solid, target.sMm, false));
     for (const { solid, sMm, everyOrder } of elsewhere?.get(target) ?? []) add(solid, sMm, everyOrder);

@@ -23,7 +23,8 @@ export const NO_MARGIN: SectionMargin = { readout: [0, 0], phase: [0, 0], slice:
  */
 export function sectionMargin(frame: SectionFrame, marginMm: PerSide): SectionMargin {
   for (const side of SIDES) {
-    if (!(marginMm[side] >= 0)) throw new DomainError('margin-negative', `marginMm.${side}`, marginMm[side], '≥ 0 mm');
+    if (!(marginMm[side] >= 0))
+      throw new DomainError('margin-negative', `marginMm.${side}`, marginMm[side], '≥ 0 mm');
   }
   const towards = (axis: Vec3, sign: 1 | -1): number => {
     const x = axis[0] * sign;

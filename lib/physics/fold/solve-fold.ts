@@ -2,7 +2,13 @@ import { unfoldingRule } from '../acceleration/unfolding-rule';
 import { maxOn, minOn } from '../section/curve';
 import type { FoldResult, WidthRequirement } from '../model/assessment';
 import { DomainError } from '../model/domain-error';
-import { acquiredSlabMm, acquiredWidthMm, nextAcquiredLines, nextAcquiredPartitions, smallestAcquiredLines } from './acquired-lines';
+import {
+  acquiredSlabMm,
+  acquiredWidthMm,
+  nextAcquiredLines,
+  nextAcquiredPartitions,
+  smallestAcquiredLines,
+} from './acquired-lines';
 import { aliasFamily, type AliasFamily } from './alias-family';
 import { displayedSections, type DisplayedSections } from './displayed-sections';
 import type { Interval } from './displacement';
@@ -32,7 +38,11 @@ export function solveFold(problem: FoldProblem): SolvedFold {
   const slab = slices.mode === 'slab' ? slices : undefined;
 
   const families = new Map<string, AliasFamily>();
-  const family = (target: 'clear' | 'window', withMargin: boolean, partitions: number | undefined): AliasFamily => {
+  const family = (
+    target: 'clear' | 'window',
+    withMargin: boolean,
+    partitions: number | undefined,
+  ): AliasFamily => {
     const key = `${target}${withMargin ? '+' : ''}${partitions ?? ''}`;
     let found = families.get(key);
     if (!found) {
@@ -98,10 +108,15 @@ export function solveFold(problem: FoldProblem): SolvedFold {
 }
 
 function requirePositive(argument: string, value: number): void {
-  if (!(value > 0) || !Number.isFinite(value)) throw new DomainError('length-not-positive', argument, value, '> 0 mm');
+  if (!(value > 0) || !Number.isFinite(value))
+    throw new DomainError('length-not-positive', argument, value, '> 0 mm');
 }
 
-function widthRequirement(problem: FoldProblem, sections: DisplayedSections, family: AliasFamily): WidthRequirement {
+function widthRequirement(
+  problem: FoldProblem,
+  sections: DisplayedSections,
+  family: AliasFamily,
+): WidthRequirement {
   const { fovPhaseMm, linesAcrossFov } = problem.prescription;
   const { lineStep, acquiredLinesMax } = problem;
   const forbiddenMm = forbiddenFrom(family.widths, fovPhaseMm);
@@ -116,13 +131,17 @@ function widthRequirement(problem: FoldProblem, sections: DisplayedSections, fam
       : undefined;
   let firstCleanLines = nextAcquiredLines(linesAcrossFov, linesAcrossFov, lineStep);
   while (firstCleanLines !== undefined && firstCleanLines <= acquiredLinesMax) {
-    const until = forbiddenUntilMm(family.widths, acquiredWidthMm(firstCleanLines, linesAcrossFov, fovPhaseMm));
+    const until = forbiddenUntilMm(
+      family.widths,
+      acquiredWidthMm(firstCleanLines, linesAcrossFov, fovPhaseMm),
+    );
     if (until === undefined) break;
     firstCleanLines = onGrid(until);
   }
   const alwaysCleanLines = onGrid(alwaysCleanMm);
   const coverBodyMm = coverBody(problem, sections);
-  const reachable = (lines: number | undefined) => (lines !== undefined && lines <= acquiredLinesMax ? lines : undefined);
+  const reachable = (lines: number | undefined) =>
+    lines !== undefined && lines <= acquiredLinesMax ? lines : undefined;
   return {
     forbiddenMm,
     firstCleanMm,
@@ -138,7 +157,10 @@ function widthRequirement(problem: FoldProblem, sections: DisplayedSections, fam
  * Width that covers all tissue with its margin, in the displayed sections and rows: 2·max|p − c|, because the
  * acquired width is centred on the FOV centre; at least F.
  */
-function coverBody({ prescription }: FoldProblem, { tissue, windows, margin, frame }: DisplayedSections): number {
+function coverBody(
+  { prescription }: FoldProblem,
+  { tissue, windows, margin, frame }: DisplayedSections,
+): number {
   const rows = windows[0]?.grown[0];
   let low = frame.centrePhaseMm;
   let high = frame.centrePhaseMm;

@@ -34,7 +34,11 @@ export function rotateAbout(v: Vec3, axis: Vec3, degrees: number): Vec3 {
 }
 
 /** Positive unit vector of a patient axis (LPS: left, posterior, superior are positive). */
-export const AXIS_VECTOR: Readonly<Record<PatientAxis, Vec3>> = { RL: [1, 0, 0], AP: [0, 1, 0], SI: [0, 0, 1] };
+export const AXIS_VECTOR: Readonly<Record<PatientAxis, Vec3>> = {
+  RL: [1, 0, 0],
+  AP: [0, 1, 0],
+  SI: [0, 0, 1],
+};
 
 /** The sides at the negative and positive end of a patient axis. */
 export const AXIS_SIDES: Readonly<Record<PatientAxis, readonly [Side, Side]>> = {

@@ -10,7 +10,10 @@ function rowsAlong(r0: number, r1: number, curved: boolean): number[] {
   if (!curved) return [r0, r1];
   const middle = (r0 + r1) / 2;
   const half = (r1 - r0) / 2;
-  return Array.from({ length: ARC_POINTS + 1 }, (_, i) => middle - half * Math.cos((Math.PI * i) / ARC_POINTS));
+  return Array.from(
+    { length: ARC_POINTS + 1 },
+    (_, i) => middle - half * Math.cos((Math.PI * i) / ARC_POINTS),
+  );
 }
 
 function boundary(curve: Curve, r0: number, r1: number): SectionPoint[] {
@@ -55,20 +58,32 @@ function withoutRepeats(points: readonly SectionPoint[]): SectionPoint[] {
 /** The part of convex bands between two straight or curved limits and within [r0, r1]. */
 export function cropBands(
   bands: readonly RowBand[],
-  limits: { readonly lowers?: readonly Curve[]; readonly uppers?: readonly Curve[]; readonly r0?: number; readonly r1?: number },
+  limits: {
+    readonly lowers?: readonly Curve[];
+    readonly uppers?: readonly Curve[];
+    readonly r0?: number;
+    readonly r1?: number;
+  },
 ): RowBand[] {
   return bands.flatMap((band) => {
     const r0 = Math.max(band.r0, limits.r0 ?? -Infinity);
     const r1 = Math.min(band.r1, limits.r1 ?? Infinity);
     if (!(r1 - r0 > TOUCH_MM)) return [];
-    return bandsBetween([band.lower, ...(limits.lowers ?? [])], [band.upper, ...(limits.uppers ?? [])], r0, r1);
+    return bandsBetween(
+      [band.lower, ...(limits.lowers ?? [])],
+      [band.upper, ...(limits.uppers ?? [])],
+      r0,
+      r1,
+    );
   });
 }
 
 /** Intersection of bands with a polygon given as bands. */
 export function intersectBands(bands: readonly RowBand[], polygon: readonly RowBand[]): RowBand[] {
   return polygon
-    .flatMap((clear) => cropBands(bands, { lowers: [clear.lower], uppers: [clear.upper], r0: clear.r0, r1: clear.r1 }))
+    .flatMap((clear) =>
+      cropBands(bands, { lowers: [clear.lower], uppers: [clear.upper], r0: clear.r0, r1: clear.r1 }),
+    )
     .sort((a, b) => a.r0 - b.r0);
 }
 

@@ -182,9 +182,15 @@ export function cutSolid(solid: ConvexSolid, s: number, closed = false): RowBand
   if (floor > -Infinity) limits.lowers.push(straight(floor));
   if (ceiling < Infinity) limits.uppers.push(straight(ceiling));
   const { lowers, uppers } = limits;
-  if (lowers.length === 1 && uppers.length === 1 && lowers[0]!.bulge === -uppers[0]!.bulge && lowers[0]!.slope === uppers[0]!.slope) {
+  if (
+    lowers.length === 1 &&
+    uppers.length === 1 &&
+    lowers[0]!.bulge === -uppers[0]!.bulge &&
+    lowers[0]!.slope === uppers[0]!.slope
+  ) {
     // One ellipse, or two parallel lines: they meet nowhere inside.
-    return limits.r1 - limits.r0 > TOUCH_MM && (lowers[0]!.bulge !== 0 || uppers[0]!.offset - lowers[0]!.offset > TOUCH_MM)
+    return limits.r1 - limits.r0 > TOUCH_MM &&
+      (lowers[0]!.bulge !== 0 || uppers[0]!.offset - lowers[0]!.offset > TOUCH_MM)
       ? [{ r0: limits.r0, r1: limits.r1, lower: lowers[0]!, upper: uppers[0]! }]
       : [];
   }

@@ -12,7 +12,13 @@ export interface Curve {
   readonly arcHalf: number;
 }
 
-export const straight = (offset: number, slope = 0): Curve => ({ offset, slope, bulge: 0, arcCentre: 0, arcHalf: 1 });
+export const straight = (offset: number, slope = 0): Curve => ({
+  offset,
+  slope,
+  bulge: 0,
+  arcCentre: 0,
+  arcHalf: 1,
+});
 
 export function valueAt(curve: Curve, r: number): number {
   const base = curve.offset + curve.slope * r;

@@ -2,7 +2,12 @@ import { unfoldingRule } from '../acceleration/unfolding-rule';
 import { partSolids } from '../body/part-solids';
 import { acquiredSlabMm, acquiredWidthMm } from '../fold/acquired-lines';
 import { alongSlabSources } from '../fold/alias-family';
-import { displayedSections, regionSolid, type DisplayedSections, type TargetSection } from '../fold/displayed-sections';
+import {
+  displayedSections,
+  regionSolid,
+  type DisplayedSections,
+  type TargetSection,
+} from '../fold/displayed-sections';
 import { growInReadout } from '../fold/displacement';
 import { foldProblem, type FoldProblem } from '../fold/fold-problem';
 import { beyondUsable } from '../fold/landed-area';
@@ -17,7 +22,13 @@ import { cutSolid, solidInSection } from './convex-solid';
 import { straight } from './curve';
 import { outlineRings } from './outline-rings';
 import type { RowBand } from './row-band';
-import type { GhostDrawing, PieceDrawing, SectionDrawing, SectionRing, TissueDrawing } from './section-drawing';
+import type {
+  GhostDrawing,
+  PieceDrawing,
+  SectionDrawing,
+  SectionRing,
+  TissueDrawing,
+} from './section-drawing';
 
 export interface DrawSectionOptions {
   /** Which section, from the FOV centre along the slice axis, mm; default 0. */
@@ -63,7 +74,12 @@ export function drawSection(question: Case, options: DrawSectionOptions = {}): S
   const all = displayedSections(problem);
   const frame = sectionFrame(prescription, sliceOffsetMm);
   const keepClear = cutRegion(problem.keepClear, frame);
-  const target: TargetSection = { sMm: frame.sliceMm, offsetMm: sliceOffsetMm, bands: [all.window], grown: [all.window] };
+  const target: TargetSection = {
+    sMm: frame.sliceMm,
+    offsetMm: sliceOffsetMm,
+    bands: [all.window],
+    grown: [all.window],
+  };
   const sections: DisplayedSections = { ...all, windows: [target] };
   const picture: Picture = { problem, frame, sections, target, keepClear, widthMm, slabMm };
   const half = widthMm / 2;
@@ -88,7 +104,9 @@ export function drawSection(question: Case, options: DrawSectionOptions = {}): S
           upper: { ...band.upper, offset: band.upper.offset + margin.phase[0] },
         })),
       )[0] ?? [],
-    mustStayDisplayed: mustStayDisplayed ? (bandRings(cutRegion(regionOfBox(mustStayDisplayed), frame))[0] ?? []) : [],
+    mustStayDisplayed: mustStayDisplayed
+      ? (bandRings(cutRegion(regionOfBox(mustStayDisplayed), frame))[0] ?? [])
+      : [],
     pieces: drawPieces(picture),
     ghosts: drawGhosts(picture),
   };
@@ -101,7 +119,8 @@ function cutRegion(region: OrientedRegion, frame: SectionFrame): RowBand[] {
 function drawTissue(part: SolidPart, { problem, frame }: Picture): TissueDrawing {
   const solids = partSolids([part], problem, { bands: [], b1Scale: 1, t1Ms: [] }, -1);
   const whole = outlineRings(part.shape, frame, problem);
-  const rings = whole ?? solids.flatMap(({ solid }) => bandRings(cutSolid(solidInSection(solid, frame), frame.sliceMm)));
+  const rings =
+    whole ?? solids.flatMap(({ solid }) => bandRings(cutSolid(solidInSection(solid, frame), frame.sliceMm)));
   return {
     name: `tissue/${part.name}`,
     part: part.name,
@@ -112,8 +131,15 @@ function drawTissue(part: SolidPart, { problem, frame }: Picture): TissueDrawing
   };
 }
 
-function isUncertain(rings: readonly SectionRing[], problem: FoldProblem, frame: SectionFrame, sMm: number): boolean {
-  return rings.some((ring) => ring.some(([r, p]) => beyondUsable(problem.usable, toPatient(frame, r, p, sMm))));
+function isUncertain(
+  rings: readonly SectionRing[],
+  problem: FoldProblem,
+  frame: SectionFrame,
+  sMm: number,
+): boolean {
+  return rings.some((ring) =>
+    ring.some(([r, p]) => beyondUsable(problem.usable, toPatient(frame, r, p, sMm))),
+  );
 }
 
 interface Draft {
@@ -145,7 +171,13 @@ function draft(
   const source = cropBands(bands, { lowers, uppers, r0: window.r0, r1: window.r1 });
   if (source.length === 0) return undefined;
   const landed = moveBands(source, -move.moveMm);
-  return { ...move, source, landed, inKeepClear: intersectBands(landed, keepClear), part: problem.parts[tissue.part]! };
+  return {
+    ...move,
+    source,
+    landed,
+    inKeepClear: intersectBands(landed, keepClear),
+    part: problem.parts[tissue.part]!,
+  };
 }
 
 /** Whole moves i·step that bring some of the bands into the window. */
@@ -177,7 +209,8 @@ function gather(drafts: readonly Draft[], picture: Picture, nameOf: (draft: Draf
           first.moveMm !== 0
             ? AXIS_SIDES[frame.phaseAxis][first.moveMm > 0 ? 1 : 0]
             : AXIS_SIDES[frame.sliceAxis][first.sliceOrder > 0 ? 1 : 0],
-        distanceMm: first.moveMm !== 0 ? Math.abs(first.moveMm) : Math.abs(first.sliceOrder) * (picture.slabMm ?? 0),
+        distanceMm:
+          first.moveMm !== 0 ? Math.abs(first.moveMm) : Math.abs(first.sliceOrder) * (picture.slabMm ?? 0),
         placeUncertain: isUncertain(source, problem, frame, first.sMm),
         source,
         landed: rings((one) => one.landed),
@@ -196,14 +229,20 @@ function drawPieces(picture: Picture): PieceDrawing[] {
     const bands = sectionAt(tissue, sMm);
     for (const i of movesInto(sections.window, bands, step)) {
       if (i === 0 && sliceOrder === 0) continue;
-      const one = draft(picture, tissue, bands, { moveMm: i * step, sMm, sliceOrder, multiple: (i * step) / widthMm });
+      const one = draft(picture, tissue, bands, {
+        moveMm: i * step,
+        sMm,
+        sliceOrder,
+        multiple: (i * step) / widthMm,
+      });
       if (one) drafts.push(one);
     }
   };
   if (rule.kind === 'plain') sections.tissue.forEach((_, solid) => add(solid, frame.sliceMm, 0, widthMm));
   if (slabMm !== undefined) {
     const step = rule.kind === 'grid-ends' ? widthMm / rule.factorPhase : widthMm;
-    for (const { solid, sMm, everyOrder } of alongSlabSources(problem, sections, rule, slabMm).get(target) ?? []) {
+    for (const { solid, sMm, everyOrder } of alongSlabSources(problem, sections, rule, slabMm).get(target) ??
+      []) {
       if (everyOrder) add(solid, sMm, Math.round((sMm - frame.sliceMm) / slabMm), step);
     }
   }
@@ -233,7 +272,8 @@ function drawGhosts(picture: Picture): GhostDrawing[] {
   sections.tissue.forEach((_, solid) => add(solid, frame.sliceMm, 0));
   if (slabMm !== undefined && rule.factorSlice > 1) {
     const repeat = slabMm / rule.factorSlice;
-    for (const { solid, sMm, everyOrder } of alongSlabSources(problem, sections, rule, slabMm).get(target) ?? []) {
+    for (const { solid, sMm, everyOrder } of alongSlabSources(problem, sections, rule, slabMm).get(target) ??
+      []) {
       if (!everyOrder) add(solid, sMm, Math.round((sMm - frame.sliceMm) / repeat));
     }
   }

@@ -22,8 +22,14 @@ export function outlineRings(
   // Under a hundredth the plane runs almost along the outline's axis, and the rings stretch a hundredfold.
   if (Math.abs(determinant) < 0.01) return undefined;
   const axis = ALONG[shape.along];
-  const from = Math.max(shape.fromMm ?? -Infinity, axis === 2 ? reach.isocentreZMm - reach.tissueReachMm : -Infinity);
-  const to = Math.min(shape.toMm ?? Infinity, axis === 2 ? reach.isocentreZMm + reach.tissueReachMm : Infinity);
+  const from = Math.max(
+    shape.fromMm ?? -Infinity,
+    axis === 2 ? reach.isocentreZMm - reach.tissueReachMm : -Infinity,
+  );
+  const to = Math.min(
+    shape.toMm ?? Infinity,
+    axis === 2 ? reach.isocentreZMm + reach.tissueReachMm : Infinity,
+  );
   let missed = 0;
   let points = 0;
   const rings = shape.rings.map((ring) =>
@@ -34,7 +40,8 @@ export function outlineRings(
       const p = (readout[u] * dv - readout[v] * du) / determinant;
       const at = toPatient(frame, r, p);
       points++;
-      if (at[axis] <= from || at[axis] >= to || Math.abs(at[2] - reach.isocentreZMm) >= reach.tissueReachMm) missed++;
+      if (at[axis] <= from || at[axis] >= to || Math.abs(at[2] - reach.isocentreZMm) >= reach.tissueReachMm)
+        missed++;
       return [r, p] as const;
     }),
   );

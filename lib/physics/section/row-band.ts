@@ -15,7 +15,12 @@ export const TOUCH_MM = 1e-9;
  * A convex shape given by its boundaries, as row bands: everywhere above all `lowers` and below all `uppers`.
  * Break points are the crossings, so inside each band one lower and one upper boundary is the active one.
  */
-export function bandsBetween(lowers: readonly Curve[], uppers: readonly Curve[], r0: number, r1: number): RowBand[] {
+export function bandsBetween(
+  lowers: readonly Curve[],
+  uppers: readonly Curve[],
+  r0: number,
+  r1: number,
+): RowBand[] {
   if (!(r1 - r0 > TOUCH_MM) || lowers.length === 0 || uppers.length === 0) return [];
   const all = [...lowers, ...uppers];
   const breaks: number[] = [r0, r1];

@@ -7,7 +7,11 @@ import { readTable } from '../fold/read-table';
 import { boxPart, samplePrescription, sampleProblem } from '../fold/sample-problem';
 
 /** Object half-width 150, displayed FOV 250, as measured. */
-function solve(shift: number, unfolding: 'k-space-self-calibrating' | 'image-domain-grid-ends', factorPhase = 2) {
+function solve(
+  shift: number,
+  unfolding: 'k-space-self-calibrating' | 'image-domain-grid-ends',
+  factorPhase = 2,
+) {
   const object = boxPart('object', { xMm: [-100, 100], yMm: [shift - 150, shift + 150], zMm: [-50, 50] });
   const prescription = samplePrescription({
     fovPhaseMm: 250,
@@ -74,7 +78,13 @@ describe('the exact ghost rule', () => {
         const widths =
           end === 'high'
             ? ghostWidths(row(low, high), row(k, l), [4, 6], centre, multiple)
-            : ghostWidths(mirrorPhase(row(low, high)), mirrorPhase(row(k, l)), mirrorMargin([4, 6]), -centre, multiple);
+            : ghostWidths(
+                mirrorPhase(row(low, high)),
+                mirrorPhase(row(k, l)),
+                mirrorMargin([4, 6]),
+                -centre,
+                multiple,
+              );
         for (let w = 150; w < 560; w += 2.5) {
           if (widths?.some((edge) => Math.abs(edge - w) < 2)) continue;
           let fouled = false;
@@ -83,16 +93,27 @@ describe('the exact ghost rule', () => {
             const ghost = end === 'high' ? p - multiple * w : p + multiple * w;
             if (beyond && ghost > k && ghost < l) fouled = true;
           }
-          expect(fouled, `W ${w}, ${end}, m/R ${multiple}`).toBe(widths !== undefined && w > widths[0] && w < widths[1]);
+          expect(fouled, `W ${w}, ${end}, m/R ${multiple}`).toBe(
+            widths !== undefined && w > widths[0] && w < widths[1],
+          );
         }
       }
     }
   });
 
   it('says when the cautious rule was assumed', () => {
-    const acceleration = { ...samplePrescription().acceleration, factorPhase: 2, unfolding: 'unknown' as const };
-    expect(unfoldingRule(samplePrescription({ acceleration }))).toMatchObject({ kind: 'grid-ends', assumed: true });
-    expect(unfoldingRule(samplePrescription({ acceleration: { ...acceleration, factorPhase: 1 } }))).toMatchObject({
+    const acceleration = {
+      ...samplePrescription().acceleration,
+      factorPhase: 2,
+      unfolding: 'unknown' as const,
+    };
+    expect(unfoldingRule(samplePrescription({ acceleration }))).toMatchObject({
+      kind: 'grid-ends',
+      assumed: true,
+    });
+    expect(
+      unfoldingRule(samplePrescription({ acceleration: { ...acceleration, factorPhase: 1 } })),
+    ).toMatchObject({
       kind: 'plain',
       assumed: false,
     });

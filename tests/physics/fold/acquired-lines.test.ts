@@ -44,7 +44,9 @@ describe('acquired lines on the scanner’s step', () => {
     const lines = smallestAcquiredLines({ linesAcrossFov: 256, fovMm: 300, minWidthMm: 320, step: LINE });
     expect(lines).toBe(274);
     expect(effectiveOversampling(274, 256) * 100).toBeCloseTo(7.03, 2);
-    expect(smallestAcquiredLines({ linesAcrossFov: 256, fovMm: 300, minWidthMm: 601, step: DOUBLING })).toBeUndefined();
+    expect(
+      smallestAcquiredLines({ linesAcrossFov: 256, fovMm: 300, minWidthMm: 601, step: DOUBLING }),
+    ).toBeUndefined();
   });
 
   const step = fc.oneof(
@@ -62,11 +64,22 @@ describe('acquired lines on the scanner’s step', () => {
         fc.double({ min: 1, max: 1.99, noNaN: true }),
         step,
         (n, fov, factor, grid) => {
-          const lines = smallestAcquiredLines({ linesAcrossFov: n, fovMm: fov, minWidthMm: fov * factor, step: grid })!;
+          const lines = smallestAcquiredLines({
+            linesAcrossFov: n,
+            fovMm: fov,
+            minWidthMm: fov * factor,
+            step: grid,
+          })!;
           expect(nextAcquiredLines(n, lines, grid)).toBe(lines);
-          expect(toMicrometres(acquiredWidthMm(lines, n, fov))).toBeGreaterThanOrEqual(toMicrometres(fov * factor));
+          expect(toMicrometres(acquiredWidthMm(lines, n, fov))).toBeGreaterThanOrEqual(
+            toMicrometres(fov * factor),
+          );
           const onGrid: number[] = [];
-          for (let at = nextAcquiredLines(n, n, grid); at !== undefined && at < lines; at = nextAcquiredLines(n, at + 1, grid)) {
+          for (
+            let at = nextAcquiredLines(n, n, grid);
+            at !== undefined && at < lines;
+            at = nextAcquiredLines(n, at + 1, grid)
+          ) {
             onGrid.push(at);
           }
           for (const fewer of onGrid) {
@@ -82,7 +95,11 @@ describe('acquired lines on the scanner’s step', () => {
     expect(acquiredPartitions(64, 0.2, 1)).toBe(77);
     expect(acquiredPartitions(64, 0.2, 4)).toBe(80);
     expect(acquiredPartitions(64, 0, 4)).toBe(64);
-    expect(smallestAcquiredPartitions({ partitions: 64, partitionThicknessMm: 3, minSlabMm: 230.4, step: 1 })).toBe(77);
-    expect(smallestAcquiredPartitions({ partitions: 64, partitionThicknessMm: 3, minSlabMm: 100, step: 2 })).toBe(64);
+    expect(
+      smallestAcquiredPartitions({ partitions: 64, partitionThicknessMm: 3, minSlabMm: 230.4, step: 1 }),
+    ).toBe(77);
+    expect(
+      smallestAcquiredPartitions({ partitions: 64, partitionThicknessMm: 3, minSlabMm: 100, step: 2 }),
+    ).toBe(64);
   });
 });

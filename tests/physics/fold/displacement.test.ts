@@ -4,7 +4,9 @@ import { straight, valueAt } from '@/lib/physics/section/curve';
 import type { RowBand } from '@/lib/physics/section/row-band';
 
 const inside = (bands: readonly RowBand[], r: number, p: number) =>
-  bands.some((band) => r > band.r0 && r < band.r1 && p > valueAt(band.lower, r) && p < valueAt(band.upper, r));
+  bands.some(
+    (band) => r > band.r0 && r < band.r1 && p > valueAt(band.lower, r) && p < valueAt(band.upper, r),
+  );
 
 describe('growing a keep-clear section along readout', () => {
   // A box with its lower left corner cut off, as a tilted keep-clear box leaves it in the window.
@@ -25,7 +27,12 @@ describe('growing a keep-clear section along readout', () => {
   });
 
   it('keeps edges along phase at both ends of a hull', () => {
-    const bands = hullBands([[0, 0], [0, 10], [20, -5], [20, 15]]);
+    const bands = hullBands([
+      [0, 0],
+      [0, 10],
+      [20, -5],
+      [20, 15],
+    ]);
     expect(inside(bands, 19.9, -4.8)).toBe(true);
     expect(inside(bands, 19.9, 14.8)).toBe(true);
     expect(inside(bands, 0.1, 9.9)).toBe(true);

@@ -13,7 +13,10 @@ function solveCase(row: Record<string, string>) {
   const parts = [ellipsePart('trunk', centre, [number('extent_lr_mm') / 2, number('extent_ap_mm') / 2])];
   if (row.arms_radius_mm) {
     const r = number('arms_radius_mm');
-    for (const [name, x] of [['left arm', number('arms_offset_mm')], ['right arm', -number('arms_offset_mm')]] as const) {
+    for (const [name, x] of [
+      ['left arm', number('arms_offset_mm')],
+      ['right arm', -number('arms_offset_mm')],
+    ] as const) {
       parts.push(ellipsePart(name, [x, 0], [r, r]));
     }
   }
@@ -26,14 +29,20 @@ function solveCase(row: Record<string, string>) {
   });
   const turn = (number('rotation_deg') * Math.PI) / 180;
   const phase: Vec3 = phaseIsLr ? [Math.cos(turn), Math.sin(turn), 0] : [-Math.sin(turn), Math.cos(turn), 0];
-  const readout: Vec3 = phaseIsLr ? [-Math.sin(turn), Math.cos(turn), 0] : [Math.cos(turn), Math.sin(turn), 0];
+  const readout: Vec3 = phaseIsLr
+    ? [-Math.sin(turn), Math.cos(turn), 0]
+    : [Math.cos(turn), Math.sin(turn), 0];
   const q = number('keep_clear_centre_mm');
   const r = number('keep_clear_half_width_mm');
   return solveFold(
     sampleProblem(parts, prescription, {
       keepClear: {
         axes: [readout, phase, [0, 0, 1]],
-        rangesMm: [[-number('readout_fov_mm') / 2, number('readout_fov_mm') / 2], [q - r, q + r], [-5, 5]],
+        rangesMm: [
+          [-number('readout_fov_mm') / 2, number('readout_fov_mm') / 2],
+          [q - r, q + r],
+          [-5, 5],
+        ],
       },
     }),
   );

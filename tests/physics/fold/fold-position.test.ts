@@ -40,7 +40,9 @@ describe('where tissue lands', () => {
         const once = foldPosition(p, c, w);
         const twice = foldPosition(once, c, w);
         // At the very edge rounding may fold once more: the same place, one width away.
-        expect(Math.min(Math.abs(twice - once), Math.abs(Math.abs(twice - once) - w))).toBeLessThan(ROUNDING_MM);
+        expect(Math.min(Math.abs(twice - once), Math.abs(Math.abs(twice - once) - w))).toBeLessThan(
+          ROUNDING_MM,
+        );
         expect(Math.abs(once - c)).toBeLessThanOrEqual(w / 2 + ROUNDING_MM);
         expect(once).toBeCloseTo(p + foldOrder(p, c, w) * w, 8);
       }),
@@ -55,13 +57,19 @@ describe('where tissue lands', () => {
 
   it('is W-periodic, translation-invariant, and mirror-invariant away from ±W/2', () => {
     fc.assert(
-      fc.property(length(-900, 900), length(-100, 100), length(50, 800), fc.integer({ min: -3, max: 3 }), (p, c, w, k) => {
-        fc.pre(away(p, c, w));
-        const seen = foldPosition(p, c, w);
-        expect(Math.abs(foldPosition(p + k * w, c, w) - seen)).toBeLessThan(ROUNDING_MM);
-        expect(Math.abs(foldPosition(p + 37.5, c + 37.5, w) - 37.5 - seen)).toBeLessThan(ROUNDING_MM);
-        expect(Math.abs(foldPosition(-p, -c, w) + seen)).toBeLessThan(ROUNDING_MM);
-      }),
+      fc.property(
+        length(-900, 900),
+        length(-100, 100),
+        length(50, 800),
+        fc.integer({ min: -3, max: 3 }),
+        (p, c, w, k) => {
+          fc.pre(away(p, c, w));
+          const seen = foldPosition(p, c, w);
+          expect(Math.abs(foldPosition(p + k * w, c, w) - seen)).toBeLessThan(ROUNDING_MM);
+          expect(Math.abs(foldPosition(p + 37.5, c + 37.5, w) - 37.5 - seen)).toBeLessThan(ROUNDING_MM);
+          expect(Math.abs(foldPosition(-p, -c, w) + seen)).toBeLessThan(ROUNDING_MM);
+        },
+      ),
       SEED,
     );
   });

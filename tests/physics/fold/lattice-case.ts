@@ -63,7 +63,8 @@ function inside(random: Random, outer: LatticeBox): LatticeBox {
 export function latticeSample(seed: number, deep: boolean): LatticeSample {
   const random = seeded(seed);
   const h = random.pick(UNITS_MM);
-  const ghosts = random.next() < 0.4 ? { ry: random.pick([1, 2, 3]), rz: deep ? random.pick([1, 1, 2]) : 1 } : undefined;
+  const ghosts =
+    random.next() < 0.4 ? { ry: random.pick([1, 2, 3]), rz: deep ? random.pick([1, 1, 2]) : 1 } : undefined;
   const ghosting = ghosts && (ghosts.ry > 1 || ghosts.rz > 1) ? ghosts : undefined;
   // Acquired edges at ±W/2 and ghosts at W/R must fall on lattice lines.
   const lineUnits = ghosting ? 2 * ghosting.ry : random.pick([1, 2, 3]);
@@ -75,10 +76,12 @@ export function latticeSample(seed: number, deep: boolean): LatticeSample {
   const rHigh = random.whole(1, 5);
 
   // An even number with slices unfolded, so that ±W_z/2 falls on lattice planes too.
-  const partitions = !deep ? undefined : ghosting && ghosting.rz > 1 ? 2 * random.whole(1, 4) : random.whole(2, 8);
-  const slices = deep
-    ? Array.from({ length: partitions! }, (_, i) => i - Math.floor(partitions! / 2))
-    : [0];
+  const partitions = !deep
+    ? undefined
+    : ghosting && ghosting.rz > 1
+      ? 2 * random.whole(1, 4)
+      : random.whole(2, 8);
+  const slices = deep ? Array.from({ length: partitions! }, (_, i) => i - Math.floor(partitions! / 2)) : [0];
   const centreS = deep ? 2 * slices[0]! + partitions! : 1;
 
   const parts = Array.from({ length: random.whole(1, 3) }, () => {
@@ -94,11 +97,19 @@ export function latticeSample(seed: number, deep: boolean): LatticeSample {
   const clear: LatticeBox =
     random.next() < 0.4
       ? { r: [rLow, rHigh], p: [pLow, pLow + fov], s: [-40, 40] }
-      : { r: range(random, rLow, rHigh, 8), p: range(random, pLow, pLow + fov, 60), s: deep ? range(random, -4, 4, 8) : [-1, 2] };
+      : {
+          r: range(random, rLow, rHigh, 8),
+          p: range(random, pLow, pLow + fov, 60),
+          s: deep ? range(random, -4, 4, 8) : [-1, 2],
+        };
   const table = Array.from({ length: 97 }, () => random.pick([0, 0, 0.04, 0.06, 1]));
   const selective = random.next() < 0.7;
   const slabWeight = (offsetHalf: number) =>
-    !selective ? 1 : Math.abs(offsetHalf) < partitions! ? 1 : (table[Math.min(96, Math.abs(offsetHalf))] ?? 0);
+    !selective
+      ? 1
+      : Math.abs(offsetHalf) < partitions!
+        ? 1
+        : (table[Math.min(96, Math.abs(offsetHalf))] ?? 0);
 
   const lattice: LatticeCase = {
     parts,
@@ -116,7 +127,11 @@ export function latticeSample(seed: number, deep: boolean): LatticeSample {
   const plane: Plane = random.pick(['axial', 'coronal', 'sagittal']);
   const [first, second, sliceAxis] = PLANE_AXES[plane];
   const phaseAxis = random.next() < 0.5 ? first : second;
-  const axes: Record<'r' | 'p' | 's', PatientAxis> = { r: phaseAxis === first ? second : first, p: phaseAxis, s: sliceAxis };
+  const axes: Record<'r' | 'p' | 's', PatientAxis> = {
+    r: phaseAxis === first ? second : first,
+    p: phaseAxis,
+    s: sliceAxis,
+  };
   const centre: Record<PatientAxis, number> = { RL: 0, AP: 0, SI: 0 };
   centre[axes.r] = ((rLow + rHigh) / 2) * h;
   centre[axes.p] = (centreP / 2) * h;
@@ -173,7 +188,14 @@ export function latticeSample(seed: number, deep: boolean): LatticeSample {
     tissueReachMm: 1000,
     ...(deep && { slabWeight: (offsetMm: number) => slabWeight(cellOffsetHalf(offsetMm)) }),
   });
-  return { lattice, problem, lineUnits, lines, partitions, partitionMultiple: ghosting && ghosting.rz > 1 ? 2 * ghosting.rz : 1 };
+  return {
+    lattice,
+    problem,
+    lineUnits,
+    lines,
+    partitions,
+    partitionMultiple: ghosting && ghosting.rz > 1 ? 2 * ghosting.rz : 1,
+  };
 }
 
 /** Boxes of one part share their slice range: one prism along the slice axis with one ring a box. */
@@ -193,7 +215,12 @@ function outlinePart(
     shape: {
       type: 'outline-prism',
       along,
-      rings: boxes.map(({ r, p }) => [point(r[0], p[0]), point(r[1], p[0]), point(r[1], p[1]), point(r[0], p[1])]),
+      rings: boxes.map(({ r, p }) => [
+        point(r[0], p[0]),
+        point(r[1], p[0]),
+        point(r[1], p[1]),
+        point(r[0], p[1]),
+      ]),
       fromMm: boxes[0]!.s[0] * h,
       toMm: boxes[0]!.s[1] * h,
     },

@@ -50,13 +50,17 @@ describe('oracle A: the engine and an independent count of lattice cells never d
       let clean = 0;
       let fouled = 0;
       for (let seed = 1; seed <= CASES_3D; seed++) {
-        const { lattice, problem, lineUnits, lines, partitions, partitionMultiple } = latticeSample(1e6 + seed, true);
+        const { lattice, problem, lineUnits, lines, partitions, partitionMultiple } = latticeSample(
+          1e6 + seed,
+          true,
+        );
         const oracle = latticeOracle(lattice);
         const solved = solveFold(problem);
         const random = seeded(seed);
         for (let k = 0; k < 10; k++) {
           const l = lines + random.whole(0, Math.ceil(60 / lineUnits));
-          const lz = Math.ceil(random.whole(partitions!, partitions! + 16) / partitionMultiple) * partitionMultiple;
+          const lz =
+            Math.ceil(random.whole(partitions!, partitions! + 16) / partitionMultiple) * partitionMultiple;
           const expected = oracle(l * lineUnits, lz);
           if (expected) clean++;
           else fouled++;

@@ -65,7 +65,12 @@ function partCells(part: LatticePart, margin: LatticeMargin): Uint8Array {
   return cells;
 }
 
-function dilate(from: Uint8Array, stride: number, count: number, [low, high]: readonly [number, number]): Uint8Array {
+function dilate(
+  from: Uint8Array,
+  stride: number,
+  count: number,
+  [low, high]: readonly [number, number],
+): Uint8Array {
   if (low === 0 && high === 0) return from;
   const to = new Uint8Array(from.length);
   for (let at = 0; at < from.length; at++) {
@@ -85,8 +90,16 @@ export function latticeOracle(question: LatticeCase): (w: number, wz?: number) =
   const targets: [number, number, number][] = [];
   for (const s of question.slices) {
     if (s < question.clear.s[0] || s >= question.clear.s[1]) continue;
-    for (let r = Math.max(question.clear.r[0], question.window.r[0]); r < Math.min(question.clear.r[1], question.window.r[1]); r++)
-      for (let p = Math.max(question.clear.p[0], question.window.p[0]); p < Math.min(question.clear.p[1], question.window.p[1]); p++)
+    for (
+      let r = Math.max(question.clear.r[0], question.window.r[0]);
+      r < Math.min(question.clear.r[1], question.window.r[1]);
+      r++
+    )
+      for (
+        let p = Math.max(question.clear.p[0], question.window.p[0]);
+        p < Math.min(question.clear.p[1], question.window.p[1]);
+        p++
+      )
         targets.push([r + ORIGIN.r, p + ORIGIN.p, s + ORIGIN.s]);
   }
   const offsetHalf = (s: number) => 2 * (s - ORIGIN.s) + 1 - question.centreSHalf;

@@ -14,14 +14,24 @@ import { NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-proble
 /** Cases in `npm test`; test:long sets 20,000. */
 const CASES = Number(process.env.SELVEDGE_ORACLE_B ?? 500);
 /** Steps in readout and phase, mm: coarse first, finer only where the engine says fold and no point was found yet. */
-const STEPS: readonly (readonly [number, number])[] = [[12, 12], [4, 4], [1.5, 1.5], [0.1, 1], [1, 0.05]];
+const STEPS: readonly (readonly [number, number])[] = [
+  [12, 12],
+  [4, 4],
+  [1.5, 1.5],
+  [0.1, 1],
+  [1, 0.05],
+];
 /**
  * How close to the end of a forbidden interval a width may lie for the finest points to miss what still folds: 1 mm along
  * phase, and 0.1 mm along readout times the slope of an oblique edge (sharp outlines reach 60).
  */
 const NEAR_MM = 7;
 
-function sampleCase(seed: number): { problem: FoldProblem; slab: number | undefined; partitions: number | undefined } {
+function sampleCase(seed: number): {
+  problem: FoldProblem;
+  slab: number | undefined;
+  partitions: number | undefined;
+} {
   const random = seeded(seed);
   const real = (low: number, high: number) => low + (high - low) * random.next();
   const tilted = random.next() < 0.6;
@@ -34,7 +44,8 @@ function sampleCase(seed: number): { problem: FoldProblem; slab: number | undefi
     const alongAxis = random.pick(['z', 'z', 'x', 'y'] as const);
     const ends = random.next() < 0.4 ? { fromMm: real(-160, -20), toMm: real(20, 160) } : {};
     const kind = random.whole(0, 3);
-    if (kind === 0) return { type: 'ellipsoid', centreMm, semiAxesMm: [real(60, 220), real(60, 220), real(60, 220)] };
+    if (kind === 0)
+      return { type: 'ellipsoid', centreMm, semiAxesMm: [real(60, 220), real(60, 220), real(60, 220)] };
     if (kind === 1) {
       const corners = random.whole(3, 8);
       const points = Array.from({ length: corners }, (_, i) => {
@@ -42,8 +53,15 @@ function sampleCase(seed: number): { problem: FoldProblem; slab: number | undefi
         const reach = real(60, 220);
         return [centreMm[0] + reach * Math.cos(t), centreMm[1] + reach * Math.sin(t)] as const;
       });
-      const hole = points.map(([u, v]) => [centreMm[0] + (u - centreMm[0]) * 0.4, centreMm[1] + (v - centreMm[1]) * 0.4] as const);
-      return { type: 'outline-prism', along: alongAxis, rings: random.next() < 0.5 ? [points, hole] : [points], ...ends };
+      const hole = points.map(
+        ([u, v]) => [centreMm[0] + (u - centreMm[0]) * 0.4, centreMm[1] + (v - centreMm[1]) * 0.4] as const,
+      );
+      return {
+        type: 'outline-prism',
+        along: alongAxis,
+        rings: random.next() < 0.5 ? [points, hole] : [points],
+        ...ends,
+      };
     }
     return {
       type: 'elliptic-cylinder',
@@ -74,7 +92,14 @@ function sampleCase(seed: number): { problem: FoldProblem; slab: number | undefi
     fovReadoutMm: real(120, 320),
     linesAcrossFov: 200,
     slices: deep
-      ? { mode: 'slab', partitions: partitions!, partitionThicknessMm: thickness, acquiredPartitions: partitions!, selective: false, droppedPartitionsPerEnd: 0 }
+      ? {
+          mode: 'slab',
+          partitions: partitions!,
+          partitionThicknessMm: thickness,
+          acquiredPartitions: partitions!,
+          selective: false,
+          droppedPartitionsPerEnd: 0,
+        }
       : { mode: 'stack', slices: random.whole(1, 3), thicknessMm: thickness, gapMm: real(0, 20) },
     acceleration: {
       ...samplePrescription().acceleration,
@@ -91,16 +116,39 @@ function sampleCase(seed: number): { problem: FoldProblem; slab: number | undefi
     random.next() < 0.4
       ? window
       : random.next() < 0.5
-        ? { axes: window.axes, rangesMm: [cut(window.rangesMm[0]), cut(window.rangesMm[1]), [-999, 999]] as const }
+        ? {
+            axes: window.axes,
+            rangesMm: [cut(window.rangesMm[0]), cut(window.rangesMm[1]), [-999, 999]] as const,
+          }
         : {
-            axes: [[1, 0, 0], [0, 1, 0], [0, 0, 1]] as const,
-            rangesMm: [[real(-120, -10), real(10, 120)], [real(-120, -10), real(10, 120)], [real(-120, -10), real(10, 120)]] as const,
+            axes: [
+              [1, 0, 0],
+              [0, 1, 0],
+              [0, 0, 1],
+            ] as const,
+            rangesMm: [
+              [real(-120, -10), real(10, 120)],
+              [real(-120, -10), real(10, 120)],
+              [real(-120, -10), real(10, 120)],
+            ] as const,
           };
   const marginMm =
     random.next() < 0.2
-      ? { right: real(0, 15), left: real(0, 15), anterior: real(0, 15), posterior: real(0, 15), superior: real(0, 15), inferior: real(0, 15) }
+      ? {
+          right: real(0, 15),
+          left: real(0, 15),
+          anterior: real(0, 15),
+          posterior: real(0, 15),
+          superior: real(0, 15),
+          inferior: real(0, 15),
+        }
       : NO_MARGIN_MM;
-  const problem = sampleProblem(parts, prescription, { keepClear, marginMm, tissueReachMm: real(150, 300), isocentreZMm: real(-60, 60) });
+  const problem = sampleProblem(parts, prescription, {
+    keepClear,
+    marginMm,
+    tissueReachMm: real(150, 300),
+    isocentreZMm: real(-60, 60),
+  });
   const lz = deep ? random.whole(partitions!, 4 * partitions!) : undefined;
   return { problem, slab: deep ? lz! * thickness : undefined, partitions: lz };
 }
@@ -141,14 +189,16 @@ describe('oracle B: general shapes, tilted planes and slabs, by looking at point
           const hit = sampledHit(problem, margin, width, slab, STEPS[0]!);
           if (hit) hits++;
           // A hit is a proof, however close.
-          if (hit && clean) expect.fail(`seed ${seed}, W ${width}: a point folds into keep-clear, the engine says none`);
+          if (hit && clean)
+            expect.fail(`seed ${seed}, W ${width}: a point folds into keep-clear, the engine says none`);
           if (hit || clean) continue;
           if (STEPS.slice(1).some((steps) => sampledHit(problem, margin, width, slab, steps))) continue;
           const held = forbiddenMm.find(([low, high]) => width > low && width < high);
           const gap = held ? Math.min(held[1] - width, width - held[0]) : Infinity;
           // A ghost needs tissue beyond W/2 whose ghost is also inside keep-clear: with R = 2 and an edge of keep-clear beside
           // the FOV centre both leave a sliver of any thinness over many mm of W, so these are counted, not judged.
-          if (problem.prescription.acceleration.factorPhase === 1 && !(gap < NEAR_MM)) expect.fail(`seed ${seed}, W ${width}: forbidden by ${gap} mm, yet no point folds`);
+          if (problem.prescription.acceleration.factorPhase === 1 && !(gap < NEAR_MM))
+            expect.fail(`seed ${seed}, W ${width}: forbidden by ${gap} mm, yet no point folds`);
           near++;
         }
       }

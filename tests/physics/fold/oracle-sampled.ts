@@ -41,14 +41,18 @@ export function oracleAxes({ prescription }: FoldProblem): { readout: V; phase: 
   const e3 = turn(turn(UNIT[n]!, e1, t1), e2, t2);
   const first = turn(turn(e1, e2, t2), e3, prescription.inPlaneRotationDeg);
   const second = turn(e2, e3, prescription.inPlaneRotationDeg);
-  return phaseFirst ? { readout: second, phase: first, slice: e3 } : { readout: first, phase: second, slice: e3 };
+  return phaseFirst
+    ? { readout: second, phase: first, slice: e3 }
+    : { readout: first, phase: second, slice: e3 };
 }
 
 function inPart(part: SolidPart, at: V, problem: FoldProblem): boolean {
   const { shape } = part;
   if (Math.abs(at[2] - problem.isocentreZMm) >= problem.tissueReachMm) return false;
   if (shape.type === 'ellipsoid') {
-    return shape.semiAxesMm.reduce((sum, semi, i) => sum + ((at[i]! - shape.centreMm[i]!) / semi) ** 2, 0) < 1;
+    return (
+      shape.semiAxesMm.reduce((sum, semi, i) => sum + ((at[i]! - shape.centreMm[i]!) / semi) ** 2, 0) < 1
+    );
   }
   const axis = 'xyz'.indexOf(shape.along);
   const open = axis === 2 ? Infinity : problem.tissueReachMm;
@@ -60,7 +64,8 @@ function inPart(part: SolidPart, at: V, problem: FoldProblem): boolean {
       for (let i = 0, j = ring.length - 1; i < ring.length; j = i++) {
         const [ax, ay] = ring[i]!;
         const [bx, by] = ring[j]!;
-        if (ay > at[v]! !== by > at[v]! && at[u]! < ((bx - ax) * (at[v]! - ay)) / (by - ay) + ax) inside = !inside;
+        if (ay > at[v]! !== by > at[v]! && at[u]! < ((bx - ax) * (at[v]! - ay)) / (by - ay) + ax)
+          inside = !inside;
       }
     }
     return inside;
@@ -98,18 +103,27 @@ export function sampledHit(
   const accelerated = acceleration.factorPhase > 1 && acceleration.unfolding === 'image-domain-grid-ends';
   const shift = accelerated ? width / acceleration.factorPhase : width;
   const parts = problem.parts.filter((part) => part.signalWeight > problem.tissueTolerance);
-  const moved = margin.readout[0] + margin.readout[1] + margin.phase[0] + margin.phase[1] + margin.slice[0] + margin.slice[1] > 0;
+  const moved =
+    margin.readout[0] +
+      margin.readout[1] +
+      margin.phase[0] +
+      margin.phase[1] +
+      margin.slice[0] +
+      margin.slice[1] >
+    0;
   const spread = ([low, high]: readonly [number, number], n: number) =>
     low + high === 0 ? [0] : Array.from({ length: n }, (_, i) => -low + ((low + high) * i) / (n - 1));
   const moves: V[] = !moved
     ? [[0, 0, 0]]
-    : spread(margin.readout, 3).flatMap((a) => spread(margin.phase, 2).flatMap((b) => spread(margin.slice, 7).map((c): V => [a, b, c])));
+    : spread(margin.readout, 3).flatMap((a) =>
+        spread(margin.phase, 2).flatMap((b) => spread(margin.slice, 7).map((c): V => [a, b, c])),
+      );
   const c = prescription.centreMm;
   const { fovReadoutMm: fr, fovPhaseMm: fp } = prescription;
   const grid = (length: number, step: number) => {
     const n = Math.max(2, Math.ceil(length / step));
     // The outermost points lie a nanometre inside the edges.
-    return Array.from({ length: n + 1 }, (_, i) => (-length / 2 + 1e-6) + ((length - 2e-6) * i) / n);
+    return Array.from({ length: n + 1 }, (_, i) => -length / 2 + 1e-6 + ((length - 2e-6) * i) / n);
   };
   const rows = grid(fr, steps[0]);
   const columns = grid(fp, steps[1]);

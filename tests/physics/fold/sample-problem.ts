@@ -4,7 +4,14 @@ import type { PatientBox, PerSide } from '@/lib/physics/model/axes';
 import type { SolidPart } from '@/lib/physics/model/patient';
 import type { Prescription } from '@/lib/physics/model/prescription';
 
-export const NO_MARGIN_MM: PerSide = { right: 0, left: 0, anterior: 0, posterior: 0, superior: 0, inferior: 0 };
+export const NO_MARGIN_MM: PerSide = {
+  right: 0,
+  left: 0,
+  anterior: 0,
+  posterior: 0,
+  superior: 0,
+  inferior: 0,
+};
 
 /** An axial, unaccelerated single slice with phase A–P; every test states what it changes. */
 export function samplePrescription(changes: Partial<Prescription> = {}): Prescription {
@@ -66,7 +73,12 @@ export function ellipsePart(
   return {
     name,
     kind: name.includes('arm') ? 'arm' : 'trunk',
-    shape: { type: 'elliptic-cylinder', along: 'z', centreMm: [centre[0], centre[1], 0], semiAxesMm: semiAxes },
+    shape: {
+      type: 'elliptic-cylinder',
+      along: 'z',
+      centreMm: [centre[0], centre[1], 0],
+      semiAxesMm: semiAxes,
+    },
     signalWeight: 1,
     estimated: false,
     ...changes,
@@ -83,7 +95,14 @@ export function boxPart(name: string, box: PatientBox, changes: Partial<SolidPar
     shape: {
       type: 'outline-prism',
       along: 'z',
-      rings: [[[x0, y0], [x1, y0], [x1, y1], [x0, y1]]],
+      rings: [
+        [
+          [x0, y0],
+          [x1, y0],
+          [x1, y1],
+          [x0, y1],
+        ],
+      ],
       fromMm: box.zMm[0],
       toMm: box.zMm[1],
     },

@@ -31,13 +31,17 @@ describe('phase and slice folds together', () => {
     expect(solved.isClean(360, 400)).toBe(true);
     expect(solved.isClean(600, 150)).toBe(true);
     // Each alone: without the diagonal neither direction folds anything.
-    expect(solveFold(sampleProblem([trunk], prescription, { tissueReachMm: 260 })).isClean(360, 150)).toBe(true);
+    expect(solveFold(sampleProblem([trunk], prescription, { tissueReachMm: 260 })).isClean(360, 150)).toBe(
+      true,
+    );
     // (i, 0): the arm's own sections are not displayed; (0, j): its phase lies outside keep-clear.
     expect(solved.requirement(150).forbiddenMm.some(([low, high]) => low < 360 && 360 < high)).toBe(true);
   });
 
   it('the smallest clean partitions are found on the scanner’s step', () => {
-    const solved = solveFold(sampleProblem([trunk, arm], prescription, { tissueReachMm: 260, partitionStep: 4 }));
+    const solved = solveFold(
+      sampleProblem([trunk, arm], prescription, { tissueReachMm: 260, partitionStep: 4 }),
+    );
     // Arm 150–250 must not reach |z| < 100 from W_z away: W_z ≥ 350, 175 partitions of 2 mm, 176 in steps of 4.
     expect(solved.smallestCleanPartitions(360)).toBe(176);
     expect(solved.smallestCleanPartitions(600)).toBe(100 + 0);
@@ -56,15 +60,24 @@ describe('phase and slice folds together', () => {
     const body = ellipsePart('trunk', [0, 0], [240, 140]);
     // Bright to 30 mm beyond each edge of a 200 mm slab: W_z ≥ 98 + 130.
     const slabWeight = (offset: number) => (Math.abs(offset) < 130 ? 1 : 0.01);
-    const solved = solveFold(sampleProblem([body], { ...prescription, slices: slab(50, 4, true) }, { slabWeight }));
+    const solved = solveFold(
+      sampleProblem([body], { ...prescription, slices: slab(50, 4, true) }, { slabWeight }),
+    );
     expect(solved.smallestCleanPartitions(300)).toBe(57);
     const dropped = solveFold(
-      sampleProblem([body], { ...prescription, slices: { ...slab(50, 4, true), droppedPartitionsPerEnd: 3 } }, { slabWeight }),
+      sampleProblem(
+        [body],
+        { ...prescription, slices: { ...slab(50, 4, true), droppedPartitionsPerEnd: 3 } },
+        { slabWeight },
+      ),
     );
     // Without three partitions an end: W_z ≥ 86 + 130 = 216.
     expect(dropped.smallestCleanPartitions(300)).toBe(54);
     expect(solved.leftover(300, 50).displayedShare).toBeGreaterThan(0.5);
-    expect(solved.leftover(300, 50).from).toMatchObject({ side: expect.stringMatching(/superior|inferior/), distanceMm: 200 });
+    expect(solved.leftover(300, 50).from).toMatchObject({
+      side: expect.stringMatching(/superior|inferior/),
+      distanceMm: 200,
+    });
   });
 
   it('unfolding along the slab that ends at W_z needs all excited tissue inside: W_z ≥ S + 2·skirt', () => {
@@ -73,7 +86,11 @@ describe('phase and slice folds together', () => {
     const accelerated = {
       ...prescription,
       slices: slab(50, 4, true),
-      acceleration: { ...prescription.acceleration, factorSlice: 2, unfolding: 'image-domain-grid-ends' as const },
+      acceleration: {
+        ...prescription.acceleration,
+        factorSlice: 2,
+        unfolding: 'image-domain-grid-ends' as const,
+      },
     };
     const solved = solveFold(sampleProblem([body], accelerated, { slabWeight }));
     expect(solved.smallestCleanPartitions(300)).toBe(65);

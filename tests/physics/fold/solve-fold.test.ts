@@ -70,7 +70,18 @@ describe('what decides', () => {
     const prescription = samplePrescription({ fovPhaseMm: 240, fovReadoutMm: 240, linesAcrossFov: 240 });
     const solved = solveFold(
       sampleProblem(parts, prescription, {
-        keepClear: { axes: [[1, 0, 0], [0, 1, 0], [0, 0, 1]], rangesMm: [[-90, 90], [-10, 10], [-9, 9]] },
+        keepClear: {
+          axes: [
+            [1, 0, 0],
+            [0, 1, 0],
+            [0, 0, 1],
+          ],
+          rangesMm: [
+            [-90, 90],
+            [-10, 10],
+            [-9, 9],
+          ],
+        },
       }),
     );
     // n = 1: trunk forbids W < 210, the arm 290 to 390; n = 2: 145 to 195.
@@ -88,9 +99,23 @@ describe('what decides', () => {
   });
 
   it('moving the FOV centre changes nothing when keep-clear is fixed in the body', () => {
-    const keepClear = { axes: [[1, 0, 0], [0, 1, 0], [0, 0, 1]], rangesMm: [[-90, 90], [-80, 40], [-9, 9]] } as const;
-    const widths = [0, 13, -20].map((y) =>
-      solveFold(sampleProblem([trunk], samplePrescription({ centreMm: [0, y, 0] }), { keepClear })).requirement().firstCleanMm,
+    const keepClear = {
+      axes: [
+        [1, 0, 0],
+        [0, 1, 0],
+        [0, 0, 1],
+      ],
+      rangesMm: [
+        [-90, 90],
+        [-80, 40],
+        [-9, 9],
+      ],
+    } as const;
+    const widths = [0, 13, -20].map(
+      (y) =>
+        solveFold(
+          sampleProblem([trunk], samplePrescription({ centreMm: [0, y, 0] }), { keepClear }),
+        ).requirement().firstCleanMm,
     );
     expect(new Set(widths).size).toBe(1);
   });
@@ -103,7 +128,13 @@ describe('what decides', () => {
   });
 
   it('a presaturation band frees the width only as far as its true weight allows', () => {
-    const band = { side: 'posterior' as const, innerEdgeMm: 130, thicknessMm: 80, nominalFlipDeg: 90, delayMs: 10 };
+    const band = {
+      side: 'posterior' as const,
+      innerEdgeMm: 130,
+      thicknessMm: 80,
+      nominalFlipDeg: 90,
+      delayMs: 10,
+    };
     const with90 = samplePrescription({ presaturation: [band] });
     // Posterior tissue beyond 130 keeps 3 % at 90°: only the front wall (170) still needs 170 + 150.
     expect(solveFold(sampleProblem([trunk], with90)).requirement().firstCleanMm).toBe(320);
@@ -115,14 +146,24 @@ describe('what decides', () => {
   });
 
   it('tissue ends at the reach about the isocentre, not at the FOV', () => {
-    const sagittal = samplePrescription({ plane: 'sagittal', phaseAxis: 'SI', fovPhaseMm: 300, fovReadoutMm: 400 });
+    const sagittal = samplePrescription({
+      plane: 'sagittal',
+      phaseAxis: 'SI',
+      fovPhaseMm: 300,
+      fovReadoutMm: 400,
+    });
     // Reach 250 about z = 40: tissue from -210 to 290; keep-clear -150 to 150.
     const solved = solveFold(sampleProblem([trunk], sagittal, { isocentreZMm: 40 }));
     expect(solved.requirement().firstCleanMm).toBe(440);
   });
 
   it('every slice of a stack counts: a coronal breadth shrinks away from the middle', () => {
-    const coronal = samplePrescription({ plane: 'coronal', phaseAxis: 'RL', fovPhaseMm: 400, fovReadoutMm: 400 });
+    const coronal = samplePrescription({
+      plane: 'coronal',
+      phaseAxis: 'RL',
+      fovPhaseMm: 400,
+      fovReadoutMm: 400,
+    });
     const at = (centreY: number, slices: number) =>
       solveFold(
         sampleProblem([trunk], {
@@ -161,7 +202,11 @@ describe('laws', () => {
     fc.assert(
       fc.property(size, shift, fc.integer({ min: 20, max: 100 }), shift, (e, o, r, q) => {
         const part = boxPart('trunk', { xMm: [-50, 50], yMm: [o - e, o + e], zMm: [-99, 99] });
-        const prescription = samplePrescription({ fovPhaseMm: 2 * r, fovReadoutMm: 200, centreMm: [0, q, 0] });
+        const prescription = samplePrescription({
+          fovPhaseMm: 2 * r,
+          fovReadoutMm: 200,
+          centreMm: [0, q, 0],
+        });
         const { firstCleanMm, alwaysCleanMm } = solveFold(sampleProblem([part], prescription)).requirement();
         const needed = e + r + Math.abs(o - q);
         expect(alwaysCleanMm).toBeCloseTo(Math.max(needed, 2 * r), 6);
@@ -188,12 +233,18 @@ describe('laws', () => {
     factor: fc.constantFrom(1, 2, 3),
   });
   type Scene = typeof scene extends fc.Arbitrary<infer T> ? T : never;
-  const solveScene = (s: Scene, changes: { margin?: number; dx?: number; mirror?: boolean; tolerance?: number; weight?: number } = {}) => {
+  const solveScene = (
+    s: Scene,
+    changes: { margin?: number; dx?: number; mirror?: boolean; tolerance?: number; weight?: number } = {},
+  ) => {
     const { dx = 0, mirror = false, margin = s.margin } = changes;
     const sign = mirror ? -1 : 1;
     const parts = [
       ellipsePart('trunk', [sign * s.x + dx, sign * s.y + dx], [s.a, s.b]),
-      ellipsePart('other', [sign * s.armX + dx, dx], [s.armR, s.armR], { kind: 'other', signalWeight: changes.weight ?? 1 }),
+      ellipsePart('other', [sign * s.armX + dx, dx], [s.armR, s.armR], {
+        kind: 'other',
+        signalWeight: changes.weight ?? 1,
+      }),
     ];
     const prescription = samplePrescription({
       fovPhaseMm: s.fov,
@@ -202,15 +253,27 @@ describe('laws', () => {
       centreMm: [dx, dx, 0],
       acceleration: gridEnds(s.factor),
     });
-    const all = { right: margin, left: margin, anterior: margin, posterior: margin, superior: 0, inferior: 0 };
-    return solveFold(sampleProblem(parts, prescription, { marginMm: all, tissueTolerance: changes.tolerance ?? 0.05 }));
+    const all = {
+      right: margin,
+      left: margin,
+      anterior: margin,
+      posterior: margin,
+      superior: 0,
+      inferior: 0,
+    };
+    return solveFold(
+      sampleProblem(parts, prescription, { marginMm: all, tissueTolerance: changes.tolerance ?? 0.05 }),
+    );
   };
 
   it('widths do not change when everything is moved or mirrored', () => {
     fc.assert(
       fc.property(scene, fc.integer({ min: -200, max: 200 }), (s, dx) => {
         const here = solveScene(s).requirement();
-        for (const other of [solveScene(s, { dx }).requirement(), solveScene(s, { mirror: true }).requirement()]) {
+        for (const other of [
+          solveScene(s, { dx }).requirement(),
+          solveScene(s, { mirror: true }).requirement(),
+        ]) {
           expect(other.forbiddenMm.length).toBe(here.forbiddenMm.length);
           // Two roundings to 1 µm of the same length, computed elsewhere.
           expect(Math.abs(other.firstCleanMm - here.firstCleanMm)).toBeLessThan(0.0021);
@@ -224,15 +287,20 @@ describe('laws', () => {
 
   it('a larger margin never frees a width, a larger tolerance never fouls one', () => {
     fc.assert(
-      fc.property(scene, fc.integer({ min: 1, max: 15 }), fc.double({ min: 0, max: 1, noNaN: true }), (s, more, weight) => {
-        const tight = solveScene(s, { weight });
-        const wide = solveScene(s, { weight, margin: s.margin + more });
-        const lenient = solveScene(s, { weight, tolerance: 0.5 });
-        for (let lines = 256; lines < 640; lines += 7) {
-          if (wide.isClean(lines)) expect(tight.isClean(lines)).toBe(true);
-          if (tight.isClean(lines)) expect(lenient.isClean(lines)).toBe(true);
-        }
-      }),
+      fc.property(
+        scene,
+        fc.integer({ min: 1, max: 15 }),
+        fc.double({ min: 0, max: 1, noNaN: true }),
+        (s, more, weight) => {
+          const tight = solveScene(s, { weight });
+          const wide = solveScene(s, { weight, margin: s.margin + more });
+          const lenient = solveScene(s, { weight, tolerance: 0.5 });
+          for (let lines = 256; lines < 640; lines += 7) {
+            if (wide.isClean(lines)) expect(tight.isClean(lines)).toBe(true);
+            if (tight.isClean(lines)) expect(lenient.isClean(lines)).toBe(true);
+          }
+        },
+      ),
       { seed: 7, numRuns: 200 },
     );
   });

@@ -1,8 +1,20 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { roundToMicrometre, toMicrometres } from '@/lib/physics/geometry/micrometres';
-import { keepClearRegion, regionCorners, regionInside, regionOfBox, windowRegion } from '@/lib/physics/geometry/oriented-region';
-import { displayedSliceOffsetsMm, sectionFrame, sliceOffsetsMm, toPatient, toSection } from '@/lib/physics/geometry/section-frame';
+import {
+  keepClearRegion,
+  regionCorners,
+  regionInside,
+  regionOfBox,
+  windowRegion,
+} from '@/lib/physics/geometry/oriented-region';
+import {
+  displayedSliceOffsetsMm,
+  sectionFrame,
+  sliceOffsetsMm,
+  toPatient,
+  toSection,
+} from '@/lib/physics/geometry/section-frame';
 import { cosSin, cross, dot, rotateAbout } from '@/lib/physics/geometry/vector';
 import { sectionMargin } from '@/lib/physics/fold/section-margin';
 import { NO_MARGIN_MM, samplePrescription } from '../fold/sample-problem';
@@ -22,8 +34,16 @@ describe('section frame', () => {
       phaseAxis: 'AP',
       sliceAxis: 'SI',
     });
-    const coronal = sectionFrame(samplePrescription({ plane: 'coronal', phaseAxis: 'SI', centreMm: [10, 20, 30] }), 5);
-    expect(coronal).toMatchObject({ readout: [1, 0, 0], phase: [0, 0, 1], slice: [0, 1, 0], originMm: [10, 25, 30] });
+    const coronal = sectionFrame(
+      samplePrescription({ plane: 'coronal', phaseAxis: 'SI', centreMm: [10, 20, 30] }),
+      5,
+    );
+    expect(coronal).toMatchObject({
+      readout: [1, 0, 0],
+      phase: [0, 0, 1],
+      slice: [0, 1, 0],
+      originMm: [10, 25, 30],
+    });
     expect([coronal.centreReadoutMm, coronal.centrePhaseMm, coronal.sliceMm]).toEqual([10, 30, 25]);
     expect(sectionFrame(samplePrescription({ plane: 'sagittal', phaseAxis: 'AP' }))).toMatchObject({
       readout: [0, 0, 1],
@@ -45,7 +65,9 @@ describe('section frame', () => {
   });
 
   it('refuses a phase axis across the plane, naming it', () => {
-    expect(() => sectionFrame(samplePrescription({ phaseAxis: 'SI' }))).toThrow('phaseAxis is SI; allowed: RL or AP');
+    expect(() => sectionFrame(samplePrescription({ phaseAxis: 'SI' }))).toThrow(
+      'phaseAxis is SI; allowed: RL or AP',
+    );
   });
 
   const any = fc.record({
@@ -60,11 +82,18 @@ describe('section frame', () => {
   it('is orthonormal, and patient ↔ section is a round trip', () => {
     fc.assert(
       fc.property(any, coordinate, coordinate, coordinate, ({ plane, first, ...tilts }, x, y, z) => {
-        const frame = sectionFrame(samplePrescription({ plane, phaseAxis: planes[plane][first ? 0 : 1], ...tilts }), 12);
+        const frame = sectionFrame(
+          samplePrescription({ plane, phaseAxis: planes[plane][first ? 0 : 1], ...tilts }),
+          12,
+        );
         const axes = [frame.readout, frame.phase, frame.slice];
-        axes.forEach((a, i) => axes.forEach((b, j) => expect(Math.abs(dot(a, b) - (i === j ? 1 : 0))).toBeLessThan(1e-12)));
+        axes.forEach((a, i) =>
+          axes.forEach((b, j) => expect(Math.abs(dot(a, b) - (i === j ? 1 : 0))).toBeLessThan(1e-12)),
+        );
         const [r, p, s] = toSection(frame, [x, y, z]);
-        toPatient(frame, r, p, s).forEach((value, i) => expect(Math.abs(value - [x, y, z][i]!)).toBeLessThan(ROUNDING));
+        toPatient(frame, r, p, s).forEach((value, i) =>
+          expect(Math.abs(value - [x, y, z][i]!)).toBeLessThan(ROUNDING),
+        );
       }),
       { seed: 1, numRuns: 300 },
     );
@@ -74,9 +103,23 @@ describe('section frame', () => {
     fc.assert(
       fc.property(any, ({ plane, tiltAboutPhaseDeg, tiltAboutReadoutDeg, inPlaneRotationDeg }) => {
         const [a, b] = planes[plane];
-        const one = sectionFrame(samplePrescription({ plane, phaseAxis: a, tiltAboutPhaseDeg, tiltAboutReadoutDeg, inPlaneRotationDeg }));
+        const one = sectionFrame(
+          samplePrescription({
+            plane,
+            phaseAxis: a,
+            tiltAboutPhaseDeg,
+            tiltAboutReadoutDeg,
+            inPlaneRotationDeg,
+          }),
+        );
         const two = sectionFrame(
-          samplePrescription({ plane, phaseAxis: b, tiltAboutPhaseDeg: tiltAboutReadoutDeg, tiltAboutReadoutDeg: tiltAboutPhaseDeg, inPlaneRotationDeg }),
+          samplePrescription({
+            plane,
+            phaseAxis: b,
+            tiltAboutPhaseDeg: tiltAboutReadoutDeg,
+            tiltAboutReadoutDeg: tiltAboutPhaseDeg,
+            inPlaneRotationDeg,
+          }),
         );
         expect(two.phase).toEqual(one.readout);
         expect(two.readout).toEqual(one.phase);
@@ -94,7 +137,9 @@ describe('section frame', () => {
   });
 
   it('slices of a stack and partitions of a slab lie about the centre', () => {
-    expect(sliceOffsetsMm(samplePrescription({ slices: { mode: 'stack', slices: 4, thicknessMm: 5, gapMm: 1 } }))).toEqual([-9, -3, 3, 9]);
+    expect(
+      sliceOffsetsMm(samplePrescription({ slices: { mode: 'stack', slices: 4, thicknessMm: 5, gapMm: 1 } })),
+    ).toEqual([-9, -3, 3, 9]);
     const slab = {
       mode: 'slab' as const,
       partitions: 5,
@@ -112,14 +157,27 @@ describe('regions fixed in the patient', () => {
   const box = { xMm: [-50, 60], yMm: [-40, 40], zMm: [-20, 20] } as const;
 
   it('a whole picture is the window it was asked for, slices with their thickness', () => {
-    const prescription = samplePrescription({ centreMm: [10, -5, 40], slices: { mode: 'stack', slices: 3, thicknessMm: 6, gapMm: 1 } });
+    const prescription = samplePrescription({
+      centreMm: [10, -5, 40],
+      slices: { mode: 'stack', slices: 3, thicknessMm: 6, gapMm: 1 },
+    });
     const region = keepClearRegion({ area: { kind: 'whole-picture' }, followsWindow: false }, prescription);
-    expect(region.rangesMm).toEqual([[-230, 250], [-155, 145], [30, 50]]);
+    expect(region.rangesMm).toEqual([
+      [-230, 250],
+      [-155, 145],
+      [30, 50],
+    ]);
     expect(regionCorners(region)).toHaveLength(8);
   });
 
   it('inside counts touching, compared to a micrometre', () => {
-    const window = windowRegion(samplePrescription({ fovReadoutMm: 120, fovPhaseMm: 80, slices: { mode: 'stack', slices: 1, thicknessMm: 40, gapMm: 0 } }));
+    const window = windowRegion(
+      samplePrescription({
+        fovReadoutMm: 120,
+        fovPhaseMm: 80,
+        slices: { mode: 'stack', slices: 1, thicknessMm: 40, gapMm: 0 },
+      }),
+    );
     expect(regionInside(regionOfBox(box), window)).toBe(true);
     expect(regionInside(regionOfBox({ ...box, yMm: [-40, 40.0004] }), window)).toBe(true);
     expect(regionInside(regionOfBox({ ...box, yMm: [-40, 40.002] }), window)).toBe(false);
@@ -142,10 +200,22 @@ describe('micrometres', () => {
 });
 
 describe('margins along section axes', () => {
-  const marginMm = { ...NO_MARGIN_MM, anterior: 10, posterior: 3, right: 5, left: 6, superior: 8, inferior: 9 };
+  const marginMm = {
+    ...NO_MARGIN_MM,
+    anterior: 10,
+    posterior: 3,
+    right: 5,
+    left: 6,
+    superior: 8,
+    inferior: 9,
+  };
 
   it('are the two sides of each axis in an untilted plane', () => {
-    expect(sectionMargin(sectionFrame(samplePrescription()), marginMm)).toEqual({ readout: [5, 6], phase: [10, 3], slice: [9, 8] });
+    expect(sectionMargin(sectionFrame(samplePrescription()), marginMm)).toEqual({
+      readout: [5, 6],
+      phase: [10, 3],
+      slice: [9, 8],
+    });
   });
 
   it('are the reach of the per-side box in a tilted one', () => {
@@ -156,6 +226,8 @@ describe('margins along section axes', () => {
   });
 
   it('are refused below 0', () => {
-    expect(() => sectionMargin(sectionFrame(samplePrescription()), { ...marginMm, left: -1 })).toThrow('marginMm.left is -1');
+    expect(() => sectionMargin(sectionFrame(samplePrescription()), { ...marginMm, left: -1 })).toThrow(
+      'marginMm.left is -1',
+    );
   });
 });

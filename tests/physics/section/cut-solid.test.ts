@@ -51,7 +51,8 @@ describe('curves', () => {
         for (let i = 0; i <= n; i++) {
           const r = curve.arcCentre + curve.arcHalf * (-1 + (2 * i) / n);
           const difference = valueAt(curve, r) - valueAt(line, r);
-          if (previous * difference < 0) expect(found.some((at) => Math.abs(at - r) <= (2 * curve.arcHalf) / n + 1e-6)).toBe(true);
+          if (previous * difference < 0)
+            expect(found.some((at) => Math.abs(at - r) <= (2 * curve.arcHalf) / n + 1e-6)).toBe(true);
           previous = difference;
         }
       }),
@@ -65,7 +66,10 @@ describe('curves', () => {
     expect(bandsBetween([straight(0)], [straight(5)], 3, 3)).toEqual([]);
     // A triangle: above 0, below r and 10 − r.
     const bands = bandsBetween([straight(0)], [straight(0, 1), straight(10, -1)], -50, 50);
-    expect(bands.map(({ r0, r1 }) => [r0, r1])).toEqual([[0, 5], [5, 10]]);
+    expect(bands.map(({ r0, r1 }) => [r0, r1])).toEqual([
+      [0, 5],
+      [5, 10],
+    ]);
   });
 });
 
@@ -73,13 +77,15 @@ describe('curves', () => {
 function inside(shape: PartShape, [x, y, z]: readonly [number, number, number]): boolean {
   const at = [x, y, z];
   if (shape.type === 'ellipsoid') {
-    return shape.semiAxesMm.reduce((sum, semi, i) => sum + ((at[i]! - shape.centreMm[i]!) / semi) ** 2, 0) < 1;
+    return (
+      shape.semiAxesMm.reduce((sum, semi, i) => sum + ((at[i]! - shape.centreMm[i]!) / semi) ** 2, 0) < 1
+    );
   }
   if (shape.type === 'outline-prism') return false;
   const axis = 'xyz'.indexOf(shape.along);
   if (at[axis]! >= (shape.toMm ?? 250) || at[axis]! <= (shape.fromMm ?? -250)) return false;
   const [u, v] = [0, 1, 2].filter((i) => i !== axis) as [number, number];
-  const t = ((shape.rotationDeg ?? 0) * Math.PI) / 180 * (axis === 1 ? -1 : 1);
+  const t = (((shape.rotationDeg ?? 0) * Math.PI) / 180) * (axis === 1 ? -1 : 1);
   const du = at[u]! - shape.centreMm[u]!;
   const dv = at[v]! - shape.centreMm[v]!;
   const a = (du * Math.cos(t) + dv * Math.sin(t)) / shape.semiAxesMm[0];
@@ -89,7 +95,11 @@ function inside(shape: PartShape, [x, y, z]: readonly [number, number, number]):
 
 const centre = fc.tuple(number(-60, 60), number(-60, 60), number(-60, 60));
 const shape: fc.Arbitrary<PartShape> = fc.oneof(
-  fc.record({ type: fc.constant('ellipsoid' as const), centreMm: centre, semiAxesMm: fc.tuple(number(30, 200), number(30, 200), number(30, 200)) }),
+  fc.record({
+    type: fc.constant('ellipsoid' as const),
+    centreMm: centre,
+    semiAxesMm: fc.tuple(number(30, 200), number(30, 200), number(30, 200)),
+  }),
   fc.record({
     type: fc.constant('elliptic-cylinder' as const),
     along: fc.constantFrom('x' as const, 'y' as const, 'z' as const),
@@ -112,25 +122,44 @@ const PHASE = { axial: 'AP', coronal: 'SI', sagittal: 'SI' } as const;
 describe('sections of solids', () => {
   it('hold exactly the points of the solid, whatever the plane', () => {
     fc.assert(
-      fc.property(shape, frameOf, fc.array(fc.tuple(number(-250, 250), number(-250, 250)), { minLength: 60, maxLength: 60 }), (solidShape, f, points) => {
-        const prescription = samplePrescription({
-          plane: f.plane,
-          phaseAxis: PHASE[f.plane],
-          tiltAboutReadoutDeg: f.tilt1,
-          tiltAboutPhaseDeg: f.tilt2,
-          inPlaneRotationDeg: f.turn,
-        });
-        const frame = sectionFrame(prescription, f.offset);
-        const part: SolidPart = { name: 'part', kind: 'other', shape: solidShape, signalWeight: 1, estimated: false };
-        const solids = partSolids([part], { isocentreZMm: 10, tissueReachMm: 180 }, { bands: [], b1Scale: 1, t1Ms: [1] }, 0);
-        const bands = solids.flatMap(({ solid }) => cutSolid(solidInSection(solid, frame), frame.sliceMm));
-        for (const [r, p] of points) {
-          const at = toPatient(frame, r, p);
-          const expected = inside(solidShape, at) && Math.abs(at[2] - 10) < 180;
-          const got = bands.some((band) => r > band.r0 && r < band.r1 && p > valueAt(band.lower, r) && p < valueAt(band.upper, r));
-          expect(got).toBe(expected);
-        }
-      }),
+      fc.property(
+        shape,
+        frameOf,
+        fc.array(fc.tuple(number(-250, 250), number(-250, 250)), { minLength: 60, maxLength: 60 }),
+        (solidShape, f, points) => {
+          const prescription = samplePrescription({
+            plane: f.plane,
+            phaseAxis: PHASE[f.plane],
+            tiltAboutReadoutDeg: f.tilt1,
+            tiltAboutPhaseDeg: f.tilt2,
+            inPlaneRotationDeg: f.turn,
+          });
+          const frame = sectionFrame(prescription, f.offset);
+          const part: SolidPart = {
+            name: 'part',
+            kind: 'other',
+            shape: solidShape,
+            signalWeight: 1,
+            estimated: false,
+          };
+          const solids = partSolids(
+            [part],
+            { isocentreZMm: 10, tissueReachMm: 180 },
+            { bands: [], b1Scale: 1, t1Ms: [1] },
+            0,
+          );
+          const bands = solids.flatMap(({ solid }) => cutSolid(solidInSection(solid, frame), frame.sliceMm));
+          for (const [r, p] of points) {
+            const at = toPatient(frame, r, p);
+            const expected = inside(solidShape, at) && Math.abs(at[2] - 10) < 180;
+            const got = bands.some(
+              (band) =>
+                r > band.r0 && r < band.r1 && p > valueAt(band.lower, r) && p < valueAt(band.upper, r),
+            );
+            expect(got).toBe(expected);
+          }
+        },
+      ),
       { seed: 9, numRuns: 400 },
     );
   });
@@ -145,7 +174,12 @@ describe('sections of solids', () => {
         signalWeight: 1,
         estimated: false,
       };
-      const [solid] = partSolids([part], { isocentreZMm: 0, tissueReachMm: 250 }, { bands: [], b1Scale: 1, t1Ms: [1] }, 0);
+      const [solid] = partSolids(
+        [part],
+        { isocentreZMm: 0, tissueReachMm: 250 },
+        { bands: [], b1Scale: 1, t1Ms: [1] },
+        0,
+      );
       const [band] = cutSolid(solidInSection(solid!.solid, frame), 0);
       const t = (turn * Math.PI) / 180;
       const half = Math.hypot(200 * Math.sin(t), 120 * Math.cos(t));

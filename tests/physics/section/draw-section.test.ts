@@ -79,7 +79,12 @@ function sampleCase(changes: {
 
 /** Shoelace area, mm². */
 const ringArea = (ring: SectionRing) =>
-  Math.abs(ring.reduce((sum, [r, p], i) => sum + r * ring[(i + 1) % ring.length]![1] - ring[(i + 1) % ring.length]![0] * p, 0)) / 2;
+  Math.abs(
+    ring.reduce(
+      (sum, [r, p], i) => sum + r * ring[(i + 1) % ring.length]![1] - ring[(i + 1) % ring.length]![0] * p,
+      0,
+    ),
+  ) / 2;
 const area = (rings: readonly SectionRing[]) => rings.reduce((sum, ring) => sum + ringArea(ring), 0);
 const phases = (rings: readonly SectionRing[]) => rings.flat().map(([, p]) => p);
 
@@ -98,13 +103,21 @@ describe('a section as outlines', () => {
   it('moves each outlying piece by one acquired width to the opposite side, never mirrored', () => {
     expect(drawing.pieces.map((piece) => piece.name).sort()).toEqual(['piece/trunk/-1', 'piece/trunk/1']);
     const back = drawing.pieces.find((piece) => piece.order === -1)!;
-    expect(back).toMatchObject({ side: 'posterior', distanceMm: 300, sliceOrder: 0, estimated: false, placeUncertain: false });
+    expect(back).toMatchObject({
+      side: 'posterior',
+      distanceMm: 300,
+      sliceOrder: 0,
+      estimated: false,
+      placeUncertain: false,
+    });
     expect(Math.max(...phases(back.source))).toBeCloseTo(170, 6);
     expect(Math.min(...phases(back.source))).toBeCloseTo(150, 6);
-    back.landed.forEach((ring, i) => ring.forEach(([r, p], k) => {
-      expect(r).toBeCloseTo(back.source[i]![k]![0], 9);
-      expect(p).toBeCloseTo(back.source[i]![k]![1] - 300, 9);
-    }));
+    back.landed.forEach((ring, i) =>
+      ring.forEach(([r, p], k) => {
+        expect(r).toBeCloseTo(back.source[i]![k]![0], 9);
+        expect(p).toBeCloseTo(back.source[i]![k]![1] - 300, 9);
+      }),
+    );
     expect(area(back.inKeepClear)).toBeCloseTo(area(back.landed), 6);
   });
 
@@ -120,8 +133,13 @@ describe('a section as outlines', () => {
 
   it('cuts keep-clear and must-stay-displayed boxes, and grows the first by the margin', () => {
     const box = { xMm: [-100, 50], yMm: [-140, 95], zMm: [-10, 10] } as const;
-    const given = sampleCase({ keepClear: { area: { kind: 'box', box }, mustStayDisplayed: box, followsWindow: false } });
-    const withMargin = drawSection({ ...given, policy: { ...given.policy, marginMm: { ...NO_MARGIN_MM, anterior: 10, posterior: 3, right: 5 } } });
+    const given = sampleCase({
+      keepClear: { area: { kind: 'box', box }, mustStayDisplayed: box, followsWindow: false },
+    });
+    const withMargin = drawSection({
+      ...given,
+      policy: { ...given.policy, marginMm: { ...NO_MARGIN_MM, anterior: 10, posterior: 3, right: 5 } },
+    });
     expect(ringArea(withMargin.keepClear)).toBeCloseTo(150 * 235, 6);
     expect(ringArea(withMargin.mustStayDisplayed)).toBeCloseTo(150 * 235, 6);
     // Tissue moving 10 mm forwards reaches the area from 10 mm behind it, and so on.
@@ -131,18 +149,28 @@ describe('a section as outlines', () => {
   });
 
   it('says when tissue lies where the scanner maps it wrongly', () => {
-    const narrow = { ...sampleCase({}), scanner: { ...scanner, limits: { ...scanner.limits, usableFovMm: [400, 400, 400] as const } } };
+    const narrow = {
+      ...sampleCase({}),
+      scanner: { ...scanner, limits: { ...scanner.limits, usableFovMm: [400, 400, 400] as const } },
+    };
     const uncertain = drawSection(narrow);
     expect(uncertain.tissue[0]!.placeUncertain).toBe(true);
     expect(drawing.tissue[0]!.placeUncertain).toBe(false);
     expect(solveFold(foldProblem(narrow)).leftover(256).placeUncertain).toBe(false);
-    const wide = { ...narrow, prescription: { ...narrow.prescription, phaseAxis: 'RL' as const, fovPhaseMm: 400, fovReadoutMm: 300 } };
+    const wide = {
+      ...narrow,
+      prescription: { ...narrow.prescription, phaseAxis: 'RL' as const, fovPhaseMm: 400, fovReadoutMm: 300 },
+    };
     expect(solveFold(foldProblem(wide)).leftover(256).placeUncertain).toBe(true);
     expect(drawSection(wide).pieces.every((piece) => piece.placeUncertain)).toBe(true);
   });
 
   it('draws centre ghosts of image-domain unfolding at full size, and no plain piece', () => {
-    const acceleration = { ...samplePrescription().acceleration, factorPhase: 2, unfolding: 'image-domain-grid-ends' as const };
+    const acceleration = {
+      ...samplePrescription().acceleration,
+      factorPhase: 2,
+      unfolding: 'image-domain-grid-ends' as const,
+    };
     const ghosted = drawSection(sampleCase({ prescription: { acceleration } }), { acquiredLines: 280 });
     expect(ghosted.pieces).toEqual([]);
     const ghost = ghosted.ghosts.find((one) => one.name === 'ghost/trunk/high/1/0')!;
@@ -150,24 +178,48 @@ describe('a section as outlines', () => {
     expect(ghost).toMatchObject({ side: 'posterior', multiple: 1, distanceMm: 328.125 / 2 });
     expect(Math.min(...phases(ghost.landed))).toBeCloseTo(0, 6);
     expect(Math.max(...phases(ghost.landed))).toBeCloseTo(170 - 164.0625, 6);
-    expect(drawSection(sampleCase({ prescription: { acceleration } }), { acquiredLines: 291 }).ghosts).toEqual([]);
+    expect(
+      drawSection(sampleCase({ prescription: { acceleration } }), { acquiredLines: 291 }).ghosts,
+    ).toEqual([]);
   });
 
   it('draws what comes along a slab in the section it lands in', () => {
-    const slices = { mode: 'slab' as const, partitions: 50, partitionThicknessMm: 4, acquiredPartitions: 50, selective: true, droppedPartitionsPerEnd: 0 };
+    const slices = {
+      mode: 'slab' as const,
+      partitions: 50,
+      partitionThicknessMm: 4,
+      acquiredPartitions: 50,
+      selective: true,
+      droppedPartitionsPerEnd: 0,
+    };
     const given = sampleCase({ prescription: { slices } });
     const slabWeight = (offset: number) => (Math.abs(offset) < 130 ? 1 : 0);
     const edge = drawSection(given, { sliceOffsetMm: -98, acquiredLines: 400, slabWeight });
     const piece = edge.pieces.find((one) => one.name === 'piece/trunk/0/1')!;
     expect(piece).toMatchObject({ side: 'superior', order: 0, sliceOrder: 1, distanceMm: 200 });
     expect(drawSection(given, { sliceOffsetMm: 0, acquiredLines: 400, slabWeight }).pieces).toEqual([]);
-    expect(drawSection(given, { sliceOffsetMm: -98, acquiredLines: 400, acquiredPartitions: 60, slabWeight }).pieces).toEqual([]);
+    expect(
+      drawSection(given, { sliceOffsetMm: -98, acquiredLines: 400, acquiredPartitions: 60, slabWeight })
+        .pieces,
+    ).toEqual([]);
   });
 
   it('keeps an uploaded outline whole, holes included, without the seams of its pieces', () => {
-    const ring = (half: number) => [[-half, -half], [half, -half], [half, half], [-half, half]] as const;
+    const ring = (half: number) =>
+      [
+        [-half, -half],
+        [half, -half],
+        [half, half],
+        [-half, half],
+      ] as const;
     const parts: SolidPart[] = [
-      { name: 'phantom', kind: 'other', signalWeight: 1, estimated: false, shape: { type: 'outline-prism', along: 'z', rings: [ring(100), ring(40)], fromMm: -50, toMm: 50 } },
+      {
+        name: 'phantom',
+        kind: 'other',
+        signalWeight: 1,
+        estimated: false,
+        shape: { type: 'outline-prism', along: 'z', rings: [ring(100), ring(40)], fromMm: -50, toMm: 50 },
+      },
     ];
     const phantom = drawSection(sampleCase({ parts }));
     expect(phantom.tissue[0]!.rings.map((one) => one.length)).toEqual([4, 4]);
