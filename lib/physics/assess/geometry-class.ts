@@ -38,11 +38,16 @@ export const freeze = (given: Case): FrozenCase => ({
   frozen: keepClearRegion(given.keepClear, given.prescription),
 });
 
+/** Everything of a slab on which its profile depends. */
+export const slabKey = (slab: Slab, p: Prescription): string =>
+  `${slab.partitions}/${slab.partitionThicknessMm}/${slab.selective}/${slab.timeBandwidthProduct}/${slab.pulseDurationMs}/` +
+  `${slab.droppedPartitionsPerEnd}/${slab.fatShiftTowards}/${p.flipDeg}/${p.trMs}/${p.family}`;
+
 const identities = new WeakMap<object, number>();
 let nextIdentity = 0;
 
 /** A number for an object that is never changed in place. */
-function identityOf(object: object): number {
+export function identityOf(object: object): number {
   let identity = identities.get(object);
   if (identity === undefined) {
     identity = nextIdentity++;
@@ -57,8 +62,7 @@ function prescriptionKey(p: Prescription): string {
   const stack =
     slices.mode === 'stack'
       ? `${slices.slices}/${slices.thicknessMm}/${slices.gapMm}`
-      : `${slices.partitions}/${slices.partitionThicknessMm}/${slices.selective}/${slices.timeBandwidthProduct}/` +
-        `${slices.pulseDurationMs}/${slices.droppedPartitionsPerEnd}/${slices.fatShiftTowards}/${p.flipDeg}/${p.trMs}/${p.family}`;
+      : slabKey(slices, p);
   const bands = p.presaturation
     .map((band) => `${band.side}/${band.innerEdgeMm}/${band.thicknessMm}/${band.nominalFlipDeg}/${band.delayMs}`)
     .join(';');
@@ -73,9 +77,8 @@ function prescriptionKey(p: Prescription): string {
     p.fovReadoutMm,
     p.linesAcrossFov,
     stack,
-    a.factorPhase,
-    a.factorSlice,
-    a.factorPhase * a.factorSlice > 1 ? a.unfolding : '',
+    // Only a grid that ends at W makes fold depend on how much is accelerated.
+    a.factorPhase * a.factorSlice > 1 && a.unfolding === 'image-domain-grid-ends' ? `${a.factorPhase}/${a.factorSlice}` : '',
     bands,
     p.coil,
     p.family === 'echo-planar' ? `${p.echoSpacingMs}/${p.shots}/${p.fatSuppressed}` : '',
@@ -83,7 +86,7 @@ function prescriptionKey(p: Prescription): string {
 }
 
 /** The key of a case's geometry class. */
-export function classKey(given: FrozenCase): string {
+function classKey(given: FrozenCase): string {
   const { position, breadthMm, depthMm, gapMm } = given.patient.arms;
   return [
     given.patient.region,

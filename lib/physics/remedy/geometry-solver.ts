@@ -7,7 +7,7 @@ import { regionCorners, regionOfBox, windowRegion, type OrientedRegion } from '.
 import { sectionFrame } from '../geometry/section-frame';
 import { AXIS_SIDES, AXIS_VECTOR, dot, scale } from '../geometry/vector';
 import { toMicrometres } from '../geometry/micrometres';
-import type { Reason } from '../model/assessment';
+import type { Reason, SlabResult } from '../model/assessment';
 import type { PatientAxis, RangeMm, Side, Vec3 } from '../model/axes';
 import type { Case } from '../model/case';
 import { nextAcquiredPartitions } from '../fold/acquired-lines';
@@ -45,7 +45,13 @@ class RankingGeometry {
   }
 
   slabIsClean(given: TargetedCase): boolean {
-    return (slabResultOf(this.forSizing(given).seen)?.contaminatedInKeepClear ?? 0) === 0;
+    return (this.slabResult(given)?.contaminatedInKeepClear ?? 0) === 0;
+  }
+
+  /** Through the slab alone: the plane is not solved for it, since many slabs are tried before one is kept. */
+  slabResult(given: TargetedCase): SlabResult | undefined {
+    if (given.prescription.slices.mode !== 'slab') return undefined;
+    return slabResultOf(geometryCase(given.target === undefined ? given : { ...given, frozen: given.target }));
   }
 
   isClean(given: TargetedCase): boolean {
@@ -73,7 +79,7 @@ const NO_SLAB_WRAP = 8;
 function cleanPartitions(given: TargetedCase, geometry: RankingGeometry): number | undefined {
   const { slices, acquiredLines } = given.prescription;
   if (slices.mode !== 'slab') return undefined;
-  const alone = slabResultOf(geometry.forSizing(given).seen)?.smallestCleanPartitions;
+  const alone = geometry.slabResult(given)?.smallestCleanPartitions;
   if (alone === undefined || !geometry.forSizing(given).solved.isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)) return alone;
   const most = Math.floor(slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9);
   for (let acquired = alone; acquired <= most; ) {
