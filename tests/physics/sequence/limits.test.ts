@@ -109,8 +109,25 @@ describe('what a sequence may be', () => {
       time({ family: 'gradient-echo-3d', slices: slabOf(), breathing: 'triggered', segments: 2 }).batches,
     ).toBe(1);
   });
+  it('a single shot is one shot, an echo-planar series has its own', () => {
+    expect(time({ family: 'single-shot-echo-train', trMs: 1200 }).shots).toBe(1);
+    expect(time({ family: 'echo-planar', shots: 3 }).shots).toBe(3);
+    expect(time({ family: 'balanced', acquiredLines: 250 }).shots).toBe(250);
+  });
+  it('a breath that may be next to nothing counts as a tenth of a second', () => {
+    const slab = {
+      family: 'gradient-echo-3d',
+      slices: slabOf(),
+      breathing: 'triggered',
+      segments: 40,
+      averages: 1,
+    } as const;
+    expect(time(slab, measured(1, 1)).scanRangeS![0]).toBeCloseTo(4, 9);
+    expect(time(slab, measured(0.05, 1)).scanRangeS![0]).toBeCloseTo(2, 9);
+  });
   it('names the most reference lines there can be', () => {
     expect(() => acquiredLinesOneWay(256, 0.6, 2, 60)).toThrow('referenceLines is 60; allowed: 0 to 51');
+    expect(() => acquiredLinesOneWay(256, 0.75, 2, 129)).toThrow('referenceLines is 129; allowed: 0 to 128');
     // 256 · (2 · 0.75 − 1) = 128, exactly allowed.
     expect(acquiredLinesOneWay(256, 0.75, 2, 128)).toBe(32 + 128);
   });

@@ -18,6 +18,10 @@ describe('fat', () => {
     expect(fatWaterShiftHz(3)).toBeCloseTo(447.1, 1);
     // CODATA 2018, from memory: 42.577 MHz/T.
     expect(larmorFrequencyMhz(1.5)).toBeCloseTo(63.866, 3);
+    expect(larmorFrequencyMhz(0.5)).toBeCloseTo(21.289, 3);
+    expect(() => larmorFrequencyMhz(Number.POSITIVE_INFINITY)).toThrow(
+      expect.objectContaining({ code: 'field-strength-not-positive' }),
+    );
   });
   it('is refused without a pulse duration or a field', () => {
     expect(() => fatShiftShare(3, 0, 8)).toThrow(
