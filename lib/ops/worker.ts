@@ -3,6 +3,7 @@ import { closeDatabase, dueWork, requireSchema } from '@/db/client';
 import { environment } from '@/lib/env';
 import { type JobPayload, QUEUES } from '@/lib/jobs';
 import { smtpTransport } from '@/lib/mail';
+import { refreshBookings } from '@/lib/services/booking/refresh-bookings';
 import { deliverMail } from '@/lib/services/mail/deliver-mail';
 
 /**
@@ -25,6 +26,13 @@ async function main(): Promise<void> {
   };
   await boss.work('deliver-mail', { batchSize: 5, pollingIntervalSeconds: 1 }, async (jobs) => {
     for (const job of jobs) await deliver(QUEUES['deliver-mail'].parse(job.data));
+  });
+
+  await boss.work('refresh-bookings', { batchSize: 1, pollingIntervalSeconds: 1 }, async (jobs) => {
+    for (const job of jobs) {
+      const refreshed = await refreshBookings(QUEUES['refresh-bookings'].parse(job.data));
+      console.log(`bookings worked out again: ${refreshed}`);
+    }
   });
 
   let stopping = false;

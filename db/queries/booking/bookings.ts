@@ -96,6 +96,26 @@ export async function findBooking(trx: SiteTransaction, siteId: string, id: stri
   return row ? toOverview(row) : null;
 }
 
+/** Bookings from a moment on that have no plan yet: their state follows scanner, protocol and policy. */
+export async function listUnplannedBookingIds(
+  trx: SiteTransaction,
+  siteId: string,
+  filter: { readonly from: Date; readonly scannerId?: string; readonly protocolId?: string },
+): Promise<string[]> {
+  let query = trx
+    .selectFrom('booking as b')
+    .leftJoin('plan as n', (join) => join.onRef('n.site_id', '=', 'b.site_id').onRef('n.booking_id', '=', 'b.id'))
+    .select('b.id')
+    .where('b.site_id', '=', siteId)
+    .where('b.scheduled_at', '>=', filter.from)
+    .where('n.id', 'is', null)
+    .orderBy('b.scheduled_at')
+    .orderBy('b.id');
+  if (filter.scannerId) query = query.where('b.booked_scanner_id', '=', filter.scannerId);
+  if (filter.protocolId) query = query.where('b.protocol_id', '=', filter.protocolId);
+  return (await query.execute()).map(({ id }) => id);
+}
+
 export async function accessionTaken(trx: SiteTransaction, siteId: string, accession: string): Promise<boolean> {
   const row = await trx
     .selectFrom('booking')

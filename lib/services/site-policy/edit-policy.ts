@@ -3,6 +3,7 @@ import { addPolicyVersion, findPolicy } from '@/db/queries/site-policy/policies'
 import { authorise } from '@/lib/domain/access';
 import { changedFields } from '@/lib/domain/document/changed-fields';
 import { ServiceError, staleVersion } from '@/lib/domain/errors';
+import { enqueue } from '@/lib/jobs';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { editPolicyInput, type PolicyView } from '@/lib/schemas/site-policy';
 import { recordAudit } from '../audit/record-audit';
@@ -30,6 +31,7 @@ export async function editPolicy(context: ServiceContext, input: unknown): Promi
     if (!added) throw staleVersion(after?.version ?? version);
     if (!after) throw new ServiceError('not-found');
     await recordAudit(trx, context, { action: 'policy.edit', subjectType: 'site-policy', subjectId: siteId, fields });
+    await enqueue(trx, 'refresh-bookings', { siteId });
     return effectivePolicy(after);
   });
 }
