@@ -41,3 +41,6 @@ export function rateLimit(
     },
   };
 }
+
+/** Shared by the routes that write: far above what a person or an honest program does, far below what fills a disk. */
+export const writeLimit = rateLimit({ burst: 120, perMinute: 240 });
