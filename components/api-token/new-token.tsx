@@ -29,7 +29,8 @@ export function NewToken({ token }: { token: { name: string; secret: string; exp
       </Notice>
       <TextInput ref={field} label="Token" value={token.secret} readOnly figures spellCheck={false} />
       <p>
-        Send it with each request as <code className="figures">Authorization: Bearer …</code>.
+        Send it with each request in the header <code className="figures">Authorization</code>, after the word{' '}
+        <code className="figures">Bearer</code>.
       </p>
       <div className="flex flex-wrap items-center gap-3">
         <Button variant="primary" onClick={() => void copy()}>

@@ -48,7 +48,7 @@ export function AuditTable({ events }: { events: readonly AuditEvent[] }) {
             </Td>
             <Td>
               {auditWords(event.action)}
-              <span className="figures block text-sm text-ink-soft">{event.action}</span>
+              <span className="figures block text-sm whitespace-nowrap text-ink-soft">{event.action}</span>
             </Td>
             <Td>
               {event.subjectType}

@@ -47,6 +47,7 @@ export function ChangePasswordForm({
         required
       />
       <FormText name="repeatPassword" label="The same again" type="password" autoComplete="new-password" required />
+      <p className="text-sm text-ink-soft">Every other device is signed out with it.</p>
       <FormProblem problem={problem} />
       <Button
         type="submit"
@@ -54,7 +55,7 @@ export function ChangePasswordForm({
         pending={form.formState.isSubmitting || done}
         pendingLabel="Changing the password …"
       >
-        Change the password and sign out everywhere else
+        Change password
       </Button>
     </Form>
   );

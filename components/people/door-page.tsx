@@ -1,6 +1,7 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
 import { Logo } from '@/components/ui/logo';
+import { WovenEdge } from '@/components/ui/woven-edge';
 
 /** The pages before the shell: one column of paper between two woven edges. */
 export function DoorPage({ title, lead, children }: { title: string; lead?: ReactNode; children: ReactNode }) {
@@ -11,13 +12,13 @@ export function DoorPage({ title, lead, children }: { title: string; lead?: Reac
         <span className="text-xl font-bold tracking-tight">Selvedge</span>
       </Link>
       <div className="mt-8 border-x border-line bg-paper">
-        <div aria-hidden="true" className="woven-edge" />
+        <WovenEdge />
         <div className="px-6 py-7">
           <h1 className="text-2xl">{title}</h1>
           {lead && <p className="mt-2 text-ink-soft">{lead}</p>}
           <div className="mt-6">{children}</div>
         </div>
-        <div aria-hidden="true" className="woven-edge" />
+        <WovenEdge />
       </div>
     </main>
   );
