@@ -16,18 +16,27 @@ function leaves(value: unknown, path: readonly string[] = []): [string[], unknow
 }
 
 function shown(value: unknown): string {
-  if (value === undefined || value === '') return 'nothing';
+  if (value === undefined || value === null || value === '') return 'nothing';
   if (typeof value === 'boolean') return value ? 'yes' : 'no';
-  return String(value);
+  return String(value).replace(/^-(?=\d)/, '\u2212');
 }
 
-/** "sequences.1.trMs" → "2 · Repetition time": the place in each list, then the schema's own words. */
+const isPlace = (key: string | undefined): boolean => key !== undefined && /^\d+$/.test(key);
+
+/** "sequences.1.trMs" → "sequence 2 · Repetition time": the place in each list, then the schema's own words. */
 function wordsOf(schema: z.ZodType, path: readonly string[]): string {
-  const places = path
-    .slice(0, -1)
-    .filter((key) => /^\d+$/.test(key))
-    .map((key) => String(Number(key) + 1));
-  return [...places, wordsAt(schema, path) ?? path.at(-1)].join(' · ');
+  const places = path.flatMap((key, index) => {
+    const list = path[index - 1];
+    return isPlace(key) && index < path.length - 1 && list
+      ? [`${list.replace(/s$/, '')} ${Number(key) + 1}`]
+      : [];
+  });
+  const last = path.at(-1);
+  // One number of a pair says little by itself: the pair's words, then which of the two.
+  const words = isPlace(last)
+    ? `${wordsAt(schema, path.slice(0, -1)) ?? path.at(-2)} (${Number(last) + 1})`
+    : (wordsAt(schema, path) ?? last);
+  return [...places, words].join(' · ');
 }
 
 /** Every field in which two forms differ, with the words people read beside it. */

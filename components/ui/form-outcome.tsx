@@ -4,6 +4,7 @@ import { useEffect, useRef } from 'react';
 import type { FieldErrors, FieldValues } from 'react-hook-form';
 import type * as z from 'zod';
 import { Button } from './button';
+import { cx } from './class-names';
 import { formDifferences } from './form-differences';
 import { Notice } from './notice';
 import { Table, Td, Th, Tr } from './table';
@@ -38,6 +39,9 @@ export function FormOutcome<T extends FieldValues>({
 
   if (stale) {
     const differences = formDifferences(schema, stale.form, form.getValues());
+    const kept = new Set(
+      formDifferences(schema, stale.form, state.merged()).map((difference) => difference.path),
+    );
     return (
       <div ref={top} tabIndex={-1}>
         <Notice
@@ -45,7 +49,8 @@ export function FormOutcome<T extends FieldValues>({
           live
           title={`Someone else saved version ${stale.version} while you were editing version ${state.version}.`}
         >
-          Nothing was overwritten and nothing you typed is lost. Every version stays in the history.
+          Nothing was overwritten and nothing you typed is lost. Saving both keeps what is in bold: the fields
+          you changed are yours, the rest theirs.
         </Notice>
         {differences.length > 0 && (
           <div className="mt-3">
@@ -61,8 +66,12 @@ export function FormOutcome<T extends FieldValues>({
                 {differences.map((difference) => (
                   <Tr key={difference.path}>
                     <Td>{difference.words}</Td>
-                    <Td className="figures">{difference.theirs}</Td>
-                    <Td className="figures font-semibold">{difference.mine}</Td>
+                    <Td className={cx('figures', !kept.has(difference.path) && 'font-bold')}>
+                      {difference.theirs}
+                    </Td>
+                    <Td className={cx('figures', kept.has(difference.path) && 'font-bold')}>
+                      {difference.mine}
+                    </Td>
                   </Tr>
                 ))}
               </tbody>
@@ -70,9 +79,10 @@ export function FormOutcome<T extends FieldValues>({
           </div>
         )}
         <div className="mt-3 flex flex-wrap gap-3">
-          <Button variant="primary" onClick={state.keepMine}>
-            Save yours as version {stale.version + 1}
+          <Button variant="primary" onClick={state.saveMerged}>
+            Save both as version {stale.version + 1}
           </Button>
+          <Button onClick={state.keepMine}>Save yours alone as version {stale.version + 1}</Button>
           <Button onClick={state.takeTheirs}>Continue from version {stale.version}</Button>
         </div>
       </div>

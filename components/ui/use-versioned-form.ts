@@ -1,7 +1,7 @@
 'use client';
 
 import { zodResolver } from '@hookform/resolvers/zod';
-import { useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import {
   useForm,
   type DefaultValues,
@@ -12,6 +12,7 @@ import {
 import type * as z from 'zod';
 import type { ErrorView } from '@/lib/domain/errors';
 import type { ActionResult } from '@/lib/schemas/action-result';
+import { mergeForms } from './merge-forms';
 
 export interface Versioned<T> {
   readonly version: number;
@@ -37,6 +38,9 @@ export interface VersionedForm<T extends FieldValues> {
   /** What somebody else stored meanwhile. */
   stale: Versioned<T> | null;
   version: number;
+  /** Theirs with my changes on top; where both changed a field, mine stands. */
+  merged: () => T | null;
+  saveMerged: () => void;
   keepMine: () => void;
   takeTheirs: () => void;
 }
@@ -55,6 +59,8 @@ export function useVersionedForm<T extends FieldValues, R>(options: Options<T, R
     reValidateMode: 'onBlur',
   });
   const [version, setVersion] = useState(options.version);
+  // What both people started from.
+  const base = useRef(options.initial as T);
   const [problem, setProblem] = useState<ErrorView | null>(null);
   const [stale, setStale] = useState<Versioned<T> | null>(null);
   const { isDirty, isSubmitSuccessful } = form.formState;
@@ -93,19 +99,35 @@ export function useVersionedForm<T extends FieldValues, R>(options: Options<T, R
     }
   };
 
+  const merged = () =>
+    stale ? mergeForms(base.current, stale.form, structuredClone(form.getValues())) : null;
+  const saveOn = (onVersion: number) => {
+    setVersion(onVersion);
+    void form.handleSubmit((values) => attempt(onVersion, values))();
+  };
+
   return {
     form,
     submit: (values) => attempt(version, values),
     problem,
     stale,
     version,
+    merged,
+    saveMerged: () => {
+      const both = merged();
+      if (!stale || !both) return;
+      base.current = stale.form;
+      form.reset(both, { keepDefaultValues: true });
+      saveOn(stale.version);
+    },
     keepMine: () => {
       if (!stale) return;
-      setVersion(stale.version);
-      void form.handleSubmit((values) => attempt(stale.version, values))();
+      base.current = stale.form;
+      saveOn(stale.version);
     },
     takeTheirs: () => {
       if (!stale) return;
+      base.current = stale.form;
       setVersion(stale.version);
       form.reset(stale.form);
       setStale(null);
