@@ -71,23 +71,24 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
     tissue: TissueSolid,
     source: Source,
     evaluate: (bands: readonly RowBand[]) => Interval | undefined,
-    covered?: Interval,
+    covered?: readonly Interval[],
   ) => overSliceMargin(tissue, source.sMm, margin.slice, evaluate, covered);
   const bandsOf = (target: TargetSection) => (withMargin ? target.grown : target.bands);
 
   const addLattice = (solid: number, sources: readonly Source[], factor: number) => {
     const tissue = sections.tissue[solid]!;
     const merged: Interval[] = [];
-    forDistinct(tissue, sources, bandsOf, (source) => {
-      const clear = bandsOf(source.target);
-      const moves = reach(
-        tissue,
-        source,
-        (bands) => displacements(bands, clear, margin.phase),
-        merged[merged.length - 1],
-      );
-      if (moves) mergeInto(merged, moves);
-    });
+    const visit = (look: typeof reach) =>
+      forDistinct(tissue, sources, bandsOf, (source) => {
+        const clear = bandsOf(source.target);
+        const moves = look(tissue, source, (bands) => displacements(bands, clear, margin.phase), merged);
+        if (moves) mergeInto(merged, moves);
+      });
+    // In a tilted stack the sections themselves already cover most of what moving across the slice can bring.
+    if (tissue.coupled && margin.slice[0] + margin.slice[1] > 0) {
+      visit((one, source, evaluate) => overSliceMargin(one, source.sMm, NO_MARGIN.slice, evaluate));
+    }
+    visit(reach);
     for (const moves of merged) lattices.push({ moves, solid, sliceOrder: sources[0]!.index, factor });
   };
 
@@ -163,13 +164,19 @@ function forDistinct(
   }
 }
 
+/** Adds an interval to a list of disjoint ones, joining what it overlaps. */
 function mergeInto(merged: Interval[], next: Interval): void {
-  const last = merged[merged.length - 1];
-  if (last && next[0] < last[1] && next[1] > last[0]) {
-    merged[merged.length - 1] = [Math.min(last[0], next[0]), Math.max(last[1], next[1])];
-  } else {
-    merged.push(next);
+  let low = next[0];
+  let high = next[1];
+  for (let i = merged.length - 1; i >= 0; i--) {
+    const one = merged[i]!;
+    if (low < one[1] && high > one[0]) {
+      low = Math.min(low, one[0]);
+      high = Math.max(high, one[1]);
+      merged.splice(i, 1);
+    }
   }
+  merged.push([low, high]);
 }
 
 /** Sources at j·repeat along the slice axis, j ≠ 0, where excited tissue of this solid is bright enough; one list a j. */

@@ -1,5 +1,6 @@
 import { unfoldingRule } from '../acceleration/unfolding-rule';
 import { maxOn, minOn } from '../section/curve';
+import type { RowBand } from '../section/row-band';
 import type { FoldResult, WidthRequirement } from '../model/assessment';
 import { DomainError } from '../model/domain-error';
 import {
@@ -16,6 +17,7 @@ import type { FoldProblem } from './fold-problem';
 import { forbiddenFrom, forbiddenUntilMm } from './forbidden-widths';
 import { leftoverFold } from './leftover';
 import type { SolvedFold } from './solved-fold';
+import { NO_MARGIN } from './section-margin';
 import { overSliceMargin } from './tissue-sections';
 
 /**
@@ -165,24 +167,28 @@ function coverBody(
   let low = frame.centrePhaseMm;
   let high = frame.centrePhaseMm;
   if (rows) {
-    for (const solid of tissue) {
-      const sites = solid.varies ? windows : [windows[0]!, windows[windows.length - 1]!];
-      for (const { sMm } of sites) {
-        const extent = overSliceMargin(solid, sMm, margin.slice, (bands): Interval | undefined => {
-          let from = Infinity;
-          let to = -Infinity;
-          for (const band of bands) {
-            const r0 = Math.max(band.r0, rows.r0);
-            const r1 = Math.min(band.r1, rows.r1);
-            if (!(r1 > r0)) continue;
-            from = Math.min(from, minOn(band.lower, r0, r1));
-            to = Math.max(to, maxOn(band.upper, r0, r1));
-          }
-          return to > from ? [from, to] : undefined;
-        });
-        if (!extent) continue;
-        low = Math.min(low, extent[0] - margin.phase[0]);
-        high = Math.max(high, extent[1] + margin.phase[1]);
+    const extentOf = (bands: readonly RowBand[]): Interval | undefined => {
+      let from = Infinity;
+      let to = -Infinity;
+      for (const band of bands) {
+        const r0 = Math.max(band.r0, rows.r0);
+        const r1 = Math.min(band.r1, rows.r1);
+        if (!(r1 > r0)) continue;
+        from = Math.min(from, minOn(band.lower, r0, r1) - margin.phase[0]);
+        to = Math.max(to, maxOn(band.upper, r0, r1) + margin.phase[1]);
+      }
+      return to > from ? [from, to] : undefined;
+    };
+    // First the sections themselves, then what moving across the slice adds.
+    for (const slice of [NO_MARGIN.slice, margin.slice]) {
+      for (const solid of tissue) {
+        const sites = solid.varies ? windows : [windows[0]!, windows[windows.length - 1]!];
+        for (const { sMm } of sites) {
+          const extent = overSliceMargin(solid, sMm, slice, extentOf, [[low, high]]);
+          if (!extent) continue;
+          low = Math.min(low, extent[0]);
+          high = Math.max(high, extent[1]);
+        }
       }
     }
   }

@@ -68,7 +68,7 @@ export function sectionAt(tissue: TissueSolid, sMm: number): readonly RowBand[] 
  * - Sections that do not vary, or are nested: the widest one in range is the union. Exact.
  * - Tilted: the extent's ends are a convex and a concave function of s', so they are bracketed by five samples and then
  *   found by golden-section search to 1e-5 of the range (a third of a micrometre for 30 mm).
- * @param covered  an extent already known to belong to the same union: the search is left out where nothing beyond it
+ * @param covered  extents already known to belong to the same union: the search is left out where nothing beyond them
  *                 can be found
  */
 export function overSliceMargin(
@@ -76,7 +76,7 @@ export function overSliceMargin(
   sMm: number,
   margin: AxisMargin,
   evaluate: (bands: readonly RowBand[]) => Interval | undefined,
-  covered?: Interval,
+  covered: readonly Interval[] = [],
 ): Interval | undefined {
   if (margin[0] === 0 && margin[1] === 0) {
     const bands = sectionAt(tissue, sMm);
@@ -96,8 +96,8 @@ export function overSliceMargin(
   const highs = samples.map((sample) => sample?.[1] ?? -Infinity);
   const lows = samples.map((sample) => (sample ? -sample[0] : -Infinity));
   const coarse: Interval = [-Math.max(...lows), Math.max(...highs)];
-  const overlaps = covered !== undefined && coarse[0] < covered[1] && coarse[1] > covered[0];
-  if (overlaps && concaveBound(highs) <= covered[1] && concaveBound(lows) <= -covered[0]) return coarse;
+  const known = covered.find((one) => coarse[0] < one[1] && coarse[1] > one[0]);
+  if (known && concaveBound(highs) <= known[1] && concaveBound(lows) <= -known[0]) return coarse;
   const high = largest((s) => at(s)?.[1] ?? -Infinity, highs, from, step);
   const low = largest((s) => -(at(s)?.[0] ?? Infinity), lows, from, step);
   return high === -Infinity ? undefined : [-low, high];
@@ -106,17 +106,21 @@ export function overSliceMargin(
 const SAMPLES = 5;
 const GOLDEN = (Math.sqrt(5) - 1) / 2;
 
-/** What a concave function with these equally spaced values can reach anywhere between them: chords prolonged. */
+/**
+ * What a concave function with these equally spaced values (−∞ outside its domain) can reach between them: chords of
+ * neighbours prolonged into each gap.
+ */
 function concaveBound(values: readonly number[]): number {
+  const finite = (value: number | undefined): value is number => value !== undefined && value !== -Infinity;
   let bound = -Infinity;
   for (let i = 0; i + 1 < values.length; i++) {
-    const here = values[i]!;
-    const next = values[i + 1]!;
-    if (here === -Infinity || next === -Infinity) return Infinity;
+    const here = values[i];
+    const next = values[i + 1];
+    if (!finite(here) && !finite(next)) continue;
     const before = values[i - 1];
     const after = values[i + 2];
-    const fromLeft = before === undefined ? Infinity : here + Math.max(0, here - before);
-    const fromRight = after === undefined ? Infinity : next + Math.max(0, next - after);
+    const fromLeft = finite(here) && finite(before) ? here + Math.max(0, here - before) : Infinity;
+    const fromRight = finite(next) && finite(after) ? next + Math.max(0, next - after) : Infinity;
     bound = Math.max(bound, Math.min(fromLeft, fromRight));
   }
   return bound;

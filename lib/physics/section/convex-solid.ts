@@ -154,6 +154,19 @@ function cutQuadric(q: Quadric, s: number, limits: CutLimits): boolean {
 }
 
 /**
+ * Whether the section's ellipse lies wholly inside a half-plane, so that it cuts nothing: the ellipse's support,
+ * (nr + np·slope)·r₀ + np·offset + √(((nr + np·slope)·A)² + (np·B)²), is within the limit.
+ */
+function clearsConic({ lowers, uppers }: CutLimits, nr: number, np: number, room: number): boolean {
+  const arc = uppers[0];
+  if (!arc || lowers[0]?.bulge !== -arc.bulge || arc.bulge === 0) return false;
+  const sheared = nr + np * arc.slope;
+  return (
+    sheared * arc.arcCentre + np * arc.offset + Math.hypot(sheared * arc.arcHalf, np * arc.bulge) <= room
+  );
+}
+
+/**
  * Section of a solid (in section axes) with the plane at slice coordinate s [mm], as row bands.
  * @param closed  whether a plane that only touches a face across the slice still cuts it. Keep-clear areas are
  *                closed (a slice on their edge belongs to them), tissue is open.
@@ -167,6 +180,7 @@ export function cutSolid(solid: ConvexSolid, s: number, closed = false): RowBand
   for (const { normal, limit } of solid.halfSpaces) {
     const [nr, np, ns] = normal;
     const room = limit - ns * s;
+    if (clearsConic(limits, nr, np, room)) continue;
     if (Math.abs(np) > FLAT) {
       const level = room / np;
       if (Math.abs(nr) > FLAT) (np > 0 ? limits.uppers : limits.lowers).push(straight(level, -nr / np));

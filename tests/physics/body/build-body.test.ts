@@ -63,7 +63,7 @@ function extentOf(parts: readonly SolidPart[], pick: (part: SolidPart) => boolea
           .map((point) => point[index]),
       );
     });
-    return values.length ? [Math.min(...values), Math.max(...values)] : undefined;
+    return values.length ? ([Math.min(...values), Math.max(...values)] as const) : undefined;
   };
   const steps = Array.from({ length: 159 }, (_, i) => (i - 79) * 5 + 0.01);
   return { x: range('axial', steps, 0), y: range('axial', steps, 1), z: range('coronal', steps, 1) };

@@ -111,7 +111,7 @@ describe('tissue that may move across the slice', () => {
     const full = overSliceMargin(solid!, 0, [10, 10], evaluate)!;
     const searched = calls;
     calls = 0;
-    const inside = overSliceMargin(solid!, 0, [10, 10], evaluate, [-1000, 1000])!;
+    const inside = overSliceMargin(solid!, 0, [10, 10], evaluate, [[-1000, 1000]])!;
     expect(calls).toBeLessThan(searched);
     expect(inside[1]).toBeLessThanOrEqual(full[1]);
   });
