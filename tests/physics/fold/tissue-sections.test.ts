@@ -4,7 +4,8 @@ import { displacements, type Interval } from '@/lib/physics/fold/displacement';
 import { overSliceMargin, sectionAt, tissueSolids } from '@/lib/physics/fold/tissue-sections';
 import { sectionFrame } from '@/lib/physics/geometry/section-frame';
 import type { PartShape, SolidPart } from '@/lib/physics/model/patient';
-import { cutSolid } from '@/lib/physics/section/convex-solid';
+import { partSolids } from '@/lib/physics/body/part-solids';
+import { cutSolid, solidInSection } from '@/lib/physics/section/convex-solid';
 import { straight } from '@/lib/physics/section/curve';
 import type { RowBand } from '@/lib/physics/section/row-band';
 import { sliceRange } from '@/lib/physics/section/slice-range';
@@ -116,7 +117,7 @@ describe('tissue that may move across the slice', () => {
     expect(inside[1]).toBeLessThanOrEqual(full[1]);
   });
 
-  it('the slice range of a solid ends where its sections end', () => {
+  it('the slice range of a bounded solid ends where its sections end', () => {
     fc.assert(
       fc.property(shape, plane, (one, tilts) => {
         fc.pre(one.type !== 'elliptic-cylinder');
@@ -124,17 +125,16 @@ describe('tissue that may move across the slice', () => {
           ...tilts,
           phaseAxis: tilts.plane === 'axial' ? 'AP' : 'SI',
         });
-        for (const { solid, coupled } of tissueSolids(
-          sampleProblem([part(one)], prescription, { tissueReachMm: 900 }),
-          sectionFrame(prescription),
-        )) {
-          const [low, high] = sliceRange(solid);
-          // Ends across an untilted slice are kept apart from the solid.
-          if (!coupled || low === -Infinity) continue;
-          expect(cutSolid(solid, low + 0.01).length).toBeGreaterThan(0);
-          expect(cutSolid(solid, high - 0.01).length).toBeGreaterThan(0);
-          expect(cutSolid(solid, low - 0.01)).toEqual([]);
-          expect(cutSolid(solid, high + 0.01)).toEqual([]);
+        const frame = sectionFrame(prescription);
+        const reach = { isocentreZMm: 0, tissueReachMm: 900 };
+        for (const { solid } of partSolids([part(one)], reach, { bands: [], b1Scale: 1, t1Ms: [1] }, 0)) {
+          const turned = solidInSection(solid, frame);
+          const [low, high] = sliceRange(turned);
+          expect(high - low).toBeGreaterThan(0);
+          expect(cutSolid(turned, low + 0.01).length).toBeGreaterThan(0);
+          expect(cutSolid(turned, high - 0.01).length).toBeGreaterThan(0);
+          expect(cutSolid(turned, low - 0.01)).toEqual([]);
+          expect(cutSolid(turned, high + 0.01)).toEqual([]);
         }
       }),
       { seed: 13, numRuns: 200 },
