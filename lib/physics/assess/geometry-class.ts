@@ -126,7 +126,7 @@ function problemOf(given: FrozenCase): FoldProblem {
   });
 }
 
-const solved = new KeptAnswers<SolvedFold>(96);
+const solved = new KeptAnswers<SolvedFold>(48);
 
 /** The geometry class of a case, solved once; the key is every value the solution depends on. */
 export const solveClass = (given: FrozenCase): SolvedFold => solved.get(classKey(given), () => solveFold(problemOf(given)));

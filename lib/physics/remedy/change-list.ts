@@ -54,13 +54,31 @@ const isLargerFov = (kind: RemedyKind): boolean => kind.startsWith('larger-fov')
 const goTogether = (a: ChangeOption, b: ChangeOption): boolean =>
   a.kind !== b.kind && !(isLargerFov(a.kind) && isLargerFov(b.kind));
 
+/** Changes made together, in the order they are applied, by stage. */
+export interface ChangeSet {
+  readonly options: readonly ChangeOption[];
+  readonly settings: readonly Change[];
+  readonly sizings: readonly Change[];
+  readonly oversamplesPhase: boolean;
+}
+
+function changeSet(...options: readonly ChangeOption[]): ChangeSet {
+  const of = (stage: ChangeOption['stage']): Change[] => options.filter((one) => one.stage === stage).map((one) => one.change);
+  return {
+    options,
+    settings: of('setting'),
+    sizings: of('sizing'),
+    oversamplesPhase: options.some((one) => one.kind === 'phase-oversampling'),
+  };
+}
+
 /** No change, every single one, every pair that makes sense. */
-export const CHANGE_SETS: readonly (readonly ChangeOption[])[] = [
-  [],
-  ...CHANGE_OPTIONS.map((single) => [single]),
+export const CHANGE_SETS: readonly ChangeSet[] = [
+  changeSet(),
+  ...CHANGE_OPTIONS.map((single) => changeSet(single)),
   ...CHANGE_OPTIONS.flatMap((first, index) =>
     CHANGE_OPTIONS.slice(index + 1)
       .filter((second) => goTogether(first, second))
-      .map((second) => [first, second]),
+      .map((second) => changeSet(first, second)),
   ),
 ];

@@ -4,7 +4,7 @@ import type { PaybackKind } from '../model/remedy';
 import { carryTiming, scanTime } from '../sequence/scan-time';
 import { figure } from '../assess/words';
 import type { Change, ChangeResult, Solver, TargetedCase } from './change';
-import type { ChangeOption } from './change-list';
+import type { ChangeSet } from './change-list';
 import { fillTo, PAYBACKS, type PaybackChoice, type PaybackLevel } from './paybacks';
 
 /** A candidate worked out but not yet assessed. */
@@ -132,43 +132,38 @@ function spendOnLines(steps: TakenSteps, candidate: PlannedCandidate): PlannedCa
   return candidate;
 }
 
-interface Question {
-  readonly options: readonly ChangeOption[];
-  readonly payback?: PaybackKind;
-}
-
-const changesOf = (options: readonly ChangeOption[], stage: ChangeOption['stage']): Change[] =>
-  options.filter((option) => option.stage === stage).map((option) => option.change);
-
 /** Settings, then the payback (if any), then sizing in the geometry those two make. */
-function planAt({ options, payback }: Question, level: PaybackLevel | undefined, steps: TakenSteps): Planning {
-  const set = applyAll({ planned: steps.given, sideEffects: [] }, changesOf(options, 'setting'), steps);
-  if (set.outcome !== 'planned') return set;
+function planAt(set: ChangeSet, payback: PaybackKind | undefined, level: PaybackLevel | undefined, steps: TakenSteps): Planning {
+  const settled = applyAll({ planned: steps.given, sideEffects: [] }, set.settings, steps);
+  if (settled.outcome !== 'planned') return settled;
+  const { planned, sideEffects } = settled.candidate;
   const paid =
     level === undefined
-      ? set.candidate
-      : { planned: steps.level(level, set.candidate.planned), sideEffects: [...set.candidate.sideEffects, level.sideEffect] };
-  const sized = applyAll(paid, changesOf(options, 'sizing'), steps);
+      ? settled.candidate
+      : { planned: steps.level(level, planned), sideEffects: [...sideEffects, level.sideEffect] };
+  const sized = applyAll(paid, set.sizings, steps);
   if (sized.outcome !== 'planned') return sized;
   const fills =
     payback === 'fewer-averages' &&
+    set.oversamplesPhase &&
     steps.now.trainMs === undefined &&
-    options.some((option) => option.kind === 'phase-oversampling') &&
     isPaid(debt(steps, steps.time(sized.candidate.planned)));
-  return { outcome: 'planned', candidate: fills ? spendOnLines(steps, sized.candidate) : sized.candidate };
+  return fills ? { outcome: 'planned', candidate: spendOnLines(steps, sized.candidate) } : sized;
 }
 
+/** A set of changes without any payback. */
+export const planUnpaid = (set: ChangeSet, steps: TakenSteps): Planning =>
+  guarded(() => planAt(set, undefined, undefined, steps));
+
 /** The mildest level that pays everything back; where none does, the one that leaves least owed. */
-function planPaidBack(question: Question, payback: PaybackKind, steps: TakenSteps): Planning {
-  const unpaid = planAt(question, undefined, steps);
-  if (unpaid.outcome !== 'planned') return unpaid;
-  let owed = debt(steps, steps.time(unpaid.candidate.planned));
+function planPaidBack(set: ChangeSet, unpaid: PlannedCandidate, payback: PaybackKind, steps: TakenSteps): Planning {
+  let owed = debt(steps, steps.time(unpaid.planned));
   if (isPaid(owed)) return NOTHING;
   const choice = steps.choice(payback);
   if (choice.outcome === 'refused') return { outcome: 'refused', reason: choice, paybackAlone: true };
   let best: Planning = NOTHING;
   for (const level of choice.levels) {
-    const planning = planAt(question, level, steps);
+    const planning = planAt(set, payback, level, steps);
     if (planning.outcome !== 'planned') continue;
     const left = debt(steps, steps.time(planning.candidate.planned));
     if (isLess(left, owed)) {
@@ -180,21 +175,28 @@ function planPaidBack(question: Question, payback: PaybackKind, steps: TakenStep
   return best;
 }
 
-/**
- * Works out one candidate: which prescription and arms a set of changes and a payback lead to.
- * A combination the sequence cannot play is refused with the reason the timing gives.
- */
-export function planCandidate(question: Question, steps: TakenSteps): Planning {
-  const { options, payback } = question;
-  if (options.length === 0 && payback === undefined) return NOTHING;
+/** What the sequence cannot play is refused with the reason the timing gives. */
+function guarded(plan: () => Planning): Planning {
   try {
-    const planning = payback === undefined ? planAt(question, undefined, steps) : planPaidBack(question, payback, steps);
-    if (planning.outcome !== 'planned') return planning;
-    const candidate = settle(steps.given, planning.candidate);
-    const leaves = steps.solver.leavesPicture(candidate.planned);
-    return leaves === undefined ? { outcome: 'planned', candidate } : { outcome: 'refused', reason: leaves };
+    return plan();
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
     return { outcome: 'refused', reason: { code: error.code, text: `${error.message}.` } };
   }
+}
+
+/**
+ * Works out one candidate: which prescription and arms a set of changes, and a payback, lead to.
+ * @param unpaid what the set leads to without a payback
+ */
+export function planCandidate(set: ChangeSet, unpaid: PlannedCandidate, payback: PaybackKind | undefined, steps: TakenSteps): Planning {
+  if (set.options.length === 0 && payback === undefined) return NOTHING;
+  return guarded(() => {
+    const planning: Planning =
+      payback === undefined ? { outcome: 'planned', candidate: unpaid } : planPaidBack(set, unpaid, payback, steps);
+    if (planning.outcome !== 'planned') return planning;
+    const candidate = settle(steps.given, planning.candidate);
+    const leaves = steps.solver.leavesPicture(candidate.planned);
+    return leaves === undefined ? { outcome: 'planned', candidate } : { outcome: 'refused', reason: leaves };
+  });
 }

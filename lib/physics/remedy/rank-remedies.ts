@@ -1,18 +1,18 @@
 import { assessChecked } from '../assess/assess';
-import { freeze } from '../assess/geometry-class';
+import { freeze, type FrozenCase } from '../assess/geometry-class';
 import { validateCase } from '../assess/validate-case';
 import { windowRegion } from '../geometry/oriented-region';
 import type { Assessment, Reason } from '../model/assessment';
 import type { Case } from '../model/case';
 import type { PaybackKind, Ranking, Remedy, RemedyKind, RemedyNotPossible } from '../model/remedy';
 import type { TargetedCase } from './change';
-import { CHANGE_SETS, type ChangeOption } from './change-list';
+import { CHANGE_SETS, type ChangeOption, type ChangeSet } from './change-list';
 import { costTerms, holdExcessS, leavesFoldInKeepClear, totalTenths } from './cost';
 import { markDominated } from './dominance';
 import { geometrySolver } from './geometry-solver';
 import { outcomeKey } from './outcome-key';
 import { PAYBACK_KINDS } from './paybacks';
-import { planCandidate, TakenSteps, type PlannedCandidate } from './plan-candidate';
+import { planCandidate, planUnpaid, TakenSteps, type PlannedCandidate } from './plan-candidate';
 import { remedySentence } from './sentence';
 
 export interface RankFilters {
@@ -35,10 +35,8 @@ const needsRemedy = (given: Case, now: Assessment): boolean =>
   holdExcessS(given, now) > 0;
 
 /** Where only the rest of the picture folds, sizing keeps the whole picture free; otherwise the keep-clear area. */
-function targeted(given: Case, now: Assessment): TargetedCase {
-  const frozen = freeze(given);
-  return now.verdict === 'fold-outside-keep-clear' ? { ...frozen, target: windowRegion(given.prescription) } : frozen;
-}
+const targeted = (frozen: FrozenCase, now: Assessment): TargetedCase =>
+  now.verdict === 'fold-outside-keep-clear' ? { ...frozen, target: windowRegion(frozen.prescription) } : frozen;
 
 /** Why an assessed candidate is no remedy here; undefined: it is one. */
 function whyNot(given: Case, assessment: Assessment): Reason | undefined {
@@ -100,9 +98,10 @@ function isTold(told: readonly RemedyNotPossible[], parts: readonly string[], co
  */
 export function rankRemedies(given: Case, { filters = {} }: { readonly filters?: RankFilters } = {}): Ranking {
   validateCase(given);
-  const now = assessChecked(given, true);
+  const frozen = freeze(given);
+  const now = assessChecked(frozen, true);
   if (!needsRemedy(given, now) || now.time === undefined) return { now, remedies: [], notPossible: [], candidates: 0 };
-  const start = targeted(given, now);
+  const start = targeted(frozen, now);
   const solver = geometrySolver(start);
   const steps = new TakenSteps(start, now.time, solver);
   const remedies: Remedy[] = [];
@@ -110,7 +109,6 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
   const seen = new Set<string>([outcomeKey(start)]);
   let candidates = 0;
 
-  const allowed = CHANGE_SETS.filter((set) => set.every((option) => filters.changes?.includes(option.kind) ?? true));
   const paybacks = PAYBACK_KINDS.filter((kind) => filters.paybacks?.includes(kind) ?? true);
   const refuse = (options: readonly ChangeOption[], payback: PaybackKind | undefined, reason: Reason): void => {
     const key = keyOf(options, payback);
@@ -119,9 +117,17 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
     notPossible.push({ key, changes, ...(payback === undefined ? {} : { payback }), reason: { code: reason.code, text: reason.text } });
   };
 
+  const works: { readonly set: ChangeSet; readonly unpaid: PlannedCandidate }[] = [];
+  for (const set of CHANGE_SETS) {
+    if (filters.changes !== undefined && !set.options.every((option) => filters.changes!.includes(option.kind))) continue;
+    const planning = planUnpaid(set, steps);
+    if (planning.outcome === 'planned') works.push({ set, unpaid: planning.candidate });
+    else if (planning.outcome === 'refused') refuse(set.options, undefined, planning.reason);
+  }
   for (const payback of [undefined, ...paybacks]) {
-    for (const options of allowed) {
-      const planning = planCandidate({ options, ...(payback === undefined ? {} : { payback }) }, steps);
+    for (const { set, unpaid } of works) {
+      const { options } = set;
+      const planning = planCandidate(set, unpaid, payback, steps);
       if (planning.outcome === 'nothing-to-change') continue;
       if (planning.outcome === 'refused') {
         refuse(planning.paybackAlone ? [] : options, payback, planning.reason);
