@@ -2,7 +2,7 @@ import { type ChildProcess, spawn } from 'node:child_process';
 import { fileURLToPath } from 'node:url';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { queueMail } from '@/lib/mail';
-import { createTestSite, type TestSite } from '@/tests/support/database';
+import { createTestSite, type TestSite, useOwnDatabase } from '@/tests/support/database';
 import { type SmtpRecorder, startSmtpRecorder } from '@/tests/support/smtp-recorder';
 import { countOf, tally } from '@/tests/support/tally';
 
@@ -26,6 +26,7 @@ describe('a worker that is killed outright', () => {
   let worker: ChildProcess | undefined;
 
   beforeAll(async () => {
+    await useOwnDatabase();
     server = await startSmtpRecorder();
     site = await createTestSite();
   });
