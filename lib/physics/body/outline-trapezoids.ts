@@ -16,12 +16,27 @@ interface Edge {
   readonly slope: number;
 }
 
+type Rings = readonly (readonly OutlinePoint[])[];
+
+/** Uploaded outlines have hundreds of points and are asked about for every candidate: each is taken apart once. */
+const known = new WeakMap<Rings, readonly Trapezoid[]>();
+
+/** outlineTrapezoids, remembered for as long as the rings live. */
+export function trapezoidsOf(rings: Rings): readonly Trapezoid[] {
+  let found = known.get(rings);
+  if (!found) {
+    found = outlineTrapezoids(rings);
+    known.set(rings, found);
+  }
+  return found;
+}
+
 /**
  * Closed rings under the even-odd rule as trapezoids with parallel sides u = const (holes stay holes).
  * Self-crossing and mutually crossing rings are allowed: crossings are break points too.
  * @throws DomainError "outline-too-short", "outline-not-finite"
  */
-export function outlineTrapezoids(rings: readonly (readonly OutlinePoint[])[]): Trapezoid[] {
+export function outlineTrapezoids(rings: Rings): Trapezoid[] {
   const edges: Edge[] = [];
   const breaks: number[] = [];
   rings.forEach((ring, index) => {

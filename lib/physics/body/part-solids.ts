@@ -4,7 +4,7 @@ import type { PartShape, SolidPart } from '../model/patient';
 import type { PresaturationBand } from '../model/prescription';
 import { cosSin } from '../geometry/vector';
 import type { ConvexSolid, HalfSpace, Quadric } from '../section/convex-solid';
-import { outlineTrapezoids } from './outline-trapezoids';
+import { trapezoidsOf } from './outline-trapezoids';
 import { presaturatedWeight } from './presaturated-weight';
 
 /** A convex piece of a part, patient coordinates, with the weight its signal keeps. */
@@ -97,7 +97,7 @@ function shapeSolids(shape: PartShape, reachMm: number): ConvexSolid[] {
     case 'outline-prism': {
       const [first, second] = across(shape.along);
       const ends = axialEnds(shape, reachMm);
-      return outlineTrapezoids(shape.rings).map(({ u0, u1, lower, upper }) => {
+      return trapezoidsOf(shape.rings).map(({ u0, u1, lower, upper }) => {
         const below = [0, 0, 0] as [number, number, number];
         const above = [0, 0, 0] as [number, number, number];
         below[first] = lower[1];

@@ -194,6 +194,36 @@ describe('what decides', () => {
   });
 });
 
+describe('an uploaded outline of many points', () => {
+  const ring = Array.from({ length: 180 }, (_, i) => {
+    const t = (2 * Math.PI * i) / 180;
+    return [240 * Math.cos(t), 170 * Math.sin(t)] as const;
+  });
+  const outline = {
+    ...trunk,
+    shape: { type: 'outline-prism' as const, along: 'z' as const, rings: [ring] },
+  };
+
+  it.each(['axial', 'coronal'] as const)('gives what the ellipse it follows gives (%s)', (plane) => {
+    const prescription = samplePrescription({
+      plane,
+      phaseAxis: plane === 'axial' ? 'AP' : 'RL',
+      slices: { mode: 'stack', slices: 5, thicknessMm: 6, gapMm: 1 },
+    });
+    const marginMm: PerSide = { ...NO_MARGIN_MM, anterior: 10, posterior: 3, right: 4 };
+    const [a, b] = [outline, trunk].map((part) =>
+      solveFold(sampleProblem([part], prescription, { marginMm })),
+    );
+    // 180 chords of an ellipse 480 wide stay within 0.04 mm of it; a corner lies on each of its four ends.
+    expect(Math.abs(a!.requirement().firstCleanMm - b!.requirement().firstCleanMm)).toBeLessThan(0.05);
+    const [left, right] = [a!.leftover(256), b!.leftover(256)];
+    expect(left!.inKeepClear).toBe(right!.inKeepClear);
+    expect(Math.abs(left!.depthMm - right!.depthMm)).toBeLessThan(0.05);
+    // Chords, and even rows in place of break points.
+    expect(Math.abs(left!.displayedAreaMm2 / right!.displayedAreaMm2 - 1)).toBeLessThan(0.01);
+  });
+});
+
 describe('laws', () => {
   const size = fc.integer({ min: 60, max: 260 });
   const shift = fc.integer({ min: -60, max: 60 });

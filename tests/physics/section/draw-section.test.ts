@@ -204,6 +204,37 @@ describe('a section as outlines', () => {
     ).toEqual([]);
   });
 
+  it('draws ghosts at the product of both unfolded directions', () => {
+    const slices = {
+      mode: 'slab' as const,
+      partitions: 40,
+      partitionThicknessMm: 4,
+      acquiredPartitions: 60,
+      selective: true,
+      droppedPartitionsPerEnd: 0,
+    };
+    const acceleration = {
+      ...samplePrescription().acceleration,
+      factorPhase: 2,
+      factorSlice: 2,
+      unfolding: 'image-domain-grid-ends' as const,
+    };
+    const given = sampleCase({ prescription: { slices, acceleration } });
+    // W_z 240 covers the excited 160: tissue 120 mm away along the slab leaves ghosts too, in this partition's window.
+    const end = drawSection(given, { sliceOffsetMm: -70, acquiredLines: 280 });
+    const names = end.ghosts.map((ghost) => ghost.name).sort();
+    expect(names).toContain('ghost/trunk/high/1/0');
+    expect(names).toContain('ghost/trunk/high/1/1');
+    expect(names.some((name) => name.endsWith('/-1'))).toBe(false);
+    expect(end.ghosts.find((ghost) => ghost.name === 'ghost/trunk/high/1/1')).toMatchObject({
+      sliceMultiple: 1,
+      multiple: 1,
+    });
+    const middle = drawSection(given, { sliceOffsetMm: 0, acquiredLines: 280 });
+    expect(middle.ghosts.every((ghost) => ghost.sliceMultiple === 0)).toBe(true);
+    expect(drawSection(given, { sliceOffsetMm: -70, acquiredLines: 291 }).ghosts).toEqual([]);
+  });
+
   it('keeps an uploaded outline whole, holes included, without the seams of its pieces', () => {
     const ring = (half: number) =>
       [
