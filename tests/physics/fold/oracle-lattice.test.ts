@@ -3,9 +3,9 @@ import { solveFold } from '@/lib/physics/fold/solve-fold';
 import { latticeSample, seeded } from './lattice-case';
 import { latticeOracle } from './oracle-lattice';
 
-/** Cases in 2D; a fifth as many in 3D. test:long sets 100,000. */
+/** Cases in 2D and, unless said, a fifth as many in 3D. test:long sets 100,000 and 20,000. */
 const CASES_2D = Number(process.env.SELVEDGE_ORACLE_A ?? 5000);
-const CASES_3D = Math.round(CASES_2D / 5);
+const CASES_3D = Number(process.env.SELVEDGE_ORACLE_A_3D ?? Math.round(CASES_2D / 5));
 const MANY_MINUTES = 30 * 60_000;
 
 describe('oracle A: the engine and an independent count of lattice cells never differ', () => {
