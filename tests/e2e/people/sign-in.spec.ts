@@ -50,6 +50,8 @@ test('a forgotten password is mended by mail, in the same words for strangers', 
   for (const address of ['nobody@people.example', email]) {
     await page.goto('/sign-in');
     await page.getByRole('link', { name: 'Forgotten your password?' }).click();
+    // Both pages have a field of this name: fill the second page's.
+    await expect(page.getByRole('heading', { name: 'New password' })).toBeVisible();
     await page.getByLabel('E-mail address').fill(address);
     await page.getByRole('button', { name: 'Mail me a link' }).click();
     await expect(page.getByText(`If ${address} has an account, a link`)).toBeVisible();
