@@ -56,3 +56,28 @@ for (const [what, env, words] of [
     await removeDataFolder(dataDir);
   });
 }
+
+test('refuses to serve as a login that row-level security does not hold back', async () => {
+  const cluster = await startThrowAwayCluster();
+  const smtp = await startSmtpRecorder();
+  const dataDir = await newDataFolder();
+  const port = await freePort();
+  try {
+    const selvedge = spawnSelvedge({
+      dataDir,
+      port,
+      env: {
+        DATABASE_URL: cluster.url('owner', TEMPLATE),
+        SMTP_URL: smtp.url,
+        NEXTAUTH_URL: `http://127.0.0.1:${port}`,
+        NEXTAUTH_SECRET: 'only-for-tests-only-for-tests-only-for-tests',
+      },
+    });
+    expect(await selvedge.exited).toBe(1);
+    expect(selvedge.printed()).toContain('signs in as "selvedge_owner", which row-level security does not hold back');
+  } finally {
+    await smtp.close();
+    await cluster.stop();
+    await removeDataFolder(dataDir);
+  }
+});
