@@ -5,6 +5,7 @@ import { resolveTokenActor } from '@/lib/services/session/resolve-token-actor';
 import { currentActor } from './current-actor';
 
 const BEARER = /^Bearer ([\x21-\x7e]{1,200})$/i;
+const NEITHER = 'Sign in, or send an API token in the Authorization header.';
 const READING = new Set(['GET', 'HEAD']);
 
 /**
@@ -19,6 +20,8 @@ export async function requestActor(request: Request): Promise<Actor> {
     if (!actor) throw new ServiceError('unauthenticated', { message: 'This token is not valid.' });
     return actor;
   }
+  // A machine that forgot its token should hear that, and not about origins.
+  if (!request.headers.get('cookie')) throw new ServiceError('unauthenticated', { message: NEITHER });
   if (!READING.has(request.method)) requireSameOrigin(request.headers);
   const actor = await currentActor();
   if (!actor) throw new ServiceError('unauthenticated');

@@ -23,7 +23,8 @@ const URL_OF_ROUTE = `${OWN}/api/v1/things`;
 const segment = (params: Record<string, string> = {}) => ({ params: Promise.resolve(params) });
 
 function post(headers: Record<string, string>, body: BodyInit = '{"n":1}'): Request {
-  return new Request(URL_OF_ROUTE, { method: 'POST', headers: { 'content-type': 'application/json', ...headers }, body });
+  const basic = { 'content-type': 'application/json', cookie: 'next-auth.session-token=sealed' };
+  return new Request(URL_OF_ROUTE, { method: 'POST', headers: { ...basic, ...headers }, body });
 }
 
 const route = handleRoute({ body: z.object({ n: z.int() }) }, async ({ actor, body }) => ({ kind: actor.kind, n: body.n }));
@@ -76,7 +77,7 @@ describe('a request with a session', () => {
   it('needs no Origin for reading', async () => {
     session.actor = person;
     const read = handleRoute({}, async () => ({ fine: true }));
-    expect((await read(new Request(URL_OF_ROUTE), segment())).status).toBe(200);
+    expect((await read(new Request(URL_OF_ROUTE, { headers: { cookie: 'next-auth.session-token=sealed' } }), segment())).status).toBe(200);
   });
 
   it('must be JSON, whatever a form can send', async () => {
@@ -85,6 +86,16 @@ describe('a request with a session', () => {
       const response = await route(post({ origin: OWN, 'content-type': type }), segment());
       expect([response.status, (await problemOf(response)).code]).toEqual([415, 'not-json']);
     }
+  });
+
+  it('is 401, not a matter of origin, when there is neither cookie nor token', async () => {
+    session.actor = person;
+    session.asked = 0;
+    for (const headers of [{ cookie: '' }, { cookie: '', origin: OWN }]) {
+      const problem = await problemOf(await route(post(headers as Record<string, string>), segment()));
+      expect(problem).toMatchObject({ code: 'unauthenticated', title: expect.stringContaining('API token') });
+    }
+    expect(session.asked).toBe(0);
   });
 
   it('is 401 when the session has ended', async () => {
