@@ -2,8 +2,10 @@
 
 import { zodResolver } from '@hookform/resolvers/zod';
 import { createContext, useCallback, useContext, useEffect, useRef, type ReactNode } from 'react';
-import { FormProvider, useForm, type FieldValues } from 'react-hook-form';
+import { FormProvider, useForm, useFormContext, type FieldValues } from 'react-hook-form';
 import type * as z from 'zod';
+import { useBench, useBenchState } from './bench-context';
+import type { BenchState } from './state/bench-state';
 
 type Commit = (path: string, value: unknown, step?: string) => void;
 
@@ -38,59 +40,66 @@ export function changedLeaves(before: unknown, after: unknown): [string, unknown
   return leaves(after, '').filter(([path, value]) => !known.has(path) || !Object.is(known.get(path), value));
 }
 
+/** Writes what changed on the bench into the fields it changed; renders nothing, so a drag costs no more than that. */
+function FollowBench<T>({ select }: { select: (state: BenchState) => T }) {
+  const value = useBenchState(select);
+  const { getValues, setValue, clearErrors } = useFormContext();
+  const shown = useRef(value);
+  useEffect(() => {
+    const changed = changedLeaves(shown.current, value);
+    shown.current = value;
+    for (const [path, leaf] of changed) {
+      if (Object.is(getValues(path), leaf)) continue;
+      setValue(path, leaf);
+      clearErrors(path);
+    }
+  }, [value, getValues, setValue, clearErrors]);
+  return null;
+}
+
 /**
  * A form over part of the bench. Typing goes field → schema → bench; a drag on the canvas comes back bench → field,
  * and touches only the fields that changed: a refused value that waits elsewhere stays as it was typed.
  */
 export function BenchForm<T extends FieldValues>({
   schema,
-  value,
+  select,
   label,
   onEdit,
   children,
 }: {
-  schema: z.ZodType<T, T>;
-  value: T;
+  schema: z.ZodType;
+  /** The part of the bench this form is over; one and the same function at every render. */
+  select: (state: BenchState) => T;
   label: string;
   onEdit: (path: string, value: unknown, step?: string) => void;
   children: ReactNode;
 }) {
+  const { store } = useBench();
   const form = useForm<T>({
-    resolver: zodResolver(schema) as never,
-    values: undefined,
-    defaultValues: value as never,
+    resolver: zodResolver(schema as never) as never,
+    defaultValues: select(store.read()) as never,
     mode: 'onChange',
   });
-  const shown = useRef(value);
   const edit = useRef(onEdit);
   useEffect(() => {
     edit.current = onEdit;
   }, [onEdit]);
 
-  useEffect(() => {
-    const changed = changedLeaves(shown.current, value);
-    shown.current = value;
-    for (const [path, leaf] of changed) {
-      if (Object.is(form.getValues(path as never), leaf)) continue;
-      form.setValue(path as never, leaf as never);
-      form.clearErrors(path as never);
-    }
-  }, [value, form]);
-
   const commit = useCallback<Commit>(
     (path, leaf, step) => {
-      const wanted = withLeaf(shown.current, path.split('.'), leaf);
-      const parsed = schema.safeParse(wanted);
+      const parsed = schema.safeParse(withLeaf(select(store.read()), path.split('.'), leaf));
       if (parsed.success || !parsed.error.issues.some((issue) => issue.path.join('.').startsWith(path))) {
         edit.current(path, leaf, step);
       }
     },
-    [schema],
+    [schema, select, store],
   );
 
   return (
     <FormProvider {...form}>
       <CommitContext.Provider value={commit}>
+        <FollowBench select={select} />
         <form noValidate aria-label={label} method="post" onSubmit={(event) => event.preventDefault()}>
           {children}
         </form>

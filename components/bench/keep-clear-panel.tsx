@@ -2,12 +2,12 @@
 
 import { Segmented } from '@/components/ui/choice';
 import { Panel } from '@/components/ui/panel';
-import { screenFrame, sidesOnScreen } from '@/components/schematic/scene/section-frame';
+import { sidesOfPlane } from '@/components/schematic/scene/section-frame';
 import type { Side } from '@/lib/physics/model/axes';
 import type { KeepClear } from '@/lib/physics/model/keep-clear';
-import { useActiveSequence, useBench, useBenchState } from './bench-context';
+import { useBench, useBenchState } from './bench-context';
 import { PAIR_CLASS, PlainNumber } from './bench-number';
-import { keepClearOf } from './state/bench-document';
+import { keepClearOf, sequenceById } from './state/bench-document';
 import { edgeOf, windowBox, withEdge } from './state/window-box';
 
 const NAMES: Readonly<Record<Side, string>> = {
@@ -17,8 +17,9 @@ const NAMES: Readonly<Record<Side, string>> = {
 /** What must stay free of fold, fixed in the patient: the whole picture, or a box by its edges from the FOV origin. */
 export function KeepClearPanel({ preset }: { preset: KeepClear }) {
   const { store } = useBench();
-  const sequence = useActiveSequence();
-  const keepClear = useBenchState((state) => keepClearOf(state.document, sequence));
+  const keepClear = useBenchState((state) => keepClearOf(state.document, sequenceById(state.document, state.activeId)));
+  const frozen = useBenchState((state) => sequenceById(state.document, state.activeId).frozenKeepClear !== undefined);
+  const plane = useBenchState((state) => sequenceById(state.document, state.activeId).prescription.plane);
   const { area } = keepClear;
   const edit = (next: KeepClear['area'], step?: string) =>
     store.dispatch({ type: 'edit-keep-clear', keepClear: { ...keepClear, area: next }, ...(step === undefined ? {} : { step }) });
@@ -29,7 +30,7 @@ export function KeepClearPanel({ preset }: { preset: KeepClear }) {
     { value: 'own', label: 'Own box' },
   ];
   const chosen = isSame(area, preset.area) ? 'preset' : area.kind === 'whole-picture' ? 'whole-picture' : 'own';
-  const inPlane = sidesOnScreen(screenFrame(sequence.prescription));
+  const inPlane = sidesOfPlane(plane);
   const sides = [...inPlane, ...(Object.keys(NAMES) as Side[]).filter((side) => !inPlane.includes(side))];
   return (
     <Panel tone="bench" collapsible title="Keep-clear area" summary={area.kind === 'box' ? (area.label ?? 'own box') : 'whole picture'}>
@@ -42,7 +43,7 @@ export function KeepClearPanel({ preset }: { preset: KeepClear }) {
         onChange={(value) => {
           if (value === 'preset') edit(preset.area);
           else if (value === 'whole-picture') edit({ kind: 'whole-picture' });
-          else edit({ kind: 'box', box: area.kind === 'box' ? area.box : windowBox(sequence.prescription), label: 'own box' });
+          else edit({ kind: 'box', box: area.kind === 'box' ? area.box : windowBox(sequenceById(store.read().document, store.read().activeId).prescription), label: 'own box' });
         }}
       />
       {area.kind === 'box' ? (
@@ -66,7 +67,7 @@ export function KeepClearPanel({ preset }: { preset: KeepClear }) {
       ) : (
         <p className="mt-2 text-sm text-ink-soft">All that is displayed must stay free of fold.</p>
       )}
-      {sequence.frozenKeepClear && (
+      {frozen && (
         <p className="mt-1 text-sm text-ink-soft">
           Stays what the picture was before its window changed, for this sequence alone.
         </p>

@@ -1,5 +1,6 @@
 'use client';
 
+import { useDeferredValue } from 'react';
 import { Button } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
 import { Popover } from '@/components/ui/popover';
@@ -12,6 +13,7 @@ import { useBench, useBenchState } from './bench-context';
 import { BenchChoice, optionsOf } from './bench-choice';
 import { BenchForm, withLeaf } from './bench-form';
 import { BenchNumber, PAIR_CLASS } from './bench-number';
+import type { BenchState } from './state/bench-state';
 import { withSource, withValue } from './state/reading-edit';
 
 const PAIRS: readonly (readonly [Side, Side])[] = [
@@ -23,10 +25,12 @@ const SIDE_NAMES: Readonly<Record<Side, string>> = {
   right: 'Right', left: 'Left', anterior: 'Anterior', posterior: 'Posterior', superior: 'Superior', inferior: 'Inferior',
 };
 
+const selectPatient = (state: BenchState): Patient => state.document.patient;
+
 /** Sizes as each side of the FOV centre: shoulders, hips and one-sided parts fit the same form. */
 export function PatientPanel() {
   const { store, setting } = useBench();
-  const patient = useBenchState((state) => state.document.patient);
+  const patient = useDeferredValue(useBenchState(selectPatient));
 
   const onEdit = (path: string, value: unknown, step?: string) => {
     const now = store.read().document.patient;
@@ -53,7 +57,7 @@ export function PatientPanel() {
       summary={summaryOf(patient)}
       aside={<HowGot patient={patient} />}
     >
-      <BenchForm schema={patientSchema as never} value={patient} label="Patient" onEdit={onEdit}>
+      <BenchForm schema={patientSchema} select={selectPatient} label="Patient" onEdit={onEdit}>
         <div className={PAIR_CLASS}>
           {PAIRS.flat().map((side) => (
             <BenchNumber

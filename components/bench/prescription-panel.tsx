@@ -1,12 +1,13 @@
 'use client';
 
-import { useState } from 'react';
+import { useCallback, useDeferredValue, useState } from 'react';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import type { Prescription } from '@/lib/physics/model/prescription';
-import { useActiveSequence, useBench, useBenchState } from './bench-context';
+import { useBench, useBenchState } from './bench-context';
 import { BenchForm, withLeaf } from './bench-form';
 import { AccelerationGroup, OversamplingGroup, SlicesGroup, TimingGroup, WindowGroup } from './prescription-groups';
 import { sequenceById } from './state/bench-document';
+import type { BenchState } from './state/bench-state';
 import { FAMILIES_3D } from './state/prescription-edit';
 
 export type GroupKey = 'window' | 'oversampling' | 'slices' | 'timing' | 'acceleration';
@@ -20,14 +21,16 @@ function firstGroup({ family, breathing }: Prescription): GroupKey {
 
 /** Every field of the active sequence; groups roll up to one line, and the open one follows the sequence. */
 export function PrescriptionPanel({ source }: { source: string }) {
-  const sequence = useActiveSequence();
+  const id = useBenchState((state) => state.activeId);
   // A form of its own for each sequence: a refused value waits where it was typed.
-  return <SequenceForm key={sequence.id} id={sequence.id} source={source} />;
+  return <SequenceForm key={id} id={id} source={source} />;
 }
 
 function SequenceForm({ id, source }: { id: string; source: string }) {
   const { store } = useBench();
-  const prescription = useBenchState((state) => sequenceById(state.document, id).prescription);
+  const select = useCallback((state: BenchState) => sequenceById(state.document, id).prescription, [id]);
+  // Summaries and derived figures follow a drag when there is time for it; the picture comes first.
+  const prescription = useDeferredValue(useBenchState(select));
   const [open, setOpen] = useState<GroupKey | null>(firstGroup(prescription));
   const onEdit = (path: string, value: unknown, step?: string) => {
     const now = sequenceById(store.read().document, id).prescription;
@@ -41,7 +44,7 @@ function SequenceForm({ id, source }: { id: string; source: string }) {
     onOpenChange: (next: boolean) => setOpen(next ? key : null),
   });
   return (
-    <BenchForm schema={prescriptionSchema as never} value={prescription} label={`Prescription, ${prescription.name}`} onEdit={onEdit}>
+    <BenchForm schema={prescriptionSchema} select={select} label={`Prescription, ${prescription.name}`} onEdit={onEdit}>
       <div className="flex items-baseline justify-between gap-4 px-4 pt-3 pb-1">
         <h2 className="text-sm font-semibold tracking-wider text-ink-soft uppercase">Prescription</h2>
         <p className="min-w-0 truncate text-sm text-ink-soft">{source}</p>

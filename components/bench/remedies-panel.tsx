@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { memo, useDeferredValue, useState } from 'react';
 import { Checkbox } from '@/components/ui/choice';
 import { Popover } from '@/components/ui/popover';
 import { Button } from '@/components/ui/button';
@@ -15,7 +15,8 @@ export function RemediesPanel() {
   const result = useActiveResult();
   const { id } = useActiveSequence();
   const present = presentRanking(result);
-  const ranking = present ?? result.ranked?.ranking;
+  // While a handle is dragged rankings follow one another: the list waits for the picture, never the other way round.
+  const ranking = useDeferredValue(present ?? result.ranked?.ranking);
   return (
     <section aria-labelledby="remedies-title" className="flex min-h-0 flex-1 flex-col">
       <div className="flex items-baseline justify-between gap-4 border-b border-line px-4 py-2.5">
@@ -39,7 +40,7 @@ export function RemediesPanel() {
   );
 }
 
-function RankedList({ ranking }: { ranking: Ranking }) {
+const RankedList = memo(function RankedList({ ranking }: { ranking: Ranking }) {
   const [showAll, setShowAll] = useState(false);
   const [keepHold, setKeepHold] = useState(false);
   const [keepVoxel, setKeepVoxel] = useState(false);
@@ -73,7 +74,7 @@ function RankedList({ ranking }: { ranking: Ranking }) {
       {notPossible.length > 0 && <NotPossible items={notPossible} />}
     </>
   );
-}
+});
 
 function EmptyRanking({ ranking, filtered }: { ranking: Ranking; filtered: boolean }) {
   const words = filtered

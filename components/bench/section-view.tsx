@@ -24,7 +24,7 @@ export function SectionView() {
   const sequence = useActiveSequence();
   const trial = useBenchState((state) => state.trial);
   const chosen = useBenchState((state) => state.sliceIndex[state.activeId]);
-  const handles = useHandles();
+  const handles = useMemo(() => benchHandles(question), [question]);
   const box = useRef<HTMLDivElement>(null);
   const place = useRef<HTMLParagraphElement>(null);
   const size = useBoxSize(box);
@@ -100,12 +100,6 @@ function drawn(question: Case, sliceOffsetMm: number): DrawnSection | undefined 
     if (error instanceof Error && error.name === 'DomainError') return undefined;
     throw error;
   }
-}
-
-function useHandles() {
-  const document = useBenchState((state) => state.document);
-  const activeId = useBenchState((state) => state.activeId);
-  return useMemo(() => benchHandles({ document, activeId }), [document, activeId]);
 }
 
 /** The whole canvas in mm: letters and scale bar sit in its corners, whatever its shape. */

@@ -1,6 +1,6 @@
 'use client';
 
-import type { ReactNode } from 'react';
+import { memo, type ReactNode } from 'react';
 import { cx } from '@/components/ui/class-names';
 import { formatClock, formatHold } from '@/lib/presentation/duration';
 import { PLANE_WORDS } from '@/lib/presentation/anatomy-words';
@@ -12,7 +12,8 @@ import { VerdictWords } from './verdict-words';
 
 /** The whole protocol at a glance: mark, verdict and time of each sequence; choosing one puts it on the bench. */
 export function SequenceStrip({ children }: { children: ReactNode }) {
-  const ids = useBenchState((state) => state.document.sequences);
+  // One string: the strip itself changes only when sequences come or go.
+  const ids = useBenchState((state) => state.document.sequences.map(({ id }) => id).join('\n')).split('\n');
   return (
     <div className="border-b border-line bg-paper lg:grid lg:grid-cols-[12.5rem_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,1fr)]">
       <div className="border-line px-4 py-3 max-lg:border-b lg:border-r">{children}</div>
@@ -20,7 +21,7 @@ export function SequenceStrip({ children }: { children: ReactNode }) {
         aria-label="Sequences"
         className="flex overflow-x-auto overscroll-x-contain max-sm:flex-col max-sm:overflow-visible"
       >
-        {ids.map(({ id }) => (
+        {ids.map((id) => (
           <SequenceTab key={id} id={id} />
         ))}
       </ul>
@@ -38,7 +39,7 @@ export function timeWords(prescription: Prescription, time: TimeResult | undefin
   return `${plane} · ${formatClock(time.scanS)}${prescription.breathing === 'triggered' ? ' triggered' : ''}`;
 }
 
-function SequenceTab({ id }: { id: string }) {
+const SequenceTab = memo(function SequenceTab({ id }: { id: string }) {
   const { store } = useBench();
   const prescription = useBenchState((state) => sequenceById(state.document, id).prescription);
   const active = useBenchState((state) => state.activeId === id);
@@ -69,4 +70,4 @@ function SequenceTab({ id }: { id: string }) {
       </button>
     </li>
   );
-}
+});

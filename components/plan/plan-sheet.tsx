@@ -73,12 +73,12 @@ function SequenceTable({ sequences }: { sequences: readonly SheetSequence[] }) {
         <caption className="sr-only">Sequences, as they are set at the scanner</caption>
         <thead className="sheet-small text-sm">
           <tr className="border-b border-ink align-bottom">
-            <th className="w-[46%] py-1 pr-3 font-semibold">Sequence</th>
+            <th className="w-[34%] py-1 pr-3 font-semibold">Sequence</th>
             <th className="py-1 pr-3 font-semibold">Phase oversampling</th>
             <th className="py-1 pr-3 font-semibold">Slice oversampling</th>
             <th className="py-1 pr-3 font-semibold">Av.</th>
             <th className="py-1 pr-3 font-semibold">Time</th>
-            <th className="py-1 font-semibold">Verdict</th>
+            <th className="w-[21%] py-1 font-semibold">Verdict</th>
           </tr>
         </thead>
         <tbody>

@@ -1,11 +1,13 @@
-import { screenFrame, sidesOnScreen, sideVector, toPatient, toScreen, type ScreenPoint } from '@/components/schematic/scene/section-frame';
+import { screenFrame, sidesOfPlane, sideVector, toPatient, toScreen, type ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { fromWindow, inWindow, windowFrame } from '@/components/schematic/scene/window-frame';
 import { sectionFrame } from '@/lib/physics/geometry/section-frame';
 import { AXIS_SIDES, dot } from '@/lib/physics/geometry/vector';
 import type { Side } from '@/lib/physics/model/axes';
+import type { Case } from '@/lib/physics/model/case';
 import { AXIS_WORDS } from '@/lib/presentation/anatomy-words';
 import { keepClearOf, sequenceById, type BenchSetting } from './bench-document';
 import type { BenchAction, BenchState } from './bench-state';
+import { caseOf } from './case-of';
 import { withValue } from './reading-edit';
 import { edgeOf, withEdge } from './window-box';
 
@@ -27,20 +29,17 @@ export interface BenchHandle {
   readonly value?: { readonly now: number; readonly min: number; readonly max: number };
 }
 
-/** All that a handle depends on. */
-export type HandleState = Pick<BenchState, 'document' | 'activeId'>;
 
 /** Beside the furthest point of the body: there the edge of the window often lies. */
 const ASIDE_MM = 34;
 
 const MM = (value: number): string => `${Math.round(value)} mm`;
 
-export function benchHandles(state: HandleState): readonly BenchHandle[] {
-  const sequence = sequenceById(state.document, state.activeId);
-  const { prescription } = sequence;
+export function benchHandles(question: Case): readonly BenchHandle[] {
+  const { prescription } = question;
   const window = windowFrame(prescription);
   const { phaseAxis, readoutAxis } = sectionFrame(prescription);
-  const { limits } = state.document.scanner;
+  const { limits } = question.scanner;
   const [low, high] = [-1, 1] as const;
   const fovEdges = ([['phase', low], ['phase', high], ['readout', low], ['readout', high]] as const).map(
     ([direction, sign]): BenchHandle => {
@@ -66,17 +65,15 @@ export function benchHandles(state: HandleState): readonly BenchHandle[] {
     figure: `centre ${prescription.centreMm.map((c) => Math.round(c)).join(', ')} mm`,
   };
   // The last lies on top where handles meet: the window is what is moved most.
-  return [...extentHandles(state), ...keepClearHandles(state), centre, ...fovEdges];
+  return [...extentHandles(question), ...keepClearHandles(question), centre, ...fovEdges];
 }
 
-function keepClearHandles(state: HandleState): BenchHandle[] {
-  const sequence = sequenceById(state.document, state.activeId);
-  const keepClear = keepClearOf(state.document, sequence);
+function keepClearHandles({ keepClear, prescription }: Case): BenchHandle[] {
   if (keepClear.area.kind !== 'box') return [];
-  const frame = screenFrame(sequence.prescription);
+  const frame = screenFrame(prescription);
   const { box } = keepClear.area;
   const middle = toScreen(frame, [mean(box.xMm), mean(box.yMm), mean(box.zMm)]);
-  return sidesOnScreen(frame).map((side): BenchHandle => {
+  return sidesOfPlane(prescription.plane).map((side): BenchHandle => {
     const direction = toScreen(frame, sideVector(side));
     const reach = edgeOf(box, side);
     const along = middle[0] * direction[0] + middle[1] * direction[1];
@@ -92,17 +89,16 @@ function keepClearHandles(state: HandleState): BenchHandle[] {
   });
 }
 
-function extentHandles(state: HandleState): BenchHandle[] {
-  const { patient } = state.document;
+function extentHandles({ patient, prescription }: Case): BenchHandle[] {
   if (patient.parts) return []; // Outlines replace the body that the extents would build.
-  const frame = screenFrame(sequenceById(state.document, state.activeId).prescription);
+  const frame = screenFrame(prescription);
   const value = (side: Side): number => patient.extents[side].value;
   const middle = toScreen(frame, [
     (value('left') - value('right')) / 2,
     (value('posterior') - value('anterior')) / 2,
     (value('superior') - value('inferior')) / 2,
   ]);
-  return sidesOnScreen(frame)
+  return sidesOfPlane(prescription.plane)
     .filter((side) => side !== 'superior' && side !== 'inferior')
     .map((side): BenchHandle => {
       const direction = toScreen(frame, sideVector(side));
@@ -125,7 +121,7 @@ function extentHandles(state: HandleState): BenchHandle[] {
 
 /** The edit that putting a handle at a point of the picture means; whole millimetres. */
 export function moveHandle(
-  state: HandleState,
+  state: BenchState,
   setting: BenchSetting,
   id: string,
   to: ScreenPoint,
@@ -163,13 +159,14 @@ export function moveHandle(
 
 /** One arrow key: `byMm` along the key's direction on the screen; null when this handle does not move that way. */
 export function nudgeHandle(
-  state: HandleState,
+  state: BenchState,
   setting: BenchSetting,
   id: string,
   by: ScreenPoint,
   step?: string,
 ): BenchAction | null {
-  const handle = benchHandles(state).find((each) => each.id === id);
+  const question = caseOf(state.document, setting, sequenceById(state.document, state.activeId));
+  const handle = benchHandles(question).find((each) => each.id === id);
   if (!handle) return null;
   if (handle.along) {
     const share = by[0] * handle.along[0] + by[1] * handle.along[1];

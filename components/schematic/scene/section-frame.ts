@@ -55,8 +55,9 @@ export function screenFrame(prescription: Prescription): ScreenFrame {
 }
 
 /** Left, right, top, bottom. */
-export function sidesOnScreen({ sides }: ScreenFrame): readonly Side[] {
-  return [sides.left, sides.right, sides.top, sides.bottom];
+export function sidesOfPlane(plane: Plane): readonly Side[] {
+  const { left, right, top, bottom } = SIDES_OF_PLANE[plane];
+  return [left, right, top, bottom];
 }
 
 export function toScreen(frame: ScreenFrame, point: Vec3): ScreenPoint {

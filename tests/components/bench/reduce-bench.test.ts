@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { benchHandles, moveHandle, nudgeHandle } from '@/components/bench/state/handles';
+import { caseOf } from '@/components/bench/state/case-of';
 import { isUnsaved, startBench, UNDO_STEPS, type BenchState } from '@/components/bench/state/bench-state';
 import { sequenceById } from '@/components/bench/state/bench-document';
 import {
@@ -168,10 +169,11 @@ describe('trying and adopting', () => {
 });
 
 describe('handles', () => {
-  const at = (state: BenchState, id: string) => benchHandles(state).find((handle) => handle.id === id);
+  const handlesOf = (state: BenchState) => benchHandles(caseOf(state.document, setting, sequenceById(state.document, state.activeId)));
+  const at = (state: BenchState, id: string) => handlesOf(state).find((handle) => handle.id === id);
 
   it('have one for every edge of FOV, keep-clear area and body, and the centre', () => {
-    expect(benchHandles(start()).map(({ id }) => id)).toEqual([
+    expect(handlesOf(start()).map(({ id }) => id)).toEqual([
       'extent-right', 'extent-left', 'extent-anterior', 'extent-posterior',
       'keep-clear-right', 'keep-clear-left', 'keep-clear-anterior', 'keep-clear-posterior',
       'fov-centre', 'fov-phase-low', 'fov-phase-high', 'fov-readout-low', 'fov-readout-high',
