@@ -4,7 +4,7 @@ import { changePassword } from '@/lib/services/session/change-password';
 import { loadUserActor } from '@/lib/services/session/load-user-actor';
 import { verifySignIn } from '@/lib/services/session/verify-sign-in';
 import { createTestSite } from '@/tests/support/database';
-import { activePerson, auditActions, countingHasher, outcomeOf, PASSWORD, readAccount } from '@/tests/support/database/accounts';
+import { activePerson, auditActions, outcomeOf, PASSWORD, readAccount, refusingHasher } from '@/tests/support/database/accounts';
 
 const NEW = 'shuttle over the reed';
 const input = (currentPassword: string, newPassword = NEW) => ({ currentPassword, newPassword, repeatPassword: newPassword });
@@ -24,12 +24,12 @@ describe('changePassword', () => {
     const site = await createTestSite();
     const person = await activePerson(site, 'radiologist');
     const before = await readAccount(site, person.userId);
-    const passwords = countingHasher();
+    const passwords = refusingHasher();
     for (let n = 1; n <= 5; n++) {
       expect(await outcomeOf(changePassword({ actor: person }, input('a wrong guess'), passwords))).toMatch(/^invalid \|.*currentPassword/);
     }
     expect(await outcomeOf(changePassword({ actor: person }, input(PASSWORD), passwords))).toMatch(/^too-many/);
-    expect(passwords).toMatchObject({ verifications: 5, hashes: 0 });
+    expect(passwords.verifications).toBe(5);
     expect(await readAccount(site, person.userId)).toEqual(before);
   });
 

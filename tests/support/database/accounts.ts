@@ -71,6 +71,21 @@ export function countingHasher(): PasswordHasher & { verifications: number; hash
   };
 }
 
+/**
+ * Refuses every password at once. The first block after five failures lasts a second: on a busy machine five real
+ * hashes may take longer than that, and the sixth try would be let through rightly.
+ */
+export function refusingHasher(): PasswordHasher & { verifications: number } {
+  return {
+    verifications: 0,
+    hash: argon2Hasher.hash,
+    async verify() {
+      this.verifications += 1;
+      return false;
+    },
+  };
+}
+
 /** What a promise ends in, as one comparable text. */
 export async function outcomeOf(promise: Promise<unknown>): Promise<string> {
   try {
