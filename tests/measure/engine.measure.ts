@@ -1,0 +1,90 @@
+import path from 'node:path';
+import { solveFold } from '@/lib/physics/fold/solve-fold';
+import { foldProblem } from '@/lib/physics/fold/fold-problem';
+import { latticeSample } from '@/tests/physics/fold/lattice-case';
+import { latticeOracle } from '@/tests/physics/fold/oracle-lattice';
+import { fromKSpace, SIZE } from '@/tests/support/ellipse-k-space';
+import { inChromium } from '@/tests/support/engine-in-browser';
+import { engineTimings, type EngineTimings } from '@/tests/support/engine-timings';
+import { workedCase } from '@/tests/support/physics-cases';
+import { quantile, time, type Measure, type MeasureRow } from './row';
+
+const RUNS = 200;
+const AIM_RANK = 'p95 below 8 ms in Node';
+
+function timingRows({ assessMs, rankFiveMs, imageMs, candidates }: EngineTimings, where: string): MeasureRow[] {
+  const both = (what: string, sample: readonly number[], aim?: string): MeasureRow[] => [
+    { what: `${what}, p50, ${where}`, value: quantile(sample, 0.5), unit: 'ms' },
+    { what: `${what}, p95, ${where}`, value: quantile(sample, 0.95), unit: 'ms', ...(aim === undefined ? {} : { aim }) },
+  ];
+  return [
+    ...both('one assessment', assessMs),
+    ...both('full ranking of five abdomen sequences', rankFiveMs, where === 'Node' ? AIM_RANK : undefined),
+    { what: `candidates worked out in it, ${where}`, value: candidates, unit: 'candidates' },
+    ...both('simulated picture, 256 pixels', imageMs, 'within a frame, 16 ms'),
+  ];
+}
+
+/** Smallest number of lines by counting lattice cells, width by width, against the closed form, on the same cases. */
+function againstLattice(): MeasureRow {
+  const samples = Array.from({ length: 60 }, (_, i) => latticeSample(i + 1, false));
+  let agreed = 0;
+  const counting = time(() => {
+    for (const { lattice, lines, lineUnits } of samples) {
+      const isClean = latticeOracle(lattice);
+      let l = lines;
+      while (l < 4 * lines && !isClean(l * lineUnits)) l++;
+    }
+  }, 3, 1);
+  const solving = time(() => {
+    for (const { problem } of samples) solveFold(problem).requirement();
+  }, 20, 5);
+  for (const { lattice, problem, lines, lineUnits } of samples) {
+    const first = solveFold(problem).requirement().firstCleanLines;
+    const isClean = latticeOracle(lattice);
+    if (first === undefined || (isClean(first * lineUnits) && (first === lines || !isClean((first - 1) * lineUnits)))) agreed++;
+  }
+  return {
+    what: 'smallest width: cell count over closed form',
+    value: quantile(counting, 0.5) / quantile(solving, 0.5),
+    unit: 'times',
+    against: `oracle A, ${agreed} of ${samples.length} answers equal`,
+  };
+}
+
+/** The worked case by brute force: a picture by k-space and FFT for every number of lines until nothing folds. */
+function againstFft(): MeasureRow {
+  const given = workedCase();
+  const { fovPhaseMm, linesAcrossFov } = given.prescription;
+  const trunk = [{ r: 0, p: 0, a: 240, b: 170, turn: 0 }];
+  const fovReadoutMm = 520;
+  const foldsAt = (lines: number): boolean => {
+    const widthMm = (lines * fovPhaseMm) / linesAcrossFov;
+    const rows = fromKSpace(trunk, fovReadoutMm, widthMm);
+    // Twice as bright as tissue somewhere inside the FOV: something lies on top of it.
+    return rows.some((row) => row.some((value, v) => Math.abs(((v + 0.5) / SIZE - 0.5) * widthMm) < fovPhaseMm / 2 && value > 1.3));
+  };
+  let swept = linesAcrossFov;
+  const [sweepMs] = time(() => {
+    swept = linesAcrossFov;
+    while (foldsAt(swept)) swept++;
+  }, 1, 0);
+  const problem = foldProblem(given);
+  const solved = solveFold(problem).requirement().firstCleanLines!;
+  const solvingMs = quantile(time(() => solveFold(problem).requirement(), 200, 50), 0.5);
+  return {
+    what: 'smallest width: FFT sweep over closed form',
+    value: sweepMs! / solvingMs,
+    unit: 'times',
+    against: `${SIZE} × ${SIZE} pictures, swept to ${swept} lines, solved ${solved}`,
+    aim: 'at least 1,000',
+  };
+}
+
+export const measure: Measure = async () => {
+  const here = timingRows(engineTimings(RUNS), 'Node');
+  const there = await inChromium(path.join(import.meta.dirname, '../support/engine-timings.ts'), 'engine', (page) =>
+    page.evaluate((runs) => (globalThis as unknown as { engine: { engineTimings(runs: number): EngineTimings } }).engine.engineTimings(runs), RUNS),
+  );
+  return [...here, ...timingRows(there, 'Chromium'), againstLattice(), againstFft()];
+};
