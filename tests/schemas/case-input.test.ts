@@ -141,6 +141,17 @@ describe('a case that cannot be taken', () => {
     expect(Object.keys(refusals({ ...LEAST, ...change }))).toContain(field);
   });
 
+  it('refuses outlines with more points than can be answered while someone waits', () => {
+    const ring = (points: number) =>
+      Array.from({ length: points }, (_, i): [number, number] => [200 * Math.cos((2 * Math.PI * i) / points), 150 * Math.sin((2 * Math.PI * i) / points)]);
+    const outlined = (points: number) => ({
+      patient: { parts: [{ name: 'a', shape: { type: 'outline-prism', along: 'z', rings: [ring(points)] } }] },
+      prescription: LEAST.prescription,
+    });
+    expect(refusals(outlined(240))).toEqual({});
+    expect(refusals(outlined(241))).toEqual({ 'patient.parts': expect.stringContaining('allowed: 240 in all parts together') });
+  });
+
   it.each([[null], [[]], ['text'], [7], [{}]])('refuses %j as a whole without failing', (json) => {
     expect(Object.keys(refusals(json)).length).toBeGreaterThan(0);
   });

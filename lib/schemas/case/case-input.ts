@@ -1,8 +1,9 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
 import { keepClearShape, patientBoxSchema } from '@/lib/schemas/case/keep-clear';
+import type { SolidPart } from '@/lib/domain/case/model';
 import {
-  ARM_POSITIONS, boxRange, partShape, patientShape, READING_SOURCES,
+  ARM_POSITIONS, boxRange, partShape, patientShape, READING_SOURCES, TOO_MANY_POINTS, withinOutlinePoints,
 } from '@/lib/schemas/case/patient';
 import { geometryShape, marginShape, policyShape, swapShape, tissueT1Shape, weightsShape } from '@/lib/schemas/case/policy';
 import {
@@ -109,7 +110,8 @@ export const patientInput = strict(
       }))
       .min(1)
       .max(40)
-      .describe('The body as ellipses (elliptic cylinders), ellipsoids or outlines; replaces the one built from extents and arms, whole.')
+      .refine((parts) => withinOutlinePoints(parts as readonly SolidPart[]), { error: TOO_MANY_POINTS })
+      .describe('The body as ellipses (elliptic cylinders), ellipsoids or outlines (240 points in all); replaces the one built from extents and arms, whole.')
       .optional(),
   },
   'The patient.',

@@ -119,6 +119,16 @@ export const partShape = {
   estimated: flag('True when the part was not measured.'),
 } satisfies ShapeOf<SolidPart>;
 
+/** The engine compares every edge with every other; an outline of 240 points keeps a body of 500 mm within 1 mm. */
+export const OUTLINE_POINTS_MAX = 240;
+
+/** Refuses a body whose outlines hold more points than can be answered while someone waits. */
+export function withinOutlinePoints(parts: readonly { readonly shape: PartShape }[]): boolean {
+  const points = parts.map(({ shape }) => (shape.type === 'outline-prism' ? shape.rings.flat().length : 0));
+  return points.reduce((sum, each) => sum + each, 0) <= OUTLINE_POINTS_MAX;
+}
+export const TOO_MANY_POINTS = `more outline points than fit; allowed: ${OUTLINE_POINTS_MAX} in all parts together, thin the outlines`;
+
 export const patientShape = {
   region: choice(REGIONS, 'Body part under question.'),
   extents: strict(extentsShape, 'Extent of the body part each side of the origin [mm].'),
@@ -155,6 +165,7 @@ export const patientShape = {
     .refine((parts) => new Set(parts.map((part) => part.name)).size === parts.length, {
       error: 'every part needs a name of its own',
     })
+    .refine(withinOutlinePoints, { error: TOO_MANY_POINTS })
     .describe('Replaces the body built from the extents, whole.')
     .optional(),
 } satisfies ShapeOf<Patient>;

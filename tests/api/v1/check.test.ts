@@ -65,9 +65,8 @@ describe('POST /api/v1/check', () => {
   });
 
   it.each([
-    // Without a token it is a browser's request, and that must name our origin before any session is looked at.
-    ['no token', { authorization: '' }, '{}', 401],
-    ['neither token nor origin', {}, '{}', 403],
+    ['an empty token', { authorization: '' }, '{}', 401],
+    ['neither token nor session', {}, '{}', 401],
     ['a wrong token', { authorization: 'Bearer selvedge_wrong' }, '{}', 401],
   ])('%s is turned away', async (_name, headers: Record<string, string>, body, status) => {
     expect((await send(body, headers)).status).toBe(status);
