@@ -207,6 +207,17 @@ export function SlicesGroup({ at, refused }: GroupProps) {
               hint="0.05 to 30; empty: fat’s slab shift is not worked out"
               step={0.1}
             />
+            <FormSelect
+              name={`${at}.slices.fatShiftTowards`}
+              label="Fat’s slab is shifted towards"
+              hint="Not known: both ends are taken"
+              placeholder="not known"
+              optional
+              options={[
+                { value: 'low-end', label: 'the right, front or foot end' },
+                { value: 'high-end', label: 'the left, back or head end' },
+              ]}
+            />
           </div>
           <FormCheckbox
             className="mt-4"

@@ -178,6 +178,8 @@ export interface FormSelectProps extends Bound {
   placeholder?: string;
   labelHidden?: boolean;
   disabled?: boolean;
+  /** Choosing the placeholder leaves the value out. */
+  optional?: boolean;
   /** After the value is in the form: other fields that must follow. */
   onChosen?: (value: string) => void;
 }
@@ -198,7 +200,7 @@ export function FormSelect({ name, onChosen, ...rest }: FormSelectProps) {
           value={(field.value as string | undefined) ?? ''}
           onBlur={field.onBlur}
           onChange={(event) => {
-            field.onChange(event.target.value);
+            field.onChange(event.target.value === '' && rest.optional ? undefined : event.target.value);
             onChosen?.(event.target.value);
           }}
           error={fieldState.error?.message}
