@@ -42,6 +42,8 @@ async function run(mode: Mode): Promise<void> {
     // A start that was interrupted half-way must have ended before we undo it.
     await serving.catch(() => {});
   } finally {
+    // Whatever still waits for a part that will not come must not hold the process.
+    abort.abort();
     for (const step of undo.reverse()) await step().catch((error: Error) => console.error(error.message));
   }
   process.exit(process.exitCode ?? 0);
