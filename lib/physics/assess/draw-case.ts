@@ -1,3 +1,4 @@
+import { reachAlongZ } from '../body/coil-reach';
 import type { Case } from '../model/case';
 import { drawSection as drawOutlines, type DrawSectionOptions } from '../section/draw-section';
 import type { SectionDrawing } from '../section/section-drawing';
@@ -11,5 +12,12 @@ import { unfoldingOf, withUnfolding } from './resolve-unfolding';
 export function drawSection(given: Case, options: DrawSectionOptions = {}): SectionDrawing {
   const prescription = withUnfolding(given, unfoldingOf(given));
   const slabWeight = options.slabWeight ?? slabWeightFor(given);
-  return drawOutlines({ ...given, prescription }, { ...options, ...(slabWeight === undefined ? {} : { slabWeight }) });
+  const { isocentreZMm, tissueReachMm } = reachAlongZ(given);
+  const seen = {
+    ...given,
+    prescription,
+    patient: { ...given.patient, isocentreZMm },
+    scanner: { ...given.scanner, tissueReachMm },
+  };
+  return drawOutlines(seen, { ...options, ...(slabWeight === undefined ? {} : { slabWeight }) });
 }

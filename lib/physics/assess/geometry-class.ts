@@ -1,3 +1,4 @@
+import { reachAlongZ } from '../body/coil-reach';
 import { foldProblem, type FoldProblem } from '../fold/fold-problem';
 import { solveFold } from '../fold/solve-fold';
 import type { SolvedFold } from '../fold/solved-fold';
@@ -81,6 +82,7 @@ function prescriptionKey(p: Prescription): string {
     a.factorPhase * a.factorSlice > 1 && a.unfolding === 'image-domain-grid-ends' ? `${a.factorPhase}/${a.factorSlice}` : '',
     bands,
     p.coil,
+    p.coilElements?.join('/'),
     p.family === 'echo-planar' ? `${p.echoSpacingMs}/${p.shots}/${p.fatSuppressed}` : '',
   ].join('|');
 }
@@ -121,6 +123,7 @@ function problemOf(given: FrozenCase): FoldProblem {
   const slabWeight = slabWeightFor(given);
   return foldProblem(given, {
     acquiredLinesMax: mostAcquiredLines(p.linesAcrossFov, scanner.limits),
+    ...reachAlongZ(given),
     ...(given.frozen === undefined ? {} : { keepClear: given.frozen }),
     ...(slabWeight === undefined ? {} : { slabWeight }),
   });

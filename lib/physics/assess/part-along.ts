@@ -1,3 +1,4 @@
+import { reachAlongZ } from '../body/coil-reach';
 import { add, cosSin, dot } from '../geometry/vector';
 import type { RangeMm, Vec3 } from '../model/axes';
 import type { Case } from '../model/case';
@@ -14,8 +15,9 @@ const ACROSS = { x: [1, 2], y: [0, 2], z: [0, 1] } as const;
 
 /** Ends of a prism along its own axis; along z no further than coil and magnet see about the isocentre. */
 function prismEnds(shape: Exclude<PartShape, { type: 'ellipsoid' }>, given: Case): RangeMm {
-  const reach = given.scanner.tissueReachMm;
-  const middle = shape.along === 'z' ? given.patient.isocentreZMm : 0;
+  const { isocentreZMm, tissueReachMm } = reachAlongZ(given);
+  const reach = shape.along === 'z' ? tissueReachMm : given.scanner.tissueReachMm;
+  const middle = shape.along === 'z' ? isocentreZMm : 0;
   return [Math.max(shape.fromMm ?? -Infinity, middle - reach), Math.min(shape.toMm ?? Infinity, middle + reach)];
 }
 

@@ -35,6 +35,13 @@ function validateScanner(scanner: Scanner): void {
   requireWhole('scanner.partitionStep', scanner.partitionStep, 1, 256);
   requireBetween('scanner.tissueReachMm', scanner.tissueReachMm, 1, 2000, 'mm');
   requireBetween('scanner.respiratoryWindow', scanner.respiratoryWindow, 0.01, 1, '');
+  scanner.coils?.forEach((coil, index) =>
+    coil.elements.forEach((element, at) => {
+      const name = `scanner.coils[${index}].elements[${at}]`;
+      requireBetween(`${name}.seesFromMm`, element.seesFromMm, -2000, 2000, 'mm');
+      requireBetween(`${name}.seesToMm`, element.seesToMm, element.seesFromMm, 2000, 'mm');
+    }),
+  );
   const { limits } = scanner;
   requireBetween('scanner.limits.fovMaxMm', limits.fovMaxMm, 1, 2000, 'mm');
   requireBetween('scanner.limits.fovMinMm', limits.fovMinMm, 0, limits.fovMaxMm, 'mm');

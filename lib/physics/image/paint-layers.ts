@@ -1,3 +1,4 @@
+import { reachAlongZ } from '../body/coil-reach';
 import { buildBody } from '../body/build-body';
 import { partSolids } from '../body/part-solids';
 import { cosSin } from '../geometry/vector';
@@ -135,7 +136,7 @@ const PAINT_ORDER: readonly PartKind[] = ['other', 'trunk', 'arm', 'leg', 'breas
 export function paintLayers(given: Case, frame: SectionFrame): readonly PaintLayer[] {
   const { patient, scanner } = given;
   const parts = buildBody(patient, scanner);
-  const reach = { isocentreZMm: patient.isocentreZMm, tissueReachMm: scanner.tissueReachMm };
+  const reach = reachAlongZ(given);
   const seen = partSolids(parts, reach, { bands: [], b1Scale: 1, t1Ms: [] }, 0);
   const zEnds: HalfSpace[] = [
     { normal: [0, 0, 1], limit: reach.isocentreZMm + reach.tissueReachMm },

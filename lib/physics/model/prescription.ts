@@ -121,6 +121,8 @@ export interface Prescription {
   readonly presaturation: readonly PresaturationBand[];
   /** Coil sensitivity is unknown in the foundation: every weight is ≥ 1. */
   readonly coil: string;
+  /** Elements of it that are used; absent: all. */
+  readonly coilElements?: readonly string[];
 }
 
 export interface PresaturationBand {

@@ -36,6 +36,19 @@ export interface ScannerLimits {
   readonly tableLimitKg: number;
 }
 
+/** One element of a receive coil; it sees tissue between these, mm along z from the isocentre. */
+export interface CoilElement {
+  readonly name: string;
+  readonly seesFromMm: number;
+  readonly seesToMm: number;
+}
+
+export interface CoilDescription {
+  /** As a prescription names it. */
+  readonly name: string;
+  readonly elements: readonly CoilElement[];
+}
+
 export interface Scanner {
   readonly name: string;
   readonly fieldStrengthT: number;
@@ -57,4 +70,6 @@ export interface Scanner {
   /** Share w of a breath in which a triggered scan may acquire. */
   readonly respiratoryWindow: number;
   readonly limits: ScannerLimits;
+  /** Coils whose elements the site has described; absent or not listed: no element can be left out. */
+  readonly coils?: readonly CoilDescription[];
 }

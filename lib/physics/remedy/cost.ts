@@ -90,7 +90,7 @@ function effortPrice(given: Case, planned: Case): Price[] {
   if (given.patient.arms.position !== planned.patient.arms.position) {
     prices.push({ points: weights.armsUp, text: 'arms to raise' });
   }
-  if (given.prescription.coil !== planned.prescription.coil) {
+  if (given.prescription.coilElements !== planned.prescription.coilElements) {
     prices.push({ points: weights.coilElements, text: 'coil elements to choose' });
   }
   const lost = slabCoverageLostMm(given.prescription, planned.prescription);

@@ -22,7 +22,7 @@ export function outcomeKey({ prescription: p, patient }: TargetedCase): string {
     p.averages,
     p.partialFourierPhase,
     p.acceleration.factorPhase,
-    p.coil,
+    p.coilElements?.join('/'),
     slab,
     bands,
   ].join('|');

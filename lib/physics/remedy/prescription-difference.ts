@@ -9,7 +9,7 @@ const FIELDS = [
   'teMs',
   'averages',
   'partialFourierPhase',
-  'coil',
+  'coilElements',
 ] as const;
 
 const oversampling = (p: Prescription): string => (p.acquiredLines / p.linesAcrossFov).toFixed(6);

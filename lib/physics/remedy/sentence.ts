@@ -56,7 +56,7 @@ function changePhrase(kind: RemedyKind, given: TargetedCase, planned: TargetedCa
     case 'regroup-breath-holds':
       return `share the slices out over more breath-holds with TR ${figure(after.trMs)} ms`;
     case 'coil-elements':
-      return 'leave out the coil elements that see the outlying tissue';
+      return `use only coil elements ${after.coilElements?.join(', ') ?? ''}`;
     default:
       return slabPhrase(kind, before, after);
   }

@@ -297,6 +297,28 @@ describe('presaturation', () => {
   });
 });
 
+describe('coil elements', () => {
+  const elements = [-200, -100, 0, 100, 200].map((middle, i) => ({ name: `row ${i + 1}`, seesFromMm: middle - 100, seesToMm: middle + 100 }));
+  const swapped = prescriptionOf('balanced', { phaseAxis: 'SI', fovPhaseMm: 300, fovReadoutMm: 500, linesAcrossFov: 168, acquiredLines: 168 });
+  const keepClear = { area: { kind: 'whole-picture' }, followsWindow: false } as const;
+  const given = sketchCase({ prescription: swapped, keepClear, scanner: typicalScanner({ coils: [{ name: 'body array', elements }] }) });
+
+  it('are left out where they see only what lies beyond the picture', () => {
+    const ranking = rankRemedies(given);
+    const remedy = byKey(ranking, 'coil-elements+phase-oversampling')!;
+    expect(remedy.prescription.coilElements).toEqual(['row 2', 'row 3', 'row 4']);
+    // Seen from −200 to 200 with 5 mm margin: W ≥ 205 + 150 = 355 mm; all elements: −250 to 250, W ≥ 405 mm.
+    expect(remedy.assessment.width?.firstCleanMm).toBeCloseTo(355, 6);
+    expect(ranking.now.width?.firstCleanMm).toBeCloseTo(405, 6);
+    expect(remedy.terms.find((term) => term.kind === 'effort')?.text).toContain('coil elements to choose');
+    expect(assess(adopted({ ...given, keepClear: LIVER_BOX }, remedy)).verdict).not.toBe('fold-in-keep-clear');
+  });
+
+  it('are refused by name when nobody knows them', () => {
+    expect(() => assess({ ...given, prescription: { ...swapped, coilElements: ['row 9'] } })).toThrow(/row 9; allowed: row 1/);
+  });
+});
+
 describe('filters', () => {
   it('keep to the changes and paybacks asked for', () => {
     const ranking = rankRemedies(sketchCase(), { filters: { changes: ['swap', 'phase-oversampling'], paybacks: [] } });
