@@ -1,0 +1,102 @@
+/**
+ * The process that plays mutants. It gets bundles of instrumented test files, first notes which test reaches which place,
+ * then for each mutant evaluates the bundles afresh with it switched on and stops at the first test that fails.
+ */
+import { createRequire } from 'node:module';
+import vm from 'node:vm';
+import { readFileSync } from 'node:fs';
+import fc from 'fast-check';
+import { vitestFor, type RegisteredTest } from './harness';
+import type { MutationControl } from './switch';
+
+export type Request =
+  | { readonly kind: 'survey'; readonly bundle: string; readonly mutants: number }
+  | { readonly kind: 'play'; readonly id: number; readonly tests: readonly { readonly bundle: string; readonly test: number; readonly allowedMs: number }[] };
+
+export interface SurveyedTest {
+  readonly name: string;
+  readonly ms: number;
+  readonly error?: string;
+  readonly hits: readonly number[];
+}
+
+export type Answer =
+  | { readonly kind: 'surveyed'; readonly loadMs: number; readonly tests: readonly SurveyedTest[] }
+  | { readonly kind: 'begun'; readonly allowedMs: number }
+  | { readonly kind: 'played'; readonly killedBy?: string };
+
+const require = createRequire(import.meta.url);
+const scripts = new Map<string, vm.Script>();
+const say = (answer: Answer): void => void process.send!(answer);
+// A counterexample is enough; nobody reads the smallest.
+fc.configureGlobal({ endOnFailure: true });
+
+function evaluate(bundle: string, control: MutationControl): RegisteredTest[] {
+  let script = scripts.get(bundle);
+  if (!script) {
+    script = new vm.Script(`(function (exports, require, module) {${readFileSync(bundle, 'utf8')}\n})`, { filename: bundle });
+    scripts.set(bundle, script);
+  }
+  (globalThis as { mutationControl?: MutationControl }).mutationControl = control;
+  const tests: RegisteredTest[] = [];
+  const vitest = vitestFor(tests);
+  const module = { exports: {} };
+  const load = script.runInThisContext() as (exports: object, require: (name: string) => unknown, module: object) => void;
+  load(module.exports, (name) => (name === 'vitest' ? vitest : require(name)), module);
+  return tests;
+}
+
+async function survey(bundle: string, mutants: number): Promise<void> {
+  const hits = new Uint8Array(mutants);
+  const reached = () => [...hits.keys()].filter((id) => hits[id] === 1);
+  const begun = performance.now();
+  const tests = evaluate(bundle, { active: -1, hits });
+  const loadMs = performance.now() - begun;
+  const atLoad = new Set(reached());
+  const surveyed: SurveyedTest[] = [];
+  for (const { name, run } of tests) {
+    hits.fill(0);
+    const error = await failure(run);
+    const found = [...new Set([...atLoad, ...reached()])];
+    // Timed again without the notes, warm as it will be then.
+    surveyed.push({ name, ms: 0, hits: found, ...(error === undefined ? {} : { error }) });
+  }
+  const plain = evaluate(bundle, { active: -1, hits: undefined });
+  for (let i = 0; i < plain.length; i++) {
+    const started = performance.now();
+    await failure(plain[i]!.run);
+    surveyed[i] = { ...surveyed[i]!, ms: performance.now() - started };
+  }
+  say({ kind: 'surveyed', loadMs, tests: surveyed });
+}
+
+async function failure(run: () => unknown): Promise<string | undefined> {
+  try {
+    await run();
+    return undefined;
+  } catch (error) {
+    return String((error as Error)?.message ?? error).slice(0, 300) || 'thrown';
+  }
+}
+
+async function play({ id, tests }: Extract<Request, { kind: 'play' }>): Promise<void> {
+  const evaluated = new Map<string, RegisteredTest[]>();
+  for (const { bundle, test, allowedMs } of tests) {
+    say({ kind: 'begun', allowedMs });
+    let registered: RegisteredTest[] | undefined = evaluated.get(bundle);
+    let error: string | undefined;
+    if (!registered) {
+      error = await failure(() => {
+        registered = evaluate(bundle, { active: id, hits: undefined });
+        evaluated.set(bundle, registered);
+      });
+    }
+    error ??= registered?.[test] === undefined ? 'the test is not registered' : await failure(registered[test].run);
+    if (error !== undefined) return say({ kind: 'played', killedBy: `${registered?.[test]?.name ?? 'loading'}: ${error}` });
+  }
+  say({ kind: 'played' });
+}
+
+process.on('message', (request: Request) => {
+  void (request.kind === 'survey' ? survey(request.bundle, request.mutants) : play(request));
+});
