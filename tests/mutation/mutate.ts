@@ -1,4 +1,5 @@
-import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { createHash } from 'node:crypto';
+import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
@@ -6,8 +7,8 @@ import { seededNumbers } from '@/tests/support/seeded-numbers';
 import { bundleTests, instrumentPhysics, ROOT, type Bundle } from './bundle-tests';
 import { EQUIVALENT } from './equivalent';
 import type { Mutant } from './find-mutants';
-import type { SurveyedTest } from './play-mutants';
-import { Player } from './player';
+import type { Answer, SurveyedTest } from './play-mutants';
+import { COUNTS, Player } from './player';
 
 type Outcome = 'killed' | 'survived' | 'not reached' | 'equivalent';
 
@@ -16,6 +17,8 @@ interface Result extends Mutant {
   /** The test that failed, or how the run ended; for an equivalent mutant the reason. */
   readonly by?: string;
 }
+
+type Surveyed = Extract<Answer, { kind: 'surveyed' }>;
 
 interface PlayableTest {
   readonly bundle: string;
@@ -29,7 +32,7 @@ const { values: options } = parseArgs({
     sample: { type: 'string' },
     seed: { type: 'string', default: '1' },
     file: { type: 'string', multiple: true },
-    budget: { type: 'string', default: '20' },
+    budget: { type: 'string', default: '10' },
     survivors: { type: 'boolean', default: false },
     out: { type: 'string', default: '.data/mutation.json' },
   },
@@ -56,13 +59,25 @@ function choose(mutants: readonly Mutant[]): Mutant[] {
   return chosen.sort((a, b) => a.id - b.id);
 }
 
+/** What is known of a bundle's tests; asked again only when the bundle is another one. */
+async function survey(player: Player, bundle: string, mutants: number): Promise<Surveyed | undefined> {
+  const hash = createHash('sha256').update(readFileSync(bundle)).update(JSON.stringify(COUNTS)).digest('hex').slice(0, 24);
+  const kept = path.join(path.dirname(OUT), 'mutation-survey', `${hash}.json`);
+  if (existsSync(kept)) return JSON.parse(readFileSync(kept, 'utf8')) as Surveyed;
+  const answer = await player.ask({ kind: 'survey', bundle, mutants }, 900_000);
+  if (answer === 'hung' || answer === 'died' || answer.kind !== 'surveyed') return undefined;
+  mkdirSync(path.dirname(kept), { recursive: true });
+  writeFileSync(kept, JSON.stringify(answer));
+  return answer;
+}
+
 /** Which tests reach each mutant, quickest first. Tests that fail without any mutant are left out and named. */
 async function surveyTests(player: Player, bundles: readonly Bundle[], mutants: number): Promise<PlayableTest[][]> {
   const reaching: PlayableTest[][] = Array.from({ length: mutants }, () => []);
   for (const { testFile, bundle } of bundles) {
-    const answer = await player.ask({ kind: 'survey', bundle, mutants }, 900_000);
-    if (answer === 'hung' || answer === 'died' || answer.kind !== 'surveyed') {
-      console.log(`left out: ${testFile} ${String(answer)}`);
+    const answer = await survey(player, bundle, mutants);
+    if (answer === undefined) {
+      console.log(`left out: ${testFile}: it hangs, or ends the process`);
       continue;
     }
     answer.tests.forEach((test: SurveyedTest, index) => {
@@ -134,12 +149,15 @@ function report(results: readonly Result[], all: readonly Mutant[]): void {
   for (const { file, line, code, mutated, by } of killed) console.log(`called equivalent, yet killed: ${file}:${line} ${code} → ${mutated} by ${by}`);
 }
 
+const began = Date.now();
+const at = () => `${Math.round((Date.now() - began) / 1000)} s`;
 const { mutants, codeOf } = instrumentPhysics();
 const { folder, bundles } = await bundleTests(codeOf);
 const player = new Player(ROOT);
 try {
-  console.log(`${mutants.length} mutants in ${codeOf.size} files, ${bundles.length} test files`);
+  console.log(`${mutants.length} mutants in ${codeOf.size} files, ${bundles.length} test files (${at()})`);
   const reaching = await surveyTests(player, bundles, mutants.length);
+  console.log(`tests surveyed (${at()})`);
   const results = await playAll(player, choose(mutants), reaching);
   report(results, mutants);
   mkdirSync(path.dirname(OUT), { recursive: true });

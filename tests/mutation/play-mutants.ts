@@ -40,9 +40,9 @@ function evaluate(bundle: string, control: MutationControl): RegisteredTest[] {
   (globalThis as { mutationControl?: MutationControl }).mutationControl = control;
   const tests: RegisteredTest[] = [];
   const vitest = vitestFor(tests);
-  const module = { exports: {} };
+  const loaded = { exports: {} };
   const load = script.runInThisContext() as (exports: object, require: (name: string) => unknown, module: object) => void;
-  load(module.exports, (name) => (name === 'vitest' ? vitest : require(name)), module);
+  load(loaded.exports, (name) => (name === 'vitest' ? vitest : require(name)), loaded);
   return tests;
 }
 

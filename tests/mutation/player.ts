@@ -3,7 +3,7 @@ import path from 'node:path';
 import type { Answer, Request } from './play-mutants';
 
 /** Fewer cases than the tests take by themselves: a mutant that only the ten-thousandth case finds is not well tested. */
-const COUNTS = {
+export const COUNTS = {
   SELVEDGE_ORACLE_A: '150',
   SELVEDGE_ORACLE_A_3D: '60',
   SELVEDGE_ORACLE_B: '40',
