@@ -186,4 +186,23 @@ export const REFERENCES: readonly Reference[] = [
     pages: '93–102',
     standing: 'from memory',
   },
+  {
+    key: 'abramowitz-1964',
+    authors: 'Abramowitz M, Stegun IA (editors)',
+    year: 1964,
+    title: 'Handbook of Mathematical Functions',
+    where: 'National Bureau of Standards',
+    pages: '26.2.11 and 26.2.14 (normal distribution), 9.1.21 (Bessel functions)',
+    standing: 'from memory',
+  },
+  {
+    key: 'halton-1960',
+    authors: 'Halton JH',
+    year: 1960,
+    title:
+      'On the efficiency of certain quasi-random sequences of points in evaluating multi-dimensional integrals',
+    where: 'Numer Math 2',
+    pages: '84–90',
+    standing: 'from memory',
+  },
 ];

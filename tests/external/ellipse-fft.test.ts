@@ -16,7 +16,15 @@ function fromFoldModel(ellipses: readonly Ellipse[], fovReadoutMm: number, width
     for (const { r, p, a, b, turn } of ellipses) {
       const [c, s] = [Math.cos(turn), Math.sin(turn)];
       const [ia, ib] = [1 / (a * a), 1 / (b * b)];
-      const quadric = { centre: [r, p, 0] as const, xx: c * c * ia + s * s * ib, yy: s * s * ia + c * c * ib, xy: c * s * (ia - ib), zz: 0, xz: 0, yz: 0 };
+      const quadric = {
+        centre: [r, p, 0] as const,
+        xx: c * c * ia + s * s * ib,
+        yy: s * s * ia + c * c * ib,
+        xy: c * s * (ia - ib),
+        zz: 0,
+        xz: 0,
+        yz: 0,
+      };
       const interval = rowInterval({ quadric, halfSpaces: [] }, at, 0);
       if (interval !== undefined) foldOntoRow(line, how, interval[0], interval[1], 1);
     }
@@ -32,7 +40,8 @@ function awayFromEdges(rows: readonly Float64Array[], reach: number): [number, n
       const value = rows[u]![v]!;
       let even = Number.isInteger(Math.round(value * 1e9) / 1e9);
       for (let du = -reach; even && du <= reach; du++) {
-        for (let dv = -reach; even && dv <= reach; dv++) even = Math.abs(rows[u + du]![(v + dv + SIZE) % SIZE]! - value) < 1e-9;
+        for (let dv = -reach; even && dv <= reach; dv++)
+          even = Math.abs(rows[u + du]![(v + dv + SIZE) % SIZE]! - value) < 1e-9;
       }
       if (even) found.push([u, v]);
     }
@@ -41,30 +50,50 @@ function awayFromEdges(rows: readonly Float64Array[], reach: number): [number, n
 }
 
 describe('fold against analytic k-space and an FFT package', () => {
-  it(`agrees away from edges in ${CASES} seeded cases`, () => {
-    let worst = 0;
-    let compared = 0;
-    let folded = 0;
-    for (let seed = 1; seed <= CASES; seed++) {
-      const next = seededNumbers(seed);
-      const between = (low: number, high: number): number => low + next() * (high - low);
-      const widthMm = between(220, 420);
-      const fovReadoutMm = between(480, 560);
-      const trunk: Ellipse = { r: between(-15, 15), p: between(-20, 20), a: between(150, 200), b: between(120, 190), turn: between(-0.4, 0.4) };
-      const arm = (side: 1 | -1): Ellipse => ({ r: between(-60, 60), p: side * between(215, 330), a: between(25, 50), b: between(25, 45), turn: between(-1, 1) });
-      const ellipses = next() < 0.5 ? [trunk] : [trunk, arm(1), arm(-1)];
-      const model = fromFoldModel(ellipses, fovReadoutMm, widthMm);
-      const image = fromKSpace(ellipses, fovReadoutMm, widthMm);
-      for (const [u, v] of awayFromEdges(model, 5)) {
-        worst = Math.max(worst, Math.abs(image[u]![v]! - model[u]![v]!));
-        compared++;
-        if (model[u]![v]! > 1.5) folded++;
+  it(
+    `agrees away from edges in ${CASES} seeded cases`,
+    () => {
+      let worst = 0;
+      let compared = 0;
+      let folded = 0;
+      for (let seed = 1; seed <= CASES; seed++) {
+        const next = seededNumbers(seed);
+        const between = (low: number, high: number): number => low + next() * (high - low);
+        const widthMm = between(220, 420);
+        const fovReadoutMm = between(480, 560);
+        const trunk: Ellipse = {
+          r: between(-15, 15),
+          p: between(-20, 20),
+          a: between(150, 200),
+          b: between(120, 190),
+          turn: between(-0.4, 0.4),
+        };
+        const arm = (side: 1 | -1): Ellipse => ({
+          r: between(-60, 60),
+          p: side * between(215, 330),
+          a: between(25, 50),
+          b: between(25, 45),
+          turn: between(-1, 1),
+        });
+        const ellipses = next() < 0.5 ? [trunk] : [trunk, arm(1), arm(-1)];
+        const model = fromFoldModel(ellipses, fovReadoutMm, widthMm);
+        const image = fromKSpace(ellipses, fovReadoutMm, widthMm);
+        for (const [u, v] of awayFromEdges(model, 5)) {
+          worst = Math.max(worst, Math.abs(image[u]![v]! - model[u]![v]!));
+          compared++;
+          if (model[u]![v]! > 1.5) folded++;
+        }
       }
-    }
-    tally('ellipse k-space and FFT against the fold model', CASES, `${compared} pixels, worst ${worst.toFixed(4)}`);
-    expect(compared).toBeGreaterThan(CASES * 1000);
-    expect(folded).toBeGreaterThan(CASES * 20);
-    // 0.02 of tissue: a Hamming window's side lobes are below 1 % beyond five pixels, and two edges can meet.
-    expect(worst).toBeLessThan(0.02);
-  }, CASES * 1000);
+      tally(
+        'ellipse k-space and FFT against the fold model',
+        CASES,
+        `${compared} pixels, worst ${worst.toFixed(4)}`,
+      );
+      expect(compared).toBeGreaterThan(CASES * 1000);
+      expect(folded).toBeGreaterThan(CASES * 20);
+      // 0.02 of tissue: a Hamming window's side lobes are below 1 % beyond five pixels, and two edges can meet.
+      expect(worst).toBeLessThan(0.02);
+    },
+    CASES * 1000,
+  );
 });

@@ -12,10 +12,18 @@ import { quantile, time, type Measure, type MeasureRow } from './row';
 const RUNS = 200;
 const AIM_RANK = 'p95 below 8 ms in Node';
 
-function timingRows({ assessMs, rankFiveMs, imageMs, candidates }: EngineTimings, where: string): MeasureRow[] {
+function timingRows(
+  { assessMs, rankFiveMs, imageMs, candidates }: EngineTimings,
+  where: string,
+): MeasureRow[] {
   const both = (what: string, sample: readonly number[], aim?: string): MeasureRow[] => [
     { what: `${what}, p50, ${where}`, value: quantile(sample, 0.5), unit: 'ms' },
-    { what: `${what}, p95, ${where}`, value: quantile(sample, 0.95), unit: 'ms', ...(aim === undefined ? {} : { aim }) },
+    {
+      what: `${what}, p95, ${where}`,
+      value: quantile(sample, 0.95),
+      unit: 'ms',
+      ...(aim === undefined ? {} : { aim }),
+    },
   ];
   return [
     ...both('one assessment', assessMs),
@@ -29,20 +37,32 @@ function timingRows({ assessMs, rankFiveMs, imageMs, candidates }: EngineTimings
 function againstLattice(): MeasureRow {
   const samples = Array.from({ length: 60 }, (_, i) => latticeSample(i + 1, false));
   let agreed = 0;
-  const counting = time(() => {
-    for (const { lattice, lines, lineUnits } of samples) {
-      const isClean = latticeOracle(lattice);
-      let l = lines;
-      while (l < 4 * lines && !isClean(l * lineUnits)) l++;
-    }
-  }, 3, 1);
-  const solving = time(() => {
-    for (const { problem } of samples) solveFold(problem).requirement();
-  }, 20, 5);
+  const counting = time(
+    () => {
+      for (const { lattice, lines, lineUnits } of samples) {
+        const isClean = latticeOracle(lattice);
+        let l = lines;
+        while (l < 4 * lines && !isClean(l * lineUnits)) l++;
+      }
+    },
+    3,
+    1,
+  );
+  const solving = time(
+    () => {
+      for (const { problem } of samples) solveFold(problem).requirement();
+    },
+    20,
+    5,
+  );
   for (const { lattice, problem, lines, lineUnits } of samples) {
     const first = solveFold(problem).requirement().firstCleanLines;
     const isClean = latticeOracle(lattice);
-    if (first === undefined || (isClean(first * lineUnits) && (first === lines || !isClean((first - 1) * lineUnits)))) agreed++;
+    if (
+      first === undefined ||
+      (isClean(first * lineUnits) && (first === lines || !isClean((first - 1) * lineUnits)))
+    )
+      agreed++;
   }
   return {
     what: 'smallest width: cell count over closed form',
@@ -62,16 +82,25 @@ function againstFft(): MeasureRow {
     const widthMm = (lines * fovPhaseMm) / linesAcrossFov;
     const rows = fromKSpace(trunk, fovReadoutMm, widthMm);
     // Twice as bright as tissue somewhere inside the FOV: something lies on top of it.
-    return rows.some((row) => row.some((value, v) => Math.abs(((v + 0.5) / SIZE - 0.5) * widthMm) < fovPhaseMm / 2 && value > 1.3));
+    return rows.some((row) =>
+      row.some((value, v) => Math.abs(((v + 0.5) / SIZE - 0.5) * widthMm) < fovPhaseMm / 2 && value > 1.3),
+    );
   };
   let swept = linesAcrossFov;
-  const [sweepMs] = time(() => {
-    swept = linesAcrossFov;
-    while (foldsAt(swept)) swept++;
-  }, 1, 0);
+  const [sweepMs] = time(
+    () => {
+      swept = linesAcrossFov;
+      while (foldsAt(swept)) swept++;
+    },
+    1,
+    0,
+  );
   const problem = foldProblem(given);
   const solved = solveFold(problem).requirement().firstCleanLines!;
-  const solvingMs = quantile(time(() => solveFold(problem).requirement(), 200, 50), 0.5);
+  const solvingMs = quantile(
+    time(() => solveFold(problem).requirement(), 200, 50),
+    0.5,
+  );
   return {
     what: 'smallest width: FFT sweep over closed form',
     value: sweepMs! / solvingMs,
@@ -83,8 +112,17 @@ function againstFft(): MeasureRow {
 
 export const measure: Measure = async () => {
   const here = timingRows(engineTimings(RUNS), 'Node');
-  const there = await inChromium(path.join(import.meta.dirname, '../support/engine-timings.ts'), 'engine', (page) =>
-    page.evaluate((runs) => (globalThis as unknown as { engine: { engineTimings(runs: number): EngineTimings } }).engine.engineTimings(runs), RUNS),
+  const there = await inChromium(
+    path.join(import.meta.dirname, '../support/engine-timings.ts'),
+    'engine',
+    (page) =>
+      page.evaluate(
+        (runs) =>
+          (
+            globalThis as unknown as { engine: { engineTimings(runs: number): EngineTimings } }
+          ).engine.engineTimings(runs),
+        RUNS,
+      ),
   );
   return [...here, ...timingRows(there, 'Chromium'), againstLattice(), againstFft()];
 };

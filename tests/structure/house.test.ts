@@ -29,7 +29,7 @@ describe('names', () => {
 
   it('has source files in kebab-case', () => {
     const ours = filesEnding('.ts', '.tsx', '.mjs');
-    const kebab = /^[a-z0-9]+(-[a-z0-9]+)*(\.(test|spec|d|setup|worker))*\.(ts|tsx|mts|mjs)$/;
+    const kebab = /^[a-z0-9]+(-[a-z0-9]+)*(\.(test|spec|d|setup|worker|measure))*\.(ts|tsx|mts|mjs)$/;
     expect(ours.filter((file) => !kebab.test(path.basename(file)))).toEqual([]);
   });
 

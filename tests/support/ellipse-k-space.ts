@@ -22,7 +22,9 @@ function besselJ1(x: number): number {
 
 /** J1(2πρ)/ρ on a fine table, read by straight lines: the ellipse's transform needs it some million times. */
 const TABLE_STEP = 1 / 512;
-const TABLE = Array.from({ length: 160 * 512 }, (_, i) => (i === 0 ? Math.PI : besselJ1(2 * Math.PI * i * TABLE_STEP) / (i * TABLE_STEP)));
+const TABLE = Array.from({ length: 160 * 512 }, (_, i) =>
+  i === 0 ? Math.PI : besselJ1(2 * Math.PI * i * TABLE_STEP) / (i * TABLE_STEP),
+);
 function jinc(rho: number): number {
   const at = rho / TABLE_STEP;
   const index = Math.floor(at);
@@ -43,7 +45,11 @@ export interface Ellipse {
 const hamming = (index: number): number => 0.54 + 0.46 * Math.cos((2 * Math.PI * index) / SIZE);
 
 /** Image of ellipses of brightness 1 on the acquired grid: SIZE pixels over F along readout, SIZE over W along phase. */
-export function fromKSpace(ellipses: readonly Ellipse[], fovReadoutMm: number, widthMm: number): Float64Array[] {
+export function fromKSpace(
+  ellipses: readonly Ellipse[],
+  fovReadoutMm: number,
+  widthMm: number,
+): Float64Array[] {
   const transform = new FFT(SIZE);
   const columns: number[][] = [];
   for (let u = 0; u < SIZE; u++) {
@@ -59,7 +65,11 @@ export function fromKSpace(ellipses: readonly Ellipse[], fovReadoutMm: number, w
         const rho = Math.hypot(a * (kr * c + kp * s), b * (kp * c - kr * s));
         const size = a * b * jinc(rho);
         // Pixel centres start half a pixel inside the edges of the sampled field.
-        const phase = -2 * Math.PI * (kr * (r + fovReadoutMm / 2 - fovReadoutMm / SIZE / 2) + kp * (p + widthMm / 2 - widthMm / SIZE / 2));
+        const phase =
+          -2 *
+          Math.PI *
+          (kr * (r + fovReadoutMm / 2 - fovReadoutMm / SIZE / 2) +
+            kp * (p + widthMm / 2 - widthMm / SIZE / 2));
         real += size * Math.cos(phase);
         imaginary += size * Math.sin(phase);
       }

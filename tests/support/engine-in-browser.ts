@@ -17,7 +17,11 @@ async function browserScript(entry: string, name: string): Promise<string> {
 }
 
 /** Runs `work` with Debian's Chromium on a page that holds the module's exports under `name`, and closes it after. */
-export async function inChromium<T>(entry: string, name: string, work: (page: Page) => Promise<T>): Promise<T> {
+export async function inChromium<T>(
+  entry: string,
+  name: string,
+  work: (page: Page) => Promise<T>,
+): Promise<T> {
   const script = await browserScript(entry, name);
   const browser = await chromium.launch({
     executablePath: '/usr/bin/chromium',

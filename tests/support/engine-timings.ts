@@ -14,7 +14,13 @@ export interface EngineTimings {
 function protocolFor(run: number): Case[] {
   return ABDOMEN_PROTOCOL.map((family) => {
     const given = sketchCase({ prescription: prescriptionOf(family) });
-    return { ...given, patient: { ...given.patient, extents: { ...given.patient.extents, anterior: measured(170 + run * 0.01) } } };
+    return {
+      ...given,
+      patient: {
+        ...given.patient,
+        extents: { ...given.patient.extents, anterior: measured(170 + run * 0.01) },
+      },
+    };
   });
 }
 

@@ -9,7 +9,13 @@ import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
 import type { KeepClear } from '@/lib/physics/model/keep-clear';
 import type { Patient, Reading } from '@/lib/physics/model/patient';
 import type { SitePolicy } from '@/lib/physics/model/policy';
-import type { Acceleration, Prescription, SequenceFamily, Slab, SliceStack } from '@/lib/physics/model/prescription';
+import type {
+  Acceleration,
+  Prescription,
+  SequenceFamily,
+  Slab,
+  SliceStack,
+} from '@/lib/physics/model/prescription';
 import type { Scanner, ScannerLimits } from '@/lib/physics/model/scanner';
 
 export const measured = (value: number, spread = 0): Reading => ({ value, source: 'measured', spread });
@@ -159,7 +165,14 @@ export function typicalPrescription(overrides: Partial<Prescription> = {}): Pres
 }
 
 const FAMILY_VALUES: Readonly<Record<SequenceFamily, Partial<Prescription>>> = {
-  'spin-echo': { name: 'T1 spin echo', trMs: 600, teMs: 12, sliceTimeMs: 19, averages: 2, echoTrainLength: 1 },
+  'spin-echo': {
+    name: 'T1 spin echo',
+    trMs: 600,
+    teMs: 12,
+    sliceTimeMs: 19,
+    averages: 2,
+    echoTrainLength: 1,
+  },
   'gradient-echo': {
     name: 'T1 gradient echo',
     trMs: 160,
@@ -298,7 +311,10 @@ export const evenMargin = (mm: number): SitePolicy['marginMm'] => ({
   inferior: mm,
 });
 
-export const typicalPolicy = (overrides: Partial<SitePolicy> = {}): SitePolicy => ({ ...DEFAULT_POLICY, ...overrides });
+export const typicalPolicy = (overrides: Partial<SitePolicy> = {}): SitePolicy => ({
+  ...DEFAULT_POLICY,
+  ...overrides,
+});
 
 export function typicalCase(overrides: Partial<Case> = {}): Case {
   return {

@@ -3,7 +3,16 @@ import { sizesAt } from '../certainty/sizes-at';
 import type { SolvedFold } from '../fold/solved-fold';
 import { toMicrometres } from '../geometry/micrometres';
 import { PLANE_AXES } from '../geometry/section-frame';
-import type { Assessment, FoldResult, Reason, SamplingResult, SlabResult, TimeResult, Verdict, WidthRequirement } from '../model/assessment';
+import type {
+  Assessment,
+  FoldResult,
+  Reason,
+  SamplingResult,
+  SlabResult,
+  TimeResult,
+  Verdict,
+  WidthRequirement,
+} from '../model/assessment';
 import type { PatientAxis } from '../model/axes';
 import type { Case } from '../model/case';
 import { DomainError } from '../model/domain-error';
@@ -44,7 +53,10 @@ function samplingOf(p: Prescription): SamplingResult {
 }
 
 /** Scan time, or the reason why it cannot be played at all. */
-function timeOf({ prescription, patient, scanner }: Case): { readonly time?: TimeResult; readonly stops: readonly Reason[] } {
+function timeOf({ prescription, patient, scanner }: Case): {
+  readonly time?: TimeResult;
+  readonly stops: readonly Reason[];
+} {
   try {
     return { time: scanTime(prescription, patient, scanner), stops: [] };
   } catch (error) {
@@ -53,9 +65,15 @@ function timeOf({ prescription, patient, scanner }: Case): { readonly time?: Tim
   }
 }
 
-function verdictOf(hard: readonly Reason[], fold: FoldResult, slab: SlabResult | undefined, gap: Reason | undefined): Verdict {
+function verdictOf(
+  hard: readonly Reason[],
+  fold: FoldResult,
+  slab: SlabResult | undefined,
+  gap: Reason | undefined,
+): Verdict {
   if (hard.length > 0) return 'cannot-be-scanned';
-  if (fold.inKeepClear || gap !== undefined || (slab?.contaminatedInKeepClear ?? 0) > 0) return 'fold-in-keep-clear';
+  if (fold.inKeepClear || gap !== undefined || (slab?.contaminatedInKeepClear ?? 0) > 0)
+    return 'fold-in-keep-clear';
   if (fold.outsideKeepClear || (slab?.contaminated ?? 0) > 0) return 'fold-outside-keep-clear';
   return 'no-fold-expected';
 }
@@ -83,7 +101,9 @@ function gapReason(given: FrozenCase, width: WidthRequirement, fold: FoldResult)
 export function geometryCase(given: FrozenCase): FrozenCase {
   const patient = sizesAt(given.patient, given.policy.sureAt);
   const prescription = withUnfolding(given, unfoldingOf(given));
-  return patient === given.patient && prescription === given.prescription ? given : { ...given, patient, prescription };
+  return patient === given.patient && prescription === given.prescription
+    ? given
+    : { ...given, patient, prescription };
 }
 
 /** A case's geometry, solved: what assessing and sizing start from. */
@@ -102,7 +122,11 @@ export function solveGeometry(given: FrozenCase): SolvedGeometry {
  * @param withAssumptions false leaves them out: in a ranking they are those of the case itself
  * @param geometry the solved geometry, where it is at hand
  */
-export function assessChecked(given: FrozenCase, withAssumptions: boolean, geometry?: SolvedGeometry): Assessment {
+export function assessChecked(
+  given: FrozenCase,
+  withAssumptions: boolean,
+  geometry?: SolvedGeometry,
+): Assessment {
   const { prescription: p, policy } = given;
   const common = {
     engineVersion: ENGINE_VERSION,
@@ -111,7 +135,8 @@ export function assessChecked(given: FrozenCase, withAssumptions: boolean, geome
     readoutAxis: readoutAxisOf(p),
   };
   const unmodelled = notModelledReason(p);
-  if (unmodelled !== undefined) return { ...common, verdict: 'not-modelled', reasons: [unmodelled], assumptions: [] };
+  if (unmodelled !== undefined)
+    return { ...common, verdict: 'not-modelled', reasons: [unmodelled], assumptions: [] };
 
   const { time, stops } = timeOf(given);
   const hard = [...hardLimits(given, time), ...stops];
@@ -169,7 +194,9 @@ export function assess(
   policy?: SitePolicy,
 ): Assessment {
   const given =
-    prescription === undefined ? (first as Case) : ({ patient: first, prescription, keepClear, scanner, policy } as Case);
+    prescription === undefined
+      ? (first as Case)
+      : ({ patient: first, prescription, keepClear, scanner, policy } as Case);
   validateCase(given);
   return assessChecked(given, true);
 }

@@ -7,7 +7,13 @@ import { isAccelerated, unfoldingOf, withUnfolding } from './resolve-unfolding';
 import { solveClass, type FrozenCase } from './geometry-class';
 import { figure } from './words';
 
-const NOT_MEASURED: readonly ReadingSource[] = ['girth-and-depth', 'girth', 'weight-and-height', 'population', 'policy-default'];
+const NOT_MEASURED: readonly ReadingSource[] = [
+  'girth-and-depth',
+  'girth',
+  'weight-and-height',
+  'population',
+  'policy-default',
+];
 
 const SOURCE_WORDS: Readonly<Record<ReadingSource, string>> = {
   measured: 'measured',
@@ -26,7 +32,8 @@ function sizeAssumptions({ patient, policy }: Case): Assumption[] {
   const sidesBySource = new Map<ReadingSource, Side[]>();
   for (const side of SIDES) {
     const { source } = patient.extents[side];
-    if (NOT_MEASURED.includes(source)) sidesBySource.set(source, [...(sidesBySource.get(source) ?? []), side]);
+    if (NOT_MEASURED.includes(source))
+      sidesBySource.set(source, [...(sidesBySource.get(source) ?? []), side]);
   }
   for (const [source, sides] of sidesBySource) {
     assumptions.push({
@@ -49,13 +56,25 @@ function sizeAssumptions({ patient, policy }: Case): Assumption[] {
 const fromPolicy = (field: string, name: string, reading: Reading, unit: string): Assumption[] =>
   reading.source !== 'policy-default'
     ? []
-    : [{ field, used: String(reading.value), text: `${name} is the site policy’s default, ${figure(reading.value)} ${unit}.` }];
+    : [
+        {
+          field,
+          used: String(reading.value),
+          text: `${name} is the site policy’s default, ${figure(reading.value)} ${unit}.`,
+        },
+      ];
 
 /** Unknown unfolding: what was taken, and what the answer would be if the scanner unfolded in k-space. */
 function unfoldingAssumption(given: FrozenCase): Assumption[] {
   if (!isAccelerated(given.prescription) || unfoldingOf(given) !== 'unknown') return [];
-  const cautious = solveClass({ ...given, prescription: withUnfolding(given, 'image-domain-grid-ends') }).requirement();
-  const plain = solveClass({ ...given, prescription: withUnfolding(given, 'k-space-self-calibrating') }).requirement();
+  const cautious = solveClass({
+    ...given,
+    prescription: withUnfolding(given, 'image-domain-grid-ends'),
+  }).requirement();
+  const plain = solveClass({
+    ...given,
+    prescription: withUnfolding(given, 'k-space-self-calibrating'),
+  }).requirement();
   const difference =
     Math.abs(cautious.firstCleanMm - plain.firstCleanMm) < 0.05
       ? 'Knowing it would change nothing here.'
@@ -99,10 +118,20 @@ export function assumptionsFor(given: FrozenCase): readonly Assumption[] {
   const { patient, prescription } = given;
   return [
     ...sizeAssumptions(given),
-    ...(prescription.breathing === 'breath-hold' ? fromPolicy('patient.breathHoldS', 'Breath-hold', patient.breathHoldS, 's') : []),
-    ...(prescription.breathing === 'triggered' ? fromPolicy('patient.breathPeriodS', 'Breath period', patient.breathPeriodS, 's') : []),
+    ...(prescription.breathing === 'breath-hold'
+      ? fromPolicy('patient.breathHoldS', 'Breath-hold', patient.breathHoldS, 's')
+      : []),
+    ...(prescription.breathing === 'triggered'
+      ? fromPolicy('patient.breathPeriodS', 'Breath period', patient.breathPeriodS, 's')
+      : []),
     ...(patient.weightKg === undefined
-      ? [{ field: 'patient.weightKg', used: 'unknown', text: 'Weight is unknown: the table load is not checked.' }]
+      ? [
+          {
+            field: 'patient.weightKg',
+            used: 'unknown',
+            text: 'Weight is unknown: the table load is not checked.',
+          },
+        ]
       : []),
     ...unfoldingAssumption(given),
     ...slabAssumptions(given),

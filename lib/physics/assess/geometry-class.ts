@@ -61,11 +61,11 @@ export function identityOf(object: object): number {
 function prescriptionKey(p: Prescription): string {
   const { acceleration: a, slices } = p;
   const stack =
-    slices.mode === 'stack'
-      ? `${slices.slices}/${slices.thicknessMm}/${slices.gapMm}`
-      : slabKey(slices, p);
+    slices.mode === 'stack' ? `${slices.slices}/${slices.thicknessMm}/${slices.gapMm}` : slabKey(slices, p);
   const bands = p.presaturation
-    .map((band) => `${band.side}/${band.innerEdgeMm}/${band.thicknessMm}/${band.nominalFlipDeg}/${band.delayMs}`)
+    .map(
+      (band) => `${band.side}/${band.innerEdgeMm}/${band.thicknessMm}/${band.nominalFlipDeg}/${band.delayMs}`,
+    )
     .join(';');
   return [
     p.plane,
@@ -79,7 +79,9 @@ function prescriptionKey(p: Prescription): string {
     p.linesAcrossFov,
     stack,
     // Only a grid that ends at W makes fold depend on how much is accelerated.
-    a.factorPhase * a.factorSlice > 1 && a.unfolding === 'image-domain-grid-ends' ? `${a.factorPhase}/${a.factorSlice}` : '',
+    a.factorPhase * a.factorSlice > 1 && a.unfolding === 'image-domain-grid-ends'
+      ? `${a.factorPhase}/${a.factorSlice}`
+      : '',
     bands,
     p.coil,
     p.coilElements?.join('/'),
@@ -110,12 +112,21 @@ function classKey(given: FrozenCase): string {
 function worstSlabWeight(sources: readonly SlabSource[], slab: Slab): (offsetMm: number) => number {
   const slabMm = slab.partitions * slab.partitionThicknessMm;
   return (offsetMm) =>
-    sources.reduce((worst, source) => Math.max(worst, source.profile.at(offsetMm / slabMm - source.shiftShare)), 0);
+    sources.reduce(
+      (worst, source) => Math.max(worst, source.profile.at(offsetMm / slabMm - source.shiftShare)),
+      0,
+    );
 }
 
 /** Signal of a slab relative to its centre, by offset from it [mm]; undefined for a stack. */
-export function slabWeightFor({ prescription: p, scanner, policy }: Case): ((offsetMm: number) => number) | undefined {
-  return p.slices.mode === 'slab' ? worstSlabWeight(slabSources(p, p.slices, scanner, policy), p.slices) : undefined;
+export function slabWeightFor({
+  prescription: p,
+  scanner,
+  policy,
+}: Case): ((offsetMm: number) => number) | undefined {
+  return p.slices.mode === 'slab'
+    ? worstSlabWeight(slabSources(p, p.slices, scanner, policy), p.slices)
+    : undefined;
 }
 
 function problemOf(given: FrozenCase): FoldProblem {
@@ -132,7 +143,8 @@ function problemOf(given: FrozenCase): FoldProblem {
 const solved = new KeptAnswers<SolvedFold>(48);
 
 /** The geometry class of a case, solved once; the key is every value the solution depends on. */
-export const solveClass = (given: FrozenCase): SolvedFold => solved.get(classKey(given), () => solveFold(problemOf(given)));
+export const solveClass = (given: FrozenCase): SolvedFold =>
+  solved.get(classKey(given), () => solveFold(problemOf(given)));
 
 /** As solveClass, for sizes asked about once: nothing is kept. */
 export const solveOnce = (given: FrozenCase): SolvedFold => solveFold(problemOf(given));

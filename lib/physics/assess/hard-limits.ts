@@ -5,7 +5,6 @@ import { isOnLineGrid, mostAcquiredLines } from './line-grid';
 import { minimumTrMs } from '../sequence/scan-time';
 import { figure } from './words';
 
-
 /** Slack for numbers that went through a multiplication: far above a double's rounding, far below 1 µm. */
 const SLACK = 1e-9;
 
@@ -19,8 +18,16 @@ function samplingLimits({ prescription: p, scanner }: Case): Reason[] {
     ['Phase', p.fovPhaseMm],
     ['Readout', p.fovReadoutMm],
   ] as const) {
-    if (over(fov, limits.fovMaxMm)) add('fov-over-maximum', `${name} FOV ${figure(fov)} mm is over this scanner's ${figure(limits.fovMaxMm)} mm.`);
-    if (over(limits.fovMinMm, fov)) add('fov-under-minimum', `${name} FOV ${figure(fov)} mm is under this scanner's ${figure(limits.fovMinMm)} mm.`);
+    if (over(fov, limits.fovMaxMm))
+      add(
+        'fov-over-maximum',
+        `${name} FOV ${figure(fov)} mm is over this scanner's ${figure(limits.fovMaxMm)} mm.`,
+      );
+    if (over(limits.fovMinMm, fov))
+      add(
+        'fov-under-minimum',
+        `${name} FOV ${figure(fov)} mm is under this scanner's ${figure(limits.fovMinMm)} mm.`,
+      );
   }
   if (!scanner.phaseFovMayExceedReadoutFov && over(p.fovPhaseMm, p.fovReadoutMm)) {
     add(
@@ -29,13 +36,23 @@ function samplingLimits({ prescription: p, scanner }: Case): Reason[] {
     );
   }
   const matrix = Math.max(p.linesAcrossFov, p.readoutMatrix);
-  if (over(matrix, limits.matrixMax)) add('matrix-over-maximum', `Matrix ${matrix} is over this scanner's ${limits.matrixMax}.`);
+  if (over(matrix, limits.matrixMax))
+    add('matrix-over-maximum', `Matrix ${matrix} is over this scanner's ${limits.matrixMax}.`);
   if (over(p.acquiredLines, limits.acquiredLinesMax)) {
-    add('lines-over-maximum', `${p.acquiredLines} acquired lines are over this scanner's ${limits.acquiredLinesMax}.`);
+    add(
+      'lines-over-maximum',
+      `${p.acquiredLines} acquired lines are over this scanner's ${limits.acquiredLinesMax}.`,
+    );
   }
   const phasePct = (p.acquiredLines / p.linesAcrossFov - 1) * 100;
-  if (p.acquiredLines <= limits.acquiredLinesMax && p.acquiredLines > mostAcquiredLines(p.linesAcrossFov, limits)) {
-    add('phase-oversampling-over-maximum', `Phase oversampling ${figure(phasePct)} % is over this scanner's ${figure(limits.phaseOversamplingMaxPct)} %.`);
+  if (
+    p.acquiredLines <= limits.acquiredLinesMax &&
+    p.acquiredLines > mostAcquiredLines(p.linesAcrossFov, limits)
+  ) {
+    add(
+      'phase-oversampling-over-maximum',
+      `Phase oversampling ${figure(phasePct)} % is over this scanner's ${figure(limits.phaseOversamplingMaxPct)} %.`,
+    );
   }
   if (!isOnLineGrid(p.acquiredLines, p.linesAcrossFov, scanner.lineStep)) {
     add('lines-off-grid', `${p.acquiredLines} acquired lines are not on this scanner's own step.`);
@@ -43,7 +60,10 @@ function samplingLimits({ prescription: p, scanner }: Case): Reason[] {
   if (p.slices.mode === 'slab') {
     const slicePct = (p.slices.acquiredPartitions / p.slices.partitions - 1) * 100;
     if (over(slicePct, limits.sliceOversamplingMaxPct)) {
-      add('slice-oversampling-over-maximum', `Slice oversampling ${figure(slicePct)} % is over this scanner's ${figure(limits.sliceOversamplingMaxPct)} %.`);
+      add(
+        'slice-oversampling-over-maximum',
+        `Slice oversampling ${figure(slicePct)} % is over this scanner's ${figure(limits.sliceOversamplingMaxPct)} %.`,
+      );
     }
   }
   return reasons;
@@ -55,24 +75,38 @@ function speedLimits({ prescription: p, scanner }: Case, time: TimeResult | unde
   const add = (code: string, text: string): void => void reasons.push({ code, text });
   const { factorPhase, factorSlice } = p.acceleration;
   if (over(factorPhase, limits.accelerationPhaseMax)) {
-    add('acceleration-over-maximum', `Acceleration ${figure(factorPhase)} along phase is over this scanner's ${figure(limits.accelerationPhaseMax)}.`);
+    add(
+      'acceleration-over-maximum',
+      `Acceleration ${figure(factorPhase)} along phase is over this scanner's ${figure(limits.accelerationPhaseMax)}.`,
+    );
   }
   if (over(factorSlice, limits.accelerationSliceMax)) {
-    add('acceleration-over-maximum', `Acceleration ${figure(factorSlice)} along slice is over this scanner's ${figure(limits.accelerationSliceMax)}.`);
+    add(
+      'acceleration-over-maximum',
+      `Acceleration ${figure(factorSlice)} along slice is over this scanner's ${figure(limits.accelerationSliceMax)}.`,
+    );
   }
   const fraction = Math.min(p.partialFourierPhase, p.partialFourierSlice);
   if (over(limits.partialFourierMin, fraction)) {
-    add('partial-fourier-under-minimum', `Partial Fourier ${fraction.toFixed(3)} is under this scanner's ${limits.partialFourierMin.toFixed(3)}.`);
+    add(
+      'partial-fourier-under-minimum',
+      `Partial Fourier ${fraction.toFixed(3)} is under this scanner's ${limits.partialFourierMin.toFixed(3)}.`,
+    );
   }
-  if (over(p.averages, limits.averagesMax)) add('averages-over-maximum', `${p.averages} averages are over this scanner's ${limits.averagesMax}.`);
+  if (over(p.averages, limits.averagesMax))
+    add('averages-over-maximum', `${p.averages} averages are over this scanner's ${limits.averagesMax}.`);
   const echoes = echoesInTrain(p, time);
-  if (over(echoes, limits.echoTrainMax)) add('train-over-maximum', `A train of ${echoes} echoes is over this scanner's ${limits.echoTrainMax}.`);
+  if (over(echoes, limits.echoTrainMax))
+    add('train-over-maximum', `A train of ${echoes} echoes is over this scanner's ${limits.echoTrainMax}.`);
   const trMs = minimumTrMs(p);
   if (p.breathing !== 'triggered' && over(trMs, p.trMs)) {
     add('tr-under-minimum', `TR ${figure(p.trMs)} ms is under the ${figure(trMs)} ms this needs.`);
   }
   if (time?.minimumTeMs !== undefined && over(time.minimumTeMs, p.teMs)) {
-    add('te-under-minimum', `TE ${figure(p.teMs)} ms is under the ${figure(time.minimumTeMs)} ms this echo train needs.`);
+    add(
+      'te-under-minimum',
+      `TE ${figure(p.teMs)} ms is under the ${figure(time.minimumTeMs)} ms this echo train needs.`,
+    );
   }
   return reasons;
 }
@@ -92,7 +126,10 @@ function echoesInTrain(p: Prescription, time: TimeResult | undefined): number {
   }
 }
 
-function patientLimits({ patient, prescription, scanner, policy }: Case, time: TimeResult | undefined): Reason[] {
+function patientLimits(
+  { patient, prescription, scanner, policy }: Case,
+  time: TimeResult | undefined,
+): Reason[] {
   const reasons: Reason[] = [];
   const weight = patient.weightKg?.value;
   if (weight !== undefined && over(weight, scanner.limits.tableLimitKg)) {
@@ -102,7 +139,11 @@ function patientLimits({ patient, prescription, scanner, policy }: Case, time: T
     });
   }
   const hold = time?.longestHoldS ?? 0;
-  if (policy.strictBreathHold && prescription.breathing === 'breath-hold' && over(hold, patient.breathHoldS.value)) {
+  if (
+    policy.strictBreathHold &&
+    prescription.breathing === 'breath-hold' &&
+    over(hold, patient.breathHoldS.value)
+  ) {
     reasons.push({
       code: 'breath-hold-over-limit',
       text: `A breath-hold of ${figure(hold)} s is over the ${figure(patient.breathHoldS.value)} s this patient can hold.`,

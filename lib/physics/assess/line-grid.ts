@@ -11,11 +11,15 @@ export function floorToLineGrid(lines: number, linesAcrossFov: number, step: Lin
 
 /** Whether L is a value the scanner can be set to. L = N always is: an odd N on an even-line grid is its own start. */
 export const isOnLineGrid = (acquiredLines: number, linesAcrossFov: number, step: LineStep): boolean =>
-  acquiredLines === linesAcrossFov || nextAcquiredLines(linesAcrossFov, acquiredLines, step) === acquiredLines;
+  acquiredLines === linesAcrossFov ||
+  nextAcquiredLines(linesAcrossFov, acquiredLines, step) === acquiredLines;
 
 /**
  * Most lines the scanner takes: its maximum percentage rounded up to whole lines is still that percentage
  * (33.3 % of 100 lines is 134).
  */
 export const mostAcquiredLines = (linesAcrossFov: number, limits: ScannerLimits): number =>
-  Math.min(limits.acquiredLinesMax, Math.ceil(linesAcrossFov * (1 + limits.phaseOversamplingMaxPct / 100) - 1e-9));
+  Math.min(
+    limits.acquiredLinesMax,
+    Math.ceil(linesAcrossFov * (1 + limits.phaseOversamplingMaxPct / 100) - 1e-9),
+  );

@@ -6,7 +6,8 @@ const TRAJECTORY_WORDS: Readonly<Record<Exclude<Trajectory, 'cartesian'>, string
   spiral: 'Spiral sampling blurs and rings instead of folding',
   'rotating-blade': 'Rotating-blade sampling folds differently in every blade',
   'simultaneous-multi-slice': 'Slices excited together mix with one another before they fold',
-  'outer-volume-suppressed': 'A small FOV with outer-volume suppression depends on how well the suppression works',
+  'outer-volume-suppressed':
+    'A small FOV with outer-volume suppression depends on how well the suppression works',
 };
 
 /** Why this prescription is answered "not modelled"; never read as "no fold". Undefined: it is modelled. */

@@ -18,7 +18,10 @@ function prismEnds(shape: Exclude<PartShape, { type: 'ellipsoid' }>, given: Case
   const { isocentreZMm, tissueReachMm } = reachAlongZ(given);
   const reach = shape.along === 'z' ? tissueReachMm : given.scanner.tissueReachMm;
   const middle = shape.along === 'z' ? isocentreZMm : 0;
-  return [Math.max(shape.fromMm ?? -Infinity, middle - reach), Math.min(shape.toMm ?? Infinity, middle + reach)];
+  return [
+    Math.max(shape.fromMm ?? -Infinity, middle - reach),
+    Math.min(shape.toMm ?? Infinity, middle + reach),
+  ];
 }
 
 /** Half-extent of an ellipse with semi-axes a, b turned by θ along the unit direction (u, v): √((a·u′)² + (b·v′)²). */
@@ -47,7 +50,10 @@ export function partAlong(part: SolidPart, direction: Vec3, given: Case): RangeM
     const across = shape.rings.flat().map(([u, v]) => u * direction[first] + v * direction[second]);
     return [Math.min(...across) + lowEnd, Math.max(...across) + highEnd];
   }
-  const flat = add(shape.centreMm, UNIT[along]!.map((unit) => -unit * shape.centreMm[along]) as unknown as Vec3);
+  const flat = add(
+    shape.centreMm,
+    UNIT[along]!.map((unit) => -unit * shape.centreMm[along]) as unknown as Vec3,
+  );
   const centre = dot(flat, direction);
   // Right-handed about y turns z towards x, which is backwards in the order (x, z).
   const turn = (shape.along === 'y' ? -1 : 1) * (shape.rotationDeg ?? 0);

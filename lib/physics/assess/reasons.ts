@@ -2,7 +2,15 @@ import type { FoldResult, Reason, SlabResult, Verdict, WidthRequirement } from '
 import { AXIS_SIDES } from '../geometry/vector';
 import type { PatientAxis, Side } from '../model/axes';
 import type { Prescription } from '../model/prescription';
-import { AXIS_LETTERS, capitalised, figure, millimetres, OPPOSITE_SIDE, percentBeyond, squareCentimetres } from './words';
+import {
+  AXIS_LETTERS,
+  capitalised,
+  figure,
+  millimetres,
+  OPPOSITE_SIDE,
+  percentBeyond,
+  squareCentimetres,
+} from './words';
 
 /** "Posterior tissue": the trunk goes by its side, every other part by its name. */
 function intruder(from: NonNullable<FoldResult['from']>): string {
@@ -11,7 +19,8 @@ function intruder(from: NonNullable<FoldResult['from']>): string {
 
 /** How far the fold reaches, saying which figure counts the margin. */
 function depthWords(fold: FoldResult): string {
-  if (fold.depthMm <= 0) return `only within the margin, ${millimetres(fold.depthWithMarginMm)} deep with margin`;
+  if (fold.depthMm <= 0)
+    return `only within the margin, ${millimetres(fold.depthWithMarginMm)} deep with margin`;
   return `${millimetres(fold.depthWithMarginMm)} deep with margin`;
 }
 
@@ -24,16 +33,21 @@ function foldInReason(fold: FoldResult): Reason {
       text: `${where} lies beyond the acquired width, and unfolding leaves ghosts of it in the keep-clear area.`,
     };
   }
-  const lands = from === undefined ? 'lands in the keep-clear area' : `lands on the ${OPPOSITE_SIDE[from.side]} side`;
+  const lands =
+    from === undefined ? 'lands in the keep-clear area' : `lands on the ${OPPOSITE_SIDE[from.side]} side`;
   const place = fold.placeUncertain ? ' Beyond the usable FOV its place is uncertain.' : '';
   return { code: 'fold-in-keep-clear', text: `${where} ${lands}, ${depthWords(fold)}.${place}` };
 }
 
 function foldOutsideReason(fold: FoldResult): Reason {
   const { from } = fold;
-  const where = from === undefined ? 'Tissue lands' : `${intruder(from)} lands on the ${OPPOSITE_SIDE[from.side]} side,`;
+  const where =
+    from === undefined ? 'Tissue lands' : `${intruder(from)} lands on the ${OPPOSITE_SIDE[from.side]} side,`;
   const share = squareCentimetres(fold.displayedAreaMm2);
-  return { code: 'fold-outside-keep-clear', text: `${where} outside the keep-clear area: ${share} of the picture.` };
+  return {
+    code: 'fold-outside-keep-clear',
+    text: `${where} outside the keep-clear area: ${share} of the picture.`,
+  };
 }
 
 function slabReason(slab: SlabResult): Reason {
@@ -51,7 +65,10 @@ function enoughReason(p: Prescription, width: WidthRequirement): Reason {
   const cover = percentBeyond(Math.max(width.coverBodyMm, p.fovPhaseMm), p.fovPhaseMm);
   const lines = width.firstCleanLines;
   if (!Number.isFinite(width.firstCleanMm)) {
-    return { code: 'wraps-along-slab', text: 'No phase oversampling is enough while tissue wraps along the slab.' };
+    return {
+      code: 'wraps-along-slab',
+      text: 'No phase oversampling is enough while tissue wraps along the slab.',
+    };
   }
   if (lines === undefined) {
     return {
@@ -92,10 +109,18 @@ export interface ReasonInputs {
 }
 
 /** The sentences beside the verdict, the deciding one first. */
-export function reasonsFor({ hard, prescription, width, fold, slab, keepClearIsDisplayed }: ReasonInputs): readonly Reason[] {
+export function reasonsFor({
+  hard,
+  prescription,
+  width,
+  fold,
+  slab,
+  keepClearIsDisplayed,
+}: ReasonInputs): readonly Reason[] {
   const reasons: Reason[] = [...hard];
   const slabInside = (slab?.contaminatedInKeepClear ?? 0) > 0;
-  const alongSlab = slabInside && fold?.from !== undefined && !sidesOf(prescription.phaseAxis).includes(fold.from.side);
+  const alongSlab =
+    slabInside && fold?.from !== undefined && !sidesOf(prescription.phaseAxis).includes(fold.from.side);
   if (fold?.inKeepClear && !alongSlab) reasons.push(foldInReason(fold));
   if (slab !== undefined && slabInside) reasons.push(slabReason(slab));
   if (fold?.outsideKeepClear && !fold.inKeepClear) reasons.push(foldOutsideReason(fold));
@@ -105,7 +130,10 @@ export function reasonsFor({ hard, prescription, width, fold, slab, keepClearIsD
     reasons.push(folds ? enoughReason(prescription, width) : noFoldReason(prescription, width));
   }
   if (!keepClearIsDisplayed) {
-    reasons.push({ code: 'keep-clear-not-displayed', text: 'The keep-clear area lies outside every displayed slice.' });
+    reasons.push({
+      code: 'keep-clear-not-displayed',
+      text: 'The keep-clear area lies outside every displayed slice.',
+    });
   }
   return reasons;
 }

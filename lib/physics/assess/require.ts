@@ -1,9 +1,20 @@
 import { DomainError } from '../model/domain-error';
 
 /** Throws a DomainError naming the argument unless low ≤ value ≤ high and value is finite. */
-export function requireBetween(argument: string, value: number, low: number, high: number, unit: string): void {
+export function requireBetween(
+  argument: string,
+  value: number,
+  low: number,
+  high: number,
+  unit: string,
+): void {
   if (!Number.isFinite(value) || value < low || value > high) {
-    throw new DomainError('out-of-range', argument, value, `${low} to ${high}${unit === '' ? '' : ` ${unit}`}`);
+    throw new DomainError(
+      'out-of-range',
+      argument,
+      value,
+      `${low} to ${high}${unit === '' ? '' : ` ${unit}`}`,
+    );
   }
 }
 
@@ -19,6 +30,12 @@ export function requireOneOf(argument: string, value: unknown, allowed: readonly
   }
 }
 
-export function requireThat(holds: boolean, code: string, argument: string, given: unknown, allowed: string): void {
+export function requireThat(
+  holds: boolean,
+  code: string,
+  argument: string,
+  given: unknown,
+  allowed: string,
+): void {
   if (!holds) throw new DomainError(code, argument, given, allowed);
 }

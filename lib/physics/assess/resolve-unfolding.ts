@@ -11,7 +11,10 @@ export function unfoldingOf({ prescription, scanner }: Pick<Case, 'prescription'
 }
 
 /** The prescription as the geometry takes it: unknown unfolding becomes the cautious one, a grid that ends at W. */
-export function withUnfolding(given: Pick<Case, 'prescription' | 'scanner'>, unfolding: Unfolding): Prescription {
+export function withUnfolding(
+  given: Pick<Case, 'prescription' | 'scanner'>,
+  unfolding: Unfolding,
+): Prescription {
   const { prescription } = given;
   const used = unfolding === 'unknown' ? 'image-domain-grid-ends' : unfolding;
   if (prescription.acceleration.unfolding === used) return prescription;

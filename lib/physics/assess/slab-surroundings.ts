@@ -25,5 +25,8 @@ function tissueAlongSlab(given: FrozenCase, frame: SectionFrame): RangeMm {
 /** What surrounds a slab: tissue and keep-clear area along its slice axis. */
 export function slabSurroundings(given: FrozenCase): SlabSurroundings {
   const frame = sectionFrame(given.prescription, 0);
-  return { tissue: { rangeMm: tissueAlongSlab(given, frame) }, keepClearMm: keepClearAlongSlab(given, frame) };
+  return {
+    tissue: { rangeMm: tissueAlongSlab(given, frame) },
+    keepClearMm: keepClearAlongSlab(given, frame),
+  };
 }

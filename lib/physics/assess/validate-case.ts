@@ -11,7 +11,13 @@ import { validatePrescription } from './validate-prescription';
 function validateRange(argument: string, range: RangeMm): void {
   requireBetween(argument, range[0], -2000, 2000, 'mm');
   requireBetween(argument, range[1], -2000, 2000, 'mm');
-  requireThat(range[0] <= range[1], 'range-reversed', argument, `${range[0]} to ${range[1]}`, 'low first, then high');
+  requireThat(
+    range[0] <= range[1],
+    'range-reversed',
+    argument,
+    `${range[0]} to ${range[1]}`,
+    'low first, then high',
+  );
 }
 
 function validateBox(argument: string, box: PatientBox): void {
@@ -23,7 +29,8 @@ function validateBox(argument: string, box: PatientBox): void {
 function validateKeepClear(keepClear: KeepClear): void {
   requireOneOf('keepClear.area.kind', keepClear.area.kind, ['whole-picture', 'box']);
   if (keepClear.area.kind === 'box') validateBox('keepClear.area.box', keepClear.area.box);
-  if (keepClear.mustStayDisplayed !== undefined) validateBox('keepClear.mustStayDisplayed', keepClear.mustStayDisplayed);
+  if (keepClear.mustStayDisplayed !== undefined)
+    validateBox('keepClear.mustStayDisplayed', keepClear.mustStayDisplayed);
 }
 
 function validateScanner(scanner: Scanner): void {
@@ -69,7 +76,9 @@ function validatePolicy(policy: SitePolicy): void {
   requireBetween('policy.tolerateFoldOutsidePct', policy.tolerateFoldOutsidePct, 0, 100, '%');
   for (const [name, weight] of Object.entries(policy.weights)) {
     if (typeof weight === 'number') requireBetween(`policy.weights.${name}`, weight, 0, 100_000, 'points');
-    else for (const [region, price] of Object.entries(weight)) requireBetween(`policy.weights.${name}.${region}`, price as number, 0, 100_000, 'points');
+    else
+      for (const [region, price] of Object.entries(weight))
+        requireBetween(`policy.weights.${name}.${region}`, price as number, 0, 100_000, 'points');
   }
 }
 

@@ -14,7 +14,13 @@ function validateReading(argument: string, reading: Reading, low: number, high: 
 
 function validateShape(argument: string, shape: PartShape): void {
   if (shape.type === 'outline-prism') {
-    requireThat(shape.rings.length > 0, 'no-outline', `${argument}.rings`, 'no ring', 'at least one closed ring');
+    requireThat(
+      shape.rings.length > 0,
+      'no-outline',
+      `${argument}.rings`,
+      'no ring',
+      'at least one closed ring',
+    );
     shape.rings.forEach((ring, index) => {
       const name = `${argument}.rings[${index}]`;
       requireThat(ring.length >= 3, 'outline-too-short', name, `${ring.length} points`, 'at least 3 points');
@@ -25,7 +31,8 @@ function validateShape(argument: string, shape: PartShape): void {
     });
   } else {
     shape.centreMm.forEach((value) => requireBetween(`${argument}.centreMm`, value, -2000, 2000, 'mm'));
-    for (const semiAxis of shape.semiAxesMm) requireBetween(`${argument}.semiAxesMm`, semiAxis, 0.1, 2000, 'mm');
+    for (const semiAxis of shape.semiAxesMm)
+      requireBetween(`${argument}.semiAxesMm`, semiAxis, 0.1, 2000, 'mm');
   }
   if (shape.type === 'ellipsoid') return;
   requireOneOf(`${argument}.along`, shape.along, ['x', 'y', 'z']);
@@ -63,5 +70,11 @@ export function validatePatient(patient: Patient): void {
   if (patient.parts === undefined) return;
   patient.parts.forEach((part, index) => validatePart(`patient.parts[${index}]`, part));
   const names = new Set(patient.parts.map((part) => part.name));
-  requireThat(names.size === patient.parts.length, 'name-repeated', 'patient.parts', 'a repeated name', 'one name a part');
+  requireThat(
+    names.size === patient.parts.length,
+    'name-repeated',
+    'patient.parts',
+    'a repeated name',
+    'one name a part',
+  );
 }

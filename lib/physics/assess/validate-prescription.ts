@@ -32,8 +32,14 @@ function validateSlab(slab: Slab): void {
   if (slab.timeBandwidthProduct !== undefined) {
     requireBetween(`${at}.timeBandwidthProduct`, slab.timeBandwidthProduct, 1, 64, '');
   }
-  if (slab.pulseDurationMs !== undefined) requireBetween(`${at}.pulseDurationMs`, slab.pulseDurationMs, 0.01, 50, 'ms');
-  requireWhole(`${at}.droppedPartitionsPerEnd`, slab.droppedPartitionsPerEnd, 0, Math.floor((slab.partitions - 1) / 2));
+  if (slab.pulseDurationMs !== undefined)
+    requireBetween(`${at}.pulseDurationMs`, slab.pulseDurationMs, 0.01, 50, 'ms');
+  requireWhole(
+    `${at}.droppedPartitionsPerEnd`,
+    slab.droppedPartitionsPerEnd,
+    0,
+    Math.floor((slab.partitions - 1) / 2),
+  );
 }
 
 function validateAcceleration(acceleration: Acceleration, p: Prescription): void {
@@ -44,7 +50,8 @@ function validateAcceleration(acceleration: Acceleration, p: Prescription): void
   requireWhole(`${at}.referenceLines`, acceleration.referenceLines, 0, 1024);
   requireWhole(`${at}.referencePartitions`, acceleration.referencePartitions, 0, 1024);
   requireBetween(`${at}.calibrationS`, acceleration.calibrationS, 0, 600, 's');
-  if (acceleration.geometryFactor !== undefined) requireBetween(`${at}.geometryFactor`, acceleration.geometryFactor, 1, 20, '');
+  if (acceleration.geometryFactor !== undefined)
+    requireBetween(`${at}.geometryFactor`, acceleration.geometryFactor, 1, 20, '');
   requireThat(
     acceleration.factorSlice === 1 || p.slices.mode === 'slab',
     'slice-acceleration-of-a-stack',

@@ -1,13 +1,16 @@
 import type { PatientAxis, Side } from '../model/axes';
 
 /** At most one decimal, without a trailing zero. */
-export const figure = (value: number): string => (Math.round(value * 10 + 1e-6) / 10).toFixed(1).replace(/\.0$/, '');
+export const figure = (value: number): string =>
+  (Math.round(value * 10 + 1e-6) / 10).toFixed(1).replace(/\.0$/, '');
 
 /** Whole millimetres, never "0" for something that is there. */
-export const millimetres = (value: number): string => (value > 0 && value < 1 ? 'under 1 mm' : `${Math.round(value)} mm`);
+export const millimetres = (value: number): string =>
+  value > 0 && value < 1 ? 'under 1 mm' : `${Math.round(value)} mm`;
 
 /** Share of the nominal FOV or slab acquired beyond it, in percent. */
-export const percentBeyond = (acquired: number, nominal: number): string => `${figure((acquired / nominal - 1) * 100)} %`;
+export const percentBeyond = (acquired: number, nominal: number): string =>
+  `${figure((acquired / nominal - 1) * 100)} %`;
 
 export const OPPOSITE_SIDE: Readonly<Record<Side, Side>> = {
   right: 'left',

@@ -9,7 +9,10 @@ export interface ReachAlongZ {
 }
 
 /** The prescription's coil, where the site has described its elements. */
-export const describedCoil = ({ prescription, scanner }: Pick<Case, 'prescription' | 'scanner'>): CoilDescription | undefined =>
+export const describedCoil = ({
+  prescription,
+  scanner,
+}: Pick<Case, 'prescription' | 'scanner'>): CoilDescription | undefined =>
   scanner.coils?.find((coil) => coil.name === prescription.coil);
 
 /**
@@ -22,7 +25,8 @@ export function reachAlongZ(given: Pick<Case, 'patient' | 'prescription' | 'scan
   const coil = describedCoil(given);
   const used = given.prescription.coilElements;
   if (coil === undefined || used === undefined) return whole;
-  if (used.length === 0) throw new DomainError('no-coil-element', 'prescription.coilElements', 'none', 'at least one element');
+  if (used.length === 0)
+    throw new DomainError('no-coil-element', 'prescription.coilElements', 'none', 'at least one element');
   const elements = used.map((name) => {
     const element = coil.elements.find((candidate) => candidate.name === name);
     if (element !== undefined) return element;
@@ -31,6 +35,12 @@ export function reachAlongZ(given: Pick<Case, 'patient' | 'prescription' | 'scan
   });
   const low = Math.max(-whole.tissueReachMm, Math.min(...elements.map((element) => element.seesFromMm)));
   const high = Math.min(whole.tissueReachMm, Math.max(...elements.map((element) => element.seesToMm)));
-  if (!(low < high)) throw new DomainError('no-coil-element', 'prescription.coilElements', used.join(', '), 'elements that see something');
+  if (!(low < high))
+    throw new DomainError(
+      'no-coil-element',
+      'prescription.coilElements',
+      used.join(', '),
+      'elements that see something',
+    );
   return { isocentreZMm: whole.isocentreZMm + (low + high) / 2, tissueReachMm: (high - low) / 2 };
 }

@@ -46,7 +46,8 @@ function threshold(folds: (draw: number) => boolean): number {
 
 /** Only a trunk: it grows about what it covers, so fold once begun stays. */
 const onlyGrows = ({ patient }: Case): boolean =>
-  isTrunkOnly(patient) && (patient.arms.position === 'up' || patient.arms.breadthMm * patient.arms.depthMm === 0);
+  isTrunkOnly(patient) &&
+  (patient.arms.position === 'up' || patient.arms.breadthMm * patient.arms.depthMm === 0);
 
 /** Whether moving the other variables leaves the first one's threshold where it is. */
 function decidesAlone(folds: Folds, variables: readonly SizeVariable[], which: number): number | undefined {

@@ -43,7 +43,8 @@ export function normalCumulative(x: number): number {
  * down to p = 1e-12.
  */
 export function normalQuantile(p: number): number {
-  if (!(p > 0 && p < 1)) throw new DomainError('probability-out-of-range', 'p', p, 'more than 0 and less than 1');
+  if (!(p > 0 && p < 1))
+    throw new DomainError('probability-out-of-range', 'p', p, 'more than 0 and less than 1');
   if (p < 0.5) return -normalQuantile(1 - p);
   let z = Math.min(7, Math.log(p / (1 - p)) / 1.702);
   for (let step = 0; step < 60; step++) {

@@ -29,12 +29,20 @@ export function sizeVariables(patient: Patient): readonly SizeVariable[] {
 }
 
 /** The patient with each variable at its number of spreads from the mean; spread itself then counts no more. */
-export function patientAtDraw(patient: Patient, variables: readonly SizeVariable[], draws: readonly number[]): Patient {
+export function patientAtDraw(
+  patient: Patient,
+  variables: readonly SizeVariable[],
+  draws: readonly number[],
+): Patient {
   const extents: Record<Side, Reading> = { ...patient.extents };
   variables.forEach((sides, index) => {
     for (const side of sides) {
       const { value, spread } = patient.extents[side];
-      extents[side] = { ...patient.extents[side], value: Math.max(LEAST_EXTENT_MM, value + (draws[index] ?? 0) * spread), spread: 0 };
+      extents[side] = {
+        ...patient.extents[side],
+        value: Math.max(LEAST_EXTENT_MM, value + (draws[index] ?? 0) * spread),
+        spread: 0,
+      };
     }
   });
   return { ...patient, extents };

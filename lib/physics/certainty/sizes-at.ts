@@ -4,7 +4,10 @@ import type { Patient, Reading } from '../model/patient';
 import { normalQuantile } from './normal';
 
 // A pure cache, so that asking twice gives the same object and caches by identity still hit.
-const grownExtents = new WeakMap<Patient['extents'], { readonly sureAt: number; readonly extents: Patient['extents'] }>();
+const grownExtents = new WeakMap<
+  Patient['extents'],
+  { readonly sureAt: number; readonly extents: Patient['extents'] }
+>();
 
 function extentsAt(extents: Patient['extents'], sureAt: number): Patient['extents'] {
   const known = grownExtents.get(extents);

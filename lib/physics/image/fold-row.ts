@@ -10,7 +10,13 @@ export interface RowSampling {
 }
 
 /** Adds `signal` to every pixel in proportion to how much of it [fromMm, toMm] covers; what lies outside F is cropped. */
-function cover(row: Float64Array, { centreMm, fovMm, pixels }: RowSampling, fromMm: number, toMm: number, signal: number): void {
+function cover(
+  row: Float64Array,
+  { centreMm, fovMm, pixels }: RowSampling,
+  fromMm: number,
+  toMm: number,
+  signal: number,
+): void {
   const scale = pixels / fovMm;
   const low = Math.max(0, (fromMm - centreMm + fovMm / 2) * scale);
   const high = Math.min(pixels, (toMm - centreMm + fovMm / 2) * scale);
@@ -34,7 +40,13 @@ function cover(row: Float64Array, { centreMm, fovMm, pixels }: RowSampling, from
  * @param signal brightness of a fully covered pixel
  * Source: fold(p) = c + ((p − c + W/2) mod W) − W/2, [bernstein-2004]; ghosts [griswold-2004].
  */
-export function foldOntoRow(row: Float64Array, sampling: RowSampling, fromMm: number, toMm: number, signal: number): void {
+export function foldOntoRow(
+  row: Float64Array,
+  sampling: RowSampling,
+  fromMm: number,
+  toMm: number,
+  signal: number,
+): void {
   const { centreMm, widthMm, ghostFactor } = sampling;
   const start = centreMm - widthMm / 2;
   const first = Math.floor((fromMm - start) / widthMm);

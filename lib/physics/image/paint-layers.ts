@@ -78,7 +78,13 @@ function measureOf({ shape }: SolidPart): PartMeasure | undefined {
 
 /** The muscle wall inside the rim of fat; organs are measured in it. */
 function wallOf(measure: PartMeasure, kind: PartKind): PartMeasure {
-  if (kind === 'head') return { ...measure, halfX: measure.halfX * 0.95, halfY: measure.halfY * 0.96, ...(measure.halfZ ? { halfZ: measure.halfZ * 0.96 } : {}) };
+  if (kind === 'head')
+    return {
+      ...measure,
+      halfX: measure.halfX * 0.95,
+      halfY: measure.halfY * 0.96,
+      ...(measure.halfZ ? { halfZ: measure.halfZ * 0.96 } : {}),
+    };
   const rim = rimOf(measure);
   const limb = kind === 'arm' || kind === 'leg' ? 0.8 : 1;
   return {
@@ -91,7 +97,13 @@ function wallOf(measure: PartMeasure, kind: PartKind): PartMeasure {
 }
 
 /** An ellipsoid, or a cylinder along z where it has no length of its own. */
-function quadric(centre: Quadric['centre'], halfX: number, halfY: number, halfZ: number | undefined, turnDeg: number): Quadric {
+function quadric(
+  centre: Quadric['centre'],
+  halfX: number,
+  halfY: number,
+  halfZ: number | undefined,
+  turnDeg: number,
+): Quadric {
   const [c, s] = cosSin(turnDeg);
   const ia = 1 / (halfX * halfX);
   const ib = 1 / (halfY * halfY);
@@ -124,7 +136,8 @@ function organSolid(organ: Organ, wall: PartMeasure): ConvexSolid {
 }
 
 /** What a part's skin side is painted with. */
-const rimTissue = (kind: PartKind, drawnInside: boolean): Tissue => (kind === 'nose' ? 'cartilage' : drawnInside ? 'fat' : 'muscle');
+const rimTissue = (kind: PartKind, drawnInside: boolean): Tissue =>
+  kind === 'nose' ? 'cartilage' : drawnInside ? 'fat' : 'muscle';
 
 /** Parts that reach into others are painted first: the neck ends inside the head, the nose in the face. */
 const PAINT_ORDER: readonly PartKind[] = ['other', 'trunk', 'arm', 'leg', 'breast', 'nose', 'head'];
@@ -145,14 +158,26 @@ export function paintLayers(given: Case, frame: SectionFrame): readonly PaintLay
   const layersOf = (part: SolidPart, index: number): readonly PaintLayer[] => {
     const measure = measureOf(part);
     const weight = part.signalWeight;
-    const layer = (solid: ConvexSolid, tissue: Tissue): PaintLayer => ({ solid: solidInSection(solid, frame), tissue, weight });
-    const own = seen.filter((piece) => piece.part === index).map((piece) => layer(piece.solid, rimTissue(part.kind, measure !== undefined)));
+    const layer = (solid: ConvexSolid, tissue: Tissue): PaintLayer => ({
+      solid: solidInSection(solid, frame),
+      tissue,
+      weight,
+    });
+    const own = seen
+      .filter((piece) => piece.part === index)
+      .map((piece) => layer(piece.solid, rimTissue(part.kind, measure !== undefined)));
     if (measure === undefined) return own;
     const wall = wallOf({ ...measure, ends: [...measure.ends, ...zEnds] }, part.kind);
     const inside = organsOf(part.kind, part.name, patient.region);
     if (inside.length === 0) return own;
     const wallTissue: Tissue = part.kind === 'head' ? 'cortex' : part.kind === 'breast' ? 'fat' : 'muscle';
-    const wallLayer = layer({ quadric: quadric([wall.x, wall.y, wall.z], wall.halfX, wall.halfY, wall.halfZ, 0), halfSpaces: wall.ends }, wallTissue);
+    const wallLayer = layer(
+      {
+        quadric: quadric([wall.x, wall.y, wall.z], wall.halfX, wall.halfY, wall.halfZ, 0),
+        halfSpaces: wall.ends,
+      },
+      wallTissue,
+    );
     return [...own, wallLayer, ...inside.map((organ) => layer(organSolid(organ, wall), organ.tissue))];
   };
   return parts

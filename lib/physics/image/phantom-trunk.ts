@@ -8,14 +8,19 @@ import { bothSides, organ, type Organ } from './phantom';
 const spine: readonly Organ[] = [
   organ('cortex', [0, 0.34], [0.16, 0.2]),
   organ('marrow', [0, 0.34], [0.145, 0.185]),
-  ...[-190, -155, -120, -85, -50, -15, 20, 55, 90, 125, 160, 195].map((z) => organ('disc', [0, 0.34], [0.145, 0.185], [z, 6])),
+  ...[-190, -155, -120, -85, -50, -15, 20, 55, 90, 125, 160, 195].map((z) =>
+    organ('disc', [0, 0.34], [0.145, 0.185], [z, 6]),
+  ),
   organ('cortex', [0, 0.66], [0.1, 0.18]),
   organ('fluid', [0, 0.575], [0.055, 0.065]),
   organ('white-matter', [0, 0.58], [0.028, 0.03]),
   organ('marrow', [0, 0.78], [0.03, 0.08]),
 ];
 
-const backMuscles = [...bothSides(organ('muscle', [0.24, 0.72], [0.2, 0.17], undefined, -12)), ...bothSides(organ('muscle', [0.24, 0.42], [0.09, 0.12]))];
+const backMuscles = [
+  ...bothSides(organ('muscle', [0.24, 0.72], [0.2, 0.17], undefined, -12)),
+  ...bothSides(organ('muscle', [0.24, 0.42], [0.09, 0.12])),
+];
 
 export const abdomenOrgans: readonly Organ[] = [
   organ('fat', [0, -0.02], [0.92, 0.88]),

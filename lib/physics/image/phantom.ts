@@ -20,7 +20,13 @@ export const organ = (
   half: readonly [number, number],
   z?: readonly [number, number],
   turnDeg?: number,
-): Organ => ({ tissue, at, half, ...(z === undefined ? {} : { z }), ...(turnDeg === undefined ? {} : { turnDeg }) });
+): Organ => ({
+  tissue,
+  at,
+  half,
+  ...(z === undefined ? {} : { z }),
+  ...(turnDeg === undefined ? {} : { turnDeg }),
+});
 
 /** The same organ on the other side. */
 export const mirrored = (one: Organ): Organ => ({
@@ -40,6 +46,7 @@ export interface Rim {
 
 /** How thick the rim of fat is: a quarter of what a half-length exceeds 120 mm by, at least 12 mm. */
 export function rimOf({ halfX, halfY }: Pick<PartBox, 'halfX' | 'halfY'>): Rim {
-  const rim = (half: number, share: number): number => Math.min(0.3 * half, 12 + share * Math.max(0, half - 120));
+  const rim = (half: number, share: number): number =>
+    Math.min(0.3 * half, 12 + share * Math.max(0, half - 120));
   return { sideMm: rim(halfX, 0.28), frontMm: rim(halfY, 0.42), backMm: rim(halfY, 0.3) };
 }

@@ -8,7 +8,11 @@ const FLAT = 1e-13;
  * The quadric gives a quadratic inequality in p, every half-space a bound; closed form.
  * @param solid section coordinates; r, s [mm]
  */
-export function rowInterval({ quadric: q, halfSpaces }: ConvexSolid, r: number, s: number): readonly [number, number] | undefined {
+export function rowInterval(
+  { quadric: q, halfSpaces }: ConvexSolid,
+  r: number,
+  s: number,
+): readonly [number, number] | undefined {
   let low = -Infinity;
   let high = Infinity;
   if (q !== undefined) {
@@ -59,10 +63,15 @@ export function topSegments(intervals: readonly (readonly [number, number] | und
     if (!(toMm > fromMm)) continue;
     const middle = (fromMm + toMm) / 2;
     let layer = intervals.length - 1;
-    while (layer >= 0 && !(intervals[layer] !== undefined && intervals[layer]![0] < middle && intervals[layer]![1] > middle)) layer--;
+    while (
+      layer >= 0 &&
+      !(intervals[layer] !== undefined && intervals[layer]![0] < middle && intervals[layer]![1] > middle)
+    )
+      layer--;
     if (layer < 0) continue;
     const last = segments.at(-1);
-    if (last !== undefined && last.layer === layer && last.toMm === fromMm) segments[segments.length - 1] = { ...last, toMm };
+    if (last !== undefined && last.layer === layer && last.toMm === fromMm)
+      segments[segments.length - 1] = { ...last, toMm };
     else segments.push({ fromMm, toMm, layer });
   }
   return segments;

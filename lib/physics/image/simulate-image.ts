@@ -65,7 +65,12 @@ function cutAtBands(segments: readonly RowSegment[], edges: readonly number[]): 
   return edges.reduce<readonly RowSegment[]>(
     (pieces, at) =>
       pieces.flatMap((piece) =>
-        at > piece.fromMm && at < piece.toMm ? [{ ...piece, toMm: at }, { ...piece, fromMm: at }] : [piece],
+        at > piece.fromMm && at < piece.toMm
+          ? [
+              { ...piece, toMm: at },
+              { ...piece, fromMm: at },
+            ]
+          : [piece],
       ),
     segments,
   );
@@ -77,10 +82,17 @@ function paintRow(scene: Scene, sampling: RowSampling, row: number, sliceMm: num
   const { prescription: p, scanner } = given;
   const r = frame.centreReadoutMm - p.fovReadoutMm / 2 + ((row + 0.5) * p.fovReadoutMm) / grid.rows;
   const normals = p.presaturation.map(bandNormal);
-  const offsets = normals.map((normal) => dot(normal, frame.readout) * r + dot(normal, frame.slice) * sliceMm);
+  const offsets = normals.map(
+    (normal) => dot(normal, frame.readout) * r + dot(normal, frame.slice) * sliceMm,
+  );
   const edges = p.presaturation.flatMap((band, i) => {
     const slope = dot(normals[i]!, frame.phase);
-    return Math.abs(slope) < 1e-9 ? [] : [(band.innerEdgeMm - offsets[i]!) / slope, (band.innerEdgeMm + band.thicknessMm - offsets[i]!) / slope];
+    return Math.abs(slope) < 1e-9
+      ? []
+      : [
+          (band.innerEdgeMm - offsets[i]!) / slope,
+          (band.innerEdgeMm + band.thicknessMm - offsets[i]!) / slope,
+        ];
   });
   const segments = cutAtBands(topSegments(layers.map(({ solid }) => rowInterval(solid, r, sliceMm))), edges);
   const fatHz = fatWaterShiftHz(scanner.fieldStrengthT);
@@ -113,7 +125,8 @@ function paintRow(scene: Scene, sampling: RowSampling, row: number, sliceMm: num
       [whole + 1, part],
     ] as const) {
       const target = grid.lines[row + step];
-      if (target !== undefined && amount > 0) foldOntoRow(target, sampling, fromMm + shifted, toMm + shifted, signal * amount);
+      if (target !== undefined && amount > 0)
+        foldOntoRow(target, sampling, fromMm + shifted, toMm + shifted, signal * amount);
     }
   }
 }
@@ -139,7 +152,8 @@ export function simulateImage(question: Case, options: ImageOptions = {}): Simul
   if (!Number.isInteger(sizePx) || sizePx < 16 || sizePx > 1024) {
     throw new DomainError('size-out-of-range', 'sizePx', sizePx, 'a whole number from 16 to 1024');
   }
-  if (!(relativeSnr > 0)) throw new DomainError('relative-snr-not-positive', 'relativeSnr', relativeSnr, 'a number above 0');
+  if (!(relativeSnr > 0))
+    throw new DomainError('relative-snr-not-positive', 'relativeSnr', relativeSnr, 'a number above 0');
   const given = { ...question, prescription: geometryCase(question).prescription };
   const { prescription: p } = given;
   const frame = sectionFrame(p, sliceOffsetMm);

@@ -33,11 +33,15 @@ export function tissueSignal(tissue: Tissue, p: Prescription): number {
     case 'single-shot-echo-train':
       return density * decayed(p.teMs, t2Ms) * flowing;
     case 'echo-planar':
-      return density * recovered(p.trMs, t1Ms) * decayed(p.teMs, t2Ms) * Math.exp(-DIFFUSION_WEIGHTING * diffusion);
+      return (
+        density * recovered(p.trMs, t1Ms) * decayed(p.teMs, t2Ms) * Math.exp(-DIFFUSION_WEIGHTING * diffusion)
+      );
     case 'gradient-echo':
     case 'gradient-echo-3d':
       return ((density * Math.sin(flip) * (1 - e1)) / (1 - Math.cos(flip) * e1)) * decayed(p.teMs, t2StarMs);
     case 'balanced':
-      return ((density * Math.sin(flip) * (1 - e1)) / (1 - (e1 - e2) * Math.cos(flip) - e1 * e2)) * Math.sqrt(e2);
+      return (
+        ((density * Math.sin(flip) * (1 - e1)) / (1 - (e1 - e2) * Math.cos(flip) - e1 * e2)) * Math.sqrt(e2)
+      );
   }
 }

@@ -29,7 +29,13 @@ export interface Relaxation {
   readonly diffusion: number;
 }
 
-const relaxation = (t1Ms: number, t2Ms: number, t2StarMs: number, density: number, diffusion: number): Relaxation => ({
+const relaxation = (
+  t1Ms: number,
+  t2Ms: number,
+  t2StarMs: number,
+  density: number,
+  diffusion: number,
+): Relaxation => ({
   t1Ms,
   t2Ms,
   t2StarMs,

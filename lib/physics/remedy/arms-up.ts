@@ -13,7 +13,9 @@ export const armsUp: Change = (given) => {
       patient: {
         ...patient,
         arms: { ...patient.arms, position: 'up' },
-        ...(patient.parts === undefined ? {} : { parts: patient.parts.filter((part) => part.kind !== 'arm') }),
+        ...(patient.parts === undefined
+          ? {}
+          : { parts: patient.parts.filter((part) => part.kind !== 'arm') }),
       },
     },
     'Confirm with the patient that the arms can stay raised',

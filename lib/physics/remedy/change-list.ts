@@ -20,7 +20,12 @@ export interface ChangeOption {
   readonly change: Change;
 }
 
-const option = (kind: RemedyKind, stage: ChangeOption['stage'], change: Change, key: string = kind): ChangeOption => ({
+const option = (
+  kind: RemedyKind,
+  stage: ChangeOption['stage'],
+  change: Change,
+  key: string = kind,
+): ChangeOption => ({
   kind,
   key,
   stage,
@@ -45,7 +50,12 @@ export const CHANGE_OPTIONS: readonly ChangeOption[] = [
   option('larger-fov-same-matrix', 'sizing', largerFovSameMatrix),
   option('larger-fov-same-voxel', 'sizing', largerFovSameVoxel),
   option('phase-oversampling', 'sizing', phaseOversampling('first-clean')),
-  option('phase-oversampling', 'sizing', phaseOversampling('always-clean'), 'phase-oversampling:always-clean'),
+  option(
+    'phase-oversampling',
+    'sizing',
+    phaseOversampling('always-clean'),
+    'phase-oversampling:always-clean',
+  ),
 ];
 
 const isLargerFov = (kind: RemedyKind): boolean => kind.startsWith('larger-fov');
@@ -63,7 +73,8 @@ export interface ChangeSet {
 }
 
 function changeSet(...options: readonly ChangeOption[]): ChangeSet {
-  const of = (stage: ChangeOption['stage']): Change[] => options.filter((one) => one.stage === stage).map((one) => one.change);
+  const of = (stage: ChangeOption['stage']): Change[] =>
+    options.filter((one) => one.stage === stage).map((one) => one.change);
   return {
     options,
     settings: of('setting'),

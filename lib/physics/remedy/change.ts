@@ -48,7 +48,10 @@ export const changed = (planned: TargetedCase, ...sideEffects: string[]): Change
   sideEffects,
 });
 
-export const refused = (code: string, text: string): ChangeResult => ({ outcome: 'refused', reason: { code, text } });
+export const refused = (code: string, text: string): ChangeResult => ({
+  outcome: 'refused',
+  reason: { code, text },
+});
 
 export const withPrescription = (given: TargetedCase, values: Partial<Prescription>): TargetedCase => ({
   ...given,

@@ -1,7 +1,14 @@
 import { describedCoil } from '../body/coil-reach';
 import { regionCorners, windowRegion } from '../geometry/oriented-region';
 import type { CoilElement } from '../model/scanner';
-import { changed, NOTHING_TO_CHANGE, refused, withPrescription, type Change, type TargetedCase } from './change';
+import {
+  changed,
+  NOTHING_TO_CHANGE,
+  refused,
+  withPrescription,
+  type Change,
+  type TargetedCase,
+} from './change';
 
 /** What the displayed window spans along z, mm from the isocentre. */
 function windowAlongZ({ prescription, patient }: TargetedCase): readonly [number, number] {
@@ -10,7 +17,11 @@ function windowAlongZ({ prescription, patient }: TargetedCase): readonly [number
 }
 
 /** As few neighbouring elements as still see the whole range; of equally many, those that see least beyond it. */
-function fewest(elements: readonly CoilElement[], low: number, high: number): readonly CoilElement[] | undefined {
+function fewest(
+  elements: readonly CoilElement[],
+  low: number,
+  high: number,
+): readonly CoilElement[] | undefined {
   const sorted = [...elements].sort((a, b) => a.seesFromMm - b.seesFromMm || a.seesToMm - b.seesToMm);
   let best: { readonly run: readonly CoilElement[]; readonly seen: number } | undefined;
   for (let from = 0; from < sorted.length; from++) {
@@ -20,7 +31,12 @@ function fewest(elements: readonly CoilElement[], low: number, high: number): re
       const end = Math.max(...run.map((element) => element.seesToMm));
       if (start > low || end < high) continue;
       const seen = end - start;
-      if (best === undefined || run.length < best.run.length || (run.length === best.run.length && seen < best.seen)) best = { run, seen };
+      if (
+        best === undefined ||
+        run.length < best.run.length ||
+        (run.length === best.run.length && seen < best.seen)
+      )
+        best = { run, seen };
     }
   }
   return best?.run;
@@ -34,7 +50,10 @@ export const coilElements: Change = (given) => {
   const { prescription: p } = given;
   const coil = describedCoil(given);
   if (coil === undefined) {
-    return refused('coil-elements-unknown', `The elements of “${p.coil}” are not described for this scanner, so none can be left out.`);
+    return refused(
+      'coil-elements-unknown',
+      `The elements of “${p.coil}” are not described for this scanner, so none can be left out.`,
+    );
   }
   const used = coil.elements.filter((element) => p.coilElements?.includes(element.name) ?? true);
   const [low, high] = windowAlongZ(given);

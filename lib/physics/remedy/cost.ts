@@ -10,7 +10,8 @@ interface Price {
   readonly text: string;
 }
 
-const percentMore = (now: number, then: number): number => (now > 0 ? Math.max(0, (then / now - 1) * 100) : 0);
+const percentMore = (now: number, then: number): number =>
+  now > 0 ? Math.max(0, (then / now - 1) * 100) : 0;
 
 const shown = (value: number): string => (Math.round(value * 10) / 10).toFixed(1).replace(/\.0$/, '');
 
@@ -26,11 +27,15 @@ function snrPrice(given: Case, now: Assessment, then: Assessment): Price[] {
 }
 
 const voxelVolume = (assessment: Assessment): number =>
-  assessment.detail === undefined ? 0 : assessment.detail.voxelMm.reduce((product, edge) => product * edge, 1);
+  assessment.detail === undefined
+    ? 0
+    : assessment.detail.voxelMm.reduce((product, edge) => product * edge, 1);
 
 function voxelPrice(given: Case, now: Assessment, then: Assessment): Price[] {
   const grown = percentMore(voxelVolume(now), voxelVolume(then));
-  return grown > 0 ? [{ points: grown * given.policy.weights.voxelPct, text: `voxel volume +${shown(grown)} %` }] : [];
+  return grown > 0
+    ? [{ points: grown * given.policy.weights.voxelPct, text: `voxel volume +${shown(grown)} %` }]
+    : [];
 }
 
 /** Seconds beyond what the patient can hold; 0 where the sequence is not held. */
@@ -45,10 +50,17 @@ function breathHoldPrice(given: Case, now: Assessment, then: Assessment): Price[
   const excess = holdExcessS(given, then);
   if (excess > 0) {
     const limit = given.patient.breathHoldS.value;
-    prices.push({ points: excess * weights.breathHoldS, text: `breath-hold ${shown(excess)} s over the ${shown(limit)} s limit` });
+    prices.push({
+      points: excess * weights.breathHoldS,
+      text: `breath-hold ${shown(excess)} s over the ${shown(limit)} s limit`,
+    });
   }
   const more = Math.max(0, (then.time?.breathHolds ?? 0) - (now.time?.breathHolds ?? 0));
-  if (more > 0) prices.push({ points: more * weights.extraBreathHold, text: `${more} more breath-hold${more > 1 ? 's' : ''}` });
+  if (more > 0)
+    prices.push({
+      points: more * weights.extraBreathHold,
+      text: `${more} more breath-hold${more > 1 ? 's' : ''}`,
+    });
   return prices;
 }
 
@@ -58,18 +70,26 @@ function sideEffectPrice(given: Case, planned: Case, now: Assessment, then: Asse
   const after = planned.prescription;
   const prices: Price[] = [];
   if (before.phaseAxis !== after.phaseAxis) {
-    prices.push({ points: weights.swap[given.patient.region], text: 'ghosts and chemical shift change direction' });
+    prices.push({
+      points: weights.swap[given.patient.region],
+      text: 'ghosts and chemical shift change direction',
+    });
   }
   const bands = after.presaturation.length - before.presaturation.length;
-  if (bands > 0) prices.push({ points: bands * weights.presaturationBand, text: 'presaturation: SAR and time per slice' });
+  if (bands > 0)
+    prices.push({ points: bands * weights.presaturationBand, text: 'presaturation: SAR and time per slice' });
   const averages = before.averages - after.averages;
   if (averages > 0) prices.push({ points: averages * weights.fewerAverages, text: 'motion averages less' });
   const acceleration = accelerationSteps(before.acceleration.factorPhase, after.acceleration.factorPhase);
-  if (acceleration > 0) prices.push({ points: acceleration * weights.moreAcceleration, text: 'more acceleration' });
+  if (acceleration > 0)
+    prices.push({ points: acceleration * weights.moreAcceleration, text: 'more acceleration' });
   const fourier = partialFourierSteps(before.partialFourierPhase, after.partialFourierPhase);
   if (fourier > 0) prices.push({ points: fourier * weights.partialFourier, text: 'partial Fourier' });
   const train = percentMore(now.time?.trainMs ?? 0, then.time?.trainMs ?? 0);
-  const displaced = percentMore(now.time?.displacementPer100HzMm ?? 0, then.time?.displacementPer100HzMm ?? 0);
+  const displaced = percentMore(
+    now.time?.displacementPer100HzMm ?? 0,
+    then.time?.displacementPer100HzMm ?? 0,
+  );
   const longer = Math.max(train, displaced);
   if (longer > 0) {
     const what = displaced > train ? 'displacement' : 'echo train';
@@ -85,7 +105,8 @@ function effortPrice(given: Case, planned: Case): Price[] {
   const { weights } = given.policy;
   const prices: Price[] = [];
   const edits = countEdits(given.prescription, planned.prescription);
-  if (edits > 0) prices.push({ points: edits * weights.edit, text: `${edits} setting${edits > 1 ? 's' : ''} to change` });
+  if (edits > 0)
+    prices.push({ points: edits * weights.edit, text: `${edits} setting${edits > 1 ? 's' : ''} to change` });
   if (moved(given, planned)) prices.push({ points: weights.recentre, text: 'FOV centre to move' });
   if (given.patient.arms.position !== planned.patient.arms.position) {
     prices.push({ points: weights.armsUp, text: 'arms to raise' });
@@ -94,7 +115,8 @@ function effortPrice(given: Case, planned: Case): Price[] {
     prices.push({ points: weights.coilElements, text: 'coil elements to choose' });
   }
   const lost = slabCoverageLostMm(given.prescription, planned.prescription);
-  if (lost > 0) prices.push({ points: lost * weights.coverageMm, text: `${shown(lost)} mm of coverage given up` });
+  if (lost > 0)
+    prices.push({ points: lost * weights.coverageMm, text: `${shown(lost)} mm of coverage given up` });
   return prices;
 }
 
@@ -111,7 +133,8 @@ function foldShares({ fold, slab }: Assessment): FoldShares {
   const displayed = Math.min(1, fold?.displayedShare ?? 0);
   const keepClear = Math.min(1, fold?.keepClearShare ?? 0);
   const partitions = slab?.partitions.length ?? 0;
-  if (slab === undefined || slab.contaminated === 0) return { displayedPct: displayed * 100, keepClearPct: keepClear * 100 };
+  if (slab === undefined || slab.contaminated === 0)
+    return { displayedPct: displayed * 100, keepClearPct: keepClear * 100 };
   return {
     displayedPct: (displayed * 100 * slab.contaminated) / partitions,
     keepClearPct: Math.max(keepClear * 100, (100 * slab.contaminatedInKeepClear) / partitions),
@@ -120,7 +143,9 @@ function foldShares({ fold, slab }: Assessment): FoldShares {
 
 /** Whether anything, in plane or through the slab, still folds onto the keep-clear area. */
 export const leavesFoldInKeepClear = (assessment: Assessment): boolean =>
-  assessment.verdict === 'fold-in-keep-clear' || (assessment.fold?.inKeepClear ?? false) || (assessment.slab?.contaminatedInKeepClear ?? 0) > 0;
+  assessment.verdict === 'fold-in-keep-clear' ||
+  (assessment.fold?.inKeepClear ?? false) ||
+  (assessment.slab?.contaminatedInKeepClear ?? 0) > 0;
 
 function foldPrice(given: Case, then: Assessment): Price[] {
   const { weights } = given.policy;
@@ -128,9 +153,16 @@ function foldPrice(given: Case, then: Assessment): Price[] {
   // Fold that only the margin catches has no area of its own, yet must never look free: it counts as 1 %.
   const inKeepClear = Math.max(keepClearPct, leavesFoldInKeepClear(then) ? 1 : 0);
   const prices: Price[] = [];
-  if (displayed > 0) prices.push({ points: displayed * weights.foldDisplayedPct, text: `${shown(displayed)} % of the picture under fold` });
+  if (displayed > 0)
+    prices.push({
+      points: displayed * weights.foldDisplayedPct,
+      text: `${shown(displayed)} % of the picture under fold`,
+    });
   if (inKeepClear > 0) {
-    prices.push({ points: inKeepClear * weights.foldKeepClearPct, text: `${shown(inKeepClear)} % of the keep-clear area under fold` });
+    prices.push({
+      points: inKeepClear * weights.foldKeepClearPct,
+      text: `${shown(inKeepClear)} % of the keep-clear area under fold`,
+    });
   }
   return prices;
 }
@@ -139,7 +171,9 @@ function toTerm(kind: CostTermKind, prices: readonly Price[]): CostTerm[] {
   if (prices.length === 0) return [];
   const points = prices.reduce((sum, price) => sum + price.points, 0);
   // 1e-9 keeps a price that is exactly half a tenth in decimals from falling on either side by its last bit.
-  return [{ kind, tenths: Math.round(points * 10 + 1e-9), text: prices.map((price) => price.text).join(', ') }];
+  return [
+    { kind, tenths: Math.round(points * 10 + 1e-9), text: prices.map((price) => price.text).join(', ') },
+  ];
 }
 
 /**
@@ -148,7 +182,12 @@ function toTerm(kind: CostTermKind, prices: readonly Price[]): CostTerm[] {
  * @param given the case as it stands; planned the same case after the remedy
  * @returns terms that cost something, in a fixed order
  */
-export function costTerms(given: Case, planned: Case, now: Assessment, then: Assessment): readonly CostTerm[] {
+export function costTerms(
+  given: Case,
+  planned: Case,
+  now: Assessment,
+  then: Assessment,
+): readonly CostTerm[] {
   return [
     ...toTerm('time', timePrice(given, now, then)),
     ...toTerm('snr', snrPrice(given, now, then)),
@@ -160,4 +199,5 @@ export function costTerms(given: Case, planned: Case, now: Assessment, then: Ass
   ].filter((term) => term.tenths > 0);
 }
 
-export const totalTenths = (terms: readonly CostTerm[]): number => terms.reduce((sum, term) => sum + term.tenths, 0);
+export const totalTenths = (terms: readonly CostTerm[]): number =>
+  terms.reduce((sum, term) => sum + term.tenths, 0);

@@ -11,7 +11,8 @@ function measures({ assessment, terms }: Remedy): readonly number[] {
     -Math.round((assessment.detail?.snr ?? 0) * 1e4),
     Math.round(voxel * 1e3),
     Math.round((assessment.fold?.displayedShare ?? 0) * 1e4) + (assessment.slab?.contaminated ?? 0) * 1e4,
-    Math.round((assessment.fold?.keepClearShare ?? 0) * 1e4) + (assessment.slab?.contaminatedInKeepClear ?? 0) * 1e4,
+    Math.round((assessment.fold?.keepClearShare ?? 0) * 1e4) +
+      (assessment.slab?.contaminatedInKeepClear ?? 0) * 1e4,
     Number(assessment.fold?.inKeepClear ?? false),
     tenthsOf(terms, 'breath-hold'),
     tenthsOf(terms, 'side-effects'),
@@ -33,5 +34,8 @@ export function markDominated(remedies: readonly Remedy[]): Remedy[] {
     }
     return better;
   };
-  return remedies.map((remedy, index) => ({ ...remedy, dominated: all.some((other) => beats(other, all[index]!)) }));
+  return remedies.map((remedy, index) => ({
+    ...remedy,
+    dominated: all.some((other) => beats(other, all[index]!)),
+  }));
 }

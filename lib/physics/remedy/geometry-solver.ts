@@ -23,7 +23,8 @@ const SIDE_AXIS: Readonly<Record<Side, PatientAxis>> = {
 };
 
 /** Unit vector towards a side. */
-const towards = (side: Side): Vec3 => scale(AXIS_VECTOR[SIDE_AXIS[side]], AXIS_SIDES[SIDE_AXIS[side]][1] === side ? 1 : -1);
+const towards = (side: Side): Vec3 =>
+  scale(AXIS_VECTOR[SIDE_AXIS[side]], AXIS_SIDES[SIDE_AXIS[side]][1] === side ? 1 : -1);
 
 const partitionsOf = ({ prescription: { slices } }: Case): number | undefined =>
   slices.mode === 'slab' ? slices.acquiredPartitions : undefined;
@@ -51,7 +52,9 @@ class RankingGeometry {
   /** Through the slab alone: the plane is not solved for it, since many slabs are tried before one is kept. */
   slabResult(given: TargetedCase): SlabResult | undefined {
     if (given.prescription.slices.mode !== 'slab') return undefined;
-    return slabResultOf(geometryCase(given.target === undefined ? given : { ...given, frozen: given.target }));
+    return slabResultOf(
+      geometryCase(given.target === undefined ? given : { ...given, frozen: given.target }),
+    );
   }
 
   isClean(given: TargetedCase): boolean {
@@ -80,10 +83,19 @@ function cleanPartitions(given: TargetedCase, geometry: RankingGeometry): number
   const { slices, acquiredLines } = given.prescription;
   if (slices.mode !== 'slab') return undefined;
   const alone = geometry.slabResult(given)?.smallestCleanPartitions;
-  if (alone === undefined || !geometry.forSizing(given).solved.isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)) return alone;
-  const most = Math.floor(slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9);
-  for (let acquired = alone; acquired <= most; ) {
-    const planned = { ...given, prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } } };
+  if (
+    alone === undefined ||
+    !geometry.forSizing(given).solved.isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)
+  )
+    return alone;
+  const most = Math.floor(
+    slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9,
+  );
+  for (let acquired = alone; acquired <= most;) {
+    const planned = {
+      ...given,
+      prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } },
+    };
     if (geometry.isClean(planned)) return acquired;
     acquired = nextAcquiredPartitions(slices.partitions, acquired + 1, given.scanner.partitionStep);
   }
@@ -97,7 +109,12 @@ function alongDirection(region: OrientedRegion, direction: Vec3): RangeMm {
 }
 
 /** Whether what of `area` was displayed in `before` is still displayed in `after`, axis by axis of the window. */
-function staysInside(area: OrientedRegion, before: OrientedRegion, after: OrientedRegion, skip: number | undefined): boolean {
+function staysInside(
+  area: OrientedRegion,
+  before: OrientedRegion,
+  after: OrientedRegion,
+  skip: number | undefined,
+): boolean {
   return after.axes.every((axis, i) => {
     if (i === skip) return true;
     const [areaLow, areaHigh] = alongDirection(area, axis);
@@ -105,7 +122,9 @@ function staysInside(area: OrientedRegion, before: OrientedRegion, after: Orient
     const [low, high] = after.rangesMm[i as 0 | 1 | 2];
     const from = Math.max(areaLow, seenLow);
     const to = Math.min(areaHigh, seenHigh);
-    return from >= to || (toMicrometres(low) <= toMicrometres(from) && toMicrometres(high) >= toMicrometres(to));
+    return (
+      from >= to || (toMicrometres(low) <= toMicrometres(from) && toMicrometres(high) >= toMicrometres(to))
+    );
   });
 }
 
@@ -115,27 +134,40 @@ function leavesPictureOf(original: FrozenCase, before: OrientedRegion) {
   return (planned: TargetedCase): Reason | undefined => {
     const after = windowRegion(planned.prescription);
     const { area, mustStayDisplayed } = original.keepClear;
-    const reason = (what: string): Reason => ({ code: 'area-leaves-picture', text: `Not possible: ${what} leaves the picture.` });
-    if (mustStayDisplayed !== undefined && !staysInside(regionOfBox(mustStayDisplayed), before, after, undefined)) {
+    const reason = (what: string): Reason => ({
+      code: 'area-leaves-picture',
+      text: `Not possible: ${what} leaves the picture.`,
+    });
+    if (
+      mustStayDisplayed !== undefined &&
+      !staysInside(regionOfBox(mustStayDisplayed), before, after, undefined)
+    ) {
       return reason('the anatomy that must stay displayed');
     }
     const keepClear = planned.frozen ?? original.frozen;
     // A whole picture has no anatomy of its own at its ends: end partitions may be given up, at their price.
     const skip = area.kind === 'whole-picture' ? SLICE : undefined;
-    return keepClear !== undefined && !staysInside(keepClear, before, after, skip) ? reason('the keep-clear area') : undefined;
+    return keepClear !== undefined && !staysInside(keepClear, before, after, skip)
+      ? reason('the keep-clear area')
+      : undefined;
   };
 }
 
 function bodyEdge(given: TargetedCase, direction: Vec3): number {
   const { patient, scanner } = geometryCase(given);
-  return Math.max(...buildBody(patient, scanner).map((part) => partAlong(part, direction, { ...given, patient })[1]));
+  return Math.max(
+    ...buildBody(patient, scanner).map((part) => partAlong(part, direction, { ...given, patient })[1]),
+  );
 }
 
 function bodyAlongPhase(given: TargetedCase): RangeMm {
   const { phase } = sectionFrame(given.prescription, 0);
   const [lowSide, highSide] = AXIS_SIDES[given.prescription.phaseAxis];
   const { marginMm } = given.policy;
-  return [-bodyEdge(given, scale(phase, -1)) - marginMm[lowSide], bodyEdge(given, phase) + marginMm[highSide]];
+  return [
+    -bodyEdge(given, scale(phase, -1)) - marginMm[lowSide],
+    bodyEdge(given, phase) + marginMm[highSide],
+  ];
 }
 
 /**
@@ -149,7 +181,8 @@ export function geometrySolver(original: FrozenCase): Solver {
     isClean: (asked) => geometry.isClean(asked),
     slabIsClean: (asked) => geometry.slabIsClean(asked),
     cleanPartitions: (asked) => cleanPartitions(asked, geometry),
-    intruder: (asked) => geometry.forSizing(asked).solved.leftover(asked.prescription.acquiredLines, partitionsOf(asked)).from,
+    intruder: (asked) =>
+      geometry.forSizing(asked).solved.leftover(asked.prescription.acquiredLines, partitionsOf(asked)).from,
     leavesPicture: leavesPictureOf(original, windowRegion(original.prescription)),
     windowEdgeMm: (asked, side) =>
       Math.max(

@@ -38,13 +38,16 @@ export const largerFovSameMatrix: Change = (given, solver) => {
   if (!Number.isFinite(requirement.alwaysCleanMm)) return WRAPS_ALONG_SLAB;
   const share = p.acquiredLines / p.linesAcrossFov;
   let fovMm = p.fovPhaseMm;
-  for (let hit = forbiddenAround(fovMm * share, requirement.forbiddenMm); hit !== undefined; ) {
+  for (let hit = forbiddenAround(fovMm * share, requirement.forbiddenMm); hit !== undefined;) {
     fovMm = Math.ceil(hit[1] / share / FOV_STEP_MM - SLACK) * FOV_STEP_MM;
     hit = forbiddenAround(fovMm * share, requirement.forbiddenMm);
   }
   if (fovMm === p.fovPhaseMm) return NOTHING_TO_CHANGE;
   if (fovMm > scanner.limits.fovMaxMm) {
-    return refused('fov-over-maximum', `A FOV of ${figure(fovMm)} mm is over this scanner's ${figure(scanner.limits.fovMaxMm)} mm.`);
+    return refused(
+      'fov-over-maximum',
+      `A FOV of ${figure(fovMm)} mm is over this scanner's ${figure(scanner.limits.fovMaxMm)} mm.`,
+    );
   }
   return changed(withPrescription(given, { fovPhaseMm: fovMm, ...readoutFor(given, fovMm, false) }));
 };
@@ -59,7 +62,8 @@ export const largerFovSameVoxel: Change = (given, solver) => {
   if (!Number.isFinite(requirement.alwaysCleanMm)) return WRAPS_ALONG_SLAB;
   const pixel = p.fovPhaseMm / p.linesAcrossFov;
   const share = p.acquiredLines / p.linesAcrossFov;
-  if (forbiddenAround(p.acquiredLines * pixel, requirement.forbiddenMm) === undefined) return NOTHING_TO_CHANGE;
+  if (forbiddenAround(p.acquiredLines * pixel, requirement.forbiddenMm) === undefined)
+    return NOTHING_TO_CHANGE;
   const most = Math.floor(Math.min(scanner.limits.fovMaxMm / pixel, scanner.limits.matrixMax) + SLACK);
   for (let lines = p.linesAcrossFov + 1; lines <= most; lines++) {
     const acquired = nextAcquiredLines(lines, lines * share, scanner.lineStep);

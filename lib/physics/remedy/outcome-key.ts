@@ -7,7 +7,9 @@ export function outcomeKey({ prescription: p, patient }: TargetedCase): string {
     slices.mode === 'slab'
       ? `${slices.partitions}/${slices.acquiredPartitions}/${slices.droppedPartitionsPerEnd}/${slices.timeBandwidthProduct}`
       : '';
-  const bands = p.presaturation.map((band) => `${band.side}/${band.innerEdgeMm}/${band.thicknessMm}`).join(';');
+  const bands = p.presaturation
+    .map((band) => `${band.side}/${band.innerEdgeMm}/${band.thicknessMm}`)
+    .join(';');
   return [
     patient.arms.position,
     p.phaseAxis,

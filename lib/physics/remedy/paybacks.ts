@@ -21,7 +21,10 @@ function fewerAverages({ prescription: p }: TargetedCase): PaybackChoice {
   if (p.averages === 1) return refuse('one-average', 'There is only one average to give up.');
   const counts = Array.from({ length: p.averages - 1 }, (_, index) => p.averages - 1 - index);
   // An echo-planar series counts its averages in its volumes, which have to stay whole.
-  const whole = p.family === 'echo-planar' ? counts.filter((count) => Number.isInteger((p.volumes * count) / p.averages)) : counts;
+  const whole =
+    p.family === 'echo-planar'
+      ? counts.filter((count) => Number.isInteger((p.volumes * count) / p.averages))
+      : counts;
   if (whole.length === 0) return refuse('volumes-not-whole', 'Fewer averages would not leave whole volumes.');
   return {
     outcome: 'levels',
@@ -34,7 +37,9 @@ function fewerAverages({ prescription: p }: TargetedCase): PaybackChoice {
 
 function moreAcceleration({ prescription: p, scanner }: TargetedCase): PaybackChoice {
   const most = scanner.limits.accelerationPhaseMax;
-  const factors = ACCELERATION_LADDER.filter((factor) => factor > p.acceleration.factorPhase && factor <= most);
+  const factors = ACCELERATION_LADDER.filter(
+    (factor) => factor > p.acceleration.factorPhase && factor <= most,
+  );
   if (factors.length === 0) {
     return refuse('acceleration-over-maximum', `Acceleration is already at this scanner’s ${figure(most)}.`);
   }
@@ -43,7 +48,10 @@ function moreAcceleration({ prescription: p, scanner }: TargetedCase): PaybackCh
     levels: factors.map((factorPhase) => ({
       apply: (given) => ({
         ...given,
-        prescription: { ...given.prescription, acceleration: { ...given.prescription.acceleration, factorPhase } },
+        prescription: {
+          ...given.prescription,
+          acceleration: { ...given.prescription.acceleration, factorPhase },
+        },
       }),
       sideEffect: `Acceleration ${figure(p.acceleration.factorPhase)} → ${figure(factorPhase)}: more noise where copies overlap`,
     })),
@@ -52,14 +60,22 @@ function moreAcceleration({ prescription: p, scanner }: TargetedCase): PaybackCh
 
 function partialFourier({ prescription: p, scanner }: TargetedCase): PaybackChoice {
   const least = scanner.limits.partialFourierMin;
-  const fractions = PARTIAL_FOURIER_LADDER.filter((fraction) => fraction < p.partialFourierPhase && fraction >= least);
+  const fractions = PARTIAL_FOURIER_LADDER.filter(
+    (fraction) => fraction < p.partialFourierPhase && fraction >= least,
+  );
   if (fractions.length === 0) {
-    return refuse('partial-fourier-under-minimum', `Partial Fourier is already at this scanner’s ${least.toFixed(3)}.`);
+    return refuse(
+      'partial-fourier-under-minimum',
+      `Partial Fourier is already at this scanner’s ${least.toFixed(3)}.`,
+    );
   }
   return {
     outcome: 'levels',
     levels: fractions.map((fraction) => ({
-      apply: (given) => ({ ...given, prescription: { ...given.prescription, partialFourierPhase: fraction } }),
+      apply: (given) => ({
+        ...given,
+        prescription: { ...given.prescription, partialFourierPhase: fraction },
+      }),
       sideEffect: `Partial Fourier ${Math.round(fraction * 8)}/8: more sensitive to motion and phase errors`,
     })),
   };
@@ -71,7 +87,11 @@ export const PAYBACKS: Readonly<Record<PaybackKind, (given: TargetedCase) => Pay
   'partial-fourier': partialFourier,
 };
 
-export const PAYBACK_KINDS: readonly PaybackKind[] = ['fewer-averages', 'more-acceleration', 'partial-fourier'];
+export const PAYBACK_KINDS: readonly PaybackKind[] = [
+  'fewer-averages',
+  'more-acceleration',
+  'partial-fourier',
+];
 
 /** L on the grid at or below `lines`, at least as many as there are now. */
 export const fillTo = (given: TargetedCase, lines: number): number | undefined => {

@@ -1,7 +1,14 @@
 import type { WidthRequirement } from '../model/assessment';
 import type { Case } from '../model/case';
 import { figure } from '../assess/words';
-import { changed, NOTHING_TO_CHANGE, refused, withPrescription, type Change, type ChangeResult } from './change';
+import {
+  changed,
+  NOTHING_TO_CHANGE,
+  refused,
+  withPrescription,
+  type Change,
+  type ChangeResult,
+} from './change';
 
 /** Which width is asked for: the first clean one, or the one from which every larger width is clean too. */
 export type WidthTarget = 'first-clean' | 'always-clean';
@@ -11,7 +18,10 @@ function toLines(given: Case, requirement: WidthRequirement, target: WidthTarget
   const widthMm = target === 'first-clean' ? requirement.firstCleanMm : requirement.alwaysCleanMm;
   const lines = target === 'first-clean' ? requirement.firstCleanLines : requirement.alwaysCleanLines;
   if (!Number.isFinite(widthMm)) {
-    return refused('wraps-along-slab', 'No phase oversampling is enough: tissue from the other end of the slab lands in the keep-clear area.');
+    return refused(
+      'wraps-along-slab',
+      'No phase oversampling is enough: tissue from the other end of the slab lands in the keep-clear area.',
+    );
   }
   if (lines === undefined) {
     const percent = figure((widthMm / p.fovPhaseMm - 1) * 100);

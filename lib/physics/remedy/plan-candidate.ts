@@ -68,7 +68,11 @@ function orMake<K, V>(known: Map<K, V>, key: K, make: () => V): V {
 }
 
 const within = <A, B, V>(known: Map<A, Map<B, V>>, outer: A, inner: B, make: () => V): V =>
-  orMake(orMake(known, outer, () => new Map<B, V>()), inner, make);
+  orMake(
+    orMake(known, outer, () => new Map<B, V>()),
+    inner,
+    make,
+  );
 
 /** Applies changes one after another; one that finds nothing to change means the set is really a smaller one. */
 function applyAll(start: PlannedCandidate, changes: readonly Change[], steps: TakenSteps): Planning {
@@ -96,8 +100,13 @@ function settle(given: TargetedCase, { planned, sideEffects }: PlannedCandidate)
 /** What has been paid too much, worst first: hold beyond the limit, scan time and train beyond what they are now. */
 function debt({ given, now }: TakenSteps, time: TimeResult): readonly [number, number, number] {
   const over = (value: number, limit: number): number => Math.max(0, Math.round((value - limit) * 1e6) / 1e6);
-  const holdLimit = given.prescription.breathing === 'breath-hold' ? given.patient.breathHoldS.value : Infinity;
-  return [over(time.longestHoldS, holdLimit), over(time.scanS, now.scanS), over(time.trainMs ?? 0, now.trainMs ?? 0)];
+  const holdLimit =
+    given.prescription.breathing === 'breath-hold' ? given.patient.breathHoldS.value : Infinity;
+  return [
+    over(time.longestHoldS, holdLimit),
+    over(time.scanS, now.scanS),
+    over(time.trainMs ?? 0, now.trainMs ?? 0),
+  ];
 }
 
 const isPaid = (owed: readonly number[]): boolean => owed.every((value) => value === 0);
@@ -133,7 +142,12 @@ function spendOnLines(steps: TakenSteps, candidate: PlannedCandidate): PlannedCa
 }
 
 /** Settings, then the payback (if any), then sizing in the geometry those two make. */
-function planAt(set: ChangeSet, payback: PaybackKind | undefined, level: PaybackLevel | undefined, steps: TakenSteps): Planning {
+function planAt(
+  set: ChangeSet,
+  payback: PaybackKind | undefined,
+  level: PaybackLevel | undefined,
+  steps: TakenSteps,
+): Planning {
   const settled = applyAll({ planned: steps.given, sideEffects: [] }, set.settings, steps);
   if (settled.outcome !== 'planned') return settled;
   const { planned, sideEffects } = settled.candidate;
@@ -156,7 +170,12 @@ export const planUnpaid = (set: ChangeSet, steps: TakenSteps): Planning =>
   guarded(() => planAt(set, undefined, undefined, steps));
 
 /** The mildest level that pays everything back; where none does, the one that leaves least owed. */
-function planPaidBack(set: ChangeSet, unpaid: PlannedCandidate, payback: PaybackKind, steps: TakenSteps): Planning {
+function planPaidBack(
+  set: ChangeSet,
+  unpaid: PlannedCandidate,
+  payback: PaybackKind,
+  steps: TakenSteps,
+): Planning {
   let owed = debt(steps, steps.time(unpaid.planned));
   if (isPaid(owed)) return NOTHING;
   const choice = steps.choice(payback);
@@ -189,11 +208,18 @@ function guarded(plan: () => Planning): Planning {
  * Works out one candidate: which prescription and arms a set of changes, and a payback, lead to.
  * @param unpaid what the set leads to without a payback
  */
-export function planCandidate(set: ChangeSet, unpaid: PlannedCandidate, payback: PaybackKind | undefined, steps: TakenSteps): Planning {
+export function planCandidate(
+  set: ChangeSet,
+  unpaid: PlannedCandidate,
+  payback: PaybackKind | undefined,
+  steps: TakenSteps,
+): Planning {
   if (set.options.length === 0 && payback === undefined) return NOTHING;
   return guarded(() => {
     const planning: Planning =
-      payback === undefined ? { outcome: 'planned', candidate: unpaid } : planPaidBack(set, unpaid, payback, steps);
+      payback === undefined
+        ? { outcome: 'planned', candidate: unpaid }
+        : planPaidBack(set, unpaid, payback, steps);
     if (planning.outcome !== 'planned') return planning;
     const candidate = settle(steps.given, planning.candidate);
     const leaves = steps.solver.leavesPicture(candidate.planned);

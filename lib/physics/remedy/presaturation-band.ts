@@ -12,7 +12,9 @@ function bandTiming(p: Prescription): Partial<Prescription> | undefined {
   if (p.family === 'gradient-echo-3d') {
     return p.segments > 0 ? { preparationMs: p.preparationMs + BAND_TIME_MS } : undefined;
   }
-  return p.slices.mode === 'slab' ? { trMs: p.trMs + BAND_TIME_MS } : { sliceTimeMs: p.sliceTimeMs + BAND_TIME_MS };
+  return p.slices.mode === 'slab'
+    ? { trMs: p.trMs + BAND_TIME_MS }
+    : { sliceTimeMs: p.sliceTimeMs + BAND_TIME_MS };
 }
 
 /**
@@ -25,7 +27,10 @@ export const presaturation: Change = (given, solver) => {
   if (intruder === undefined) return NOTHING_TO_CHANGE;
   const timing = bandTiming(p);
   if (timing === undefined) {
-    return refused('no-room-for-a-band', 'This sequence runs in a steady state without preparation, so no band can be played.');
+    return refused(
+      'no-room-for-a-band',
+      'This sequence runs in a steady state without preparation, so no band can be played.',
+    );
   }
   const { side } = intruder;
   if (p.presaturation.some((band) => band.side === side)) return NOTHING_TO_CHANGE;
@@ -33,7 +38,10 @@ export const presaturation: Change = (given, solver) => {
   const outerEdgeMm = solver.bodyEdgeMm(given, side);
   const thicknessMm = Math.ceil(outerEdgeMm - innerEdgeMm);
   if (thicknessMm <= 0) {
-    return refused('no-tissue-outside', `No tissue lies beyond the FOV on the ${side} side, so a band there has nothing to saturate.`);
+    return refused(
+      'no-tissue-outside',
+      `No tissue lies beyond the FOV on the ${side} side, so a band there has nothing to saturate.`,
+    );
   }
   const band: PresaturationBand = { side, innerEdgeMm, thicknessMm, nominalFlipDeg: 90, delayMs: DELAY_MS };
   return changed(

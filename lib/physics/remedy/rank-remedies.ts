@@ -36,11 +36,14 @@ const needsRemedy = (given: Case, now: Assessment): boolean =>
 
 /** Where only the rest of the picture folds, sizing keeps the whole picture free; otherwise the keep-clear area. */
 const targeted = (frozen: FrozenCase, now: Assessment): TargetedCase =>
-  now.verdict === 'fold-outside-keep-clear' ? { ...frozen, target: windowRegion(frozen.prescription) } : frozen;
+  now.verdict === 'fold-outside-keep-clear'
+    ? { ...frozen, target: windowRegion(frozen.prescription) }
+    : frozen;
 
 /** Why an assessed candidate is no remedy here; undefined: it is one. */
 function whyNot(given: Case, assessment: Assessment): Reason | undefined {
-  if (assessment.verdict === 'cannot-be-scanned' || assessment.verdict === 'not-modelled') return assessment.reasons[0];
+  if (assessment.verdict === 'cannot-be-scanned' || assessment.verdict === 'not-modelled')
+    return assessment.reasons[0];
   const tolerated = given.policy.tolerateFoldOutsidePct;
   const outside = (assessment.fold?.displayedShare ?? 0) * 100;
   if (outside <= tolerated + 1e-9) return undefined;
@@ -80,12 +83,18 @@ function toRemedy(
 export function compareRemedies(a: Remedy, b: Remedy): number {
   const left = Number(leavesFoldInKeepClear(a.assessment)) - Number(leavesFoldInKeepClear(b.assessment));
   if (left !== 0) return left;
-  return a.costTenths - b.costTenths || a.physicalActions - b.physicalActions || (a.key < b.key ? -1 : a.key > b.key ? 1 : 0);
+  return (
+    a.costTenths - b.costTenths ||
+    a.physicalActions - b.physicalActions ||
+    (a.key < b.key ? -1 : a.key > b.key ? 1 : 0)
+  );
 }
 
 /** A refusal already told for a part of this set is not told again. */
 function isTold(told: readonly RemedyNotPossible[], parts: readonly string[], code: string): boolean {
-  return told.some((entry) => entry.reason.code === code && entry.key.split('+').every((part) => parts.includes(part)));
+  return told.some(
+    (entry) => entry.reason.code === code && entry.key.split('+').every((part) => parts.includes(part)),
+  );
 }
 
 /**
@@ -96,11 +105,15 @@ function isTold(told: readonly RemedyNotPossible[], parts: readonly string[], co
  * @returns `now` as assess() gives it; `candidates` counts the combinations that were worked out to a prescription
  * @throws DomainError as assess()
  */
-export function rankRemedies(given: Case, { filters = {} }: { readonly filters?: RankFilters } = {}): Ranking {
+export function rankRemedies(
+  given: Case,
+  { filters = {} }: { readonly filters?: RankFilters } = {},
+): Ranking {
   validateCase(given);
   const frozen = freeze(given);
   const now = assessChecked(frozen, true);
-  if (!needsRemedy(given, now) || now.time === undefined) return { now, remedies: [], notPossible: [], candidates: 0 };
+  if (!needsRemedy(given, now) || now.time === undefined)
+    return { now, remedies: [], notPossible: [], candidates: 0 };
   const start = targeted(frozen, now);
   const solver = geometrySolver(start);
   const steps = new TakenSteps(start, now.time, solver);
@@ -110,16 +123,29 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
   let candidates = 0;
 
   const paybacks = PAYBACK_KINDS.filter((kind) => filters.paybacks?.includes(kind) ?? true);
-  const refuse = (options: readonly ChangeOption[], payback: PaybackKind | undefined, reason: Reason): void => {
+  const refuse = (
+    options: readonly ChangeOption[],
+    payback: PaybackKind | undefined,
+    reason: Reason,
+  ): void => {
     const key = keyOf(options, payback);
     if (isTold(notPossible, key.split('+'), reason.code)) return;
     const changes = options.map((option) => option.kind);
-    notPossible.push({ key, changes, ...(payback === undefined ? {} : { payback }), reason: { code: reason.code, text: reason.text } });
+    notPossible.push({
+      key,
+      changes,
+      ...(payback === undefined ? {} : { payback }),
+      reason: { code: reason.code, text: reason.text },
+    });
   };
 
   const works: { readonly set: ChangeSet; readonly unpaid: PlannedCandidate }[] = [];
   for (const set of CHANGE_SETS) {
-    if (filters.changes !== undefined && !set.options.every((option) => filters.changes!.includes(option.kind))) continue;
+    if (
+      filters.changes !== undefined &&
+      !set.options.every((option) => filters.changes!.includes(option.kind))
+    )
+      continue;
     const planning = planUnpaid(set, steps);
     if (planning.outcome === 'planned') works.push({ set, unpaid: planning.candidate });
     else if (planning.outcome === 'refused') refuse(set.options, undefined, planning.reason);
@@ -139,7 +165,8 @@ export function rankRemedies(given: Case, { filters = {} }: { readonly filters?:
       seen.add(key);
       const assessment = solver.assess(planning.candidate.planned);
       const reason = whyNot(given, assessment);
-      if (reason === undefined) remedies.push(toRemedy(start, now, options, payback, planning.candidate, assessment));
+      if (reason === undefined)
+        remedies.push(toRemedy(start, now, options, payback, planning.candidate, assessment));
       else refuse(options, payback, reason);
     }
   }

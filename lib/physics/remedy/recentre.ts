@@ -4,7 +4,14 @@ import { windowRegion, type OrientedRegion } from '../geometry/oriented-region';
 import { sectionFrame } from '../geometry/section-frame';
 import { add, dot, scale } from '../geometry/vector';
 import type { Vec3 } from '../model/axes';
-import { changed, NOTHING_TO_CHANGE, refused, withPrescription, type Change, type TargetedCase } from './change';
+import {
+  changed,
+  NOTHING_TO_CHANGE,
+  refused,
+  withPrescription,
+  type Change,
+  type TargetedCase,
+} from './change';
 
 const regionMoved = (region: OrientedRegion, by: Vec3): OrientedRegion => ({
   axes: region.axes,
@@ -33,7 +40,10 @@ const centreMatters = (given: TargetedCase): boolean =>
  */
 export const recentre: Change = (given, solver) => {
   if (!centreMatters(given)) {
-    return refused('recentring-changes-nothing', 'Moving the FOV centre changes nothing here: fold depends on the acquired width alone.');
+    return refused(
+      'recentring-changes-nothing',
+      'Moving the FOV centre changes nothing here: fold depends on the acquired width alone.',
+    );
   }
   const frame = sectionFrame(given.prescription, 0);
   const [low, high] = solver.bodyAlongPhaseMm(given);
@@ -43,8 +53,14 @@ export const recentre: Change = (given, solver) => {
     const moved = withPrescription(given, { centreMm: add(given.prescription.centreMm, by) });
     const planned = followed(given, moved, by);
     if (solver.leavesPicture(planned) !== undefined) continue;
-    return changed(planned, `FOV centre ${figure(Math.abs(moveMm))} mm along ${AXIS_LETTERS[frame.phaseAxis]}`);
+    return changed(
+      planned,
+      `FOV centre ${figure(Math.abs(moveMm))} mm along ${AXIS_LETTERS[frame.phaseAxis]}`,
+    );
   }
   if (wanted === 0) return NOTHING_TO_CHANGE;
-  return refused('area-leaves-picture', 'Not possible: the area leaves the picture when the FOV centre moves.');
+  return refused(
+    'area-leaves-picture',
+    'Not possible: the area leaves the picture when the FOV centre moves.',
+  );
 };

@@ -17,7 +17,10 @@ export const regroupBreathHolds: Change = (given) => {
   const now = scanTime(p, patient, scanner);
   if (now.longestHoldS <= limitS) return NOTHING_TO_CHANGE;
   if (p.slices.mode === 'slab' || p.family === 'echo-planar') {
-    return refused('hold-not-divisible', `One breath-hold of ${figure(now.longestHoldS)} s cannot be divided in this family.`);
+    return refused(
+      'hold-not-divisible',
+      `One breath-hold of ${figure(now.longestHoldS)} s cannot be divided in this family.`,
+    );
   }
   if (p.family === 'balanced' || p.family === 'single-shot-echo-train') {
     return refused('slice-longer-than-hold', `One slice alone takes ${figure(now.longestHoldS)} s.`);
@@ -30,8 +33,15 @@ export const regroupBreathHolds: Change = (given) => {
     if (trMs >= p.trMs || Math.ceil(slices / slicesPerTr(trMs, p.sliceTimeMs)) !== holds) continue;
     const planned = withPrescription(given, { trMs });
     if (scanTime(planned.prescription, patient, scanner).longestHoldS <= limitS) {
-      return changed(planned, `TR ${figure(p.trMs)} → ${figure(trMs)} ms changes the contrast`, `${holds} breath-holds`);
+      return changed(
+        planned,
+        `TR ${figure(p.trMs)} → ${figure(trMs)} ms changes the contrast`,
+        `${holds} breath-holds`,
+      );
     }
   }
-  return refused('regrouping-not-enough', `Not even ${MOST_HOLDS} breath-holds bring one inside ${figure(limitS)} s.`);
+  return refused(
+    'regrouping-not-enough',
+    `Not even ${MOST_HOLDS} breath-holds bring one inside ${figure(limitS)} s.`,
+  );
 };

@@ -38,7 +38,9 @@ function changePhrase(kind: RemedyKind, given: TargetedCase, planned: TargetedCa
     case 'larger-fov-same-voxel':
       return `open the ${phase(after)} FOV to ${figure(after.fovPhaseMm)} mm with ${after.linesAcrossFov} lines, same voxel`;
     case 'recentre': {
-      const axis = before.centreMm.findIndex((value, index) => Math.abs(value - after.centreMm[index]!) > 1e-6);
+      const axis = before.centreMm.findIndex(
+        (value, index) => Math.abs(value - after.centreMm[index]!) > 1e-6,
+      );
       const move = after.centreMm[axis]! - before.centreMm[axis]!;
       const side = [
         ['right', 'left'],
@@ -81,7 +83,8 @@ export function remedySentence(
   planned: TargetedCase,
 ): string {
   const doing = changes.map((kind) => changePhrase(kind, given, planned));
-  const paying = payback === undefined ? '' : paybackPhrase(payback, given.prescription, planned.prescription);
+  const paying =
+    payback === undefined ? '' : paybackPhrase(payback, given.prescription, planned.prescription);
   if (doing.length === 0) return `${capitalised(paying)}.`;
   const done = capitalised(doing.join(' and '));
   return paying === '' ? `${done}.` : `${done}, and ${paying} to pay the time back.`;

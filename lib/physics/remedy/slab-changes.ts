@@ -2,7 +2,14 @@ import { nextAcquiredPartitions } from '../fold/acquired-lines';
 import { figure } from '../assess/words';
 import type { Case } from '../model/case';
 import type { Slab } from '../model/prescription';
-import { changed, NOTHING_TO_CHANGE, refused, withPrescription, type Change, type TargetedCase } from './change';
+import {
+  changed,
+  NOTHING_TO_CHANGE,
+  refused,
+  withPrescription,
+  type Change,
+  type TargetedCase,
+} from './change';
 
 const slabOf = (given: Case): Slab | undefined =>
   given.prescription.slices.mode === 'slab' ? given.prescription.slices : undefined;
@@ -25,7 +32,9 @@ export const sliceOversampling: Change = (given, solver) => {
         `keep-clear partitions free of wrap.`,
     );
   }
-  return enough === slab.acquiredPartitions ? NOTHING_TO_CHANGE : changed(withSlab(given, slab, { acquiredPartitions: enough }));
+  return enough === slab.acquiredPartitions
+    ? NOTHING_TO_CHANGE
+    : changed(withSlab(given, slab, { acquiredPartitions: enough }));
 };
 
 /** As few end partitions as needed are given up at both ends, at the acquired partitions there are now. */
@@ -53,10 +62,17 @@ export const enlargeSlab: Change = (given, solver) => {
   const share = slab.acquiredPartitions / slab.partitions;
   for (let added = 2; slab.partitions + added <= 2 * slab.partitions; added += 2) {
     const partitions = slab.partitions + added;
-    const acquiredPartitions = nextAcquiredPartitions(partitions, partitions * share, given.scanner.partitionStep);
+    const acquiredPartitions = nextAcquiredPartitions(
+      partitions,
+      partitions * share,
+      given.scanner.partitionStep,
+    );
     const planned = withSlab(given, slab, { partitions, acquiredPartitions });
     if (acquiredPartitions <= most(planned, { ...slab, partitions }) && solver.slabIsClean(planned)) {
-      return changed(planned, `${added} more partitions, ${figure(added * slab.partitionThicknessMm)} mm more slab`);
+      return changed(
+        planned,
+        `${added} more partitions, ${figure(added * slab.partitionThicknessMm)} mm more slab`,
+      );
     }
   }
   return refused('slab-not-enough', 'Even twice the slab does not keep the keep-clear area free of wrap.');
@@ -79,10 +95,13 @@ export const sharperPulse: Change = (given, solver) => {
   for (const sharpness of SHARPNESS_LADDER.filter((value) => value > now)) {
     const longer = (duration * sharpness) / now;
     const addedMs = longer - duration;
-    const planned = withPrescription(withSlab(given, slab, { timeBandwidthProduct: sharpness, pulseDurationMs: longer }), {
-      trMs: given.prescription.trMs + addedMs,
-      teMs: given.prescription.teMs + addedMs / 2,
-    });
+    const planned = withPrescription(
+      withSlab(given, slab, { timeBandwidthProduct: sharpness, pulseDurationMs: longer }),
+      {
+        trMs: given.prescription.trMs + addedMs,
+        teMs: given.prescription.teMs + addedMs / 2,
+      },
+    );
     if (solver.slabIsClean(planned)) {
       return changed(planned, `TR +${figure(addedMs)} ms and TE +${figure(addedMs / 2)} ms`);
     }

@@ -20,7 +20,11 @@ export function answerText(seed: number): string {
   if (seed % 25 === 0) answers.push(rankRemedies(given));
   if (seed % 250 === 0) {
     const { extents } = given.patient;
-    const unsure = { ...extents, anterior: { ...extents.anterior, spread: 8 }, left: { ...extents.left, spread: 10 } };
+    const unsure = {
+      ...extents,
+      anterior: { ...extents.anterior, spread: 8 },
+      left: { ...extents.left, spread: 10 },
+    };
     answers.push(foldProbability({ ...given, patient: { ...given.patient, extents: unsure } }));
   }
   return JSON.stringify(roundAssessment(answers));

@@ -43,18 +43,29 @@ describe('every family', () => {
     expect(assess(patient, prescription, keepClear, scanner, policy)).toEqual(assess(given));
   });
 
-  it.each(['axial', 'coronal', 'sagittal'] as const)('answers the %s plane with both phase directions', (plane) => {
-    const axes = { axial: ['RL', 'AP'], coronal: ['RL', 'SI'], sagittal: ['AP', 'SI'] } as const;
-    for (const phaseAxis of axes[plane]) {
-      const answer = assess(typicalCase({ prescription: typicalPrescription({ plane, phaseAxis, fovReadoutMm: 400 }) }));
-      expect(answer.phaseAxis).toBe(phaseAxis);
-      expect(answer.readoutAxis).toBe(axes[plane].find((axis) => axis !== phaseAxis));
-    }
-  });
+  it.each(['axial', 'coronal', 'sagittal'] as const)(
+    'answers the %s plane with both phase directions',
+    (plane) => {
+      const axes = { axial: ['RL', 'AP'], coronal: ['RL', 'SI'], sagittal: ['AP', 'SI'] } as const;
+      for (const phaseAxis of axes[plane]) {
+        const answer = assess(
+          typicalCase({ prescription: typicalPrescription({ plane, phaseAxis, fovReadoutMm: 400 }) }),
+        );
+        expect(answer.phaseAxis).toBe(phaseAxis);
+        expect(answer.readoutAxis).toBe(axes[plane].find((axis) => axis !== phaseAxis));
+      }
+    },
+  );
 });
 
 describe('not modelled', () => {
-  const trajectories: Trajectory[] = ['radial', 'spiral', 'rotating-blade', 'simultaneous-multi-slice', 'outer-volume-suppressed'];
+  const trajectories: Trajectory[] = [
+    'radial',
+    'spiral',
+    'rotating-blade',
+    'simultaneous-multi-slice',
+    'outer-volume-suppressed',
+  ];
   it.each(trajectories)('says so for %s, with a reason and without a fold result', (trajectory) => {
     const answer = assess(sketchCase({ prescription: typicalPrescription({ trajectory }) }));
     expect(answer.verdict).toBe('not-modelled');
@@ -70,19 +81,59 @@ describe('hard limits, each with its reason and number', () => {
     ['fov-under-minimum', { prescription: typicalPrescription({ fovPhaseMm: 80 }) }, '80 mm'],
     ['phase-fov-over-readout-fov', { prescription: typicalPrescription({ fovReadoutMm: 280 }) }, '280 mm'],
     ['matrix-over-maximum', { prescription: typicalPrescription({ readoutMatrix: 1100 }) }, '1100'],
-    ['lines-over-maximum', { prescription: typicalPrescription({ linesAcrossFov: 600, acquiredLines: 1100 }) }, '1100'],
-    ['phase-oversampling-over-maximum', { prescription: typicalPrescription({ acquiredLines: 481 }) }, '100.4 %'],
-    ['slice-oversampling-over-maximum', { prescription: prescriptionOf('gradient-echo-3d', { slices: slabOf({ acquiredPartitions: 129 }) }) }, '101.6 %'],
-    ['acceleration-over-maximum', { prescription: typicalPrescription({ acceleration: accelerated(5) }) }, '5'],
-    ['partial-fourier-under-minimum', { prescription: typicalPrescription({ partialFourierPhase: 0.55 }) }, '0.550'],
+    [
+      'lines-over-maximum',
+      { prescription: typicalPrescription({ linesAcrossFov: 600, acquiredLines: 1100 }) },
+      '1100',
+    ],
+    [
+      'phase-oversampling-over-maximum',
+      { prescription: typicalPrescription({ acquiredLines: 481 }) },
+      '100.4 %',
+    ],
+    [
+      'slice-oversampling-over-maximum',
+      { prescription: prescriptionOf('gradient-echo-3d', { slices: slabOf({ acquiredPartitions: 129 }) }) },
+      '101.6 %',
+    ],
+    [
+      'acceleration-over-maximum',
+      { prescription: typicalPrescription({ acceleration: accelerated(5) }) },
+      '5',
+    ],
+    [
+      'partial-fourier-under-minimum',
+      { prescription: typicalPrescription({ partialFourierPhase: 0.55 }) },
+      '0.550',
+    ],
     ['averages-over-maximum', { prescription: typicalPrescription({ averages: 17 }) }, '17'],
     ['train-over-maximum', { prescription: typicalPrescription({ echoTrainLength: 500 }) }, '500'],
     ['tr-under-minimum', { prescription: prescriptionOf('echo-planar', { trMs: 3000 }) }, '3600 ms'],
     ['te-under-minimum', { prescription: prescriptionOf('single-shot-echo-train', { teMs: 20 }) }, '52.5 ms'],
-    ['lines-off-grid', { scanner: typicalScanner({ lineStep: { kind: 'even-lines' } }), prescription: typicalPrescription({ acquiredLines: 253 }) }, '253'],
-    ['breath-hold-over-limit', { prescription: prescriptionOf('gradient-echo-3d'), policy: typicalPolicy({ strictBreathHold: true }) }, '21.5 s'],
+    [
+      'lines-off-grid',
+      {
+        scanner: typicalScanner({ lineStep: { kind: 'even-lines' } }),
+        prescription: typicalPrescription({ acquiredLines: 253 }),
+      },
+      '253',
+    ],
+    [
+      'breath-hold-over-limit',
+      { prescription: prescriptionOf('gradient-echo-3d'), policy: typicalPolicy({ strictBreathHold: true }) },
+      '21.5 s',
+    ],
     ['slice-does-not-fit', { prescription: typicalPrescription({ trMs: 100 }) }, '0'],
-    ['reference-lines-too-many', { prescription: typicalPrescription({ partialFourierPhase: 0.625, acceleration: accelerated(2, { referenceLines: 80 }) }) }, '80'],
+    [
+      'reference-lines-too-many',
+      {
+        prescription: typicalPrescription({
+          partialFourierPhase: 0.625,
+          acceleration: accelerated(2, { referenceLines: 80 }),
+        }),
+      },
+      '80',
+    ],
   ] as const;
 
   it.each(limits)('%s', (code, changes, number) => {
@@ -104,9 +155,15 @@ describe('hard limits, each with its reason and number', () => {
 
   it('counts the table first: nothing overrides it', () => {
     const answer = assess(
-      sketchCase({ patient: typicalPatient({ weightKg: measured(240) }), prescription: typicalPrescription({ averages: 17 }) }),
+      sketchCase({
+        patient: typicalPatient({ weightKg: measured(240) }),
+        prescription: typicalPrescription({ averages: 17 }),
+      }),
     );
-    expect(answer.reasons.slice(0, 2).map((reason) => reason.code)).toEqual(['table-load-over-limit', 'averages-over-maximum']);
+    expect(answer.reasons.slice(0, 2).map((reason) => reason.code)).toEqual([
+      'table-load-over-limit',
+      'averages-over-maximum',
+    ]);
   });
 });
 
@@ -117,10 +174,18 @@ describe('bad input', () => {
     ['prescription.averages', { prescription: typicalPrescription({ averages: 1.5 }) }],
     ['prescription.phaseAxis', { prescription: typicalPrescription({ phaseAxis: 'SI' }) }],
     ['prescription.slices.mode', { prescription: typicalPrescription({ slices: slabOf() }) }],
-    ['patient.extents.left.value', { patient: typicalPatient({ extents: { ...typicalPatient().extents, left: measured(-1) } }) }],
+    [
+      'patient.extents.left.value',
+      { patient: typicalPatient({ extents: { ...typicalPatient().extents, left: measured(-1) } }) },
+    ],
     ['policy.sureAt', { policy: typicalPolicy({ sureAt: 0.2 }) }],
     ['scanner.partitionStep', { scanner: typicalScanner({ partitionStep: 0 }) }],
-    ['keepClear.area.box.xMm', { keepClear: { ...LIVER_BOX, area: { kind: 'box', box: { xMm: [10, -10], yMm: [0, 1], zMm: [0, 1] } } } }],
+    [
+      'keepClear.area.box.xMm',
+      {
+        keepClear: { ...LIVER_BOX, area: { kind: 'box', box: { xMm: [10, -10], yMm: [0, 1], zMm: [0, 1] } } },
+      },
+    ],
   ] as const;
 
   it.each(refusals)('names %s, what was given and what is allowed', (argument, changes) => {
@@ -149,12 +214,14 @@ describe('assumptions', () => {
   });
 
   it('names the cautious slab pulse, the policy’s breath-hold and an unknown weight', () => {
-    const { weightKg: _, ...patient } = typicalPatient({ breathHoldS: { value: 15, source: 'policy-default', spread: 0 } });
+    const { weightKg: _, ...patient } = typicalPatient({
+      breathHoldS: { value: 15, source: 'policy-default', spread: 0 },
+    });
     const slices = slabOf();
     const { timeBandwidthProduct: __, pulseDurationMs: ___, ...unknownPulse } = slices;
-    const fields = assess(sketchCase({ patient, prescription: prescriptionOf('gradient-echo-3d', { slices: unknownPulse }) })).assumptions.map(
-      (entry) => entry.field,
-    );
+    const fields = assess(
+      sketchCase({ patient, prescription: prescriptionOf('gradient-echo-3d', { slices: unknownPulse }) }),
+    ).assumptions.map((entry) => entry.field);
     expect(fields).toEqual(
       expect.arrayContaining([
         'patient.weightKg',
@@ -177,12 +244,21 @@ describe('in both directions at once', () => {
     shape: {
       type: 'outline-prism' as const,
       along: 'x' as const,
-      rings: [[[y[0], z[0]], [y[1], z[0]], [y[1], z[1]], [y[0], z[1]]] as [number, number][]],
+      rings: [
+        [
+          [y[0], z[0]],
+          [y[1], z[0]],
+          [y[1], z[1]],
+          [y[0], z[1]],
+        ] as [number, number][],
+      ],
     },
   });
   const caseAt = (acquiredLines: number, acquiredPartitions: number) =>
     typicalCase({
-      patient: typicalPatient({ parts: [boxPart('trunk', [-150, 150], [-100, 100]), boxPart('arm', [200, 260], [150, 250])] }),
+      patient: typicalPatient({
+        parts: [boxPart('trunk', [-150, 150], [-100, 100]), boxPart('arm', [200, 260], [150, 250])],
+      }),
       prescription: prescriptionOf('gradient-echo-3d', {
         fovPhaseMm: 300,
         linesAcrossFov: 300,
@@ -190,7 +266,10 @@ describe('in both directions at once', () => {
         acceleration: accelerated(1),
         slices: slabOf({ selective: false, partitions: 200, partitionThicknessMm: 1, acquiredPartitions }),
       }),
-      keepClear: { area: { kind: 'box', box: { xMm: [-100, 100], yMm: [-150, 150], zMm: [-100, 100] } }, followsWindow: false },
+      keepClear: {
+        area: { kind: 'box', box: { xMm: [-100, 100], yMm: [-150, 150], zMm: [-100, 100] } },
+        followsWindow: false,
+      },
       policy: typicalPolicy({ marginMm: NO_MARGIN }),
       scanner: typicalScanner({ tissueReachMm: 260 }),
     });
@@ -204,7 +283,13 @@ describe('in both directions at once', () => {
 });
 
 describe('monotone', () => {
-  const order = { 'no-fold-expected': 0, 'fold-outside-keep-clear': 1, 'fold-in-keep-clear': 2, 'cannot-be-scanned': 3, 'not-modelled': 4 };
+  const order = {
+    'no-fold-expected': 0,
+    'fold-outside-keep-clear': 1,
+    'fold-in-keep-clear': 2,
+    'cannot-be-scanned': 3,
+    'not-modelled': 4,
+  };
   it('a larger margin never turns fold in the keep-clear area into none', () => {
     fc.assert(
       fc.property(
@@ -213,7 +298,12 @@ describe('monotone', () => {
         fc.integer({ min: 0, max: 30 }),
         (acquiredLines, margin, more) => {
           const at = (mm: number) =>
-            assess(sketchCase({ prescription: typicalPrescription({ acquiredLines }), policy: typicalPolicy({ marginMm: evenMargin(mm) }) }));
+            assess(
+              sketchCase({
+                prescription: typicalPrescription({ acquiredLines }),
+                policy: typicalPolicy({ marginMm: evenMargin(mm) }),
+              }),
+            );
           const small = at(margin);
           const large = at(margin + more);
           expect(order[large.verdict]).toBeGreaterThanOrEqual(order[small.verdict]);
@@ -229,7 +319,12 @@ describe('monotone', () => {
       Object.entries(typicalPatient().extents).map(([side, reading]) => [side, { ...reading, spread: 8 }]),
     ) as unknown as ReturnType<typeof typicalPatient>['extents'];
     const at = (sureAt: number) =>
-      assess(sketchCase({ patient: typicalPatient({ extents }), policy: typicalPolicy({ sureAt, marginMm: evenMargin(5) }) }));
+      assess(
+        sketchCase({
+          patient: typicalPatient({ extents }),
+          policy: typicalPolicy({ sureAt, marginMm: evenMargin(5) }),
+        }),
+      );
     const widths = [0.5, 0.7, 0.9, 0.95, 0.99].map((sureAt) => at(sureAt).width!.alwaysCleanMm);
     expect(widths).toEqual([...widths].sort((a, b) => a - b));
     expect(widths[0]).toBeCloseTo(315, 6);
@@ -240,8 +335,22 @@ describe('monotone', () => {
 
 describe('rounding for parity', () => {
   it('rounds to stated quanta, keeps shape and words, and has no negative zero', () => {
-    const rounded = roundAssessment({ depthMm: 1.23456, displayedShare: 0.12345678, snr: 1234.56789, scanS: -0.0001, text: 'x', list: [0.1, Infinity] });
-    expect(rounded).toEqual({ depthMm: 1.235, displayedShare: 0.123457, snr: 1234.57, scanS: 0, text: 'x', list: [0.1, Infinity] });
+    const rounded = roundAssessment({
+      depthMm: 1.23456,
+      displayedShare: 0.12345678,
+      snr: 1234.56789,
+      scanS: -0.0001,
+      text: 'x',
+      list: [0.1, Infinity],
+    });
+    expect(rounded).toEqual({
+      depthMm: 1.235,
+      displayedShare: 0.123457,
+      snr: 1234.57,
+      scanS: 0,
+      text: 'x',
+      list: [0.1, Infinity],
+    });
     expect(Object.is(rounded.scanS, 0)).toBe(true);
   });
 

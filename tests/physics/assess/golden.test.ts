@@ -12,7 +12,9 @@ const FOLDER = path.join(import.meta.dirname, '../../../fixtures/golden/abdomen'
 
 describe('golden answers', () => {
   it.each(ABDOMEN_PROTOCOL)('%s', (family) => {
-    const { now, remedies, notPossible, candidates } = rankRemedies(sketchCase({ prescription: prescriptionOf(family) }));
+    const { now, remedies, notPossible, candidates } = rankRemedies(
+      sketchCase({ prescription: prescriptionOf(family) }),
+    );
     const answer = roundAssessment({
       now: { ...now, slab: now.slab && { ...now.slab, partitions: now.slab.partitions.length } },
       remedies: remedies.map(({ assessment, prescription, ...remedy }) => ({

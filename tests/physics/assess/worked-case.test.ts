@@ -35,6 +35,8 @@ describe('sketch case: margin 5 every side, keep-clear from 140 anterior, FOV 30
     expect(verdict).toBe('fold-in-keep-clear');
     expect(fold?.depthWithMarginMm).toBeCloseTo(15, 3);
     expect(reasons[0]?.text).toBe('Posterior tissue lands on the anterior side, 15 mm deep with margin.');
-    expect(reasons[1]?.text).toBe('5 % oversampling is enough (315 mm acquired). Covering the whole body would take 16.7 %.');
+    expect(reasons[1]?.text).toBe(
+      '5 % oversampling is enough (315 mm acquired). Covering the whole body would take 16.7 %.',
+    );
   });
 });

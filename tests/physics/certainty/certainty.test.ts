@@ -33,14 +33,15 @@ describe('standard normal', () => {
     [0, 0.5],
     [1, 0.8413447461],
     [1.96, 0.9750021049],
-    [3, 0.9986501020],
+    [3, 0.998650102],
     [-2, 0.0227501319],
     [4.5, 0.9999966023],
   ])('Φ(%d) = %d', (x, p) => expect(normalCumulative(x)).toBeCloseTo(p, 9));
 
   it('inverts itself', () => {
     // 1e-9: the quantile's own stopping step is 1e-14, Φ loses digits near 1.
-    for (const p of [1e-6, 0.01, 0.3, 0.5, 0.77, 0.95, 0.999]) expect(normalCumulative(normalQuantile(p))).toBeCloseTo(p, 9);
+    for (const p of [1e-6, 0.01, 0.3, 0.5, 0.77, 0.95, 0.999])
+      expect(normalCumulative(normalQuantile(p))).toBeCloseTo(p, 9);
     expect(normalQuantile(0.95)).toBeCloseTo(1.6448536, 6);
   });
 
@@ -54,7 +55,12 @@ describe('quasi-random points', () => {
     const points = haltonPoints(512, 2);
     expect(points).toEqual(haltonPoints(512, 2));
     // Each quarter holds 128 of 512 within 3: the discrepancy of 512 Halton points in two dimensions is below 0.02.
-    for (const [a, b] of [[0, 0], [0, 1], [1, 0], [1, 1]] as const) {
+    for (const [a, b] of [
+      [0, 0],
+      [0, 1],
+      [1, 0],
+      [1, 1],
+    ] as const) {
       const share = points.filter(([x, y]) => Math.floor(x! * 2) === a && Math.floor(y! * 2) === b).length;
       expect(Math.abs(share - 128)).toBeLessThanOrEqual(6);
     }
@@ -103,9 +109,25 @@ describe('probability of fold', () => {
       extents: { ...patient.extents, right: measured(210, 15), left: measured(210, 15) },
     };
     // Keep-clear |x| < 10, W 230: trunk of half-width s folds when s > 220, the arm from s + 40 on when s < 200.
-    const prescription = prescriptionOf('balanced', { fovPhaseMm: 220, linesAcrossFov: 220, acquiredLines: 230, fovReadoutMm: 400 });
-    const keepClear = { area: { kind: 'box' as const, box: { xMm: [-10, 10] as const, yMm: [-50, 50] as const, zMm: [-60, 60] as const } }, followsWindow: false };
-    const given = sketchCase({ patient: spread, prescription, keepClear, policy: typicalPolicy({ marginMm: evenMargin(0) }) });
+    const prescription = prescriptionOf('balanced', {
+      fovPhaseMm: 220,
+      linesAcrossFov: 220,
+      acquiredLines: 230,
+      fovReadoutMm: 400,
+    });
+    const keepClear = {
+      area: {
+        kind: 'box' as const,
+        box: { xMm: [-10, 10] as const, yMm: [-50, 50] as const, zMm: [-60, 60] as const },
+      },
+      followsWindow: false,
+    };
+    const given = sketchCase({
+      patient: spread,
+      prescription,
+      keepClear,
+      policy: typicalPolicy({ marginMm: evenMargin(0) }),
+    });
     const answer = foldProbability(given);
     expect(answer.method).toBe('quasi-random');
     let folding = 0;
@@ -126,27 +148,56 @@ describe('probability of fold', () => {
 
 describe('sure at p', () => {
   it('sizes a remedy that holds for p of such patients', () => {
-    const given = sketchCase({ patient: withSpread(8), prescription: typicalPrescription(), policy: typicalPolicy({ marginMm: evenMargin(0), sureAt: 0.95 }) });
+    const given = sketchCase({
+      patient: withSpread(8),
+      prescription: typicalPrescription(),
+      policy: typicalPolicy({ marginMm: evenMargin(0), sureAt: 0.95 }),
+    });
     const first = rankRemedies(given).remedies.find((remedy) => remedy.key === 'phase-oversampling')!;
     const adopted = { ...given, prescription: first.prescription };
     // One line is 1.25 mm, so the grid can only make it surer.
     expect(foldProbability(adopted).probability).toBeLessThanOrEqual(0.05);
-    const oneLess = { ...adopted, prescription: { ...first.prescription, acquiredLines: first.prescription.acquiredLines - 1 } };
+    const oneLess = {
+      ...adopted,
+      prescription: { ...first.prescription, acquiredLines: first.prescription.acquiredLines - 1 },
+    };
     expect(foldProbability(oneLess).probability).toBeGreaterThan(0.05);
   });
 
   it('does not trust a width that is clean only in a gap between trunk and arm', () => {
     const patient = typicalPatient({ arms: { position: 'down', breadthMm: 80, depthMm: 100, gapMm: 40 } });
-    const unsure: Patient = { ...patient, extents: { ...patient.extents, right: measured(185.3, 15), left: measured(185.3, 15) } };
-    const prescription = prescriptionOf('balanced', { fovPhaseMm: 220, linesAcrossFov: 220, acquiredLines: 230, fovReadoutMm: 400 });
-    const keepClear = { area: { kind: 'box' as const, box: { xMm: [-10, 10] as const, yMm: [-50, 50] as const, zMm: [-60, 60] as const } }, followsWindow: false };
-    const given = sketchCase({ patient: unsure, prescription, keepClear, policy: typicalPolicy({ marginMm: evenMargin(0) }) });
+    const unsure: Patient = {
+      ...patient,
+      extents: { ...patient.extents, right: measured(185.3, 15), left: measured(185.3, 15) },
+    };
+    const prescription = prescriptionOf('balanced', {
+      fovPhaseMm: 220,
+      linesAcrossFov: 220,
+      acquiredLines: 230,
+      fovReadoutMm: 400,
+    });
+    const keepClear = {
+      area: {
+        kind: 'box' as const,
+        box: { xMm: [-10, 10] as const, yMm: [-50, 50] as const, zMm: [-60, 60] as const },
+      },
+      followsWindow: false,
+    };
+    const given = sketchCase({
+      patient: unsure,
+      prescription,
+      keepClear,
+      policy: typicalPolicy({ marginMm: evenMargin(0) }),
+    });
     const answer = assess(given);
     // At the 95 % size (half-width 210) 230 mm is clean; in most smaller patients it is not.
     expect(answer.fold?.inKeepClear).toBe(false);
     expect(answer.verdict).toBe('fold-in-keep-clear');
     expect(answer.reasons[0]?.code).toBe('clean-only-at-this-size');
-    const sure = { ...given, patient: { ...unsure, extents: { ...unsure.extents, right: measured(210), left: measured(210) } } };
+    const sure = {
+      ...given,
+      patient: { ...unsure, extents: { ...unsure.extents, right: measured(210), left: measured(210) } },
+    };
     expect(assess(sure).verdict).not.toBe('fold-in-keep-clear');
   });
 });

@@ -35,7 +35,8 @@ const painted = (how: RowSampling, from: number, to: number): Float64Array => {
 };
 const total = (row: Float64Array): number => row.reduce((sum, value) => sum + value, 0);
 const centroidMm = (row: Float64Array, { centreMm, fovMm, pixels }: RowSampling): number =>
-  row.reduce((sum, value, i) => sum + value * (centreMm - fovMm / 2 + ((i + 0.5) * fovMm) / pixels), 0) / total(row);
+  row.reduce((sum, value, i) => sum + value * (centreMm - fovMm / 2 + ((i + 0.5) * fovMm) / pixels), 0) /
+  total(row);
 
 describe('one row', () => {
   it('leaves tissue inside the picture where it is, pixel for pixel', () => {
@@ -91,14 +92,19 @@ describe('one row', () => {
   });
 
   it('crosses a solid where the circle’s equation says', () => {
-    const circle = { quadric: { centre: [0, 5, 0] as const, xx: 0.01, yy: 0.01, zz: 0, xy: 0, xz: 0, yz: 0 }, halfSpaces: [{ normal: [0, 1, 0] as const, limit: 10 }] };
+    const circle = {
+      quadric: { centre: [0, 5, 0] as const, xx: 0.01, yy: 0.01, zz: 0, xy: 0, xz: 0, yz: 0 },
+      halfSpaces: [{ normal: [0, 1, 0] as const, limit: 10 }],
+    };
     expect(rowInterval(circle, 6, 40)).toEqual([-3, 10]);
     expect(rowInterval(circle, 10.1, 0)).toBeUndefined();
   });
 });
 
 describe('contrast', () => {
-  const signal = (family: Parameters<typeof prescriptionOf>[0]) => (tissue: Parameters<typeof tissueSignal>[0]) => tissueSignal(tissue, prescriptionOf(family));
+  const signal =
+    (family: Parameters<typeof prescriptionOf>[0]) => (tissue: Parameters<typeof tissueSignal>[0]) =>
+      tissueSignal(tissue, prescriptionOf(family));
 
   it('fluid is bright and liver dark with T2 weighting; fat and liver bright, fluid dark with T1 weighting', () => {
     for (const family of ['echo-train-spin-echo', 'single-shot-echo-train'] as const) {
@@ -129,7 +135,8 @@ const quiet = { noiseShare: 0, sizePx: 256 } as const;
 const valueAt = (given: Case, xMm: number, yMm: number, options = {}): number => {
   const picture = simulateImage(given, { ...quiet, ...options });
   const p = given.prescription;
-  const [across, down] = p.phaseAxis === picture.horizontalAxis ? [p.fovPhaseMm, p.fovReadoutMm] : [p.fovReadoutMm, p.fovPhaseMm];
+  const [across, down] =
+    p.phaseAxis === picture.horizontalAxis ? [p.fovPhaseMm, p.fovReadoutMm] : [p.fovReadoutMm, p.fovPhaseMm];
   const column = Math.floor(((xMm + across / 2) / across) * picture.widthPx);
   const row = Math.floor(((yMm + down / 2) / down) * picture.heightPx);
   return picture.values[row * picture.widthPx + column]!;
@@ -153,7 +160,11 @@ describe('the picture', () => {
   it('shows the ghost of a grid that ends at W in the middle', () => {
     const at = (unfolding: 'image-domain-grid-ends' | 'k-space-self-calibrating') =>
       valueAt(
-        sketchCase({ prescription: typicalPrescription({ acceleration: { ...prescriptionOf('gradient-echo').acceleration, unfolding } }) }),
+        sketchCase({
+          prescription: typicalPrescription({
+            acceleration: { ...prescriptionOf('gradient-echo').acceleration, unfolding },
+          }),
+        }),
         0,
         10,
       );
@@ -162,7 +173,16 @@ describe('the picture', () => {
 
   it('moves fat along readout by its shift over the bandwidth', () => {
     const centroid = (bandwidthHzPerPixel: number): number => {
-      const given = sketchCase({ prescription: typicalPrescription({ bandwidthHzPerPixel, fovPhaseMm: 400, linesAcrossFov: 320, acquiredLines: 320, fovReadoutMm: 520, readoutMatrix: 416 }) });
+      const given = sketchCase({
+        prescription: typicalPrescription({
+          bandwidthHzPerPixel,
+          fovPhaseMm: 400,
+          linesAcrossFov: 320,
+          acquiredLines: 320,
+          fovReadoutMm: 520,
+          readoutMatrix: 416,
+        }),
+      });
       const { values, widthPx, heightPx } = simulateImage(given, { noiseShare: 0, sizePx: 416 });
       const row = Math.floor(heightPx / 2);
       let edge = 0;
@@ -197,17 +217,37 @@ describe('the picture', () => {
 
   it('mixes the far end into end partitions of a slab, not into its middle', () => {
     const at = (acquiredPartitions: number, sliceOffsetMm: number) =>
-      simulateImage(sketchCase({ prescription: prescriptionOf('gradient-echo-3d', { slices: slabOf({ acquiredPartitions }) }) }), { ...quiet, sliceOffsetMm }).values;
-    const difference = (a: Float32Array, b: Float32Array): number => a.reduce((sum, value, i) => sum + Math.abs(value - b[i]!), 0) / a.length;
+      simulateImage(
+        sketchCase({
+          prescription: prescriptionOf('gradient-echo-3d', { slices: slabOf({ acquiredPartitions }) }),
+        }),
+        { ...quiet, sliceOffsetMm },
+      ).values;
+    const difference = (a: Float32Array, b: Float32Array): number =>
+      a.reduce((sum, value, i) => sum + Math.abs(value - b[i]!), 0) / a.length;
     expect(difference(at(64, 108), at(128, 108))).toBeGreaterThan(0.05);
     expect(difference(at(64, 0), at(128, 0))).toBeLessThan(0.002);
   });
 
   it('darkens what lies under a presaturation band, and never to nothing', () => {
-    const band = { side: 'posterior', innerEdgeMm: 150, thicknessMm: 40, nominalFlipDeg: 90, delayMs: 10 } as const;
-    const with_ = valueAt(sketchCase({ prescription: typicalPrescription({ presaturation: [band] }) }), 0, -147);
+    const band = {
+      side: 'posterior',
+      innerEdgeMm: 150,
+      thicknessMm: 40,
+      nominalFlipDeg: 90,
+      delayMs: 10,
+    } as const;
+    const with_ = valueAt(
+      sketchCase({ prescription: typicalPrescription({ presaturation: [band] }) }),
+      0,
+      -147,
+    );
     const without = valueAt(sketchCase(), 0, -147);
-    const tissueAlone = valueAt(sketchCase({ prescription: typicalPrescription({ acquiredLines: 300 }) }), 0, -147);
+    const tissueAlone = valueAt(
+      sketchCase({ prescription: typicalPrescription({ acquiredLines: 300 }) }),
+      0,
+      -147,
+    );
     expect(with_).toBeLessThan(tissueAlone + 0.1 * (without - tissueAlone));
     expect(with_).toBeGreaterThan(tissueAlone);
   });
@@ -217,11 +257,36 @@ describe('the picture', () => {
       const levels = toGreyLevels(simulateImage(given, quiet).values);
       return new Set([...levels].map((level) => level >> 4)).size;
     };
-    for (const family of SEQUENCE_FAMILIES) expect(contrast(sketchCase({ prescription: prescriptionOf(family) })), family).toBeGreaterThanOrEqual(5);
-    const sizes: Record<Exclude<BodyRegion, 'abdomen'>, number> = { pelvis: 180, chest: 170, head: 78, shoulder: 230, hip: 190, knee: 65, breast: 180 };
+    for (const family of SEQUENCE_FAMILIES)
+      expect(contrast(sketchCase({ prescription: prescriptionOf(family) })), family).toBeGreaterThanOrEqual(
+        5,
+      );
+    const sizes: Record<Exclude<BodyRegion, 'abdomen'>, number> = {
+      pelvis: 180,
+      chest: 170,
+      head: 78,
+      shoulder: 230,
+      hip: 190,
+      knee: 65,
+      breast: 180,
+    };
     for (const [region, half] of Object.entries(sizes)) {
-      const patient = typicalPatient({ region: region as BodyRegion, extents: extentsOf({ right: half, left: half, anterior: half * 0.7, posterior: half * 0.7, superior: 120, inferior: 120 }) });
-      const prescription = typicalPrescription({ fovPhaseMm: half * 2.2, fovReadoutMm: half * 2.4, slices: stackOf(20, 5) });
+      const patient = typicalPatient({
+        region: region as BodyRegion,
+        extents: extentsOf({
+          right: half,
+          left: half,
+          anterior: half * 0.7,
+          posterior: half * 0.7,
+          superior: 120,
+          inferior: 120,
+        }),
+      });
+      const prescription = typicalPrescription({
+        fovPhaseMm: half * 2.2,
+        fovReadoutMm: half * 2.4,
+        slices: stackOf(20, 5),
+      });
       expect(contrast(sketchCase({ patient, prescription })), region).toBeGreaterThanOrEqual(5);
     }
   });

@@ -20,8 +20,10 @@ import {
   typicalScanner,
 } from '@/tests/support/physics-cases';
 
-const byKey = (ranking: Ranking, key: string): Remedy | undefined => ranking.remedies.find((remedy) => remedy.key === key);
-const refusal = (ranking: Ranking, key: string) => ranking.notPossible.find((entry) => entry.key === key)?.reason;
+const byKey = (ranking: Ranking, key: string): Remedy | undefined =>
+  ranking.remedies.find((remedy) => remedy.key === key);
+const refusal = (ranking: Ranking, key: string) =>
+  ranking.notPossible.find((entry) => entry.key === key)?.reason;
 
 /** The case once a remedy is adopted; its keep-clear area is a box, so it stays where it was. */
 const adopted = (given: Case, remedy: Remedy): Case => ({
@@ -34,41 +36,65 @@ const armsDown = { position: 'down', breadthMm: 90, depthMm: 100, gapMm: 15 } as
 
 describe('every ranking', () => {
   const cases: [string, Case][] = [
-    ...SEQUENCE_FAMILIES.map((family): [string, Case] => [family, sketchCase({ prescription: prescriptionOf(family) })]),
-    ['arms down', sketchCase({ patient: typicalPatient({ arms: armsDown }), prescription: prescriptionOf('balanced') })],
+    ...SEQUENCE_FAMILIES.map((family): [string, Case] => [
+      family,
+      sketchCase({ prescription: prescriptionOf(family) }),
+    ]),
+    [
+      'arms down',
+      sketchCase({ patient: typicalPatient({ arms: armsDown }), prescription: prescriptionOf('balanced') }),
+    ],
     ['whole picture', typicalCase({ prescription: prescriptionOf('gradient-echo-3d') })],
-    ['unfolding grid ends', sketchCase({ prescription: typicalPrescription({ acceleration: accelerated(2, { unfolding: 'image-domain-grid-ends' }) }) })],
+    [
+      'unfolding grid ends',
+      sketchCase({
+        prescription: typicalPrescription({
+          acceleration: accelerated(2, { unfolding: 'image-domain-grid-ends' }),
+        }),
+      }),
+    ],
   ];
 
-  it.each(cases)('%s: keys are unique, terms are whole tenths that add up, the order is the stated one', (_, given) => {
-    const { remedies } = rankRemedies(given);
-    expect(remedies.length).toBeGreaterThan(0);
-    expect(new Set(remedies.map((remedy) => remedy.key)).size).toBe(remedies.length);
-    for (const { costTenths, terms, changes, payback } of remedies) {
-      expect(terms.every((term) => Number.isInteger(term.tenths) && term.tenths > 0 && term.text !== '')).toBe(true);
-      expect(terms.reduce((sum, term) => sum + term.tenths, 0)).toBe(costTenths);
-      expect(changes.length).toBeLessThanOrEqual(2);
-      expect(changes.length + (payback === undefined ? 0 : 1)).toBeGreaterThan(0);
-    }
-    expect([...remedies].sort(compareRemedies)).toEqual(remedies);
-  });
+  it.each(cases)(
+    '%s: keys are unique, terms are whole tenths that add up, the order is the stated one',
+    (_, given) => {
+      const { remedies } = rankRemedies(given);
+      expect(remedies.length).toBeGreaterThan(0);
+      expect(new Set(remedies.map((remedy) => remedy.key)).size).toBe(remedies.length);
+      for (const { costTenths, terms, changes, payback } of remedies) {
+        expect(
+          terms.every((term) => Number.isInteger(term.tenths) && term.tenths > 0 && term.text !== ''),
+        ).toBe(true);
+        expect(terms.reduce((sum, term) => sum + term.tenths, 0)).toBe(costTenths);
+        expect(changes.length).toBeLessThanOrEqual(2);
+        expect(changes.length + (payback === undefined ? 0 : 1)).toBeGreaterThan(0);
+      }
+      expect([...remedies].sort(compareRemedies)).toEqual(remedies);
+    },
+  );
 
-  it.each(cases)('%s: the first remedy leaves no fold in the keep-clear area, also when asked again after adopting it', (_, given) => {
-    const { remedies } = rankRemedies(given);
-    expect(remedies[0]!.assessment.verdict).not.toBe('fold-in-keep-clear');
-    if (given.keepClear.area.kind !== 'box') return;
-    const again = assess(adopted(given, remedies[0]!));
-    expect(again.verdict).toBe(remedies[0]!.assessment.verdict);
-    expect(again.fold).toEqual(remedies[0]!.assessment.fold);
-    expect(again.time).toEqual(remedies[0]!.assessment.time);
-  });
+  it.each(cases)(
+    '%s: the first remedy leaves no fold in the keep-clear area, also when asked again after adopting it',
+    (_, given) => {
+      const { remedies } = rankRemedies(given);
+      expect(remedies[0]!.assessment.verdict).not.toBe('fold-in-keep-clear');
+      if (given.keepClear.area.kind !== 'box') return;
+      const again = assess(adopted(given, remedies[0]!));
+      expect(again.verdict).toBe(remedies[0]!.assessment.verdict);
+      expect(again.fold).toEqual(remedies[0]!.assessment.fold);
+      expect(again.time).toEqual(remedies[0]!.assessment.time);
+    },
+  );
 
-  it.each(cases)('%s: gives the same list twice, one sentence each, and a reason for everything not possible', (_, given) => {
-    const ranking = rankRemedies(given);
-    expect(rankRemedies({ ...given, patient: { ...given.patient } })).toEqual(ranking);
-    for (const { sentence } of ranking.remedies) expect(sentence).toMatch(/^[A-Z0-9].*[^.]\.$/);
-    for (const { reason } of ranking.notPossible) expect(reason.text).toMatch(/\.$/);
-  });
+  it.each(cases)(
+    '%s: gives the same list twice, one sentence each, and a reason for everything not possible',
+    (_, given) => {
+      const ranking = rankRemedies(given);
+      expect(rankRemedies({ ...given, patient: { ...given.patient } })).toEqual(ranking);
+      for (const { sentence } of ranking.remedies) expect(sentence).toMatch(/^[A-Z0-9].*[^.]\.$/);
+      for (const { reason } of ranking.notPossible) expect(reason.text).toMatch(/\.$/);
+    },
+  );
 
   it('marks exactly what another one beats', () => {
     const { remedies } = rankRemedies(sketchCase());
@@ -113,7 +139,12 @@ describe('the sketch’s case', () => {
 
   it('swaps at each axis’s own pixel: 384 lines, 60 % more time', () => {
     const swapped = byKey(ranking, 'swap')!;
-    expect(swapped.prescription).toMatchObject({ phaseAxis: 'RL', acquiredLines: 384, fovPhaseMm: 480, fovReadoutMm: 480 });
+    expect(swapped.prescription).toMatchObject({
+      phaseAxis: 'RL',
+      acquiredLines: 384,
+      fovPhaseMm: 480,
+      fovReadoutMm: 480,
+    });
     expect(swapped.terms.find((term) => term.kind === 'time')?.tenths).toBe(600);
   });
 });
@@ -121,7 +152,9 @@ describe('the sketch’s case', () => {
 describe('what is never silently dropped', () => {
   it('arms that cannot be raised', () => {
     const arms = { ...armsDown, position: 'cannot-be-raised' } as const;
-    const ranking = rankRemedies(sketchCase({ patient: typicalPatient({ arms }), prescription: prescriptionOf('balanced') }));
+    const ranking = rankRemedies(
+      sketchCase({ patient: typicalPatient({ arms }), prescription: prescriptionOf('balanced') }),
+    );
     expect(refusal(ranking, 'arms-up')?.code).toBe('arms-cannot-be-raised');
     expect(ranking.remedies.some((remedy) => remedy.changes.includes('arms-up'))).toBe(false);
   });
@@ -132,12 +165,21 @@ describe('what is never silently dropped', () => {
   });
 
   it('oversampling beyond the scanner’s maximum, with both numbers', () => {
-    const ranking = rankRemedies(sketchCase({ scanner: typicalScanner({ limits: { phaseOversamplingMaxPct: 3 } }) }));
-    expect(refusal(ranking, 'phase-oversampling')?.text).toContain('5 % phase oversampling (315 mm acquired) is more');
+    const ranking = rankRemedies(
+      sketchCase({ scanner: typicalScanner({ limits: { phaseOversamplingMaxPct: 3 } }) }),
+    );
+    expect(refusal(ranking, 'phase-oversampling')?.text).toContain(
+      '5 % phase oversampling (315 mm acquired) is more',
+    );
   });
 
   it('a FOV beyond the scanner’s maximum', () => {
-    const ranking = rankRemedies(sketchCase({ prescription: typicalPrescription({ fovReadoutMm: 310 }), scanner: typicalScanner({ limits: { fovMaxMm: 310 } }) }));
+    const ranking = rankRemedies(
+      sketchCase({
+        prescription: typicalPrescription({ fovReadoutMm: 310 }),
+        scanner: typicalScanner({ limits: { fovMaxMm: 310 } }),
+      }),
+    );
     expect(refusal(ranking, 'larger-fov-same-matrix')?.text).toContain('315 mm');
   });
 
@@ -153,11 +195,15 @@ describe('what is never silently dropped', () => {
 
   it('dropping end partitions that hold the area', () => {
     const prescription = prescriptionOf('echo-train-spin-echo-3d');
-    expect(refusal(rankRemedies(sketchCase({ prescription })), 'drop-end-partitions')?.code).toBe('area-leaves-picture');
+    expect(refusal(rankRemedies(sketchCase({ prescription })), 'drop-end-partitions')?.code).toBe(
+      'area-leaves-picture',
+    );
   });
 
   it('remedies that leave more fold outside than the site tolerates', () => {
-    const ranking = rankRemedies(sketchCase({ policy: typicalPolicy({ marginMm: evenMargin(5), tolerateFoldOutsidePct: 0.1 }) }));
+    const ranking = rankRemedies(
+      sketchCase({ policy: typicalPolicy({ marginMm: evenMargin(5), tolerateFoldOutsidePct: 0.1 }) }),
+    );
     expect(refusal(ranking, 'phase-oversampling')?.code).toBe('fold-outside-over-tolerance');
     expect(ranking.remedies[0]!.assessment.fold!.displayedShare).toBeLessThanOrEqual(0.001);
   });
@@ -167,11 +213,15 @@ describe('recentring', () => {
   const ends = accelerated(2, { unfolding: 'image-domain-grid-ends' });
 
   it('is offered where the unfolding grid ends at the acquired width and the body is off-centre', () => {
-    const given = sketchCase({ prescription: typicalPrescription({ centreMm: [0, 10, 0], acceleration: ends }) });
+    const given = sketchCase({
+      prescription: typicalPrescription({ centreMm: [0, 10, 0], acceleration: ends }),
+    });
     const ranking = rankRemedies(given);
     const moved = byKey(ranking, 'recentre+phase-oversampling')!;
     expect(moved.prescription.centreMm).toEqual([0, 0, 0]);
-    expect(moved.prescription.acquiredLines).toBeLessThan(byKey(ranking, 'phase-oversampling')!.prescription.acquiredLines);
+    expect(moved.prescription.acquiredLines).toBeLessThan(
+      byKey(ranking, 'phase-oversampling')!.prescription.acquiredLines,
+    );
     expect(moved.terms.find((term) => term.kind === 'effort')?.text).toContain('FOV centre to move');
   });
 
@@ -180,7 +230,11 @@ describe('recentring', () => {
     const following = (yMm: readonly [number, number]) =>
       sketchCase({
         prescription,
-        keepClear: { area: { kind: 'whole-picture' }, followsWindow: true, mustStayDisplayed: { xMm: [-100, 100], yMm, zMm: [-50, 50] } },
+        keepClear: {
+          area: { kind: 'whole-picture' },
+          followsWindow: true,
+          mustStayDisplayed: { xMm: [-100, 100], yMm, zMm: [-50, 50] },
+        },
       });
     const free = rankRemedies(following([-100, 100]));
     expect(byKey(free, 'recentre+phase-oversampling')?.prescription.centreMm[1]).toBe(0);
@@ -193,7 +247,12 @@ describe('recentring', () => {
 describe('slab remedies', () => {
   const slabCase = (slices: Parameters<typeof slabOf>[0], changes: Partial<Case> = {}): Case =>
     sketchCase({
-      prescription: prescriptionOf('gradient-echo-3d', { fovPhaseMm: 360, fovReadoutMm: 480, breathing: 'free', slices: slabOf({ partitions: 40, acquiredPartitions: 40, ...slices }) }),
+      prescription: prescriptionOf('gradient-echo-3d', {
+        fovPhaseMm: 360,
+        fovReadoutMm: 480,
+        breathing: 'free',
+        slices: slabOf({ partitions: 40, acquiredPartitions: 40, ...slices }),
+      }),
       ...changes,
     });
 
@@ -204,7 +263,10 @@ describe('slab remedies', () => {
     if (slices.mode !== 'slab') throw new Error('a slab stays one');
     expect(remedy.assessment.slab?.contaminatedInKeepClear).toBe(0);
     expect(slices.acquiredPartitions).toBe(rankRemedies(given).now.slab?.smallestCleanPartitions);
-    const oneLess = { ...remedy.prescription, slices: { ...slices, acquiredPartitions: slices.acquiredPartitions - 1 } };
+    const oneLess = {
+      ...remedy.prescription,
+      slices: { ...slices, acquiredPartitions: slices.acquiredPartitions - 1 },
+    };
     expect(assess({ ...given, prescription: oneLess }).slab?.contaminatedInKeepClear).toBeGreaterThan(0);
   });
 
@@ -216,8 +278,14 @@ describe('slab remedies', () => {
   });
 
   it('a sharper pulse lasts longer, and TR and TE with it', () => {
-    const box = { ...LIVER_BOX, area: { kind: 'box', box: { xMm: [-190, 60], yMm: [-140, 95], zMm: [-50, 50] } } } as const;
-    const remedy = byKey(rankRemedies(slabCase({ timeBandwidthProduct: 4, pulseDurationMs: 0.5 }, { keepClear: box })), 'sharper-pulse')!;
+    const box = {
+      ...LIVER_BOX,
+      area: { kind: 'box', box: { xMm: [-190, 60], yMm: [-140, 95], zMm: [-50, 50] } },
+    } as const;
+    const remedy = byKey(
+      rankRemedies(slabCase({ timeBandwidthProduct: 4, pulseDurationMs: 0.5 }, { keepClear: box })),
+      'sharper-pulse',
+    )!;
     const { slices, trMs, teMs } = remedy.prescription;
     if (slices.mode !== 'slab') throw new Error('a slab stays one');
     expect(slices.pulseDurationMs! / 0.5).toBeCloseTo(slices.timeBandwidthProduct! / 4, 9);
@@ -234,23 +302,36 @@ describe('slab remedies', () => {
 
   it('dropped end partitions cost their millimetres', () => {
     const whole = { area: { kind: 'whole-picture' }, followsWindow: false } as const;
-    const remedy = byKey(rankRemedies(slabCase({}, { keepClear: whole })), 'drop-end-partitions+phase-oversampling') ?? byKey(rankRemedies(slabCase({}, { keepClear: whole })), 'drop-end-partitions')!;
+    const remedy =
+      byKey(rankRemedies(slabCase({}, { keepClear: whole })), 'drop-end-partitions+phase-oversampling') ??
+      byKey(rankRemedies(slabCase({}, { keepClear: whole })), 'drop-end-partitions')!;
     const { slices } = remedy.prescription;
     if (slices.mode !== 'slab') throw new Error('a slab stays one');
-    expect(remedy.terms.find((term) => term.kind === 'effort')?.text).toContain(`${2 * slices.droppedPartitionsPerEnd * 3.5} mm of coverage`);
+    expect(remedy.terms.find((term) => term.kind === 'effort')?.text).toContain(
+      `${2 * slices.droppedPartitionsPerEnd * 3.5} mm of coverage`,
+    );
   });
 });
 
 describe('breath-holds', () => {
-  const held = (family: 'gradient-echo' | 'gradient-echo-3d', seconds: number, changes: Partial<Case['prescription']> = {}) =>
+  const held = (
+    family: 'gradient-echo' | 'gradient-echo-3d',
+    seconds: number,
+    changes: Partial<Case['prescription']> = {},
+  ) =>
     sketchCase({
       patient: typicalPatient({ breathHoldS: measured(seconds) }),
-      prescription: prescriptionOf(family, { acquiredLines: family === 'gradient-echo' ? 170 : 200, ...changes }),
+      prescription: prescriptionOf(family, {
+        acquiredLines: family === 'gradient-echo' ? 170 : 200,
+        ...changes,
+      }),
     });
 
   it('are paid for even where nothing folds', () => {
     const ranking = rankRemedies(held('gradient-echo', 10));
-    expect(ranking.remedies.some((remedy) => remedy.changes.length === 0 && remedy.payback !== undefined)).toBe(true);
+    expect(
+      ranking.remedies.some((remedy) => remedy.changes.length === 0 && remedy.payback !== undefined),
+    ).toBe(true);
   });
 
   it('are regrouped by a shorter TR and fewer slices a hold', () => {
@@ -263,13 +344,16 @@ describe('breath-holds', () => {
   });
 
   it('cannot be divided in 3D', () => {
-    expect(refusal(rankRemedies(held('gradient-echo-3d', 10)), 'regroup-breath-holds')?.code).toBe('hold-not-divisible');
+    expect(refusal(rankRemedies(held('gradient-echo-3d', 10)), 'regroup-breath-holds')?.code).toBe(
+      'hold-not-divisible',
+    );
   });
 
   it('beyond a strict limit are not possible', () => {
     const given = { ...held('gradient-echo-3d', 10), policy: typicalPolicy({ strictBreathHold: true }) };
     const ranking = rankRemedies(given);
-    for (const remedy of ranking.remedies) expect(remedy.assessment.time!.longestHoldS).toBeLessThanOrEqual(10);
+    for (const remedy of ranking.remedies)
+      expect(remedy.assessment.time!.longestHoldS).toBeLessThanOrEqual(10);
     expect(ranking.notPossible.some((entry) => entry.reason.code === 'breath-hold-over-limit')).toBe(true);
   });
 });
@@ -289,19 +373,37 @@ describe('presaturation', () => {
     const strict = { ...given, policy: typicalPolicy({ marginMm: evenMargin(5), tissueTolerance: 0.02 }) };
     const remedy = byKey(rankRemedies(strict), 'presaturation');
     expect(remedy?.assessment.verdict).toBe('fold-in-keep-clear');
-    expect(rankRemedies(strict).remedies.findIndex((entry) => entry.key === 'presaturation')).toBeGreaterThan(0);
+    expect(rankRemedies(strict).remedies.findIndex((entry) => entry.key === 'presaturation')).toBeGreaterThan(
+      0,
+    );
   });
 
   it('has no place in a steady state that nothing may interrupt', () => {
-    expect(refusal(rankRemedies(sketchCase({ prescription: prescriptionOf('balanced') })), 'presaturation')?.code).toBe('no-room-for-a-band');
+    expect(
+      refusal(rankRemedies(sketchCase({ prescription: prescriptionOf('balanced') })), 'presaturation')?.code,
+    ).toBe('no-room-for-a-band');
   });
 });
 
 describe('coil elements', () => {
-  const elements = [-200, -100, 0, 100, 200].map((middle, i) => ({ name: `row ${i + 1}`, seesFromMm: middle - 100, seesToMm: middle + 100 }));
-  const swapped = prescriptionOf('balanced', { phaseAxis: 'SI', fovPhaseMm: 300, fovReadoutMm: 500, linesAcrossFov: 168, acquiredLines: 168 });
+  const elements = [-200, -100, 0, 100, 200].map((middle, i) => ({
+    name: `row ${i + 1}`,
+    seesFromMm: middle - 100,
+    seesToMm: middle + 100,
+  }));
+  const swapped = prescriptionOf('balanced', {
+    phaseAxis: 'SI',
+    fovPhaseMm: 300,
+    fovReadoutMm: 500,
+    linesAcrossFov: 168,
+    acquiredLines: 168,
+  });
   const keepClear = { area: { kind: 'whole-picture' }, followsWindow: false } as const;
-  const given = sketchCase({ prescription: swapped, keepClear, scanner: typicalScanner({ coils: [{ name: 'body array', elements }] }) });
+  const given = sketchCase({
+    prescription: swapped,
+    keepClear,
+    scanner: typicalScanner({ coils: [{ name: 'body array', elements }] }),
+  });
 
   it('are left out where they see only what lies beyond the picture', () => {
     const ranking = rankRemedies(given);
@@ -311,17 +413,23 @@ describe('coil elements', () => {
     expect(remedy.assessment.width?.firstCleanMm).toBeCloseTo(355, 6);
     expect(ranking.now.width?.firstCleanMm).toBeCloseTo(405, 6);
     expect(remedy.terms.find((term) => term.kind === 'effort')?.text).toContain('coil elements to choose');
-    expect(assess(adopted({ ...given, keepClear: LIVER_BOX }, remedy)).verdict).not.toBe('fold-in-keep-clear');
+    expect(assess(adopted({ ...given, keepClear: LIVER_BOX }, remedy)).verdict).not.toBe(
+      'fold-in-keep-clear',
+    );
   });
 
   it('are refused by name when nobody knows them', () => {
-    expect(() => assess({ ...given, prescription: { ...swapped, coilElements: ['row 9'] } })).toThrow(/row 9; allowed: row 1/);
+    expect(() => assess({ ...given, prescription: { ...swapped, coilElements: ['row 9'] } })).toThrow(
+      /row 9; allowed: row 1/,
+    );
   });
 });
 
 describe('filters', () => {
   it('keep to the changes and paybacks asked for', () => {
-    const ranking = rankRemedies(sketchCase(), { filters: { changes: ['swap', 'phase-oversampling'], paybacks: [] } });
+    const ranking = rankRemedies(sketchCase(), {
+      filters: { changes: ['swap', 'phase-oversampling'], paybacks: [] },
+    });
     expect(ranking.remedies.length).toBeGreaterThan(0);
     for (const remedy of ranking.remedies) {
       expect(remedy.payback).toBeUndefined();
@@ -338,8 +446,15 @@ describe('filters', () => {
 describe('five sequences of an abdomen', () => {
   it.each(ABDOMEN_PROTOCOL)('%s: cost grows with the weight of what it spends', (family) => {
     const given = sketchCase({ prescription: prescriptionOf(family) });
-    const dear = { ...given, policy: { ...given.policy, weights: { ...given.policy.weights, timePct: 10, snrLostPct: 10, voxelPct: 10 } } };
+    const dear = {
+      ...given,
+      policy: {
+        ...given.policy,
+        weights: { ...given.policy.weights, timePct: 10, snrLostPct: 10, voxelPct: 10 },
+      },
+    };
     const costs = new Map(rankRemedies(given).remedies.map((remedy) => [remedy.key, remedy.costTenths]));
-    for (const remedy of rankRemedies(dear).remedies) expect(remedy.costTenths).toBeGreaterThanOrEqual(costs.get(remedy.key) ?? 0);
+    for (const remedy of rankRemedies(dear).remedies)
+      expect(remedy.costTenths).toBeGreaterThanOrEqual(costs.get(remedy.key) ?? 0);
   });
 });
