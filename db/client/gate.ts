@@ -43,7 +43,8 @@ export interface DueWork {
   readonly id: string;
 }
 
-export async function dueWork(kind: 'mail', atMost: number, db: Database = database()): Promise<DueWork[]> {
+/** Work that a sweep finds when its wake-up call was lost: mail to send, plan sheets to make. */
+export async function dueWork(kind: 'mail' | 'plan-sheet', atMost: number, db: Database = database()): Promise<DueWork[]> {
   const { rows } = await sql<{ site_id: string; id: string }>`
     select site_id, id from gate.due_work(${kind}, ${atMost})`.execute(db);
   return rows.map((row) => ({ siteId: row.site_id, id: row.id }));

@@ -92,6 +92,15 @@ export interface BookingTombstone {
   site_id: string;
 }
 
+export interface KeepClearRequest {
+  booking_id: string;
+  data: Json;
+  id: Generated<string>;
+  requested_at: Generated<Timestamp>;
+  requested_by: string;
+  site_id: string;
+}
+
 export interface MailOutbox {
   attempts: Generated<number>;
   created_at: Generated<Timestamp>;
@@ -138,6 +147,23 @@ export interface Plan {
   short_code: string;
   site_id: string;
   state: Generated<string>;
+}
+
+export interface PlanSheet {
+  attempts: Generated<number>;
+  bytes: Buffer | null;
+  content_hash: string;
+  finished_at: Timestamp | null;
+  id: Generated<string>;
+  last_error: Generated<string>;
+  next_attempt_at: Generated<Timestamp>;
+  paper: string;
+  plan_id: string;
+  plan_version: number;
+  requested_at: Generated<Timestamp>;
+  requested_by: string;
+  site_id: string;
+  status: Generated<string>;
 }
 
 export interface PlanVersion {
@@ -251,10 +277,12 @@ export interface DB {
   booking: Booking;
   booking_state: BookingState;
   booking_tombstone: BookingTombstone;
+  keep_clear_request: KeepClearRequest;
   mail_outbox: MailOutbox;
   one_time_token: OneTimeToken;
   outcome: Outcome;
   plan: Plan;
+  plan_sheet: PlanSheet;
   plan_version: PlanVersion;
   protocol: Protocol;
   protocol_version: ProtocolVersion;

@@ -32,6 +32,12 @@ describe('plans of the everyday queries', () => {
       trx.selectFrom('plan').select('id').where('site_id', '=', siteId).where('short_code', '=', 'FILL'),
     plan_version_site_id_plan_id_idempotency_key_key: (trx, siteId) =>
       trx.selectFrom('plan_version').select('version').where('site_id', '=', siteId).where('plan_id', '=', siteId).where('idempotency_key', '=', 'first-save'),
+    keep_clear_request_booking: (trx, siteId) =>
+      trx.selectFrom('keep_clear_request').select('data').where('site_id', '=', siteId).where('booking_id', '=', siteId).orderBy('requested_at', 'desc').limit(1),
+    outcome_plan: (trx, siteId) =>
+      trx.selectFrom('outcome').select('wrap').where('site_id', '=', siteId).where('plan_id', '=', siteId).orderBy('recorded_at', 'desc').limit(1),
+    plan_sheet_site_id_plan_id_plan_version_paper_content_hash_key: (trx, siteId) =>
+      trx.selectFrom('plan_sheet').select('status').where('site_id', '=', siteId).where('plan_id', '=', siteId).where('plan_version', '=', 1).where('paper', '=', 'A4').where('content_hash', '=', 'h'),
     audit_event_newest: (trx, siteId) =>
       trx.selectFrom('audit_event').select('id').where('site_id', '=', siteId).orderBy('at', 'desc').orderBy('id', 'desc').limit(50),
     mail_outbox_newest: (trx, siteId) =>

@@ -136,6 +136,14 @@ async function insertAll(
     .values({ site_id, plan_id: ids.planId, plan_version: 1, wrap: 'none', data: DOCUMENT, recorded_by: by })
     .execute();
   await trx
+    .insertInto('keep_clear_request')
+    .values({ site_id, booking_id: ids.bookingId, data: DOCUMENT, requested_by: by })
+    .execute();
+  await trx
+    .insertInto('plan_sheet')
+    .values({ site_id, plan_id: ids.planId, plan_version: 1, paper: 'A4', content_hash: '0'.repeat(64), requested_by: by })
+    .execute();
+  await trx
     .insertInto('mail_outbox')
     .values({ site_id, message_id: `<${by}@filled.example>`, kind: 'invitation', to_user_id: by, payload: DOCUMENT })
     .execute();
