@@ -176,7 +176,8 @@ const oversampleSlices: Step = (given) => {
   for (let lz = slices.partitions; lz <= most + 1e-9; lz += given.scanner.partitionStep) tried.push(lz);
   const alone = tried.filter((lz) => !slabFolds(at(lz)));
   if (alone.length === 0) return 'refused';
-  const chosen = alone.find((lz) => !planeFolds(at(lz))) ?? alone[0]!;
+  const chosen =
+    alone.find((lz) => !planeFolds(at(lz))) ?? alone.find((lz) => widthHelps(at(lz))) ?? alone[0]!;
   return chosen === slices.acquiredPartitions ? 'nothing' : at(chosen);
 };
 

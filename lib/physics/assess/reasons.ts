@@ -14,7 +14,7 @@ import {
 
 /** "Posterior tissue": the trunk goes by its side, every other part by its name. */
 function intruder(from: NonNullable<FoldResult['from']>): string {
-  return capitalised(from.part === 'trunk' ? `${from.side} tissue` : from.part);
+  return from.part === 'trunk' ? capitalised(`${from.side} tissue`) : `Tissue of the ${from.part}`;
 }
 
 /** How far the fold reaches, saying which figure counts the margin. */

@@ -12,7 +12,7 @@ function validateRange(argument: string, range: RangeMm): void {
   requireBetween(argument, range[0], -2000, 2000, 'mm');
   requireBetween(argument, range[1], -2000, 2000, 'mm');
   requireThat(
-    range[0] <= range[1],
+    range[0] < range[1],
     'range-reversed',
     argument,
     `${range[0]} to ${range[1]}`,

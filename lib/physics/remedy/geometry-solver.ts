@@ -75,31 +75,44 @@ function kept<T>(known: Map<TargetedCase, T>, given: TargetedCase, workOut: () =
 /** So many partitions that hardly anything of a slab's profile is left to wrap along it. */
 const NO_SLAB_WRAP = 8;
 
+/** L_z on the scanner's step from `first` to its maximum, the first that will do. */
+function firstPartitions(
+  given: TargetedCase,
+  first: number,
+  willDo: (planned: TargetedCase) => boolean,
+): number | undefined {
+  const { slices } = given.prescription;
+  if (slices.mode !== 'slab') return undefined;
+  const { sliceOversamplingMaxPct } = given.scanner.limits;
+  const most = Math.floor(slices.partitions * (1 + sliceOversamplingMaxPct / 100) + 1e-9);
+  for (let acquired = first; acquired <= most;) {
+    const planned = {
+      ...given,
+      prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } },
+    };
+    if (willDo(planned)) return acquired;
+    acquired = nextAcquiredPartitions(slices.partitions, acquired + 1, given.scanner.partitionStep);
+  }
+  return undefined;
+}
+
 /**
  * First L_z that keeps the slab's own partitions clean and lets nothing fold in both directions at once. Where the
- * phase direction folds by itself no L_z can help that: then the first one that keeps the partitions clean.
+ * phase direction folds by itself no L_z can help that: then the first at which some acquired width will.
  */
 function cleanPartitions(given: TargetedCase, geometry: RankingGeometry): number | undefined {
   const { slices, acquiredLines } = given.prescription;
   if (slices.mode !== 'slab') return undefined;
   const alone = geometry.slabResult(given)?.smallestCleanPartitions;
-  if (
-    alone === undefined ||
-    !geometry.forSizing(given).solved.isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions)
-  )
-    return alone;
-  const most = Math.floor(
-    slices.partitions * (1 + given.scanner.limits.sliceOversamplingMaxPct / 100) + 1e-9,
-  );
-  for (let acquired = alone; acquired <= most;) {
-    const planned = {
-      ...given,
-      prescription: { ...given.prescription, slices: { ...slices, acquiredPartitions: acquired } },
-    };
-    if (geometry.isClean(planned)) return acquired;
-    acquired = nextAcquiredPartitions(slices.partitions, acquired + 1, given.scanner.partitionStep);
-  }
-  return alone;
+  if (alone === undefined) return undefined;
+  const { solved } = geometry.forSizing(given);
+  const phaseIsClean = solved.isClean(acquiredLines, NO_SLAB_WRAP * slices.partitions);
+  const together = phaseIsClean
+    ? firstPartitions(given, alone, (planned) => geometry.isClean(planned))
+    : undefined;
+  const someWidthHelps = (planned: TargetedCase): boolean =>
+    Number.isFinite(solved.requirement(partitionsOf(planned)).alwaysCleanMm) && geometry.slabIsClean(planned);
+  return together ?? firstPartitions(given, alone, someWidthHelps) ?? alone;
 }
 
 /** Range of a region along a direction [mm]. */
