@@ -17,3 +17,6 @@ export function countOf(variable: string, short: number): number {
   if (!Number.isInteger(count) || count < 1) throw new Error(`${variable} is "${asked}"; allowed is a whole number from 1.`);
   return count;
 }
+
+/** Runs of a property: at least the short count, more when SELVEDGE_PROPERTY_RUNS asks for it. */
+export const runsOf = (short: number): number => Math.max(short, countOf('SELVEDGE_PROPERTY_RUNS', short));

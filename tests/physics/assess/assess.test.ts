@@ -20,6 +20,7 @@ import {
   typicalScanner,
   workedCase,
 } from '@/tests/support/physics-cases';
+import { runsOf } from '@/tests/support/tally';
 
 const SEED = 20261201;
 
@@ -310,7 +311,7 @@ describe('monotone', () => {
           expect(large.width!.alwaysCleanMm).toBeGreaterThanOrEqual(small.width!.alwaysCleanMm);
         },
       ),
-      { seed: SEED, numRuns: 200 },
+      { seed: SEED, numRuns: runsOf(200) },
     );
   });
 

@@ -11,6 +11,7 @@ import type { BorePart, BoreSection, BoreSetting } from '@/lib/physics/bore/bore
 import { chordMm } from '@/lib/physics/bore/chord';
 import { farthestPoint, type Outline } from '@/lib/physics/bore/farthest-point';
 import { measured } from '@/tests/support/physics-cases';
+import { runsOf } from '@/tests/support/tally';
 
 const outline = (overrides: Partial<Outline> = {}): Outline => ({
   a: 270,
@@ -78,7 +79,7 @@ describe('the farthest point', () => {
           expect(Math.abs(farthestPoint(o).distanceMm - bruteDistance(o))).toBeLessThan(1e-4);
         },
       ),
-      { seed: 20275, numRuns: 40 },
+      { seed: 20275, numRuns: runsOf(40) },
     );
   });
 
@@ -166,7 +167,7 @@ describe('clearance of a section', () => {
           expect(doubled).toBeCloseTo(2 * base, 5);
         },
       ),
-      { seed: 20276, numRuns: 40 },
+      { seed: 20276, numRuns: runsOf(40) },
     );
   });
   it.each([

@@ -11,6 +11,7 @@ import {
 } from '@/lib/physics/fold/acquired-lines';
 import { toMicrometres } from '@/lib/physics/geometry/micrometres';
 import type { LineStep } from '@/lib/physics/model/scanner';
+import { runsOf } from '@/tests/support/tally';
 
 const LINE: LineStep = { kind: 'line' };
 const EVEN: LineStep = { kind: 'even-lines' };
@@ -87,7 +88,7 @@ describe('acquired lines on the scanner’s step', () => {
           }
         },
       ),
-      { seed: 11, numRuns: 300 },
+      { seed: 11, numRuns: runsOf(300) },
     );
   });
 

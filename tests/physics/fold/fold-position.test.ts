@@ -3,8 +3,9 @@ import { describe, expect, it } from 'vitest';
 import { foldOrder, foldPosition } from '@/lib/physics/fold/fold-position';
 import { DomainError } from '@/lib/physics/model/domain-error';
 import { readTable } from './read-table';
+import { runsOf } from '@/tests/support/tally';
 
-const SEED = { seed: 20240611, numRuns: 500 };
+const SEED = { seed: 20240611, numRuns: runsOf(500) };
 // Sums and differences of lengths under a metre: a few units in the last place, far below 1 µm.
 const ROUNDING_MM = 1e-9;
 const length = (min: number, max: number) => fc.double({ min, max, noNaN: true });

@@ -2,10 +2,11 @@ import { describe, expect, it } from 'vitest';
 import { solveFold } from '@/lib/physics/fold/solve-fold';
 import { latticeSample, seeded } from './lattice-case';
 import { latticeOracle } from './oracle-lattice';
+import { countOf, tally } from '@/tests/support/tally';
 
 /** Cases in 2D and, unless said, a fifth as many in 3D. test:long sets 100,000 and 20,000. */
-const CASES_2D = Number(process.env.SELVEDGE_ORACLE_A ?? 5000);
-const CASES_3D = Number(process.env.SELVEDGE_ORACLE_A_3D ?? Math.round(CASES_2D / 5));
+const CASES_2D = countOf('SELVEDGE_ORACLE_A', 5000);
+const CASES_3D = countOf('SELVEDGE_ORACLE_A_3D', Math.round(CASES_2D / 5));
 const MANY_MINUTES = 30 * 60_000;
 
 describe('oracle A: the engine and an independent count of lattice cells never differ', () => {
@@ -40,6 +41,7 @@ describe('oracle A: the engine and an independent count of lattice cells never d
       }
       // Both answers must be common, or the comparison would prove nothing.
       expect(Math.min(clean, fouled)).toBeGreaterThan(CASES_2D);
+      tally('oracle A in 2D', CASES_2D, `${clean} widths clean, ${fouled} not, none differs`);
     },
     MANY_MINUTES,
   );
@@ -70,6 +72,7 @@ describe('oracle A: the engine and an independent count of lattice cells never d
         }
       }
       expect(Math.min(clean, fouled)).toBeGreaterThan(CASES_3D);
+      tally('oracle A in 3D', CASES_3D, `${clean} pairs clean, ${fouled} not, none differs`);
     },
     MANY_MINUTES,
   );

@@ -7,12 +7,13 @@ import type { FoldProblem } from '@/lib/physics/fold/fold-problem';
 import type { PartShape, SolidPart } from '@/lib/physics/model/patient';
 import type { Plane } from '@/lib/physics/model/prescription';
 import { PLANE_AXES } from '@/lib/physics/geometry/section-frame';
+import { countOf, tally } from '@/tests/support/tally';
 import { seeded } from './lattice-case';
 import { oracleAxes, sampledHit } from './oracle-sampled';
 import { NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-problem';
 
 /** Cases in `npm test`; test:long sets 20,000. */
-const CASES = Number(process.env.SELVEDGE_ORACLE_B ?? 500);
+const CASES = countOf('SELVEDGE_ORACLE_B', 500);
 /** Steps in readout and phase, mm: coarse first, finer only where the engine says fold and no point was found yet. */
 const STEPS: readonly (readonly [number, number])[] = [
   [12, 12],
@@ -205,6 +206,7 @@ describe('oracle B: general shapes, tilted planes and slabs, by looking at point
       expect(hits).toBeGreaterThan(CASES / 2);
       // Cases too near to an end to be judged by points stay rare.
       expect(near / judged).toBeLessThan(0.02);
+      tally('oracle B', CASES, `${judged} widths, ${hits} fold, ${near} too near to judge, none differs`);
     },
     60 * 60_000,
   );

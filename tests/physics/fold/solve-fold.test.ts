@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { solveFold } from '@/lib/physics/fold/solve-fold';
 import type { PerSide } from '@/lib/physics/model/axes';
 import { boxPart, ellipsePart, NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-problem';
+import { runsOf } from '@/tests/support/tally';
 
 const trunk = ellipsePart('trunk', [0, 0], [240, 170]);
 const gridEnds = (factorPhase: number) => ({
@@ -245,7 +246,7 @@ describe('laws', () => {
           expect(s).toBeCloseTo((e - r) / (2 * r), 9);
         }
       }),
-      { seed: 5, numRuns: 300 },
+      { seed: 5, numRuns: runsOf(300) },
     );
   });
 
@@ -311,7 +312,7 @@ describe('laws', () => {
           expect(Math.abs(other.coverBodyMm - here.coverBodyMm)).toBeLessThan(0.0021);
         }
       }),
-      { seed: 6, numRuns: 200 },
+      { seed: 6, numRuns: runsOf(200) },
     );
   });
 
@@ -331,7 +332,7 @@ describe('laws', () => {
           }
         },
       ),
-      { seed: 7, numRuns: 200 },
+      { seed: 7, numRuns: runsOf(200) },
     );
   });
 
@@ -347,7 +348,7 @@ describe('laws', () => {
         if (!left.inKeepClear) expect(left.displayedAreaMm2).toBe(0);
         expect(left.displayedShare).toBeLessThanOrEqual(1 + 1e-9);
       }),
-      { seed: 8, numRuns: 200 },
+      { seed: 8, numRuns: runsOf(200) },
     );
   });
 });

@@ -10,6 +10,7 @@ import { straight } from '@/lib/physics/section/curve';
 import type { RowBand } from '@/lib/physics/section/row-band';
 import { sliceRange } from '@/lib/physics/section/slice-range';
 import { samplePrescription, sampleProblem } from './sample-problem';
+import { runsOf } from '@/tests/support/tally';
 
 const part = (shape: PartShape): SolidPart => ({
   name: 'part',
@@ -90,7 +91,7 @@ describe('tissue that may move across the slice', () => {
           expect(got![1]).toBeLessThan(dense[1] + 3);
         }
       }),
-      { seed: 12, numRuns: 300 },
+      { seed: 12, numRuns: runsOf(300) },
     );
   });
 
@@ -137,7 +138,7 @@ describe('tissue that may move across the slice', () => {
           expect(cutSolid(turned, high + 0.01)).toEqual([]);
         }
       }),
-      { seed: 13, numRuns: 200 },
+      { seed: 13, numRuns: runsOf(200) },
     );
   });
 });

@@ -18,6 +18,7 @@ import {
 import { cosSin, cross, dot, rotateAbout } from '@/lib/physics/geometry/vector';
 import { sectionMargin } from '@/lib/physics/fold/section-margin';
 import { NO_MARGIN_MM, samplePrescription } from '../fold/sample-problem';
+import { runsOf } from '@/tests/support/tally';
 
 const angle = fc.double({ min: -80, max: 80, noNaN: true });
 const coordinate = fc.double({ min: -400, max: 400, noNaN: true });
@@ -95,7 +96,7 @@ describe('section frame', () => {
           expect(Math.abs(value - [x, y, z][i]!)).toBeLessThan(ROUNDING),
         );
       }),
-      { seed: 1, numRuns: 300 },
+      { seed: 1, numRuns: runsOf(300) },
     );
   });
 
@@ -125,7 +126,7 @@ describe('section frame', () => {
         expect(two.readout).toEqual(one.phase);
         expect(two.slice).toEqual(one.slice);
       }),
-      { seed: 2, numRuns: 100 },
+      { seed: 2, numRuns: runsOf(100) },
     );
   });
 

@@ -7,6 +7,7 @@ import { cutSolid, solidInSection } from '@/lib/physics/section/convex-solid';
 import { crossings, maxOn, minOn, straight, valueAt, type Curve } from '@/lib/physics/section/curve';
 import { bandsBetween } from '@/lib/physics/section/row-band';
 import { samplePrescription } from '../fold/sample-problem';
+import { runsOf } from '@/tests/support/tally';
 
 const number = (min: number, max: number) => fc.double({ min, max, noNaN: true, noDefaultInfinity: true });
 const arc = fc.record({
@@ -37,7 +38,7 @@ describe('curves', () => {
         expect(maxOn(curve, r0, r1) - high).toBeLessThan(0.05);
         expect(low - minOn(curve, r0, r1)).toBeLessThan(0.05);
       }),
-      { seed: 3, numRuns: 300 },
+      { seed: 3, numRuns: runsOf(300) },
     );
   });
 
@@ -56,7 +57,7 @@ describe('curves', () => {
           previous = difference;
         }
       }),
-      { seed: 4, numRuns: 300 },
+      { seed: 4, numRuns: runsOf(300) },
     );
   });
 
@@ -160,7 +161,7 @@ describe('sections of solids', () => {
           }
         },
       ),
-      { seed: 9, numRuns: 400 },
+      { seed: 9, numRuns: runsOf(400) },
     );
   });
 

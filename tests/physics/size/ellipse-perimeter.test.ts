@@ -8,6 +8,7 @@ import {
 import { breadthFromMeasuredGirthAndDepth } from '@/lib/physics/size/estimate-trunk';
 import { BREADTH_FROM_GIRTH, DEPTH_FROM_GIRTH_BMI_35, linear } from '@/lib/physics/size/regressions';
 import { measured } from '@/tests/support/physics-cases';
+import { runsOf } from '@/tests/support/tally';
 
 /** Perimeter by the trapezoid rule, which converges geometrically on a periodic integrand. */
 function perimeter(a: number, b: number): number {
@@ -31,7 +32,7 @@ describe('perimeter of an ellipse (Ramanujan II, from memory)', () => {
           expect(Math.abs(ellipsePerimeter(b * ratio, b) / perimeter(b * ratio, b) - 1)).toBeLessThan(4e-8);
         },
       ),
-      { seed: 20271, numRuns: 60 },
+      { seed: 20271, numRuns: runsOf(60) },
     );
   });
   it('is exact for a circle, symmetric, and within 4.1e-4 for a flat one', () => {

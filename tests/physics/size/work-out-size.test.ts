@@ -6,6 +6,7 @@ import { dayNumber, readingAge } from '@/lib/physics/size/reading-age';
 import { isEstimate } from '@/lib/physics/size/size-types';
 import { extentsFromTrunk, workOutSize, type KnownSizes } from '@/lib/physics/size/work-out-size';
 import { measured } from '@/tests/support/physics-cases';
+import { runsOf } from '@/tests/support/tally';
 
 const LIVER = { level: 'liver', allowPopulation: false } as const;
 const heavy: KnownSizes = { sex: 'female', weightKg: measured(130), heightCm: measured(165) };
@@ -97,7 +98,7 @@ describe('age of a reading', () => {
         const date = new Date(day * 86_400_000).toISOString().slice(0, 10);
         expect(dayNumber('d', date)).toBe(day);
       }),
-      { seed: 20273, numRuns: 500 },
+      { seed: 20273, numRuns: runsOf(500) },
     );
   });
   it.each(['2026-02-29', '2026-13-01', '2026-00-10', '2026-04-31', '26-04-30', 'yesterday', '2100-02-29'])(

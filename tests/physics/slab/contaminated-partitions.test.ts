@@ -10,6 +10,7 @@ import {
 import { slabProfile } from '@/lib/physics/slab/slab-profile';
 import type { SlabProfile, SlabQuestion } from '@/lib/physics/slab/slab-types';
 import { readPublished } from '@/tests/support/read-published';
+import { runsOf } from '@/tests/support/tally';
 
 const question = (profile: SlabProfile, overrides: Partial<SlabQuestion> = {}): SlabQuestion => ({
   partitions: 32,
@@ -199,7 +200,7 @@ describe('smallest slice oversampling', () => {
           expect(answer).toBe(expected);
         },
       ),
-      { seed: 20262, numRuns: 60 },
+      { seed: 20262, numRuns: runsOf(60) },
     );
   });
 
@@ -235,7 +236,7 @@ describe('smallest slice oversampling', () => {
         const grid = { partitionStep: 1, mostPartitions: 64 };
         expect(smallestCleanPartitions(scaled, grid)).toBe(smallestCleanPartitions(q, grid));
       }),
-      { seed: 20263, numRuns: 30 },
+      { seed: 20263, numRuns: runsOf(30) },
     );
   });
 });

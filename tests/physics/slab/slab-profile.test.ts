@@ -11,6 +11,7 @@ import {
 import { ernstAngleDeg, spoiledSignal } from '@/lib/physics/slab/steady-state';
 import { readPublished } from '@/tests/support/read-published';
 import { integrateBloch, smallTip } from './bloch-equations';
+import { runsOf } from '@/tests/support/tally';
 
 const THRESHOLDS = [
   [0.01, '1pct'],
@@ -130,7 +131,7 @@ describe('slab profile: interpolation and shape', () => {
           expect(Math.abs(spoiled.at(z) - exact(z, true) / exact(0, true))).toBeLessThan(1e-4);
         },
       ),
-      { seed: 20261, numRuns: 300 },
+      { seed: 20261, numRuns: runsOf(300) },
     );
   });
 
