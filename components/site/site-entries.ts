@@ -5,6 +5,8 @@ interface Counts {
   readonly scanners: number;
   readonly protocols: number;
   readonly policyVersion: number;
+  /** Whether mail stays here: only with the local mail catcher. */
+  readonly catchesMail: boolean;
 }
 
 /** The set-up pages a person may open, from the one permission table. */
@@ -55,6 +57,16 @@ export function siteEntries(actor: Actor, counts: Counts): SiteEntry[] {
       text: 'Who changed which record, and when',
       needs: 'audit.read',
     },
+    ...(counts.catchesMail
+      ? [
+          {
+            href: '/site/mail',
+            title: 'Caught mail',
+            text: 'What this installation would have sent',
+            needs: 'mail.read-caught' as const,
+          },
+        ]
+      : []),
   ];
   return all.filter((entry) => mayAttempt(actor, entry.needs)).map(({ needs: _needs, ...entry }) => entry);
 }

@@ -4,6 +4,7 @@ import { siteEntries } from '@/components/site/site-entries';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
+import { catchesMail } from '@/lib/services/mail/list-caught-mail';
 import { listProtocols } from '@/lib/services/protocol/list-protocols';
 import { listScanners } from '@/lib/services/scanner/list-scanners';
 import { getPolicy } from '@/lib/services/site-policy/get-policy';
@@ -31,6 +32,7 @@ export default async function SitePage() {
           scanners: scanners.length,
           protocols: protocols.length,
           policyVersion: policy.version,
+          catchesMail: catchesMail(),
         })}
       />
     </PageBody>

@@ -104,6 +104,7 @@ const TABLE = {
   'api-token.revoke': { description: 'revoke an API token', roles: LEADS },
 
   'mail.read': { description: 'see mail that was sent, waits or bounced', roles: PATHWAY, system: true },
+  'mail.read-caught': { description: 'read what the local mail catcher holds, links and all', roles: LEADS },
   'mail.retry': { description: 'send a failed mail again', roles: PATHWAY },
   'mail.send': { description: 'hand queued mail to the mail server', roles: [], system: true },
 
