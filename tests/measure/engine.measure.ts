@@ -13,7 +13,7 @@ const RUNS = 200;
 const AIM_RANK = 'p95 below 8 ms in Node';
 
 function timingRows(
-  { assessMs, rankFiveMs, imageMs, candidates }: EngineTimings,
+  { sequences, rankFiveMs, imageMs, candidates }: EngineTimings,
   where: string,
 ): MeasureRow[] {
   const both = (what: string, sample: readonly number[], aim?: string): MeasureRow[] => [
@@ -26,7 +26,10 @@ function timingRows(
     },
   ];
   return [
-    ...both('one assessment', assessMs),
+    ...sequences.flatMap(({ family, assessMs, rankMs, candidates: own }) => [
+      ...both(`one assessment, ${family}`, assessMs),
+      ...both(`full ranking, ${family} (${own} candidates)`, rankMs),
+    ]),
     ...both('full ranking of five abdomen sequences', rankFiveMs, where === 'Node' ? AIM_RANK : undefined),
     { what: `candidates worked out in it, ${where}`, value: candidates, unit: 'candidates' },
     ...both('simulated picture, 256 pixels', imageMs, 'within a frame, 16 ms'),

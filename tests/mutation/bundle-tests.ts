@@ -45,7 +45,12 @@ export function instrumentPhysics(): Instrumented {
   const codeOf = new Map<string, string>();
   for (const file of files) {
     if (NOT_MUTATED.test(file)) continue;
-    const found = findMutants(program.getSourceFile(file)!, path.relative(ROOT, file), checker, mutants.length);
+    const found = findMutants(
+      program.getSourceFile(file)!,
+      path.relative(ROOT, file),
+      checker,
+      mutants.length,
+    );
     if (found.mutants.length === 0) continue;
     mutants.push(...found.mutants);
     codeOf.set(file, found.code);
@@ -54,9 +59,10 @@ export function instrumentPhysics(): Instrumented {
 }
 
 export const testFiles = (): string[] =>
-  [...TEST_FOLDERS.flatMap((folder) => filesUnder(path.join(ROOT, folder))), ...MORE_TESTS.map((file) => path.join(ROOT, file))].filter(
-    (file) => file.endsWith('.test.ts') && !NOT_PLAYED.test(file),
-  );
+  [
+    ...TEST_FOLDERS.flatMap((folder) => filesUnder(path.join(ROOT, folder))),
+    ...MORE_TESTS.map((file) => path.join(ROOT, file)),
+  ].filter((file) => file.endsWith('.test.ts') && !NOT_PLAYED.test(file));
 
 export interface Bundle {
   readonly testFile: string;
@@ -64,7 +70,9 @@ export interface Bundle {
 }
 
 /** Bundles each test file with the instrumented physics into a folder of its own; the tree is left alone. */
-export async function bundleTests(codeOf: ReadonlyMap<string, string>): Promise<{ folder: string; bundles: Bundle[] }> {
+export async function bundleTests(
+  codeOf: ReadonlyMap<string, string>,
+): Promise<{ folder: string; bundles: Bundle[] }> {
   const folder = await mkdtemp(path.join(os.tmpdir(), 'selvedge-mutation-'));
   const instrument: Plugin = {
     name: 'mutants',

@@ -69,15 +69,23 @@ function isPassedOver(node: ts.Node): boolean {
 
 /** A generator or an async function cannot pause inside the function an operand is put into. */
 const pauses = (node: ts.Node): boolean =>
-  ts.isYieldExpression(node) || ts.isAwaitExpression(node) || (ts.forEachChild(node, (child) => pauses(child) || undefined) ?? false);
+  ts.isYieldExpression(node) ||
+  ts.isAwaitExpression(node) ||
+  (ts.forEachChild(node, (child) => pauses(child) || undefined) ?? false);
 
 /**
  * The places of a source file that can be changed, and its code with a switch in each of them.
  * @param firstId number of the file's first mutant
  */
-export function findMutants(source: ts.SourceFile, file: string, checker: ts.TypeChecker, firstId: number): { mutants: Mutant[]; code: string } {
+export function findMutants(
+  source: ts.SourceFile,
+  file: string,
+  checker: ts.TypeChecker,
+  firstId: number,
+): { mutants: Mutant[]; code: string } {
   const mutants: Mutant[] = [];
-  const isNumber = (node: ts.Expression): boolean => (checker.getTypeAtLocation(node).flags & ts.TypeFlags.NumberLike) !== 0;
+  const isNumber = (node: ts.Expression): boolean =>
+    (checker.getTypeAtLocation(node).flags & ts.TypeFlags.NumberLike) !== 0;
 
   const note = (node: ts.Node, mutated: string): number => {
     const id = firstId + mutants.length;
@@ -107,10 +115,21 @@ export function findMutants(source: ts.SourceFile, file: string, checker: ts.Typ
       const lazy = call === 'and' || call === 'or';
       if (lazy && pauses(node.right)) return undefined;
       const sign = assigns ? '=' : '';
-      const ids = others.map((other) => note(node, `${node.left.getText(source)} ${other}${sign} ${node.right.getText(source)}`));
+      const ids = others.map((other) =>
+        note(node, `${node.left.getText(source)} ${other}${sign} ${node.right.getText(source)}`),
+      );
       const left = ts.visitNode(node.left, visit) as ts.Expression;
       const right = ts.visitNode(node.right, visit) as ts.Expression;
-      const second = lazy ? factory.createArrowFunction(undefined, undefined, [], undefined, undefined, factory.createParenthesizedExpression(right)) : right;
+      const second = lazy
+        ? factory.createArrowFunction(
+            undefined,
+            undefined,
+            [],
+            undefined,
+            undefined,
+            factory.createParenthesizedExpression(right),
+          )
+        : right;
       const played = play(call, ids[0]!, left, second);
       return assigns ? factory.createAssignment(left, played) : played;
     };
@@ -118,19 +137,34 @@ export function findMutants(source: ts.SourceFile, file: string, checker: ts.Typ
     const visit = (node: ts.Node): ts.Node => {
       if (isPassedOver(node)) return node;
       if (ts.isBinaryExpression(node)) return binary(node) ?? visitAll(node);
-      if (ts.isPrefixUnaryExpression(node) && (node.operator === K.MinusToken || node.operator === K.ExclamationToken)) {
+      if (
+        ts.isPrefixUnaryExpression(node) &&
+        (node.operator === K.MinusToken || node.operator === K.ExclamationToken)
+      ) {
         const id = note(node, node.operand.getText(source));
-        return play(node.operator === K.MinusToken ? 'negative' : 'not', id, ts.visitNode(node.operand, visit) as ts.Expression);
+        return play(
+          node.operator === K.MinusToken ? 'negative' : 'not',
+          id,
+          ts.visitNode(node.operand, visit) as ts.Expression,
+        );
       }
       if (ts.isPropertyAccessExpression(node)) {
         const other = MATH.get(node.getText(source));
         if (other === undefined) return visitAll(node);
         const [owner, name] = other.split('.') as [string, string];
-        return play('either', note(node, other), node, factory.createPropertyAccessExpression(factory.createIdentifier(owner), name));
+        return play(
+          'either',
+          note(node, other),
+          node,
+          factory.createPropertyAccessExpression(factory.createIdentifier(owner), name),
+        );
       }
       if (ts.isNumericLiteral(node) && !(ts.isPropertyAssignment(node.parent) && node.parent.name === node)) {
         const value = Number(node.text.replaceAll('_', ''));
-        const other = otherConstant(value, ts.isElementAccessExpression(node.parent) && node.parent.argumentExpression === node);
+        const other = otherConstant(
+          value,
+          ts.isElementAccessExpression(node.parent) && node.parent.argumentExpression === node,
+        );
         return play('constant', note(node, String(other)), node, factory.createNumericLiteral(other));
       }
       return visitAll(node);
@@ -148,8 +182,10 @@ const flat = (code: string): string => code.replace(/\s+/g, ' ');
 /** A target that may be read and written without doing anything twice. */
 function isPlainTarget(node: ts.Expression): boolean {
   if (ts.isIdentifier(node) || node.kind === K.ThisKeyword || ts.isNumericLiteral(node)) return true;
-  if (ts.isPropertyAccessExpression(node) || ts.isNonNullExpression(node)) return isPlainTarget(node.expression);
-  if (ts.isElementAccessExpression(node)) return isPlainTarget(node.expression) && isPureIndex(node.argumentExpression);
+  if (ts.isPropertyAccessExpression(node) || ts.isNonNullExpression(node))
+    return isPlainTarget(node.expression);
+  if (ts.isElementAccessExpression(node))
+    return isPlainTarget(node.expression) && isPureIndex(node.argumentExpression);
   return false;
 }
 

@@ -28,9 +28,14 @@ export function vitestFor(tests: RegisteredTest[]): Record<string, unknown> {
     body();
     groups.pop();
   };
-  const each = (register: (name: string, body: Body) => void) => (rows: readonly unknown[]) => (name: string, body: Body) => {
-    rows.forEach((row, index) => register(`${name} [${index}]`, () => (Array.isArray(row) ? body(...(row as unknown[])) : body(row))));
-  };
+  const each =
+    (register: (name: string, body: Body) => void) =>
+    (rows: readonly unknown[]) =>
+    (name: string, body: Body) => {
+      rows.forEach((row, index) =>
+        register(`${name} [${index}]`, () => (Array.isArray(row) ? body(...(row as unknown[])) : body(row))),
+      );
+    };
   Object.assign(it, { each: each(it) });
   Object.assign(describe, { each: each((name, body) => describe(name, () => void body())) });
   return { it, test: it, describe, expect };

@@ -39,7 +39,8 @@ const { values: options } = parseArgs({
 });
 
 const OUT = path.resolve(ROOT, options.out);
-const keyOf = ({ file, code, mutated }: Pick<Mutant, 'file' | 'code' | 'mutated'>): string => JSON.stringify([file, code, mutated]);
+const keyOf = ({ file, code, mutated }: Pick<Mutant, 'file' | 'code' | 'mutated'>): string =>
+  JSON.stringify([file, code, mutated]);
 const equivalentReason = new Map(EQUIVALENT.map((entry) => [keyOf(entry), entry.reason]));
 
 /** The mutants asked for: of some files, of the last run's survivors, a seeded sample, or all. */
@@ -48,7 +49,9 @@ function choose(mutants: readonly Mutant[]): Mutant[] {
   if (options.file) chosen = chosen.filter(({ file }) => options.file!.some((part) => file.includes(part)));
   if (options.survivors) {
     const last = JSON.parse(readFileSync(OUT, 'utf8')) as { results: Result[] };
-    const survived = new Set(last.results.filter(({ outcome }) => outcome === 'survived' || outcome === 'not reached').map(keyOf));
+    const survived = new Set(
+      last.results.filter(({ outcome }) => outcome === 'survived' || outcome === 'not reached').map(keyOf),
+    );
     chosen = chosen.filter((mutant) => survived.has(keyOf(mutant)));
   }
   if (options.sample !== undefined) {
@@ -61,7 +64,11 @@ function choose(mutants: readonly Mutant[]): Mutant[] {
 
 /** What is known of a bundle's tests; asked again only when the bundle is another one. */
 async function survey(player: Player, bundle: string, mutants: number): Promise<Surveyed | undefined> {
-  const hash = createHash('sha256').update(readFileSync(bundle)).update(JSON.stringify(COUNTS)).digest('hex').slice(0, 24);
+  const hash = createHash('sha256')
+    .update(readFileSync(bundle))
+    .update(JSON.stringify(COUNTS))
+    .digest('hex')
+    .slice(0, 24);
   const kept = path.join(path.dirname(OUT), 'mutation-survey', `${hash}.json`);
   if (existsSync(kept)) return JSON.parse(readFileSync(kept, 'utf8')) as Surveyed;
   const answer = await player.ask({ kind: 'survey', bundle, mutants }, 900_000);
@@ -72,7 +79,11 @@ async function survey(player: Player, bundle: string, mutants: number): Promise<
 }
 
 /** Which tests reach each mutant, quickest first. Tests that fail without any mutant are left out and named. */
-async function surveyTests(player: Player, bundles: readonly Bundle[], mutants: number): Promise<PlayableTest[][]> {
+async function surveyTests(
+  player: Player,
+  bundles: readonly Bundle[],
+  mutants: number,
+): Promise<PlayableTest[][]> {
   const reaching: PlayableTest[][] = Array.from({ length: mutants }, () => []);
   for (const { testFile, bundle } of bundles) {
     const answer = await survey(player, bundle, mutants);
@@ -82,7 +93,8 @@ async function surveyTests(player: Player, bundles: readonly Bundle[], mutants: 
     }
     answer.tests.forEach((test: SurveyedTest, index) => {
       if (test.error !== undefined) return console.log(`left out: ${testFile}: ${test.name}: ${test.error}`);
-      for (const id of test.hits) reaching[id]!.push({ bundle, test: index, ms: test.ms, loadMs: answer.loadMs });
+      for (const id of test.hits)
+        reaching[id]!.push({ bundle, test: index, ms: test.ms, loadMs: answer.loadMs });
     });
   }
   for (const tests of reaching) tests.sort((a, b) => a.ms + a.loadMs - b.ms - b.loadMs);
@@ -105,27 +117,43 @@ function planOf(tests: readonly PlayableTest[], budgetMs: number) {
   return plan;
 }
 
-async function playAll(player: Player, chosen: readonly Mutant[], reaching: readonly PlayableTest[][]): Promise<Result[]> {
+async function playAll(
+  player: Player,
+  chosen: readonly Mutant[],
+  reaching: readonly PlayableTest[][],
+): Promise<Result[]> {
   const results: Result[] = [];
   const budgetMs = Number(options.budget) * 1000;
   const begun = Date.now();
   for (const mutant of chosen) {
     results.push(await playOne(player, mutant, reaching[mutant.id]!, budgetMs));
     if (results.length % 100 === 0) {
-      const left = results.filter(({ outcome }) => outcome === 'survived' || outcome === 'not reached').length;
-      console.log(`${results.length} of ${chosen.length}, ${left} survive, ${Math.round((Date.now() - begun) / 1000)} s`);
+      const left = results.filter(
+        ({ outcome }) => outcome === 'survived' || outcome === 'not reached',
+      ).length;
+      console.log(
+        `${results.length} of ${chosen.length}, ${left} survive, ${Math.round((Date.now() - begun) / 1000)} s`,
+      );
     }
   }
   return results;
 }
 
-async function playOne(player: Player, mutant: Mutant, tests: readonly PlayableTest[], budgetMs: number): Promise<Result> {
+async function playOne(
+  player: Player,
+  mutant: Mutant,
+  tests: readonly PlayableTest[],
+  budgetMs: number,
+): Promise<Result> {
   const reason = equivalentReason.get(keyOf(mutant));
   if (tests.length === 0) return { ...mutant, outcome: 'not reached' };
   const answer = await player.ask({ kind: 'play', id: mutant.id, tests: planOf(tests, budgetMs) }, 60_000);
   if (answer === 'hung' || answer === 'died') return { ...mutant, outcome: 'killed', by: answer };
-  if (answer.kind === 'played' && answer.killedBy !== undefined) return { ...mutant, outcome: 'killed', by: answer.killedBy };
-  return reason === undefined ? { ...mutant, outcome: 'survived' } : { ...mutant, outcome: 'equivalent', by: reason };
+  if (answer.kind === 'played' && answer.killedBy !== undefined)
+    return { ...mutant, outcome: 'killed', by: answer.killedBy };
+  return reason === undefined
+    ? { ...mutant, outcome: 'survived' }
+    : { ...mutant, outcome: 'equivalent', by: reason };
 }
 
 function report(results: readonly Result[], all: readonly Mutant[]): void {
@@ -134,19 +162,33 @@ function report(results: readonly Result[], all: readonly Mutant[]): void {
     const counted = of.filter(({ outcome }) => outcome !== 'equivalent');
     const killed = counted.filter(({ outcome }) => outcome === 'killed').length;
     const share = counted.length === 0 ? '' : `${((100 * killed) / counted.length).toFixed(1)} %`;
-    console.log(`${name.padEnd(52)} ${String(killed).padStart(5)} of ${String(counted.length).padStart(5)} ${share.padStart(8)} ${String(of.length - counted.length).padStart(4)} equivalent`);
+    console.log(
+      `${name.padEnd(52)} ${String(killed).padStart(5)} of ${String(counted.length).padStart(5)} ${share.padStart(8)} ${String(of.length - counted.length).padStart(4)} equivalent`,
+    );
   };
   console.log('\nSurvivors:');
   for (const { file, line, code, mutated, outcome } of results) {
-    if (outcome === 'survived' || outcome === 'not reached') console.log(`  ${file}:${line}  ${code}  →  ${mutated}${outcome === 'not reached' ? '  (not reached)' : ''}`);
+    if (outcome === 'survived' || outcome === 'not reached')
+      console.log(
+        `  ${file}:${line}  ${code}  →  ${mutated}${outcome === 'not reached' ? '  (not reached)' : ''}`,
+      );
   }
   console.log();
-  for (const file of files) row(file, results.filter((result) => result.file === file));
+  for (const file of files)
+    row(
+      file,
+      results.filter((result) => result.file === file),
+    );
   row('all', results);
   const present = new Set(all.map(keyOf));
-  for (const entry of EQUIVALENT) if (!present.has(keyOf(entry))) console.log(`equivalent.ts names what is not there: ${entry.file}: ${entry.code} → ${entry.mutated}`);
-  const killed = results.filter((result) => result.outcome === 'killed' && equivalentReason.has(keyOf(result)));
-  for (const { file, line, code, mutated, by } of killed) console.log(`called equivalent, yet killed: ${file}:${line} ${code} → ${mutated} by ${by}`);
+  for (const entry of EQUIVALENT)
+    if (!present.has(keyOf(entry)))
+      console.log(`equivalent.ts names what is not there: ${entry.file}: ${entry.code} → ${entry.mutated}`);
+  const killed = results.filter(
+    (result) => result.outcome === 'killed' && equivalentReason.has(keyOf(result)),
+  );
+  for (const { file, line, code, mutated, by } of killed)
+    console.log(`called equivalent, yet killed: ${file}:${line} ${code} → ${mutated} by ${by}`);
 }
 
 const began = Date.now();
@@ -161,7 +203,10 @@ try {
   const results = await playAll(player, choose(mutants), reaching);
   report(results, mutants);
   mkdirSync(path.dirname(OUT), { recursive: true });
-  writeFileSync(OUT, JSON.stringify({ at: new Date().toISOString(), sample: options.sample ?? 'all', results }, null, 1));
+  writeFileSync(
+    OUT,
+    JSON.stringify({ at: new Date().toISOString(), sample: options.sample ?? 'all', results }, null, 1),
+  );
 } finally {
   player.stop();
   await rm(folder, { recursive: true, force: true });

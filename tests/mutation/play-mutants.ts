@@ -11,7 +11,15 @@ import type { MutationControl } from './switch';
 
 export type Request =
   | { readonly kind: 'survey'; readonly bundle: string; readonly mutants: number }
-  | { readonly kind: 'play'; readonly id: number; readonly tests: readonly { readonly bundle: string; readonly test: number; readonly allowedMs: number }[] };
+  | {
+      readonly kind: 'play';
+      readonly id: number;
+      readonly tests: readonly {
+        readonly bundle: string;
+        readonly test: number;
+        readonly allowedMs: number;
+      }[];
+    };
 
 export interface SurveyedTest {
   readonly name: string;
@@ -34,14 +42,20 @@ fc.configureGlobal({ endOnFailure: true });
 function evaluate(bundle: string, control: MutationControl): RegisteredTest[] {
   let script = scripts.get(bundle);
   if (!script) {
-    script = new vm.Script(`(function (exports, require, module) {${readFileSync(bundle, 'utf8')}\n})`, { filename: bundle });
+    script = new vm.Script(`(function (exports, require, module) {${readFileSync(bundle, 'utf8')}\n})`, {
+      filename: bundle,
+    });
     scripts.set(bundle, script);
   }
   (globalThis as { mutationControl?: MutationControl }).mutationControl = control;
   const tests: RegisteredTest[] = [];
   const vitest = vitestFor(tests);
   const loaded = { exports: {} };
-  const load = script.runInThisContext() as (exports: object, require: (name: string) => unknown, module: object) => void;
+  const load = script.runInThisContext() as (
+    exports: object,
+    require: (name: string) => unknown,
+    module: object,
+  ) => void;
   load(loaded.exports, (name) => (name === 'vitest' ? vitest : require(name)), loaded);
   return tests;
 }
@@ -91,8 +105,10 @@ async function play({ id, tests }: Extract<Request, { kind: 'play' }>): Promise<
         evaluated.set(bundle, registered);
       });
     }
-    error ??= registered?.[test] === undefined ? 'the test is not registered' : await failure(registered[test].run);
-    if (error !== undefined) return say({ kind: 'played', killedBy: `${registered?.[test]?.name ?? 'loading'}: ${error}` });
+    error ??=
+      registered?.[test] === undefined ? 'the test is not registered' : await failure(registered[test].run);
+    if (error !== undefined)
+      return say({ kind: 'played', killedBy: `${registered?.[test]?.name ?? 'loading'}: ${error}` });
   }
   say({ kind: 'played' });
 }

@@ -8,7 +8,7 @@ export const COUNTS = {
   SELVEDGE_ORACLE_A_3D: '60',
   SELVEDGE_ORACLE_B: '40',
   SELVEDGE_RANKINGS: '4',
-  SELVEDGE_ELLIPSE_FFT: '2',
+  SELVEDGE_ELLIPSE_FFT: '10',
 };
 
 /** A process that plays mutants one after another; one that hangs or dies is replaced. */
@@ -27,7 +27,10 @@ export class Player {
   }
 
   /** The answer, or why there is none. */
-  ask(request: Request, firstAllowedMs: number): Promise<Exclude<Answer, { kind: 'begun' }> | 'hung' | 'died'> {
+  ask(
+    request: Request,
+    firstAllowedMs: number,
+  ): Promise<Exclude<Answer, { kind: 'begun' }> | 'hung' | 'died'> {
     const child = (this.child ??= this.start());
     return new Promise((resolve) => {
       let timer = setTimeout(hang, firstAllowedMs);

@@ -9,7 +9,10 @@ export interface MutationControl {
   hits: Uint8Array | undefined;
 }
 
-const control = (globalThis as { mutationControl?: MutationControl }).mutationControl ?? { active: -1, hits: undefined };
+const control = (globalThis as { mutationControl?: MutationControl }).mutationControl ?? {
+  active: -1,
+  hits: undefined,
+};
 const { active, hits } = control;
 
 function on(id: number): boolean {
@@ -25,10 +28,14 @@ export const multiply = (id: number, a: number, b: number): number => (on(id) ? 
 export const divide = (id: number, a: number, b: number): number => (on(id) ? a * b : a / b);
 export const remainder = (id: number, a: number, b: number): number => (on(id) ? a * b : a % b);
 
-export const less = (id: number, a: number, b: number): boolean => (on(id) ? a <= b : on(id + 1) ? a >= b : a < b);
-export const lessOrEqual = (id: number, a: number, b: number): boolean => (on(id) ? a < b : on(id + 1) ? a > b : a <= b);
-export const greater = (id: number, a: number, b: number): boolean => (on(id) ? a >= b : on(id + 1) ? a <= b : a > b);
-export const greaterOrEqual = (id: number, a: number, b: number): boolean => (on(id) ? a > b : on(id + 1) ? a < b : a >= b);
+export const less = (id: number, a: number, b: number): boolean =>
+  on(id) ? a <= b : on(id + 1) ? a >= b : a < b;
+export const lessOrEqual = (id: number, a: number, b: number): boolean =>
+  on(id) ? a < b : on(id + 1) ? a > b : a <= b;
+export const greater = (id: number, a: number, b: number): boolean =>
+  on(id) ? a >= b : on(id + 1) ? a <= b : a > b;
+export const greaterOrEqual = (id: number, a: number, b: number): boolean =>
+  on(id) ? a > b : on(id + 1) ? a < b : a >= b;
 export const same = (id: number, a: unknown, b: unknown): boolean => (on(id) ? a !== b : a === b);
 export const different = (id: number, a: unknown, b: unknown): boolean => (on(id) ? a === b : a !== b);
 

@@ -8,13 +8,7 @@ import { data } from 'dcmjs';
 import { describe, expect, it } from 'vitest';
 import { filesEnding, ROOT } from '@/tests/structure/import-graph';
 
-interface Entry {
-  readonly tag: string;
-  readonly vr: string;
-  readonly vm: string;
-  readonly name: string;
-}
-const byKeyword = (data as unknown as { DicomMetaDictionary: { nameMap: Record<string, Entry | undefined> } }).DicomMetaDictionary.nameMap;
+const byKeyword = data.DicomMetaDictionary.nameMap;
 const byTag = new Map(
   Object.values(byKeyword)
     .filter((entry) => entry !== undefined)
@@ -82,7 +76,9 @@ describe('DICOM attributes against the data dictionary', () => {
       const entry = byTag.get(tag);
       return entry === undefined || !letters(line).includes(letters(entry.name));
     });
-    expect(wrong.map(({ where, tag }) => `${where}: ${tag} is ${byTag.get(tag)?.name ?? 'in no dictionary'}`)).toEqual([]);
+    expect(
+      wrong.map(({ where, tag }) => `${where}: ${tag} is ${byTag.get(tag)?.name ?? 'in no dictionary'}`),
+    ).toEqual([]);
   });
 
   it('input fields that carry a DICOM name carry it as the dictionary spells it', () => {
@@ -96,7 +92,14 @@ describe('DICOM attributes against the data dictionary', () => {
   it('our own names for the rest differ from the dictionary only where they say their unit or are shorter', () => {
     const model = sources.find(({ file }) => file === 'lib/physics/model/prescription.ts')!.lines.join('\n');
     // Left as the model has it, right the attribute it is read from.
-    const mapped = { echoTrainLength: 'EchoTrainLength', averages: 'NumberOfAverages', trMs: 'RepetitionTime', teMs: 'EchoTime', flipDeg: 'FlipAngle', partialFourierPhase: 'PartialFourier' };
+    const mapped = {
+      echoTrainLength: 'EchoTrainLength',
+      averages: 'NumberOfAverages',
+      trMs: 'RepetitionTime',
+      teMs: 'EchoTime',
+      flipDeg: 'FlipAngle',
+      partialFourierPhase: 'PartialFourier',
+    };
     for (const [ours, theirs] of Object.entries(mapped)) {
       expect(model).toMatch(new RegExp(`readonly ${ours}: `));
       expect(byKeyword[theirs], theirs).toBeDefined();

@@ -16,7 +16,8 @@ import type { Sex } from '@/lib/physics/size/size-types';
 import { readPublished } from '@/tests/support/read-published';
 
 const published = readPublished('abdominal-diameter');
-const rowsOf = (source: string, sex: string) => published.filter((row) => row.text('source') === source && row.text('sex') === sex);
+const rowsOf = (source: string, sex: string) =>
+  published.filter((row) => row.text('source') === source && row.text('sex') === sex);
 const SEXES: readonly Sex[] = ['male', 'female'];
 
 /** Mean standing height of US adults, cm (National Health and Nutrition Examination Survey 2011–14; from memory). */
@@ -63,7 +64,10 @@ describe('population percentiles against a second statement', () => {
       const theirs = row.number('value') * MEAN_HEIGHT_CM[sex];
       const ours = populationPercentileMm(measure, sex, row.number('p')) / 10;
       // 3 %: a percentile of a ratio times a mean is not the percentile of the product; two years' growth; no weights here.
-      expect(Math.abs(ours / theirs - 1), `${measure} p ${row.number('p')}: ${ours} and ${theirs}`).toBeLessThan(0.03);
+      expect(
+        Math.abs(ours / theirs - 1),
+        `${measure} p ${row.number('p')}: ${ours} and ${theirs}`,
+      ).toBeLessThan(0.03);
     }
   });
 });
@@ -80,13 +84,19 @@ describe('regressions against the percentiles of the same people', () => {
   it.each([
     ['male', 175.7],
     ['female', 161.8],
-  ] as const)('%s, BMI 36 to 50: weight and height give the same depth directly and by way of the girth', (sex, heightCm) => {
-    for (let bmi = 36; bmi <= 50; bmi += 2) {
-      const weightKg = bmi * (heightCm / 100) ** 2;
-      const girth = fromWeightHeight(GIRTH_FROM_WEIGHT_HEIGHT[sex], weightKg, heightCm);
-      const direct = fromWeightHeight(DEPTH_FROM_WEIGHT_HEIGHT[sex], weightKg, heightCm);
-      // Two fits to the same people meet at their mean; 0.7 cm is half the smaller residual spread.
-      expect(Math.abs(linear(DEPTH_FROM_GIRTH_BMI_35[sex], girth) - direct), `BMI ${bmi}: ${direct}`).toBeLessThan(0.7);
-    }
-  });
+  ] as const)(
+    '%s, BMI 36 to 50: weight and height give the same depth directly and by way of the girth',
+    (sex, heightCm) => {
+      for (let bmi = 36; bmi <= 50; bmi += 2) {
+        const weightKg = bmi * (heightCm / 100) ** 2;
+        const girth = fromWeightHeight(GIRTH_FROM_WEIGHT_HEIGHT[sex], weightKg, heightCm);
+        const direct = fromWeightHeight(DEPTH_FROM_WEIGHT_HEIGHT[sex], weightKg, heightCm);
+        // Two fits to the same people meet at their mean; 0.7 cm is half the smaller residual spread.
+        expect(
+          Math.abs(linear(DEPTH_FROM_GIRTH_BMI_35[sex], girth) - direct),
+          `BMI ${bmi}: ${direct}`,
+        ).toBeLessThan(0.7);
+      }
+    },
+  );
 });

@@ -26,7 +26,9 @@ function rounded(value: unknown): unknown {
 
 /** One line for each entry of a list keeps a difference findable and the file short. */
 const lines = (value: unknown): string =>
-  Array.isArray(value) ? `[\n${value.map((entry) => JSON.stringify(entry)).join(',\n')}\n]\n` : `${JSON.stringify(value, null, 1)}\n`;
+  Array.isArray(value)
+    ? `[\n${value.map((entry) => JSON.stringify(entry)).join(',\n')}\n]\n`
+    : `${JSON.stringify(value, null, 1)}\n`;
 
 describe('answers that were kept', () => {
   it.each(Object.keys(KEPT))('%s', (name) => {

@@ -31,7 +31,16 @@ import {
   typicalScanner,
 } from '@/tests/support/physics-cases';
 
-const REGIONS: readonly BodyRegion[] = ['abdomen', 'pelvis', 'chest', 'head', 'shoulder', 'hip', 'knee', 'breast'];
+const REGIONS: readonly BodyRegion[] = [
+  'abdomen',
+  'pelvis',
+  'chest',
+  'head',
+  'shoulder',
+  'hip',
+  'knee',
+  'breast',
+];
 const ARMS = ['up', 'down', 'cannot-be-raised'] as const;
 
 /** Sizes a region may have, mm a side. */
@@ -49,7 +58,12 @@ const SIZES: Readonly<Record<BodyRegion, Parameters<typeof extentsOf>[0]>> = {
 const patientOf = (region: BodyRegion, changes: Partial<Patient> = {}): Patient =>
   typicalPatient({ region, extents: extentsOf(SIZES[region]), ...changes });
 
-const withArms = (position: (typeof ARMS)[number], gapMm = 12): Patient['arms'] => ({ position, breadthMm: 94, depthMm: 103, gapMm });
+const withArms = (position: (typeof ARMS)[number], gapMm = 12): Patient['arms'] => ({
+  position,
+  breadthMm: 94,
+  depthMm: 103,
+  gapMm,
+});
 
 function bodies(): unknown {
   return REGIONS.flatMap((region) =>
@@ -58,7 +72,10 @@ function bodies(): unknown {
       // Ends that nobody measured, arms thinner than a chest is deep, the other leg at an unknown distance.
       buildBody({
         ...patientOf(region, { arms: withArms(position, 0), sex: 'female', position: 'head-first-prone' }),
-        extents: { ...extentsOf(SIZES[region]), superior: { value: 250, source: 'policy-default', spread: 0 } },
+        extents: {
+          ...extentsOf(SIZES[region]),
+          superior: { value: 250, source: 'policy-default', spread: 0 },
+        },
       }),
     ]),
   );
@@ -66,9 +83,17 @@ function bodies(): unknown {
 
 function phantoms(region: BodyRegion): unknown {
   const layersOf = (given: Case) =>
-    paintLayers(given, sectionFrame(given.prescription)).map(({ solid, tissue, weight }) => [tissue, weight, solid.quadric, solid.halfSpaces]);
+    paintLayers(given, sectionFrame(given.prescription)).map(({ solid, tissue, weight }) => [
+      tissue,
+      weight,
+      solid.quadric,
+      solid.halfSpaces,
+    ]);
   const patient = patientOf(region, { arms: withArms('down'), pairedSide: 'left' });
-  const small = { ...patient, extents: extentsOf({ right: 41, left: 44, anterior: 38, posterior: 35, superior: 40, inferior: 45 }) };
+  const small = {
+    ...patient,
+    extents: extentsOf({ right: 41, left: 44, anterior: 38, posterior: 35, superior: 40, inferior: 45 }),
+  };
   return [patient, small].map((one) => layersOf(typicalCase({ patient: one })));
 }
 
@@ -92,20 +117,37 @@ function blocksOf(values: Float32Array, widthPx: number): number[] {
 
 function pictures(): unknown {
   const pictureOf = (given: Case, seed: number) => {
-    const { values, ...rest } = simulateImage(given, { sizePx: 48, seed, relativeSnr: 0.8, noiseShare: 0.03, sliceOffsetMm: seed - 3 });
+    const { values, ...rest } = simulateImage(given, {
+      sizePx: 48,
+      seed,
+      relativeSnr: 0.8,
+      noiseShare: 0.03,
+      sliceOffsetMm: seed - 3,
+    });
     return { ...rest, blocks: blocksOf(values, rest.widthPx) };
   };
   const coarse = (p: Prescription): Prescription => {
     const lines = Math.round(p.linesAcrossFov / 4);
-    return { ...p, readoutMatrix: Math.round(p.readoutMatrix / 4), linesAcrossFov: lines, acquiredLines: Math.ceil(lines * 1.15) };
+    return {
+      ...p,
+      readoutMatrix: Math.round(p.readoutMatrix / 4),
+      linesAcrossFov: lines,
+      acquiredLines: Math.ceil(lines * 1.15),
+    };
   };
-  const presaturation: Prescription['presaturation'] = [{ side: 'anterior', innerEdgeMm: 120, thicknessMm: 60, nominalFlipDeg: 90, delayMs: 11 }];
+  const presaturation: Prescription['presaturation'] = [
+    { side: 'anterior', innerEdgeMm: 120, thicknessMm: 60, nominalFlipDeg: 90, delayMs: 11 },
+  ];
   return SEQUENCE_FAMILIES.map((family, i) => {
     const p = coarse(prescriptionOf(family));
-    const acceleration = i % 2 === 0 ? accelerated(2, { unfolding: 'image-domain-grid-ends' }) : p.acceleration;
+    const acceleration =
+      i % 2 === 0 ? accelerated(2, { unfolding: 'image-domain-grid-ends' }) : p.acceleration;
     const region = REGIONS[i]!;
     return pictureOf(
-      typicalCase({ patient: patientOf(region, { arms: withArms('down') }), prescription: { ...p, acceleration, presaturation: i < 4 ? presaturation : [] } }),
+      typicalCase({
+        patient: patientOf(region, { arms: withArms('down') }),
+        prescription: { ...p, acceleration, presaturation: i < 4 ? presaturation : [] },
+      }),
       i + 1,
     );
   });
@@ -118,18 +160,31 @@ function sizes(): unknown {
     { girthMm: measured(1460), depthMm: measured(352, 4) },
     { weightKg: measured(131, 2), heightCm: measured(168, 1) },
     { weightKg: measured(172), heightCm: measured(177), hipGirthMm: measured(1510) },
-    { weightKg: measured(74), heightCm: measured(171), breadthMm: { value: 371, source: 'reported', spread: 12 } },
-    { girthMm: measured(1330), weightKg: measured(128), heightCm: measured(170), hipBreadthMm: measured(455) },
+    {
+      weightKg: measured(74),
+      heightCm: measured(171),
+      breadthMm: { value: 371, source: 'reported', spread: 12 },
+    },
+    {
+      girthMm: measured(1330),
+      weightKg: measured(128),
+      heightCm: measured(170),
+      hipBreadthMm: measured(455),
+    },
   ];
   const ways = people.flatMap((known) =>
     ([undefined, 'male', 'female'] as const).flatMap((sex) =>
-      (['iliac-crest', 'liver'] as const).map((level) => workOutSize({ ...known, sex }, { level, allowPopulation: level === 'liver' })),
+      (['iliac-crest', 'liver'] as const).map((level) =>
+        workOutSize({ ...known, sex }, { level, allowPopulation: level === 'liver' }),
+      ),
     ),
   );
   const measures = (Object.keys(BODY_REGRESSIONS) as BodyMeasure[]).flatMap((measure) =>
     (['male', 'female'] as const).map((sex) => bodyMeasure(measure, measured(83, 2), measured(174, 1), sex)),
   );
-  const shoulders = ([undefined, 'male', 'female'] as const).map((sex) => shouldersFromWeightAndHeight(measured(118, 3), measured(169, 2), sex));
+  const shoulders = ([undefined, 'male', 'female'] as const).map((sex) =>
+    shouldersFromWeightAndHeight(measured(118, 3), measured(169, 2), sex),
+  );
   return { ways, measures, shoulders };
 }
 
@@ -137,17 +192,39 @@ function bores(): unknown {
   return ARMS.flatMap((position) =>
     REGIONS.map((region, i) =>
       checkBore(
-        patientOf(region, { arms: withArms(position), position: i % 2 === 0 ? 'head-first-supine' : 'feet-first-prone', lateralOffsetMm: i * 3 - 9, sex: i % 3 === 0 ? 'male' : 'female' }),
-        typicalScanner({ boreDiameterMm: i % 2 === 0 ? 600 : 700, tableBelowCentreMm: 150 + 5 * i, anteriorCoilMm: 30 + i }),
-        i < 4 ? {} : { elbowBreadthMm: measured(520, 9), hipsZMm: -310, shouldersZMm: 340, halfLengthMm: 500, padMm: 12 },
+        patientOf(region, {
+          arms: withArms(position),
+          position: i % 2 === 0 ? 'head-first-supine' : 'feet-first-prone',
+          lateralOffsetMm: i * 3 - 9,
+          sex: i % 3 === 0 ? 'male' : 'female',
+        }),
+        typicalScanner({
+          boreDiameterMm: i % 2 === 0 ? 600 : 700,
+          tableBelowCentreMm: 150 + 5 * i,
+          anteriorCoilMm: 30 + i,
+        }),
+        i < 4
+          ? {}
+          : {
+              elbowBreadthMm: measured(520, 9),
+              hipsZMm: -310,
+              shouldersZMm: 340,
+              halfLengthMm: 500,
+              padMm: 12,
+            },
       ),
     ),
   );
 }
 
 const across: Partial<Case> = {
-  keepClear: { ...LIVER_BOX, mustStayDisplayed: { xMm: [-120, 90], yMm: [-80, 60], zMm: [-40, 40] } } as Case['keepClear'],
-  policy: typicalPolicy({ marginMm: { anterior: 9, posterior: 4, right: 6, left: 5, superior: 8, inferior: 7 } }),
+  keepClear: {
+    ...LIVER_BOX,
+    mustStayDisplayed: { xMm: [-120, 90], yMm: [-80, 60], zMm: [-40, 40] },
+  } as Case['keepClear'],
+  policy: typicalPolicy({
+    marginMm: { anterior: 9, posterior: 4, right: 6, left: 5, superior: 8, inferior: 7 },
+  }),
 };
 
 /** Every region with every family that suits, tilted, off-centre, with ghosts and slabs. */
@@ -158,11 +235,23 @@ function turned(): Case[] {
     SEQUENCE_FAMILIES.filter((_, j) => (i + j) % 3 === 0).map((family, j) => {
       const p = prescriptionOf(family);
       const fovPhaseMm = between(170, 300);
-      const slices = p.slices.mode === 'slab' ? slabOf({ partitions: 20, acquiredPartitions: between(20, 26), partitionThicknessMm: 4, timeBandwidthProduct: 6 }) : { ...p.slices, slices: 5 };
+      const slices =
+        p.slices.mode === 'slab'
+          ? slabOf({
+              partitions: 20,
+              acquiredPartitions: between(20, 26),
+              partitionThicknessMm: 4,
+              timeBandwidthProduct: 6,
+            })
+          : { ...p.slices, slices: 5 };
       const unfolding = (['image-domain-grid-ends', 'k-space-self-calibrating'] as const)[j % 2]!;
       return typicalCase({
         ...across,
-        patient: patientOf(region, { arms: withArms(ARMS[(i + j) % 3]!, between(0, 25)), isocentreZMm: between(-30, 30), lateralOffsetMm: between(-20, 20) }),
+        patient: patientOf(region, {
+          arms: withArms(ARMS[(i + j) % 3]!, between(0, 25)),
+          isocentreZMm: between(-30, 30),
+          lateralOffsetMm: between(-20, 20),
+        }),
         prescription: {
           ...p,
           slices,
@@ -183,11 +272,36 @@ function turned(): Case[] {
 function drawings(): unknown {
   /** Enough of an outline to see it change: its points' sums. */
   const outline = (rings: readonly (readonly (readonly [number, number])[])[]) =>
-    rings.map((ring) => [ring.length, ring.reduce((sum, [r]) => sum + r, 0), ring.reduce((sum, [, p]) => sum + p, 0), ring.reduce((sum, [r, p]) => sum + r * p, 0)]);
+    rings.map((ring) => [
+      ring.length,
+      ring.reduce((sum, [r]) => sum + r, 0),
+      ring.reduce((sum, [, p]) => sum + p, 0),
+      ring.reduce((sum, [r, p]) => sum + r * p, 0),
+    ]);
   return turned().map((given) => {
-    const { tissue, pieces, ghosts, keepClear, keepClearWithMargin, mustStayDisplayed, frame: _, ...rest } = drawSection(given, { sliceOffsetMm: 4 });
-    const seen = (one: (typeof pieces)[number] | (typeof ghosts)[number]) => ({ ...one, source: outline(one.source), landed: outline(one.landed), inKeepClear: outline(one.inKeepClear) });
-    return { ...rest, areas: outline([keepClear, keepClearWithMargin, mustStayDisplayed]), tissue: tissue.map((one) => ({ ...one, rings: outline(one.rings) })), pieces: pieces.map(seen), ghosts: ghosts.map(seen) };
+    const {
+      tissue,
+      pieces,
+      ghosts,
+      keepClear,
+      keepClearWithMargin,
+      mustStayDisplayed,
+      frame: _,
+      ...rest
+    } = drawSection(given, { sliceOffsetMm: 4 });
+    const seen = (one: (typeof pieces)[number] | (typeof ghosts)[number]) => ({
+      ...one,
+      source: outline(one.source),
+      landed: outline(one.landed),
+      inKeepClear: outline(one.inKeepClear),
+    });
+    return {
+      ...rest,
+      areas: outline([keepClear, keepClearWithMargin, mustStayDisplayed]),
+      tissue: tissue.map((one) => ({ ...one, rings: outline(one.rings) })),
+      pieces: pieces.map(seen),
+      ghosts: ghosts.map(seen),
+    };
   });
 }
 
@@ -199,11 +313,21 @@ function profiles(): unknown {
     { kind: 'spoiled', timeBandwidthProduct: 6, flipDeg: 40, trMs: 5, t1Ms: 300 },
   ].map((spec) => {
     const profile = slabProfile(spec as Parameters<typeof slabProfile>[0]);
-    return [...Array.from({ length: 40 }, (_, i) => profile.at(i * 0.031)), profile.skirtShare(0.05), profile.skirtShare(0.02)];
+    return [
+      ...Array.from({ length: 40 }, (_, i) => profile.at(i * 0.031)),
+      profile.skirtShare(0.05),
+      profile.skirtShare(0.02),
+    ];
   });
 }
 
-const shortened = ({ slab, ...rest }: ReturnType<typeof assess>) => ({ ...rest, slab: slab && { ...slab, partitions: slab.partitions.map(({ alias, signal }) => [alias, signal]) } });
+/** Without words, which may be put better any day: reasons by their code. */
+const shortened = ({ slab, reasons, assumptions, ...rest }: ReturnType<typeof assess>) => ({
+  ...rest,
+  reasons: reasons.map(({ code }) => code),
+  assumptions: assumptions.map(({ field }) => field),
+  slab: slab && { ...slab, partitions: slab.partitions.map(({ alias, signal }) => [alias, signal]) },
+});
 
 function probabilities(): unknown {
   const unsure = (given: Case, spread: number): Case => {
@@ -212,7 +336,13 @@ function probabilities(): unknown {
       ...given,
       patient: {
         ...given.patient,
-        extents: { ...extents, anterior: { ...extents.anterior, spread }, posterior: { ...extents.posterior, spread }, right: { ...extents.right, spread: spread + 3 }, left: { ...extents.left, spread: spread + 3 } },
+        extents: {
+          ...extents,
+          anterior: { ...extents.anterior, spread },
+          posterior: { ...extents.posterior, spread },
+          right: { ...extents.right, spread: spread + 3 },
+          left: { ...extents.left, spread: spread + 3 },
+        },
       },
     };
   };
@@ -233,5 +363,20 @@ export const KEPT: Readonly<Record<string, () => unknown>> = {
   probabilities,
   'assessments-turned': () => turned().map((given) => shortened(assess(given))),
   'assessments-drawn': () => Array.from({ length: 40 }, (_, i) => shortened(assess(drawCase(i + 1)))),
-  'assessments-margin': () => SEQUENCE_FAMILIES.map((family) => shortened(assess(typicalCase({ keepClear: LIVER_BOX, prescription: prescriptionOf(family), policy: typicalPolicy({ marginMm: evenMargin(4), sureAt: 0.8 }), patient: typicalPatient({ extents: { ...extentsOf({}), anterior: measured(170, 8), posterior: measured(168, 8) }, arms: withArms('down') }) })))),
+  'assessments-margin': () =>
+    SEQUENCE_FAMILIES.map((family) =>
+      shortened(
+        assess(
+          typicalCase({
+            keepClear: LIVER_BOX,
+            prescription: prescriptionOf(family),
+            policy: typicalPolicy({ marginMm: evenMargin(4), sureAt: 0.8 }),
+            patient: typicalPatient({
+              extents: { ...extentsOf({}), anterior: measured(170, 8), posterior: measured(168, 8) },
+              arms: withArms('down'),
+            }),
+          }),
+        ),
+      ),
+    ),
 };
