@@ -6,7 +6,8 @@ import { FormMessage, useReadOnly } from '@/components/ui/form';
 import { ArrowDownIcon, ArrowUpIcon, CrossIcon, PlusIcon } from '@/components/ui/icons';
 import { Panel } from '@/components/ui/panel';
 import { KindGroup, SlicesGroup, useSequence, WindowGroup } from './sequence-groups';
-import { PresaturationGroup, SavingGroup, TimingGroup } from './sequence-timing';
+import { PresaturationGroup } from './sequence-presaturation';
+import { SavingGroup, TimingGroup } from './sequence-timing';
 import { sequenceSummary } from './sequence-facts';
 
 export interface SequencePanelProps {
