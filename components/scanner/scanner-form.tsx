@@ -9,6 +9,7 @@ import { useVersionedForm, type Versioned } from '@/components/ui/use-versioned-
 import type { ActionResult } from '@/lib/schemas/action-result';
 import { scannerFormSchema, type ScannerForm as Values } from '@/lib/schemas/scanner';
 import { NEW_SCANNER } from './scanner-defaults';
+import { CoilsGroup } from './coils-group';
 import { LimitsGroup, OpeningGroup, OwnerGroup, SamplingGroup, UnfoldingGroup } from './scanner-groups';
 
 export interface ScannerFormProps {
@@ -53,6 +54,7 @@ export function ScannerForm({ stored, save, readCurrent, mayEdit }: ScannerFormP
         <SamplingGroup />
         <UnfoldingGroup />
         <LimitsGroup />
+        <CoilsGroup />
         <OwnerGroup />
       </div>
       <div className="mt-5 space-y-4">

@@ -28,6 +28,8 @@ export type {
 } from '@/lib/physics/model/prescription';
 export type { Ranking, Remedy, RemedyKind, RemedyNotPossible, PaybackKind } from '@/lib/physics/model/remedy';
 export type {
+  CoilDescription,
+  CoilElement,
   LineStep,
   OversamplingForm,
   Scanner,

@@ -108,6 +108,12 @@ export const prescriptionShape = {
   acceleration: strict(accelerationShape, 'Parallel imaging.'),
   presaturation: z.array(strict(presaturationShape)).max(6).describe('Presaturation bands.'),
   coil: words(60, 'Receive coil.'),
+  coilElements: z
+    .array(words(60, 'Element of the coil, as the scanner describes it.'))
+    .min(1)
+    .max(64)
+    .describe('Elements of the coil that are used; left out: all.')
+    .optional(),
 } satisfies ShapeOf<Prescription>;
 
 /** Rules that hold between fields; the same for the form, the routes and the check. */

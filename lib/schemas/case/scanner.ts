@@ -1,6 +1,6 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
-import type { Scanner, ScannerLimits } from '@/lib/domain/case/model';
+import type { CoilDescription, CoilElement, Scanner, ScannerLimits } from '@/lib/domain/case/model';
 import { UNFOLDINGS } from '@/lib/schemas/case/prescription';
 import { choice, count, flag, quantity, refused, strict, words } from '@/lib/schemas/fields/fields';
 
@@ -44,6 +44,26 @@ export const lineStepSchema = z
   )
   .describe('The scanner’s own grid of acquired lines; requests are rounded up to it.');
 
+const seen = (text: string) => quantity({ min: -1000, max: 1000, unit: 'mm', text });
+
+export const coilElementShape = {
+  name: words(60, 'The element.'),
+  seesFromMm: seen('Sees tissue from here along the bore, from the isocentre'),
+  seesToMm: seen('Sees tissue up to here along the bore, from the isocentre'),
+} satisfies ShapeOf<CoilElement>;
+
+export const coilSchema = strict(
+  {
+    name: words(60, 'The coil, as prescriptions name it.'),
+    elements: z
+      .array(strict(coilElementShape))
+      .min(1)
+      .max(64)
+      .describe('Elements from feet to head.'),
+  } satisfies ShapeOf<CoilDescription>,
+  'A receive coil whose elements the site has described.',
+);
+
 export const scannerShape = {
   name: words(60, 'The site’s own name for the scanner.'),
   fieldStrengthT: quantity({ min: 0.05, max: 12, unit: 'T', text: 'Field strength' }),
@@ -62,6 +82,11 @@ export const scannerShape = {
   tissueReachMm: quantity({ min: 50, max: 1000, unit: 'mm', text: 'Tissue is seen this far either side of the isocentre along the bore' }),
   respiratoryWindow: quantity({ min: 0.05, max: 1, unit: '1', text: 'Share of a breath in which a triggered scan may acquire' }),
   limits: strict(scannerLimitsShape, 'Hard limits.'),
+  coils: z
+    .array(coilSchema)
+    .max(16)
+    .describe('Coils whose elements are described; of any other coil no element can be left out.')
+    .optional(),
 } satisfies ShapeOf<Scanner>;
 
 /** Rules that hold between fields. */
@@ -72,6 +97,13 @@ export function refineScanner(value: Scanner, report: (path: string[], message: 
   if (value.tableBelowCentreMm >= value.boreDiameterMm / 2) {
     report(['tableBelowCentreMm'], `${value.tableBelowCentreMm} given; allowed: below half the opening, ${value.boreDiameterMm / 2} mm`);
   }
+  (value.coils ?? []).forEach((coil, c) => {
+    coil.elements.forEach(({ seesFromMm, seesToMm }, e) => {
+      if (seesFromMm >= seesToMm) {
+        report(['coils', String(c), 'elements', String(e), 'seesFromMm'], `${seesFromMm} given; allowed: below where the element ends, ${seesToMm} mm`);
+      }
+    });
+  });
   const doubling = value.oversamplingForm.startsWith('doubling-switch');
   if (doubling !== (value.lineStep.kind === 'doubling')) {
     report(['oversamplingForm'], `${value.oversamplingForm} given with the line step ${value.lineStep.kind}; allowed: a doubling switch with the doubling step, and only together`);
