@@ -31,7 +31,7 @@ function edgeOf(piece: Pick<PieceDrawing, 'estimated' | 'placeUncertain'>): Stro
 }
 
 /** Where the tissue is: outlined, outside the picture. */
-export function sourceNodes(piece: PieceDrawing, context: PieceContext, focused: boolean): SceneNode[] {
+export function sourceNodes(piece: PieceDrawing | GhostDrawing, context: PieceContext, focused: boolean): SceneNode[] {
   if (piece.source.length === 0) return [];
   return [
     {

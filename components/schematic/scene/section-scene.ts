@@ -1,5 +1,5 @@
 import type { Case } from '@/lib/physics/model/case';
-import type { PieceDrawing, SectionDrawing, SectionRing, TissueDrawing } from '@/lib/physics/section/section-drawing';
+import type { GhostDrawing, PieceDrawing, SectionDrawing, SectionRing, TissueDrawing } from '@/lib/physics/section/section-drawing';
 import { anatomySketch } from './anatomy';
 import { ghostNodes, landedNodes, sourceNodes, threadNodes } from './piece-nodes';
 import { letterNodes, scaleNodes } from './frame-nodes';
@@ -59,20 +59,22 @@ export function sectionScene(input: SectionSceneInput): Scene {
     mmPerPx,
     bounds,
   };
-  const pieces = shown.drawing.pieces;
-  const focused = focusedPiece(pieces, input.focus);
+  const { pieces, ghosts } = shown.drawing;
+  const focused = heldOf(pieces, input.focus);
+  const focusedGhost = focused ? undefined : heldOf(ghosts, input.focus);
   const nodes: SceneNode[] = [
     { kind: 'area', name: 'picture', rings: [windowRing], fill: 'paper' },
     ...tissueNodes(drawing, input.asGiven, toRing),
     ...sketchNodes(question, input.asGiven ?? drawing.tissue, toRing),
     veil(bounds, windowRing),
     ...pieces.flatMap((piece) => sourceNodes(piece, pieceContext, piece === focused)),
+    ...uniqueSources(ghosts).flatMap((ghost) => sourceNodes(ghost, pieceContext, ghost === focusedGhost)),
     ...pieces.flatMap((piece) => landedNodes(piece, pieceContext, piece === focused)),
-    ...shown.drawing.ghosts.flatMap((ghost) => ghostNodes(ghost, pieceContext, ghost.name === input.focus)),
+    ...ghosts.flatMap((ghost) => ghostNodes(ghost, pieceContext, ghost === focusedGhost)),
     ...edgeNodes(window, input),
     { kind: 'area', name: 'fov', rings: [windowRing], stroke: { colour: 'ink', widthPx: 1.75, edge: 'solid' } },
     ...areaNodes(drawing, question, toRing),
-    ...threadNodes(focused, shown.drawing.ghosts.find(({ name }) => name === input.focus), pieceContext),
+    ...threadNodes(focused, focusedGhost, pieceContext),
     ...letterNodes(bounds, question, window, mmPerPx),
     ...scaleNodes(bounds, mmPerPx),
     ...(input.handles ?? []).map(
@@ -254,8 +256,18 @@ function areaNodes(drawing: SectionDrawing, question: Case, toRing: (ring: Secti
   return nodes;
 }
 
-/** The hovered piece; else the one that matters most, so that its thread is drawn without asking. */
-function focusedPiece(pieces: readonly PieceDrawing[], focus: string | undefined): PieceDrawing | undefined {
-  if (focus !== undefined) return pieces.find(({ name }) => name === focus);
-  return pieces.find(({ inKeepClear }) => inKeepClear.length > 0);
+/** The hovered one; else the first that reaches the keep-clear area, so that its thread is drawn without asking. */
+function heldOf<T extends PieceDrawing | GhostDrawing>(drawn: readonly T[], focus: string | undefined): T | undefined {
+  if (focus !== undefined) return drawn.find(({ name }) => name === focus);
+  return drawn.find(({ inKeepClear }) => inKeepClear.length > 0);
+}
+
+/** Several ghosts of one piece of tissue have one source. */
+function uniqueSources(ghosts: readonly GhostDrawing[]): readonly GhostDrawing[] {
+  const first = new Map<string, GhostDrawing>();
+  for (const ghost of ghosts) {
+    const key = `${ghost.part}/${ghost.side}`;
+    if (!first.has(key)) first.set(key, ghost);
+  }
+  return [...first.values()];
 }
