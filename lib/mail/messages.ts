@@ -1,5 +1,13 @@
 import * as z from 'zod';
 
+/** A plan by its ids and the booking's reference: whoever may see more opens the link and signs in. */
+const planNews = z.strictObject({
+  schemaVersion: z.literal(1),
+  planId: z.uuid(),
+  planVersion: z.int().min(1),
+  reference: z.string().max(64),
+});
+
 /**
  * Every kind of mail with what its text needs. The payload is stored with its schemaVersion; no mail carries a
  * patient's size, and no payload a secret: the link is handed over when the mail is written.
@@ -7,6 +15,9 @@ import * as z from 'zod';
 export const MAIL_KINDS = {
   invitation: z.strictObject({ schemaVersion: z.literal(1), expiresAt: z.iso.datetime() }),
   'password-reset': z.strictObject({ schemaVersion: z.literal(1), expiresAt: z.iso.datetime() }),
+  'sign-off-asked': planNews,
+  'plan-for-use': planNews,
+  'plan-sent-back': planNews,
 } as const;
 
 export type MailKind = keyof typeof MAIL_KINDS;
@@ -27,33 +38,59 @@ interface Draft {
 
 const until = (iso: string) => `${iso.slice(0, 16).replace('T', ' ')} UTC`;
 
-function draft(kind: MailKind, payload: MailPayload<MailKind>, siteName: string, url: string): Draft {
-  switch (kind) {
-    case 'invitation':
-      return {
-        subject: `Your Selvedge account at ${siteName}`,
-        paragraphs: [`An account for Selvedge, the planning aid for fold in MR pictures, was made for you at ${siteName}.`],
-        link: { words: 'Choose a password', url },
-        closing: `The link works once, until ${until(payload.expiresAt)}. If you did not expect this, do nothing.`,
-      };
-    case 'password-reset':
-      return {
-        subject: 'A new password for Selvedge',
-        paragraphs: [`Someone asked for a new password for your Selvedge account at ${siteName}.`],
-        link: { words: 'Choose a new password', url },
-        closing: `The link works once, until ${until(payload.expiresAt)}. If it was not you, do nothing: your password stays.`,
-      };
-  }
-}
+type Drafts = { readonly [Kind in MailKind]: (payload: MailPayload<Kind>, siteName: string, url: string) => Draft };
+
+const nameOf = ({ reference, planVersion }: MailPayload<'plan-for-use'>) =>
+  `${reference === '' ? 'a plan without a booking' : reference}, version ${planVersion}`;
+const NO_SIZES = 'Sizes and pictures stay in Selvedge: sign in to see them.';
+
+const DRAFTS: Drafts = {
+  invitation: (payload, siteName, url) => ({
+    subject: `Your Selvedge account at ${siteName}`,
+    paragraphs: [`An account for Selvedge, the planning aid for fold in MR pictures, was made for you at ${siteName}.`],
+    link: { words: 'Choose a password', url },
+    closing: `The link works once, until ${until(payload.expiresAt)}. If you did not expect this, do nothing.`,
+  }),
+  'password-reset': (payload, siteName, url) => ({
+    subject: 'A new password for Selvedge',
+    paragraphs: [`Someone asked for a new password for your Selvedge account at ${siteName}.`],
+    link: { words: 'Choose a new password', url },
+    closing: `The link works once, until ${until(payload.expiresAt)}. If it was not you, do nothing: your password stays.`,
+  }),
+  'sign-off-asked': (payload, siteName, url) => ({
+    subject: `Sign-off asked: ${nameOf(payload)}`,
+    paragraphs: [
+      `At ${siteName} a plan was put for use that a radiologist has to sign off first: ${nameOf(payload)}.`,
+      'You can sign it off, or send it back with a reason.',
+    ],
+    link: { words: 'Open the plan', url },
+    closing: NO_SIZES,
+  }),
+  'plan-for-use': (payload, siteName, url) => ({
+    subject: `Plan for use: ${nameOf(payload)}`,
+    paragraphs: [`At ${siteName} a plan can be scanned from: ${nameOf(payload)}.`],
+    link: { words: 'Open the plan', url },
+    closing: NO_SIZES,
+  }),
+  'plan-sent-back': (payload, siteName, url) => ({
+    subject: `Plan sent back: ${nameOf(payload)}`,
+    paragraphs: [`At ${siteName} a radiologist sent your plan back: ${nameOf(payload)}. The reason stands on its page.`],
+    link: { words: 'Open the plan', url },
+    closing: NO_SIZES,
+  }),
+};
 
 const ESCAPES: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' };
 const escapeHtml = (text: string) => text.replace(/[&<>"']/g, (character) => ESCAPES[character] ?? character);
 
+function draftOf<Kind extends MailKind>(kind: Kind, payload: unknown, siteName: string, url: string): Draft {
+  return DRAFTS[kind](MAIL_KINDS[kind].parse(payload) as MailPayload<Kind>, siteName, url);
+}
+
 /** Subject, text and HTML of a stored mail. Throws when the payload is not one this program knows. */
 export function writeMail(kind: string, payload: unknown, siteName: string, url: string): MailText {
   if (!(kind in MAIL_KINDS)) throw new Error(`No mail of kind "${kind}"`);
-  const known = kind as MailKind;
-  const { subject, paragraphs, link, closing } = draft(known, MAIL_KINDS[known].parse(payload), siteName, url);
+  const { subject, paragraphs, link, closing } = draftOf(kind as MailKind, payload, siteName, url);
   return {
     // A line break in a site's name would start a header of its own.
     subject: subject.replace(/\s+/g, ' '),

@@ -52,9 +52,9 @@ export async function equipSite(): Promise<EquippedSite> {
   return { site, lead, radiographer, radiologist, coordinator, scanner, protocol, booking };
 }
 
-export async function sizeBooking({ radiographer, booking }: Pick<EquippedSite, 'radiographer' | 'booking'>, breadthMm = 480, depthMm = 340) {
+export async function sizeBooking({ radiographer, booking }: Pick<EquippedSite, 'radiographer' | 'booking'>, breadthMm = 480, depthMm = 340, now = NOW) {
   const reading = (quantity: string, value: number) => ({ quantity, value, source: 'measured', spread: 3, takenOn: '2026-05-02' });
-  return recordReadings(as(radiographer), {
+  return recordReadings({ actor: radiographer, now }, {
     bookingId: booking.id,
     readings: [reading('breadth-mm', breadthMm), reading('depth-mm', depthMm), reading('arms-position', 1)],
   });

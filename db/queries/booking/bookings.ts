@@ -96,6 +96,11 @@ export async function findBooking(trx: SiteTransaction, siteId: string, id: stri
   return row ? toOverview(row) : null;
 }
 
+/** Holds the booking's row until the transaction ends: what is made for one booking follows instead of racing. */
+export async function lockBooking(trx: SiteTransaction, siteId: string, id: string): Promise<void> {
+  await trx.selectFrom('booking').select('id').where('site_id', '=', siteId).where('id', '=', id).forUpdate().execute();
+}
+
 /** Bookings from a moment on that have no plan yet: their state follows scanner, protocol and policy. */
 export async function listUnplannedBookingIds(
   trx: SiteTransaction,

@@ -1,3 +1,4 @@
+import { sql } from 'kysely';
 import type { SiteTransaction } from '@/db/client';
 import {
   readPlanDocument, readPlanResult, type PlanDocument, type PlanResultDocument,
@@ -26,10 +27,23 @@ function versions(trx: SiteTransaction, siteId: string) {
           .as('s'),
       (join) => join.onTrue(),
     )
+    .leftJoinLateral(
+      (from) =>
+        from
+          .selectFrom('keep_clear_request as k')
+          .select(sql<number | null>`(k.data ->> 'toleratedFoldOutsidePct')::float8`.as('tolerated_pct'))
+          .whereRef('k.site_id', '=', 'p.site_id')
+          .whereRef('k.booking_id', '=', 'p.booking_id')
+          .orderBy('k.requested_at', 'desc')
+          .orderBy('k.id')
+          .limit(1)
+          .as('r'),
+      (join) => join.onTrue(),
+    )
     .select([
       'p.site_id', 'p.id', 'p.booking_id', 'p.state', 'p.current_version', 'p.short_code', 'b.accession',
-      'v.version', 'v.data', 'v.result', 'v.engine_version', 'v.policy_version', 'v.input_hash', 'v.note', 'v.created_at',
-      'u.display_name as saved_by', 's.decision', 's.reason', 's.signed_at', 's.display_name as signed_by',
+      'v.version', 'v.data', 'v.result', 'v.engine_version', 'v.policy_version', 'v.input_hash', 'v.note', 'v.created_at', 'v.created_by',
+      'u.display_name as saved_by', 's.decision', 's.reason', 's.signed_at', 's.display_name as signed_by', 'r.tolerated_pct',
     ])
     .where('p.site_id', '=', siteId);
 }
@@ -54,6 +68,8 @@ function toPlan(row: PlanRow): PlanRecord {
     note: row.note,
     savedAt: row.created_at,
     savedBy: row.saved_by ?? '',
+    savedById: row.created_by,
+    toleratedFoldOutsidePct: row.tolerated_pct,
     signOff:
       row.decision !== null && row.signed_at !== null
         ? { decision: row.decision as SignOffDecision, reason: row.reason ?? '', at: row.signed_at, by: row.signed_by ?? '' }

@@ -1,3 +1,4 @@
+import { sql } from 'kysely';
 import type { SiteTransaction } from '@/db/client';
 import type { ReadingSource } from '@/lib/domain/case/model';
 import type { SizeQuantity } from '@/lib/domain/size-reading/quantities';
@@ -28,7 +29,7 @@ export async function insertSizeReadings(
   trx: SiteTransaction,
   siteId: string,
   bookingId: string,
-  readings: readonly Omit<SizeReading, 'id' | 'recordedAt'>[],
+  readings: readonly (Omit<SizeReading, 'id' | 'recordedAt'> & { readonly id?: string })[],
   recorded: { readonly by: string; readonly at: Date },
 ): Promise<void> {
   if (readings.length === 0) return;
@@ -37,6 +38,7 @@ export async function insertSizeReadings(
     .values(
       readings.map((reading) => ({
         site_id: siteId,
+        id: reading.id ?? sql<string>`gen_random_uuid()`,
         booking_id: bookingId,
         quantity: reading.quantity,
         value: reading.value,
@@ -47,5 +49,7 @@ export async function insertSizeReadings(
         recorded_at: recorded.at,
       })),
     )
+    // Sent again because its answer was lost on the way: it is there already.
+    .onConflict((conflict) => conflict.columns(['site_id', 'id']).doNothing())
     .execute();
 }

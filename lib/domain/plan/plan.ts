@@ -24,5 +24,9 @@ export interface PlanRecord extends PlanHead {
   readonly note: string;
   readonly savedAt: Date;
   readonly savedBy: string;
+  /** The account behind the name: who is told when the plan is sent back. */
+  readonly savedById: string;
+  /** Asked for this exam by a radiologist; null: site policy says. */
+  readonly toleratedFoldOutsidePct: number | null;
   readonly signOff: { readonly decision: SignOffDecision; readonly reason: string; readonly at: Date; readonly by: string } | null;
 }

@@ -4,15 +4,30 @@ import type { PlanState } from '@/lib/domain/plan/states';
 /** Verdicts with which a plan may not be put for use: nothing says what would come out. */
 const BARRED: readonly Assessment['verdict'][] = ['cannot-be-scanned', 'not-modelled'];
 
-/** A radiologist decides when fold is left in the keep-clear area, or always when the policy says so. */
-export function needsSignOff(assessments: readonly Assessment[], policy: Pick<SitePolicy, 'signOffAlways'>): boolean {
-  return policy.signOffAlways || assessments.some((assessment) => assessment.verdict === 'fold-in-keep-clear');
+type SignOffPolicy = Pick<SitePolicy, 'signOffAlways' | 'tolerateFoldOutsidePct'>;
+
+/** Why a radiologist decides about a plan; the first that holds. */
+export type SignOffCause = 'policy' | 'fold-in-keep-clear' | 'fold-outside-beyond-tolerated';
+
+/**
+ * A radiologist decides when fold is left in the keep-clear area, when more is left beside it than is tolerated (by the
+ * policy, or as asked for this exam), or always when the policy says so.
+ */
+export function signOffCause(assessments: readonly Assessment[], policy: SignOffPolicy): SignOffCause | undefined {
+  if (assessments.some(({ verdict }) => verdict === 'fold-in-keep-clear')) return 'fold-in-keep-clear';
+  const beyond = ({ fold }: Assessment) => (fold?.displayedShare ?? 0) * 100 > policy.tolerateFoldOutsidePct;
+  if (assessments.some(beyond)) return 'fold-outside-beyond-tolerated';
+  return policy.signOffAlways ? 'policy' : undefined;
+}
+
+export function needsSignOff(assessments: readonly Assessment[], policy: SignOffPolicy): boolean {
+  return signOffCause(assessments, policy) !== undefined;
 }
 
 export interface PlanSituation {
   readonly state: PlanState;
   readonly assessments: readonly Assessment[];
-  readonly policy: Pick<SitePolicy, 'signOffAlways'>;
+  readonly policy: SignOffPolicy;
 }
 
 /**

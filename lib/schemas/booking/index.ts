@@ -3,6 +3,7 @@ import * as z from 'zod';
 import type { BodyRegion, Verdict } from '@/lib/domain/case/model';
 import type { PlanState } from '@/lib/domain/plan/states';
 import type { PlanView } from '@/lib/schemas/plan';
+import type { KeepClearRequestView } from '@/lib/schemas/keep-clear-request';
 import type { PolicyView } from '@/lib/schemas/site-policy';
 import type { ProtocolView } from '@/lib/schemas/protocol';
 import type { ScannerView } from '@/lib/schemas/scanner';
@@ -79,6 +80,8 @@ export interface BenchView {
   readonly scanner: ScannerView;
   readonly protocol: ProtocolView;
   readonly policy: PolicyView;
+  /** What a radiologist asked to be kept free of fold, laid into this patient. */
+  readonly requested?: KeepClearRequestView;
   /** Newest plan of the booking, if any. */
   readonly plan?: PlanView;
 }

@@ -4,6 +4,7 @@ import { PLAN_STATES } from '@/lib/domain/plan/states';
 import type { BenchView, BookingListItem, BookingPage } from '@/lib/schemas/booking';
 import { VERDICTS } from '@/lib/schemas/case/assessment';
 import { REGIONS } from '@/lib/schemas/case/patient';
+import { keepClearRequestViewSchema } from '@/lib/schemas/keep-clear-request';
 import { planViewSchema } from '@/lib/schemas/plan/views';
 import { protocolViewSchema } from '@/lib/schemas/protocol/views';
 import { scannerViewSchema } from '@/lib/schemas/scanner/views';
@@ -39,5 +40,6 @@ export const benchViewSchema = z.strictObject({
   scanner: scannerViewSchema,
   protocol: protocolViewSchema,
   policy: policyViewSchema,
+  requested: keepClearRequestViewSchema.describe('Asked for by a radiologist.').optional(),
   plan: planViewSchema.optional(),
 }) satisfies z.ZodType<BenchView>;

@@ -10,6 +10,8 @@ import { patientSchema } from '@/lib/schemas/case/patient';
 import { policySchema } from '@/lib/schemas/case/policy';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import { scannerSchema } from '@/lib/schemas/case/scanner';
+import { outcomeListSchema, outcomeViewSchema, recordOutcomeBody } from '@/lib/schemas/outcome';
+import { requestSheetBody, sheetViewSchema } from '@/lib/schemas/plan-sheet';
 import { movePlanBody, savePlanBody, signOffBody } from '@/lib/schemas/plan';
 import { planViewSchema } from '@/lib/schemas/plan/views';
 import { protocolListSchema, protocolViewSchema } from '@/lib/schemas/protocol/views';
@@ -45,6 +47,8 @@ export const REQUESTS = {
   SavePlan: savePlanBody,
   MovePlan: movePlanBody,
   SignOff: signOffBody,
+  NewOutcome: recordOutcomeBody,
+  RequestSheet: requestSheetBody,
 } as const;
 
 export const ANSWERS = {
@@ -63,6 +67,9 @@ export const ANSWERS = {
   ProtocolList: protocolListSchema,
   PolicyVersion: policyViewSchema,
   Plan: planViewSchema,
+  Outcome: outcomeViewSchema,
+  OutcomeList: outcomeListSchema,
+  Sheet: sheetViewSchema,
 } as const;
 
 export type RequestName = keyof typeof REQUESTS;

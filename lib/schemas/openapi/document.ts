@@ -19,6 +19,9 @@ const PROBLEMS: Readonly<Record<string, string>> = {
   429: 'Too many calls; the header Retry-After says how long to wait.',
 };
 
+const answerOf = (answer: Operation['answer']) =>
+  answer === 'application/pdf' ? { [answer]: { schema: { type: 'string', format: 'binary' } } } : json(answer);
+
 function parameters(schema: z.ZodObject | undefined, place: 'path' | 'query' | 'header'): unknown[] {
   if (!schema) return [];
   return Object.entries(schema.shape).map(([name, field]) => {
@@ -50,7 +53,7 @@ function describe(operation: Operation): Record<string, unknown> {
     security: scope ? [{ token: [] }, { session: [] }] : [{ session: [] }],
     parameters: [...parameters(params, 'path'), ...parameters(query, 'query'), ...parameters(headers, 'header')],
     ...(request ? { requestBody: { required: true, content: json(request, examples) } } : {}),
-    responses: { [status]: { description: 'Done.', content: json(answer) }, ...problems(operation) },
+    responses: { [status]: { description: 'Done.', content: answerOf(answer) }, ...problems(operation) },
   };
 }
 

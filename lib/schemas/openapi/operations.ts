@@ -5,6 +5,7 @@ import { listBookingsQuery } from '@/lib/schemas/booking';
 import { idParams } from '@/lib/schemas/fields/ids';
 import { CHECK_EXAMPLES, NEW_BOOKING_EXAMPLES, NEW_READING_EXAMPLES, SAVE_PLAN_EXAMPLES } from '@/lib/schemas/openapi/examples';
 import type { AnswerName, RequestName } from '@/lib/schemas/openapi/components';
+import { sheetParams } from '@/lib/schemas/plan-sheet';
 import { codeParams, idempotencyKeySchema, planQuery } from '@/lib/schemas/plan';
 
 export interface Operation {
@@ -19,7 +20,7 @@ export interface Operation {
   readonly headers?: z.ZodObject;
   readonly request?: RequestName;
   readonly examples?: Readonly<Record<string, { readonly summary: string; readonly value: unknown }>>;
-  readonly answer: AnswerName;
+  readonly answer: AnswerName | 'application/pdf';
   readonly status?: number;
 }
 
@@ -72,6 +73,27 @@ export const OPERATIONS: readonly Operation[] = [
   {
     method: 'post', path: '/api/v1/plans/{id}/sign-off', id: 'signOffPlan', params: idParams, request: 'SignOff',
     answer: 'Plan', summary: 'A radiologist’s decision on one version of a plan.',
+  },
+  {
+    method: 'get', path: '/api/v1/plans/{id}/outcomes', id: 'listOutcomes', scope: 'outcomes:read', params: idParams,
+    answer: 'OutcomeList', summary: 'What came of a plan, newest first.',
+  },
+  {
+    method: 'post', path: '/api/v1/plans/{id}/outcomes', id: 'recordOutcome', scope: 'outcomes:write', params: idParams,
+    request: 'NewOutcome', answer: 'Outcome',
+    summary: 'Records what came of a plan, which becomes used. The id is the caller’s: the same outcome sent twice is one.',
+  },
+  {
+    method: 'post', path: '/api/v1/plans/{id}/sheets', id: 'requestSheet', params: idParams, request: 'RequestSheet',
+    answer: 'Sheet', summary: 'Asks for a plan sheet as PDF; the same sheet is made once.',
+  },
+  {
+    method: 'get', path: '/api/v1/plans/{id}/sheets/{sheetId}', id: 'getSheet', scope: 'plans:read', params: sheetParams,
+    answer: 'Sheet', summary: 'Where the making of a plan sheet stands.',
+  },
+  {
+    method: 'get', path: '/api/v1/plans/{id}/sheets/{sheetId}/pdf', id: 'getSheetFile', scope: 'plans:read', params: sheetParams,
+    answer: 'application/pdf', summary: 'The finished plan sheet.',
   },
   {
     method: 'get', path: '/api/v1/plans/by-code/{code}', id: 'getPlanByCode', scope: 'plans:read', params: codeParams,

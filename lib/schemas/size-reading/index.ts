@@ -8,6 +8,7 @@ import { idSchema } from '@/lib/schemas/fields/ids';
 
 /** One number about the patient as it is written down. */
 export const sizeReadingInput = strict({
+  id: idSchema.describe('Drawn by the sender, so that the same reading sent twice is one; left out: drawn here.').optional(),
   quantity: choice(QUANTITIES, 'What was measured; its unit is part of the name.'),
   value: quantity({ min: 0, max: 3000, unit: '1', text: 'Value in the unit of the quantity' }),
   source: choice(READING_SOURCES, 'How the value was got.'),

@@ -3,6 +3,7 @@ import { authorise } from '@/lib/domain/access';
 import { onScanner } from '@/lib/domain/case/lines';
 import type { BenchView } from '@/lib/schemas/booking';
 import { nowOf, type ServiceContext } from '../context';
+import { toKeepClearRequestView } from '../keep-clear-request/to-keep-clear-request-view';
 import { toPlanView } from '../plan/to-plan-view';
 import { toProtocolView } from '../protocol/to-protocol-view';
 import { toScannerView } from '../scanner/to-scanner-view';
@@ -20,7 +21,7 @@ export async function openBench(context: ServiceContext, input: { readonly booki
   return inTransaction(siteId, async (trx) => {
     const setup = await readBookingSetup(trx, { siteId, bookingId: input.bookingId, now: nowOf(context) });
     authorise(actor, 'plan.read', setup?.booking);
-    const { booking, scanner, protocol, policy, sizeRecord, plan } = setup!;
+    const { booking, scanner, protocol, policy, sizeRecord, plan, request } = setup!;
     const protocolView = toProtocolView(protocol);
     const { patient } = sizeRecord;
     return {
@@ -36,6 +37,7 @@ export async function openBench(context: ServiceContext, input: { readonly booki
         })),
       },
       policy,
+      ...(request ? { requested: toKeepClearRequestView(request, patient) } : {}),
       ...(plan ? { plan: toPlanView(plan, await readPlannedSetup(trx, plan, setup!)) } : {}),
     };
   });

@@ -1,5 +1,6 @@
 import type { SiteTransaction } from '@/db/client';
 import { findBooking, type BookingOverview } from '@/db/queries/booking/bookings';
+import { findKeepClearRequest } from '@/db/queries/keep-clear-request/keep-clear-requests';
 import { findPlanOfBooking } from '@/db/queries/plan/plans';
 import { findProtocol } from '@/db/queries/protocol/protocols';
 import { findScanner } from '@/db/queries/scanner/scanners';
@@ -7,6 +8,7 @@ import { findPolicy } from '@/db/queries/site-policy/policies';
 import { listSizeReadings } from '@/db/queries/size-reading/size-readings';
 import type { Scanner, SitePolicy } from '@/lib/domain/case/model';
 import { ServiceError } from '@/lib/domain/errors';
+import { policyForExam, type KeepClearRequest } from '@/lib/domain/keep-clear-request/document';
 import type { PlanRecord } from '@/lib/domain/plan/plan';
 import type { ProtocolRecord } from '@/lib/domain/protocol/document';
 import type { ScannerRecord } from '@/lib/domain/scanner/document';
@@ -23,9 +25,11 @@ export interface BookingSetup {
   readonly policy: PolicyView;
   readonly sizeRecord: SizeRecordView;
   readonly plan: PlanRecord | null;
+  /** What a radiologist asked to be kept free of fold. */
+  readonly request: KeepClearRequest | null;
 }
 
-/** Six queries, whatever the booking holds. Null when there is no such booking. */
+/** Seven queries, whatever the booking holds. Null when there is no such booking. */
 export async function readBookingSetup(
   trx: SiteTransaction,
   where: { readonly siteId: string; readonly bookingId: string; readonly now: Date },
@@ -37,6 +41,7 @@ export async function readBookingSetup(
   const protocol = await findProtocol(trx, siteId, booking.protocolId);
   // Foreign keys hold both; without them nothing could be shown.
   if (!scanner || !protocol) throw new ServiceError('not-found');
+  const request = await findKeepClearRequest(trx, siteId, bookingId);
   const policy = effectivePolicy(await findPolicy(trx, siteId));
   const readings = await listSizeReadings(trx, siteId, bookingId);
   const plan = await findPlanOfBooking(trx, siteId, bookingId);
@@ -47,7 +52,10 @@ export async function readBookingSetup(
     policy: policy.policy,
     now,
   });
-  return { booking, scanner, protocol, policy, sizeRecord, plan };
+  return {
+    booking, scanner, protocol, sizeRecord, plan, request,
+    policy: { ...policy, policy: policyForExam(policy.policy, request?.document.toleratedFoldOutsidePct) },
+  };
 }
 
 /** The scanner and policy a plan version was worked out with; read again only where they are not today's. */
@@ -64,5 +72,5 @@ export async function readPlannedSetup(
     known?.policy.version === policyVersion
       ? known.policy
       : effectivePolicy(policyVersion === 0 ? null : await findPolicy(trx, plan.siteId, policyVersion));
-  return { scanner: scanner.document.scanner, policy: policy.policy };
+  return { scanner: scanner.document.scanner, policy: policyForExam(policy.policy, plan.toleratedFoldOutsidePct) };
 }

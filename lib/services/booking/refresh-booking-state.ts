@@ -6,13 +6,13 @@ import { assessAsBooked, stateOfAssessments } from '@/lib/domain/booking/assess-
 import { readBookingSetup, type BookingSetup } from './read-booking-setup';
 
 /** A plan says what will be scanned; without one it is the protocol as booked, once the sizes are known. */
-function stateOf({ plan, protocol, scanner, policy, sizeRecord }: BookingSetup): BookingState {
+function stateOf({ plan, protocol, scanner, policy, sizeRecord, request }: BookingSetup): BookingState {
   if (!plan && !sizeRecord.patient) return {};
   const assessments = plan
     ? plan.result.assessments
     : assessAsBooked({
         patient: sizeRecord.patient!,
-        protocol: protocol.document,
+        protocol: request?.document ?? protocol.document,
         sequences: protocol.sequences,
         scanner: scanner.document.scanner,
         policy: policy.policy,

@@ -4,7 +4,7 @@ import { recordFailure, recordSent, takeQueuedMail } from '@/db/queries/outbox';
 import type { JobPayload } from '@/lib/jobs';
 import type { MailTransport } from '@/lib/mail';
 import { retryDelaySeconds, writeMail } from '@/lib/mail';
-import { passwordLink } from '../session/password-link';
+import { mailLink } from './mail-link';
 
 export type Delivery = 'sent' | 'put back' | 'given up' | 'nothing to do';
 
@@ -26,7 +26,7 @@ export async function deliverMail(
       if (!mail) return 'nothing to do';
       try {
         if (!mail.address) throw new Error('The account this mail was for is disabled.');
-        const text = writeMail(mail.kind, mail.payload, mail.siteName, passwordLink(mail.id));
+        const text = writeMail(mail.kind, mail.payload, mail.siteName, mailLink(mail));
         await transport.send({ to: mail.address, messageId: mail.messageId, ...text });
       } catch (cause) {
         const seconds = retryDelaySeconds(mail.attempts + 1);

@@ -5,7 +5,8 @@ import { authorise, type Action } from '@/lib/domain/access';
 import { ServiceError, staleVersion } from '@/lib/domain/errors';
 import type { PlanRecord } from '@/lib/domain/plan/plan';
 import type { PlanState } from '@/lib/domain/plan/states';
-import { refusalToMove } from '@/lib/domain/plan/transitions';
+import { policyForExam } from '@/lib/domain/keep-clear-request/document';
+import { needsSignOff, refusalToMove } from '@/lib/domain/plan/transitions';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { movePlanInput, type PlanView } from '@/lib/schemas/plan';
 import { recordAudit } from '../audit/record-audit';
@@ -13,6 +14,7 @@ import { refreshBookingState } from '../booking/refresh-booking-state';
 import { readPlannedSetup } from '../booking/read-booking-setup';
 import { nowOf, type ServiceContext } from '../context';
 import { effectivePolicy } from '../site-policy/effective-policy';
+import { tellAboutPlan } from './tell-about-plan';
 import { toPlanView } from './to-plan-view';
 
 const ACTIONS: Readonly<Record<'draft' | 'for use' | 'used', Action>> = {
@@ -35,16 +37,21 @@ export async function lockExpectedPlan(
   return plan;
 }
 
-/** Moves a locked plan, or says why not. Whether a sign-off is needed is judged by today's policy. */
-export async function moveLockedPlan(trx: SiteTransaction, context: ServiceContext, plan: PlanRecord, to: PlanState): Promise<void> {
+/**
+ * Moves a locked plan, or says why not. Whether a sign-off is needed is judged by today's policy.
+ * @returns whether it is
+ */
+export async function moveLockedPlan(trx: SiteTransaction, context: ServiceContext, plan: PlanRecord, to: PlanState): Promise<boolean> {
   const { siteId } = context.actor;
-  const { policy } = effectivePolicy(await findPolicy(trx, siteId));
+  const today = effectivePolicy(await findPolicy(trx, siteId));
+  const policy = policyForExam(today.policy, plan.toleratedFoldOutsidePct);
   const refusal = refusalToMove({ state: plan.state, assessments: plan.result.assessments, policy }, to);
   if (refusal) throw new ServiceError('conflict', { message: refusal, details: { state: plan.state } });
   await setPlanState(trx, siteId, plan.id, to);
   if (plan.bookingId !== null) {
     await refreshBookingState(trx, { siteId, bookingId: plan.bookingId, now: nowOf(context) });
   }
+  return needsSignOff(plan.result.assessments, policy);
 }
 
 export async function viewMovedPlan(trx: SiteTransaction, siteId: string, id: string): Promise<PlanView> {
@@ -59,8 +66,12 @@ export async function movePlan(context: ServiceContext, input: unknown): Promise
   const action = ACTIONS[to];
   return inTransaction(context.actor.siteId, async (trx) => {
     const plan = await lockExpectedPlan(trx, context, { id, expectedVersion, action });
-    await moveLockedPlan(trx, context, plan, to);
+    const asksSignOff = await moveLockedPlan(trx, context, plan, to);
     await recordAudit(trx, context, { action, subjectType: 'plan', subjectId: id, fields: ['state'] });
+    if (to === 'for use') {
+      if (asksSignOff) await recordAudit(trx, context, { action: 'plan.ask-sign-off', subjectType: 'plan', subjectId: id });
+      await tellAboutPlan(trx, context.actor, plan, asksSignOff ? 'sign-off-asked' : 'plan-for-use');
+    }
     return viewMovedPlan(trx, context.actor.siteId, id);
   });
 }

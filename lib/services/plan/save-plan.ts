@@ -1,13 +1,15 @@
 import { randomBytes } from 'node:crypto';
 import { inTransaction, type SiteTransaction } from '@/db/client';
-import { findBooking } from '@/db/queries/booking/bookings';
-import { findPlan, insertPlan, insertPlanVersion, lockPlan, versionOfKey } from '@/db/queries/plan/plans';
+import { findBooking, lockBooking } from '@/db/queries/booking/bookings';
+import { findKeepClearRequest } from '@/db/queries/keep-clear-request/keep-clear-requests';
+import { findPlan, findPlanOfBooking, insertPlan, insertPlanVersion, lockPlan, versionOfKey } from '@/db/queries/plan/plans';
 import { findProtocol } from '@/db/queries/protocol/protocols';
 import { findScanner } from '@/db/queries/scanner/scanners';
 import { findPolicy } from '@/db/queries/site-policy/policies';
 import { authorise } from '@/lib/domain/access';
 import { DomainError } from '@/lib/domain/case/model';
 import { invalidField, ServiceError, staleVersion } from '@/lib/domain/errors';
+import { policyForExam } from '@/lib/domain/keep-clear-request/document';
 import type { PlanHead } from '@/lib/domain/plan/plan';
 import { SHORT_CODE_LENGTH, shortCodeFrom } from '@/lib/domain/plan/short-code';
 import { stateAfterSave } from '@/lib/domain/plan/transitions';
@@ -26,6 +28,24 @@ import { toPlanView } from './to-plan-view';
 /** 29^8 codes a site: a second draw is needed once in a lifetime, a third never. */
 const CODE_DRAWS = 3;
 
+/**
+ * One booking has one plan at a time: of two people who begin at once, the second meets the first one's plan and is
+ * shown it, instead of putting a plan of their own in front of it unseen. After a used plan a new one may follow.
+ */
+async function refuseSecondPlan(
+  trx: SiteTransaction,
+  siteId: string,
+  { id, bookingId }: { readonly id: string; readonly bookingId: string },
+): Promise<void> {
+  await lockBooking(trx, siteId, bookingId);
+  const first = await findPlanOfBooking(trx, siteId, bookingId);
+  if (!first || first.id === id || first.state === 'used') return;
+  throw new ServiceError('conflict', {
+    message: 'Someone else has made a plan for this booking in the meantime. Nothing was overwritten.',
+    details: { currentVersion: first.currentVersion, planId: first.id },
+  });
+}
+
 /** The plan's row, locked; made first when the bench has just drawn its id. */
 async function openPlan(trx: SiteTransaction, context: ServiceContext, id: string, plan: PlanInput): Promise<PlanHead> {
   const { actor } = context;
@@ -39,6 +59,7 @@ async function openPlan(trx: SiteTransaction, context: ServiceContext, id: strin
   if (plan.bookingId !== null) {
     const booking = await findBooking(trx, siteId, plan.bookingId);
     if (!booking) throw invalidField('plan.bookingId', 'not a booking of this site; allowed: the id of a booking, or null');
+    await refuseSecondPlan(trx, siteId, { id, bookingId: plan.bookingId });
   }
   for (let draw = 0; draw < CODE_DRAWS; draw += 1) {
     const shortCode = shortCodeFrom(randomBytes(SHORT_CODE_LENGTH));
@@ -58,12 +79,13 @@ async function assessToday(trx: SiteTransaction, siteId: string, plan: PlanInput
     throw invalidField('plan.protocolId', 'not a protocol of this site in that version; allowed: one it has, or null');
   }
   const policy = effectivePolicy(await findPolicy(trx, siteId));
+  const request = plan.bookingId === null ? null : await findKeepClearRequest(trx, siteId, plan.bookingId);
   try {
     return assessPlan(plan, {
       scannerVersion: scanner.version,
       scanner: scanner.document.scanner,
       policyVersion: policy.version,
-      policy: policy.policy,
+      policy: policyForExam(policy.policy, request?.document.toleratedFoldOutsidePct),
     });
   } catch (error) {
     if (error instanceof DomainError) throw invalidField(`plan.${error.argument}`, error.message);

@@ -7,6 +7,7 @@ import { recordAudit } from '../audit/record-audit';
 import { authorOf } from '../author';
 import { nowOf, type ServiceContext } from '../context';
 import { lockExpectedPlan, moveLockedPlan, viewMovedPlan } from './move-plan';
+import { tellAboutPlan } from './tell-about-plan';
 
 /** A radiologist's decision on exactly the version that was read: signed off, or sent back to draft with a reason. */
 export async function signOffPlan(context: ServiceContext, input: unknown): Promise<PlanView> {
@@ -22,6 +23,7 @@ export async function signOffPlan(context: ServiceContext, input: unknown): Prom
       siteId, planId: id, planVersion: plan.version, decision, reason, signedBy: authorOf(context.actor), now: nowOf(context),
     });
     await recordAudit(trx, context, { action, subjectType: 'sign-off', subjectId: id, fields: ['decision'] });
+    await tellAboutPlan(trx, context.actor, plan, signedOff ? 'plan-for-use' : 'plan-sent-back');
     return viewMovedPlan(trx, siteId, id);
   });
 }

@@ -45,7 +45,7 @@ describe('GET /api/v1/openapi.json', () => {
 
   it('every operation with a body has an example that can be run, but those that need a plan first', () => {
     const bare = OPERATIONS.filter(({ request, examples }) => request && !examples).map(({ id }) => id);
-    expect(bare).toEqual(['movePlan', 'signOffPlan']);
+    expect(bare).toEqual(['movePlan', 'signOffPlan', 'recordOutcome', 'requestSheet']);
   });
 });
 
@@ -71,6 +71,7 @@ describe('the examples run on the demo site', () => {
     );
     const got = await response.json();
     expect({ status: response.status, problem: response.ok ? undefined : got }).toEqual({ status, problem: undefined });
+    if (answer === 'application/pdf') throw new Error('A file is not read as JSON.');
     expect(ANSWERS[answer].safeParse(got).error?.issues).toBeUndefined();
     return response;
   }

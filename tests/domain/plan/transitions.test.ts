@@ -3,11 +3,12 @@ import { describe, expect, it } from 'vitest';
 import type { Assessment, Verdict } from '@/lib/domain/case/model';
 import { readShortCode, SHORT_CODE_ALPHABET, shortCodeFrom } from '@/lib/domain/plan/short-code';
 import { PLAN_STATES, type PlanState } from '@/lib/domain/plan/states';
-import { needsSignOff, refusalToMove, stateAfterSave } from '@/lib/domain/plan/transitions';
+import { needsSignOff, refusalToMove, signOffCause, stateAfterSave } from '@/lib/domain/plan/transitions';
 
 const withVerdict = (...verdicts: Verdict[]): Assessment[] =>
   verdicts.map((verdict) => ({ verdict, reasons: [{ code: 'x', text: 'why' }] }) as unknown as Assessment);
-const relaxed = { signOffAlways: false };
+const relaxed = { signOffAlways: false, tolerateFoldOutsidePct: 100 };
+const strict = { ...relaxed, signOffAlways: true };
 const clean = withVerdict('no-fold-expected', 'fold-outside-keep-clear');
 const may = (state: PlanState, to: PlanState, assessments = clean, policy = relaxed) =>
   refusalToMove({ state, assessments, policy }, to) === undefined;
@@ -26,10 +27,19 @@ describe('plan states', () => {
     const left = withVerdict('no-fold-expected', 'fold-in-keep-clear');
     expect(needsSignOff(clean, relaxed)).toBe(false);
     expect(needsSignOff(left, relaxed)).toBe(true);
-    expect(needsSignOff(clean, { signOffAlways: true })).toBe(true);
+    expect(needsSignOff(clean, strict)).toBe(true);
     expect(may('for use', 'used', left)).toBe(false);
-    expect(may('for use', 'used', clean, { signOffAlways: true })).toBe(false);
+    expect(may('for use', 'used', clean, strict)).toBe(false);
     expect(may('signed off', 'used', left)).toBe(true);
+  });
+
+  it('a radiologist decides when more fold is left beside the area than is tolerated, and not at the limit itself', () => {
+    const outside = (displayedShare: number) =>
+      [{ verdict: 'fold-outside-keep-clear', reasons: [], fold: { displayedShare } }] as unknown as Assessment[];
+    const policy = { ...relaxed, tolerateFoldOutsidePct: 25 };
+    expect(signOffCause(outside(0.25), policy)).toBeUndefined();
+    expect(signOffCause(outside(0.26), policy)).toBe('fold-outside-beyond-tolerated');
+    expect(signOffCause(outside(0.26), relaxed)).toBeUndefined();
   });
 
   it.each(['cannot-be-scanned', 'not-modelled'] as const)('a plan with a sequence that is %s is not put for use', (verdict) => {

@@ -1,6 +1,7 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { rankRemedies } from '@/lib/physics';
 import type { BenchView } from '@/lib/schemas/booking';
+import type { PlanView } from '@/lib/schemas/plan';
 import { getBooking } from '@/lib/services/booking/get-booking';
 import { openBench } from '@/lib/services/booking/open-bench';
 import { getPlan, getPlanByShortCode } from '@/lib/services/plan/get-plan';
@@ -66,6 +67,30 @@ describe('saving a plan', () => {
     const lost = outcomes.find((outcome) => outcome.status === 'rejected')!;
     expect((lost as PromiseRejectedResult).reason).toMatchObject({ code: 'conflict', details: { currentVersion: 2 } });
     expect(await versions(first.id)).toHaveLength(2);
+  });
+
+  it('two people who both begin a plan for one booking: the second meets the first one’s plan, and nothing is hidden', async () => {
+    const outcomes = await Promise.allSettled([savePlan(as(here.radiographer), planBody(bench)), savePlan(as(here.lead), planBody(bench))]);
+    const saved = outcomes.find((outcome) => outcome.status === 'fulfilled')!;
+    const lost = outcomes.find((outcome) => outcome.status === 'rejected')!;
+    const first = (saved as PromiseFulfilledResult<PlanView>).value;
+    expect((lost as PromiseRejectedResult).reason).toMatchObject({ code: 'conflict', details: { currentVersion: 1, planId: first.id } });
+    const plans = await here.site.withApp((trx) => trx.selectFrom('plan').select('id').execute());
+    expect(plans).toEqual([{ id: first.id }]);
+    // Saved on top of it, theirs becomes its second version.
+    const second = await savePlan(as(here.lead), planBody(bench, { id: first.id, expectedVersion: 1, plan: { note: 'theirs' } }));
+    expect(second).toMatchObject({ id: first.id, version: 2 });
+  });
+
+  it('after a used plan a booking may have a new one', async () => {
+    const { id } = await savePlan(as(here.radiographer), planBody(bench));
+    await movePlan(as(here.radiographer), { id, expectedVersion: 1, to: 'for use' });
+    await signOffPlan(as(here.radiologist), { id, expectedVersion: 1, decision: 'signed off' });
+    await movePlan(as(here.radiographer), { id, expectedVersion: 1, to: 'used' });
+    const later = { actor: here.radiographer, now: new Date('2026-05-04T10:00:00Z') };
+    const next = await savePlan(later, planBody(bench));
+    expect(next).toMatchObject({ version: 1, state: 'draft' });
+    expect((await openBench(as(here.radiographer), { bookingId: here.booking.id })).plan?.id).toBe(next.id);
   });
 
   it('equal questions have one hash, others another', async () => {
@@ -170,7 +195,10 @@ describe('the life of a plan', () => {
     const { id } = await savePlan(as(here.radiographer), planBody(bench, { plan: { note: 'secret words' } }));
     await movePlan(as(here.radiographer), { id, expectedVersion: 1, to: 'for use' });
     const events = await here.site.withApp((trx) => trx.selectFrom('audit_event').selectAll().where('subject_id', '=', id).orderBy('at').execute());
-    expect(events.map(({ action, fields }) => [action, fields])).toEqual([['plan.create', ['version']], ['plan.release', ['state']]]);
+    // One transaction, one moment: by name, then.
+    expect(events.map(({ action, fields }) => [action, fields]).sort()).toEqual([
+      ['plan.ask-sign-off', []], ['plan.create', ['version']], ['plan.release', ['state']],
+    ]);
     expect(JSON.stringify(events)).not.toContain('secret');
   });
 });
