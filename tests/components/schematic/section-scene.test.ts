@@ -1,0 +1,127 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { boundsOf, centroidOf, hatch } from '@/components/schematic/scene/rings';
+import { fitScene, fromPixels, toPixels, type AreaNode, type LinesNode, type Ring, type TextNode } from '@/components/schematic/scene/scene';
+import { screenFrame, toPatient, toScreen } from '@/components/schematic/scene/section-frame';
+import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
+import { geometryCase } from '@/lib/physics/assess/assess';
+import type { Case } from '@/lib/physics/model/case';
+import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
+import type { Prescription } from '@/lib/physics/model/prescription';
+import { drawSection } from '@/lib/physics/section/draw-section';
+import { benchDocument } from '@/tests/support/bench-documents';
+import { accelerated, typicalPrescription } from '@/tests/support/physics-cases';
+
+/** Body 480 × 340 mm, FOV 300 A–P, keep-clear from 140 mm anterior: W is 300, so the back lands 300 mm further forward. */
+function draw(overrides: Partial<Prescription> = {}): DrawnSection {
+  const { patient, keepClear, scanner } = benchDocument();
+  const question: Case = { patient, keepClear, scanner, policy: DEFAULT_POLICY, prescription: typicalPrescription(overrides) };
+  return { question, drawing: drawSection(geometryCase(question)), asGiven: drawSection(question).tissue };
+}
+
+const MM_PER_PX = 0.8;
+function sceneOf(drawn: DrawnSection, extra: { tried?: DrawnSection; focus?: string } = {}) {
+  return sectionScene({ ...drawn, ...extra, bounds: sectionBounds(drawn, extra.tried), mmPerPx: MM_PER_PX });
+}
+const named = (scene: ReturnType<typeof sceneOf>, name: RegExp | string) =>
+  scene.nodes.filter((node) => (typeof name === 'string' ? node.name === name : name.test(node.name)));
+
+describe('the section as a scene', () => {
+  const scene = sceneOf(draw());
+
+  it('shows the patient’s left on the right of an axial picture, anterior on top', () => {
+    const letter = (side: string) => named(scene, `letter/${side}`)[0] as TextNode;
+    expect(['left', 'right', 'top', 'bottom'].map((side) => letter(side).text)).toEqual(['R', 'L', 'A', 'P']);
+    expect(letter('right').at[0]).toBeGreaterThan(letter('left').at[0]);
+    expect(letter('top').at[1]).toBeLessThan(letter('bottom').at[1]);
+  });
+
+  it('draws every outlying piece where it is and where it lands: the same outline moved by the acquired width', () => {
+    const landed = named(scene, /^piece\/.*\/landed$/) as AreaNode[];
+    expect(landed.length).toBeGreaterThanOrEqual(2);
+    for (const piece of landed) {
+      const source = named(scene, piece.name.replace('/landed', '/source'))[0] as AreaNode;
+      const from = boundsOf(source.rings)!;
+      const to = boundsOf(piece.rings)!;
+      expect(Math.hypot(...piece.slideFrom!)).toBeCloseTo(300, 6);
+      // The landed outline is cropped to the window, so it lies inside the moved source.
+      expect(to.top + piece.slideFrom![1]).toBeGreaterThanOrEqual(from.top - 1e-6);
+      expect(to.bottom + piece.slideFrom![1]).toBeLessThanOrEqual(from.bottom + 1e-6);
+    }
+  });
+
+  it('keeps red for what reaches the keep-clear area, and ties it to its source with a straight thread along phase', () => {
+    const red = scene.nodes.filter((node) => 'stroke' in node && node.stroke?.colour === 'thread').map(({ name }) => name);
+    expect(red.length).toBeGreaterThan(0);
+    expect(red.every((name) => /\/in-keep-clear(\/hatch)?$/.test(name) || name === 'thread')).toBe(true);
+    const [[origin, target]] = (named(scene, 'thread')[0] as LinesNode).lines as [[readonly [number, number], readonly [number, number]]];
+    expect(origin[0]).toBeCloseTo(target[0], 9);
+    expect(Math.abs(origin[1] - target[1])).toBeCloseTo(300, 6);
+    expect((named(scene, 'thread/label')[0] as TextNode).text).toBe('from the posterior side, 300 mm away');
+  });
+
+  it('leaves no red once enough is acquired', () => {
+    const enough = sceneOf(draw({ acquiredLines: 256 }));
+    expect(enough.nodes.some((node) => 'stroke' in node && node.stroke?.colour === 'thread')).toBe(false);
+  });
+
+  it('shows now and tried: both acquired edges, labelled, and what lands then', () => {
+    const trial = sceneOf(draw(), { tried: draw({ acquiredLines: 256 }) });
+    expect((named(trial, 'tried-edge/label')[0] as TextNode).text).toBe('tried 320 mm');
+    expect((named(trial, 'acquired-edge/label')[0] as TextNode).text).toBe('now 300 mm');
+    expect(named(trial, 'tried-fov')).toHaveLength(0);
+    expect(named(sceneOf(draw(), { tried: draw({ fovPhaseMm: 320 }) }), 'tried-fov')).toHaveLength(1);
+  });
+
+  it('draws ghosts of an accelerated scan whose unfolding ends at the acquired width', () => {
+    const ghosts = sceneOf(draw({ acceleration: accelerated(2, { unfolding: 'image-domain-grid-ends' }) }));
+    expect(named(ghosts, /^ghost\/.*\/in-keep-clear$/).length).toBeGreaterThan(0);
+    expect((named(ghosts, 'thread/label')[0] as TextNode).text).toMatch(/^ghost of tissue from the \w+ side/);
+  });
+
+  it('gives every node a name of its own', () => {
+    const names = scene.nodes.map(({ name }) => name);
+    expect(new Set(names).size).toBe(names.length);
+  });
+});
+
+describe('geometry of the picture', () => {
+  it('goes from the patient to the screen and back, tilted or not', () => {
+    const tilt = fc.integer({ min: -30, max: 30 });
+    const length = fc.integer({ min: -300, max: 300 });
+    fc.assert(
+      fc.property(fc.constantFrom('axial', 'coronal', 'sagittal'), tilt, tilt, length, length, (plane, a, b, u, v) => {
+        const phaseAxis = plane === 'axial' ? 'AP' : 'SI';
+        const frame = screenFrame(typicalPrescription({ plane, phaseAxis, tiltAboutReadoutDeg: a, tiltAboutPhaseDeg: b }));
+        const back = toScreen(frame, toPatient(frame, [u, v], 17));
+        // Three multiplications and sums of numbers below 1000: 1e-9 is a million times their rounding.
+        expect(back[0]).toBeCloseTo(u, 9);
+        expect(back[1]).toBeCloseTo(v, 9);
+      }),
+      { seed: 20260304, numRuns: 300 },
+    );
+  });
+
+  it('fits a scene into a box and finds millimetres again from pixels', () => {
+    const fit = fitScene({ left: -300, right: 300, top: -200, bottom: 200 }, 900, 400);
+    expect(fit.scale).toBe(1);
+    expect(toPixels(fit, [0, 0])).toEqual([450, 200]);
+    expect(fromPixels(fit, toPixels(fit, [12, -34]))).toEqual([12, -34]);
+  });
+
+  it('hatches only inside the outline, holes left out, with strokes of the asked spacing', () => {
+    const outer: Ring = [[0, 0], [100, 0], [100, 100], [0, 100]];
+    const hole: Ring = [[40, 40], [60, 40], [60, 60], [40, 60]];
+    const strokes = hatch([outer, hole], 0, 10);
+    expect(strokes).toHaveLength(12); // 10 levels; two of them, 40 and 50, are parted by the hole.
+    const length = strokes.reduce((sum, [a, b]) => sum + Math.hypot(b[0] - a[0], b[1] - a[1]), 0);
+    expect(length).toBeCloseTo(10 * 100 - 2 * 20, 9);
+    const slanted = hatch([outer], 45, 5);
+    expect(slanted.flat().every(([u, v]) => u > -1e-9 && u < 100 + 1e-9 && v > -1e-9 && v < 100 + 1e-9)).toBe(true);
+  });
+
+  it('takes the centroid of the largest ring', () => {
+    expect(centroidOf([[[0, 0], [2, 0], [2, 2], [0, 2]], [[10, 10], [11, 10], [11, 11], [10, 11]]])).toEqual([1, 1]);
+    expect(centroidOf([])).toBeNull();
+  });
+});
