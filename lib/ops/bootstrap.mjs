@@ -15,6 +15,7 @@ const NEEDS = {
   test: ['postgresql', 'chromium'],
   'test-long': ['postgresql'],
   measure: ['postgresql', 'chromium'],
+  mutate: [],
   check: [],
   'db-migrate': ['postgresql'],
   'db-seed': ['postgresql'],

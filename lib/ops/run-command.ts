@@ -10,6 +10,7 @@ const COMMANDS: Record<string, () => Promise<Command>> = {
   test: async () => (await import('./run-tests')).runTests,
   'test-long': async () => (await import('./run-long-tests')).runLongTests,
   measure: async () => (await import('./run-measures')).runMeasures,
+  mutate: async () => (await import('@/tests/mutation/mutate')).mutate,
   check: async () => (await import('./check')).check,
   'db-migrate': async () => (await import('./database-commands')).migrate,
   'db-seed': async () => (await import('./database-commands')).seed,

@@ -4,19 +4,11 @@ import { rm } from 'node:fs/promises';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
 import { seededNumbers } from '@/tests/support/seeded-numbers';
-import { bundleTests, instrumentPhysics, ROOT, type Bundle } from './bundle-tests';
-import { EQUIVALENT } from './equivalent';
+import { bundleTests, instrumentPhysics, ROOT, sourceText, type Bundle } from './bundle-tests';
 import type { Mutant } from './find-mutants';
-import type { Answer, SurveyedTest } from './play-mutants';
+import type { Answer } from './play-mutants';
 import { COUNTS, Player } from './player';
-
-type Outcome = 'killed' | 'survived' | 'not reached' | 'equivalent';
-
-interface Result extends Mutant {
-  readonly outcome: Outcome;
-  /** The test that failed, or how the run ended; for an equivalent mutant the reason. */
-  readonly by?: string;
-}
+import { equivalentReason, isLeft, keyOf, printReport, type Result } from './report';
 
 type Surveyed = Extract<Answer, { kind: 'surveyed' }>;
 
@@ -27,49 +19,65 @@ interface PlayableTest {
   readonly loadMs: number;
 }
 
-const { values: options } = parseArgs({
-  options: {
-    sample: { type: 'string' },
-    seed: { type: 'string', default: '1' },
-    file: { type: 'string', multiple: true },
-    budget: { type: 'string', default: '10' },
-    survivors: { type: 'boolean', default: false },
-    out: { type: 'string', default: '.data/mutation.json' },
-  },
-});
+interface Options {
+  readonly sample?: number;
+  readonly seed: number;
+  readonly files: readonly string[];
+  readonly budgetMs: number;
+  readonly resume: boolean;
+  readonly out: string;
+}
 
-const OUT = path.resolve(ROOT, options.out);
-const keyOf = ({ file, code, mutated }: Pick<Mutant, 'file' | 'code' | 'mutated'>): string =>
-  JSON.stringify([file, code, mutated]);
-const equivalentReason = new Map(EQUIVALENT.map((entry) => [keyOf(entry), entry.reason]));
+function readOptions(args: readonly string[]): Options {
+  const { values } = parseArgs({
+    args: [...args],
+    options: {
+      sample: { type: 'string' },
+      seed: { type: 'string', default: '1' },
+      file: { type: 'string', multiple: true, default: [] },
+      budget: { type: 'string', default: '10' },
+      resume: { type: 'boolean', default: false },
+      out: { type: 'string', default: '.data/mutation.json' },
+    },
+  });
+  return {
+    ...(values.sample === undefined ? {} : { sample: Number(values.sample) }),
+    seed: Number(values.seed),
+    files: values.file,
+    budgetMs: Number(values.budget) * 1000,
+    resume: values.resume,
+    out: path.resolve(ROOT, values.out),
+  };
+}
 
-/** The mutants asked for: of some files, of the last run's survivors, a seeded sample, or all. */
-function choose(mutants: readonly Mutant[]): Mutant[] {
-  let chosen = [...mutants];
-  if (options.file) chosen = chosen.filter(({ file }) => options.file!.some((part) => file.includes(part)));
-  if (options.survivors) {
-    const last = JSON.parse(readFileSync(OUT, 'utf8')) as { results: Result[] };
-    const survived = new Set(
-      last.results.filter(({ outcome }) => outcome === 'survived' || outcome === 'not reached').map(keyOf),
-    );
-    chosen = chosen.filter((mutant) => survived.has(keyOf(mutant)));
-  }
-  if (options.sample !== undefined) {
-    const next = seededNumbers(Number(options.seed));
-    const drawn = chosen.map((mutant) => ({ mutant, at: next() })).sort((a, b) => a.at - b.at);
-    chosen = drawn.slice(0, Number(options.sample)).map(({ mutant }) => mutant);
-  }
-  return chosen.sort((a, b) => a.id - b.id);
+const hashOf = (text: string): string => createHash('sha256').update(text).digest('hex').slice(0, 24);
+
+/** The mutants asked for: of some files, a seeded sample of them, or all. */
+function choose(mutants: readonly Mutant[], { files, sample, seed }: Options): Mutant[] {
+  const chosen = mutants.filter(
+    ({ file }) => files.length === 0 || files.some((part) => file.includes(part)),
+  );
+  if (sample === undefined) return chosen;
+  const next = seededNumbers(seed);
+  const drawn = chosen.map((mutant) => ({ mutant, at: next() })).sort((a, b) => a.at - b.at);
+  return drawn
+    .slice(0, sample)
+    .map(({ mutant }) => mutant)
+    .sort((a, b) => a.id - b.id);
 }
 
 /** What is known of a bundle's tests; asked again only when the bundle is another one. */
-async function survey(player: Player, bundle: string, mutants: number): Promise<Surveyed | undefined> {
-  const hash = createHash('sha256')
-    .update(readFileSync(bundle))
-    .update(JSON.stringify(COUNTS))
-    .digest('hex')
-    .slice(0, 24);
-  const kept = path.join(path.dirname(OUT), 'mutation-survey', `${hash}.json`);
+async function survey(
+  player: Player,
+  bundle: string,
+  mutants: number,
+  out: string,
+): Promise<Surveyed | undefined> {
+  const kept = path.join(
+    path.dirname(out),
+    'mutation-survey',
+    `${hashOf(readFileSync(bundle, 'utf8') + JSON.stringify(COUNTS))}.json`,
+  );
   if (existsSync(kept)) return JSON.parse(readFileSync(kept, 'utf8')) as Surveyed;
   const answer = await player.ask({ kind: 'survey', bundle, mutants }, 900_000);
   if (answer === 'hung' || answer === 'died' || answer.kind !== 'surveyed') return undefined;
@@ -83,15 +91,16 @@ async function surveyTests(
   player: Player,
   bundles: readonly Bundle[],
   mutants: number,
+  out: string,
 ): Promise<PlayableTest[][]> {
   const reaching: PlayableTest[][] = Array.from({ length: mutants }, () => []);
   for (const { testFile, bundle } of bundles) {
-    const answer = await survey(player, bundle, mutants);
+    const answer = await survey(player, bundle, mutants, out);
     if (answer === undefined) {
       console.log(`left out: ${testFile}: it hangs, or ends the process`);
       continue;
     }
-    answer.tests.forEach((test: SurveyedTest, index) => {
+    answer.tests.forEach((test, index) => {
       if (test.error !== undefined) return console.log(`left out: ${testFile}: ${test.name}: ${test.error}`);
       for (const id of test.hits)
         reaching[id]!.push({ bundle, test: index, ms: test.ms, loadMs: answer.loadMs });
@@ -117,97 +126,73 @@ function planOf(tests: readonly PlayableTest[], budgetMs: number) {
   return plan;
 }
 
-async function playAll(
-  player: Player,
-  chosen: readonly Mutant[],
-  reaching: readonly PlayableTest[][],
-): Promise<Result[]> {
-  const results: Result[] = [];
-  const budgetMs = Number(options.budget) * 1000;
-  const begun = Date.now();
-  for (const mutant of chosen) {
-    results.push(await playOne(player, mutant, reaching[mutant.id]!, budgetMs));
-    if (results.length % 100 === 0) {
-      const left = results.filter(
-        ({ outcome }) => outcome === 'survived' || outcome === 'not reached',
-      ).length;
-      console.log(
-        `${results.length} of ${chosen.length}, ${left} survive, ${Math.round((Date.now() - begun) / 1000)} s`,
-      );
-    }
-  }
-  return results;
-}
-
 async function playOne(
   player: Player,
   mutant: Mutant,
   tests: readonly PlayableTest[],
   budgetMs: number,
 ): Promise<Result> {
-  const reason = equivalentReason.get(keyOf(mutant));
-  if (tests.length === 0) return { ...mutant, outcome: 'not reached' };
+  const from = hashOf(sourceText(mutant.file));
+  if (tests.length === 0) return { ...mutant, from, outcome: 'not reached' };
   const answer = await player.ask({ kind: 'play', id: mutant.id, tests: planOf(tests, budgetMs) }, 60_000);
-  if (answer === 'hung' || answer === 'died') return { ...mutant, outcome: 'killed', by: answer };
+  if (answer === 'hung' || answer === 'died') return { ...mutant, from, outcome: 'killed', by: answer };
   if (answer.kind === 'played' && answer.killedBy !== undefined)
-    return { ...mutant, outcome: 'killed', by: answer.killedBy };
+    return { ...mutant, from, outcome: 'killed', by: answer.killedBy };
+  const reason = equivalentReason(mutant);
   return reason === undefined
-    ? { ...mutant, outcome: 'survived' }
-    : { ...mutant, outcome: 'equivalent', by: reason };
+    ? { ...mutant, from, outcome: 'survived' }
+    : { ...mutant, from, outcome: 'equivalent', by: reason };
 }
 
-function report(results: readonly Result[], all: readonly Mutant[]): void {
-  const files = [...new Set(results.map(({ file }) => file))];
-  const row = (name: string, of: readonly Result[]) => {
-    const counted = of.filter(({ outcome }) => outcome !== 'equivalent');
-    const killed = counted.filter(({ outcome }) => outcome === 'killed').length;
-    const share = counted.length === 0 ? '' : `${((100 * killed) / counted.length).toFixed(1)} %`;
-    console.log(
-      `${name.padEnd(52)} ${String(killed).padStart(5)} of ${String(counted.length).padStart(5)} ${share.padStart(8)} ${String(of.length - counted.length).padStart(4)} equivalent`,
+/** The last run's killed mutants of files that are still the same. */
+function killedBefore({ resume, out }: Options): Map<string, Result> {
+  if (!resume || !existsSync(out)) return new Map();
+  const { results } = JSON.parse(readFileSync(out, 'utf8')) as { results: Result[] };
+  const same = results.filter(
+    ({ outcome, file, from }) => outcome === 'killed' && from === hashOf(sourceText(file)),
+  );
+  return new Map(same.map((result) => [`${keyOf(result)}${result.line}`, result]));
+}
+
+/**
+ * `npm run mutate`: changes one sign, limit, constant or connective of lib/physics after another and runs the tests that
+ * reach it; what no test notices is listed. --sample N --seed S draws some; --file PART takes some files; --resume plays
+ * only what the last run left; --budget S is the most a mutant may cost.
+ */
+export async function mutate(args: readonly string[]): Promise<void> {
+  const options = readOptions(args);
+  const began = Date.now();
+  const at = () => `${Math.round((Date.now() - began) / 1000)} s`;
+  const { mutants, codeOf } = instrumentPhysics();
+  const { folder, bundles } = await bundleTests(codeOf);
+  const player = new Player(ROOT);
+  const results: Result[] = [];
+  const keep = () => {
+    mkdirSync(path.dirname(options.out), { recursive: true });
+    writeFileSync(
+      options.out,
+      JSON.stringify({ at: new Date().toISOString(), sample: options.sample ?? 'all', results }, null, 1),
     );
   };
-  console.log('\nSurvivors:');
-  for (const { file, line, code, mutated, outcome } of results) {
-    if (outcome === 'survived' || outcome === 'not reached')
+  try {
+    console.log(`${mutants.length} mutants in ${codeOf.size} files, ${bundles.length} test files (${at()})`);
+    const reaching = await surveyTests(player, bundles, mutants.length, options.out);
+    console.log(`tests surveyed (${at()})`);
+    const before = killedBefore(options);
+    const chosen = choose(mutants, options);
+    for (const mutant of chosen) {
+      const known = before.get(`${keyOf(mutant)}${mutant.line}`);
+      results.push(known ?? (await playOne(player, mutant, reaching[mutant.id]!, options.budgetMs)));
+      if (results.length % 200 !== 0) continue;
       console.log(
-        `  ${file}:${line}  ${code}  →  ${mutated}${outcome === 'not reached' ? '  (not reached)' : ''}`,
+        `${results.length} of ${chosen.length}, ${results.filter(isLeft).length} survive (${at()})`,
       );
+      keep();
+    }
+    keep();
+    printReport(results, mutants);
+  } finally {
+    player.stop();
+    await rm(folder, { recursive: true, force: true });
   }
-  console.log();
-  for (const file of files)
-    row(
-      file,
-      results.filter((result) => result.file === file),
-    );
-  row('all', results);
-  const present = new Set(all.map(keyOf));
-  for (const entry of EQUIVALENT)
-    if (!present.has(keyOf(entry)))
-      console.log(`equivalent.ts names what is not there: ${entry.file}: ${entry.code} → ${entry.mutated}`);
-  const killed = results.filter(
-    (result) => result.outcome === 'killed' && equivalentReason.has(keyOf(result)),
-  );
-  for (const { file, line, code, mutated, by } of killed)
-    console.log(`called equivalent, yet killed: ${file}:${line} ${code} → ${mutated} by ${by}`);
-}
-
-const began = Date.now();
-const at = () => `${Math.round((Date.now() - began) / 1000)} s`;
-const { mutants, codeOf } = instrumentPhysics();
-const { folder, bundles } = await bundleTests(codeOf);
-const player = new Player(ROOT);
-try {
-  console.log(`${mutants.length} mutants in ${codeOf.size} files, ${bundles.length} test files (${at()})`);
-  const reaching = await surveyTests(player, bundles, mutants.length);
-  console.log(`tests surveyed (${at()})`);
-  const results = await playAll(player, choose(mutants), reaching);
-  report(results, mutants);
-  mkdirSync(path.dirname(OUT), { recursive: true });
-  writeFileSync(
-    OUT,
-    JSON.stringify({ at: new Date().toISOString(), sample: options.sample ?? 'all', results }, null, 1),
-  );
-} finally {
-  player.stop();
-  await rm(folder, { recursive: true, force: true });
 }
