@@ -36,7 +36,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
         <div className="min-h-0 border-line max-lg:border-t lg:order-1 lg:border-r lg:max-xl:row-span-2 xl:overflow-y-auto">
           <PatientPanel />
           <PrescriptionPanel source={props.protocolLabel} />
-          <KeepClearPanel preset={props.keepClearPreset} />
+          <KeepClearPanel preset={props.keepClearPreset} asked={props.keepClearAsked} />
         </div>
       </div>
       <Ledger>{props.mayEdit && <SaveCell plan={plan} />}</Ledger>

@@ -22,6 +22,8 @@ export interface BenchProps {
   /** Hiding the button is courtesy; the server decides. */
   readonly mayEdit: boolean;
   readonly keepClearPreset: KeepClear;
+  /** Who asked for the keep-clear area and what for, in a sentence; absent when nobody did. */
+  readonly keepClearAsked?: string;
   readonly protocolLabel: string;
   /** Whose bench it is: the booking, or the choice of scanner and protocol. */
   readonly children: ReactNode;

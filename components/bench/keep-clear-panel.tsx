@@ -15,7 +15,7 @@ const NAMES: Readonly<Record<Side, string>> = {
 };
 
 /** What must stay free of fold, fixed in the patient: the whole picture, or a box by its edges from the FOV origin. */
-export function KeepClearPanel({ preset }: { preset: KeepClear }) {
+export function KeepClearPanel({ preset, asked }: { preset: KeepClear; asked?: string }) {
   const { store } = useBench();
   const keepClear = useBenchState((state) => keepClearOf(state.document, sequenceById(state.document, state.activeId)));
   const frozen = useBenchState((state) => sequenceById(state.document, state.activeId).frozenKeepClear !== undefined);
@@ -67,6 +67,7 @@ export function KeepClearPanel({ preset }: { preset: KeepClear }) {
       ) : (
         <p className="mt-2 text-sm text-ink-soft">All that is displayed must stay free of fold.</p>
       )}
+      {asked && <p className="mt-1 text-sm text-ink-soft">{asked}</p>}
       {frozen && (
         <p className="mt-1 text-sm text-ink-soft">
           Stays what the picture was before its window changed, for this sequence alone.

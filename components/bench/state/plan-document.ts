@@ -35,12 +35,13 @@ export function documentOfPlan({ patient, keepClear, scanner, sequences }: Plann
 
 /** The newest plan of a booking, else its protocol laid over its size record; null while sizes are missing. */
 export function documentOfBooking(view: BenchView): BenchDocument | null {
-  const { plan, sizeRecord, protocol, scanner } = view;
+  const { plan, sizeRecord, protocol, scanner, requested } = view;
   if (plan) return documentOfPlan({ ...plan, scanner: scanner.scanner });
   if (!sizeRecord.patient) return null;
   return {
     patient: sizeRecord.patient,
-    keepClear: protocol.keepClear,
+    // What a radiologist asked for goes before what the protocol starts from.
+    keepClear: requested?.keepClear ?? protocol.keepClear,
     scanner: scanner.scanner,
     sequences: protocol.sequences.map(({ id, prescription }) => ({ id, prescription, adopted: [] })),
   };

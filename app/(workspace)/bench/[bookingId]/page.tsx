@@ -34,7 +34,8 @@ export default async function BookingBenchPage({ params }: { params: Promise<{ b
       plan={identityOf(view.plan)}
       userId={userId}
       mayEdit={mayEdit}
-      keepClearPreset={view.protocol.keepClear}
+      keepClearPreset={view.requested?.keepClear ?? view.protocol.keepClear}
+      keepClearAsked={view.requested && `Asked for by ${view.requested.by}. ${view.requested.note}`.trim()}
       protocolLabel={`${view.protocol.name} v${view.protocol.version}`}
     >
       {heading}
