@@ -49,13 +49,14 @@ const WORDED = new Set(['text', 'title', 'label', 'pages', 'note', 'sentence']);
 const ROUNDING_GUARD = 1e-6;
 
 /**
- * What a constant is turned into: 0 ↔ 1; a rounding guard a million times larger; any other 1 % larger, or the one before
- * where it indexes a list.
+ * What a constant is turned into: 0 ↔ 1; a rounding guard a million times larger; any other 1 % larger, a whole number by
+ * one at least, or the one before where it indexes a list.
  */
 function otherConstant(value: number, isIndex: boolean): number {
   if (value === 0) return 1;
   if (value === 1) return 0;
   if (isIndex) return value - 1;
+  if (Number.isInteger(value)) return value + Math.ceil(value / 100);
   return value <= ROUNDING_GUARD ? value * 1e6 : value * 1.01;
 }
 
