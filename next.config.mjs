@@ -18,7 +18,7 @@ const config = {
   reactStrictMode: true,
   // Types are checked by "npm test", once, over the whole project; a start must not wait for it.
   typescript: { ignoreBuildErrors: true },
-  serverExternalPackages: ['@node-rs/argon2', 'pg', 'pg-boss'],
+  serverExternalPackages: ['@node-rs/argon2', 'pg', 'pg-boss', '@react-pdf/renderer'],
   headers: async () => [{ source: '/:path*', headers }],
 };
 export default config;

@@ -3,7 +3,7 @@ import { cx } from '@/components/ui/class-names';
 import type { Verdict } from '@/lib/physics/model/assessment';
 import { VERDICT_WORDS } from '@/lib/presentation/verdict-words';
 
-const MARKS: Readonly<Record<Verdict, MarkKind>> = {
+export const VERDICT_MARKS: Readonly<Record<Verdict, MarkKind>> = {
   'no-fold-expected': 'flat',
   'fold-outside-keep-clear': 'outward',
   'fold-in-keep-clear': 'inward',
@@ -24,7 +24,7 @@ export const VERDICT_COLOUR: Readonly<Record<Verdict, string>> = {
 export function VerdictWords({ verdict, className }: { verdict: Verdict; className?: string }) {
   return (
     <span className={cx('flex items-start gap-1.5 font-medium', VERDICT_COLOUR[verdict], className)}>
-      <Mark kind={MARKS[verdict]} className="mt-px" />
+      <Mark kind={VERDICT_MARKS[verdict]} className="mt-px" />
       <span>{VERDICT_WORDS[verdict]}</span>
     </span>
   );

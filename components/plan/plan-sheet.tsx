@@ -1,17 +1,18 @@
 import type { ReactNode } from 'react';
 import { Logo } from '@/components/ui/logo';
 import { VerdictWords } from '@/components/bench/verdict-words';
-import { formatDate, formatMoment } from '@/lib/presentation/moment';
-import { REGION_WORDS } from '@/lib/presentation/anatomy-words';
 import type { PlanView } from '@/lib/schemas/plan';
 import { CAUTIONS } from './cautions';
 import './plan-sheet.css';
+import { ScanCode } from './scan-code';
 import { SheetPicture } from './sheet-picture';
 import { sheetSequence, type SheetSequence } from './sheet-facts';
 import { SheetSizes } from './sheet-sizes';
+import { restsOn, SHEET_TITLES, sheetHeading, signatureRows } from './sheet-words';
 
 /** One page for the scan room: reference large, values in the scanner's own form, what they rest on, who signs. */
 export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
+  const heading = sheetHeading(plan);
   const sequences = plan.sequences.map((sequence, i) => sheetSequence(sequence, plan.results[i]!, plan));
   return (
     <article className="plan-sheet mx-auto max-w-4xl border border-line bg-paper p-6">
@@ -19,16 +20,17 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
         <div>
           <p className="flex items-center gap-2 text-sm">
             <Logo className="size-5" />
-            <span className="font-semibold">Plan sheet</span> · {REGION_WORDS[plan.patient.region]} · {plan.scanner.name}
+            <span className="font-semibold">Plan sheet</span> · {heading.kind}
           </p>
-          <h1 className="sheet-reference figures mt-1 text-4xl font-bold">{plan.accession ?? 'No booking'}</h1>
+          <h1 className="sheet-reference figures mt-1 text-4xl font-bold">{heading.reference}</h1>
           <p className="sheet-small mt-1 text-sm">
-            Version {plan.version}, {plan.state}. Saved {formatMoment(new Date(plan.savedAt))} by {plan.savedBy}.
+            {heading.version}
           </p>
         </div>
         <div className="sheet-small flex h-24 w-64 flex-col print:h-20 justify-between border border-dashed border-ink p-2 text-sm">
-          <p>patient label here</p>
-          <p>checked by</p>
+          {SHEET_TITLES.label.map((words) => (
+            <p key={words}>{words}</p>
+          ))}
         </div>
       </header>
       <SequenceTable sequences={sequences} />
@@ -36,7 +38,7 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
         <SheetPicture plan={plan} />
         <SheetSizes plan={plan} />
       </div>
-      <Block title="Cautions">
+      <Block title={SHEET_TITLES.cautions}>
         <ul className="sheet-small list-disc pl-5 text-sm">
           {CAUTIONS.map((caution) => (
             <li key={caution}>{caution}</li>
@@ -44,14 +46,14 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
         </ul>
       </Block>
       <SheetSignatures plan={plan} />
-      <footer className="sheet-small mt-3 flex flex-wrap justify-between gap-x-6 border-t border-ink pt-2 text-sm print:mt-1 print:pt-1">
-        <p>
-          Newest version and whether this one is still it: <span className="figures font-semibold">{link}</span>
-        </p>
-        <p>
-          policy version {plan.policy.version} · engine {plan.engineVersion} · input{' '}
-          <span className="figures">{plan.inputHash.slice(0, 12)}</span>
-        </p>
+      <footer className="sheet-small mt-3 flex items-end justify-between gap-x-6 border-t border-ink pt-2 text-sm print:mt-1 print:pt-1">
+        <div>
+          <p>
+            {SHEET_TITLES.link} <span className="figures font-semibold">{link}</span>
+          </p>
+          <p className="figures mt-1">{restsOn(plan)}</p>
+        </div>
+        <ScanCode link={link} className="size-24 flex-none print:size-20" />
       </footer>
     </article>
   );
@@ -118,19 +120,9 @@ function Setting({ setting }: { setting: { value: string; note: string } }) {
 }
 
 function SheetSignatures({ plan }: { plan: PlanView }) {
-  const { signOff } = plan;
-  const radiologist = signOff
-    ? `${signOff.decision} by ${signOff.by}, ${formatDate(new Date(signOff.at))}`
-    : plan.needsSignOff
-      ? 'needed: fold is left in the keep-clear area, or site policy asks for it'
-      : 'not needed';
   return (
     <section aria-label="Signatures" className="sheet-small mt-4 grid grid-cols-3 gap-6 text-sm print:mt-1">
-      {[
-        ['Planned by', plan.savedBy],
-        ['Used at the scanner by', ''],
-        ['Radiologist’s sign-off', radiologist],
-      ].map(([title, note]) => (
+      {signatureRows(plan).map(([title, note]) => (
         <div key={title}>
           <p className="h-8 border-b border-ink" />
           <p className="font-semibold">{title}</p>

@@ -6,7 +6,7 @@ import { cx } from './class-names';
  */
 export type MarkKind = 'flat' | 'outward' | 'inward' | 'torn' | 'unworked';
 
-const PATHS: Record<MarkKind, { edge: string; fill?: string; thread?: string; dashed?: boolean }> = {
+export const MARK_PATHS: Record<MarkKind, { edge: string; fill?: string; thread?: string; dashed?: boolean }> = {
   // Whole sheet, its woven edge on the left: the corner lies flat.
   flat: { edge: 'M3 2.5 H17 V17.5 H3 Z', thread: 'M6.5 2.5 V17.5' },
   // The corner is turned over the edge and points away from the sheet.
@@ -24,7 +24,7 @@ const PATHS: Record<MarkKind, { edge: string; fill?: string; thread?: string; da
 };
 
 export function Mark({ kind, className, title }: { kind: MarkKind; className?: string; title?: string }) {
-  const path = PATHS[kind];
+  const path = MARK_PATHS[kind];
   return (
     <svg
       viewBox="0 0 20 20"

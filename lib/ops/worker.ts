@@ -1,10 +1,12 @@
 import PgBoss from 'pg-boss';
+import { paintSheet } from '@/components/plan/pdf/paint-sheet';
 import { closeDatabase, dueWork, requireSchema } from '@/db/client';
 import { environment } from '@/lib/env';
 import { type JobPayload, QUEUES } from '@/lib/jobs';
 import { smtpTransport } from '@/lib/mail';
 import { refreshBookings } from '@/lib/services/booking/refresh-bookings';
 import { deliverMail } from '@/lib/services/mail/deliver-mail';
+import { makeSheet } from '@/lib/services/plan-sheet/make-sheet';
 
 /**
  * The process that does slow and outward work. A queued job is only a wake-up call: what is due is in our own tables,
@@ -28,6 +30,14 @@ async function main(): Promise<void> {
     for (const job of jobs) await deliver(QUEUES['deliver-mail'].parse(job.data));
   });
 
+  const paint = async (payload: JobPayload<'make-plan-sheet'>) => {
+    const result = await makeSheet(payload, paintSheet);
+    if (result !== 'nothing to do') console.log(`plan sheet ${payload.sheetId}: ${result}`);
+  };
+  await boss.work('make-plan-sheet', { batchSize: 1, pollingIntervalSeconds: 1 }, async (jobs) => {
+    for (const job of jobs) await paint(QUEUES['make-plan-sheet'].parse(job.data));
+  });
+
   await boss.work('refresh-bookings', { batchSize: 1, pollingIntervalSeconds: 1 }, async (jobs) => {
     for (const job of jobs) {
       const refreshed = await refreshBookings(QUEUES['refresh-bookings'].parse(job.data));
@@ -40,6 +50,10 @@ async function main(): Promise<void> {
     for (const { siteId, id } of await dueWork('mail', 50)) {
       if (stopping) return;
       await deliver({ siteId, outboxId: id });
+    }
+    for (const { siteId, id } of await dueWork('plan-sheet', 10)) {
+      if (stopping) return;
+      await paint({ siteId, sheetId: id });
     }
   };
   let timer: NodeJS.Timeout | undefined;

@@ -5,7 +5,7 @@ import type { ScreenPoint } from '../scene/section-frame';
 export type Ground = 'theme' | 'paper';
 
 /** On paper everything is black on white: hatching and edges carry what colour carries on the screen. */
-const ON_PAPER: Readonly<Record<Token, string>> = {
+export const ON_PAPER: Readonly<Record<Token, string>> = {
   cloth: 'white',
   paper: 'white',
   ink: 'black',
@@ -29,7 +29,7 @@ function colourOf(token: Token, ground: Ground): string {
   return ground === 'paper' ? ON_PAPER[token] : `var(--${token})`;
 }
 
-function pathOf(lines: readonly (readonly ScreenPoint[])[], fit: Fit, close: boolean): string {
+export function pathOf(lines: readonly (readonly ScreenPoint[])[], fit: Fit, close: boolean): string {
   return lines
     .filter((line) => line.length > 1)
     .map((line) => {
@@ -98,7 +98,7 @@ function SvgNode({ node, fit, ground }: { node: SceneNode; fit: Fit; ground: Gro
 }
 
 /** What lies under tissue only to tint it says nothing in black and white. */
-function onPaper(node: SceneNode): boolean {
+export function onPaper(node: SceneNode): boolean {
   return node.name !== 'outside-the-picture' && !node.name.startsWith('sketch/');
 }
 
