@@ -182,8 +182,11 @@ const check =
   () =>
     validateCase(replaced(base, path, value));
 
+const rows = (list: readonly Row[]) =>
+  list.map(([path, low, high, base = FULL]) => ({ path, low, high, base }));
+
 describe('what a case may hold', () => {
-  it.each(REAL)('%s from %d to %d', (path, low, high, base) => {
+  it.each(rows(REAL))('$path from $low to $high', ({ path, low, high, base }) => {
     for (const value of [low, high, (low + high) / 2])
       expect(check(path, value, base), `${value}`).not.toThrow();
     // A thousandth of the range is far less than any change of a limit would be.
@@ -193,7 +196,7 @@ describe('what a case may hold', () => {
     }
   });
 
-  it.each(WHOLE)('%s, a whole number from %d to %d', (path, low, high, base) => {
+  it.each(rows(WHOLE))('$path, a whole number from $low to $high', ({ path, low, high, base }) => {
     for (const value of [low, high]) expect(check(path, value, base), `${value}`).not.toThrow();
     for (const value of [low - 1, high + 1, low + 0.5, Number.NaN])
       expect(check(path, value, base), `${value}`).toThrow(DomainError);
