@@ -42,8 +42,9 @@ export function VerdictLine({ className }: { className?: string }) {
         <details className="text-sm text-ink-soft max-lg:hidden">
           <summary>{assessment.assumptions.length === 1 ? '1 assumption' : `${assessment.assumptions.length} assumptions`}</summary>
           <ul className="mt-1 list-disc pl-5">
-            {assessment.assumptions.map(({ field, text }) => (
-              <li key={field}>{text}</li>
+            {assessment.assumptions.map(({ field, used, text }) => (
+              // Two sides whose sizes were got in different ways are two assumptions about one field.
+              <li key={`${field} ${used}`}>{text}</li>
             ))}
           </ul>
         </details>

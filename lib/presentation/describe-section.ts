@@ -8,7 +8,13 @@ const OPPOSITE: Readonly<Record<Side, Side>> = {
 
 /** "Trunk tissue from the posterior side lands on the anterior side, 300 mm away, in the keep-clear area." */
 export function describePiece(piece: PieceDrawing): string {
-  const where = piece.placeUncertain ? 'at an uncertain place' : `${Math.round(piece.distanceMm)} mm away`;
+  const distance = `${Math.round(piece.distanceMm)} mm away`;
+  const partly = piece.placeUncertain && (piece.byPlace?.certain.landed.length ?? 0) > 0;
+  const where = partly
+    ? `${distance}, what lies beyond the usable FOV at an uncertain place`
+    : piece.placeUncertain
+      ? 'at an uncertain place'
+      : distance;
   const along = piece.order === 0 ? 'along the slab' : `on the ${OPPOSITE[piece.side]} side`;
   const area = piece.inKeepClear.length > 0 ? 'in the keep-clear area' : 'outside the keep-clear area';
   const order = Math.abs(piece.order) > 1 ? ` It has folded ${Math.abs(piece.order)} times.` : '';

@@ -1,4 +1,4 @@
-import type { GhostDrawing, PieceDrawing, SectionRing } from '@/lib/physics/section/section-drawing';
+import type { GhostDrawing, PieceDrawing, PlacedRings, SectionRing } from '@/lib/physics/section/section-drawing';
 import type { Side } from '@/lib/physics/model/axes';
 import { centroidOf, hatch } from './rings';
 import { anchorWithin } from './place-text';
@@ -30,40 +30,90 @@ function edgeOf(piece: Pick<PieceDrawing, 'estimated' | 'placeUncertain'>): Stro
   return piece.placeUncertain ? 'dashed' : piece.estimated ? 'dotted' : 'solid';
 }
 
-/** Where the tissue is: outlined, outside the picture. */
+function certainEdge(piece: Pick<PieceDrawing, 'estimated'>): Stroke['edge'] {
+  return piece.estimated ? 'dotted' : 'solid';
+}
+
+/** Where the tissue is: outlined, outside the picture; what lies beyond the usable FOV dashed. */
 export function sourceNodes(piece: PieceDrawing | GhostDrawing, context: PieceContext, focused: boolean): SceneNode[] {
-  if (piece.source.length === 0) return [];
+  const outline = (name: string, rings: readonly SectionRing[], edge: Stroke['edge']): SceneNode[] =>
+    rings.length === 0
+      ? []
+      : [
+          {
+            kind: 'area',
+            name,
+            rings: rings.map(context.toRing),
+            fill: 'cloth',
+            fillOpacity: 0.35,
+            stroke: { colour: 'ink', widthPx: focused ? 2.25 : 1.25, edge },
+            hover: piece.name,
+          },
+        ];
+  const { byPlace } = piece;
+  if (!byPlace) return outline(`${piece.name}/source`, piece.source, edgeOf(piece));
   return [
-    {
-      kind: 'area',
-      name: `${piece.name}/source`,
-      rings: piece.source.map(context.toRing),
-      fill: 'cloth',
-      fillOpacity: 0.35,
-      stroke: { colour: 'ink', widthPx: focused ? 2.25 : 1.25, edge: edgeOf(piece) },
-      hover: piece.name,
-    },
+    ...outline(`${piece.name}/source`, byPlace.certain.source, certainEdge(piece)),
+    ...outline(`${piece.name}/source/uncertain`, byPlace.uncertain.source, 'dashed'),
   ];
 }
 
-/** Where it lands: hatched, the same outline moved; what reaches the keep-clear area is red and hatched across. */
+/**
+ * Where it lands: hatched, the same outline moved; what reaches the keep-clear area is red and hatched across. What
+ * comes from beyond the usable FOV keeps a dashed outline only: it folds, but nobody can say just where to.
+ */
 export function landedNodes(piece: PieceDrawing, context: PieceContext, focused: boolean): SceneNode[] {
-  const landed = piece.landed.map(context.toRing);
-  if (landed.length === 0) return [];
+  const { byPlace } = piece;
+  const placed = byPlace?.certain ?? piece;
+  const edge = byPlace ? certainEdge(piece) : edgeOf(piece);
   const from = slideVector(piece, context);
   const spacing = HATCH_PX * context.mmPerPx;
-  const nodes: SceneNode[] = [
-    area(`${piece.name}/landed`, landed, 'ochre', focused ? 2.25 : 1.25, edgeOf(piece), piece.name, from),
-    strokes(`${piece.name}/landed/hatch`, landed, HATCH_DEG[piece.side], spacing, 'ochre', from),
-  ];
-  const inside = piece.inKeepClear.map(context.toRing);
+  const nodes: SceneNode[] = [];
+  const landed = placed.landed.map(context.toRing);
+  if (landed.length > 0) {
+    nodes.push(
+      area(`${piece.name}/landed`, landed, 'ochre', focused ? 2.25 : 1.25, edge, piece.name, from),
+      strokes(`${piece.name}/landed/hatch`, landed, HATCH_DEG[piece.side], spacing, 'ochre', from),
+    );
+  }
+  const inside = placed.inKeepClear.map(context.toRing);
   if (inside.length > 0) {
     nodes.push(
-      area(`${piece.name}/in-keep-clear`, inside, 'thread', focused ? 2.25 : 1.5, edgeOf(piece), piece.name, from),
+      area(`${piece.name}/in-keep-clear`, inside, 'thread', focused ? 2.25 : 1.5, edge, piece.name, from),
       strokes(`${piece.name}/in-keep-clear/hatch`, inside, HATCH_DEG[piece.side] + 90, spacing, 'thread', from),
     );
   }
-  return nodes;
+  return byPlace ? [...nodes, ...uncertainNodes(piece, byPlace.uncertain, context, focused)] : nodes;
+}
+
+/** Dashed, without hatching, and said in words beside it. */
+function uncertainNodes(piece: PieceDrawing, placed: PlacedRings, context: PieceContext, focused: boolean): SceneNode[] {
+  const landed = placed.landed.map(context.toRing);
+  const at = centroidOf(landed);
+  if (!at) return [];
+  const widthPx = focused ? 2.25 : 1.5;
+  const inside = placed.inKeepClear.map(context.toRing);
+  const outline = (name: string, rings: readonly Ring[], colour: 'ochre' | 'thread'): SceneNode => ({
+    kind: 'area',
+    name,
+    rings,
+    stroke: { colour, widthPx, edge: 'dashed' },
+    hover: piece.name,
+  });
+  return [
+    outline(`${piece.name}/landed/uncertain`, landed, 'ochre'),
+    ...(inside.length > 0 ? [outline(`${piece.name}/in-keep-clear/uncertain`, inside, 'thread')] : []),
+    {
+      kind: 'text',
+      name: `${piece.name}/landed/uncertain/label`,
+      text: 'place uncertain',
+      at,
+      offsetPx: [0, 5],
+      anchor: 'middle',
+      size: 'note',
+      colour: inside.length > 0 ? 'thread' : 'ochre',
+    },
+  ];
 }
 
 export function ghostNodes(ghost: GhostDrawing, context: PieceContext, focused: boolean): SceneNode[] {
@@ -93,15 +143,21 @@ export function threadNodes(
   const held = ghost ?? piece;
   if (!held) return [];
   const inside = held.inKeepClear.length > 0;
-  const target = centroidOf((inside ? held.inKeepClear : held.landed).map(context.toRing));
+  // Tied where the place is certain, if any of it is.
+  const tied = held.byPlace && held.byPlace.certain.landed.length > 0 ? held.byPlace.certain : held;
+  const target = centroidOf((tied.inKeepClear.length > 0 ? tied.inKeepClear : tied.landed).map(context.toRing));
   if (!target) return [];
   const shift = ghost ? ghostVector(ghost, context) : slideVector(piece!, context);
   const origin: ScreenPoint = [target[0] + shift[0], target[1] + shift[1]];
   const colour = inside ? 'thread' : 'ochre';
   const side = held.side;
-  const where = held.placeUncertain
+  const certain = !held.placeUncertain || tied !== held;
+  const distance = `from the ${side} side, ${Math.round(held.distanceMm)} mm away`;
+  const where = !certain
     ? `from the ${side} side, place uncertain`
-    : `from the ${side} side, ${Math.round(held.distanceMm)} mm away`;
+    : held.placeUncertain
+      ? `${distance}, the rest uncertain`
+      : distance;
   const down = shift[1] > 0;
   const upright = Math.abs(shift[1]) >= Math.abs(shift[0]);
   const text = ghost ? `ghost of tissue ${where}` : where;

@@ -117,16 +117,20 @@ function tissueNodes(
   toRing: (ring: SectionRing) => Ring,
 ): AreaNode[] {
   const edgeOf = (tissue: TissueDrawing): Stroke['edge'] =>
-    tissue.placeUncertain ? 'dashed' : tissue.estimated ? 'dotted' : 'solid';
+    tissue.placeUncertain && !tissue.beyondUsable ? 'dashed' : tissue.estimated ? 'dotted' : 'solid';
   const outlines = drawing.tissue
     .filter(({ rings }) => rings.length > 0)
-    .map((tissue): AreaNode => ({
-      kind: 'area',
-      name: tissue.name,
-      rings: tissue.rings.map(toRing),
-      fill: 'tissue-fat',
-      stroke: { colour: 'ink-soft', widthPx: 1.25, edge: edgeOf(tissue) },
-    }));
+    .flatMap((tissue): AreaNode[] => {
+      const stroke: Stroke = { colour: 'ink-soft', widthPx: 1.25, edge: edgeOf(tissue) };
+      const whole: AreaNode = { kind: 'area', name: tissue.name, rings: tissue.rings.map(toRing), fill: 'tissue-fat' };
+      const { withinUsable, beyondUsable } = tissue;
+      if (!withinUsable || !beyondUsable) return [{ ...whole, stroke }];
+      return [
+        whole,
+        { kind: 'area', name: `${tissue.name}/within-usable`, rings: withinUsable.map(toRing), stroke },
+        { kind: 'area', name: `${tissue.name}/beyond-usable`, rings: beyondUsable.map(toRing), stroke: { ...stroke, edge: 'dashed' } },
+      ];
+    });
   const given = (asGiven ?? [])
     .filter((tissue) => tissue.rings.length > 0 && differs(tissue, drawing.tissue))
     .map((tissue): AreaNode => ({

@@ -62,7 +62,6 @@ function slabReason(slab: SlabResult): Reason {
 
 /** What is enough, and what covering the whole body would take. */
 function enoughReason(p: Prescription, width: WidthRequirement): Reason {
-  const cover = percentBeyond(Math.max(width.coverBodyMm, p.fovPhaseMm), p.fovPhaseMm);
   const lines = width.firstCleanLines;
   if (!Number.isFinite(width.firstCleanMm)) {
     return {
@@ -83,6 +82,10 @@ function enoughReason(p: Prescription, width: WidthRequirement): Reason {
     lines === p.linesAcrossFov
       ? `No oversampling is needed (${figure(widthMm)} mm acquired).`
       : `${percentBeyond(lines, p.linesAcrossFov)} oversampling is enough (${figure(widthMm)} mm acquired).`;
+  // Worth comparing only where the body asks for more: a scanner's coarse steps or a slab's diagonal can ask for more still.
+  const coverMm = Math.max(width.coverBodyMm, p.fovPhaseMm);
+  if (!(coverMm > widthMm + 0.05)) return { code: 'enough-width', text: enough };
+  const cover = percentBeyond(coverMm, p.fovPhaseMm);
   return { code: 'enough-width', text: `${enough} Covering the whole body would take ${cover}.` };
 }
 

@@ -22,6 +22,7 @@ import { cutSolid, solidInSection } from './convex-solid';
 import { straight } from './curve';
 import { outlineRings } from './outline-rings';
 import type { RowBand } from './row-band';
+import { piecesByPlace, splitByUsable } from './split-by-usable';
 import type {
   GhostDrawing,
   PieceDrawing,
@@ -119,15 +120,24 @@ function cutRegion(region: OrientedRegion, frame: SectionFrame): RowBand[] {
 function drawTissue(part: SolidPart, { problem, frame }: Picture): TissueDrawing {
   const solids = partSolids([part], problem, { bands: [], b1Scale: 1, t1Ms: [] }, -1);
   const whole = outlineRings(part.shape, frame, problem);
-  const rings =
-    whole ?? solids.flatMap(({ solid }) => bandRings(cutSolid(solidInSection(solid, frame), frame.sliceMm)));
+  const cuts = solids.map(({ solid }) => cutSolid(solidInSection(solid, frame), frame.sliceMm));
+  const rings = whole ?? cuts.flatMap(bandRings);
+  const placeUncertain = isUncertain(rings, problem, frame, frame.sliceMm);
+  const split =
+    placeUncertain && !whole
+      ? cuts.map((bands) => splitByUsable(bands, problem.usable, frame, frame.sliceMm))
+      : undefined;
   return {
     name: `tissue/${part.name}`,
     part: part.name,
     kind: part.kind,
     estimated: part.estimated,
-    placeUncertain: isUncertain(rings, problem, frame, frame.sliceMm),
+    placeUncertain,
     rings,
+    ...(split && {
+      withinUsable: split.flatMap(({ within }) => bandRings(within)),
+      beyondUsable: split.flatMap(({ beyond }) => beyond.flatMap(bandRings)),
+    }),
   };
 }
 
@@ -199,6 +209,7 @@ function gather(drafts: readonly Draft[], picture: Picture, nameOf: (draft: Draf
     const first = group[0]!;
     const rings = (pick: (one: Draft) => RowBand[]) => group.flatMap((one) => bandRings(pick(one)));
     const source = rings((one) => one.source);
+    const placeUncertain = isUncertain(source, problem, frame, first.sMm);
     return {
       first,
       drawing: {
@@ -211,7 +222,8 @@ function gather(drafts: readonly Draft[], picture: Picture, nameOf: (draft: Draf
             : AXIS_SIDES[frame.sliceAxis][first.sliceOrder > 0 ? 1 : 0],
         distanceMm:
           first.moveMm !== 0 ? Math.abs(first.moveMm) : Math.abs(first.sliceOrder) * (picture.slabMm ?? 0),
-        placeUncertain: isUncertain(source, problem, frame, first.sMm),
+        placeUncertain,
+        ...(placeUncertain && { byPlace: piecesByPlace(group, problem.usable, frame, picture.keepClear) }),
         source,
         landed: rings((one) => one.landed),
         inKeepClear: rings((one) => one.inKeepClear),

@@ -7,6 +7,19 @@ export type SectionPoint = readonly [number, number];
 /** A closed outline; the last point is not repeated. */
 export type SectionRing = readonly SectionPoint[];
 
+/** One piece, or the part of it whose place is certain or is not. */
+export interface PlacedRings {
+  readonly source: readonly SectionRing[];
+  readonly landed: readonly SectionRing[];
+  readonly inKeepClear: readonly SectionRing[];
+}
+
+/** What lies partly beyond the scanner's usable FOV, told apart: there the scanner maps it wrongly before it folds. */
+export interface ByPlace {
+  readonly certain: PlacedRings;
+  readonly uncertain: PlacedRings;
+}
+
 export interface TissueDrawing {
   /** Stable: "tissue/<part>". */
   readonly name: string;
@@ -15,6 +28,9 @@ export interface TissueDrawing {
   readonly estimated: boolean;
   /** Some of it lies beyond the scanner's usable FOV. */
   readonly placeUncertain: boolean;
+  /** Where place is uncertain and the part is a solid: its outline within the usable FOV, and beyond it. */
+  readonly withinUsable?: readonly SectionRing[];
+  readonly beyondUsable?: readonly SectionRing[];
   /** Even-odd: an inner ring is a hole. Empty where the section misses the part. */
   readonly rings: readonly SectionRing[];
 }
@@ -40,6 +56,8 @@ export interface PieceDrawing {
   readonly landed: readonly SectionRing[];
   /** The part of `landed` inside the keep-clear area (without margin). */
   readonly inKeepClear: readonly SectionRing[];
+  /** Set where place is uncertain: the same outlines told apart. */
+  readonly byPlace?: ByPlace;
 }
 
 /** A ghost of image-domain unfolding: tissue beyond the acquired width shown again at full brightness. */
@@ -57,6 +75,7 @@ export interface GhostDrawing {
   readonly source: readonly SectionRing[];
   readonly landed: readonly SectionRing[];
   readonly inKeepClear: readonly SectionRing[];
+  readonly byPlace?: ByPlace;
 }
 
 export interface SectionDrawing {

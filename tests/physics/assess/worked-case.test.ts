@@ -39,4 +39,12 @@ describe('sketch case: margin 5 every side, keep-clear from 140 anterior, FOV 30
       '5 % oversampling is enough (315 mm acquired). Covering the whole body would take 16.7 %.',
     );
   });
+  it('compares with covering the body only where that would take more', () => {
+    const words = (given: ReturnType<typeof workedCase>) =>
+      assess(given).reasons.find(({ code }) => code === 'enough-width')?.text;
+    expect(words(workedCase())).toContain('Covering the whole body would take 13.3 %.');
+    // A scanner that can only double asks for more than the body.
+    const doubling = { ...workedCase(), scanner: typicalScanner({ lineStep: { kind: 'doubling' } }) };
+    expect(words(doubling)).toBe('100 % oversampling is enough (600 mm acquired).');
+  });
 });

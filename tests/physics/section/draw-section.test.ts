@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
+import { usableVolume } from '@/lib/physics/fold/fold-problem';
 import { solveFold } from '@/lib/physics/fold/solve-fold';
 import { foldProblem } from '@/lib/physics/fold/fold-problem';
 import type { Case } from '@/lib/physics/model/case';
@@ -163,6 +164,40 @@ describe('a section as outlines', () => {
     };
     expect(solveFold(foldProblem(wide)).leftover(256).placeUncertain).toBe(true);
     expect(drawSection(wide).pieces.every((piece) => piece.placeUncertain)).toBe(true);
+  });
+
+  it('tells apart what of a piece lies beyond the usable FOV, and moves both alike', () => {
+    const usableFovMm = [440, 440, 400] as const;
+    const wide = {
+      ...sampleCase({ prescription: { phaseAxis: 'RL', fovPhaseMm: 400, fovReadoutMm: 300 } }),
+      scanner: { ...scanner, limits: { ...scanner.limits, usableFovMm } },
+    };
+    const drawn = drawSection(wide);
+    const { centreMm, halfMm } = usableVolume(wide);
+    // Axial: readout is y, phase is x.
+    const reach = ([r, p]: readonly [number, number]): number =>
+      Math.hypot((p - centreMm[0]) / halfMm[0], (r - centreMm[1]) / halfMm[1]);
+    const tolerance = 1e-3; // 0.2 mm of 220: the usable ellipse is cut by chords
+    expect(drawn.pieces.length).toBe(2);
+    for (const { source, landed, byPlace, distanceMm } of drawn.pieces) {
+      const { certain, uncertain } = byPlace!;
+      expect(area(certain.source)).toBeGreaterThan(100);
+      expect(area(uncertain.source)).toBeGreaterThan(100);
+      for (const point of certain.source.flat()) expect(reach(point)).toBeLessThan(1 + tolerance);
+      for (const point of uncertain.source.flat()) expect(reach(point)).toBeGreaterThan(1 - tolerance);
+      // Polygons of 32 points an arc, cut elsewhere: 0.5 % of a piece.
+      const whole = area(source);
+      expect(Math.abs(area(certain.source) + area(uncertain.source) - whole)).toBeLessThan(0.005 * whole);
+      expect(area(certain.landed) + area(uncertain.landed)).toBeCloseTo(
+        area(certain.source) + area(uncertain.source),
+        6,
+      );
+      expect(area(landed)).toBeCloseTo(whole, 6);
+      expect(Math.abs(uncertain.landed[0]![0]![1] - uncertain.source[0]![0]![1])).toBeCloseTo(distanceMm, 9);
+    }
+    const [trunk] = drawn.tissue;
+    expect(area(trunk!.withinUsable!) + area(trunk!.beyondUsable!)).toBeGreaterThan(0.995 * area(trunk!.rings));
+    expect(drawing.pieces.every((piece) => piece.byPlace === undefined)).toBe(true);
   });
 
   it('draws centre ghosts of image-domain unfolding at full size, and no plain piece', () => {
