@@ -1,11 +1,12 @@
 import path from 'node:path';
+import vm from 'node:vm';
 import { solveFold } from '@/lib/physics/fold/solve-fold';
 import { foldProblem } from '@/lib/physics/fold/fold-problem';
 import { latticeSample } from '@/tests/physics/fold/lattice-case';
 import { latticeOracle } from '@/tests/physics/fold/oracle-lattice';
 import { fromKSpace, SIZE } from '@/tests/support/ellipse-k-space';
-import { inChromium } from '@/tests/support/engine-in-browser';
-import { engineTimings, type EngineTimings } from '@/tests/support/engine-timings';
+import { browserScript, inChromium } from '@/tests/support/engine-in-browser';
+import type { EngineTimings } from '@/tests/support/engine-timings';
 import { workedCase } from '@/tests/support/physics-cases';
 import { quantile, time, type Measure, type MeasureRow } from './row';
 
@@ -17,6 +18,8 @@ function timingRows(
   where: string,
 ): MeasureRow[] {
   const both = (what: string, sample: readonly number[], aim?: string): MeasureRow[] => [
+    // Where others use the machine the fastest tenth is nearest to what the work itself takes.
+    { what: `${what}, p10, ${where}`, value: quantile(sample, 0.1), unit: 'ms' },
     { what: `${what}, p50, ${where}`, value: quantile(sample, 0.5), unit: 'ms' },
     {
       what: `${what}, p95, ${where}`,
@@ -84,9 +87,9 @@ function againstFft(): MeasureRow {
   const foldsAt = (lines: number): boolean => {
     const widthMm = (lines * fovPhaseMm) / linesAcrossFov;
     const rows = fromKSpace(trunk, fovReadoutMm, widthMm);
-    // Twice as bright as tissue somewhere inside the FOV: something lies on top of it.
+    // A fifth brighter than tissue somewhere inside the FOV: something lies on top of it. Ringing stays below that.
     return rows.some((row) =>
-      row.some((value, v) => Math.abs(((v + 0.5) / SIZE - 0.5) * widthMm) < fovPhaseMm / 2 && value > 1.3),
+      row.some((value, v) => Math.abs(((v + 0.5) / SIZE - 0.5) * widthMm) < fovPhaseMm / 2 && value > 1.2),
     );
   };
   let swept = linesAcrossFov;
@@ -113,19 +116,17 @@ function againstFft(): MeasureRow {
   };
 }
 
+interface Bundled {
+  readonly engine: { engineTimings(runs: number): EngineTimings };
+}
+
 export const measure: Measure = async () => {
-  const here = timingRows(engineTimings(RUNS), 'Node');
-  const there = await inChromium(
-    path.join(import.meta.dirname, '../support/engine-timings.ts'),
-    'engine',
-    (page) =>
-      page.evaluate(
-        (runs) =>
-          (
-            globalThis as unknown as { engine: { engineTimings(runs: number): EngineTimings } }
-          ).engine.engineTimings(runs),
-        RUNS,
-      ),
+  const entry = path.join(import.meta.dirname, '../support/engine-timings.ts');
+  // Both run the same bundle, as the service and the page do: what runs TypeScript directly names every closure anew.
+  vm.runInThisContext(await browserScript(entry, 'engine'));
+  const here = (globalThis as unknown as Bundled).engine.engineTimings(RUNS);
+  const there = await inChromium(entry, 'engine', (page) =>
+    page.evaluate((runs) => (globalThis as unknown as Bundled).engine.engineTimings(runs), RUNS),
   );
-  return [...here, ...timingRows(there, 'Chromium'), againstLattice(), againstFft()];
+  return [...timingRows(here, 'Node'), ...timingRows(there, 'Chromium'), againstLattice(), againstFft()];
 };

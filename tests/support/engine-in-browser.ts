@@ -5,7 +5,7 @@ import { build, type Rolldown } from 'vite';
 const ROOT = path.join(import.meta.dirname, '../..');
 
 /** A module and everything it imports as one script that puts its exports into `globalThis[name]`. */
-async function browserScript(entry: string, name: string): Promise<string> {
+export async function browserScript(entry: string, name: string): Promise<string> {
   const built = (await build({
     root: ROOT,
     configFile: false,

@@ -44,9 +44,9 @@ function time(runs: number, warmUp: number, work: (run: number) => void): number
 export function engineTimings(runs: number): EngineTimings {
   let asked = 0;
   // Drawn up before the clock starts; each is asked once.
-  const cases = Array.from({ length: 3 * runs + 200 }, (_, run) => protocolFor(run));
+  const cases = Array.from({ length: 3 * runs + 300 }, (_, run) => protocolFor(run));
   const next = (): Case[] => cases[asked++]!;
-  const rankFiveMs = time(runs, 60, () => next().forEach((given) => rankRemedies(given)));
+  const rankFiveMs = time(runs, 150, () => next().forEach((given) => rankRemedies(given)));
   const rest = Math.floor((cases.length - asked - 2) / ABDOMEN_PROTOCOL.length / 2);
   const sequences = ABDOMEN_PROTOCOL.map((family, i): SequenceTimings => {
     const assessMs = time(rest - 2, 2, () => void assess(next()[i]!));
