@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import { formDifferences } from '@/components/ui/form-differences';
 import { VersionHistory } from '@/components/ui/version-history';
 import { formatMoment } from '@/lib/presentation/moment';
@@ -15,7 +16,14 @@ export function PlanVersions({ versions, current, href }: { versions: readonly P
   });
   return (
     <>
-      <h2 className="mt-10 mb-3 text-lg">Versions</h2>
+      <div className="mt-10 mb-3 flex flex-wrap items-baseline justify-between gap-4">
+        <h2 className="text-lg">Versions</h2>
+        {versions.length > 1 && (
+          <Link href={`${href}/versions`} className="text-link">
+            Two versions side by side
+          </Link>
+        )}
+      </div>
       <VersionHistory rows={rows} current={current} hrefOf={(version) => `${href}?version=${version}`} />
     </>
   );

@@ -2,6 +2,8 @@
 
 import { revalidatePath } from 'next/cache';
 import { runAction } from '@/lib/http/run-action';
+import type { OutcomeForm } from '@/lib/schemas/outcome';
+import { recordOutcome } from '@/lib/services/outcome/record-outcome';
 import { movePlan } from '@/lib/services/plan/move-plan';
 import { signOffPlan } from '@/lib/services/plan/sign-off-plan';
 
@@ -24,5 +26,13 @@ export async function signOffAction(
     const { state } = await signOffPlan(context, { id, expectedVersion, ...values });
     revalidatePath(`/plans/${id}`);
     return { state };
+  });
+}
+
+export async function recordOutcomeAction(planId: string, expectedVersion: number, id: string, form: OutcomeForm) {
+  return runAction('record an outcome', async (context) => {
+    const { wrap } = await recordOutcome(context, { ...form, planId, expectedVersion, id });
+    revalidatePath(`/plans/${planId}`);
+    return { wrap };
   });
 }

@@ -25,7 +25,7 @@ const shape = {
 export const keepClearRequestForm = strict(shape);
 export type KeepClearRequestForm = z.output<typeof keepClearRequestForm>;
 
-export const requestKeepClearInput = strict({ bookingId: idSchema, form: keepClearRequestForm });
+export const requestKeepClearInput = strict({ bookingId: idSchema, ...shape });
 
 /** What was asked for, laid into the patient where the sizes are known. */
 export interface KeepClearRequestView {

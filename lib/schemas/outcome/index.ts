@@ -36,7 +36,7 @@ export type OutcomeForm = z.input<typeof outcomeForm>;
 /** The caller draws the id, so that the same outcome sent twice is one. */
 const identity = { id: idSchema, expectedVersion: expectedVersionSchema };
 export const recordOutcomeBody = strict({ ...identity, ...shape });
-export const recordOutcomeInput = strict({ planId: idSchema, ...identity, form: outcomeForm });
+export const recordOutcomeInput = strict({ planId: idSchema, ...identity, ...shape });
 
 export interface OutcomeView {
   readonly id: string;

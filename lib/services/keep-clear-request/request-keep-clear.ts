@@ -17,14 +17,14 @@ import { nowOf, type ServiceContext } from '../context';
  */
 export async function requestKeepClear(context: ServiceContext, input: unknown): Promise<void> {
   const { actor } = context;
-  const { bookingId, form } = parseInput(requestKeepClearInput, input);
+  const { bookingId, ...form } = parseInput(requestKeepClearInput, input);
   const now = nowOf(context);
   await inTransaction(actor.siteId, async (trx) => {
     const booking = await findBooking(trx, actor.siteId, bookingId);
     authorise(actor, 'keep-clear.request', booking);
     const offered = keepClearPresetsFor(booking.region).map(({ key }) => key);
     if (form.keepClearPreset !== 'own' && !offered.includes(form.keepClearPreset)) {
-      throw invalidField('form.keepClearPreset', `${form.keepClearPreset} given; allowed for the ${booking.region}: ${offered.join(', ')}, own`);
+      throw invalidField('keepClearPreset', `${form.keepClearPreset} given; allowed for the ${booking.region}: ${offered.join(', ')}, own`);
     }
     await insertKeepClearRequest(trx, {
       siteId: actor.siteId,

@@ -41,11 +41,11 @@ function usedSequence(
 function usedSequences(plan: PlanRecord, form: OutcomeForm, scanner: Scanner): UsedSequence[] {
   return form.sequences.map((used, index) => {
     const planned = plan.document.sequences.find(({ id }) => id === used.id);
-    if (!planned) throw invalidField(`form.sequences.${index}.id`, 'not a sequence of this plan; allowed: one of its own');
+    if (!planned) throw invalidField(`sequences.${index}.id`, 'not a sequence of this plan; allowed: one of its own');
     try {
       return usedSequence(planned, used, scanner);
     } catch (error) {
-      if (error instanceof DomainError) throw invalidField(`form.sequences.${index}.phase`, error.message);
+      if (error instanceof DomainError) throw invalidField(`sequences.${index}.phase`, error.message);
       throw error;
     }
   });
@@ -56,7 +56,7 @@ function usedSequences(plan: PlanRecord, form: OutcomeForm, scanner: Scanner): U
  * beside the first. The same outcome sent twice is one.
  */
 export async function recordOutcome(context: ServiceContext, input: unknown): Promise<OutcomeView> {
-  const { planId, id, expectedVersion, form } = parseInput(recordOutcomeInput, input);
+  const { planId, id, expectedVersion, ...form } = parseInput(recordOutcomeInput, input);
   const { siteId } = context.actor;
   const now = nowOf(context);
   return inTransaction(siteId, async (trx) => {

@@ -15,7 +15,7 @@ beforeEach(async () => {
 
 const WHOLE = { keepClearPreset: 'whole-picture', keepClear: { area: { kind: 'whole-picture' }, followsWindow: false }, note: '' };
 const ask = (form: object, actor = here.radiologist, minutes = 0) =>
-  requestKeepClear({ actor, now: new Date(NOW.getTime() + minutes * 60_000) }, { bookingId: here.booking.id, form: { ...WHOLE, ...form } });
+  requestKeepClear({ actor, now: new Date(NOW.getTime() + minutes * 60_000) }, { bookingId: here.booking.id, ...WHOLE, ...form });
 const rows = () => here.site.withApp((trx) => trx.selectFrom('keep_clear_request').select('id').execute());
 const bench = () => openBench(as(here.radiographer), { bookingId: here.booking.id });
 
@@ -65,7 +65,7 @@ describe('a keep-clear area asked for by a radiologist', () => {
     for (const actor of [here.radiographer, here.coordinator, other.radiologist]) {
       await expect(ask({}, actor)).rejects.toMatchObject({ code: 'not-found' });
     }
-    await expect(ask({ keepClearPreset: 'prostate' })).rejects.toMatchObject({ code: 'invalid', fields: { 'form.keepClearPreset': expect.stringContaining('liver') } });
+    await expect(ask({ keepClearPreset: 'prostate' })).rejects.toMatchObject({ code: 'invalid', fields: { keepClearPreset: expect.stringContaining('liver') } });
     await expect(ask({ toleratedFoldOutsidePct: 101 })).rejects.toMatchObject({ code: 'invalid' });
     await expect(ask({ keepClear: { area: { kind: 'box' }, followsWindow: false } })).rejects.toMatchObject({ code: 'invalid' });
     expect(await rows()).toEqual([]);

@@ -26,7 +26,7 @@ const sequences = (change: Record<number, number> = {}) =>
   plan.sequences.map(({ id, prescription }, index) => ({ id, phase: change[index] ?? phaseSettingNumber(prescription, plan.scanner).value }));
 const record = (form: object = {}, id: string = randomUUID(), actor = here.radiographer) =>
   recordOutcome(as(actor), {
-    planId: plan.id, id, expectedVersion: 1, form: { wrap: 'none', sequences: sequences(), minutes: 4.5, repeated: false, note: '', ...form },
+    planId: plan.id, id, expectedVersion: 1, wrap: 'none', sequences: sequences(), minutes: 4.5, repeated: false, note: '', ...form,
   });
 const stateNow = async () => (await getPlan(as(here.radiographer), { id: plan.id })).state;
 const signed = async () => {

@@ -1,11 +1,14 @@
 import type { Metadata } from 'next';
+import { headers } from 'next/headers';
 import { NewerVersion } from '@/components/plan/newer-version';
 import { PlanSheet } from '@/components/plan/plan-sheet';
+import { SheetPdf } from '@/components/plan/sheet-pdf';
 import { PrintButton } from '@/components/plan/print-button';
 import { LinkButton } from '@/components/ui/button';
-import { environment } from '@/lib/env';
 import { asVersion } from '@/lib/http/as-version';
 import { loadPage } from '@/lib/http/load-page';
+import { paperOf } from '@/lib/presentation/paper';
+import { sheetLink } from '@/lib/services/plan-sheet/sheet-content';
 import { getPlan } from '@/lib/services/plan/get-plan';
 
 export const metadata: Metadata = { title: 'Plan sheet' };
@@ -24,10 +27,11 @@ export default async function PlanSheetPage({ params, searchParams }: Props) {
       <NewerVersion plan={plan} href={`/plans/${id}/sheet`} />
       <div className="mb-4 flex flex-wrap gap-3 print:hidden">
         <PrintButton />
+        <SheetPdf planId={id} version={plan.version} paper={paperOf((await headers()).get('accept-language'))} />
         {bench && <LinkButton href={bench}>Back to the bench</LinkButton>}
         <LinkButton href={`/plans/${id}`}>Plan</LinkButton>
       </div>
-      <PlanSheet plan={plan} link={`${environment().publicUrl}/p/${plan.shortCode}?v=${plan.version}`} />
+      <PlanSheet plan={plan} link={sheetLink(plan)} />
     </div>
   );
 }

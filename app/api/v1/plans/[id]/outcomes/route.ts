@@ -9,6 +9,5 @@ export const GET = handleRoute({ params: idParams }, async ({ context, params })
 
 export const POST = handleRoute({ params: idParams, body: recordOutcomeBody }, async ({ actor, context, params, body }) => {
   writeLimit.count(actor);
-  const { id, expectedVersion, ...form } = body;
-  return recordOutcome(context, { planId: params.id, id, expectedVersion, form });
+  return recordOutcome(context, { planId: params.id, ...body });
 });
