@@ -18,7 +18,7 @@ export async function resolveSignIn(email: string, db: Database = database()): P
   return row ? { siteId: row.site_id, userId: row.user_id, passwordHash: row.password_hash } : null;
 }
 
-export type TokenKind = 'api' | 'set-password';
+export type TokenKind = 'api' | 'set-password' | 'size-request';
 
 export interface TokenMatch {
   readonly siteId: string;
@@ -43,8 +43,8 @@ export interface DueWork {
   readonly id: string;
 }
 
-/** Work that a sweep finds when its wake-up call was lost: mail to send, plan sheets to make. */
-export async function dueWork(kind: 'mail' | 'plan-sheet', atMost: number, db: Database = database()): Promise<DueWork[]> {
+/** Work that a sweep finds when its wake-up call was lost: mail to send, plan sheets to make, bookings to check. */
+export async function dueWork(kind: 'mail' | 'plan-sheet' | 'pre-check' | 'size-request-expiry', atMost: number, db: Database = database()): Promise<DueWork[]> {
   const { rows } = await sql<{ site_id: string; id: string }>`
     select site_id, id from gate.due_work(${kind}, ${atMost})`.execute(db);
   return rows.map((row) => ({ siteId: row.site_id, id: row.id }));

@@ -71,16 +71,37 @@ export interface Booking {
   site_id: string;
   slot_minutes: number;
   source: string;
+  surgery_on: Generated<string>;
   version: Generated<number>;
+}
+
+export interface BookingEntry {
+  actor_id: string;
+  actor_kind: string;
+  booking_id: string;
+  data: Json;
+  id: Generated<string>;
+  kind: string;
+  note: Generated<string>;
+  site_id: string;
+  written_at: Generated<Timestamp>;
 }
 
 export interface BookingState {
   booking_id: string;
   changed_at: Generated<Timestamp>;
+  check_number: Generated<number>;
+  escalation: Generated<string>;
   minutes_needed: Generated<number>;
+  minutes_over: Generated<number>;
+  next_kind: Generated<string>;
+  next_text: Generated<string>;
   plan_state: Generated<string>;
+  recheck_at: Generated<Timestamp>;
   result: Generated<string>;
+  result_rank: Generated<number>;
   site_id: string;
+  stale: Generated<number>;
   verdict_worst: Generated<string>;
   version: Generated<number>;
 }
@@ -89,6 +110,50 @@ export interface BookingTombstone {
   booking_id: string;
   deleted_at: Generated<Timestamp>;
   reason: string;
+  site_id: string;
+}
+
+export interface CheckResult {
+  booking_id: string;
+  checked_at: Generated<Timestamp>;
+  data: Json;
+  engine_version: string;
+  input_hash: string;
+  number: number;
+  policy_version: number;
+  result: string;
+  site_id: string;
+}
+
+export interface ImportBatch {
+  changed_count: Generated<number>;
+  committed_at: Timestamp | null;
+  created_at: Generated<Timestamp>;
+  created_by: string;
+  created_count: Generated<number>;
+  format: string;
+  id: Generated<string>;
+  same_count: Generated<number>;
+  site_id: string;
+  status: Generated<string>;
+}
+
+export interface ImportRow {
+  accession: string;
+  batch_id: string;
+  data: Json;
+  number: number;
+  protocol_id: string;
+  scanner_id: string;
+  scheduled_at: Timestamp;
+  site_id: string;
+  slot_minutes: number;
+}
+
+export interface ImportSettings {
+  data: Json;
+  saved_at: Generated<Timestamp>;
+  saved_by: string;
   site_id: string;
 }
 
@@ -114,7 +179,25 @@ export interface MailOutbox {
   site_id: string;
   status: Generated<string>;
   to_address: string | null;
+  to_size_request_id: string | null;
   to_user_id: string | null;
+}
+
+export interface MoveProposal {
+  booked_at: Timestamp;
+  booked_scanner_id: string;
+  booked_slot_minutes: number;
+  booking_id: string;
+  id: Generated<string>;
+  proposed_at: Generated<Timestamp>;
+  proposed_by: string;
+  reason: Generated<string>;
+  scanner_id: string;
+  scheduled_at: Timestamp;
+  settled_at: Timestamp | null;
+  site_id: string;
+  slot_minutes: number;
+  status: Generated<string>;
 }
 
 export interface OneTimeToken {
@@ -211,6 +294,17 @@ export interface Scanner {
   version: Generated<number>;
 }
 
+export interface ScannerSession {
+  created_at: Generated<Timestamp>;
+  created_by: string;
+  ends_at: Timestamp;
+  id: Generated<string>;
+  scanner_id: string;
+  site_id: string;
+  starts_at: Timestamp;
+  status: Generated<string>;
+}
+
 export interface ScannerVersion {
   created_at: Generated<Timestamp>;
   created_by: string;
@@ -267,7 +361,24 @@ export interface SizeReading {
   source: string;
   spread: Generated<number>;
   taken_on: string;
+  tape_site: Generated<string>;
   value: number;
+}
+
+export interface SizeRequest {
+  address_masked: Generated<string>;
+  address_sealed: Generated<string>;
+  asked_at: Generated<Timestamp>;
+  asked_by: string;
+  booking_id: string;
+  expires_at: Timestamp;
+  id: Generated<string>;
+  last_sent_at: Timestamp | null;
+  sent_count: Generated<number>;
+  settled_at: Timestamp | null;
+  site_id: string;
+  status: Generated<string>;
+  token_hash: string;
 }
 
 export interface DB {
@@ -275,10 +386,16 @@ export interface DB {
   app_user: AppUser;
   audit_event: AuditEvent;
   booking: Booking;
+  booking_entry: BookingEntry;
   booking_state: BookingState;
   booking_tombstone: BookingTombstone;
+  check_result: CheckResult;
+  import_batch: ImportBatch;
+  import_row: ImportRow;
+  import_settings: ImportSettings;
   keep_clear_request: KeepClearRequest;
   mail_outbox: MailOutbox;
+  move_proposal: MoveProposal;
   one_time_token: OneTimeToken;
   outcome: Outcome;
   plan: Plan;
@@ -287,10 +404,12 @@ export interface DB {
   protocol: Protocol;
   protocol_version: ProtocolVersion;
   scanner: Scanner;
+  scanner_session: ScannerSession;
   scanner_version: ScannerVersion;
   sequence: Sequence;
   sign_off: SignOff;
   site: Site;
   site_policy: SitePolicy;
   size_reading: SizeReading;
+  size_request: SizeRequest;
 }

@@ -55,6 +55,10 @@ async function main(): Promise<void> {
       if (stopping) return;
       await paint({ siteId, sheetId: id });
     }
+    for (const siteId of new Set((await dueWork('pre-check', 20)).map((due) => due.siteId))) {
+      if (stopping) return;
+      await refreshBookings({ siteId });
+    }
   };
   let timer: NodeJS.Timeout | undefined;
   let sweeping: Promise<void> = Promise.resolve();

@@ -8,6 +8,9 @@ import { tenantTables } from './tenant-tables';
 /** Tables whose rows are never changed once written: what was measured, planned, signed, done and by whom. */
 const APPEND_ONLY = [
   'audit_event',
+  'booking_entry',
+  'check_result',
+  'import_row',
   'keep_clear_request',
   'outcome',
   'plan_version',
@@ -86,7 +89,7 @@ describe('what the retention role may do', () => {
       mine.siteId,
       async (trx) => {
         await sql`set local role selvedge_retention`.execute(trx);
-        for (const table of ['plan_sheet', 'keep_clear_request', 'outcome', 'sign_off', 'plan_version', 'plan', 'size_reading', 'booking_state', 'booking']) {
+        for (const table of ['size_request', 'check_result', 'move_proposal', 'booking_entry', 'plan_sheet', 'keep_clear_request', 'outcome', 'sign_off', 'plan_version', 'plan', 'size_reading', 'booking_state', 'booking']) {
           await sql`delete from ${sql.table(table)}`.execute(trx);
         }
         await trx

@@ -38,6 +38,16 @@ describe('plans of the everyday queries', () => {
       trx.selectFrom('outcome').select('wrap').where('site_id', '=', siteId).where('plan_id', '=', siteId).orderBy('recorded_at', 'desc').limit(1),
     plan_sheet_site_id_plan_id_plan_version_paper_content_hash_key: (trx, siteId) =>
       trx.selectFrom('plan_sheet').select('status').where('site_id', '=', siteId).where('plan_id', '=', siteId).where('plan_version', '=', 1).where('paper', '=', 'A4').where('content_hash', '=', 'h'),
+    booking_state_stale: (trx, siteId) =>
+      trx.selectFrom('booking_state').select('booking_id').where('site_id', '=', siteId).where('stale', '=', 1).where('recheck_at', '<=', day).orderBy('recheck_at').orderBy('booking_id').limit(100),
+    check_result_pkey: (trx, siteId) =>
+      trx.selectFrom('check_result').select('data').where('site_id', '=', siteId).where('booking_id', '=', siteId).orderBy('number', 'desc').limit(1),
+    scanner_session_time: (trx, siteId) =>
+      trx.selectFrom('scanner_session').select('id').where('site_id', '=', siteId).where('starts_at', '>=', day).where('starts_at', '<', day),
+    move_proposal_room: (trx, siteId) =>
+      trx.selectFrom('move_proposal').select('id').where('site_id', '=', siteId).where('scanner_id', '=', siteId).where('status', '=', 'open').where('scheduled_at', '>=', day),
+    booking_entry_time: (trx, siteId) =>
+      trx.selectFrom('booking_entry').select('note').where('site_id', '=', siteId).where('booking_id', '=', siteId).orderBy('written_at', 'desc').limit(50),
     audit_event_newest: (trx, siteId) =>
       trx.selectFrom('audit_event').select('id').where('site_id', '=', siteId).orderBy('at', 'desc').orderBy('id', 'desc').limit(50),
     mail_outbox_newest: (trx, siteId) =>

@@ -3,6 +3,7 @@ import type { SiteTransaction } from '@/db/client';
 import type { BookingRecord, BookingState } from '@/lib/domain/booking/booking';
 import type { BodyRegion, Verdict } from '@/lib/domain/case/model';
 import type { PlanState } from '@/lib/domain/plan/states';
+import type { NextActionKind, PreCheckResult } from '@/lib/domain/pre-check/result';
 
 /** A booking with the names lists show, its state and its newest plan. */
 export interface BookingOverview extends BookingRecord {
@@ -12,9 +13,14 @@ export interface BookingOverview extends BookingRecord {
   readonly planId: string | null;
   readonly planShortCode: string | null;
   readonly changedAt: Date;
+  /** YYYY-MM-DD of surgery that changes the body's size, or ''. */
+  readonly surgeryOn: string;
+  readonly version: number;
+  /** A move is proposed and the booking system has not followed yet. */
+  readonly moveProposed: boolean;
 }
 
-function overviews(trx: SiteTransaction, siteId: string) {
+export function overviews(trx: SiteTransaction, siteId: string) {
   return trx
     .selectFrom('booking as b')
     .innerJoin('scanner as s', (join) => join.onRef('s.site_id', '=', 'b.site_id').onRef('s.id', '=', 'b.booked_scanner_id'))
@@ -33,18 +39,22 @@ function overviews(trx: SiteTransaction, siteId: string) {
           .as('n'),
       (join) => join.onTrue(),
     )
+    .leftJoin('move_proposal as m', (join) =>
+      join.onRef('m.site_id', '=', 'b.site_id').onRef('m.booking_id', '=', 'b.id').on('m.status', '=', 'open'),
+    )
     .select([
       'b.site_id', 'b.id', 'b.accession', 'b.scheduled_at', 'b.slot_minutes', 'b.body_region', 'b.booked_scanner_id',
       'b.protocol_id', 's.name as scanner_name', 'p.name as protocol_name', 't.verdict_worst', 't.plan_state',
-      't.minutes_needed', 't.changed_at', 'n.id as plan_id', 'n.short_code',
+      't.minutes_needed', 't.changed_at', 'n.id as plan_id', 'n.short_code', 'b.surgery_on', 'b.version', 't.result',
+      't.result_rank', 't.minutes_over', 't.stale', 't.next_kind', 't.next_text', 't.escalation', 'm.id as move_id',
     ])
     .where('b.site_id', '=', siteId);
 }
 
-type OverviewRow = Awaited<ReturnType<ReturnType<typeof overviews>['execute']>>[number];
+export type OverviewRow = Awaited<ReturnType<ReturnType<typeof overviews>['execute']>>[number];
 
 /** Lists filter and sort on NOT NULL columns, so '' and 0 stand for "not known" in the table. */
-function toOverview(row: OverviewRow): BookingOverview {
+export function toOverview(row: OverviewRow): BookingOverview {
   return {
     siteId: row.site_id,
     id: row.id,
@@ -60,10 +70,22 @@ function toOverview(row: OverviewRow): BookingOverview {
       ...(row.verdict_worst === '' ? {} : { verdict: row.verdict_worst as Verdict }),
       ...(row.plan_state === '' ? {} : { planState: row.plan_state as PlanState }),
       ...(row.minutes_needed === 0 ? {} : { minutesNeeded: row.minutes_needed }),
+      ...(row.result === '' ? {} : {
+        check: {
+          result: row.result as PreCheckResult,
+          minutesOver: row.minutes_over,
+          next: { kind: row.next_kind as NextActionKind, text: row.next_text },
+        },
+      }),
+      stale: row.stale === 1,
+      ...(row.escalation === '' ? {} : { escalation: row.escalation as 'open' | 'decided' }),
     },
     planId: row.plan_id,
     planShortCode: row.short_code,
     changedAt: row.changed_at,
+    surgeryOn: row.surgery_on,
+    version: row.version,
+    moveProposed: row.move_id !== null,
   };
 }
 
@@ -99,26 +121,6 @@ export async function findBooking(trx: SiteTransaction, siteId: string, id: stri
 /** Holds the booking's row until the transaction ends: what is made for one booking follows instead of racing. */
 export async function lockBooking(trx: SiteTransaction, siteId: string, id: string): Promise<void> {
   await trx.selectFrom('booking').select('id').where('site_id', '=', siteId).where('id', '=', id).forUpdate().execute();
-}
-
-/** Bookings from a moment on that have no plan yet: their state follows scanner, protocol and policy. */
-export async function listUnplannedBookingIds(
-  trx: SiteTransaction,
-  siteId: string,
-  filter: { readonly from: Date; readonly scannerId?: string; readonly protocolId?: string },
-): Promise<string[]> {
-  let query = trx
-    .selectFrom('booking as b')
-    .leftJoin('plan as n', (join) => join.onRef('n.site_id', '=', 'b.site_id').onRef('n.booking_id', '=', 'b.id'))
-    .select('b.id')
-    .where('b.site_id', '=', siteId)
-    .where('b.scheduled_at', '>=', filter.from)
-    .where('n.id', 'is', null)
-    .orderBy('b.scheduled_at')
-    .orderBy('b.id');
-  if (filter.scannerId) query = query.where('b.booked_scanner_id', '=', filter.scannerId);
-  if (filter.protocolId) query = query.where('b.protocol_id', '=', filter.protocolId);
-  return (await query.execute()).map(({ id }) => id);
 }
 
 export async function accessionTaken(trx: SiteTransaction, siteId: string, accession: string): Promise<boolean> {
@@ -159,11 +161,12 @@ export async function insertBooking(
   return id;
 }
 
+/** The part of the state that follows sizes and plan at once; the check itself comes behind. */
 export async function writeBookingState(
   trx: SiteTransaction,
   siteId: string,
   bookingId: string,
-  state: BookingState,
+  state: Pick<BookingState, 'verdict' | 'planState' | 'minutesNeeded'>,
   now: Date,
 ): Promise<void> {
   await trx
@@ -178,4 +181,35 @@ export async function writeBookingState(
     .where('site_id', '=', siteId)
     .where('booking_id', '=', bookingId)
     .execute();
+}
+
+/** @returns false when the version is not the newest any more */
+export async function changeBooking(
+  trx: SiteTransaction,
+  siteId: string,
+  id: string,
+  expectedVersion: number,
+  to: Pick<BookingRecord, 'scheduledAt' | 'slotMinutes' | 'scannerId' | 'protocolId' | 'region'>,
+  now: Date,
+): Promise<boolean> {
+  const changed = await trx
+    .updateTable('booking')
+    .set({
+      scheduled_at: to.scheduledAt, slot_minutes: to.slotMinutes, booked_scanner_id: to.scannerId, protocol_id: to.protocolId,
+      body_region: to.region, version: expectedVersion + 1,
+    })
+    .where('site_id', '=', siteId).where('id', '=', id).where('version', '=', expectedVersion).executeTakeFirst();
+  if (changed.numUpdatedRows !== 1n) return false;
+  await trx.updateTable('booking_state').set({ changed_at: now }).where('site_id', '=', siteId).where('booking_id', '=', id).execute();
+  return true;
+}
+
+export async function setSurgery(trx: SiteTransaction, siteId: string, id: string, surgeryOn: string): Promise<void> {
+  await trx.updateTable('booking').set({ surgery_on: surgeryOn }).where('site_id', '=', siteId).where('id', '=', id).execute();
+}
+
+export async function setEscalation(trx: SiteTransaction, siteId: string, id: string, escalation: 'open' | 'decided', now: Date): Promise<void> {
+  await trx
+    .updateTable('booking_state').set({ escalation, changed_at: now })
+    .where('site_id', '=', siteId).where('booking_id', '=', id).execute();
 }

@@ -1,5 +1,6 @@
 import type { Assessment, BodyRegion, Verdict } from '@/lib/domain/case/model';
 import type { PlanState } from '@/lib/domain/plan/states';
+import type { NextActionKind, PreCheckResult } from '@/lib/domain/pre-check/result';
 
 export interface BookingRecord {
   readonly siteId: string;
@@ -17,6 +18,16 @@ export interface BookingState {
   readonly verdict?: Verdict;
   readonly planState?: PlanState;
   readonly minutesNeeded?: number;
+  /** What the last check came to; absent until the first. */
+  readonly check?: {
+    readonly result: PreCheckResult;
+    readonly minutesOver: number;
+    readonly next: { readonly kind: NextActionKind; readonly text: string };
+  };
+  /** Something it rests on changed since: the next check is on its way. */
+  readonly stale?: boolean;
+  /** A lead was asked to decide, or has. */
+  readonly escalation?: 'open' | 'decided';
 }
 
 /** From the one that stops a scan to the one that needs nothing. */

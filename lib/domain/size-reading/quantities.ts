@@ -7,7 +7,7 @@ export const QUANTITIES = [
   'extent-right-mm', 'extent-left-mm', 'extent-anterior-mm', 'extent-posterior-mm', 'extent-superior-mm',
   'extent-inferior-mm', 'breadth-mm', 'depth-mm', 'girth-cm', 'hip-girth-cm', 'arm-breadth-mm', 'arm-depth-mm',
   'arm-gap-mm', 'arms-position', 'weight-kg', 'height-cm', 'sex', 'breath-hold-s', 'breath-period-s',
-  'lateral-offset-mm',
+  'lateral-offset-mm', 'hip-breadth-mm', 'shoulder-breadth-mm', 'elbow-breadth-mm',
 ] as const;
 
 export type SizeQuantity = (typeof QUANTITIES)[number];
@@ -43,4 +43,7 @@ export const QUANTITY_FACTS: Readonly<Record<SizeQuantity, QuantityFacts>> = {
   'breath-hold-s': { label: 'longest breath-hold', unit: 's', min: 0, max: 60 },
   'breath-period-s': { label: 'breath period', unit: 's', min: 1, max: 15 },
   'lateral-offset-mm': { label: 'mid-line to the left of the scanner’s', unit: 'mm', min: 0, max: 300 },
+  'hip-breadth-mm': { label: 'hip breadth', unit: 'mm', min: 100, max: 1200 },
+  'shoulder-breadth-mm': { label: 'shoulder breadth', unit: 'mm', min: 150, max: 1000 },
+  'elbow-breadth-mm': { label: 'breadth over the elbows, arms up', unit: 'mm', min: 150, max: 1200 },
 };

@@ -2,6 +2,7 @@ import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
 import type { BodyRegion, Verdict } from '@/lib/domain/case/model';
 import type { PlanState } from '@/lib/domain/plan/states';
+import type { NextActionKind, PreCheckResult } from '@/lib/domain/pre-check/result';
 import type { PlanView } from '@/lib/schemas/plan';
 import type { KeepClearRequestView } from '@/lib/schemas/keep-clear-request';
 import type { PolicyView } from '@/lib/schemas/site-policy';
@@ -65,6 +66,18 @@ export interface BookingListItem {
   /** Scan minutes of all sequences; absent until worked out. */
   readonly minutesNeeded?: number;
   readonly changedAt: string;
+  /** What the last pre-check came to; absent until the first. */
+  readonly result?: PreCheckResult;
+  /** Minutes beyond the slot, set-up included; absent until checked. */
+  readonly minutesOver?: number;
+  readonly next?: { readonly kind: NextActionKind; readonly text: string };
+  /** Something it rests on changed since; the next check is on its way. */
+  readonly stale: boolean;
+  readonly escalation?: 'open' | 'decided';
+  readonly moveProposed: boolean;
+  /** YYYY-MM-DD of surgery that changes the body's size; absent: none known. */
+  readonly surgeryOn?: string;
+  readonly version: number;
 }
 
 export interface BookingPage {

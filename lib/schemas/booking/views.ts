@@ -1,6 +1,7 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
 import { PLAN_STATES } from '@/lib/domain/plan/states';
+import { NEXT_ACTION_KINDS, PRE_CHECK_RESULTS } from '@/lib/domain/pre-check/result';
 import type { BenchView, BookingListItem, BookingPage } from '@/lib/schemas/booking';
 import { VERDICTS } from '@/lib/schemas/case/assessment';
 import { REGIONS } from '@/lib/schemas/case/patient';
@@ -27,6 +28,14 @@ export const bookingListItemSchema = z.strictObject({
   planShortCode: z.string().optional(),
   minutesNeeded: z.number().describe('Scan minutes of all sequences.').optional(),
   changedAt: z.iso.datetime(),
+  result: z.enum(PRE_CHECK_RESULTS).describe('What the last pre-check came to; left out until the first. A planning estimate.').optional(),
+  minutesOver: z.number().describe('Minutes beyond the slot, set-up included.').optional(),
+  next: z.strictObject({ kind: z.enum(NEXT_ACTION_KINDS), text: z.string() }).optional(),
+  stale: z.boolean().describe('Something the check rests on changed since; the next one is on its way.'),
+  escalation: z.enum(['open', 'decided']).optional(),
+  moveProposed: z.boolean().describe('A move is proposed; what is booked here has not followed yet.'),
+  surgeryOn: z.iso.date().optional(),
+  version: z.int(),
 }) satisfies z.ZodType<BookingListItem>;
 
 export const bookingPageSchema = z.strictObject({

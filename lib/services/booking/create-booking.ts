@@ -12,6 +12,7 @@ import { parseInput } from '@/lib/schemas/parse-input';
 import { recordAudit } from '../audit/record-audit';
 import { nowOf, type ServiceContext } from '../context';
 import { orNameTaken } from '../name-taken';
+import { bookingsChanged } from '../pre-check/mark-changed';
 import { toBookingListItem } from './to-booking-view';
 
 async function requireAccession(trx: SiteTransaction, siteId: string, accession: string): Promise<void> {
@@ -50,6 +51,7 @@ export async function createBooking(context: ServiceContext, input: unknown): Pr
       };
       const id = await insertBooking(trx, booking, nowOf(context));
       await recordAudit(trx, context, { action: 'booking.create', subjectType: 'booking', subjectId: id, fields: ['created'] });
+      await bookingsChanged(trx, siteId, [id], nowOf(context));
       const created = await findBooking(trx, siteId, id);
       authorise(actor, 'booking.create', created);
       return toBookingListItem(created);

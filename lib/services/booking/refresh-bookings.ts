@@ -1,28 +1,34 @@
 import { inTransaction } from '@/db/client';
-import { listUnplannedBookingIds } from '@/db/queries/booking/bookings';
+import { listStale, putOff } from '@/db/queries/pre-check/check-results';
 import { authorise, systemActor } from '@/lib/domain/access';
-import type { JobPayload } from '@/lib/jobs';
-import { refreshBookingState } from './refresh-booking-state';
+import { enqueue, type JobPayload } from '@/lib/jobs';
+import { checkBooking } from '../pre-check/check-booking';
+import { refreshVerdict } from './refresh-booking-state';
+
+/** Bookings of one job: a site with thousands to check takes turns with the others. */
+const AT_A_TIME = 100;
+const RETRY_MS = 5 * 60_000;
 
 /**
- * Works out again what lists show of the bookings from today on that rest on a scanner, a protocol or the policy.
- * Each booking is a transaction of its own, so a stop in between loses nothing and a second run only repeats.
- * A booking that has a plan shows the plan, which was worked out with what it names.
- * @returns how many were worked out
+ * Checks the bookings of a site whose check does not stand any more. Each is a transaction of its own, so a stop in
+ * between loses nothing and a second run only goes on. One that cannot be checked waits and holds nobody up.
+ * @returns how many were looked at
  */
 export async function refreshBookings(job: JobPayload<'refresh-bookings'>, now: Date = new Date()): Promise<number> {
-  const { siteId, scannerId, protocolId } = job;
+  const { siteId } = job;
   authorise(systemActor(siteId, 'refresh-bookings'), 'booking.check', { siteId });
-  const from = new Date(`${now.toISOString().slice(0, 10)}T00:00:00Z`);
-  const ids = await inTransaction(siteId, (trx) =>
-    listUnplannedBookingIds(trx, siteId, {
-      from,
-      ...(scannerId ? { scannerId } : {}),
-      ...(protocolId ? { protocolId } : {}),
-    }),
-  );
-  for (const bookingId of ids) {
-    await inTransaction(siteId, (trx) => refreshBookingState(trx, { siteId, bookingId, now }));
+  const due = await inTransaction(siteId, (trx) => listStale(trx, siteId, now, AT_A_TIME));
+  for (const bookingId of due) {
+    try {
+      await inTransaction(siteId, async (trx) => {
+        const checked = await checkBooking(trx, siteId, bookingId, now);
+        if (checked === 'checked') await refreshVerdict(trx, { siteId, bookingId, now });
+      });
+    } catch (error) {
+      console.error(`check of booking ${bookingId}: ${(error as Error).message}`);
+      await inTransaction(siteId, (trx) => putOff(trx, siteId, bookingId, new Date(now.getTime() + RETRY_MS)));
+    }
   }
-  return ids.length;
+  if (due.length === AT_A_TIME) await inTransaction(siteId, (trx) => enqueue(trx, 'refresh-bookings', { siteId }));
+  return due.length;
 }

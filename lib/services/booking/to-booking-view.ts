@@ -2,6 +2,7 @@ import type { BookingOverview } from '@/db/queries/booking/bookings';
 import type { BookingListItem } from '@/lib/schemas/booking';
 
 export function toBookingListItem(booking: BookingOverview): BookingListItem {
+  const { check, stale, ...state } = booking.state;
   return {
     id: booking.id,
     accession: booking.accession,
@@ -12,7 +13,12 @@ export function toBookingListItem(booking: BookingOverview): BookingListItem {
     scannerName: booking.scannerName,
     protocolId: booking.protocolId,
     protocolName: booking.protocolName,
-    ...booking.state,
+    ...state,
+    ...(check ? { result: check.result, minutesOver: check.minutesOver, next: check.next } : {}),
+    stale: stale ?? true,
+    moveProposed: booking.moveProposed,
+    ...(booking.surgeryOn === '' ? {} : { surgeryOn: booking.surgeryOn }),
+    version: booking.version,
     ...(booking.planId === null ? {} : { planId: booking.planId }),
     ...(booking.planShortCode === null ? {} : { planShortCode: booking.planShortCode }),
     changedAt: booking.changedAt.toISOString(),

@@ -4,12 +4,12 @@ import { authorise } from '@/lib/domain/access';
 import { changedFields } from '@/lib/domain/document/changed-fields';
 import { staleVersion } from '@/lib/domain/errors';
 import type { ProtocolRecord } from '@/lib/domain/protocol/document';
-import { enqueue } from '@/lib/jobs';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { editProtocolInput, type ProtocolForm, type ProtocolView } from '@/lib/schemas/protocol';
 import { recordAudit } from '../audit/record-audit';
 import { authorOf } from '../author';
-import type { ServiceContext } from '../context';
+import { nowOf, type ServiceContext } from '../context';
+import { setupChanged } from '../pre-check/mark-changed';
 import { nameTaken, orNameTaken } from '../name-taken';
 import { toProtocolDocuments, toProtocolView } from './to-protocol-view';
 
@@ -47,7 +47,7 @@ export async function editProtocol(context: ServiceContext, input: unknown): Pro
       authorise(actor, 'protocol.edit', after);
       if (!added) throw staleVersion(after.version);
       await recordAudit(trx, context, { action: 'protocol.edit', subjectType: 'protocol', subjectId: id, fields });
-      await enqueue(trx, 'refresh-bookings', { siteId, protocolId: id });
+      await setupChanged(trx, siteId, { protocolId: id }, nowOf(context));
       return toProtocolView(after);
     }),
   );

@@ -6,6 +6,7 @@ import { parseInput } from '@/lib/schemas/parse-input';
 import { archiveScannerInput, type ScannerView } from '@/lib/schemas/scanner';
 import { recordAudit } from '../audit/record-audit';
 import { nowOf, type ServiceContext } from '../context';
+import { setupChanged } from '../pre-check/mark-changed';
 import { toScannerView } from './to-scanner-view';
 
 async function setArchived(context: ServiceContext, input: unknown, archived: boolean): Promise<ScannerView> {
@@ -24,6 +25,7 @@ async function setArchived(context: ServiceContext, input: unknown, archived: bo
     await recordAudit(trx, context, {
       action: 'scanner.edit', subjectType: 'scanner', subjectId: id, fields: [archived ? 'archived' : 'restored'],
     });
+    await setupChanged(trx, siteId, {}, nowOf(context));
     return toScannerView(after);
   });
 }

@@ -5,8 +5,9 @@ import { createScannerInput, type ScannerView } from '@/lib/schemas/scanner';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { recordAudit } from '../audit/record-audit';
 import { authorOf } from '../author';
-import type { ServiceContext } from '../context';
+import { nowOf, type ServiceContext } from '../context';
 import { nameTaken, orNameTaken } from '../name-taken';
+import { setupChanged } from '../pre-check/mark-changed';
 import { toScannerView } from './to-scanner-view';
 
 /** Adds a scanner with its limits. */
@@ -21,6 +22,8 @@ export async function createScanner(context: ServiceContext, input: unknown): Pr
       if (await scannerNameTaken(trx, siteId, name)) throw nameTaken('scanner.name', name);
       const id = await insertScanner(trx, { siteId, document: { schemaVersion: 1, ...form }, createdBy: authorOf(actor) });
       await recordAudit(trx, context, { action: 'scanner.edit', subjectType: 'scanner', subjectId: id, fields: ['created'] });
+      // It may be where bookings that fit nowhere can go.
+      await setupChanged(trx, siteId, {}, nowOf(context));
       const created = await findScanner(trx, siteId, id);
       authorise(actor, 'scanner.read', created);
       return toScannerView(created);

@@ -4,12 +4,12 @@ import { authorise } from '@/lib/domain/access';
 import { changedFields } from '@/lib/domain/document/changed-fields';
 import { staleVersion } from '@/lib/domain/errors';
 import type { ScannerDocument } from '@/lib/domain/scanner/document';
-import { enqueue } from '@/lib/jobs';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { editScannerInput, type ScannerView } from '@/lib/schemas/scanner';
 import { recordAudit } from '../audit/record-audit';
 import { authorOf } from '../author';
-import type { ServiceContext } from '../context';
+import { nowOf, type ServiceContext } from '../context';
+import { setupChanged } from '../pre-check/mark-changed';
 import { nameTaken, orNameTaken } from '../name-taken';
 import { toScannerView } from './to-scanner-view';
 
@@ -34,7 +34,7 @@ export async function editScanner(context: ServiceContext, input: unknown): Prom
       authorise(actor, 'scanner.edit', after);
       if (!added) throw staleVersion(after.version);
       await recordAudit(trx, context, { action: 'scanner.edit', subjectType: 'scanner', subjectId: id, fields });
-      await enqueue(trx, 'refresh-bookings', { siteId, scannerId: id });
+      await setupChanged(trx, siteId, {}, nowOf(context));
       return toScannerView(after);
     }),
   );

@@ -3,12 +3,12 @@ import { addPolicyVersion, findPolicy } from '@/db/queries/site-policy/policies'
 import { authorise } from '@/lib/domain/access';
 import { changedFields } from '@/lib/domain/document/changed-fields';
 import { ServiceError, staleVersion } from '@/lib/domain/errors';
-import { enqueue } from '@/lib/jobs';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { editPolicyInput, type PolicyView } from '@/lib/schemas/site-policy';
 import { recordAudit } from '../audit/record-audit';
 import { authorOf } from '../author';
-import type { ServiceContext } from '../context';
+import { nowOf, type ServiceContext } from '../context';
+import { setupChanged } from '../pre-check/mark-changed';
 import { effectivePolicy } from './effective-policy';
 
 /** Every edit is a new version; a form without a change makes none. */
@@ -31,7 +31,7 @@ export async function editPolicy(context: ServiceContext, input: unknown): Promi
     if (!added) throw staleVersion(after?.version ?? version);
     if (!after) throw new ServiceError('not-found');
     await recordAudit(trx, context, { action: 'policy.edit', subjectType: 'site-policy', subjectId: siteId, fields });
-    await enqueue(trx, 'refresh-bookings', { siteId });
+    await setupChanged(trx, siteId, {}, nowOf(context));
     return effectivePolicy(after);
   });
 }

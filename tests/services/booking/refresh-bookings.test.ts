@@ -26,40 +26,49 @@ const protocolForm = ({ protocol }: EquippedSite) => ({
 });
 
 describe('what lists show of a booking', () => {
-  it('is worked out again after its protocol, its scanner or the policy changed', async () => {
+  it('is worked out again after its protocol, its scanner or the policy changed, and shown as stale until then', async () => {
     const here = await equipSite();
     await sizeBooking(here);
-    const verdict = async () => (await getBooking(as(here.radiographer), { id: here.booking.id })).verdict;
-    expect(await verdict()).toBe('fold-in-keep-clear');
+    const { siteId } = here.site;
+    const read = () => getBooking(as(here.radiographer), { id: here.booking.id });
+    expect(await read()).toMatchObject({ verdict: 'fold-in-keep-clear', stale: true });
+    expect(await refreshBookings({ siteId }, NOW)).toBe(1);
+    expect(await read()).toMatchObject({ verdict: 'fold-in-keep-clear', stale: false, result: 'size-needed' });
+    expect(await refreshBookings({ siteId }, NOW)).toBe(0);
 
     await editProtocol(as(here.lead), { id: here.protocol.id, expectedVersion: 1, form: protocolForm(here) });
-    await editScanner(as(here.lead), { id: here.scanner.id, expectedVersion: 1, form: scannerForm({ boreDiameterMm: 650 }) });
-    await editPolicy(as(here.lead), { expectedVersion: 0, form: { ...policyForm(), sureAt: 0.9 } });
-    const { siteId } = here.site;
-    const jobs = await waiting(here);
-    expect(jobs).toEqual([{ siteId, protocolId: here.protocol.id }, { siteId, scannerId: here.scanner.id }, { siteId }]);
+    expect(await read()).toMatchObject({ verdict: 'fold-in-keep-clear', stale: true });
+    expect(await refreshBookings({ siteId }, NOW)).toBe(1);
+    expect(await read()).toMatchObject({ verdict: 'no-fold-expected', stale: false });
 
-    expect(await verdict()).toBe('fold-in-keep-clear');
-    for (const job of jobs) expect(await refreshBookings(job, NOW)).toBe(1);
-    expect(await verdict()).toBe('no-fold-expected');
+    await editScanner(as(here.lead), { id: here.scanner.id, expectedVersion: 1, form: scannerForm({ boreDiameterMm: 650 }) });
+    expect(await refreshBookings({ siteId }, NOW)).toBe(1);
+    await editPolicy(as(here.lead), { expectedVersion: 0, form: { ...policyForm(), sureAt: 0.9 } });
+    expect(await refreshBookings({ siteId }, NOW)).toBe(1);
+    const jobs = await waiting(here);
+    expect(jobs.length).toBeGreaterThanOrEqual(5);
+    for (const job of jobs) expect(job).toEqual({ siteId });
   });
 
-  it('stays with the plan once there is one, and with the past', async () => {
+  it('stays with the plan once there is one, and a change of the set-up leaves the past as it was', async () => {
     const here = await equipSite();
     await sizeBooking(here);
     const { siteId } = here.site;
-    expect(await refreshBookings({ siteId }, new Date('2026-06-01T00:00:00Z'))).toBe(0);
+    await refreshBookings({ siteId }, NOW);
+    const june = { ...as(here.lead), now: new Date('2026-06-01T00:00:00Z') };
+    await editPolicy(june, { expectedVersion: 0, form: { ...policyForm(), sureAt: 0.9 } });
+    expect(await refreshBookings({ siteId }, june.now)).toBe(0);
     const bench = await openBench(as(here.radiographer), { bookingId: here.booking.id });
     await savePlan(as(here.radiographer), planBody(bench));
-    expect(await refreshBookings({ siteId }, NOW)).toBe(0);
+    const planned = await getBooking(as(here.radiographer), { id: here.booking.id });
+    await refreshBookings({ siteId }, NOW);
+    expect(await getBooking(as(here.radiographer), { id: here.booking.id })).toMatchObject({ verdict: planned.verdict, planState: 'draft' });
   });
 
-  it('touches no other scanner, protocol or site', async () => {
+  it('is checked for this site alone', async () => {
     const [here, other] = [await equipSite(), await equipSite()];
     await sizeBooking(other);
     const before = await getBooking(as(other.radiographer), { id: other.booking.id });
-    expect(await refreshBookings({ siteId: here.site.siteId, scannerId: other.scanner.id }, NOW)).toBe(0);
-    expect(await refreshBookings({ siteId: here.site.siteId, protocolId: other.protocol.id }, NOW)).toBe(0);
     expect(await refreshBookings({ siteId: here.site.siteId }, NOW)).toBe(1);
     expect(await getBooking(as(other.radiographer), { id: other.booking.id })).toEqual(before);
   });

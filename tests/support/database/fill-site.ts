@@ -144,8 +144,45 @@ async function insertAll(
     .values({ site_id, plan_id: ids.planId, plan_version: 1, paper: 'A4', content_hash: '0'.repeat(64), requested_by: by })
     .execute();
   await trx
+    .insertInto('check_result')
+    .values({
+      site_id, booking_id: ids.bookingId, number: 1, result: 'as-booked', data: DOCUMENT, engine_version: '1', policy_version: 1, input_hash: 'h',
+    })
+    .execute();
+  await trx
+    .insertInto('scanner_session')
+    .values({
+      site_id, scanner_id: ids.scannerId, starts_at: later, ends_at: new Date(later.getTime() + 3_600_000), created_by: by,
+    })
+    .execute();
+  await trx
+    .insertInto('move_proposal')
+    .values({
+      site_id, booking_id: ids.bookingId, scanner_id: ids.scannerId, scheduled_at: later, slot_minutes: 60,
+      booked_scanner_id: ids.scannerId, booked_at: later, booked_slot_minutes: 45, proposed_by: by,
+    })
+    .execute();
+  await trx
+    .insertInto('booking_entry')
+    .values({ site_id, booking_id: ids.bookingId, kind: 'note', note: 'Seen', data: DOCUMENT, actor_kind: 'user', actor_id: by })
+    .execute();
+  await trx
     .insertInto('mail_outbox')
     .values({ site_id, message_id: `<${by}@filled.example>`, kind: 'invitation', to_user_id: by, payload: DOCUMENT })
+    .execute();
+  const batch_id = randomUUID();
+  await trx.insertInto('import_settings').values({ site_id, data: DOCUMENT, saved_by: by }).execute();
+  await trx.insertInto('import_batch').values({ site_id, id: batch_id, format: 'csv', created_by: by }).execute();
+  await trx
+    .insertInto('import_row')
+    .values({
+      site_id, batch_id, number: 1, accession: 'F2', scheduled_at: later, slot_minutes: 45, scanner_id: ids.scannerId,
+      protocol_id: ids.protocolId, data: DOCUMENT,
+    })
+    .execute();
+  await trx
+    .insertInto('size_request')
+    .values({ site_id, booking_id: ids.bookingId, token_hash: `s-${site_id}`, expires_at: later, asked_by: by })
     .execute();
   await trx
     .insertInto('audit_event')
