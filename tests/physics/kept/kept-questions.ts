@@ -1,5 +1,6 @@
 /** Questions whose answers are kept under fixtures/golden/engine: wide rather than deep, every region, family and route. */
-import { assess, drawSection, foldProbability, simulateImage } from '@/lib/physics';
+import { assess, drawSection, foldProbability, rankRemedies, simulateImage } from '@/lib/physics';
+import type { Assessment } from '@/lib/physics/model/assessment';
 import { buildBody } from '@/lib/physics/body/build-body';
 import { checkBore } from '@/lib/physics/bore/check-bore';
 import { sectionFrame } from '@/lib/physics/geometry/section-frame';
@@ -189,9 +190,13 @@ function sizes(): unknown {
 }
 
 function bores(): unknown {
+  const bore = (...question: Parameters<typeof checkBore>) => {
+    const { tightest, sections, unknown, chordAtTableMm } = checkBore(...question);
+    return { tightest, sections, unknown, chordAtTableMm };
+  };
   return ARMS.flatMap((position) =>
     REGIONS.map((region, i) =>
-      checkBore(
+      bore(
         patientOf(region, {
           arms: withArms(position),
           position: i % 2 === 0 ? 'head-first-supine' : 'feet-first-prone',
@@ -321,13 +326,77 @@ function profiles(): unknown {
   });
 }
 
-/** Without words, which may be put better any day: reasons by their code. */
-const shortened = ({ slab, reasons, assumptions, ...rest }: ReturnType<typeof assess>) => ({
+/** The figures in a sentence. The words around them may be put better any day. */
+const figures = (text: string): readonly string[] => text.match(/\d+(?:\.\d+)?/g) ?? [];
+
+const shortened = ({ slab, reasons, assumptions, ...rest }: Assessment) => ({
   ...rest,
-  reasons: reasons.map(({ code }) => code),
-  assumptions: assumptions.map(({ field }) => field),
+  reasons: reasons.map(({ code, text }) => [code, ...figures(text)]),
+  assumptions: assumptions.map(({ field, used }) => [field, ...figures(used)]),
   slab: slab && { ...slab, partitions: slab.partitions.map(({ alias, signal }) => [alias, signal]) },
 });
+
+/** Cases whose remedies differ: strict and lenient policies, short breath-holds, coarse steps, coils, doubtful sizes. */
+function remedies(): unknown {
+  const strict = typicalPolicy({ strictBreathHold: true, tolerateFoldOutsidePct: 2, sureAt: 0.9 });
+  const cases: Case[] = [2, 5, 9, 12, 17, 23].map((seed, i) => {
+    const given = drawCase(seed);
+    return i % 2 === 0 ? given : { ...given, policy: strict };
+  });
+  const unsure = extentsOf({});
+  const coil = [
+    {
+      name: 'body array',
+      elements: [-150, -50, 50, 150].map((z) => ({ name: `at ${z}`, seesFromMm: z - 80, seesToMm: z + 80 })),
+    },
+  ];
+  cases.push(
+    typicalCase({
+      keepClear: LIVER_BOX,
+      patient: typicalPatient({ arms: withArms('down'), extents: { ...unsure, anterior: measured(172, 6) } }),
+      prescription: prescriptionOf('gradient-echo'),
+    }),
+    typicalCase({
+      keepClear: LIVER_BOX,
+      scanner: typicalScanner({ coils: coil, lineStep: { kind: 'percent', percent: 10 } }),
+      prescription: prescriptionOf('balanced'),
+    }),
+    typicalCase({
+      keepClear: LIVER_BOX,
+      policy: strict,
+      prescription: prescriptionOf('echo-train-spin-echo-3d'),
+    }),
+  );
+  return cases.map((given) => {
+    const { now: _, remedies: listed, notPossible, candidates } = rankRemedies(given);
+    return {
+      candidates,
+      remedies: listed.map(({ assessment, prescription: p, sentence, sideEffects, terms, ...rest }) => ({
+        ...rest,
+        terms: terms.map(({ kind, tenths }) => [kind, tenths]),
+        said: [...figures(sentence), ...sideEffects.flatMap(figures)],
+        set: [
+          p.acquiredLines,
+          p.fovPhaseMm,
+          p.fovReadoutMm,
+          p.linesAcrossFov,
+          p.readoutMatrix,
+          p.averages,
+          p.centreMm,
+          p.slices,
+          p.acceleration,
+          p.partialFourierPhase,
+          p.presaturation,
+          p.coilElements,
+        ],
+        verdict: assessment.verdict,
+        time: assessment.time,
+        detail: assessment.detail,
+      })),
+      notPossible: notPossible.map(({ key, reason }) => [key, reason.code, ...figures(reason.text)]),
+    };
+  });
+}
 
 function probabilities(): unknown {
   const unsure = (given: Case, spread: number): Case => {
@@ -361,6 +430,7 @@ export const KEPT: Readonly<Record<string, () => unknown>> = {
   drawings,
   profiles,
   probabilities,
+  remedies,
   'assessments-turned': () => turned().map((given) => shortened(assess(given))),
   'assessments-drawn': () => Array.from({ length: 40 }, (_, i) => shortened(assess(drawCase(i + 1)))),
   'assessments-margin': () =>
