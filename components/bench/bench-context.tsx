@@ -7,11 +7,17 @@ import type { BenchState } from './state/bench-state';
 import type { BenchStore } from './state/bench-store';
 import type { LiveAssessor } from './live/live-assessor';
 import type { SequenceResult } from './live/results';
+import type { ViewsEngine } from './live/views-engine';
+import type { BenchEngine } from './solve-all/solve-all';
 
 export interface BenchContextValue {
   readonly store: BenchStore;
   readonly live: LiveAssessor;
   readonly setting: BenchSetting;
+  /** The engine away from the main thread. */
+  readonly engine: BenchEngine;
+  /** What is only looked at, worked out in a Worker of its own. */
+  readonly views: ViewsEngine;
 }
 
 const BenchContext = createContext<BenchContextValue | null>(null);
@@ -39,8 +45,8 @@ export function useResult(id: string): SequenceResult {
   const { store, live, setting } = useBench();
   const read = () => live.read()[id];
   const result = useSyncExternalStore(live.subscribe, read, read);
-  const { document } = store.read();
-  return result ?? { question: caseOf(document, setting, sequenceById(document, id)) };
+  const { document, sureAt } = store.read();
+  return result ?? { question: caseOf(document, setting, sequenceById(document, id), sureAt) };
 }
 
 export function useActiveResult(): SequenceResult {

@@ -11,6 +11,7 @@ import { RemediesPanel } from './remedies-panel';
 import { SaveCell } from './saving/save-cell';
 import { SaveNotices } from './saving/save-notices';
 import { usePlanSaving } from './saving/use-plan-saving';
+import { SolveAll } from './solve-all/solve-all-panel';
 import { SequenceStrip } from './sequence-strip';
 import { VerdictLine } from './verdict-line';
 
@@ -23,6 +24,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
   return (
     <div className="flex flex-col xl:h-[calc(100dvh-3.5rem-1px)] xl:min-h-[40rem]">
       <SequenceStrip>{props.children}</SequenceStrip>
+      {props.mayEdit && <SolveAll />}
       <SaveNotices plan={plan} />
       <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)] lg:max-xl:grid-rows-[auto_1fr] xl:grid-cols-[19.5rem_minmax(0,1fr)_23.25rem]">
         <VerdictLine className="sticky top-0 z-20 border-b border-line bg-cloth lg:hidden" />

@@ -13,7 +13,10 @@ export function BookingHeading({ booking, scannerName, opening }: { booking: Boo
         </Link>
       </h1>
       <p className="text-sm text-ink-soft">
-        {scannerName}, {Math.round(opening / 10)} cm opening
+        {scannerName}, {Math.round(opening / 10)} cm opening ·{' '}
+        <Link href={`/bench/${booking.id}/at-scanner`} className="text-link">
+          at the scanner
+        </Link>
       </p>
     </>
   );

@@ -3,6 +3,7 @@ import type { BenchContextValue } from './bench-context';
 import { createLiveAssessor } from './live/live-assessor';
 import type { Results } from './live/results';
 import { startEngineWorker, type RunningEngine } from './live/start-engine-worker';
+import { createViewsEngine } from './live/views-engine';
 import type { BenchDocument, BenchSetting } from './state/bench-document';
 import { startBench } from './state/bench-state';
 import { createBenchStore } from './state/bench-store';
@@ -36,6 +37,7 @@ export interface RunningBench extends BenchContextValue {
 export function createBench({ document, setting, initial, activeId, stored, onFault }: BenchStart): RunningBench {
   const store = createBenchStore(startBench(document, activeId, stored ? document : null));
   let running: RunningEngine | null = null;
+  const views = createViewsEngine(onFault);
   const engine = () => (running ??= startEngineWorker(onFault)).engine;
   const live = createLiveAssessor({
     store,
@@ -53,12 +55,18 @@ export function createBench({ document, setting, initial, activeId, stored, onFa
     store,
     live,
     setting,
+    engine: { rank: (question) => engine().rank(question), assessAll: (questions) => engine().assessAll(questions) },
+    views,
     run() {
+      // Loaded while the network is there: the open bench keeps working when it drops.
+      engine();
+      views.engine();
       const stop = live.start();
       return () => {
         stop();
         running?.stop();
         running = null;
+        views.stop();
       };
     },
   };

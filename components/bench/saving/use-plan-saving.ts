@@ -105,8 +105,13 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
     }
     const { problem } = result;
     if (problem.code === 'conflict' && typeof problem.details?.currentVersion === 'number') {
-      const theirs = await getStoredPlan(put.id);
-      if (theirs) return setSaving({ kind: 'overtaken', theirs });
+      // Somebody else may have begun the plan of this booking under an id of their own: then theirs is the plan.
+      const { planId } = problem.details;
+      const theirs = await getStoredPlan(typeof planId === 'string' ? planId : put.id);
+      if (theirs) {
+        setIdentity((now) => ({ ...now, planId: theirs.id }));
+        return setSaving({ kind: 'overtaken', theirs });
+      }
     }
     setSaving({ kind: 'refused', problem });
   };
