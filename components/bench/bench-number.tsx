@@ -97,7 +97,7 @@ export function BenchNumber({ path, schema, step, ...shown }: BenchNumberProps) 
         <PlainNumber
           {...shown}
           name={path}
-          value={field.value as number}
+          value={(field.value as number | undefined) ?? Number.NaN}
           unit={facts.unit !== undefined && SAID_BY_LABEL.includes(facts.unit) ? undefined : facts.unit}
           min={facts.min ?? 0}
           max={facts.max ?? 1000}

@@ -2,15 +2,21 @@
 
 import { useCallback, useDeferredValue, useState } from 'react';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
-import type { Prescription } from '@/lib/physics/model/prescription';
+import type { Prescription, SequenceFamily } from '@/lib/physics/model/prescription';
 import { useBench, useBenchState } from './bench-context';
 import { BenchForm, withLeaf } from './bench-form';
-import { AccelerationGroup, OversamplingGroup, SlicesGroup, TimingGroup, WindowGroup } from './prescription-groups';
+import { AccelerationGroup } from './prescription/acceleration-group';
+import { OversamplingGroup } from './prescription/oversampling-group';
+import { PresaturationGroup } from './prescription/presaturation-group';
+import { ReceiveGroup } from './prescription/receive-group';
+import { SlicesGroup } from './prescription/slices-group';
+import { TimingGroup } from './prescription/timing-group';
+import { WindowGroup } from './prescription/window-group';
 import { sequenceById } from './state/bench-document';
 import type { BenchState } from './state/bench-state';
 import { FAMILIES_3D } from './state/prescription-edit';
 
-export type GroupKey = 'window' | 'oversampling' | 'slices' | 'timing' | 'acceleration';
+export type GroupKey = 'window' | 'oversampling' | 'slices' | 'timing' | 'acceleration' | 'presaturation' | 'receive';
 
 /** What is usually changed first in a family, so that its group is the one that lies open. */
 function firstGroup({ family, breathing }: Prescription): GroupKey {
@@ -31,7 +37,9 @@ function SequenceForm({ id, source }: { id: string; source: string }) {
   const select = useCallback((state: BenchState) => sequenceById(state.document, id).prescription, [id]);
   // Summaries and derived figures follow a drag when there is time for it; the picture comes first.
   const prescription = useDeferredValue(useBenchState(select));
-  const [open, setOpen] = useState<GroupKey | null>(firstGroup(prescription));
+  // Another family has another first group; within one, what a person opened stays open.
+  const [chosen, setChosen] = useState<{ family: SequenceFamily; key: GroupKey | null } | null>(null);
+  const open = chosen?.family === prescription.family ? chosen.key : firstGroup(prescription);
   const onEdit = (path: string, value: unknown, step?: string) => {
     const now = sequenceById(store.read().document, id).prescription;
     const after = withLeaf(now, path.split('.'), value);
@@ -41,7 +49,7 @@ function SequenceForm({ id, source }: { id: string; source: string }) {
   const group = (key: GroupKey) => ({
     prescription,
     open: open === key,
-    onOpenChange: (next: boolean) => setOpen(next ? key : null),
+    onOpenChange: (next: boolean) => setChosen({ family: prescription.family, key: next ? key : null }),
   });
   return (
     <BenchForm schema={prescriptionSchema} select={select} label={`Prescription, ${prescription.name}`} onEdit={onEdit}>
@@ -54,6 +62,8 @@ function SequenceForm({ id, source }: { id: string; source: string }) {
       <SlicesGroup {...group('slices')} />
       <TimingGroup {...group('timing')} />
       <AccelerationGroup {...group('acceleration')} />
+      <PresaturationGroup {...group('presaturation')} />
+      <ReceiveGroup {...group('receive')} />
     </BenchForm>
   );
 }
