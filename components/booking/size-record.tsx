@@ -3,6 +3,7 @@ import { Figure } from '@/components/ui/figure';
 import { Notice } from '@/components/ui/notice';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
 import { QUANTITY_FACTS } from '@/lib/domain/size-reading/quantities';
+import { TAPE_SITE_LABELS } from '@/lib/domain/size-reading/tape-site';
 import { isMeasured, SOURCE_WORDS } from '@/lib/presentation/anatomy-words';
 import { formatDate } from '@/lib/presentation/moment';
 import type { SizeReadingView, SizeRecordView } from '@/lib/schemas/size-reading';
@@ -23,6 +24,10 @@ function ReadingValue({ reading }: { reading: SizeReadingView }) {
 function capital(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1);
 }
+
+/** A girth says where its tape went when that is known. */
+const sizeName = ({ quantity, tapeSite }: SizeReadingView): string =>
+  quantity === 'girth-cm' && tapeSite ? `girth ${TAPE_SITE_LABELS[tapeSite]}` : QUANTITY_FACTS[quantity].label;
 
 /** Every reading with how it was got, when, and its spread; newest first. Dotted: not measured. */
 export function SizeRecord({ record }: { record: SizeRecordView }) {

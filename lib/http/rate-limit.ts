@@ -44,3 +44,6 @@ export function rateLimit(
 
 /** Shared by the routes that write: far above what a person or an honest program does, far below what fills a disk. */
 export const writeLimit = rateLimit({ burst: 120, perMinute: 240 });
+
+/** Pieces of a file: the longest file is a few hundred of them, one after the other. */
+export const pieceLimit = rateLimit({ burst: 600, perMinute: 1200 });

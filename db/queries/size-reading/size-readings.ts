@@ -2,13 +2,14 @@ import { sql } from 'kysely';
 import type { SiteTransaction } from '@/db/client';
 import type { ReadingSource } from '@/lib/domain/case/model';
 import type { SizeQuantity } from '@/lib/domain/size-reading/quantities';
+import type { TapeSite } from '@/lib/domain/size-reading/tape-site';
 import type { SizeReading } from '@/lib/domain/size-reading/size-reading';
 
 /** All readings of a booking, newest first. They are only ever added, so the newest of a quantity is what counts. */
 export async function listSizeReadings(trx: SiteTransaction, siteId: string, bookingId: string): Promise<SizeReading[]> {
   const rows = await trx
     .selectFrom('size_reading')
-    .select(['id', 'quantity', 'value', 'source', 'spread', 'taken_on', 'recorded_at'])
+    .select(['id', 'quantity', 'value', 'source', 'spread', 'taken_on', 'tape_site', 'recorded_at'])
     .where('site_id', '=', siteId)
     .where('booking_id', '=', bookingId)
     .orderBy('recorded_at', 'desc')
@@ -21,6 +22,7 @@ export async function listSizeReadings(trx: SiteTransaction, siteId: string, boo
     source: row.source as ReadingSource,
     spread: row.spread,
     takenOn: row.taken_on,
+    ...(row.tape_site === '' ? {} : { tapeSite: row.tape_site as TapeSite }),
     recordedAt: row.recorded_at,
   }));
 }
@@ -45,6 +47,7 @@ export async function insertSizeReadings(
         source: reading.source,
         spread: reading.spread,
         taken_on: reading.takenOn,
+        tape_site: reading.tapeSite ?? '',
         recorded_by: recorded.by,
         recorded_at: recorded.at,
       })),

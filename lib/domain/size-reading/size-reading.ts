@@ -1,4 +1,5 @@
 import type { ReadingSource } from '@/lib/domain/case/model';
+import type { TapeSite } from '@/lib/domain/size-reading/tape-site';
 import type { SizeQuantity } from '@/lib/domain/size-reading/quantities';
 
 /** One number that was written down about a patient; never changed, only followed by a newer one. */
@@ -10,6 +11,8 @@ export interface SizeReading {
   readonly spread: number;
   /** YYYY-MM-DD. */
   readonly takenOn: string;
+  /** Where a girth's tape went, as far as it was said. */
+  readonly tapeSite?: TapeSite;
   readonly recordedAt: Date;
 }
 

@@ -10,6 +10,7 @@ import { patientSchema } from '@/lib/schemas/case/patient';
 import { policySchema } from '@/lib/schemas/case/policy';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import { scannerSchema } from '@/lib/schemas/case/scanner';
+import { bundleDoneSchema, commitImportBody, importDoneSchema, importStartedSchema, stagedRowsSchema, stageRowsBody, startImportInput } from '@/lib/schemas/import';
 import { outcomeListSchema, outcomeViewSchema, recordOutcomeBody } from '@/lib/schemas/outcome';
 import { requestSheetBody, sheetViewSchema } from '@/lib/schemas/plan-sheet';
 import { movePlanBody, savePlanBody, signOffBody } from '@/lib/schemas/plan';
@@ -44,6 +45,9 @@ export const REQUESTS = {
   CaseInput: caseInput,
   NewBooking: createBookingInput,
   NewSizeReadings: addReadingsBody,
+  StartImport: startImportInput,
+  StageRows: stageRowsBody,
+  CommitImport: commitImportBody,
   SavePlan: savePlanBody,
   MovePlan: movePlanBody,
   SignOff: signOffBody,
@@ -61,6 +65,10 @@ export const ANSWERS = {
   BookingPage: bookingPageSchema,
   Bench: benchViewSchema,
   SizeRecord: sizeRecordSchema,
+  ImportStarted: importStartedSchema,
+  StagedRows: stagedRowsSchema,
+  ImportDone: importDoneSchema,
+  BundleDone: bundleDoneSchema,
   ScannerVersion: scannerViewSchema,
   ScannerList: scannerListSchema,
   ProtocolVersion: protocolViewSchema,

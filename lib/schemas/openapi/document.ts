@@ -19,7 +19,13 @@ const PROBLEMS: Readonly<Record<string, string>> = {
   429: 'Too many calls; the header Retry-After says how long to wait.',
 };
 
-const answerOf = (answer: Operation['answer']) =>
+const BUNDLE = {
+  'application/fhir+json': {
+    schema: { type: 'object', description: 'FHIR R4 Bundle. Fields that are not on the list are dropped before anything is written.' },
+  },
+};
+
+const answerOf = (answer: Exclude<Operation['answer'], 'nothing'>) =>
   answer === 'application/pdf' ? { [answer]: { schema: { type: 'string', format: 'binary' } } } : json(answer);
 
 function parameters(schema: z.ZodObject | undefined, place: 'path' | 'query' | 'header'): unknown[] {
@@ -45,15 +51,19 @@ function problems({ request, params }: Operation): Record<string, unknown> {
 }
 
 function describe(operation: Operation): Record<string, unknown> {
-  const { id, summary, scope, params, query, headers, request, examples, answer, status = 200 } = operation;
+  const { id, summary, scope, params, query, headers, request, examples, bundle, answer, status = 200 } = operation;
   return {
     operationId: id,
     summary,
     description: scope ? `Token scope: ${scope}.` : 'For people only: no token may.',
     security: scope ? [{ token: [] }, { session: [] }] : [{ session: [] }],
     parameters: [...parameters(params, 'path'), ...parameters(query, 'query'), ...parameters(headers, 'header')],
-    ...(request ? { requestBody: { required: true, content: json(request, examples) } } : {}),
-    responses: { [status]: { description: 'Done.', content: answerOf(answer) }, ...problems(operation) },
+    ...(request ? { requestBody: { required: true, content: { ...json(request, examples), ...(bundle ? BUNDLE : {}) } } } : {}),
+    responses: {
+      [status]: { description: 'Done.', ...(answer === 'nothing' ? {} : { content: answerOf(answer) }) },
+      ...(bundle ? { 200: { description: 'A bundle was taken.', content: answerOf(bundle) } } : {}),
+      ...problems(operation),
+    },
   };
 }
 

@@ -92,3 +92,7 @@ function planOf(input: CaseInput): z.input<typeof savePlanBody> {
 export const SAVE_PLAN_EXAMPLES = {
   plan: { summary: 'A plan of one sequence without a booking', value: planOf(WORKED) },
 } satisfies Record<string, Example<z.input<typeof savePlanBody>>>;
+
+export const START_IMPORT_EXAMPLES = {
+  csv: { summary: 'Rows read from a CSV file', value: { id: '6a1c2f0e-5b7d-4c1e-9a34-2f60c1d7e8b9', format: 'csv' } },
+} as const;

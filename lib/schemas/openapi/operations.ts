@@ -3,7 +3,7 @@ import * as z from 'zod';
 import type { Scope } from '@/lib/domain/access';
 import { listBookingsQuery } from '@/lib/schemas/booking';
 import { idParams } from '@/lib/schemas/fields/ids';
-import { CHECK_EXAMPLES, NEW_BOOKING_EXAMPLES, NEW_READING_EXAMPLES, SAVE_PLAN_EXAMPLES } from '@/lib/schemas/openapi/examples';
+import { CHECK_EXAMPLES, NEW_BOOKING_EXAMPLES, NEW_READING_EXAMPLES, SAVE_PLAN_EXAMPLES, START_IMPORT_EXAMPLES } from '@/lib/schemas/openapi/examples';
 import type { AnswerName, RequestName } from '@/lib/schemas/openapi/components';
 import { sheetParams } from '@/lib/schemas/plan-sheet';
 import { codeParams, idempotencyKeySchema, planQuery } from '@/lib/schemas/plan';
@@ -20,7 +20,9 @@ export interface Operation {
   readonly headers?: z.ZodObject;
   readonly request?: RequestName;
   readonly examples?: Readonly<Record<string, { readonly summary: string; readonly value: unknown }>>;
-  readonly answer: AnswerName | 'application/pdf';
+  /** A second content type of the body, with its answer. */
+  readonly bundle?: AnswerName;
+  readonly answer: AnswerName | 'application/pdf' | 'nothing';
   readonly status?: number;
 }
 
@@ -38,7 +40,24 @@ export const OPERATIONS: readonly Operation[] = [
   },
   {
     method: 'post', path: '/api/v1/bookings', id: 'createBooking', scope: 'bookings:write', request: 'NewBooking',
-    answer: 'Booking', status: 201, summary: 'Adds a booking under its accession number.', examples: NEW_BOOKING_EXAMPLES,
+    answer: 'Booking', status: 201, bundle: 'BundleDone',
+    summary: 'Adds a booking under its accession number; a FHIR R4 bundle of Appointments, ServiceRequests and Observations adds or changes many.', examples: NEW_BOOKING_EXAMPLES,
+  },
+  {
+    method: 'post', path: '/api/v1/imports', id: 'startImport', scope: 'bookings:write', request: 'StartImport',
+    answer: 'ImportStarted', status: 201, summary: 'Starts an import of many bookings, under an id the caller draws.', examples: START_IMPORT_EXAMPLES,
+  },
+  {
+    method: 'post', path: '/api/v1/imports/{id}/rows', id: 'stageRows', scope: 'bookings:write', params: idParams, request: 'StageRows',
+    answer: 'StagedRows', summary: 'Takes a piece of rows and says what each will do. Nothing is booked yet; the same piece sent twice is one.',
+  },
+  {
+    method: 'post', path: '/api/v1/imports/{id}/commit', id: 'commitImport', scope: 'bookings:write', params: idParams, request: 'CommitImport',
+    answer: 'ImportDone', summary: 'Books what was staged, all of it or nothing. Sent twice it answers what was done.',
+  },
+  {
+    method: 'post', path: '/api/v1/imports/{id}/cancel', id: 'cancelImport', scope: 'bookings:write', params: idParams,
+    answer: 'nothing', status: 204, summary: 'Gives up an import that is not committed.',
   },
   {
     method: 'get', path: '/api/v1/bookings/{id}', id: 'getBooking', scope: 'bookings:read', params: idParams,

@@ -2,6 +2,7 @@ import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
 import type { Patient, ReadingSource } from '@/lib/domain/case/model';
 import { QUANTITIES, QUANTITY_FACTS, type SizeQuantity } from '@/lib/domain/size-reading/quantities';
+import type { TapeSite } from '@/lib/domain/size-reading/tape-site';
 import { READING_SOURCES } from '@/lib/schemas/case/patient';
 import { choice, day, quantity, refused, strict } from '@/lib/schemas/fields/fields';
 import { idSchema } from '@/lib/schemas/fields/ids';
@@ -43,6 +44,8 @@ export interface SizeReadingView {
   readonly source: ReadingSource;
   readonly spread: number;
   readonly takenOn: string;
+  /** Where a girth's tape went, as far as it was said. */
+  readonly tapeSite?: TapeSite;
   readonly recordedAt: string;
   /** Older than the policy's days. */
   readonly expired: boolean;

@@ -1,6 +1,7 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
 import { QUANTITIES } from '@/lib/domain/size-reading/quantities';
+import { TAPE_SITES } from '@/lib/domain/size-reading/tape-site';
 import { patientSchema, READING_SOURCES } from '@/lib/schemas/case/patient';
 import type { SizeReadingView, SizeRecordView } from '@/lib/schemas/size-reading';
 
@@ -12,6 +13,7 @@ export const sizeReadingViewSchema = z.strictObject({
   source: z.enum(READING_SOURCES),
   spread: z.number(),
   takenOn: z.iso.date(),
+  tapeSite: z.enum(TAPE_SITES).describe('Where a girth’s tape went.').optional(),
   recordedAt: z.iso.datetime(),
   expired: z.boolean(),
 }) satisfies z.ZodType<SizeReadingView>;

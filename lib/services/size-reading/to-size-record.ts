@@ -24,6 +24,7 @@ export function toSizeRecord(question: SizeRecordQuestion): SizeRecordView {
       source: reading.source,
       spread: reading.spread,
       takenOn: reading.takenOn,
+      ...(reading.tapeSite ? { tapeSite: reading.tapeSite } : {}),
       recordedAt: reading.recordedAt.toISOString(),
       expired: isExpired(reading, now, policy.readingExpiryDays),
     })),
