@@ -415,7 +415,21 @@ function probabilities(): unknown {
       },
     };
   };
-  return [3, 8, 14, 21].map((seed) => foldProbability(unsure(drawCase(seed), 9)));
+  // With the arms down nothing decides alone: the share of many sizes.
+  const many = typicalCase({
+    keepClear: LIVER_BOX,
+    patient: typicalPatient({ arms: withArms('down', 8) }),
+    prescription: prescriptionOf('echo-planar', {
+      phaseAxis: 'RL',
+      fovPhaseMm: 420,
+      fovReadoutMm: 300,
+      acquiredLines: 122,
+    }),
+  });
+  return [
+    ...[3, 8, 14, 21].map((seed) => foldProbability(unsure(drawCase(seed), 9))),
+    foldProbability(unsure(many, 9)),
+  ];
 }
 
 /** Group by group; each becomes one file. */
