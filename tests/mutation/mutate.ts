@@ -121,7 +121,7 @@ function planOf(tests: readonly PlayableTest[], budgetMs: number) {
     spent += more;
     loaded.add(bundle);
     // Slow machines and detours are given room; an endless loop is given up.
-    plan.push({ bundle, test, allowedMs: 8 * (ms + loadMs) + 4000 });
+    plan.push({ bundle, test, allowedMs: 20 * (ms + loadMs) + 8000 });
   }
   return plan;
 }
@@ -157,7 +157,8 @@ function killedBefore({ resume, out }: Options): Map<string, Result> {
 /**
  * `npm run mutate`: changes one sign, limit, constant or connective of lib/physics after another and runs the tests that
  * reach it; what no test notices is listed. --sample N --seed S draws some; --file PART takes some files; --resume plays
- * only what the last run left; --budget S is the most a mutant may cost.
+ * only what the last run left; --budget S is the most
+ * processor time a mutant may cost.
  */
 export async function mutate(args: readonly string[]): Promise<void> {
   const options = readOptions(args);
