@@ -1,5 +1,6 @@
 import { FoldExample } from '@/components/front/fold-example';
 import { FrontText } from '@/components/front/front-text';
+import { QuickCheck } from '@/components/quick-check/quick-check';
 import { Header } from '@/components/shell/header';
 import { homeFor } from '@/components/shell/navigation';
 import { currentTheme } from '@/components/shell/read-theme';
@@ -25,6 +26,9 @@ export default async function FrontPage() {
       <main id="main" className="mx-auto grid max-w-6xl gap-x-14 gap-y-10 px-4 py-10 sm:px-6 lg:grid-cols-[5fr_6fr] lg:py-14">
         <FrontText entry={entry} />
         <FoldExample />
+        <div className="lg:col-span-2">
+          <QuickCheck />
+        </div>
       </main>
     </>
   );

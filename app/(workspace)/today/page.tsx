@@ -31,6 +31,7 @@ export default async function TodayPage() {
         lead={formatLongDay(now)}
         actions={
           <>
+            <LinkButton href="/quick-check">Quick check</LinkButton>
             {mayAdd && <LinkButton href="/bookings/new">Add a booking</LinkButton>}
             <LinkButton href="/bookings" variant="quiet">
               All bookings

@@ -2,6 +2,7 @@
 
 import { useEffect, useRef, useState } from 'react';
 import { useBench, useBenchState } from '../bench-context';
+import { policyAt } from '../state/certainty';
 import { solveAll, type SolvedPlan } from './solve-all';
 
 export type Solving =
@@ -31,7 +32,8 @@ export function useSolveAll(onFault: (error: unknown) => void): SolveAll {
     const mine = (run.current += 1);
     const stopped = () => run.current !== mine;
     setSolving({ kind: 'working', done: 0, total: 0 });
-    solveAll(store.read().document, setting, engine, {
+    const { document: from, sureAt } = store.read();
+    solveAll(from, { ...setting, policy: policyAt(setting.policy, sureAt) }, engine, {
       onProgress: (done, total) => !stopped() && setSolving({ kind: 'working', done, total }),
       stopped,
     }).then(
