@@ -3,6 +3,9 @@
 import { Button } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/choice';
 import { useActiveResult, useBench, useBenchState } from './bench-context';
+import { BoreView } from './bore/bore-view';
+import { ProbabilityLine } from './certainty/probability-line';
+import { PictureView } from './picture/picture-view';
 import { SectionView } from './section-view';
 import { SlabView } from './slab-view';
 import type { BenchView } from './state/bench-state';
@@ -14,9 +17,10 @@ export function PictureColumn() {
   const canUndo = useBenchState((state) => state.past.length > 0);
   const canRedo = useBenchState((state) => state.future.length > 0);
   const slab = useActiveResult().assessment?.slab;
-  const view: BenchView = slab ? chosen : 'section';
+  const view: BenchView = chosen === 'slab' && !slab ? 'section' : chosen;
   return (
     <>
+      <ProbabilityLine />
       <div className="flex items-center justify-between gap-4 px-5">
         <Segmented<BenchView>
           size="sm"
@@ -26,6 +30,8 @@ export function PictureColumn() {
           options={[
             { value: 'section', label: 'Section' },
             { value: 'slab', label: 'Slab', disabled: !slab },
+            { value: 'picture', label: 'Picture' },
+            { value: 'bore', label: 'Bore' },
           ]}
           onChange={(next) => store.dispatch({ type: 'choose-view', view: next })}
         />
@@ -38,7 +44,10 @@ export function PictureColumn() {
           </Button>
         </div>
       </div>
-      {view === 'slab' && slab ? <SlabView slab={slab} /> : <SectionView />}
+      {view === 'slab' && slab && <SlabView slab={slab} />}
+      {view === 'section' && <SectionView />}
+      {view === 'picture' && <PictureView />}
+      {view === 'bore' && <BoreView />}
     </>
   );
 }

@@ -1,14 +1,14 @@
 'use client';
 
 import { cx } from '@/components/ui/class-names';
-import { formatPercent } from '@/lib/presentation/percent';
 import { VERDICT_WORDS } from '@/lib/presentation/verdict-words';
 import { useActiveResult, useBenchState } from './bench-context';
+import { CertaintyControl } from './certainty/certainty-control';
 import { VERDICT_COLOUR } from './verdict-words';
 
 /** The verdict of the active sequence in full words, with the reason, the number, and how sure it is. */
 export function VerdictLine({ className }: { className?: string }) {
-  const { assessment, refusal, question } = useActiveResult();
+  const { assessment, refusal } = useActiveResult();
   const tried = useBenchState((state) => state.trial?.remedy.assessment);
   const [first, ...more] = assessment?.reasons ?? [];
   return (
@@ -36,7 +36,9 @@ export function VerdictLine({ className }: { className?: string }) {
             more.map(({ text }) => text).join(' ')
           )}
         </p>
-        <p className="flex-none">sure at {formatPercent(question.policy.sureAt * 100, 1)}</p>
+        <div className="flex-none">
+          <CertaintyControl />
+        </div>
       </div>
       {assessment && assessment.assumptions.length > 0 && (
         <details className="text-sm text-ink-soft max-lg:hidden">

@@ -49,8 +49,8 @@ export function createLiveAssessor(options: LiveAssessorOptions): LiveAssessor {
   };
 
   const questionOf = (id: string): Case => {
-    const { document } = store.read();
-    return caseOf(document, setting, sequenceById(document, id));
+    const { document, sureAt } = store.read();
+    return caseOf(document, setting, sequenceById(document, id), sureAt);
   };
 
   const answerActive = (): void => {

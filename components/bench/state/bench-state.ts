@@ -6,7 +6,7 @@ import type { Remedy } from '@/lib/physics/model/remedy';
 import type { Scanner } from '@/lib/physics/model/scanner';
 import type { BenchDocument } from './bench-document';
 
-export type BenchView = 'section' | 'slab';
+export type BenchView = 'section' | 'slab' | 'picture' | 'bore';
 
 /** A remedy being tried: the canvas and the ledger show now → tried until it is adopted or left. */
 export interface Trial {
@@ -21,6 +21,8 @@ export interface BenchState {
   readonly view: BenchView;
   /** Index of the slice shown, per sequence; absent: the middle one. */
   readonly sliceIndex: Readonly<Record<string, number>>;
+  /** Certainty asked for on this bench, 0.5–0.999; null: what site policy asks. Not part of the plan. */
+  readonly sureAt: number | null;
   readonly past: readonly BenchDocument[];
   readonly future: readonly BenchDocument[];
   /** Edits that carry this key join the step that carried it before: one drag, one undo. */
@@ -39,6 +41,7 @@ export type BenchAction =
   | { type: 'choose-sequence'; id: string }
   | { type: 'choose-view'; view: BenchView }
   | { type: 'choose-slice'; index: number }
+  | { type: 'choose-certainty'; sureAt: number | null }
   | { type: 'try'; remedy: Remedy }
   | { type: 'leave-trial' }
   | { type: 'adopt'; remedy: Remedy }
@@ -56,6 +59,7 @@ export function startBench(document: BenchDocument, activeId: string, saved: Ben
     trial: null,
     view: 'section',
     sliceIndex: {},
+    sureAt: null,
     past: [],
     future: [],
     openStep: null,

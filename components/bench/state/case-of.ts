@@ -1,15 +1,21 @@
 import type { Case } from '@/lib/physics/model/case';
 import type { Remedy } from '@/lib/physics/model/remedy';
+import { policyAt } from './certainty';
 import { keepClearOf, type BenchDocument, type BenchSequence, type BenchSetting } from './bench-document';
 
-/** The question one sequence of the bench puts to the engine. */
-export function caseOf(document: BenchDocument, setting: BenchSetting, sequence: BenchSequence): Case {
+/** The question one sequence of the bench puts to the engine, at the certainty chosen there or else the site's. */
+export function caseOf(
+  document: BenchDocument,
+  setting: BenchSetting,
+  sequence: BenchSequence,
+  sureAt: number | null = null,
+): Case {
   return {
     patient: document.patient,
     prescription: sequence.prescription,
     keepClear: keepClearOf(document, sequence),
     scanner: document.scanner,
-    policy: setting.policy,
+    policy: policyAt(setting.policy, sureAt),
   };
 }
 

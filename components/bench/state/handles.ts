@@ -11,7 +11,7 @@ import { caseOf } from './case-of';
 import { withValue } from './reading-edit';
 import { edgeOf, withEdge } from './window-box';
 
-export type HandleKind = 'fov-edge' | 'fov-centre' | 'keep-clear-edge' | 'extent';
+export type HandleKind = 'fov-edge' | 'fov-centre' | 'keep-clear-edge' | 'extent' | 'lateral-offset';
 
 /** Something on the canvas that can be taken hold of, with the typed field that is its twin. */
 export interface BenchHandle {
@@ -119,6 +119,26 @@ function extentHandles({ patient, prescription }: Case): BenchHandle[] {
     });
 }
 
+/** As far as a patient can lie from the scanner's mid-line, mm. */
+export const LATERAL_MAX_MM = 300;
+
+/** In the bore: the patient's mid-line, held where it meets the table. */
+export function boreHandles({ patient, scanner }: Pick<Case, 'patient' | 'scanner'>): readonly BenchHandle[] {
+  const now = patient.lateralOffsetMm;
+  const side = now === 0 ? 'in the middle' : `to the ${now > 0 ? 'left' : 'right'}`;
+  return [
+    {
+      id: 'lateral-offset',
+      kind: 'lateral-offset',
+      label: 'Patient’s mid-line from the scanner’s, positive to the patient’s left',
+      at: [now, scanner.tableBelowCentreMm],
+      along: [1, 0],
+      figure: now === 0 ? side : `${MM(Math.abs(now))} ${side}`,
+      value: { now, min: -LATERAL_MAX_MM, max: LATERAL_MAX_MM },
+    },
+  ];
+}
+
 /** The edit that putting a handle at a point of the picture means; whole millimetres. */
 export function moveHandle(
   state: BenchState,
@@ -127,6 +147,10 @@ export function moveHandle(
   to: ScreenPoint,
   step?: string,
 ): BenchAction | null {
+  if (id === 'lateral-offset') {
+    const lateralOffsetMm = Math.min(LATERAL_MAX_MM, Math.max(-LATERAL_MAX_MM, Math.round(to[0])));
+    return { type: 'edit-patient', patch: { lateralOffsetMm }, ...(step === undefined ? {} : { step }) };
+  }
   const sequence = sequenceById(state.document, state.activeId);
   const { prescription } = sequence;
   const frame = screenFrame(prescription);
@@ -166,7 +190,7 @@ export function nudgeHandle(
   step?: string,
 ): BenchAction | null {
   const question = caseOf(state.document, setting, sequenceById(state.document, state.activeId));
-  const handle = benchHandles(question).find((each) => each.id === id);
+  const handle = [...benchHandles(question), ...boreHandles(question)].find((each) => each.id === id);
   if (!handle) return null;
   if (handle.along) {
     const share = by[0] * handle.along[0] + by[1] * handle.along[1];

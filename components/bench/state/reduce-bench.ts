@@ -40,6 +40,9 @@ export function reduceBench(state: BenchState, action: BenchAction): BenchState 
       return { ...state, view: action.view };
     case 'choose-slice':
       return { ...state, sliceIndex: { ...state.sliceIndex, [state.activeId]: action.index } };
+    case 'choose-certainty':
+      // What is tried was ranked at another certainty.
+      return action.sureAt === state.sureAt ? state : { ...state, sureAt: action.sureAt, trial: null, openStep: null };
     case 'try':
       return { ...state, trial: { sequenceId: state.activeId, remedy: action.remedy }, openStep: null };
     case 'leave-trial':

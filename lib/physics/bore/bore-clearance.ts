@@ -83,6 +83,8 @@ export interface BoreAnswer {
   readonly tightest?: Clearance;
   /** Every section inside the bore, as given. */
   readonly sections: readonly Clearance[];
+  /** Their solids, in the same order. */
+  readonly inside: readonly BoreSection[];
   /** Sections outside the narrow part when the target is at the isocentre. */
   readonly outside: readonly BoreSection[];
 }
@@ -96,7 +98,7 @@ export function boreClearance(sections: readonly BoreSection[], setting: BoreSet
   const inside = sections.filter(({ zFromTargetMm }) => Math.abs(zFromTargetMm) <= half);
   const clearances = inside.map((section) => sectionClearance(section, setting));
   const outside = sections.filter((section) => !inside.includes(section));
-  if (clearances.length === 0) return { sections: [], outside };
+  if (clearances.length === 0) return { sections: [], inside, outside };
   const tightest = clearances.reduce((least, one) => (one.clearanceMm < least.clearanceMm ? one : least));
-  return { tightest, sections: clearances, outside };
+  return { tightest, sections: clearances, inside, outside };
 }

@@ -1,0 +1,63 @@
+import type { KeepClear } from '@/lib/physics/model/keep-clear';
+import type { Prescription } from '@/lib/physics/model/prescription';
+import { SIDE_LETTERS } from '@/lib/presentation/anatomy-words';
+import type { Bounds, Ring, Scene, SceneNode, TextNode } from './scene';
+import { screenFrame, toScreen, type ScreenPoint } from './section-frame';
+
+export interface PictureSceneInput {
+  readonly prescription: Prescription;
+  readonly keepClear: KeepClear;
+  /** The picture now, and the tried one, on the screen, mm. */
+  readonly now: Bounds;
+  readonly tried?: Bounds;
+  /** Where the wipe stands, mm on the screen: now is left of it. */
+  readonly wipeAt?: number;
+  readonly bounds: Bounds;
+}
+
+/** What lies over the simulated pictures: letters, the keep-clear area, and the wipe between now and tried. */
+export function pictureScene({ prescription, keepClear, now, tried, wipeAt, bounds }: PictureSceneInput): Scene {
+  const frame = screenFrame(prescription);
+  const nodes: SceneNode[] = [
+    { kind: 'area', name: 'picture/now', rings: [ringOf(now)], stroke: { colour: 'ink', widthPx: 1.25, edge: 'solid' } },
+  ];
+  if (tried) {
+    nodes.push({ kind: 'area', name: 'picture/tried', rings: [ringOf(tried)], stroke: { colour: 'indigo', widthPx: 1.25, edge: 'dashed' } });
+  }
+  if (keepClear.area.kind === 'box' && prescription.inPlaneRotationDeg === 0) {
+    const { xMm, yMm, zMm } = keepClear.area.box;
+    const [u0, v0] = toScreen(frame, [xMm[0], yMm[0], zMm[0]]);
+    const [u1, v1] = toScreen(frame, [xMm[1], yMm[1], zMm[1]]);
+    const box: Bounds = { left: Math.min(u0, u1), right: Math.max(u0, u1), top: Math.min(v0, v1), bottom: Math.max(v0, v1) };
+    nodes.push({ kind: 'area', name: 'keep-clear', rings: [ringOf(box)], stroke: { colour: 'indigo', widthPx: 1.5, edge: 'dashed' } });
+  }
+  const { sides } = frame;
+  const middle: ScreenPoint = [(bounds.left + bounds.right) / 2, (bounds.top + bounds.bottom) / 2];
+  const inset = 11;
+  nodes.push(
+    letter(SIDE_LETTERS[sides.left], 'left', [bounds.left + inset, middle[1]]),
+    letter(SIDE_LETTERS[sides.right], 'right', [bounds.right - inset, middle[1]]),
+    letter(SIDE_LETTERS[sides.top], 'top', [middle[0], bounds.top + inset]),
+    letter(SIDE_LETTERS[sides.bottom], 'bottom', [middle[0], bounds.bottom - inset]),
+  );
+  if (tried && wipeAt !== undefined) {
+    nodes.push(
+      { kind: 'lines', name: 'wipe', lines: [[[wipeAt, bounds.top + 2 * inset], [wipeAt, bounds.bottom - 2 * inset]]], stroke: { colour: 'indigo', widthPx: 2, edge: 'solid' } },
+      word('wipe/now', 'now', [wipeAt, bounds.top + 2 * inset], -8, 'end'),
+      word('wipe/tried', 'tried', [wipeAt, bounds.top + 2 * inset], 8, 'start'),
+    );
+  }
+  return { bounds, nodes };
+}
+
+function ringOf({ left, right, top, bottom }: Bounds): Ring {
+  return [[left, top], [right, top], [right, bottom], [left, bottom]];
+}
+
+function letter(text: string, side: string, at: ScreenPoint): TextNode {
+  return { kind: 'text', name: `letter/${side}`, text, at, offsetPx: [0, 6], anchor: 'middle', size: 'letter', colour: 'ink' };
+}
+
+function word(name: string, text: string, at: ScreenPoint, dx: number, anchor: TextNode['anchor']): TextNode {
+  return { kind: 'text', name, text, at, offsetPx: [dx, 5], anchor, size: 'note', colour: 'indigo' };
+}
