@@ -27,7 +27,7 @@ function capital(text: string): string {
 
 /** A girth says where its tape went when that is known. */
 const sizeName = ({ quantity, tapeSite }: SizeReadingView): string =>
-  quantity === 'girth-cm' && tapeSite ? `girth ${TAPE_SITE_LABELS[tapeSite]}` : QUANTITY_FACTS[quantity].label;
+  quantity === 'girth-cm' && tapeSite ? `girth ${TAPE_SITE_LABELS[tapeSite]}` : QUANTITY_FACTS[quantity].label.replace(/ \(.*\)$/, '');
 
 /** Every reading with how it was got, when, and its spread; newest first. Dotted: not measured. */
 export function SizeRecord({ record }: { record: SizeRecordView }) {
@@ -64,7 +64,7 @@ export function SizeRecord({ record }: { record: SizeRecordView }) {
           <tbody>
             {record.readings.map((reading) => (
               <Tr key={reading.id}>
-                <Td>{capital(QUANTITY_FACTS[reading.quantity].label.replace(/ \(.*\)$/, ''))}</Td>
+                <Td>{capital(sizeName(reading))}</Td>
                 <Td className="text-right">
                   <ReadingValue reading={reading} />
                 </Td>
