@@ -66,7 +66,8 @@ function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold
   };
   const onKeyDown = (event: KeyboardEvent<HTMLElement>) => {
     const arrow = ARROWS[event.key];
-    if (!arrow) return;
+    // With a modifier the arrows move the picture, not what lies on it.
+    if (!arrow || event.ctrlKey || event.metaKey || event.altKey) return;
     event.preventDefault();
     const by = event.shiftKey ? 10 : 1;
     keyStep.current ||= `keys ${(gestures += 1)}`;
@@ -74,7 +75,7 @@ function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold
     if (action) store.dispatch(action);
   };
   const vertical = handle.along && Math.abs(handle.along[1]) > Math.abs(handle.along[0]);
-  const cursor = !handle.along ? 'cursor-move' : vertical ? 'cursor-ns-resize' : 'cursor-ew-resize';
+  const cursor = handle.kind === 'fov-rotation' ? 'cursor-grab' : !handle.along ? 'cursor-move' : vertical ? 'cursor-ns-resize' : 'cursor-ew-resize';
   const slider = handle.value && {
     role: 'slider',
     'aria-valuenow': Math.round(handle.value.now),

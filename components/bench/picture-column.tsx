@@ -5,6 +5,7 @@ import { Segmented } from '@/components/ui/choice';
 import { useActiveResult, useBench, useBenchState } from './bench-context';
 import { BoreView } from './bore/bore-view';
 import { ProbabilityLine } from './certainty/probability-line';
+import { KeyHelp } from './key-help';
 import { PictureView } from './picture/picture-view';
 import { SectionView } from './section-view';
 import { SlabView } from './slab-view';
@@ -42,6 +43,7 @@ export function PictureColumn() {
           <Button variant="quiet" size="sm" disabled={!canRedo} onClick={() => store.dispatch({ type: 'redo' })}>
             Redo
           </Button>
+          <KeyHelp />
         </div>
       </div>
       {view === 'slab' && slab && <SlabView slab={slab} />}

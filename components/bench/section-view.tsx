@@ -6,6 +6,7 @@ import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
 import { fitScene, fromPixels, type Fit } from '@/components/schematic/scene/scene';
 import { screenFrame } from '@/components/schematic/scene/section-frame';
 import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
+import { cx } from '@/components/ui/class-names';
 import { geometryCase } from '@/lib/physics/assess/assess';
 import { drawSection } from '@/lib/physics/section/draw-section';
 import type { Case } from '@/lib/physics/model/case';
@@ -17,6 +18,10 @@ import { SliceSlider } from './slice-slider';
 import { triedCase } from './state/case-of';
 import { benchHandles } from './state/handles';
 import { shownSlice } from './state/slices';
+import { useZoom } from './zoom/use-zoom';
+import { ZoomButtons } from './zoom/zoom-buttons';
+
+const PICTURE_BOX = 'relative h-80 overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-h-80 xl:flex-1';
 
 /** The section of the active sequence: where tissue is and where it lands, now and with what is tried. */
 export function SectionView() {
@@ -40,7 +45,8 @@ export function SectionView() {
   }, [trial, question, sequence.id, slice.offsetMm]);
 
   const fitNow = useMemo(() => (size && now ? fitScene(sectionBounds(now, tried), size.widthPx, size.heightPx) : null), [size, now, tried]);
-  const fit = heldFit ?? fitNow;
+  const picture = useZoom(box, heldFit ?? fitNow, size);
+  const { fit } = picture;
 
   const scene = useMemo(() => {
     if (!fit || !now) return null;
@@ -51,7 +57,7 @@ export function SectionView() {
   const shown = tried ?? now;
   // Written past React: it changes with every pixel.
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
-    if (!place.current || !fit) return;
+    if (picture.panned(event) || !place.current || !fit) return;
     const edge = event.currentTarget.getBoundingClientRect();
     const [u, v] = fromPixels(fit, [event.clientX - edge.left, event.clientY - edge.top]);
     place.current.textContent = describePlace(u, v, screenFrame(question.prescription).sides);
@@ -63,15 +69,19 @@ export function SectionView() {
         role="group"
         aria-label={`Section, ${question.prescription.plane}`}
         aria-describedby="section-in-words"
+        tabIndex={0}
+        aria-keyshortcuts="+ - 0 Control+ArrowUp Control+ArrowDown Control+ArrowLeft Control+ArrowRight"
+        {...picture.boxProps}
         onPointerMove={onPointerMove}
         onPointerLeave={() => place.current && (place.current.textContent = '')}
-        className="relative h-80 touch-none overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-h-80 xl:flex-1"
+        className={cx(PICTURE_BOX, picture.zoom.factor === 1 ? 'touch-pan-y' : 'cursor-grab touch-none active:cursor-grabbing')}
       >
         {scene && fit && size && (
           <>
             <SceneCanvas name="section" scene={scene} fit={fit} {...size} still={heldFit !== null} onHover={(name) => setFocus(name ?? undefined)} />
             <PieceOverlay drawing={shown!.drawing} prescription={question.prescription} fit={fit} onFocus={setFocus} />
-            <HandleOverlay handles={handles} fit={fit} onHold={(id) => setHeldFit(id === null ? null : fit)} />
+            <HandleOverlay handles={handles} fit={fit} onHold={(id) => setHeldFit(id === null ? null : fitNow)} />
+            <ZoomButtons {...picture} />
             <p ref={place} aria-hidden="true" className="figures pointer-events-none absolute top-1 left-2 text-sm text-ink-soft" />
           </>
         )}

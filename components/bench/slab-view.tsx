@@ -11,6 +11,8 @@ import { AXIS_WORDS } from '@/lib/presentation/anatomy-words';
 import { describeSlab } from '@/lib/presentation/describe-slab';
 import { phaseOversamplingSetting, sliceOversamplingSetting } from '@/lib/presentation/oversampling-form';
 import { useActiveResult, useBenchState } from './bench-context';
+import { useZoom } from './zoom/use-zoom';
+import { ZoomButtons } from './zoom/zoom-buttons';
 
 /** The slice direction of a 3D sequence, now or as it would be with what is tried. */
 export function SlabView({ slab }: { slab: SlabResult }) {
@@ -22,10 +24,11 @@ export function SlabView({ slab }: { slab: SlabResult }) {
   const size = useBoxSize(box);
   const { slices } = prescription;
 
+  const acquiredSlabMm = slices.mode === 'slab' ? slices.acquiredPartitions * slices.partitionThicknessMm : 0;
+  const whole = useMemo(() => size && fitScene(slabBounds(acquiredSlabMm), size.widthPx, size.heightPx), [size, acquiredSlabMm]);
+  const { fit, ...zoom } = useZoom(box, whole, size);
   const picture = useMemo(() => {
-    if (!size || slices.mode !== 'slab') return null;
-    const acquiredSlabMm = slices.acquiredPartitions * slices.partitionThicknessMm;
-    const fit = fitScene(slabBounds(acquiredSlabMm), size.widthPx, size.heightPx);
+    if (!size || !fit || slices.mode !== 'slab') return null;
     const [left, top] = fromPixels(fit, [0, 0]);
     const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
     const scene = slabScene({
@@ -37,7 +40,7 @@ export function SlabView({ slab }: { slab: SlabResult }) {
       mmPerPx: 1 / fit.scale,
     });
     return { scene, fit };
-  }, [size, shown, slices, prescription.plane]);
+  }, [size, fit, shown, slices, acquiredSlabMm, prescription.plane]);
 
   const { scanner } = question;
   const slice = sliceOversamplingSetting(prescription, scanner);
@@ -49,9 +52,14 @@ export function SlabView({ slab }: { slab: SlabResult }) {
         role="group"
         aria-label="Slab, along the slice direction"
         aria-describedby="slab-in-words"
+        tabIndex={0}
+        aria-keyshortcuts="+ - 0 Control+ArrowUp Control+ArrowDown Control+ArrowLeft Control+ArrowRight"
+        {...zoom.boxProps}
+        onPointerMove={zoom.panned}
         className="relative h-80 overflow-hidden xl:h-auto xl:min-h-64 xl:flex-1"
       >
         {picture && size && <SceneCanvas name="slab" {...picture} {...size} still />}
+        <ZoomButtons {...zoom} />
       </div>
       <div id="slab-in-words" className="px-5 pb-3 text-sm text-ink-soft">
         <p>

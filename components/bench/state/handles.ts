@@ -9,9 +9,10 @@ import { keepClearOf, sequenceById, type BenchSetting } from './bench-document';
 import type { BenchAction, BenchState } from './bench-state';
 import { caseOf } from './case-of';
 import { withValue } from './reading-edit';
+import { nudgedRotation, ROTATION_ID, rotationHandle, rotationTowards } from './rotation-handle';
 import { edgeOf, withEdge } from './window-box';
 
-export type HandleKind = 'fov-edge' | 'fov-centre' | 'keep-clear-edge' | 'extent' | 'lateral-offset';
+export type HandleKind = 'fov-edge' | 'fov-rotation' | 'fov-centre' | 'keep-clear-edge' | 'extent' | 'lateral-offset';
 
 /** Something on the canvas that can be taken hold of, with the typed field that is its twin. */
 export interface BenchHandle {
@@ -65,7 +66,7 @@ export function benchHandles(question: Case): readonly BenchHandle[] {
     figure: `centre ${prescription.centreMm.map((c) => Math.round(c)).join(', ')} mm`,
   };
   // The last lies on top where handles meet: the window is what is moved most.
-  return [...extentHandles(question), ...keepClearHandles(question), centre, ...fovEdges];
+  return [...extentHandles(question), ...keepClearHandles(question), centre, rotationHandle(prescription), ...fovEdges];
 }
 
 function keepClearHandles({ keepClear, prescription }: Case): BenchHandle[] {
@@ -156,6 +157,9 @@ export function moveHandle(
   const frame = screenFrame(prescription);
   const window = windowFrame(prescription);
   const withStep = step === undefined ? {} : { step };
+  if (id === ROTATION_ID) {
+    return { type: 'edit-prescription', patch: { inPlaneRotationDeg: rotationTowards(prescription, to) }, ...withStep };
+  }
   if (id === 'fov-centre') {
     const along = dot(frame.normal, prescription.centreMm);
     const centreMm = toPatient(frame, [Math.round(to[0]), Math.round(to[1])], along);
@@ -192,6 +196,10 @@ export function nudgeHandle(
   const question = caseOf(state.document, setting, sequenceById(state.document, state.activeId));
   const handle = [...benchHandles(question), ...boreHandles(question)].find((each) => each.id === id);
   if (!handle) return null;
+  if (id === ROTATION_ID) {
+    const inPlaneRotationDeg = nudgedRotation(question.prescription, by);
+    return { type: 'edit-prescription', patch: { inPlaneRotationDeg }, ...(step === undefined ? {} : { step }) };
+  }
   if (handle.along) {
     const share = by[0] * handle.along[0] + by[1] * handle.along[1];
     if (Math.abs(share) < 1e-6) return null;

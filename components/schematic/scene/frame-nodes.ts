@@ -7,8 +7,11 @@ import type { WindowFrame } from './window-frame';
 /** L R A P S I at the edges of the picture, and the phase direction in its corner. */
 export function letterNodes(bounds: Bounds, question: Case, window: WindowFrame, mmPerPx: number): SceneNode[] {
   const { sides } = screenFrame(question.prescription);
-  const [u, v] = window.centre;
   const inset = 13 * mmPerPx;
+  // Beside the window while it is in sight; they never leave the picture with it.
+  const beside = (at: number, low: number, high: number): number => Math.min(high - 3 * inset, Math.max(low + 3 * inset, at));
+  const u = beside(window.centre[0], bounds.left, bounds.right);
+  const v = beside(window.centre[1], bounds.top, bounds.bottom);
   const letter = (side: keyof typeof sides, at: ScreenPoint): TextNode => ({
     kind: 'text',
     name: `letter/${side}`,
@@ -54,9 +57,16 @@ export function letterNodes(bounds: Bounds, question: Case, window: WindowFrame,
   ];
 }
 
-/** 100 mm, in the lower right corner. */
+/** A whole length that takes a third of the picture at most. */
+function barLengthMm(bounds: Bounds): number {
+  const most = (bounds.right - bounds.left) / 3;
+  return [100, 50, 20, 10].find((length) => length <= most) ?? 5;
+}
+
+/** 100 mm, or less when the picture is zoomed, in the lower right corner. */
 export function scaleNodes(bounds: Bounds, mmPerPx: number): SceneNode[] {
   const right = bounds.right - 10 * mmPerPx;
+  const length = barLengthMm(bounds);
   const at = bounds.bottom - 10 * mmPerPx;
   const tick = 5 * mmPerPx;
   return [
@@ -64,8 +74,8 @@ export function scaleNodes(bounds: Bounds, mmPerPx: number): SceneNode[] {
       kind: 'lines',
       name: 'scale-bar',
       lines: [
-        [[right - 100, at], [right, at]],
-        [[right - 100, at - tick], [right - 100, at + tick]],
+        [[right - length, at], [right, at]],
+        [[right - length, at - tick], [right - length, at + tick]],
         [[right, at - tick], [right, at + tick]],
       ],
       stroke: { colour: 'ink', widthPx: 1.5, edge: 'solid' },
@@ -73,8 +83,8 @@ export function scaleNodes(bounds: Bounds, mmPerPx: number): SceneNode[] {
     {
       kind: 'text',
       name: 'scale-bar/label',
-      text: '100 mm',
-      at: [right - 50, at],
+      text: `${length} mm`,
+      at: [right - length / 2, at],
       offsetPx: [0, -8],
       anchor: 'middle',
       size: 'note',

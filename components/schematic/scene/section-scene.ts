@@ -82,7 +82,7 @@ export function sectionScene(input: SectionSceneInput): Scene {
         kind: 'marker',
         name: `handle/${id}`,
         at,
-        shape: kind === 'fov-centre' ? 'centre' : 'handle',
+        shape: kind === 'fov-centre' ? 'centre' : kind === 'fov-rotation' ? 'ring' : 'handle',
         colour: kind === 'keep-clear-edge' ? 'indigo' : kind === 'extent' ? 'ink-soft' : 'ink',
       }),
     ),
@@ -110,20 +110,28 @@ export function sectionBounds(now: DrawnSection, tried?: DrawnSection): Bounds {
   };
 }
 
-/** Filled to the size that is counted on; inside it the size as given, so that the band between them is seen. */
+/**
+ * Filled to the size that is counted on; inside it the size as given, and between them a band. What is counted on beyond
+ * a size that was given is an estimate, so its edge is dotted, whether or not the size was measured.
+ */
 function tissueNodes(
   drawing: SectionDrawing,
   asGiven: readonly TissueDrawing[] | undefined,
   toRing: (ring: SectionRing) => Ring,
 ): AreaNode[] {
-  const edgeOf = (tissue: TissueDrawing): Stroke['edge'] =>
-    tissue.placeUncertain && !tissue.beyondUsable ? 'dashed' : tissue.estimated ? 'dotted' : 'solid';
+  const given = new Map(
+    (asGiven ?? [])
+      .filter((tissue) => tissue.rings.length > 0 && differs(tissue, drawing.tissue))
+      .map((tissue) => [tissue.name, tissue]),
+  );
   const outlines = drawing.tissue
     .filter(({ rings }) => rings.length > 0)
     .flatMap((tissue): AreaNode[] => {
-      const stroke: Stroke = { colour: 'ink-soft', widthPx: 1.25, edge: edgeOf(tissue) };
-      const whole: AreaNode = { kind: 'area', name: tissue.name, rings: tissue.rings.map(toRing), fill: 'tissue-fat' };
       const { withinUsable, beyondUsable } = tissue;
+      const dotted = tissue.estimated || given.has(tissue.name);
+      const edge = tissue.placeUncertain && !beyondUsable ? 'dashed' : dotted ? 'dotted' : 'solid';
+      const stroke: Stroke = { colour: 'ink-soft', widthPx: 1.25, edge };
+      const whole: AreaNode = { kind: 'area', name: tissue.name, rings: tissue.rings.map(toRing), fill: 'tissue-fat' };
       if (!withinUsable || !beyondUsable) return [{ ...whole, stroke }];
       return [
         whole,
@@ -131,15 +139,21 @@ function tissueNodes(
         { kind: 'area', name: `${tissue.name}/beyond-usable`, rings: beyondUsable.map(toRing), stroke: { ...stroke, edge: 'dashed' } },
       ];
     });
-  const given = (asGiven ?? [])
-    .filter((tissue) => tissue.rings.length > 0 && differs(tissue, drawing.tissue))
-    .map((tissue): AreaNode => ({
-      kind: 'area',
-      name: `${tissue.name}/as-given`,
-      rings: tissue.rings.map(toRing),
-      stroke: { colour: 'ink-soft', widthPx: 1, edge: 'solid', opacity: 0.45 },
-    }));
-  return [...outlines, ...given];
+  const bands = drawing.tissue.flatMap((tissue): AreaNode[] => {
+    const mean = given.get(tissue.name);
+    if (!mean || tissue.rings.length === 0) return [];
+    const rings = mean.rings.map(toRing);
+    return [
+      { kind: 'area', name: `${tissue.name}/band`, rings: [...tissue.rings.map(toRing), ...rings], fill: 'ink-soft', fillOpacity: 0.16 },
+      {
+        kind: 'area',
+        name: `${tissue.name}/as-given`,
+        rings,
+        stroke: { colour: 'ink-soft', widthPx: 1.25, edge: mean.estimated ? 'dotted' : 'solid', opacity: 0.75 },
+      },
+    ];
+  });
+  return [...outlines, ...bands];
 }
 
 /** Less than this apart, two outlines would only look like a thick line, mm. */

@@ -1,0 +1,42 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { fromPixels, toPixels, type Fit } from '@/components/schematic/scene/scene';
+import { MOST_ZOOM, panBy, WHOLE_PICTURE, zoomBy, zoomedFit } from '@/components/bench/zoom/zoom';
+
+const SIZE = { widthPx: 800, heightPx: 500 };
+const WHOLE: Fit = { scale: 1.3, x: 410, y: 240 };
+/** Pixels; sums of a few products, so far below what a screen shows. */
+const NEAR = 9;
+
+describe('zoom and pan of a picture', () => {
+  it('the whole picture is its own fit', () => {
+    expect(zoomedFit(WHOLE, WHOLE_PICTURE, SIZE)).toEqual(WHOLE);
+  });
+
+  it('keeps under the pointer what lies under it', () => {
+    const pixel = fc.tuple(fc.double({ min: 0, max: 800, noNaN: true }), fc.double({ min: 0, max: 500, noNaN: true }));
+    fc.assert(
+      fc.property(pixel, fc.double({ min: 1, max: 3, noNaN: true }), fc.double({ min: 1, max: 2, noNaN: true }), (at, first, then) => {
+        const before = zoomBy(WHOLE_PICTURE, first, SIZE, at);
+        const after = zoomBy(before, then, SIZE, at);
+        const under = fromPixels(zoomedFit(WHOLE, before, SIZE), at);
+        const [x, y] = toPixels(zoomedFit(WHOLE, after, SIZE), under);
+        expect(x).toBeCloseTo(at[0], NEAR);
+        expect(y).toBeCloseTo(at[1], NEAR);
+      }),
+      { seed: 20260302, numRuns: 200 },
+    );
+  });
+
+  it('stops at eight times and at the whole picture, which cannot be moved', () => {
+    expect(zoomBy(WHOLE_PICTURE, 100, SIZE).factor).toBe(MOST_ZOOM);
+    expect(zoomBy(zoomBy(WHOLE_PICTURE, 4, SIZE, [700, 20]), 0.01, SIZE)).toEqual(WHOLE_PICTURE);
+    expect(panBy(WHOLE_PICTURE, [50, -30], SIZE)).toEqual(WHOLE_PICTURE);
+  });
+
+  it('is moved to its own edge, not further', () => {
+    const twice = zoomBy(WHOLE_PICTURE, 2, SIZE);
+    expect(panBy(twice, [-60, 25], SIZE).movedPx).toEqual([-60, 25]);
+    expect(panBy(twice, [5000, -5000], SIZE).movedPx).toEqual([400, -250]);
+  });
+});
