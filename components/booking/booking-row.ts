@@ -1,4 +1,5 @@
 import type { Verdict } from '@/lib/physics/model/assessment';
+import type { PreCheckResult } from '@/lib/domain/pre-check/result';
 import { REGION_WORDS } from '@/lib/presentation/anatomy-words';
 import { dayKey, formatDay, formatTime } from '@/lib/presentation/moment';
 import type { BookingListItem } from '@/lib/schemas/booking';
@@ -18,6 +19,12 @@ export interface BookingRow {
   readonly verdict?: Verdict;
   readonly minutesNeeded?: number;
   readonly plan: string;
+  readonly result?: PreCheckResult;
+  readonly minutesOver?: number;
+  readonly stale: boolean;
+  readonly moveProposed: boolean;
+  readonly escalation?: 'open' | 'decided';
+  readonly changed: string;
   readonly next: { readonly label: string; readonly href: string };
 }
 
@@ -56,6 +63,31 @@ export function toBookingRow(booking: BookingListItem): BookingRow {
     ...(booking.verdict ? { verdict: booking.verdict } : {}),
     ...(booking.minutesNeeded === undefined ? {} : { minutesNeeded: booking.minutesNeeded }),
     plan: planWords(booking.planState),
-    next: nextStep(booking),
+    ...(booking.result ? { result: booking.result } : {}),
+    ...(booking.minutesOver === undefined ? {} : { minutesOver: booking.minutesOver }),
+    stale: booking.stale,
+    moveProposed: booking.moveProposed,
+    ...(booking.escalation ? { escalation: booking.escalation } : {}),
+    changed: `${formatDay(new Date(booking.changedAt))}, ${formatTime(new Date(booking.changedAt))}`,
+    next: checkedStep(booking) ?? nextStep(booking),
   };
+}
+
+/** What a check says to do, and where it is done. */
+export function checkedStep({ id, next, result }: Pick<BookingListItem, 'id' | 'next' | 'result'>): BookingRow['next'] | undefined {
+  if (!next || !result || next.kind === 'none') return undefined;
+  const booking = `/bookings/${id}`;
+  switch (next.kind) {
+    case 'plan':
+    case 'finish-plan':
+      return { label: next.text, href: `/bench/${id}` };
+    case 'ask-sizes':
+    case 'measure':
+      return { label: next.kind === 'measure' ? 'Have it measured' : 'Enter or ask for sizes', href: `${booking}#sizes` };
+    case 'propose':
+    case 'propose-time':
+      return { label: next.text, href: `${booking}#move` };
+    case 'escalate':
+      return { label: next.text, href: `${booking}#lead` };
+  }
 }

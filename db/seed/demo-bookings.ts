@@ -37,7 +37,7 @@ const MALE = measured('sex', 2, 0);
 export const DEMO_BOOKINGS: readonly DemoBooking[] = [
   {
     accession: 'HB-2107', day: 0, at: '08:20', slotMinutes: 45, scanner: 'B', protocol: 'abdomen', sizedDaysBefore: 6,
-    readings: [measured('breadth-mm', 480), reported('depth-mm', 340, 12), measured('weight-kg', 146, 1), measured('height-cm', 174, 1), MALE, arms('down'), ...breath(18, 4.2)],
+    readings: [measured('breadth-mm', 480), reported('depth-mm', 340, 12), measured('weight-kg', 146, 1), measured('height-cm', 174, 1), MALE, arms('down'), ...breath(18, 4.2), measured('shoulder-breadth-mm', 520), measured('elbow-breadth-mm', 520)],
   },
   {
     accession: 'HB-2109', day: 0, at: '09:20', slotMinutes: 45, scanner: 'A', protocol: 'abdomen', sizedDaysBefore: 3,
@@ -45,7 +45,7 @@ export const DEMO_BOOKINGS: readonly DemoBooking[] = [
   },
   {
     accession: 'HB-2112', day: 0, at: '10:40', slotMinutes: 40, scanner: 'B', protocol: 'pelvis', sizedDaysBefore: 9,
-    readings: [measured('breadth-mm', 455), measured('depth-mm', 305), measured('hip-girth-cm', 138, 2), measured('weight-kg', 121, 1), FEMALE, arms('down'), ...breath(20, 4)],
+    readings: [measured('breadth-mm', 455), measured('depth-mm', 305), measured('hip-girth-cm', 138, 2), measured('weight-kg', 121, 1), measured('height-cm', 166, 1), FEMALE, arms('down'), ...breath(20, 4), measured('elbow-breadth-mm', 480)],
   },
   {
     accession: 'HB-2113', day: 0, at: '13:10', slotMinutes: 45, scanner: 'B', protocol: 'abdomen', sizedDaysBefore: 12,
@@ -53,7 +53,7 @@ export const DEMO_BOOKINGS: readonly DemoBooking[] = [
   },
   {
     accession: 'HB-2116', day: 0, at: '14:20', slotMinutes: 45, scanner: 'A', protocol: 'abdomen', sizedDaysBefore: 1,
-    readings: [localiser('extent-right-mm', 214), localiser('extent-left-mm', 206), localiser('extent-anterior-mm', 138), localiser('extent-posterior-mm', 150), measured('weight-kg', 118, 1), FEMALE, arms('up'), ...breath(22, 4.4)],
+    readings: [localiser('extent-right-mm', 214), localiser('extent-left-mm', 206), localiser('extent-anterior-mm', 138), localiser('extent-posterior-mm', 150), measured('weight-kg', 118, 1), measured('height-cm', 169, 1), FEMALE, arms('up'), ...breath(22, 4.4), measured('shoulder-breadth-mm', 470), measured('elbow-breadth-mm', 450), measured('hip-breadth-mm', 440)],
   },
   {
     accession: 'HB-2118', day: 1, at: '08:20', slotMinutes: 45, scanner: 'B', protocol: 'abdomen', sizedDaysBefore: 20,
@@ -61,7 +61,7 @@ export const DEMO_BOOKINGS: readonly DemoBooking[] = [
   },
   {
     accession: 'HB-2121', day: 1, at: '10:00', slotMinutes: 40, scanner: 'A', protocol: 'pelvis', sizedDaysBefore: 4,
-    readings: [reported('weight-kg', 112, 3), reported('height-cm', 161, 2), FEMALE, arms('down')],
+    readings: [measured('breadth-mm', 470), measured('depth-mm', 322), measured('weight-kg', 208, 1), measured('height-cm', 176, 1), FEMALE, arms('up'), measured('shoulder-breadth-mm', 530), measured('elbow-breadth-mm', 510), measured('hip-breadth-mm', 490)],
   },
   {
     accession: 'HB-2122', day: 1, at: '11:30', slotMinutes: 45, scanner: 'A', protocol: 'abdomen', sizedDaysBefore: 2,
@@ -73,7 +73,7 @@ export const DEMO_BOOKINGS: readonly DemoBooking[] = [
   },
   {
     accession: 'HB-2130', day: 2, at: '13:40', slotMinutes: 40, scanner: 'B', protocol: 'pelvis', sizedDaysBefore: 5,
-    readings: [measured('girth-cm', 126, 2), measured('hip-girth-cm', 142, 2), measured('weight-kg', 124, 1), measured('height-cm', 165, 1), FEMALE, arms('down'), ...breath(16, 4)],
+    readings: [measured('breadth-mm', 405), measured('depth-mm', 242), measured('weight-kg', 104, 1), measured('height-cm', 165, 1), FEMALE, arms('up'), ...breath(16, 4), measured('shoulder-breadth-mm', 450), measured('elbow-breadth-mm', 430), measured('hip-breadth-mm', 430)],
   },
   {
     accession: 'HB-2133', day: 3, at: '08:40', slotMinutes: 45, scanner: 'A', protocol: 'abdomen', sizedDaysBefore: 7,

@@ -3,6 +3,7 @@ import { insertBooking, writeBookingState } from '@/db/queries/booking/bookings'
 import { findProtocol, insertProtocol } from '@/db/queries/protocol/protocols';
 import { findScanner, insertScanner } from '@/db/queries/scanner/scanners';
 import { addPolicyVersion } from '@/db/queries/site-policy/policies';
+import { insertSessions } from '@/db/queries/scanner-session/scanner-sessions';
 import { insertSizeReadings, listSizeReadings } from '@/db/queries/size-reading/size-readings';
 import { assessAsBooked, stateOfAssessments } from '@/lib/domain/booking/assess-as-booked';
 import { DEFAULT_POLICY } from '@/lib/domain/case/model';
@@ -29,6 +30,7 @@ export interface SeedDemo {
 }
 
 const DAY_MS = 86_400_000;
+const SESSION_DAYS = 14;
 const siteId = DEMO_SITE_ID;
 const policy = { ...DEFAULT_POLICY, version: 1 };
 
@@ -94,6 +96,19 @@ async function writeState(trx: SiteTransaction, booking: DemoBooking, bookingId:
   await writeBookingState(trx, siteId, bookingId, stateOfAssessments(assessments), now);
 }
 
+/** Both scanners are staffed through the day for a fortnight, with an hour at noon when nobody is. */
+async function insertDemoSessions(trx: SiteTransaction, createdBy: string, now: Date): Promise<void> {
+  const at = (day: number, time: string) => new Date(Date.parse(`${dayOf(now)}T${time}:00Z`) + day * DAY_MS);
+  const sessions = Object.keys(DEMO_SCANNERS).flatMap((key) =>
+    Array.from({ length: SESSION_DAYS }, (_, day) =>
+      [['08:00', '12:30'], ['13:00', '17:30']].map(([from, to]) => ({
+        id: demoId(`session/${key}/${day}/${from}`), scannerId: demoId(`scanner/${key}`), startsAt: at(day, from!), endsAt: at(day, to!),
+      })),
+    ).flat(),
+  );
+  await insertSessions(trx, siteId, sessions, createdBy);
+}
+
 async function insertDemoBooking(trx: SiteTransaction, booking: DemoBooking, createdBy: string, now: Date): Promise<void> {
   const bookingId = await insertBooking(
     trx,
@@ -134,6 +149,7 @@ export async function seedDemo({ db, accounts, now = new Date() }: SeedDemo): Pr
       const lead = accounts.find((person) => person.roles.includes('lead')) ?? accounts[0];
       const createdBy = demoId(`person/${lead?.email}`);
       await insertSetup(trx, createdBy);
+      await insertDemoSessions(trx, createdBy, now);
       for (const booking of DEMO_BOOKINGS) await insertDemoBooking(trx, booking, createdBy, now);
     },
     db,

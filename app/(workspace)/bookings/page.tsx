@@ -1,66 +1,57 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { BookingFilter } from '@/components/booking/booking-filter';
 import { toBookingRow } from '@/components/booking/booking-row';
 import { BookingTable } from '@/components/booking/booking-table';
-import { DayRange } from '@/components/booking/day-range';
-import { dayRange } from '@/components/booking/requested-days';
+import { BookingViews } from '@/components/booking/booking-views';
+import { tableHref, tableQuery, type TableSearch } from '@/components/booking/table-query';
 import { LinkButton } from '@/components/ui/button';
 import { EmptyState, PageBody, PageHeader } from '@/components/ui/page';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
-import { listBookings } from '@/lib/services/booking/list-bookings';
+import { PLANNING_ESTIMATE } from '@/lib/presentation/pre-check-words';
+import { listBookingTable } from '@/lib/services/pre-check/list-booking-table';
+import { listProtocols } from '@/lib/services/protocol/list-protocols';
+import { listScanners } from '@/lib/services/scanner/list-scanners';
+import { proposeChosen, recheckChosen } from './actions';
 
 export const metadata: Metadata = { title: 'Bookings' };
 
-interface Props {
-  searchParams: Promise<{ from?: string; to?: string; after?: string }>;
-}
-
-export default async function BookingsPage({ searchParams }: Props) {
-  const query = await searchParams;
-  const { from, to } = dayRange(query, new Date());
-  const { page, mayAdd } = await loadPage(async (context) => ({
-    page: await listBookings(context, {
-      from,
-      to,
-      limit: 200,
-      ...(query.after ? { after: query.after } : {}),
-    }),
-    mayAdd: mayAttempt(context.actor, 'booking.create'),
+export default async function BookingsPage({ searchParams }: { searchParams: Promise<TableSearch> }) {
+  const search = await searchParams;
+  const query = tableQuery(search, new Date());
+  const { page, actor, scanners, protocols } = await loadPage(async (context) => ({
+    page: await listBookingTable(context, query),
+    actor: context.actor,
+    scanners: await listScanners(context, { includeArchived: true }),
+    protocols: await listProtocols(context, { includeArchived: true }),
   }));
-  const add = mayAdd && (
-    <LinkButton href="/bookings/new" variant="primary">
-      Add a booking
-    </LinkButton>
-  );
-  const days = <DayRange from={from} to={to} />;
+  const add = mayAttempt(actor, 'booking.create') && <LinkButton href="/bookings/new" variant="primary">Add a booking</LinkButton>;
   return (
     <PageBody wide>
-      <PageHeader
-        title="Bookings"
-        lead="Under accession numbers; no names, no dates of birth."
-        actions={add}
+      <PageHeader title="Bookings" lead={`Under accession numbers; no names, no dates of birth. ${PLANNING_ESTIMATE}`} actions={add} />
+      <BookingViews current="table" />
+      <BookingFilter
+        search={search}
+        days={query}
+        counts={page.counts}
+        scanners={scanners.map(({ id, scanner }) => ({ value: id, label: scanner.name }))}
+        protocols={protocols.map(({ id, name }) => ({ value: id, label: name }))}
       />
       {page.bookings.length === 0 ? (
-        <div className="space-y-4">
-          {days}
-          <EmptyState title="No bookings on these days" action={add}>
-            Choose other days above{mayAdd ? ', or add one' : ''}.
-          </EmptyState>
-        </div>
+        <EmptyState title="No booking matches" action={add}>Choose other days or another filter above.</EmptyState>
       ) : (
-        <BookingTable rows={page.bookings.map(toBookingRow)} days={days} />
+        <BookingTable
+          rows={page.bookings.map(toBookingRow)}
+          search={search}
+          may={{ check: mayAttempt(actor, 'booking.check'), propose: mayAttempt(actor, 'booking.propose'), export: mayAttempt(actor, 'booking.export') }}
+          doers={{ recheck: recheckChosen, propose: proposeChosen }}
+        />
       )}
-      {page.next && (
-        <p className="mt-4">
-          <Link
-            className="text-link"
-            href={`/bookings?${new URLSearchParams({ from, to, after: page.next })}`}
-          >
-            Later bookings of these days
-          </Link>
-        </p>
-      )}
+      <p className="mt-3 flex gap-6">
+        {search.after && <Link className="text-link" href={tableHref(search, {})}>First page</Link>}
+        {page.next && <Link className="text-link" href={tableHref(search, { after: page.next })}>Next {page.bookings.length} bookings</Link>}
+      </p>
     </PageBody>
   );
 }

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { CoordinatorDay } from '@/components/booking/coordinator-day';
 import { TodayView } from '@/components/booking/today-view';
 import { toBookingRow } from '@/components/booking/booking-row';
 import { LinkButton } from '@/components/ui/button';
@@ -7,6 +8,7 @@ import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
 import { addDays, dayKey, formatLongDay } from '@/lib/presentation/moment';
 import { listBookings } from '@/lib/services/booking/list-bookings';
+import { getCoordinatorDay } from '@/lib/services/pre-check/get-coordinator-day';
 
 export const metadata: Metadata = { title: 'Today' };
 
@@ -15,7 +17,8 @@ const DAYS_AHEAD = 7;
 
 export default async function TodayPage() {
   const now = new Date();
-  const { page, mayAdd } = await loadPage(async (context) => ({
+  const { page, mayAdd, work } = await loadPage(async (context) => ({
+    work: mayAttempt(context.actor, 'booking.propose') ? await getCoordinatorDay(context) : null,
     page: await listBookings(context, {
       from: dayKey(now),
       to: dayKey(addDays(now, DAYS_AHEAD)),
@@ -39,6 +42,14 @@ export default async function TodayPage() {
           </>
         }
       />
+      {work && (
+        <CoordinatorDay
+          {...work}
+          from={dayKey(now)}
+          to={dayKey(addDays(now, work.days - 1))}
+          escalated={work.escalated.map(toBookingRow)}
+        />
+      )}
       <TodayView rows={rows} today={dayKey(now)} now={now.toISOString()} mayAdd={mayAdd} />
     </PageBody>
   );

@@ -93,3 +93,15 @@ export async function countResults(trx: SiteTransaction, siteId: string, filter:
   const rows = await query.execute();
   return Object.fromEntries(rows.map(({ result, bookings }) => [result || 'unchecked', Number(bookings)]));
 }
+
+/** Bookings a lead was asked to decide, soonest first. */
+export async function listEscalated(trx: SiteTransaction, siteId: string, from: Date, limit: number): Promise<BookingOverview[]> {
+  const rows = await overviews(trx, siteId)
+    .where('t.escalation', '=', 'open')
+    .where('b.scheduled_at', '>=', from)
+    .orderBy('b.scheduled_at')
+    .orderBy('b.id')
+    .limit(limit)
+    .execute();
+  return rows.map(toOverview);
+}

@@ -123,11 +123,12 @@ export function checkOpening(question: Question): Opening {
       findings: [{ subject: 'opening', code: 'opening-unknown', calls: 'size-needed', needs: ['girth-cm', 'sex'], text: 'The trunk’s size is not known, so the clearance in the opening is not.' }],
     };
   }
-  const extras = extrasOf(new NewestReadings(question.readings));
+  const newest = new NewestReadings(question.readings);
+  const extras = extrasOf(newest);
   try {
     const bore = checkBore(patient, question.scanner, extras);
     const unknown = bore.unknown.map((name): Finding => ({
-      subject: 'opening', code: 'opening-unknown', calls: 'size-needed', needs: NEEDS[name] ?? [], text: `Not known, and it counts in the opening: ${name}.`,
+      subject: 'opening', code: 'opening-unknown', calls: 'size-needed', needs: (NEEDS[name] ?? []).filter((quantity) => !newest.get(quantity)), text: `Not known, and it counts in the opening: ${name}.`,
     }));
     const { tightest } = bore;
     return {

@@ -70,7 +70,8 @@ export function checkSequences(cases: readonly Case[], breathHoldKnown: boolean,
       const remedy = accepted || now.verdict === 'not-modelled'
         ? undefined
         : rankRemedies(question).remedies.find(({ assessment }) => passes(assessment, question))?.sentence;
-      if (!accepted) findings.push(foldFinding(question, now, remedy));
+      // The table's limit is a finding of its own, said once.
+      if (!accepted && now.reasons[0]?.code !== 'table-load-over-limit') findings.push(foldFinding(question, now, remedy));
       findings.push(...holdFinding(question, now, breathHoldKnown));
       const probability = options.probabilities ? probabilityOf(question) : undefined;
       sequences.push({

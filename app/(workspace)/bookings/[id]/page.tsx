@@ -1,43 +1,28 @@
 import type { Metadata } from 'next';
 import { BookingFacts } from '@/components/booking/booking-facts';
-import { toBookingRow } from '@/components/booking/booking-row';
+import { checkedStep, toBookingRow } from '@/components/booking/booking-row';
+import { openMove, scannerPlaces, shownLines } from '@/components/booking/booking-words';
+import { HistoryPanel } from '@/components/booking/history-panel';
+import { LeadPanel } from '@/components/booking/lead-panel';
+import { MovePanel } from '@/components/booking/move-panel';
+import { PreCheckPanel } from '@/components/booking/pre-check-panel';
 import { ReadingForm } from '@/components/booking/reading-form';
 import { SizeRecord } from '@/components/booking/size-record';
-import { KeepClearRequestPanel } from '@/components/keep-clear-request/request-panel';
-import { OutcomeSection } from '@/components/outcome/outcome-section';
+import { SurgeryForm } from '@/components/booking/surgery-form';
 import { LinkButton } from '@/components/ui/button';
 import { PageBody, PageHeader } from '@/components/ui/page';
-import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
-import { dayKey } from '@/lib/presentation/moment';
-import { getBooking } from '@/lib/services/booking/get-booking';
-import { getKeepClearRequest } from '@/lib/services/keep-clear-request/get-keep-clear-request';
-import { listOutcomes } from '@/lib/services/outcome/list-outcomes';
-import { getPlan } from '@/lib/services/plan/get-plan';
-import { getSizeRecord } from '@/lib/services/size-reading/get-size-record';
-import { addReadings, askKeepClear } from '../actions';
+import { dayKey, formatMoment } from '@/lib/presentation/moment';
+import { getBookingPage } from '@/lib/services/pre-check/get-booking-page';
+import { addReadings, askLead, decideAsLead, noteBooking, proposePlace, setSurgery, withdrawPlace } from '../actions';
 
 export const metadata: Metadata = { title: 'Booking' };
 
 export default async function BookingPage({ params }: { params: Promise<{ id: string }> }) {
   const { id } = await params;
-  const { booking, record, requested, plan, outcomes, may } = await loadPage(async (context) => {
-    const booking = await getBooking(context, { id });
-    const { planId } = booking;
-    return {
-      booking,
-      record: await getSizeRecord(context, { bookingId: id }),
-      requested: await getKeepClearRequest(context, { bookingId: id }),
-      plan: planId ? await getPlan(context, { id: planId }) : null,
-      outcomes: planId ? (await listOutcomes(context, { planId })).outcomes : [],
-      may: {
-        record: mayAttempt(context.actor, 'size-reading.record'),
-        plan: mayAttempt(context.actor, 'plan.edit'),
-        ask: mayAttempt(context.actor, 'keep-clear.request'),
-      },
-    };
-  });
+  const { booking, record, check, history, may, places, move } = await loadPage((context) => getBookingPage(context, { bookingId: id }));
   const row = toBookingRow(booking);
+  const today = dayKey(new Date());
   return (
     <PageBody>
       <PageHeader
@@ -47,26 +32,26 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
         actions={
           <>
             {booking.planId && <LinkButton href={`/plans/${booking.planId}`}>Open the plan</LinkButton>}
-            {may.plan && record.missing.length === 0 && <LinkButton href={`/bench/${id}/at-scanner`}>At the scanner</LinkButton>}
-            <LinkButton href={`/bench/${id}`} variant={record.missing.length > 0 ? 'secondary' : 'primary'}>
-              Open the bench
-            </LinkButton>
+            <LinkButton href={`/bench/${id}`}>Open the bench</LinkButton>
           </>
         }
       />
       <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 lg:grid-cols-[minmax(0,5fr)_minmax(0,9fr)]">
-        <div>
+        <div className="space-y-6">
           <BookingFacts row={row} />
-          <KeepClearRequestPanel region={booking.region} requested={requested} ask={may.ask ? askKeepClear.bind(null, id) : undefined} />
-          {plan && <OutcomeSection plan={plan} outcomes={outcomes} />}
+          {may.record && <SurgeryForm key={booking.surgeryOn} surgeryOn={booking.surgeryOn ?? ''} today={today} save={setSurgery.bind(null, id)} />}
+          <LeadPanel escalation={booking.escalation} ask={may.escalate ? askLead.bind(null, id) : undefined} decide={may.decide ? decideAsLead.bind(null, id) : undefined} />
+          <HistoryPanel lines={shownLines(history)} addNote={may.note ? noteBooking.bind(null, id) : undefined} />
         </div>
-        <section id="sizes" aria-labelledby="sizes-title" className="space-y-4">
-          <h2 id="sizes-title" className="text-xl">
-            Size record
-          </h2>
-          <SizeRecord record={record} />
-          {may.record && <ReadingForm today={dayKey(new Date())} add={addReadings.bind(null, id)} />}
-        </section>
+        <div className="space-y-6">
+          <PreCheckPanel check={check} checkedAt={check ? formatMoment(new Date(check.checkedAt)) : ''} next={checkedStep(booking)} />
+          {places && <MovePanel slotMinutes={places.slotMinutes} scanners={scannerPlaces(places)} open={openMove(move)} propose={proposePlace.bind(null, id)} withdraw={withdrawPlace.bind(null, id)} />}
+          <section id="sizes" aria-labelledby="sizes-title" className="space-y-4">
+            <h2 id="sizes-title" className="text-xl">Size record</h2>
+            <SizeRecord record={record} />
+            {may.record && <ReadingForm today={today} add={addReadings.bind(null, id)} />}
+          </section>
+        </div>
       </div>
     </PageBody>
   );
