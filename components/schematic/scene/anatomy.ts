@@ -1,55 +1,57 @@
 import type { BodyRegion } from '@/lib/physics/model/patient';
 import type { Plane } from '@/lib/physics/model/prescription';
-import type { AreaNode, Bounds, Ring, Token } from './scene';
-
-/** An ellipse in the trunk's own frame: centre and semi-axes as shares of the trunk's half-breadth and half-height. */
-interface Organ {
-  readonly name: string;
-  readonly at: readonly [number, number];
-  readonly semi: readonly [number, number];
-  readonly fill: Token;
-}
-
-/** Axial, at liver level; right of the patient on the left. A sketch to find one's way by, not a measurement. */
-const AXIAL_ABDOMEN: readonly Organ[] = [
-  { name: 'wall', at: [0, 0.03], semi: [0.82, 0.76], fill: 'tissue-lean' },
-  { name: 'liver', at: [-0.32, -0.13], semi: [0.4, 0.44], fill: 'tissue-organ' },
-  { name: 'stomach and spleen', at: [0.47, -0.06], semi: [0.14, 0.26], fill: 'tissue-gland' },
-  { name: 'right kidney', at: [-0.38, 0.34], semi: [0.11, 0.2], fill: 'tissue-gland' },
-  { name: 'left kidney', at: [0.36, 0.37], semi: [0.11, 0.2], fill: 'tissue-gland' },
-  { name: 'vena cava', at: [-0.07, 0.24], semi: [0.06, 0.065], fill: 'tissue-vessel' },
-  { name: 'aorta', at: [0.05, 0.25], semi: [0.055, 0.075], fill: 'tissue-vessel' },
-  { name: 'spine', at: [0, 0.48], semi: [0.135, 0.155], fill: 'tissue-bone' },
-];
-
-/** Coronal, through the liver. */
-const CORONAL_ABDOMEN: readonly Organ[] = [
-  { name: 'wall', at: [0, 0], semi: [0.82, 0.98], fill: 'tissue-lean' },
-  { name: 'liver', at: [-0.34, -0.3], semi: [0.4, 0.24], fill: 'tissue-organ' },
-  { name: 'stomach and spleen', at: [0.48, -0.34], semi: [0.15, 0.17], fill: 'tissue-gland' },
-  { name: 'right kidney', at: [-0.36, 0.13], semi: [0.12, 0.17], fill: 'tissue-gland' },
-  { name: 'left kidney', at: [0.36, 0.08], semi: [0.12, 0.17], fill: 'tissue-gland' },
-  { name: 'spine', at: [0, 0.05], semi: [0.1, 0.86], fill: 'tissue-bone' },
-];
-
-const SKETCHES: Partial<Record<BodyRegion, Partial<Record<Plane, readonly Organ[]>>>> = {
-  abdomen: { axial: AXIAL_ABDOMEN, coronal: CORONAL_ABDOMEN },
-};
+import type { TissueDrawing } from '@/lib/physics/section/section-drawing';
+import { HALF_LENGTH_MM, SKETCHES, type Organ } from './anatomy-sketches';
+import { boundsOf } from './rings';
+import type { AreaNode, Bounds, Ring } from './scene';
 
 const POINTS = 48;
 
-/** Organs sketched inside the trunk's outline. The engine never sees them. */
-export function anatomySketch(region: BodyRegion, plane: Plane, trunk: Bounds): readonly AreaNode[] {
-  const middle = [(trunk.left + trunk.right) / 2, (trunk.top + trunk.bottom) / 2] as const;
-  const half = [(trunk.right - trunk.left) / 2, (trunk.bottom - trunk.top) / 2] as const;
-  return (SKETCHES[region]?.[plane] ?? []).map((organ): AreaNode => {
-    const ring: Ring = Array.from({ length: POINTS }, (_, i) => {
-      const t = (2 * Math.PI * i) / POINTS;
-      return [
-        middle[0] + half[0] * (organ.at[0] + organ.semi[0] * Math.cos(t)),
-        middle[1] + half[1] * (organ.at[1] + organ.semi[1] * Math.sin(t)),
-      ] as const;
+/** Organs sketched inside the outlines of the body's parts. The engine never sees them. */
+export function anatomySketch(
+  region: BodyRegion,
+  plane: Plane,
+  tissue: readonly Pick<TissueDrawing, 'name' | 'kind'>[],
+  ringsOf: (index: number) => readonly Ring[],
+): readonly AreaNode[] {
+  const sketch = SKETCHES[region][plane];
+  return tissue.flatMap((part, index) => {
+    const organs = sketch[part.kind] ?? [];
+    const rings = organs.length > 0 ? ringsOf(index) : [];
+    const bounds = boundsOf(rings);
+    if (!bounds) return [];
+    return organs.flatMap((organ): AreaNode[] => {
+      const ring = outlineOf(organ, bounds, plane === 'axial' ? Infinity : HALF_LENGTH_MM[region]);
+      // Where a section narrows the part, an organ that would stick out of it is left away.
+      if (!ring.every((point) => isInside(rings, point))) return [];
+      return [{ kind: 'area', name: `sketch/${part.name.replace(/^tissue\//, '')}/${organ.name}`, rings: [ring], fill: organ.fill }];
     });
-    return { kind: 'area', name: `sketch/${organ.name}`, rings: [ring], fill: organ.fill };
   });
+}
+
+function outlineOf({ at, semi, corner = 2, through }: Organ, part: Bounds, halfLengthMm: number): Ring {
+  const [middleU, halfU] = [(part.left + part.right) / 2, (part.right - part.left) / 2];
+  const [partV, partHalfV] = [(part.top + part.bottom) / 2, (part.bottom - part.top) / 2];
+  const cut = !through && partHalfV > halfLengthMm;
+  const [middleV, halfV] = cut ? [0, halfLengthMm] : [partV, partHalfV];
+  const bent = (value: number): number => Math.sign(value) * Math.abs(value) ** (2 / corner);
+  return Array.from({ length: POINTS }, (_, i) => {
+    const t = (2 * Math.PI * (i + 0.5)) / POINTS;
+    return [
+      middleU + halfU * (at[0] + semi[0] * bent(Math.cos(t))),
+      middleV + halfV * (at[1] + semi[1] * bent(Math.sin(t))),
+    ] as const;
+  });
+}
+
+/** Even-odd rule: a ray to the right crosses the outline an odd number of times. */
+function isInside(rings: readonly Ring[], [u, v]: readonly [number, number]): boolean {
+  let inside = false;
+  for (const ring of rings) {
+    ring.forEach(([u1, v1], i) => {
+      const [u2, v2] = ring[(i + 1) % ring.length]!;
+      if (v1 > v !== v2 > v && u < u1 + ((v - v1) / (v2 - v1)) * (u2 - u1)) inside = !inside;
+    });
+  }
+  return inside;
 }

@@ -168,9 +168,8 @@ function differs(tissue: TissueDrawing, sure: readonly TissueDrawing[]): boolean
 }
 
 function sketchNodes(question: Case, tissue: readonly TissueDrawing[], toRing: (ring: SectionRing) => Ring): readonly AreaNode[] {
-  const trunk = tissue.find(({ kind }) => kind === 'trunk');
-  const bounds = trunk ? boundsOf(trunk.rings.map(toRing)) : null;
-  return bounds ? anatomySketch(question.patient.region, question.prescription.plane, bounds) : [];
+  const { patient, prescription } = question;
+  return anatomySketch(patient.region, prescription.plane, tissue, (index) => tissue[index]!.rings.map(toRing));
 }
 
 /** What lies outside the displayed window steps back. */
