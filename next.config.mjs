@@ -11,6 +11,13 @@ const headers = [
     : []),
 ];
 
+/** A page behind a link that is someone's alone: kept by no cache, named to no other site, found by no search. */
+const privateLink = [
+  { key: 'Referrer-Policy', value: 'no-referrer' },
+  { key: 'X-Robots-Tag', value: 'noindex, nofollow' },
+  { key: 'Cache-Control', value: 'no-store' },
+];
+
 /** @type {import('next').NextConfig} */
 const config = {
   distDir: process.env.SELVEDGE_DIST_DIR ?? '.next',
@@ -19,6 +26,6 @@ const config = {
   // Types are checked by "npm test", once, over the whole project; a start must not wait for it.
   typescript: { ignoreBuildErrors: true },
   serverExternalPackages: ['@node-rs/argon2', 'pg', 'pg-boss', '@react-pdf/renderer'],
-  headers: async () => [{ source: '/:path*', headers }],
+  headers: async () => [{ source: '/:path*', headers }, { source: '/size', headers: privateLink }],
 };
 export default config;

@@ -15,6 +15,8 @@ const planNews = z.strictObject({
 export const MAIL_KINDS = {
   invitation: z.strictObject({ schemaVersion: z.literal(1), expiresAt: z.iso.datetime() }),
   'password-reset': z.strictObject({ schemaVersion: z.literal(1), expiresAt: z.iso.datetime() }),
+  /** To someone without an account: it says nothing of the booking. */
+  'size-request': z.strictObject({ schemaVersion: z.literal(1), expiresAt: z.iso.datetime(), reminder: z.boolean() }),
   'sign-off-asked': planNews,
   'plan-for-use': planNews,
   'plan-sent-back': planNews,
@@ -56,6 +58,15 @@ const DRAFTS: Drafts = {
     paragraphs: [`Someone asked for a new password for your Selvedge account at ${siteName}.`],
     link: { words: 'Choose a new password', url },
     closing: `The link works once, until ${until(payload.expiresAt)}. If it was not you, do nothing: your password stays.`,
+  }),
+  'size-request': (payload, siteName, url) => ({
+    subject: `${payload.reminder ? 'A reminder: a' : 'A'} few measurements for your MR scan at ${siteName}`,
+    paragraphs: [
+      `${siteName} is preparing your MR scan. With a few measurements of your body we can choose the scanner and the time that suit you.`,
+      'It takes about five minutes and a tape measure; another person can help. You need no account, and your name is not asked for.',
+    ],
+    link: { words: 'Give the measurements', url },
+    closing: `The link works until ${until(payload.expiresAt)}. If you have given them already, or would rather not, do nothing: your appointment stays.`,
   }),
   'sign-off-asked': (payload, siteName, url) => ({
     subject: `Sign-off asked: ${nameOf(payload)}`,

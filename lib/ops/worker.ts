@@ -5,6 +5,7 @@ import { environment } from '@/lib/env';
 import { type JobPayload, QUEUES } from '@/lib/jobs';
 import { smtpTransport } from '@/lib/mail';
 import { refreshBookings } from '@/lib/services/booking/refresh-bookings';
+import { expireSizeRequest } from '@/lib/services/size-request/end-size-request';
 import { deliverMail } from '@/lib/services/mail/deliver-mail';
 import { makeSheet } from '@/lib/services/plan-sheet/make-sheet';
 
@@ -54,6 +55,10 @@ async function main(): Promise<void> {
     for (const { siteId, id } of await dueWork('plan-sheet', 10)) {
       if (stopping) return;
       await paint({ siteId, sheetId: id });
+    }
+    for (const due of await dueWork('size-request-expiry', 50)) {
+      if (stopping) return;
+      if (await expireSizeRequest(due)) console.log(`size request ${due.id}: expired`);
     }
     for (const siteId of new Set((await dueWork('pre-check', 20)).map((due) => due.siteId))) {
       if (stopping) return;

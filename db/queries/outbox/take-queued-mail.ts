@@ -6,6 +6,8 @@ export interface QueuedMail {
   readonly kind: string;
   /** Null when the person it was for has been disabled meanwhile. */
   readonly address: string | null;
+  /** Set for a mail whose address is sealed with a size request. */
+  readonly sizeRequest: { readonly id: string; readonly addressSealed: string } | null;
   readonly siteName: string;
   readonly payload: unknown;
   readonly attempts: number;
@@ -30,11 +32,12 @@ export async function takeQueuedMail(
         .onRef('u.id', '=', 'm.to_user_id')
         .on('u.disabled_at', 'is', null),
     )
+    .leftJoin('size_request as r', (join) => join.onRef('r.site_id', '=', 'm.site_id').onRef('r.id', '=', 'm.to_size_request_id'))
     .where('m.site_id', '=', siteId)
     .where('m.id', '=', id)
     .where('m.status', '=', 'queued')
     .where('m.next_attempt_at', '<=', now)
-    .select(['m.id', 'm.message_id', 'm.kind', 'm.to_address', 'u.email', 's.name', 'm.payload', 'm.attempts'])
+    .select(['m.id', 'm.message_id', 'm.kind', 'm.to_address', 'u.email', 's.name', 'm.payload', 'm.attempts', 'r.id as request_id', 'r.address_sealed'])
     .forUpdate('m')
     .skipLocked()
     .executeTakeFirst();
@@ -44,6 +47,7 @@ export async function takeQueuedMail(
         messageId: row.message_id,
         kind: row.kind,
         address: row.to_address ?? row.email,
+        sizeRequest: row.request_id === null ? null : { id: row.request_id, addressSealed: row.address_sealed ?? '' },
         siteName: row.name,
         payload: row.payload,
         attempts: row.attempts,
