@@ -6,9 +6,12 @@ import { Popover } from '@/components/ui/popover';
 import { Button } from '@/components/ui/button';
 import type { Ranking, Remedy } from '@/lib/physics/model/remedy';
 import { useActiveResult, useActiveSequence, useBenchState } from './bench-context';
+import { listedFirst } from './compare/compare-points';
+import { CompareRemedies } from './compare/compare-remedies';
 import { presentRanking } from './live/results';
 import { NotPossible } from './not-possible';
 import { RemedyCard } from './remedy-card';
+import { useToggleTrial } from './use-toggle-trial';
 
 /** Ranked remedies for the sequence on the bench. Selecting one is trying it. */
 export function RemediesPanel() {
@@ -44,10 +47,12 @@ const RankedList = memo(function RankedList({ ranking }: { ranking: Ranking }) {
   const [showAll, setShowAll] = useState(false);
   const [keepHold, setKeepHold] = useState(false);
   const [keepVoxel, setKeepVoxel] = useState(false);
+  const [linkedKey, setLinkedKey] = useState<string | null>(null);
+  const toggleTrial = useToggleTrial();
   const triedKey = useBenchState((state) => state.trial?.remedy.key ?? null);
   const { now, remedies, notPossible } = ranking;
   const wanted = remedies.filter((remedy) => (!keepHold || keepsHold(remedy, now)) && (!keepVoxel || keepsVoxel(remedy, now)));
-  const shown = showAll ? wanted : wanted.filter((remedy) => !remedy.dominated || remedy.key === triedKey);
+  const shown = showAll ? wanted : listedFirst(wanted, triedKey);
   const hidden = wanted.length - shown.length;
   const filters = remedies.length > 1;
   return (
@@ -59,15 +64,26 @@ const RankedList = memo(function RankedList({ ranking }: { ranking: Ranking }) {
         </div>
       )}
       {shown.length === 0 && <EmptyRanking ranking={ranking} filtered={wanted.length < remedies.length} />}
+      {showAll && wanted.length > 1 && (
+        <CompareRemedies remedies={wanted} {...{ now, linkedKey, triedKey }} onLink={setLinkedKey} onTry={toggleTrial} />
+      )}
       <ol aria-label="Ranked remedies">
         {shown.map((remedy) => (
-          <RemedyCard key={remedy.key} remedy={remedy} now={now} tried={remedy.key === triedKey} scale={scaleOf(shown)} />
+          <RemedyCard
+            key={remedy.key}
+            remedy={remedy}
+            now={now}
+            tried={remedy.key === triedKey}
+            linked={showAll && remedy.key === linkedKey}
+            onLink={showAll ? setLinkedKey : undefined}
+            scale={scaleOf(shown)}
+          />
         ))}
       </ol>
       {(hidden > 0 || showAll) && (
         <div className="px-4 py-3">
           <Button variant="quiet" size="sm" aria-expanded={showAll} onClick={() => setShowAll(!showAll)}>
-            {showAll ? 'Show only the best' : `Show all: ${hidden} more, each beaten by one above`}
+            {showAll ? 'Show only the best' : `Show all: ${hidden} more, each beaten by one above or leaving more fold`}
           </Button>
         </div>
       )}

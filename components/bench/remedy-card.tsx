@@ -11,8 +11,8 @@ import { costBreakdown, formatCost } from '@/lib/presentation/cost-words';
 import { formatSignedPercent } from '@/lib/presentation/percent';
 import { remedyChange, remedyTitle } from '@/lib/presentation/remedy-words';
 import { useActiveSequence, useBench } from './bench-context';
-import { presentRanking } from './live/results';
 import { CostBar } from './cost-bar';
+import { isPresentRemedy, useToggleTrial } from './use-toggle-trial';
 import { VerdictWords } from './verdict-words';
 
 export interface RemedyCardProps {
@@ -21,26 +21,21 @@ export interface RemedyCardProps {
   readonly tried: boolean;
   /** Tenths of a point that fill the bar. */
   readonly scale: number;
+  /** Pointed at, here or in the comparison: the other one shows it too. */
+  readonly linked?: boolean;
+  readonly onLink?: (key: string | null) => void;
 }
 
-export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
+export function RemedyCard({ remedy, now, tried, scale, linked = false, onLink }: RemedyCardProps) {
   const { store, live } = useBench();
   const { say } = useStatus();
+  const toggleTrial = useToggleTrial();
   const { id, prescription: present } = useActiveSequence();
   const title = remedyTitle(remedy);
   const after = remedy.assessment;
   const voxel = voxelChange(now, after);
-  // For the moment in which a newer ranking is on its way, a remedy would write an older prescription back.
-  const isPresent = () => {
-    const result = live.read()[id];
-    return result !== undefined && presentRanking(result)?.remedies.includes(remedy) === true;
-  };
-  const toggleTrial = () => {
-    if (tried) store.dispatch({ type: 'leave-trial' });
-    else if (isPresent()) store.dispatch({ type: 'try', remedy });
-  };
   const adopt = () => {
-    if (!isPresent()) return;
+    if (!isPresentRemedy(live, id, remedy)) return;
     store.dispatch({ type: 'adopt', remedy });
     say(`Adopted: ${title}. Undo takes it back.`);
     // The pressed button goes with its card; whoever works by keyboard stays in this column.
@@ -49,7 +44,15 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
   return (
     <li
       data-remedy={remedy.key}
-      className={cx('relative border-b border-line px-4 py-3', tried && 'bg-wash shadow-[inset_3px_0_0_var(--indigo)]')}
+      onPointerEnter={() => onLink?.(remedy.key)}
+      onPointerLeave={() => onLink?.(null)}
+      onFocus={() => onLink?.(remedy.key)}
+      onBlur={() => onLink?.(null)}
+      className={cx(
+        'relative border-b border-line px-4 py-3',
+        tried && 'bg-wash shadow-[inset_3px_0_0_var(--indigo)]',
+        linked && !tried && 'shadow-[inset_3px_0_0_var(--line-strong)]',
+      )}
     >
       <div className="flex items-baseline justify-between gap-4">
         <h3 className="min-w-0">
@@ -57,7 +60,7 @@ export function RemedyCard({ remedy, now, tried, scale }: RemedyCardProps) {
             type="button"
             aria-pressed={tried}
             aria-describedby={`cost-${remedy.key}`}
-            onClick={toggleTrial}
+            onClick={() => toggleTrial(remedy)}
             className="text-left font-semibold after:absolute after:inset-0"
           >
             {title}

@@ -51,7 +51,7 @@ export function GreyCanvas({
       height={picture.heightPx}
       data-picture={name}
       aria-hidden="true"
-      className="absolute bg-black"
+      className="absolute"
     />
   );
 }
