@@ -18,7 +18,7 @@ export async function resolveSignIn(email: string, db: Database = database()): P
   return row ? { siteId: row.site_id, userId: row.user_id, passwordHash: row.password_hash } : null;
 }
 
-export type TokenKind = 'api' | 'set-password' | 'size-request';
+export type TokenKind = 'api' | 'set-password' | 'size-request' | 'demonstration-share';
 
 export interface TokenMatch {
   readonly siteId: string;

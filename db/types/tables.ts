@@ -125,6 +125,29 @@ export interface CheckResult {
   site_id: string;
 }
 
+export interface Demonstration {
+  changed_at: Generated<Timestamp>;
+  created_at: Generated<Timestamp>;
+  created_by: string;
+  id: Generated<string>;
+  site_id: string;
+  title: string;
+  version: Generated<number>;
+}
+
+export interface DemonstrationShare {
+  created_at: Generated<Timestamp>;
+  created_by: string;
+  demonstration_id: string;
+  expires_at: Timestamp;
+  id: Generated<string>;
+  last_opened_at: Timestamp | null;
+  openings: Generated<number>;
+  revoked_at: Timestamp | null;
+  site_id: string;
+  token_hash: string;
+}
+
 export interface ImportBatch {
   changed_count: Generated<number>;
   committed_at: Timestamp | null;
@@ -314,6 +337,15 @@ export interface ScannerVersion {
   version: number;
 }
 
+export interface Scene {
+  data: Json;
+  demonstration_id: string;
+  id: string;
+  position: number;
+  removed: Generated<number>;
+  site_id: string;
+}
+
 export interface Sequence {
   data: Json;
   family: string;
@@ -390,6 +422,8 @@ export interface DB {
   booking_state: BookingState;
   booking_tombstone: BookingTombstone;
   check_result: CheckResult;
+  demonstration: Demonstration;
+  demonstration_share: DemonstrationShare;
   import_batch: ImportBatch;
   import_row: ImportRow;
   import_settings: ImportSettings;
@@ -406,6 +440,7 @@ export interface DB {
   scanner: Scanner;
   scanner_session: ScannerSession;
   scanner_version: ScannerVersion;
+  scene: Scene;
   sequence: Sequence;
   sign_off: SignOff;
   site: Site;

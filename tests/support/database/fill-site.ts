@@ -184,6 +184,13 @@ async function insertAll(
     .insertInto('size_request')
     .values({ site_id, booking_id: ids.bookingId, token_hash: `s-${site_id}`, expires_at: later, asked_by: by })
     .execute();
+  const demonstration_id = randomUUID();
+  await trx.insertInto('demonstration').values({ site_id, id: demonstration_id, title: 'Shown', created_by: by }).execute();
+  await trx.insertInto('scene').values({ site_id, id: randomUUID(), demonstration_id, position: 0, data: DOCUMENT }).execute();
+  await trx
+    .insertInto('demonstration_share')
+    .values({ site_id, demonstration_id, token_hash: `d-${site_id}`, expires_at: later, created_by: by })
+    .execute();
   await trx
     .insertInto('audit_event')
     .values({
