@@ -124,6 +124,18 @@ describe('extent of a part along a direction', () => {
   ];
   const given = withCoil(undefined);
 
+  it('along x and y ends where the site’s reach about the origin ends, unless it says', () => {
+    const open: PartShape = {
+      type: 'elliptic-cylinder',
+      along: 'y',
+      centreMm: [0, 0, 0],
+      semiAxesMm: [50, 40],
+    };
+    const part: SolidPart = { name: 'a part', kind: 'other', shape: open, signalWeight: 1, estimated: false };
+    expect(partAlong(part, [0, 1, 0], given)).toEqual([-250, 250]);
+    expect(partAlong(part, [1, 0, 0], given)).toEqual([-50, 50]);
+  });
+
   /** Points on the surface of a shape, written apart from the engine: what the engine's closed form must enclose. */
   function* surface(shape: PartShape): Generator<Vec3> {
     const order = { x: [0, 1, 2], y: [1, 0, 2], z: [2, 0, 1] } as const;
@@ -244,6 +256,7 @@ describe('the scanner’s grid from above', () => {
   it('finds the largest number of lines it can be set to', () => {
     expect(floorToLineGrid(251.9, 240, { kind: 'even-lines' })).toBe(250);
     expect(floorToLineGrid(252, 240, { kind: 'even-lines' })).toBe(252);
+    expect(floorToLineGrid(251.9995, 240, { kind: 'line' })).toBe(251);
     expect(floorToLineGrid(300, 240, { kind: 'percent', percent: 10 })).toBe(288);
     expect(floorToLineGrid(479, 240, { kind: 'doubling' })).toBe(240);
     expect(floorToLineGrid(480 - 1e-12, 240, { kind: 'doubling' })).toBe(480);
