@@ -1,7 +1,7 @@
 'use client';
 
 import type { Stage as KonvaStage } from 'konva/lib/Stage';
-import { useEffect, useRef } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { Layer, Stage } from 'react-konva/lib/ReactKonvaCore';
 import type { Fit, Scene, SceneNode } from '../scene/scene';
 import { AreaShape, LinesShape, MarkerShape, TextShape } from './konva-nodes';
@@ -27,7 +27,8 @@ declare global {
 export default function KonvaScene({ name, ...props }: KonvaSceneProps & { name: string }) {
   const { palette } = useTokens();
   const stage = useRef<KonvaStage>(null);
-  const family = getComputedStyle(document.body).fontFamily;
+  // Asked once: a computed style at every frame of a drag would lay the page out again before it is painted.
+  const [family] = useState(() => getComputedStyle(document.body).fontFamily);
   const reduced = window.matchMedia('(prefers-reduced-motion: reduce)').matches;
   const still = props.still || reduced;
 
@@ -67,7 +68,8 @@ export default function KonvaScene({ name, ...props }: KonvaSceneProps & { name:
 
   return (
     <Stage ref={stage} width={props.widthPx} height={props.heightPx}>
-      <Layer>{props.scene.nodes.map(paint)}</Layer>
+      {/* Nothing is hovered while a handle is held: then the second canvas, which finds what is, need not be painted. */}
+      <Layer listening={!props.still}>{props.scene.nodes.map(paint)}</Layer>
     </Stage>
   );
 }

@@ -1,6 +1,6 @@
 'use client';
 
-import { useSyncExternalStore } from 'react';
+import { useMemo, useSyncExternalStore } from 'react';
 import type { Token } from '../scene/scene';
 
 export type Palette = (token: Token) => string;
@@ -20,14 +20,25 @@ function subscribe(changed: () => void): () => void {
   };
 }
 
-/** Names the theme that is in force; only a change of it needs new colours. */
+/** Names the theme that is in force without asking for a computed style: this runs at every render of a drag. */
 function themeKey(): string {
-  const style = getComputedStyle(document.documentElement);
-  return `${style.getPropertyValue('--cloth')} ${style.getPropertyValue('--ink')}`;
+  const dark = window.matchMedia('(prefers-color-scheme: dark)').matches;
+  return `${document.documentElement.dataset.theme ?? 'system'} ${dark ? 'dark' : 'light'}`;
 }
 
 export function useTokens(): { readonly palette: Palette; readonly themeKey: string } {
   const key = useSyncExternalStore(subscribe, themeKey, () => '');
-  const style = getComputedStyle(document.documentElement);
-  return { themeKey: key, palette: (token) => style.getPropertyValue(`--${token}`).trim() };
+  return useMemo(() => ({ themeKey: key, palette: readOnce() }), [key]);
+}
+
+/** Each colour is read when it is first painted, and kept for as long as the theme is. */
+function readOnce(): Palette {
+  const known = new Map<Token, string>();
+  return (token) => {
+    const kept = known.get(token);
+    if (kept !== undefined) return kept;
+    const value = getComputedStyle(document.documentElement).getPropertyValue(`--${token}`).trim();
+    known.set(token, value);
+    return value;
+  };
 }

@@ -222,6 +222,7 @@ const SHOULDER: Record<Plane, Sketch> = {
   },
   coronal: {
     trunk: [
+      organ('muscle', [0, 0.04], [0.9, 0.8], 'tissue-lean'),
       ...both('lung', [0.3, 0.5], [0.22, 0.42], 'paper'),
       ...both('head of the arm bone', [0.76, 0.04], [0.1, 0.16], 'tissue-bone'),
       ...both('arm bone', [0.8, 0.5], [0.05, 0.36], 'tissue-bone', { corner: 5 }),
