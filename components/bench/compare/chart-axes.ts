@@ -4,11 +4,14 @@ export interface Axis {
   readonly ticks: readonly number[];
 }
 
+/** Percent; changes smaller than this would otherwise fill the chart. */
+const NARROWEST = 4;
+
 /** A range that holds every value and 0, in round steps, with about four ticks. */
 export function axisOf(values: readonly number[]): Axis {
   const least = Math.min(0, ...values);
   const most = Math.max(0, ...values);
-  const step = roundStep((most - least || 10) / 4);
+  const step = roundStep(Math.max(NARROWEST, most - least) / 4);
   const low = Math.floor(least / step - 0.25) * step;
   const high = Math.ceil(most / step + 0.25) * step;
   const ticks = Array.from({ length: Math.round((high - low) / step) + 1 }, (_, i) => low + i * step);

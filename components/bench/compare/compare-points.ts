@@ -25,7 +25,8 @@ export function leavesFoldInside({ assessment }: Pick<Remedy, 'assessment'>): bo
  * some remedy leaves none. The tried one always stays.
  */
 export function listedFirst(remedies: readonly Remedy[], triedKey: string | null): readonly Remedy[] {
-  const someLeaveNone = remedies.some((remedy) => !leavesFoldInside(remedy));
+  // Among those that would be listed: what another one beats must not empty the list.
+  const someLeaveNone = remedies.some((remedy) => !remedy.dominated && !leavesFoldInside(remedy));
   return remedies.filter(
     (remedy) => remedy.key === triedKey || (!remedy.dominated && !(someLeaveNone && leavesFoldInside(remedy))),
   );

@@ -125,3 +125,56 @@ describe('geometry of the picture', () => {
     expect(centroidOf([])).toBeNull();
   });
 });
+
+describe('what is not known for certain', () => {
+  const wide = (): DrawnSection => {
+    const { patient, keepClear, scanner } = benchDocument();
+    const question: Case = {
+      patient,
+      keepClear,
+      scanner: { ...scanner, limits: { ...scanner.limits, usableFovMm: [440, 500, 400] } },
+      policy: DEFAULT_POLICY,
+      prescription: typicalPrescription({ phaseAxis: 'RL', fovPhaseMm: 400, fovReadoutMm: 340 }),
+    };
+    return { question, drawing: drawSection(geometryCase(question)) };
+  };
+
+  it('hatches what lands for certain, and gives what comes from beyond the usable FOV a dashed outline and words', () => {
+    const scene = sceneOf(wide());
+    const hatched = named(scene, /^piece\/trunk\/-?1\/landed\/hatch$/);
+    expect(hatched).toHaveLength(2);
+    for (const name of ['piece/trunk/1', 'piece/trunk/-1']) {
+      const uncertain = named(scene, `${name}/landed/uncertain`)[0] as AreaNode;
+      expect(uncertain.stroke!.edge).toBe('dashed');
+      expect(uncertain.fill).toBeUndefined();
+      expect((named(scene, `${name}/landed/uncertain/label`)[0] as TextNode).text).toBe('place uncertain');
+      expect((named(scene, `${name}/landed`)[0] as AreaNode).stroke!.edge).not.toBe('dashed');
+    }
+    expect((named(scene, 'tissue/trunk/beyond-usable')[0] as AreaNode).stroke!.edge).toBe('dashed');
+    expect((named(scene, 'tissue/trunk/within-usable')[0] as AreaNode).stroke!.edge).not.toBe('dashed');
+  });
+
+  it('shows the band between the size as given and the size counted on', () => {
+    const { patient, keepClear, scanner } = benchDocument();
+    const spread = { ...patient.extents.anterior, spread: 12 };
+    const question: Case = {
+      patient: { ...patient, extents: { ...patient.extents, anterior: spread } },
+      keepClear,
+      scanner,
+      policy: DEFAULT_POLICY,
+      prescription: typicalPrescription(),
+    };
+    const at = (sureAt: number) => {
+      const asked = { ...question, policy: { ...DEFAULT_POLICY, sureAt } };
+      return sceneOf({ question: asked, drawing: drawSection(geometryCase(asked)), asGiven: drawSection(asked).tissue });
+    };
+    expect((named(at(0.95), 'tissue/trunk')[0] as AreaNode).stroke!.edge).toBe('dotted');
+    expect((named(at(0.95), 'tissue/trunk/as-given')[0] as AreaNode).stroke!.edge).toBe('solid');
+    const reach = (sureAt: number) => boundsOf((named(at(sureAt), 'tissue/trunk/band')[0] as AreaNode).rings)!.top;
+    // 1.645 and 3.090 spreads of 12 mm (normal quantiles), the outline sampled within 0.3 mm.
+    expect(Math.abs(reach(0.95) + patient.extents.anterior.value + 1.645 * 12)).toBeLessThan(0.5);
+    expect(Math.abs(reach(0.999) + patient.extents.anterior.value + 3.09 * 12)).toBeLessThan(0.5);
+    expect(named(at(0.5), 'tissue/trunk/band')).toHaveLength(0);
+    expect((named(at(0.5), 'tissue/trunk')[0] as AreaNode).stroke!.edge).toBe('solid');
+  });
+});
