@@ -96,83 +96,103 @@ interface Commit {
   readonly at: Date;
 }
 
-/**
- * Every row of an import at once: bookings made or changed, readings added, lists told that their answer is stale, and
- * the audit log, each one statement for all rows. What is touched is kept in a table of the transaction's own.
- */
-export async function commitImportRows(trx: SiteTransaction, commit: Commit): Promise<Committed> {
-  const { siteId, batchId, at } = commit;
-  const today = at.toISOString().slice(0, 10);
-  // Against a booking typed or imported at the same moment: whoever is second sees the first one's.
-  await sql`select pg_advisory_xact_lock(hashtextextended('import ' || ${siteId}::text, 0))`.execute(trx);
-  await sql`
-    create temporary table touched (booking_id uuid primary key, fields text[] not null, made boolean not null)
-    on commit drop`.execute(trx);
-  await sql`
-    with made as (
-      insert into booking (site_id, accession, scheduled_at, slot_minutes, body_region, booked_scanner_id, protocol_id, source)
-      select i.site_id, i.accession, i.scheduled_at, i.slot_minutes, p.region, i.scanner_id, i.protocol_id, ${commit.source}
-      from import_row i
-      join protocol p on p.site_id = i.site_id and p.id = i.protocol_id
-      where i.site_id = ${siteId} and i.batch_id = ${batchId}
-        and not exists (select from booking b where b.site_id = i.site_id and b.accession = i.accession)
-      on conflict (site_id, accession) do nothing
-      returning id)
-    insert into touched select id, '{created}', true from made`.execute(trx);
+/** What an import did to one booking. */
+interface Touched {
+  readonly made: boolean;
+  readonly fields: readonly string[];
+}
+
+async function makeBookings(trx: SiteTransaction, { siteId, batchId, source, at }: Commit, touched: Map<string, Touched>): Promise<void> {
+  const { rows } = await sql<{ id: string }>`
+    insert into booking (site_id, accession, scheduled_at, slot_minutes, body_region, booked_scanner_id, protocol_id, source)
+    select i.site_id, i.accession, i.scheduled_at, i.slot_minutes, p.region, i.scanner_id, i.protocol_id, ${source}
+    from import_row i
+    join protocol p on p.site_id = i.site_id and p.id = i.protocol_id
+    where i.site_id = ${siteId} and i.batch_id = ${batchId}
+      and not exists (select from booking b where b.site_id = i.site_id and b.accession = i.accession)
+    on conflict (site_id, accession) do nothing
+    returning id`.execute(trx);
+  const made = rows.map(({ id }) => id);
+  for (const id of made) touched.set(id, { made: true, fields: ['created'] });
   await sql`
     insert into booking_state (site_id, booking_id, changed_at)
-    select ${siteId}::uuid, booking_id, ${at} from touched`.execute(trx);
-  await sql`
-    with wanted as (
-      select b.id, i.scanner_id, i.protocol_id, i.scheduled_at, i.slot_minutes, p.region,
+    select ${siteId}::uuid, id, ${at}::timestamptz from unnest(${made}::uuid[]) id`.execute(trx);
+}
+
+async function changeBookings(trx: SiteTransaction, { siteId, batchId }: Commit, touched: Map<string, Touched>): Promise<void> {
+  const { rows } = await sql<{ id: string; fields: string[] }>`
+    update booking b
+    set booked_scanner_id = w.scanner_id, scheduled_at = w.scheduled_at, slot_minutes = w.slot_minutes,
+      protocol_id = w.protocol_id, body_region = w.region, version = b.version + 1
+    from (
+      select o.id, i.scanner_id, i.protocol_id, i.scheduled_at, i.slot_minutes, p.region,
         array_remove(array[
-          case when b.booked_scanner_id <> i.scanner_id then 'scanner' end,
-          case when b.scheduled_at <> i.scheduled_at then 'scheduledAt' end,
-          case when b.slot_minutes <> i.slot_minutes then 'slotMinutes' end,
-          case when b.protocol_id <> i.protocol_id then 'protocol' end], null) as fields
+          case when o.booked_scanner_id <> i.scanner_id then 'scanner' end,
+          case when o.scheduled_at <> i.scheduled_at then 'scheduledAt' end,
+          case when o.slot_minutes <> i.slot_minutes then 'slotMinutes' end,
+          case when o.protocol_id <> i.protocol_id then 'protocol' end], null) as fields
       from import_row i
-      join booking b on b.site_id = i.site_id and b.accession = i.accession
+      join booking o on o.site_id = i.site_id and o.accession = i.accession
       join protocol p on p.site_id = i.site_id and p.id = i.protocol_id
       where i.site_id = ${siteId} and i.batch_id = ${batchId}
-        and (b.booked_scanner_id, b.scheduled_at, b.slot_minutes, b.protocol_id)
+        and (o.booked_scanner_id, o.scheduled_at, o.slot_minutes, o.protocol_id)
           is distinct from (i.scanner_id, i.scheduled_at, i.slot_minutes, i.protocol_id)
-    ), changed as (
-      update booking b
-      set booked_scanner_id = w.scanner_id, scheduled_at = w.scheduled_at, slot_minutes = w.slot_minutes,
-        protocol_id = w.protocol_id, body_region = w.region, version = b.version + 1
-      from wanted w where b.site_id = ${siteId} and b.id = w.id
-      returning b.id, w.fields)
-    insert into touched select id, fields, false from changed`.execute(trx);
-  await sql`
+    ) w
+    where b.site_id = ${siteId} and b.id = w.id
+    returning b.id, w.fields`.execute(trx);
+  for (const { id, fields } of rows) touched.set(id, { made: false, fields });
+}
+
+async function addReadings(trx: SiteTransaction, { siteId, batchId, by, at }: Commit, touched: Map<string, Touched>): Promise<void> {
+  const { rows } = await sql<{ id: string; fields: string[] }>`
     with added as (
       insert into size_reading (site_id, booking_id, quantity, value, source, spread, taken_on, tape_site, recorded_by, recorded_at)
-      select b.site_id, b.id, q.quantity, q.value, q.source, q.spread, coalesce(nullif(q.taken_on, ''), ${today}), q.tape_site,
-        ${commit.by}::uuid, ${at}::timestamptz
+      select b.site_id, b.id, q.quantity, q.value, q.source, q.spread,
+        coalesce(nullif(q.taken_on, ''), ${at.toISOString().slice(0, 10)}), q.tape_site, ${by}::uuid, ${at}::timestamptz
       from import_row i
       join booking b on b.site_id = i.site_id and b.accession = i.accession
       cross join ${READINGS}
       where i.site_id = ${siteId} and i.batch_id = ${batchId} and not ${KNOWN_READING}
       returning booking_id, quantity)
-    insert into touched
-    select booking_id, array_agg(quantity order by quantity), false from added group by booking_id
-    on conflict (booking_id) do update set fields = touched.fields || excluded.fields`.execute(trx);
-  await sql`
-    update booking_state s set stale = 1, recheck_at = ${at}, changed_at = ${at}, version = s.version + 1
-    from touched t where s.site_id = ${siteId} and s.booking_id = t.booking_id and not t.made`.execute(trx);
-  // A move that was proposed here and is now what is booked is settled by that.
+    select booking_id as id, array_agg(quantity order by quantity) as fields from added group by booking_id`.execute(trx);
+  for (const { id, fields } of rows) {
+    const before = touched.get(id);
+    touched.set(id, { made: before?.made ?? false, fields: [...(before?.fields ?? []), ...fields] });
+  }
+}
+
+/** A move that was proposed here and is now what is booked is settled by that. */
+async function settleMoves(trx: SiteTransaction, { siteId, at }: Commit, ids: readonly string[]): Promise<void> {
   await sql`
     update move_proposal m set status = 'agreed', settled_at = ${at}
-    from touched t, booking b
-    where m.site_id = ${siteId} and m.booking_id = t.booking_id and m.status = 'open'
+    from booking b
+    where m.site_id = ${siteId} and m.booking_id = any(${ids}::uuid[]) and m.status = 'open'
       and b.site_id = m.site_id and b.id = m.booking_id
       and (b.booked_scanner_id, b.scheduled_at, b.slot_minutes) is not distinct from (m.scanner_id, m.scheduled_at, m.slot_minutes)`.execute(trx);
+}
+
+/**
+ * Every row of an import at once: bookings made or changed, readings added, lists told that their answer is stale, and
+ * the audit log, each one statement for all rows. Only ids and names of fields come back, to carry on with.
+ */
+export async function commitImportRows(trx: SiteTransaction, commit: Commit): Promise<Committed> {
+  const { siteId, batchId, at, actor } = commit;
+  // Against an import at the same moment: whoever is second sees what the first one booked.
+  await sql`select pg_advisory_xact_lock(hashtextextended('import ' || ${siteId}::text, 0))`.execute(trx);
+  const touched = new Map<string, Touched>();
+  await makeBookings(trx, commit, touched);
+  await changeBookings(trx, commit, touched);
+  await addReadings(trx, commit, touched);
+  const changed = [...touched].filter(([, { made }]) => !made).map(([id]) => id);
+  await sql`
+    update booking_state s set stale = 1, recheck_at = ${at}, changed_at = ${at}, version = s.version + 1
+    where s.site_id = ${siteId} and s.booking_id = any(${changed}::uuid[])`.execute(trx);
+  await settleMoves(trx, commit, changed);
   await sql`
     insert into audit_event (site_id, actor_id, actor_kind, action, subject_type, subject_id, fields)
-    select ${siteId}::uuid, ${commit.actor.id}::uuid, ${commit.actor.kind}, 'booking.import', 'booking', booking_id, fields
-    from touched`.execute(trx);
-  const { rows } = await sql<{ created: number; changed: number }>`
-    select count(*) filter (where made)::integer as created, count(*) filter (where not made)::integer as changed
-    from touched`.execute(trx);
-  const { created, changed } = rows[0]!;
-  return { created, changed, same: (await countImportRows(trx, siteId, batchId)) - created - changed };
+    select ${siteId}::uuid, ${actor.id}::uuid, ${actor.kind}, 'booking.import', 'booking', t.id, string_to_array(t.fields, ',')
+    from unnest(${[...touched.keys()]}::uuid[], ${[...touched.values()].map(({ fields }) => fields.join(','))}::text[]) t(id, fields)`.execute(trx);
+  const total = await countImportRows(trx, siteId, batchId);
+  const created = touched.size - changed.length;
+  return { created, changed: changed.length, same: total - touched.size };
 }
