@@ -4,11 +4,13 @@ import { useId } from 'react';
 import { Controller, useFormContext } from 'react-hook-form';
 import { controlClass, Field } from '@/components/ui/field';
 import { cx } from '@/components/ui/class-names';
+import { useBench } from './bench-context';
 import { useCommit } from './bench-form';
 
 /** A few words, bound to the form; what the site knows is suggested, anything else can be typed. */
 export function BenchText({ path, label, className, suggestions = [] }: { path: string; label: string; className?: string; suggestions?: readonly string[] }) {
   const { control } = useFormContext();
+  const { store } = useBench();
   const commit = useCommit();
   const list = useId();
   return (
@@ -30,6 +32,7 @@ export function BenchText({ path, label, className, suggestions = [] }: { path: 
                   field.onChange(event.target.value);
                   commit(path, event.target.value, `type ${path}`);
                 }}
+                onBlur={() => store.dispatch({ type: 'settle' })}
                 className={cx(controlClass, 'h-8 min-w-0 px-2 text-sm')}
               />
               {suggestions.length > 0 && (

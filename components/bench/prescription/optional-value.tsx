@@ -27,7 +27,7 @@ export function OptionalNumber(props: {
   const { path, schema, value, start, label, unknownHint, step, sliderMax } = props;
   const commit = useCommit();
   const known = value !== undefined;
-  const { unit, min } = numberFacts(schema);
+  const { min } = numberFacts(schema);
   return (
     <div className="mt-1.5">
       <Select
@@ -40,7 +40,7 @@ export function OptionalNumber(props: {
         hint={known ? undefined : unknownHint}
         onChange={(event) => commit(path, event.target.value === 'known' ? start : undefined)}
       />
-      {known && <BenchNumber path={path} schema={schema} label={unit ? `${label}, ${unit}` : label} step={step} sliderMin={min} sliderMax={sliderMax} />}
+      {known && <BenchNumber path={path} schema={schema} label={label} step={step} sliderMin={min} sliderMax={sliderMax} />}
     </div>
   );
 }

@@ -16,11 +16,13 @@ export function WindowGroup({ prescription: p, ...panel }: GroupProps) {
   const limits = useBenchState((state) => state.document.scanner.limits);
   const fov = { sliderMin: limits.fovMinMm, sliderMax: limits.fovMaxMm };
   const readout = axesOfPlane(p.plane).find((axis) => axis !== p.phaseAxis) ?? 'RL';
+  const oblique = p.tiltAboutReadoutDeg !== 0 || p.tiltAboutPhaseDeg !== 0 || p.inPlaneRotationDeg !== 0;
+  const turned = oblique ? ', oblique' : '';
   const phaseAxes = Object.fromEntries(axesOfPlane(p.plane).map((axis) => [axis, AXIS_WORDS[axis]])) as Record<PatientAxis, string>;
   return (
     <Group
       title="Window"
-      summary={`${Math.round(p.fovPhaseMm)} × ${Math.round(p.fovReadoutMm)} mm, ${AXIS_WORDS[p.phaseAxis]}`}
+      summary={`${Math.round(p.fovPhaseMm)} × ${Math.round(p.fovReadoutMm)} mm, ${AXIS_WORDS[p.phaseAxis]}${turned}`}
       {...panel}
     >
       <Pair>
