@@ -34,7 +34,7 @@ describe('a booking', () => {
     ['breath-hold not known', 'size-needed', 'ask-sizes', 'breath-hold-unknown', { readings: readingsOf({ ...KNOWN, 'breath-hold-s': undefined }), protocol: held() }],
     ['a breath-hold too long', 'plan-needed', 'plan', 'breath-hold-too-long', { readings: readingsOf({ ...KNOWN, 'breath-hold-s': 1 }), protocol: held() }],
     ['an opening too small', 'escalate', 'escalate', 'opening-too-small', { scanner: checkedScanner('A', { boreDiameterMm: 480 }) }],
-    ['an opening nearly too small for a breadth that was worked out', 'size-needed', 'measure', 'opening-near-limit', { readings: [...readingsOf({ ...KNOWN, 'breadth-mm': undefined }), reading('breadth-mm', 465, 'reported')], scanner: checkedScanner('A', { boreDiameterMm: 560 }) }],
+    ['an opening nearly too small for a breadth that was worked out', 'size-needed', 'measure', 'opening-near-limit', { readings: [...readingsOf({ ...KNOWN, 'breadth-mm': undefined }), reading('breadth-mm', 465, 'reported')], scanner: checkedScanner('A', { boreDiameterMm: 520 }) }],
     ['too wide for the scanner’s usable FOV', 'plan-needed', 'plan', 'beyond-usable-fov', { scanner: checkedScanner('A', { limits: { usableFovMm: [390, 520, 500] } }) }],
     ['a protocol FOV beyond the scanner’s largest', 'escalate', 'escalate', 'fov-too-large', { scanner: checkedScanner('A', { limits: { fovMaxMm: 450 } }) }],
     ['fold in the keep-clear area', 'plan-needed', 'plan', 'fold-in-keep-clear', { protocol: checkedProtocol([wide({ fovPhaseMm: 240 })]) }],
