@@ -1,6 +1,7 @@
 import { sql } from 'kysely';
 import type { SiteTransaction } from '@/db/client';
 import type { ImportRow } from '@/lib/domain/import';
+import { settleAgreedMoves } from '@/db/queries/move-proposal/move-proposals';
 import { spreadOf } from '@/lib/domain/import';
 
 /** A reading as a row keeps it, short: a file has many. */
@@ -100,6 +101,8 @@ interface Commit {
 interface Touched {
   readonly made: boolean;
   readonly fields: readonly string[];
+  /** Where and when it was booked before and is now, as its history writes it; absent while that is the same. */
+  readonly place?: string;
 }
 
 async function makeBookings(trx: SiteTransaction, { siteId, batchId, source, at }: Commit, touched: Map<string, Touched>): Promise<void> {
@@ -119,13 +122,19 @@ async function makeBookings(trx: SiteTransaction, { siteId, batchId, source, at 
     select ${siteId}::uuid, id, ${at}::timestamptz from unnest(${made}::uuid[]) id`.execute(trx);
 }
 
+const ISO = 'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"';
+const placeOf = (scanner: string, booked: string) => sql`jsonb_build_object(
+  'scanner', ${sql.ref(`${scanner}.name`)}, 'at', to_char(${sql.ref(`${booked}.scheduled_at`)} at time zone 'UTC', ${ISO}),
+  'slotMinutes', ${sql.ref(`${booked}.slot_minutes`)})`;
+
 async function changeBookings(trx: SiteTransaction, { siteId, batchId }: Commit, touched: Map<string, Touched>): Promise<void> {
-  const { rows } = await sql<{ id: string; fields: string[] }>`
+  const { rows } = await sql<{ id: string; fields: string[]; place: string }>`
     update booking b
     set booked_scanner_id = w.scanner_id, scheduled_at = w.scheduled_at, slot_minutes = w.slot_minutes,
       protocol_id = w.protocol_id, body_region = w.region, version = b.version + 1
     from (
       select o.id, i.scanner_id, i.protocol_id, i.scheduled_at, i.slot_minutes, p.region,
+        jsonb_build_object('schemaVersion', 1, 'from', ${placeOf('was', 'o')}, 'to', ${placeOf('becomes', 'i')})::text as place,
         array_remove(array[
           case when o.booked_scanner_id <> i.scanner_id then 'scanner' end,
           case when o.scheduled_at <> i.scheduled_at then 'scheduledAt' end,
@@ -134,13 +143,17 @@ async function changeBookings(trx: SiteTransaction, { siteId, batchId }: Commit,
       from import_row i
       join booking o on o.site_id = i.site_id and o.accession = i.accession
       join protocol p on p.site_id = i.site_id and p.id = i.protocol_id
+      join scanner was on was.site_id = o.site_id and was.id = o.booked_scanner_id
+      join scanner becomes on becomes.site_id = i.site_id and becomes.id = i.scanner_id
       where i.site_id = ${siteId} and i.batch_id = ${batchId}
         and (o.booked_scanner_id, o.scheduled_at, o.slot_minutes, o.protocol_id)
           is distinct from (i.scanner_id, i.scheduled_at, i.slot_minutes, i.protocol_id)
     ) w
     where b.site_id = ${siteId} and b.id = w.id
-    returning b.id, w.fields`.execute(trx);
-  for (const { id, fields } of rows) touched.set(id, { made: false, fields });
+    returning b.id, w.fields, w.place`.execute(trx);
+  for (const { id, fields, place } of rows) {
+    touched.set(id, { made: false, fields, ...(fields.some((field) => field !== 'protocol') ? { place } : {}) });
+  }
 }
 
 async function addReadings(trx: SiteTransaction, { siteId, batchId, by, at }: Commit, touched: Map<string, Touched>): Promise<void> {
@@ -157,18 +170,20 @@ async function addReadings(trx: SiteTransaction, { siteId, batchId, by, at }: Co
     select booking_id as id, array_agg(quantity order by quantity) as fields from added group by booking_id`.execute(trx);
   for (const { id, fields } of rows) {
     const before = touched.get(id);
-    touched.set(id, { made: before?.made ?? false, fields: [...(before?.fields ?? []), ...fields] });
+    touched.set(id, { made: false, ...before, fields: [...(before?.fields ?? []), ...fields] });
   }
 }
 
-/** A move that was proposed here and is now what is booked is settled by that. */
-async function settleMoves(trx: SiteTransaction, { siteId, at }: Commit, ids: readonly string[]): Promise<void> {
-  await sql`
-    update move_proposal m set status = 'agreed', settled_at = ${at}
-    from booking b
-    where m.site_id = ${siteId} and m.booking_id = any(${ids}::uuid[]) and m.status = 'open'
-      and b.site_id = m.site_id and b.id = m.booking_id
-      and (b.booked_scanner_id, b.scheduled_at, b.slot_minutes) is not distinct from (m.scanner_id, m.scheduled_at, m.slot_minutes)`.execute(trx);
+/** The line in the history of every booking that was moved, and of every proposed move that is settled by it. */
+async function writeHistory(trx: SiteTransaction, { siteId, actor, at }: Commit, touched: ReadonlyMap<string, Touched>): Promise<void> {
+  const moved = [...touched].filter(([, { place }]) => place !== undefined);
+  const write = (kind: 'booked' | 'move-agreed', of: typeof moved) => sql`
+    insert into booking_entry (site_id, booking_id, kind, data, actor_kind, actor_id, written_at)
+    select ${siteId}::uuid, t.id, ${kind}, t.place::jsonb, ${actor.kind}, ${actor.id}::uuid, ${at}::timestamptz
+    from unnest(${of.map(([id]) => id)}::uuid[], ${of.map(([, { place }]) => place!)}::text[]) t(id, place)`.execute(trx);
+  await write('booked', moved);
+  const agreed = new Set(await settleAgreedMoves(trx, siteId, moved.map(([id]) => id), at));
+  if (agreed.size > 0) await write('move-agreed', moved.filter(([id]) => agreed.has(id)));
 }
 
 /**
@@ -187,7 +202,7 @@ export async function commitImportRows(trx: SiteTransaction, commit: Commit): Pr
   await sql`
     update booking_state s set stale = 1, recheck_at = ${at}, changed_at = ${at}, version = s.version + 1
     where s.site_id = ${siteId} and s.booking_id = any(${changed}::uuid[])`.execute(trx);
-  await settleMoves(trx, commit, changed);
+  await writeHistory(trx, commit, touched);
   await sql`
     insert into audit_event (site_id, actor_id, actor_kind, action, subject_type, subject_id, fields)
     select ${siteId}::uuid, ${actor.id}::uuid, ${actor.kind}, 'booking.import', 'booking', t.id, string_to_array(t.fields, ',')

@@ -69,10 +69,21 @@ describe('an import', () => {
       trx.selectFrom('audit_event').select('fields').where('site_id', '=', here.site.siteId).where('action', '=', 'booking.import').where('subject_type', '=', 'booking').execute(),
     );
     expect(events.map(({ fields }) => fields)).toContainEqual(['scanner', 'scheduledAt', 'weight-kg']);
-    const jobs = await here.site.withApp((trx) =>
+    const history = await here.site.withApp((trx) =>
+      trx.selectFrom('booking_entry').select(['kind', 'data']).where('site_id', '=', here.site.siteId).execute(),
+    );
+    expect(history).toEqual([{
+      kind: 'booked',
+      data: {
+        schemaVersion: 1,
+        from: { scanner: here.scanner.scanner.name, at: '2026-05-11T08:00:00.000Z', slotMinutes: 40 },
+        to: { scanner: 'Second scanner', at: '2026-05-12T09:30:00.000Z', slotMinutes: 40 },
+      },
+    }]);
+    const states = await here.site.withApp((trx) =>
       trx.selectFrom('booking_state').innerJoin('booking', (join) => join.onRef('booking.site_id', '=', 'booking_state.site_id').onRef('booking.id', '=', 'booking_state.booking_id')).select('stale').where('accession', '=', 'GH-0010').execute(),
     );
-    expect(jobs).toEqual([{ stale: 1 }]);
+    expect(states).toEqual([{ stale: 1 }]);
   });
 
   it('leaves out what cannot be booked, without repeating it, and books the rest', async () => {
