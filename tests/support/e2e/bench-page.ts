@@ -17,8 +17,10 @@ export async function benchAnswers(page: Page): Promise<void> {
 /** The verdict of the active sequence, in the words on the screen. */
 export const verdict = (page: Page) => page.locator('[data-verdict]:visible');
 
+type Stage = 'section' | 'slab' | 'bore';
+
 /** Names of the nodes a stage paints now: the scene is read instead of pixels. */
-export function sceneNodes(page: Page, stage: 'section' | 'slab'): Promise<string[]> {
+export function sceneNodes(page: Page, stage: Stage): Promise<string[]> {
   return page.evaluate((name) => {
     const shapes = window.selvedgeStages?.[name]?.find('Shape') ?? [];
     return shapes.map((shape) => shape.name());
@@ -26,15 +28,13 @@ export function sceneNodes(page: Page, stage: 'section' | 'slab'): Promise<strin
 }
 
 /** Text of a painted label; absent when it is not painted. */
-export function sceneText(page: Page, name: string): Promise<string | undefined> {
+export function sceneText(page: Page, name: string, stage: Stage = 'section'): Promise<string | undefined> {
   return page.evaluate(
-    (wanted) => {
-      const node = window.selvedgeStages?.['section']?.findOne(`.${wanted.replace(/\//g, '\\/')}`);
-      const all = window.selvedgeStages?.['section']?.find('Text') ?? [];
-      const found = node ?? all.find((each) => each.name() === wanted);
-      return found?.getAttr('text') as string | undefined;
+    ([wanted, of]) => {
+      const all = window.selvedgeStages?.[of]?.find('Text') ?? [];
+      return all.find((each) => each.name() === wanted)?.getAttr('text') as string | undefined;
     },
-    name,
+    [name, stage] as const,
   );
 }
 
@@ -49,4 +49,17 @@ export async function tabTo(page: Page, name: RegExp, most = 150): Promise<void>
     if (name.test(held.trim())) return;
   }
   throw new Error(`No control called ${String(name)} within ${most} presses of Tab`);
+}
+
+/** Every field's value, rolled-up groups included, and the verdict of each sequence: what must come back unchanged. */
+export function benchValues(page: Page): Promise<{ fields: string[]; sequences: string[] }> {
+  return page.evaluate(() => {
+    const named = [...document.querySelectorAll<HTMLInputElement | HTMLSelectElement>('form [name], [data-field] [name]')];
+    const valueOf = (field: HTMLInputElement | HTMLSelectElement) =>
+      field instanceof HTMLInputElement && (field.type === 'checkbox' || field.type === 'radio') ? String(field.checked) : field.value;
+    return {
+      fields: named.map((field) => `${field.name} ${valueOf(field)}`),
+      sequences: [...document.querySelectorAll('[data-sequence]')].map((each) => each.textContent ?? ''),
+    };
+  });
 }
