@@ -4,6 +4,8 @@ export interface Mutant {
   readonly id: number;
   readonly file: string;
   readonly line: number;
+  /** The source line it begins on, without its indent: tells it from others of the same code. */
+  readonly within: string;
   readonly code: string;
   /** The same piece of code as the mutant has it. */
   readonly mutated: string;
@@ -88,10 +90,19 @@ export function findMutants(
   const isNumber = (node: ts.Expression): boolean =>
     (checker.getTypeAtLocation(node).flags & ts.TypeFlags.NumberLike) !== 0;
 
+  const lines = source.text.split('\n');
   const note = (node: ts.Node, mutated: string): number => {
     const id = firstId + mutants.length;
-    const line = source.getLineAndCharacterOfPosition(node.getStart(source)).line + 1;
-    mutants.push({ id, file, line, code: flat(node.getText(source)), mutated: flat(mutated) });
+    const line = source.getLineAndCharacterOfPosition(node.getStart(source)).line;
+    const within = lines[line]!.trim();
+    mutants.push({
+      id,
+      file,
+      line: line + 1,
+      within,
+      code: flat(node.getText(source)),
+      mutated: flat(mutated),
+    });
     return id;
   };
 

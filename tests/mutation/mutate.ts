@@ -151,7 +151,7 @@ function killedBefore({ resume, out }: Options): Map<string, Result> {
   const same = results.filter(
     ({ outcome, file, from }) => outcome === 'killed' && from === hashOf(sourceText(file)),
   );
-  return new Map(same.map((result) => [`${keyOf(result)}${result.line}`, result]));
+  return new Map(same.map((result) => [keyOf(result), result]));
 }
 
 /**
@@ -182,7 +182,7 @@ export async function mutate(args: readonly string[]): Promise<void> {
     const before = killedBefore(options);
     const chosen = choose(mutants, options);
     for (const mutant of chosen) {
-      const known = before.get(`${keyOf(mutant)}${mutant.line}`);
+      const known = before.get(keyOf(mutant));
       results.push(known ?? (await playOne(player, mutant, reaching[mutant.id]!, options.budgetMs)));
       if (results.length % 200 !== 0) continue;
       console.log(

@@ -11,8 +11,9 @@ export interface Result extends Mutant {
   readonly by?: string;
 }
 
-export const keyOf = ({ file, code, mutated }: Pick<Mutant, 'file' | 'code' | 'mutated'>): string =>
-  JSON.stringify([file, code, mutated]);
+type Place = Pick<Mutant, 'file' | 'within' | 'code' | 'mutated'>;
+export const keyOf = ({ file, within, code, mutated }: Place): string =>
+  JSON.stringify([file, within, code, mutated]);
 
 const REASONS = new Map(EQUIVALENT.map((entry) => [keyOf(entry), entry.reason]));
 export const equivalentReason = (mutant: Mutant): string | undefined => REASONS.get(keyOf(mutant));
