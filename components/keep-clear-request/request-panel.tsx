@@ -14,7 +14,7 @@ export function KeepClearRequestPanel({ region, requested, ask }: {
 }) {
   if (!requested && !ask) return null;
   return (
-    <Panel title="Keep-clear area asked for" className="mt-6">
+    <Panel title="Keep-clear area asked for">
       {requested ? (
         <RequestedArea requested={requested} />
       ) : (

@@ -54,7 +54,7 @@ export function SheetPdf({ planId, version, paper }: { planId: string; version: 
   const sheet = progress.kind === 'asked' ? progress.sheet : undefined;
   if (sheet?.state === 'done') {
     return (
-      <a href={`${base}/${sheet.id}/pdf`} download className={buttonClass('secondary')}>
+      <a href={`${base}/${sheet.id}/pdf`} download={`plan-sheet-v${version}.pdf`} className={buttonClass('secondary')}>
         Download the PDF, {paper}, {Math.ceil((sheet.sizeBytes ?? 0) / 1024)} kB
       </a>
     );

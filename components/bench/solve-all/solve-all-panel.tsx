@@ -21,7 +21,13 @@ export function SolveAll() {
   const [fault, setFault] = useState<unknown>(null);
   if (fault) throw fault;
   const folding = useFolding();
-  const { solving, stale, start, leave, adopt } = useSolveAll(setFault);
+  const { solving, stale, start, leave: close, adopt: adoptAll } = useSolveAll(setFault);
+  // The pressed button goes with the proposal; whoever works by keyboard stays on the bench.
+  const settle = (work: () => void) => () => {
+    work();
+    document.getElementById('remedies-title')?.focus();
+  };
+  const [leave, adopt] = [settle(close), settle(adoptAll)];
   if (solving.kind === 'idle') {
     if (folding === 0) return null;
     return (

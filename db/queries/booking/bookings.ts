@@ -118,9 +118,12 @@ export async function findBooking(trx: SiteTransaction, siteId: string, id: stri
   return row ? toOverview(row) : null;
 }
 
-/** Holds the booking's row until the transaction ends: what is made for one booking follows instead of racing. */
+/**
+ * Holds the booking's row until the transaction ends: what is made for one booking follows instead of racing. Rows that
+ * only refer to the booking may still be written meanwhile; holding those up as well would deadlock with a pre-check.
+ */
 export async function lockBooking(trx: SiteTransaction, siteId: string, id: string): Promise<void> {
-  await trx.selectFrom('booking').select('id').where('site_id', '=', siteId).where('id', '=', id).forUpdate().execute();
+  await trx.selectFrom('booking').select('id').where('site_id', '=', siteId).where('id', '=', id).forNoKeyUpdate().execute();
 }
 
 export async function accessionTaken(trx: SiteTransaction, siteId: string, accession: string): Promise<boolean> {

@@ -15,6 +15,8 @@ import { loadPage } from '@/lib/http/load-page';
 import { dayKey, formatMoment } from '@/lib/presentation/moment';
 import { getBookingPage } from '@/lib/services/pre-check/get-booking-page';
 import { addReadings, askLead, decideAsLead, noteBooking, proposePlace, setSurgery, withdrawPlace } from '../actions';
+import { PlanLife } from './plan-life';
+import { SizeRequests } from './size-requests';
 
 export const metadata: Metadata = { title: 'Booking' };
 
@@ -32,6 +34,7 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
         actions={
           <>
             {booking.planId && <LinkButton href={`/plans/${booking.planId}`}>Open the plan</LinkButton>}
+            {may.record && record.missing.length === 0 && <LinkButton href={`/bench/${id}/at-scanner`}>At the scanner</LinkButton>}
             <LinkButton href={`/bench/${id}`}>Open the bench</LinkButton>
           </>
         }
@@ -39,6 +42,7 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
       <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 lg:grid-cols-[minmax(0,5fr)_minmax(0,9fr)]">
         <div className="space-y-6">
           <BookingFacts row={row} />
+          <PlanLife booking={booking} />
           {may.record && <SurgeryForm key={booking.surgeryOn} surgeryOn={booking.surgeryOn ?? ''} today={today} save={setSurgery.bind(null, id)} />}
           <LeadPanel escalation={booking.escalation} ask={may.escalate ? askLead.bind(null, id) : undefined} decide={may.decide ? decideAsLead.bind(null, id) : undefined} />
           <HistoryPanel lines={shownLines(history)} addNote={may.note ? noteBooking.bind(null, id) : undefined} />
@@ -51,6 +55,7 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
             <SizeRecord record={record} />
             {may.record && <ReadingForm today={today} add={addReadings.bind(null, id)} />}
           </section>
+          <SizeRequests bookingId={id} />
         </div>
       </div>
     </PageBody>
