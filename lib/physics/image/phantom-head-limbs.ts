@@ -12,7 +12,10 @@ export const headOrgans: readonly Organ[] = [
   ...bothSides(organ('grey-matter', [0.27, -0.02], [0.13, 0.18], [8, 22])),
   ...bothSides(organ('fluid', [0.14, -0.2], [0.06, 0.28], [16, 22], -14)),
   ...bothSides(organ('fluid', [0.2, 0.3], [0.06, 0.2], [14, 18], 16)),
-  organ('fluid', [0, 0.02], [0.018, 0.8], [40, 60]),
+  // Between the halves, front and back only: a sagittal slice through the middle would else see nothing but fluid.
+  organ('fluid', [0, -0.64], [0.018, 0.16], [40, 30]),
+  organ('fluid', [0, 0.68], [0.018, 0.14], [40, 30]),
+  organ('white-matter', [0, -0.02], [0.12, 0.36], [24, 9]),
   organ('grey-matter', [0, 0.5], [0.56, 0.3], [-62, 30]),
   organ('white-matter', [0, 0.16], [0.17, 0.15], [-60, 36]),
   organ('gas', [0, -0.72], [0.2, 0.2], [-62, 34]),
