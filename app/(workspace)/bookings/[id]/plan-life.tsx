@@ -6,7 +6,7 @@ import type { BookingListItem } from '@/lib/schemas/booking';
 import { getKeepClearRequest } from '@/lib/services/keep-clear-request/get-keep-clear-request';
 import { listOutcomes } from '@/lib/services/outcome/list-outcomes';
 import { getPlan } from '@/lib/services/plan/get-plan';
-import { askKeepClear } from './plan-life-actions';
+import { askKeepClear } from '../actions';
 
 /** Before and after the plan: the area a radiologist asks for, and what came of it. */
 export async function PlanLife({ booking }: { booking: Pick<BookingListItem, 'id' | 'region' | 'planId'> }) {
