@@ -11,6 +11,7 @@ import { policySchema } from '@/lib/schemas/case/policy';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import { scannerSchema } from '@/lib/schemas/case/scanner';
 import { bundleDoneSchema, commitImportBody, importDoneSchema, importStartedSchema, stagedRowsSchema, stageRowsBody, startImportInput } from '@/lib/schemas/import';
+import { changeBookedBody } from '@/lib/schemas/move-proposal';
 import { outcomeListSchema, outcomeViewSchema, recordOutcomeBody } from '@/lib/schemas/outcome';
 import { requestSheetBody, sheetViewSchema } from '@/lib/schemas/plan-sheet';
 import { movePlanBody, savePlanBody, signOffBody } from '@/lib/schemas/plan';
@@ -44,6 +45,7 @@ const SHARED = {
 export const REQUESTS = {
   CaseInput: caseInput,
   NewBooking: createBookingInput,
+  ChangeBooked: changeBookedBody,
   NewSizeReadings: addReadingsBody,
   StartImport: startImportInput,
   StageRows: stageRowsBody,

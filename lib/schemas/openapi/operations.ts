@@ -64,6 +64,10 @@ export const OPERATIONS: readonly Operation[] = [
     answer: 'Booking', summary: 'One booking.',
   },
   {
+    method: 'put', path: '/api/v1/bookings/{id}', id: 'changeBooked', scope: 'bookings:write', params: idParams, request: 'ChangeBooked',
+    answer: 'Booking', summary: 'What the booking system says now: a proposed move that it agrees with is closed, and the booking is checked again.',
+  },
+  {
     method: 'get', path: '/api/v1/bookings/{id}/bench', id: 'openBench', scope: 'plans:read', params: idParams,
     answer: 'Bench', summary: 'Everything the bench needs of a booking.',
   },

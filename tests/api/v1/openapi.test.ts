@@ -45,7 +45,7 @@ describe('GET /api/v1/openapi.json', () => {
 
   it('every operation with a body has an example that can be run, but those that need a plan or an import first', () => {
     const bare = OPERATIONS.filter(({ request, examples }) => request && !examples).map(({ id }) => id);
-    expect(bare).toEqual(['stageRows', 'commitImport', 'movePlan', 'signOffPlan', 'recordOutcome', 'requestSheet']);
+    expect(bare).toEqual(['stageRows', 'commitImport', 'changeBooked', 'movePlan', 'signOffPlan', 'recordOutcome', 'requestSheet']);
   });
 });
 

@@ -2,6 +2,9 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { changedFields } from '@/lib/domain/document/changed-fields';
 import { readDocument } from '@/lib/domain/document/read-document';
+import { readEntryDocument } from '@/lib/domain/booking/entry';
+import { readPreCheckDocument } from '@/lib/domain/pre-check/document';
+import { NEXT_ACTION_KINDS, PRE_CHECK_RESULTS } from '@/lib/domain/pre-check/result';
 import { readPlanDocument, readPlanResult } from '@/lib/domain/plan/document';
 import { readProtocolDocument, readSequenceDocument } from '@/lib/domain/protocol/document';
 import { readScannerDocument } from '@/lib/domain/scanner/document';
@@ -26,6 +29,14 @@ const KINDS: Readonly<Record<string, (stored: unknown) => boolean>> = {
       sequences.every(({ prescription }) => prescriptionSchema.safeParse(prescription).success)
     );
   },
+  'pre-check': (stored) => {
+    const { result, findings, next, booked, alternatives } = readPreCheckDocument(stored);
+    return (
+      PRE_CHECK_RESULTS.includes(result) && NEXT_ACTION_KINDS.includes(next.kind) && findings.length > 0 &&
+      booked.sequences.length === 2 && alternatives[0]?.standing === 'fits'
+    );
+  },
+  'booking-entry': (stored) => readEntryDocument(stored).to?.scanner === 'Scanner B',
   'plan-result': (stored) => readPlanResult(stored).assessments.every((each) => assessmentSchema.safeParse(each).success),
 };
 
