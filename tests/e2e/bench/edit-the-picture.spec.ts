@@ -1,54 +1,113 @@
 import { expect, test } from '@/tests/support/e2e/journey';
+import { countsSoFar, dragHandle, watchDrags, type DragCounts } from '@/tests/support/e2e/drag-handle';
+import { countOf } from '@/tests/support/tally';
 import { benchAnswers, sceneNodes, sceneText, verdict } from '@/tests/support/e2e/bench-page';
 
-/** Pointer moves of one drag: several fall into one frame, so that an assessment per move would be noticed. */
-const MOVES = 12;
+/** Each handle is swung for this long; several moves fall into one frame, so that an assessment per move would be noticed. */
+const DRAG_MS = 1_000 * countOf('SELVEDGE_DRAG_SECONDS', 5);
+/** A section of the abdomen with its pieces, ghosts, edges, organs and handles paints about half as many. */
+const MOST_NODES = 200;
 
-const DRAGS = [
-  ['fov-phase-low', 0, -30],
-  ['fov-phase-high', 0, 30],
-  ['fov-readout-high', 30, 0],
-  ['fov-centre', 15, 20],
-  ['keep-clear-anterior', 0, 25],
-  ['extent-anterior', 0, -15],
-  ['extent-right', -15, 0],
-] as const;
+type Panel = keyof DragCounts['changes'];
+type Drag = readonly [id: string, dx: number, dy: number, untouched: readonly Panel[]];
 
-test('every handle drags with one assessment an animation frame, and can be taken back in one step', async ({ signedIn }) => {
+/** A panel that shows nothing of what is dragged is not to change. */
+const DRAGS: Readonly<Record<string, readonly Drag[]>> = {
+  'the window': [
+    ['fov-phase-low', 0, -30, ['patient', 'keepClear']],
+    ['fov-phase-high', 0, 30, ['patient', 'keepClear']],
+    ['fov-readout-high', 30, 0, ['patient', 'keepClear']],
+    ['fov-centre', 15, 20, ['patient', 'keepClear']],
+    ['fov-rotation', 25, 25, ['patient', 'keepClear']],
+  ],
+  'the body and the keep-clear area': [
+    ['keep-clear-anterior', 0, 25, ['patient', 'prescription']],
+    ['keep-clear-left', 25, 0, ['patient', 'prescription']],
+    ['extent-anterior', 0, -15, ['prescription']],
+    ['extent-right', -15, 0, ['prescription']],
+  ],
+};
+
+for (const [what, drags] of Object.entries(DRAGS)) {
+  test(`handles of ${what} drag with one assessment and one draw an animation frame, and can be taken back in one step`, async ({ signedIn }) => {
+    test.setTimeout(90_000 + drags.length * DRAG_MS);
+    const page = await signedIn('radiographer');
+    await page.goto('/bench');
+    await benchAnswers(page);
+    await watchDrags(page);
+    for (const [id, dx, dy, untouched] of drags) {
+      const before = await countsSoFar(page);
+      await dragHandle(page, id, [dx, dy], DRAG_MS);
+      await expect.poll(async () => (await countsSoFar(page)).assessments, { message: id }).toBeGreaterThan(before.assessments);
+      const after = await countsSoFar(page);
+      const frames = after.frames - before.frames + 1;
+      expect(after.assessments - before.assessments, id).toBeLessThanOrEqual(frames);
+      expect(after.mostInAFrame, id).toBe(1);
+      expect(after.draws - before.draws, id).toBeGreaterThan(0);
+      expect(after.draws - before.draws, id).toBeLessThanOrEqual(frames);
+      expect(after.mostNodes, id).toBeLessThanOrEqual(MOST_NODES);
+      for (const panel of untouched) expect(after.changes[panel] - before.changes[panel], `${panel} while ${id} is dragged`).toBe(0);
+      const undo = page.getByRole('button', { name: 'Undo' });
+      await undo.click();
+      await expect(undo, `${id} is one step`).toBeDisabled();
+      await benchAnswers(page);
+    }
+  });
+}
+
+test('the picture is zoomed by wheel, keys and buttons, moved, and brought back whole', async ({ signedIn }) => {
   const page = await signedIn('radiographer');
   await page.goto('/bench');
   await benchAnswers(page);
-  await page.evaluate(() => {
-    const counts = { frames: 0, assessments: 0, perFrame: [] as number[] };
-    Object.assign(window, { counts });
-    const tick = () => {
-      counts.frames += 1;
-      requestAnimationFrame(tick);
-    };
-    requestAnimationFrame(tick);
-    new PerformanceObserver((list) => {
-      counts.assessments += list.getEntriesByName('selvedge:assess').length;
-    }).observe({ type: 'measure' });
-  });
-  const counts = () =>
-    page.evaluate(() => ({ ...(window as unknown as { counts: { frames: number; assessments: number } }).counts }));
+  const picture = page.getByRole('group', { name: /^Section, / });
+  const centre = page.locator('[data-handle="fov-centre"]');
+  const placed = async () => (await centre.boundingBox())!;
+  const start = await placed();
+  const whole = (percent: number) => page.getByRole('button', { name: `Whole picture, now ${percent} %` });
+  const box = (await picture.boundingBox())!;
 
-  for (const [id, dx, dy] of DRAGS) {
-    const handle = page.locator(`[data-handle="${id}"]`);
-    const box = (await handle.boundingBox())!;
-    const [x, y] = [box.x + box.width / 2, box.y + box.height / 2];
-    const before = await counts();
-    await page.mouse.move(x, y);
-    await page.mouse.down();
-    for (let step = 1; step <= MOVES; step += 1) await page.mouse.move(x + (dx * step) / MOVES, y + (dy * step) / MOVES);
-    await page.mouse.up();
-    await expect.poll(async () => (await counts()).assessments, { message: id }).toBeGreaterThan(before.assessments);
-    const after = await counts();
-    expect(after.assessments - before.assessments, id).toBeLessThanOrEqual(after.frames - before.frames + 1);
-    const undo = page.getByRole('button', { name: 'Undo' });
-    await undo.click();
-    await expect(undo, `${id} is one step`).toBeDisabled();
-  }
+  await picture.focus();
+  await page.keyboard.press('+');
+  await expect(whole(125)).toBeVisible();
+  await page.getByRole('button', { name: 'Zoom in' }).click();
+  await expect(whole(156)).toBeVisible();
+  const zoomed = await placed();
+  await centre.focus();
+  await page.keyboard.press('Control+ArrowRight');
+  await expect.poll(async () => Math.round((await placed()).x - zoomed.x)).toBe(-40);
+  await page.mouse.move(box.x + 30, box.y + 60);
+  await page.mouse.down();
+  await page.mouse.move(box.x + 60, box.y + 60);
+  await page.mouse.up();
+  await expect.poll(async () => Math.round((await placed()).x - zoomed.x)).toBe(-10);
+  await page.keyboard.press('0');
+  await expect(whole(100)).toBeVisible();
+  expect(await placed()).toEqual(start);
+
+  await page.mouse.move(box.x + box.width / 2, box.y + box.height / 2);
+  await page.mouse.wheel(0, -200);
+  await expect(whole(165)).toBeVisible();
+  await page.keyboard.press('-');
+  await page.keyboard.press('-');
+  await page.keyboard.press('-');
+  await expect(whole(100)).toBeVisible();
+});
+
+test('the window turns by its corner, by key and by the typed field', async ({ signedIn }) => {
+  const page = await signedIn('radiographer');
+  await page.goto('/bench');
+  await benchAnswers(page);
+  const corner = page.getByRole('slider', { name: 'Rotation of the window in its plane, degrees' });
+  await corner.focus();
+  await page.keyboard.press('Shift+ArrowRight');
+  await page.keyboard.press('ArrowRight');
+  const turned = Number(await corner.getAttribute('aria-valuenow'));
+  expect(Math.abs(turned)).toBe(11);
+  await page.getByRole('button', { name: 'Window', exact: true }).click();
+  const field = page.getByRole('spinbutton', { name: 'Rotation' });
+  await expect(field).toHaveValue(String(turned));
+  await field.fill('0');
+  await expect(corner).toHaveAttribute('aria-valuenow', '0');
 });
 
 test('every handle has a typed twin and arrow-key steps', async ({ signedIn }) => {
