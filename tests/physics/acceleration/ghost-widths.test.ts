@@ -84,6 +84,9 @@ describe('widths at which a ghost lies in keep-clear', () => {
     // Above the centre for r > 40, where tissue reaches up to 350 and begins at 140 or more.
     expect(partly(straight(-20, 0.5))![1]).toBeCloseTo(2 * 350, 6);
     expect(partly(straight(-20, 0.5))![0]).toBeCloseTo(2 * 140, 6);
+    // By half a millimetre in the last row, or the first, is enough.
+    expect(partly(straight(-49.5, 0.5))![1]).toBeCloseTo(2 * 350, 6);
+    expect(partly(straight(0.5, -0.5))![1]).toBeCloseTo(2 * 251, 6);
     // Above it for r < 40: tissue reaches up to 290.
     expect(partly(straight(20, -0.5))![1]).toBeCloseTo(2 * 290, 6);
     expect(partly(straight(20, -0.5))![0]).toBeCloseTo(2 * 80, 6);

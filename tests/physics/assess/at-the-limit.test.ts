@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { assess } from '@/lib/physics';
+import { assess, drawSection } from '@/lib/physics';
 import type { Case } from '@/lib/physics/model/case';
 import type { Reading } from '@/lib/physics/model/patient';
 import {
@@ -302,5 +302,19 @@ describe('sentences beside the verdict', () => {
         ? `${answer.contaminatedInKeepClear} of 64 partitions in the keep-clear area`
         : `${answer.contaminated} of 64 partitions outside the keep-clear area`,
     );
+  });
+});
+
+describe('the section as drawn', () => {
+  it('shows what a slab’s own profile lets in from its other end', () => {
+    const given = sketchCase({ prescription: prescriptionOf('gradient-echo-3d') });
+    // The outermost of 64 partitions of 3.5 mm; with an ideal slab nothing would come from beyond the other end.
+    const drawn = drawSection(given, { sliceOffsetMm: 31.5 * 3.5 });
+    expect(drawn.pieces.some(({ sliceOrder }) => sliceOrder !== 0)).toBe(true);
+    const ideal = drawSection(given, {
+      sliceOffsetMm: 31.5 * 3.5,
+      slabWeight: (mm) => (Math.abs(mm) < 112 ? 1 : 0),
+    });
+    expect(ideal.pieces.some(({ sliceOrder }) => sliceOrder !== 0)).toBe(false);
   });
 });
