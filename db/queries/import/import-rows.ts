@@ -88,6 +88,9 @@ export interface Committed {
   readonly same: number;
 }
 
+/** From here on reading each table once beats looking every row up. */
+const MANY_ROWS = 1000;
+
 interface Commit {
   readonly siteId: string;
   readonly batchId: string;
@@ -194,6 +197,9 @@ export async function commitImportRows(trx: SiteTransaction, commit: Commit): Pr
   const { siteId, batchId, at, actor } = commit;
   // Against an import at the same moment: whoever is second sees what the first one booked.
   await sql`select pg_advisory_xact_lock(hashtextextended('import ' || ${siteId}::text, 0))`.execute(trx);
+  const total = await countImportRows(trx, siteId, batchId);
+  // Of rows that have just arrived the planner knows nothing and takes them for a few: it would then loop over loops.
+  if (total > MANY_ROWS) await sql`set local enable_nestloop = off`.execute(trx);
   const touched = new Map<string, Touched>();
   await makeBookings(trx, commit, touched);
   await changeBookings(trx, commit, touched);
@@ -207,7 +213,6 @@ export async function commitImportRows(trx: SiteTransaction, commit: Commit): Pr
     insert into audit_event (site_id, actor_id, actor_kind, action, subject_type, subject_id, fields)
     select ${siteId}::uuid, ${actor.id}::uuid, ${actor.kind}, 'booking.import', 'booking', t.id, string_to_array(t.fields, ',')
     from unnest(${[...touched.keys()]}::uuid[], ${[...touched.values()].map(({ fields }) => fields.join(','))}::text[]) t(id, fields)`.execute(trx);
-  const total = await countImportRows(trx, siteId, batchId);
   const created = touched.size - changed.length;
   return { created, changed: changed.length, same: total - touched.size };
 }
