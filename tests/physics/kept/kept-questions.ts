@@ -70,6 +70,8 @@ function bodies(): unknown {
   return REGIONS.flatMap((region) =>
     ARMS.flatMap((position) => [
       buildBody(patientOf(region, { arms: withArms(position), pairedSide: 'right', legGapMm: 33 })),
+      // Neither weight nor height known: adults' means.
+      buildBody(patientOf(region, { arms: withArms(position), weightKg: undefined })),
       // Ends that nobody measured, arms thinner than a chest is deep, the other leg at an unknown distance.
       buildBody({
         ...patientOf(region, { arms: withArms(position, 0), sex: 'female', position: 'head-first-prone' }),
