@@ -29,7 +29,7 @@ export default async function BookingsPage({ searchParams }: { searchParams: Pro
   const add = mayAttempt(actor, 'booking.create') && <LinkButton href="/bookings/new" variant="primary">Add a booking</LinkButton>;
   return (
     <PageBody wide>
-      <PageHeader title="Bookings" lead={`Under accession numbers; no names, no dates of birth. ${PLANNING_ESTIMATE}`} actions={add} />
+      <PageHeader title="Bookings" lead={`Under accession numbers; no names, no dates of birth. ${PLANNING_ESTIMATE}`} actions={<>{mayAttempt(actor, 'booking.import') && <LinkButton href="/bookings/import">Bring bookings in</LinkButton>}{add}</>} />
       <BookingViews current="table" />
       <BookingFilter
         search={search}
