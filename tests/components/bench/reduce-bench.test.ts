@@ -172,11 +172,11 @@ describe('handles', () => {
   const handlesOf = (state: BenchState) => benchHandles(caseOf(state.document, setting, sequenceById(state.document, state.activeId)));
   const at = (state: BenchState, id: string) => handlesOf(state).find((handle) => handle.id === id);
 
-  it('have one for every edge of FOV, keep-clear area and body, and the centre', () => {
+  it('have one for every edge of FOV, keep-clear area and body, the centre and the rotation', () => {
     expect(handlesOf(start()).map(({ id }) => id)).toEqual([
       'extent-right', 'extent-left', 'extent-anterior', 'extent-posterior',
       'keep-clear-right', 'keep-clear-left', 'keep-clear-anterior', 'keep-clear-posterior',
-      'fov-centre', 'fov-phase-low', 'fov-phase-high', 'fov-readout-low', 'fov-readout-high',
+      'fov-centre', 'fov-rotation', 'fov-phase-low', 'fov-phase-high', 'fov-readout-low', 'fov-readout-high',
     ]);
     expect(at(start(), 'fov-phase-low')).toMatchObject({ label: 'FOV edge, anterior', at: [0, -150] });
     expect(at(start(), 'keep-clear-right')?.at).toEqual([-190, -22.5]);
