@@ -14,6 +14,7 @@ const MAIN: readonly Entry[] = [
   { href: '/today', label: 'Today', needs: 'booking.read' },
   { href: '/bench', label: 'Bench', needs: 'check.run' },
   { href: '/bookings', label: 'Bookings', needs: 'booking.read' },
+  { href: '/demonstrations', label: 'Demonstrations', needs: 'demonstration.edit' },
   { href: '/site', label: 'Site', needs: 'scanner.read' },
 ];
 

@@ -21,7 +21,7 @@ function slabCase(): Case {
   );
 }
 
-function moved(question: Case, id: 'slice-oversampling' | 'pulse-sharpness' | 'phase-oversampling', value: number): Case {
+function moved(question: Case, id: 'slice-oversampling' | 'pulse-sharpness' | 'phase-oversampling' | 'depth', value: number): Case {
   const control = CONTROLS[id];
   return control.kind === 'number' ? control.write(question, value) : question;
 }
@@ -37,6 +37,8 @@ export function slabScenes(): readonly SceneDocument[] {
   const enoughPartitions = slab?.smallestCleanPartitions;
   const enough = enoughPartitions === undefined ? some : moved(before, 'slice-oversampling', (enoughPartitions / partitions - 1) * 100);
   const sharper = moved(before, 'pulse-sharpness', 14);
+  // Deeper than the FOV, so that there is something for phase oversampling to do.
+  const along = moved(moved(before, 'depth', 310), 'phase-oversampling', 100);
   const scene = (given: Pick<SceneDocument, 'title' | 'note' | 'question'> & Partial<SceneDocument>): SceneDocument => ({
     schemaVersion: 1, view: 'slab', highlight: 'what-wraps', sliceOffsetMm: 0, controls: CONTROL_SET, ...given,
   });
@@ -55,8 +57,8 @@ export function slabScenes(): readonly SceneDocument[] {
     scene({ title: 'A sharper pulse instead', note: `No oversampling, narrower skirts: ${wrapped(sharper)} partitions. A sharper pulse takes longer or more power.`, question: sharper }),
     scene({
       title: 'Phase oversampling does nothing for a slab',
-      note: `100 % along phase, and still ${wrapped(moved(before, 'phase-oversampling', 100))} partitions. The two directions are set apart.`,
-      question: moved(before, 'phase-oversampling', 100),
+      note: `A deeper body: 100 % along phase, and still ${wrapped(along)} partitions. Each direction has its own oversampling.`,
+      question: along,
       controls: ['phase-oversampling', 'slice-oversampling'],
     }),
   ];

@@ -46,10 +46,18 @@ export const saveDemonstrationInput = strict({
   title: demonstrationTitle,
   scenes: scenes.refine((list) => new Set(list.map(({ id }) => id)).size === list.length, { error: refused('each scene once') }),
 });
-export type SaveDemonstrationInput = z.input<typeof saveDemonstrationInput>;
+export interface SaveDemonstrationInput {
+  readonly id: string;
+  readonly expectedVersion: number;
+  readonly title: string;
+  readonly scenes: readonly Scene[];
+}
 
 export const addSceneInput = strict({ demonstrationId: idSchema, scene: sceneDocumentSchema });
-export type AddSceneInput = z.input<typeof addSceneInput>;
+export interface AddSceneInput {
+  readonly demonstrationId: string;
+  readonly scene: SceneDocument;
+}
 
 /** What a file of scenes holds; nothing in it names a site or a person. */
 export const demonstrationFile = strict({
@@ -61,7 +69,12 @@ export const demonstrationFile = strict({
     .min(1, { error: refused(`1 to ${SCENES_MAX} scenes`) })
     .max(SCENES_MAX, { error: refused(`1 to ${SCENES_MAX} scenes`) }),
 });
-export type DemonstrationFile = z.output<typeof demonstrationFile>;
+export interface DemonstrationFile {
+  readonly format: 'selvedge-demonstration';
+  readonly schemaVersion: 1;
+  readonly title: string;
+  readonly scenes: readonly SceneDocument[];
+}
 
 /** The file as it was read: nothing is trusted before it has been parsed here. */
 export const FILE_CHARACTERS_MAX = 900_000;

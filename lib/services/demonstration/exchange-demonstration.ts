@@ -15,7 +15,7 @@ export async function exportDemonstration(context: ServiceContext, input: { read
     format: 'selvedge-demonstration',
     schemaVersion: 1,
     title,
-    scenes: scenes.map(({ id: _id, ...document }) => ({ ...document, question: nameless(document.question), controls: [...document.controls] })),
+    scenes: scenes.map(({ id: _id, ...document }) => ({ ...document, question: nameless(document.question) })),
   };
 }
 

@@ -13,18 +13,23 @@ const actor = (...roles: Role[]): UserActor => ({
 const labels = (...roles: Role[]) => navigationFor(actor(...roles)).map(({ label }) => label);
 
 describe('navigation per role', () => {
-  it.each(['radiographer', 'coordinator', 'lead', 'radiologist'] as const)('%s', (role) => {
+  it.each(['radiographer', 'coordinator', 'radiologist'] as const)('%s', (role) => {
     expect(labels(role)).toEqual(['Today', 'Bench', 'Bookings', 'Site']);
     expect(homeFor(actor(role))).toBe('/today');
   });
 
+  it('a lead sees all of it', () => {
+    expect(labels('lead')).toEqual(['Today', 'Bench', 'Bookings', 'Demonstrations', 'Site']);
+    expect(homeFor(actor('lead'))).toBe('/today');
+  });
+
   it('an educator sees no bookings and lands on the bench', () => {
-    expect(labels('educator')).toEqual(['Bench', 'Site']);
+    expect(labels('educator')).toEqual(['Bench', 'Demonstrations', 'Site']);
     expect(homeFor(actor('educator'))).toBe('/bench');
   });
 
   it('several roles see the union, and none at all sees nothing', () => {
-    expect(labels('educator', 'radiographer')).toEqual(labels('radiographer'));
+    expect(labels('educator', 'radiographer')).toEqual(labels('lead'));
     expect(labels(...ROLES)).toEqual(labels('lead'));
     expect(labels()).toEqual([]);
     expect(homeFor(actor())).toBe('/');
