@@ -3,6 +3,7 @@ import { LinkButton } from '@/components/ui/button';
 import { Figure } from '@/components/ui/figure';
 import type { BookingRow } from './booking-row';
 import { BookingVerdict } from './booking-verdict';
+import { ResultWords } from './result-words';
 
 /** Bookings of one day, in the order of the day, each with its state and the next thing to do. */
 export function BookingList({ rows, label }: { rows: readonly BookingRow[]; label: string }) {
@@ -30,7 +31,9 @@ export function BookingList({ rows, label }: { rows: readonly BookingRow[]; labe
           </div>
           <div className="col-start-2 min-w-0 md:col-start-auto">
             <BookingVerdict verdict={row.verdict} />
-            <p className="text-sm text-ink-soft">{row.plan}</p>
+            <p className="mt-1 flex flex-wrap items-center gap-x-2 gap-y-1 text-sm text-ink-soft">
+              <ResultWords result={row.result} stale={row.stale} /> {row.plan}
+            </p>
           </div>
           <p className="col-start-2 md:col-start-auto md:text-right">
             <LinkButton href={row.next.href} size="sm" aria-label={`${row.next.label}, ${row.accession}`}>

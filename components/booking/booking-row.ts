@@ -30,13 +30,15 @@ export interface BookingRow {
 
 /** The one thing to do with a booking now. */
 export function nextStep(
-  booking: Pick<BookingListItem, 'id' | 'verdict' | 'planState' | 'planId'>,
+  booking: Pick<BookingListItem, 'id' | 'verdict' | 'planState' | 'planId' | 'result'>,
 ): BookingRow['next'] {
   const bench = `/bench/${booking.id}`;
   if (booking.planId && booking.planState && booking.planState !== 'draft') {
     return { label: 'Open the plan', href: `/plans/${booking.planId}` };
   }
   if (booking.planState === 'draft') return { label: 'Finish the plan', href: bench };
+  // What the pre-check passed needs no plan, whatever folds outside the keep-clear area.
+  if (booking.result === 'as-booked') return { label: 'Look at the bench', href: bench };
   if (!booking.verdict) return { label: 'Enter sizes', href: `/bookings/${booking.id}#sizes` };
   return booking.verdict === 'no-fold-expected'
     ? { label: 'Look at the bench', href: bench }

@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { LinkButton } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
 import { RESULT_WORDS } from '@/lib/presentation/pre-check-words';
-import { RESULT_FILTERS } from '@/lib/schemas/pre-check';
+import type { RESULT_FILTERS } from '@/lib/schemas/pre-check';
 import type { BookingRow } from './booking-row';
 import { tableHref } from './table-query';
 

@@ -10,7 +10,7 @@ const ORDER = [...RESULT_FILTERS].filter((id) => id !== 'unchecked').reverse();
 
 function Cell({ cell }: { cell: WeekCell }) {
   if (cell.bookings === 0) {
-    return <span className="text-sm text-ink-soft">{cell.sessionMinutes === undefined ? 'nothing booked' : `nothing booked of ${cell.sessionMinutes} min`}</span>;
+    return <span className="text-sm text-ink-soft">{cell.sessionMinutes === undefined ? 'nothing booked' : `nothing booked, ${cell.sessionMinutes} min free`}</span>;
   }
   const base = { from: cell.day, to: cell.day, scanner: cell.scannerId };
   const shown = [...ORDER, 'unchecked' as const].filter((id) => cell.results[id] > 0);
@@ -49,7 +49,7 @@ export function WeekGrid({ week, dayWords }: { week: WeekView; dayWords: Readonl
       <tbody>
         {week.scanners.map(({ id, name }) => (
           <Tr key={id} className="align-top">
-            <Th scope="row" className="align-top text-ink">{name}</Th>
+            <Th scope="row" className="border-b-0 align-top text-ink">{name}</Th>
             {week.days.map((day) => (
               <Td key={day} className="align-top"><Cell cell={week.cells.find((cell) => cell.day === day && cell.scannerId === id)!} /></Td>
             ))}

@@ -15,7 +15,8 @@ export async function listSessions({ actor }: ServiceContext, span: { readonly f
   return inTransaction(actor.siteId, async (trx) => {
     const sessions = await readSessions(trx, actor.siteId, span);
     const taken = await listTaken(trx, actor.siteId, { from: new Date(span.from.getTime() - DAY_MS), before: span.before });
-    return sessions.map((session) => ({
+    const byTime = [...sessions].sort((a, b) => a.startsAt.getTime() - b.startsAt.getTime());
+    return byTime.map((session) => ({
       id: session.id, scannerId: session.scannerId, scannerName: session.scannerName,
       startsAt: session.startsAt.toISOString(), endsAt: session.endsAt.toISOString(),
       minutes: (session.endsAt.getTime() - session.startsAt.getTime()) / 60_000,
