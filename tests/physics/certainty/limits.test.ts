@@ -88,8 +88,15 @@ describe('quasi-random points', () => {
 describe('the share of sizes that fold', () => {
   it('is a share of many sizes where depth and breadth decide together', () => {
     // Turned in its plane, phase meets both the front and the side.
+    const extents = {
+      ...extentsOf({}),
+      anterior: measured(170, 9),
+      posterior: measured(170, 9),
+      right: measured(240, 9),
+      left: measured(240, 9),
+    };
     const given = sketchCase({
-      patient: unsure({ anterior: 9, posterior: 9, right: 9, left: 9 }),
+      patient: typicalPatient({ extents }),
       prescription: typicalPrescription({ inPlaneRotationDeg: 35, acquiredLines: 275, fovReadoutMm: 480 }),
     });
     const { method, probability, draws } = foldProbability(given);
