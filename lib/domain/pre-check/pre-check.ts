@@ -61,7 +61,7 @@ export function standingOf(check: ScannerCheck): Alternative {
   const { scannerId, scannerName, calls, findings } = check;
   const worst = findings.find((finding) => finding.calls === calls);
   const standing = calls === 'as-booked' || calls === 'plan-needed' ? 'fits' : calls === 'size-needed' ? 'open' : 'ruled-out';
-  return { scannerId, scannerName, standing, reason: worst?.text ?? 'Nothing speaks against it.', open: findings.filter((finding) => finding.calls === 'size-needed') };
+  return { scannerId, scannerName, standing, reason: worst?.text ?? 'Nothing found that speaks against it.', open: findings.filter((finding) => finding.calls === 'size-needed') };
 }
 
 function slotFindings(question: PreCheckQuestion, scanMinutes: number): Finding[] {
