@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { growInReadout } from '@/lib/physics/fold/displacement';
 import { foldProblem, usableVolume } from '@/lib/physics/fold/fold-problem';
+import { solveFold } from '@/lib/physics/fold/solve-fold';
 import { straight, valueAt } from '@/lib/physics/section/curve';
 import type { RowBand } from '@/lib/physics/section/row-band';
 import {
@@ -12,6 +13,7 @@ import {
   typicalPrescription,
   typicalScanner,
 } from '@/tests/support/physics-cases';
+import { boxPart, NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-problem';
 
 describe('where the scanner maps rightly', () => {
   const volume = (position: 'head-first-supine' | 'head-first-prone') =>
@@ -83,5 +85,30 @@ describe('a keep-clear section grown along readout', () => {
     expect([Math.min(...grown.map(({ r0 }) => r0)), Math.max(...grown.map(({ r1 }) => r1))]).toEqual([
       -39, 56,
     ]);
+  });
+});
+
+describe('the width that covers the body', () => {
+  const cover = (
+    posterior: number,
+    anterior: number,
+    centreY: number,
+    margin: Partial<typeof NO_MARGIN_MM> = {},
+  ): number =>
+    solveFold(
+      sampleProblem(
+        [boxPart('trunk', { xMm: [-150, 150], yMm: [-anterior, posterior], zMm: [-250, 250] })],
+        samplePrescription({ centreMm: [0, centreY, 0] }),
+        { marginMm: { ...NO_MARGIN_MM, ...margin } },
+      ),
+    ).requirement().coverBodyMm;
+  it('is twice the farther side from the FOV centre, its margin added, and never less than the FOV', () => {
+    expect(cover(170, 160, 0)).toBeCloseTo(340, 9);
+    expect(cover(170, 160, 20)).toBeCloseTo(360, 9);
+    expect(cover(170, 160, -20)).toBeCloseTo(380, 9);
+    expect(cover(170, 160, 0, { posterior: 7, anterior: 3 })).toBeCloseTo(354, 9);
+    expect(cover(160, 170, 0, { posterior: 3, anterior: 9 })).toBeCloseTo(358, 9);
+    expect(cover(160, 170, 0, { posterior: 25, anterior: 9 })).toBeCloseTo(370, 9);
+    expect(cover(100, 90, 0)).toBe(300);
   });
 });

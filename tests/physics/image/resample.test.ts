@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { sectionFrame } from '@/lib/physics/geometry/section-frame';
+import { foldOntoRow } from '@/lib/physics/image/fold-row';
 import { resample, type Grid } from '@/lib/physics/image/resample';
 import type { Prescription } from '@/lib/physics/model/prescription';
 import { typicalPrescription } from '@/tests/support/physics-cases';
@@ -95,5 +96,40 @@ describe('the sampled picture at the asked size', () => {
     );
     for (let x = 0; x < 4; x++)
       for (let y = 0; y < 4; y++) expect(picture.at(x, y)).toBeCloseTo(10 * x + (3 - y), 4);
+  });
+});
+
+describe('one row whose FOV centre lies off the origin', () => {
+  // Every place tried for itself: a piece of a millimetre at p is seen where p comes back by whole widths, if inside F.
+  it.each([
+    [40, 300, 1],
+    [-65, 340, 1],
+    [40, 300, 2],
+    [25, 320, 3],
+  ])('centre %d mm, W %d mm, R %d', (centreMm, widthMm, ghostFactor) => {
+    const sampling = { centreMm, fovMm: 280, widthMm, pixels: 280, ghostFactor };
+    const row = new Float64Array(280);
+    foldOntoRow(row, sampling, -310.5, 420.25, 2);
+    const expected = new Float64Array(280);
+    for (let p = -310.5; p < 420.25; p += 0.25) {
+      const at = p + 0.125;
+      const folded =
+        centreMm + ((((at - centreMm + widthMm / 2) % widthMm) + widthMm) % widthMm) - widthMm / 2;
+      const copies = Math.abs(at - centreMm) > widthMm / 2 ? ghostFactor : 1;
+      for (let k = 0; k < copies; k++) {
+        const moved = folded - centreMm + (k * widthMm) / ghostFactor;
+        const seen = ((((moved + widthMm / 2) % widthMm) + widthMm) % widthMm) - widthMm / 2;
+        const pixel = Math.floor(seen + 140);
+        if (pixel >= 0 && pixel < 280) expected[pixel]! += 0.5;
+      }
+    }
+    // A quarter of a millimetre of brightness 2 a step; pieces begin and end between steps, up to R at a place.
+    row.forEach((value, i) =>
+      expect(Math.abs(value - expected[i]!), `pixel ${i}`).toBeLessThan(0.51 * ghostFactor),
+    );
+    expect(row.reduce((sum, value) => sum + value, 0)).toBeCloseTo(
+      expected.reduce((sum, value) => sum + value, 0),
+      -0.5,
+    );
   });
 });

@@ -97,7 +97,68 @@ function phantoms(region: BodyRegion): unknown {
     ...patient,
     extents: extentsOf({ right: 41, left: 44, anterior: 38, posterior: 35, superior: 40, inferior: 45 }),
   };
-  return [patient, small].map((one) => layersOf(typicalCase({ patient: one })));
+  // Parts as given: a turned cylinder across the body, an ellipsoid, an outline, each with its own weight.
+  const given: Patient = {
+    ...patient,
+    parts: [
+      {
+        name: 'across',
+        kind: 'other',
+        signalWeight: 0.8,
+        estimated: false,
+        shape: {
+          type: 'elliptic-cylinder',
+          along: 'x',
+          centreMm: [5, 20, -10],
+          semiAxesMm: [60, 90],
+          rotationDeg: 25,
+          fromMm: -80,
+          toMm: 130,
+        },
+      },
+      {
+        name: 'round',
+        kind: 'head',
+        signalWeight: 1,
+        estimated: false,
+        shape: { type: 'ellipsoid', centreMm: [12, -30, 45], semiAxesMm: [70, 110, 40] },
+      },
+      {
+        name: 'drawn',
+        kind: 'trunk',
+        signalWeight: 1.2,
+        estimated: false,
+        shape: {
+          type: 'outline-prism',
+          along: 'z',
+          rings: [
+            [
+              [-40, -10],
+              [70, 5],
+              [20, 90],
+            ],
+          ],
+          fromMm: -30,
+          toMm: 25,
+        },
+      },
+      {
+        name: 'along',
+        kind: 'leg',
+        signalWeight: 1,
+        estimated: false,
+        shape: {
+          type: 'elliptic-cylinder',
+          along: 'z',
+          centreMm: [90, 20, 0],
+          semiAxesMm: [60, 70],
+          fromMm: -80,
+          toMm: 130,
+        },
+      },
+    ],
+  };
+  return [patient, small, given].map((one) => layersOf(typicalCase({ patient: one })));
 }
 
 function signals(): unknown {
