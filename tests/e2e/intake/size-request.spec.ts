@@ -8,9 +8,9 @@ test('a size request is answered from its mail on a phone and flips the booking'
   const page = await signedIn('coordinator');
   await page.goto('/bookings/new');
   await page.getByLabel('Accession number').fill(accession);
-  await page.getByLabel('Time').fill('10:40');
-  await page.getByLabel('Scanner').selectOption({ index: 1 });
-  await page.getByLabel('Protocol').selectOption({ index: 1 });
+  await page.getByLabel('Start of the slot').fill('10:40');
+  await page.getByLabel('Scanner', { exact: true }).selectOption({ index: 1 });
+  await page.getByLabel('Protocol', { exact: true }).selectOption({ index: 1 });
   await page.getByRole('button', { name: /^Add/ }).click();
   await expect(page).toHaveURL(/\/bookings\/[0-9a-f-]{36}/);
   await page.getByLabel('E-mail address').fill(address);

@@ -19,7 +19,7 @@ export default async function ImportPage() {
     <PageBody>
       <PageHeader
         title="Bring bookings in"
-        lead="From a file of your booking system. What is booked there decides; nothing typed here is lost."
+        lead="From a file of your booking system. What is booked there decides; sizes are added, none is overwritten."
         back={{ href: '/bookings', label: 'Bookings' }}
       />
       {view.scanners.length === 0 || view.protocols.length === 0 ? (
