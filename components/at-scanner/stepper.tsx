@@ -26,7 +26,7 @@ export function Stepper({ label, hint, value, certainty, stepMm, min, max, onEdi
       <button type="button" className={BUTTON} aria-label={`${label}, ${stepMm} mm less`} disabled={value <= min} onClick={() => step(-stepMm)}>
         −
       </button>
-      <div className="min-w-0 flex-1">
+      <div className="min-w-0">
         <NumberField
           label={label}
           hint={hint}

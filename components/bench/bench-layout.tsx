@@ -28,7 +28,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
       <SaveNotices plan={plan} />
       <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)] lg:max-xl:grid-rows-[auto_1fr] xl:grid-cols-[19.5rem_minmax(0,1fr)_23.25rem]">
         <VerdictLine className="sticky top-0 z-20 border-b border-line bg-cloth lg:hidden" />
-        <div className="flex min-h-0 min-w-0 flex-col lg:order-2">
+        <div className="flex min-h-0 min-w-0 flex-col lg:order-2 xl:overflow-y-auto">
           <VerdictLine className="max-lg:hidden" />
           <PictureColumn />
         </div>

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { Logo } from '@/components/ui/logo';
 import { VerdictWords } from '@/components/bench/verdict-words';
+import { qrPath } from '@/lib/presentation/qr-path';
 import type { PlanView } from '@/lib/schemas/plan';
 import { CAUTIONS } from './cautions';
 import './plan-sheet.css';
@@ -53,7 +54,7 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
           </p>
           <p className="figures mt-1">{restsOn(plan)}</p>
         </div>
-        <ScanCode link={link} className="size-24 flex-none print:size-20" />
+        <ScanCode code={qrPath(link)} className="size-24 flex-none print:size-20" />
       </footer>
     </article>
   );

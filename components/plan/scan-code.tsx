@@ -1,8 +1,9 @@
-import { QR_QUIET_MODULES, qrPath } from '@/lib/presentation/qr-path';
+'use client';
+
+import { QR_QUIET_MODULES, type QrPath } from '@/lib/presentation/qr-quiet-zone';
 
 /** The short link as a code for a phone or tablet. Black on white in either theme: inverted codes are not read everywhere. */
-export function ScanCode({ link, className }: { link: string; className?: string }) {
-  const { modules, path } = qrPath(link);
+export function ScanCode({ code: { modules, path }, className }: { code: QrPath; className?: string }) {
   const side = modules + 2 * QR_QUIET_MODULES;
   return (
     <svg

@@ -14,7 +14,8 @@ export function assumedValues({ patient, prescription: p, keepClear, scanner, po
   const whole = (a: 'right' | 'anterior' | 'superior', b: 'left' | 'posterior' | 'inferior') => patient.extents[a].value + patient.extents[b].value;
   const across = p.phaseAxis === 'AP' ? { name: 'right–left', mm: whole('right', 'left') } : { name: 'front to back', mm: whole('anterior', 'posterior') };
   const { slices } = p;
-  const margins = [...new Set(Object.values(policy.marginMm))].map((mm) => formatShort(mm, 0.1)).join(' to ');
+  const each = Object.values(policy.marginMm);
+  const [least, most] = [Math.min(...each), Math.max(...each)].map((mm) => formatShort(mm, 0.1));
   return [
     { name: 'Phase direction', value: `${AXIS_NAMES[p.phaseAxis]}, ${PLANE_WORDS[p.plane]}` },
     { name: 'Patient', value: `${patient.region}, an ellipse ${formatShort(across.mm, 1)} mm ${across.name}, centred on the FOV` },
@@ -22,7 +23,7 @@ export function assumedValues({ patient, prescription: p, keepClear, scanner, po
     { name: 'Arms', value: ARM_WORDS[patient.arms.position] },
     { name: 'Breath', value: `hold ${formatShort(patient.breathHoldS.value, 0.1)} s, period ${formatShort(patient.breathPeriodS.value, 0.1)} s` },
     { name: 'Keep-clear area', value: keepClear.area.kind === 'whole-picture' ? 'whole picture' : 'a box' },
-    { name: 'Safety margin', value: `${margins} mm a side, sure at ${formatPercent(policy.sureAt * 100, 1)}` },
+    { name: 'Margin', value: `${least === most ? most : `${least} to ${most}`} mm a side, sure at ${formatPercent(policy.sureAt * 100, 1)}` },
     { name: 'Readout', value: `FOV ${formatShort(p.fovReadoutMm, 1)} mm, matrix ${p.readoutMatrix}` },
     { name: 'Lines across the FOV', value: String(p.linesAcrossFov) },
     {

@@ -1,3 +1,7 @@
+'use client';
+
+// React streams what a server component puts inside an <svg> with a style attribute of its own, which the content
+// security policy refuses; rendered from plain props it comes in one piece.
 import { cx } from './class-names';
 
 /**

@@ -1,3 +1,7 @@
+'use client';
+
+// React streams what a server component puts inside an <svg> with a style attribute of its own, which the content
+// security policy refuses; rendered from plain props it comes in one piece.
 import { EDGE_DASH } from '../scene/edge-dash';
 import { fitScene, toPixels, type Fit, type Scene, type SceneNode, type Stroke, type Token } from '../scene/scene';
 import type { ScreenPoint } from '../scene/section-frame';

@@ -8,7 +8,7 @@ test('sizes off the localiser, verdict and adopt go on without a network, and ar
   expectedErrors.push(/ERR_INTERNET_DISCONNECTED/, /Failed to fetch/);
   const page = await signedIn('radiographer');
   const context = page.context();
-  const booking = await newBooking(context, 9341);
+  const booking = await newBooking(context, 9141);
   await page.goto(`/bench/${booking.id}/at-scanner`);
   const folding = page.getByRole('region', { name: 'Sequences' }).getByText('Fold in the keep-clear area');
   await expect(folding.first()).toBeVisible();
@@ -37,7 +37,7 @@ test('sizes off the localiser, verdict and adopt go on without a network, and ar
 test('what waits outlives a reload of the tab', async ({ signedIn, expectedErrors }) => {
   expectedErrors.push(/503/);
   const page = await signedIn('radiographer');
-  const booking = await newBooking(page.context(), 9342);
+  const booking = await newBooking(page.context(), 9142);
   await page.goto(`/bench/${booking.id}/at-scanner`);
   await page.route('**/api/v1/bookings/*/size-readings', (route) => route.fulfill({ status: 503, body: '{}' }));
   await page.getByRole('spinbutton', { name: 'Left' }).fill('251');

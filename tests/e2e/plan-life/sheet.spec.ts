@@ -5,7 +5,7 @@ import { newBooking } from '@/tests/support/e2e/new-booking';
 
 test('the sheet has a code to scan, a PDF from the worker, and a short link that says when a newer version exists', async ({ signedIn }) => {
   const page = await signedIn('radiographer');
-  const booking = await newBooking(page.context(), 9331);
+  const booking = await newBooking(page.context(), 9131);
   await page.goto(`/bench/${booking.id}`);
   await benchAnswers(page);
   await page.getByRole('button', { name: 'Save plan' }).click();

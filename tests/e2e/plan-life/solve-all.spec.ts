@@ -4,7 +4,7 @@ import { anotherPerson, newBooking } from '@/tests/support/e2e/new-booking';
 
 test('solve all proposes a remedy for each sequence that folds, says the minutes, adopts all, and one undo takes it back', async ({ signedIn }) => {
   const page = await signedIn('radiographer');
-  const booking = await newBooking(page.context(), 9321);
+  const booking = await newBooking(page.context(), 9121);
   await page.goto(`/bench/${booking.id}`);
   await benchAnswers(page);
   const folding = page.getByRole('list', { name: 'Sequences' }).getByText('Fold in the keep-clear area');
@@ -27,7 +27,7 @@ test('solve all proposes a remedy for each sequence that folds, says the minutes
 
 test('an area asked for by a radiologist is on the bench under their name', async ({ signedIn, browser }) => {
   const page = await signedIn('radiographer');
-  const booking = await newBooking(page.context(), 9322);
+  const booking = await newBooking(page.context(), 9122);
   const radiologist = await anotherPerson(browser, 'radiologist');
   await radiologist.goto(`/bookings/${booking.id}`);
   await radiologist.getByText('Ask for an area').click();

@@ -4,7 +4,7 @@ import { anotherPerson, newBooking } from '@/tests/support/e2e/new-booking';
 
 test('two people begin one plan at once: the second is told, shown the difference, and loses nothing', async ({ signedIn, browser, expectedErrors }) => {
   const one = await signedIn('radiographer');
-  const booking = await newBooking(one.context(), 9311);
+  const booking = await newBooking(one.context(), 9111);
   const two = await anotherPerson(browser, 'lead');
   for (const page of [one, two]) {
     await page.goto(`/bench/${booking.id}`);

@@ -2,10 +2,10 @@ import { expect } from '@playwright/test';
 import { type CaughtMail, listCaughtMail } from '@/lib/mail';
 import { caughtMailFolder } from '@/lib/ops/local-database';
 
-/** The newest caught mail to an address, as soon as the worker has sent it. */
-export async function mailTo(address: string): Promise<CaughtMail> {
+/** The newest caught mail to an address (under this subject, where one is given), as soon as the worker has sent it. */
+export async function mailTo(address: string, subject?: string): Promise<CaughtMail> {
   const folder = caughtMailFolder(String(process.env.SELVEDGE_E2E_DATA_DIR));
-  const find = async () => (await listCaughtMail(folder))?.find((mail) => mail.to === address);
+  const find = async () => (await listCaughtMail(folder))?.find((mail) => mail.to === address && (subject === undefined || mail.subject === subject));
   await expect.poll(find, { message: `mail to ${address}`, timeout: 30_000 }).toBeTruthy();
   return (await find())!;
 }

@@ -42,7 +42,6 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
       <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-6 lg:grid-cols-[minmax(0,5fr)_minmax(0,9fr)]">
         <div className="space-y-6">
           <BookingFacts row={row} />
-          <PlanLife booking={booking} />
           {may.record && <SurgeryForm key={booking.surgeryOn} surgeryOn={booking.surgeryOn ?? ''} today={today} save={setSurgery.bind(null, id)} />}
           <LeadPanel escalation={booking.escalation} ask={may.escalate ? askLead.bind(null, id) : undefined} decide={may.decide ? decideAsLead.bind(null, id) : undefined} />
           <HistoryPanel lines={shownLines(history)} addNote={may.note ? noteBooking.bind(null, id) : undefined} />
@@ -50,6 +49,7 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
         <div className="space-y-6">
           <PreCheckPanel check={check} checkedAt={check ? formatMoment(new Date(check.checkedAt)) : ''} next={checkedStep(booking)} />
           {places && <MovePanel slotMinutes={places.slotMinutes} scanners={scannerPlaces(places)} open={openMove(move)} propose={proposePlace.bind(null, id)} withdraw={withdrawPlace.bind(null, id)} />}
+          <PlanLife booking={booking} />
           <section id="sizes" aria-labelledby="sizes-title" className="space-y-4">
             <h2 id="sizes-title" className="text-xl">Size record</h2>
             <SizeRecord record={record} />

@@ -59,6 +59,7 @@ export default async function PlanPage({ params, searchParams }: Props) {
         <SignOffForm version={plan.version} why={signOffWords(plan)} decide={signOffAction.bind(null, id, plan.version)} />
       )}
       <OutcomeSection
+        className="mt-6"
         plan={plan}
         outcomes={outcomes}
         record={may.record ? recordOutcomeAction.bind(null, id, plan.version) : undefined}
