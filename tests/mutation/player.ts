@@ -18,12 +18,19 @@ export class Player {
   constructor(private readonly cwd: string) {}
 
   private start(): ChildProcess {
-    return fork(path.join(import.meta.dirname, 'play-mutants.ts'), {
+    const child = fork(path.join(import.meta.dirname, 'play-mutants.ts'), {
       cwd: this.cwd,
       execArgv: ['--import', 'tsx', '--max-old-space-size=700', '--stack-size=900'],
       env: { ...process.env, ...COUNTS },
       stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
     });
+    // A mutant may end its process after it has answered: the next one gets a new process.
+    const forget = () => {
+      if (this.child === child) this.child = undefined;
+    };
+    child.on('exit', forget);
+    child.on('error', forget);
+    return child;
   }
 
   /** The answer, or why there is none. */
