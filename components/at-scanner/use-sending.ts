@@ -38,6 +38,7 @@ export function useSending(
   const busy = useRef(false);
   const attempts = useRef(0);
   const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
+  const again = useRef<() => void>(() => {});
   const stored = useRef(onStored);
   useEffect(() => {
     stored.current = onStored;
@@ -71,7 +72,7 @@ export function useSending(
       if (result.kind === 'unreached') {
         attempts.current += 1;
         setState({ kind: 'waiting', attempts: attempts.current });
-        timer.current = setTimeout(() => void drain(), RETRY_MS[Math.min(attempts.current, RETRY_MS.length) - 1]);
+        timer.current = setTimeout(() => again.current(), RETRY_MS[Math.min(attempts.current, RETRY_MS.length) - 1]);
         return;
       }
       attempts.current = 0;
@@ -92,10 +93,11 @@ export function useSending(
       keep(kept);
       void drain();
     });
-    const again = () => void drain();
-    window.addEventListener('online', again);
+    const onOnline = () => void drain();
+    again.current = onOnline;
+    window.addEventListener('online', onOnline);
     return () => {
-      window.removeEventListener('online', again);
+      window.removeEventListener('online', onOnline);
       if (timer.current) clearTimeout(timer.current);
     };
   }, [drain, keep, key]);
