@@ -74,8 +74,9 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
   const travels = travelsOf(slab, widthMm, thickness, (z) => (inBody(z) ? worstAt(sources, slabMm, z) : 0));
 
   const reach = Math.max(widthMm * 0.6, ...travels.flatMap(({ sourceMm }) => sourceMm.map((z) => Math.abs(z) + 0.04 * widthMm)));
+  const highest = Math.max(...slab.partitions.map(({ signal, alias }) => signal + alias));
   const half = Math.min(reach, 1.5 * widthMm);
-  const wanted: Bounds = { left: -half * 1.04, right: half * 1.04, top: -widthMm * PLATEAU * 1.5, bottom: widthMm * 0.36 };
+  const wanted: Bounds = { left: -half * 1.04, right: half * 1.04, top: -widthMm * PLATEAU * Math.max(1.5, highest + 0.1), bottom: widthMm * 0.45 };
   const fit = fitScene(wanted, size.widthPx, size.heightPx);
   const [left, top] = fromPixels(fit, [0, 0]);
   const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
@@ -160,7 +161,7 @@ function travelNodes({ end, sourceMm, landedMm, partitions }: Travel, sides: rea
     },
     {
       kind: 'text', name: `travel/${end}/label`, text: `from beyond the ${end === 'high' ? sides[1] : sides[0]} end`,
-      at: [to, below], offsetPx: [end === 'high' ? 6 : -6, 15], anchor: end === 'high' ? 'start' : 'end', size: 'note', colour,
+      at: [landedMm[end === 'high' ? 0 : 1], lane[1]], offsetPx: [0, 40], anchor: end === 'high' ? 'start' : 'end', size: 'note', colour,
     },
   ];
 }
