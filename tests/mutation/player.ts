@@ -33,8 +33,16 @@ export class Player {
     return child;
   }
 
-  /** The answer, or why there is none. */
-  ask(
+  /** The answer, or why there is none. A process that dies is believed when it dies twice. */
+  async ask(
+    request: Request,
+    firstAllowedMs: number,
+  ): Promise<Exclude<Answer, { kind: 'begun' }> | 'hung' | 'died'> {
+    const answer = await this.askOnce(request, firstAllowedMs);
+    return answer === 'died' ? this.askOnce(request, firstAllowedMs) : answer;
+  }
+
+  private askOnce(
     request: Request,
     firstAllowedMs: number,
   ): Promise<Exclude<Answer, { kind: 'begun' }> | 'hung' | 'died'> {
