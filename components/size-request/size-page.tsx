@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useState, type ReactNode } from 'react';
+import { useEffect, useEffectEvent, useState, type ReactNode } from 'react';
 import { Notice } from '@/components/ui/notice';
 import { WovenEdge } from '@/components/ui/woven-edge';
 import type { ActionResult } from '@/lib/schemas/action-result';
@@ -36,10 +36,14 @@ export function SizePage({
   const [opened, setOpened] = useState<Opened | null>(null);
   const [sentAt, setSentAt] = useState<Date | null>(null);
 
+  // Once, when the page opens: an action that sets a cookie renders the page anew and hands down new actions, and
+  // asking again after the answer would put "has been answered" in place of the receipt.
+  const exchange = useEffectEvent((token: string) => (token ? open(token) : reopen()));
+
   useEffect(() => {
     let current = true;
     const token = window.location.hash.slice(1);
-    void (token ? open(token) : reopen())
+    void exchange(token)
       .catch(() => NO_ANSWER)
       .then((result) => {
         if (!current) return;
@@ -49,7 +53,7 @@ export function SizePage({
     return () => {
       current = false;
     };
-  }, [open, reopen]);
+  }, []);
 
   if (!opened) {
     return (

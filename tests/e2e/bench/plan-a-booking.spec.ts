@@ -34,8 +34,8 @@ test('from verdict to adopted remedy, plan sheet in the scanner’s own form, an
 test('the same by keyboard alone', async ({ signedIn }) => {
   const page = await signedIn('radiographer');
   await page.goto('/bookings');
-  await expect(page.getByRole('link', { name: /bench, HB-2133$/ })).toBeVisible();
-  await tabTo(page, /bench, HB-2133$/);
+  await expect(page.getByRole('link', { name: /bench, HB-2112$/ })).toBeVisible();
+  await tabTo(page, /bench, HB-2112$/);
   await page.keyboard.press('Enter');
   await benchAnswers(page);
   await expect(verdict(page)).toHaveText('Fold in the keep-clear area');
@@ -55,7 +55,7 @@ test('the same by keyboard alone', async ({ signedIn }) => {
   await expect(page.getByText('Saved: draft, version 1')).toBeVisible();
   await page.keyboard.press('Shift+Tab');
   await page.keyboard.press('Enter');
-  await expect(page.getByRole('heading', { name: 'HB-2133' })).toBeVisible();
+  await expect(page.getByRole('heading', { name: 'HB-2112' })).toBeVisible();
 });
 
 test('first use: from the sign-in form to an adopted remedy in five interactions', async ({ page }) => {
