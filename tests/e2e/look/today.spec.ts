@@ -52,6 +52,7 @@ test('an educator has no bookings to see', async ({ signedIn, expectedErrors }) 
   await expect(page.getByRole('heading', { name: 'There is nothing at this address' })).toBeVisible();
   await expect(page.getByRole('navigation', { name: 'Main' }).getByRole('link')).toHaveText([
     'Bench',
+    'Demonstrations',
     'Site',
   ]);
 });
