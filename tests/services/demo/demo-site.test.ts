@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { inTransaction } from '@/db/client';
 import { DEMO_SITE_ID, demoId, seedDemo } from '@/db/seed';
+import { DEMO_BOOKINGS } from '@/db/seed/demo-bookings';
 import type { UserActor } from '@/lib/domain/access';
 import type { Case } from '@/lib/domain/case/model';
 import { assess, rankRemedies } from '@/lib/physics';
@@ -64,7 +65,7 @@ describe('the demo site', () => {
     const before = await rowCounts();
     await seedDemo({ db: ownerDatabase(), accounts: ACCOUNTS, now: NOW });
     expect(await rowCounts()).toEqual(before);
-    expect(before.booking).toBe(12);
+    expect(before.booking).toBe(DEMO_BOOKINGS.length);
     expect(before.sequence).toBe(9);
   });
 

@@ -27,9 +27,9 @@ import { countQueries } from '@/tests/support/count-queries';
 import { as, equipSite, NOW, scannerForm, type EquippedSite } from '@/tests/support/equipped-site';
 import { KNOWN } from '@/tests/support/pre-check-questions';
 
-async function sizeAll({ radiographer }: EquippedSite, bookingId: string, overrides: Partial<Record<keyof typeof KNOWN, number>> = {}) {
+async function sizeAll({ radiographer }: EquippedSite, bookingId: string, overrides: Partial<Record<keyof typeof KNOWN, number>> = {}, now = NOW) {
   const readings = Object.entries({ ...KNOWN, ...overrides }).map(([quantity, value]) => ({ quantity, value, source: 'measured', spread: 0, takenOn: '2026-05-02' }));
-  return recordReadings(as(radiographer), { bookingId, readings });
+  return recordReadings({ ...as(radiographer), now }, { bookingId, readings });
 }
 
 const run = ({ site }: EquippedSite, now = NOW) => refreshBookings({ siteId: site.siteId }, now);
@@ -53,8 +53,10 @@ describe('a check in the background', () => {
     expect((await getBooking(as(here.coordinator), { id: here.booking.id })).stale).toBe(true);
     expect(await run(here)).toBe(1);
     expect(await checks(here)).toHaveLength(1);
-    await sizeAll(here, here.booking.id, { 'weight-kg': 230 });
-    await run(here);
+    // The newest reading counts: of two taken in one moment either could be it.
+    const later = new Date(NOW.getTime() + 1000);
+    await sizeAll(here, here.booking.id, { 'weight-kg': 230 }, later);
+    await run(here, later);
     expect((await checks(here)).map(({ number: one, result }) => [one, result])).toEqual([[1, view.result], [2, 'escalate']]);
   });
 
@@ -237,7 +239,7 @@ describe('the week', () => {
     expect(cell.results[result]).toBe(1);
 
     const later = new Date(NOW.getTime() + 30 * 3_600_000);
-    await sizeAll(here, here.booking.id, { 'weight-kg': 230 });
+    await sizeAll(here, here.booking.id, { 'weight-kg': 230 }, later);
     await run(here, later);
     const week = await getWeek({ actor: here.coordinator, now: new Date(later.getTime() + 1000) }, { from: '2026-05-04' });
     expect(week.changes).toMatchObject([{ accession: 'AB-1234', before: result, result: 'escalate' }]);
