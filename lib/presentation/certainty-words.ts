@@ -6,13 +6,13 @@ import { formatPercent, formatProbability } from './percent';
  * certainty asked for.
  */
 export function describeProbability({ probability, method }: FoldProbability, sureAt: number, tried: boolean): string {
-  const verdict = `the verdict adds the margin and takes sizes at ${formatPercent(sureAt * 100, 1)}`;
-  const subject = tried ? 'With what is tried and without the margin' : 'Without the margin';
+  const subject = tried ? 'Tried, without margin' : 'Without margin';
   if (method === 'certain') {
-    const folds = probability > 0.5 ? 'fold reaches' : 'no fold reaches';
-    return `${subject}, ${folds} the keep-clear area; the sizes have no spread, and the verdict adds the margin.`;
+    const folds = probability > 0.5 ? 'fold' : 'no fold';
+    return `${subject}: ${folds} in the keep-clear area; the sizes have no spread, and the verdict adds the margin.`;
   }
   // A share of a few hundred sizes: a figure to the percent would claim more than it knows.
   const about = method === 'quasi-random' && probability > 0.01 && probability < 0.99 ? 'about ' : '';
-  return `${subject}, fold reaches the keep-clear area in ${about}${formatProbability(probability)} of patients with these sizes; ${verdict}.`;
+  const share = `${about}${formatProbability(probability)} of such patients`;
+  return `${subject}: fold in the keep-clear area in ${share}; the verdict adds it, sure at ${formatPercent(sureAt * 100, 1)}.`;
 }

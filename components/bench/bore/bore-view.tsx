@@ -47,13 +47,13 @@ export function BoreView() {
     store.dispatch({ type: 'edit-patient', patch: { lateralOffsetMm: value }, step });
   };
   return (
-    <div className="flex min-h-0 flex-1 flex-col">
+    <div className="flex min-h-0 flex-1 flex-col xl:flex-row">
       <div
         ref={box}
         role="group"
         aria-label={`Opening of ${scanner.name}, seen along the bore`}
         aria-describedby="bore-in-words"
-        className="relative h-80 touch-none overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-h-64 xl:flex-1"
+        className="relative h-80 touch-none overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-w-0 xl:flex-1"
       >
         {picture && size && (
           <>
@@ -63,9 +63,9 @@ export function BoreView() {
         )}
       </div>
       {typeof check === 'string' ? (
-        <p className="px-5 pb-3">A value needs another look: {check}</p>
+        <p className="px-5 py-3 xl:w-72 xl:flex-none">A value needs another look: {check}</p>
       ) : (
-        <div id="bore-in-words" className="px-5 pb-3 text-sm text-ink-soft">
+        <div id="bore-in-words" className="px-5 py-3 text-sm text-ink-soft xl:w-72 xl:flex-none xl:overflow-y-auto">
           <div aria-live="polite">
             {describeClearance(check, policy.sureAt).map((line) => (
               <p key={line} className="text-base font-medium text-ink">
@@ -73,7 +73,7 @@ export function BoreView() {
               </p>
             ))}
           </div>
-          <div className="my-1 grid max-w-md grid-cols-2 gap-x-6">
+          <div className="my-2 grid max-w-md grid-cols-2 gap-x-6 xl:grid-cols-1">
             <PlainNumber
               label="Patient to the left"
               name="lateralOffsetMm"
@@ -102,7 +102,11 @@ export function BoreView() {
               <li key={line}>{line}</li>
             ))}
           </ul>
-          <p>{describeBasis(check).join(' ')}</p>
+          <ul className="space-y-1">
+            {describeBasis(check).map((line) => (
+              <li key={line}>{line}</li>
+            ))}
+          </ul>
         </div>
       )}
     </div>

@@ -60,12 +60,12 @@ describe('how sure', () => {
     const words = (probability: number, method: 'certain' | 'exact' | 'quasi-random') =>
       describeProbability({ probability, method, draws: 1 }, 0.95, false);
     expect(words(0.342, 'exact')).toBe(
-      'Without the margin, fold reaches the keep-clear area in 34 % of patients with these sizes; the verdict adds the margin and takes sizes at 95 %.',
+      'Without margin: fold in the keep-clear area in 34 % of such patients; the verdict adds it, sure at 95 %.',
     );
     expect(words(0.342, 'quasi-random')).toContain('in about 34 % of');
     expect(words(1e-9, 'exact')).toContain('in < 1 % of');
-    expect(words(0, 'certain')).toContain('no fold reaches the keep-clear area; the sizes have no spread');
-    expect(words(1, 'certain')).toMatch(/, fold reaches the keep-clear area/);
+    expect(words(0, 'certain')).toContain(': no fold in the keep-clear area; the sizes have no spread');
+    expect(words(1, 'certain')).toMatch(/: fold in the keep-clear area/);
   });
 });
 

@@ -37,7 +37,7 @@ test('one slider of certainty changes how far the body is taken, and the sentenc
   const page = await signedIn('radiographer');
   await openBench(page, 'HB-2107');
   const sentence = page.locator('[data-probability]');
-  await expect(sentence).toContainText('takes sizes at 95 %');
+  await expect(sentence).toContainText('sure at 95 %');
   expect(await sceneNodes(page, 'section')).toContain('tissue/trunk/band');
 
   await tabTo(page, /^How sure: 95 %$/);
@@ -45,11 +45,11 @@ test('one slider of certainty changes how far the body is taken, and the sentenc
   const slider = page.getByRole('slider', { name: 'Sure at, slider' });
   await slider.focus();
   await page.keyboard.press('Home');
-  await expect(sentence).toContainText('takes sizes at 50 %');
+  await expect(sentence).toContainText('sure at 50 %');
   await expect.poll(() => sceneNodes(page, 'section')).not.toContain('tissue/trunk/band');
   await expect(page.getByText('Site policy is 95 %: a saved plan is judged at that.')).toBeVisible();
   await page.getByRole('button', { name: 'Back to site policy' }).press('Enter');
-  await expect(sentence).toContainText('takes sizes at 95 %');
+  await expect(sentence).toContainText('sure at 95 %');
 });
 
 test('"show all" lays remedies out as time against SNR, linked with the list', async ({ signedIn }) => {
