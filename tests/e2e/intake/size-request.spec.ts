@@ -50,6 +50,6 @@ test('a size request is answered from its mail on a phone and flips the booking'
   expect(await phone.evaluate(() => document.documentElement.scrollWidth <= window.innerWidth)).toBe(true);
 
   await page.reload();
-  await expect(page.getByText('Answered')).toBeVisible();
+  await expect(page.getByText('Answered', { exact: true })).toBeVisible();
   await expect(page.getByRole('region', { name: 'Readings' })).toContainText('132');
 });
