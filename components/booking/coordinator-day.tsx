@@ -7,7 +7,7 @@ import type { BookingRow } from './booking-row';
 import { tableHref } from './table-query';
 
 /** What must be done with each, in the words of the day. */
-const TODO: Readonly<Record<(typeof RESULT_FILTERS)[number], string>> = {
+const NEXT_STEP: Readonly<Record<(typeof RESULT_FILTERS)[number], string>> = {
   escalate: 'nothing here works; a lead decides',
   'another-scanner': 'the booked scanner or time cannot work',
   'size-needed': 'a size is missing, too old or must be measured',
@@ -34,7 +34,7 @@ export function CoordinatorDay({ counts, days, from, to, openMoves, escalated }:
             <li key={id}>
               <Link href={tableHref({}, { from, to, result: id, sort: 'time' })} className="flex gap-4 rounded py-2 text-ink no-underline hover:bg-sunk">
                 <span className="figures w-12 text-right text-xl">{counts[id]}</span>
-                <span><span className="font-semibold">{RESULT_WORDS[id]}</span><span className="block text-sm text-ink-soft">{TODO[id]}</span></span>
+                <span><span className="font-semibold">{RESULT_WORDS[id]}</span><span className="block text-sm text-ink-soft">{NEXT_STEP[id]}</span></span>
               </Link>
             </li>
           ))}

@@ -140,8 +140,8 @@ function whiteOf(p: Prescription, signals: readonly number[], layers: readonly P
 
 /**
  * A picture of the section as the prescription would show it: phantom tissue with the family's contrast, chemical
- * shift along readout (along phase in EPI), EPI displacement before fold, fold and ghosts along phase, wrap along a
- * slab with its profile, cropping, presaturation, and noise by relative SNR.
+ * shift along readout (along phase in EPI), EPI displacement before fold, fold and ghosts along phase; along a slab,
+ * wrap with its profile; cropping, presaturation, and noise by relative SNR.
  * Sampled on the prescription's own matrix, then shown at the asked size, so a coarser voxel looks coarser.
  * @returns brightness with white at 1; the same numbers on every machine up to the last bits of a double
  * @throws DomainError "size-out-of-range", "relative-snr-not-positive", and as solving the geometry does
