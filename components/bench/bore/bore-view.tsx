@@ -8,7 +8,7 @@ import { fitScene, fromPixels } from '@/components/schematic/scene/scene';
 import { checkBore, type BoreCheck } from '@/lib/physics/bore/check-bore';
 import type { Patient } from '@/lib/physics/model/patient';
 import type { Scanner } from '@/lib/physics/model/scanner';
-import { describeBasis, describeClearance, describeSections } from '@/lib/presentation/describe-bore';
+import { describeBasis, describeClearance, describeSections, WHO_DECIDES } from '@/lib/presentation/describe-bore';
 import { useActiveResult, useBench, useBenchState } from '../bench-context';
 import { PlainNumber } from '../bench-number';
 import { HandleOverlay } from '../handle-overlay';
@@ -73,6 +73,7 @@ export function BoreView() {
               </p>
             ))}
           </div>
+          <p className="mt-1 text-ink">{WHO_DECIDES}</p>
           <div className="my-2 grid max-w-md grid-cols-2 gap-x-6 xl:grid-cols-1">
             <PlainNumber
               label="Patient to the left"
@@ -86,24 +87,18 @@ export function BoreView() {
               onEdit={setOffset}
             />
             <PlainNumber
-              label="Pad added"
+              label="Pad tried, compressed"
               name="padMm"
               unit="mm"
               value={padMm}
               min={0}
               max={PAD_MAX_MM}
               sliderMax={60}
-              hint="compressed; looked at here only"
               onEdit={(value) => value !== null && value >= 0 && value <= PAD_MAX_MM && setPadMm(value)}
             />
           </div>
-          <ul className="sr-only">
-            {describeSections(check).map((line) => (
-              <li key={line}>{line}</li>
-            ))}
-          </ul>
           <ul className="space-y-1">
-            {describeBasis(check).map((line) => (
+            {[...describeSections(check), ...describeBasis(check)].map((line) => (
               <li key={line}>{line}</li>
             ))}
           </ul>

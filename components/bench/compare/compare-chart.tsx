@@ -7,8 +7,8 @@ import { axisOf } from './chart-axes';
 import { frontOf, type ComparePoint } from './compare-points';
 
 const WIDTH = 340;
-const HEIGHT = 214;
-const EDGE = { left: 46, right: 12, top: 14, bottom: 38 };
+const HEIGHT = 228;
+const EDGE = { left: 46, right: 12, top: 28, bottom: 38 };
 
 export const signed = (percent: number): string => {
   const text = formatShort(percent, 1);
@@ -69,7 +69,7 @@ export function CompareChart({
         </g>
       ))}
       <text x={WIDTH - EDGE.right} y={HEIGHT - 5} textAnchor="end" className="fill-ink-soft">scan time, %</text>
-      <text x={2} y={EDGE.top - 3} className="fill-ink-soft">SNR, %</text>
+      <text x={2} y={11} className="fill-ink-soft">SNR, %</text>
       {steps.length > 1 && (
         <path
           data-node="front"

@@ -26,16 +26,15 @@ export function PriceAndGain({
 }) {
   const scale = Math.max(10, ...rows.flatMap(({ timePct, snrPct }) => [Math.abs(timePct), Math.abs(snrPct)]));
   return (
-    <table className="w-full text-sm">
+    <table className="w-full table-fixed text-sm">
       <caption className="mb-1 text-left text-ink-soft">
         The price in minutes lying still, where motion spoils pictures, against the gain in SNR.
       </caption>
       <thead>
         <tr className="text-ink-soft">
-          <th scope="col" className="sr-only">Remedy</th>
-          <th scope="col" className="w-1/4 text-left font-medium">time</th>
-          <th scope="col" className="w-1/2"><span className="sr-only">Price and gain</span></th>
-          <th scope="col" className="w-1/4 text-right font-medium">SNR</th>
+          <th scope="col" className="w-16 text-left font-medium">time</th>
+          <th scope="col"><span className="sr-only">Price and gain</span></th>
+          <th scope="col" className="w-16 text-right font-medium">SNR</th>
         </tr>
       </thead>
       {rows.map((row) => (
@@ -46,16 +45,16 @@ export function PriceAndGain({
           className={cx(row.key === linkedKey && 'bg-wash')}
         >
           <tr>
-            <th scope="rowgroup" colSpan={4} className="pt-1.5 text-left leading-tight font-medium">
-              {row.title} <span className="figures font-normal text-ink-soft">{row.timeWords}</span>
+            <th scope="rowgroup" colSpan={3} className="pt-1.5 text-left leading-tight font-medium">
+              {row.title} <span className="figures font-normal whitespace-nowrap text-ink-soft">{row.timeWords}</span>
             </th>
           </tr>
           <tr>
-            <td className="figures">{signed(row.timePct)} %</td>
+            <td className="figures whitespace-nowrap">{signed(row.timePct)} %</td>
             <td>
               <Bars row={row} scale={scale} />
             </td>
-            <td className="figures text-right">{signed(row.snrPct)} %</td>
+            <td className="figures text-right whitespace-nowrap">{signed(row.snrPct)} %</td>
           </tr>
         </tbody>
       ))}

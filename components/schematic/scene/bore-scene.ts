@@ -161,7 +161,8 @@ function letterNodes({ patient, scanner }: BoreSceneInput, radius: number): Text
     letter('left', [at, 0]),
     letter(prone ? 'posterior' : 'anterior', [0, -at]),
     letter(prone ? 'anterior' : 'posterior', [0, at]),
-    note('bore/label', `opening ${Math.round(scanner.boreDiameterMm)} mm`, [-radius * Math.SQRT1_2, -radius * Math.SQRT1_2], [-6, -8], 'end', 'ink-soft'),
+    // Inside, under the top: beside the opening there may be no room.
+    note('bore/label', `opening ${Math.round(scanner.boreDiameterMm)} mm`, [0, -radius], [0, 22], 'middle', 'ink-soft'),
   ];
 }
 

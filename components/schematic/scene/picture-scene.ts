@@ -29,7 +29,11 @@ export function pictureScene({ prescription, keepClear, now, tried, wipeAt, boun
     const [u0, v0] = toScreen(frame, [xMm[0], yMm[0], zMm[0]]);
     const [u1, v1] = toScreen(frame, [xMm[1], yMm[1], zMm[1]]);
     const box: Bounds = { left: Math.min(u0, u1), right: Math.max(u0, u1), top: Math.min(v0, v1), bottom: Math.max(v0, v1) };
-    nodes.push({ kind: 'area', name: 'keep-clear', rings: [ringOf(box)], stroke: { colour: 'indigo', widthPx: 1.5, edge: 'dashed' } });
+    // A pale rim below it: over a dark picture indigo alone would be lost by day.
+    nodes.push(
+      { kind: 'area', name: 'keep-clear/rim', rings: [ringOf(box)], stroke: { colour: 'paper', widthPx: 3.5, edge: 'solid', opacity: 0.7 } },
+      { kind: 'area', name: 'keep-clear', rings: [ringOf(box)], stroke: { colour: 'indigo', widthPx: 1.75, edge: 'dashed' } },
+    );
   }
   const { sides } = frame;
   const middle: ScreenPoint = [(bounds.left + bounds.right) / 2, (bounds.top + bounds.bottom) / 2];
@@ -41,10 +45,14 @@ export function pictureScene({ prescription, keepClear, now, tried, wipeAt, boun
     letter(SIDE_LETTERS[sides.bottom], 'bottom', [middle[0], bounds.bottom - inset]),
   );
   if (tried && wipeAt !== undefined) {
+    const line = [[[wipeAt, bounds.top + 2 * inset], [wipeAt, bounds.bottom - 2 * inset]]] as const;
+    // Inside the picture: above it stands a letter.
+    const at: ScreenPoint = [wipeAt, Math.max(now.top, tried.top)];
     nodes.push(
-      { kind: 'lines', name: 'wipe', lines: [[[wipeAt, bounds.top + 2 * inset], [wipeAt, bounds.bottom - 2 * inset]]], stroke: { colour: 'indigo', widthPx: 2, edge: 'solid' } },
-      word('wipe/now', 'now', [wipeAt, bounds.top + 2 * inset], -8, 'end'),
-      word('wipe/tried', 'tried', [wipeAt, bounds.top + 2 * inset], 8, 'start'),
+      { kind: 'lines', name: 'wipe/rim', lines: line, stroke: { colour: 'paper', widthPx: 4.5, edge: 'solid', opacity: 0.7 } },
+      { kind: 'lines', name: 'wipe', lines: line, stroke: { colour: 'indigo', widthPx: 2, edge: 'solid' } },
+      word('wipe/now', 'now', at, -8, 'end'),
+      word('wipe/tried', 'tried', at, 8, 'start'),
     );
   }
   return { bounds, nodes };
@@ -59,5 +67,5 @@ function letter(text: string, side: string, at: ScreenPoint): TextNode {
 }
 
 function word(name: string, text: string, at: ScreenPoint, dx: number, anchor: TextNode['anchor']): TextNode {
-  return { kind: 'text', name, text, at, offsetPx: [dx, 5], anchor, size: 'note', colour: 'indigo' };
+  return { kind: 'text', name, text, at, offsetPx: [dx, 22], anchor, size: 'note', colour: 'indigo' };
 }

@@ -3,7 +3,7 @@ import { boreBounds, boreScene } from '@/components/schematic/scene/bore-scene';
 import type { AreaNode, LinesNode, TextNode } from '@/components/schematic/scene/scene';
 import { checkBore } from '@/lib/physics/bore/check-bore';
 import type { Patient } from '@/lib/physics/model/patient';
-import { describeBasis, describeClearance, sureClearanceMm, tightestAt } from '@/lib/presentation/describe-bore';
+import { describeBasis, describeClearance, describeSections, sureClearanceMm, tightestAt, WHO_DECIDES } from '@/lib/presentation/describe-bore';
 import { extentsOf, measured, typicalPatient, typicalScanner } from '@/tests/support/physics-cases';
 
 const patientOf = (right: number, overrides: Partial<Patient> = {}) =>
@@ -34,7 +34,7 @@ describe('the opening as a scene', () => {
     expect(check.tightest!.clearanceMm).toBeLessThan(0);
     expect(named<TextNode>('clearance/label')!.text).toContain('mm too small');
     expect(named<LinesNode>('clearance')!.stroke.edge).toBe('dashed');
-    const words = [...describeClearance(check, 0.95), ...describeBasis(check), ...nodes.flatMap((node) => ('text' in node ? [node.text] : []))].join(' ');
+    const words = [...describeClearance(check, 0.95), ...describeSections(check), ...describeBasis(check), WHO_DECIDES, ...nodes.flatMap((node) => ('text' in node ? [node.text] : []))].join(' ');
     expect(words).toContain('this scanner’s opening is too small');
     expect(words).toContain('Planning estimate');
     expect(words).toContain('Trained staff decide');

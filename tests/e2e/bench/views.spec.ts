@@ -10,7 +10,7 @@ test('section, picture and bore are three looks at one state, by keyboard', asyn
   await page.keyboard.press('ArrowLeft');
   await expect(view('Bore')).toBeChecked();
   await expect.poll(() => sceneNodes(page, 'bore')).toEqual(expect.arrayContaining(['bore/opening', 'table', 'clearance', 'section/trunk/trunk']));
-  await expect(page.getByText(/^Planning estimate, at the tightest place: /)).toBeVisible();
+  await expect(page.getByText(/^Planning estimate, tightest at the /)).toBeVisible();
   const before = await sceneText(page, 'clearance/label', 'bore');
   await page.getByRole('slider', { name: /^Patient’s mid-line/ }).focus();
   for (let k = 0; k < 4; k += 1) await page.keyboard.press('Shift+ArrowRight');
