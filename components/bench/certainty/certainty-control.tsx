@@ -10,7 +10,7 @@ import { chosenCertainty, SURE_MAX, SURE_MIN } from '../state/certainty';
 
 const PERCENT = { min: SURE_MIN * 100, max: SURE_MAX * 100 };
 
-/** The one knob of certainty: verdict, remedies, picture and opening all take sizes at it. */
+/** The one knob of certainty: verdict, remedies, section and opening take sizes at it. */
 export function CertaintyControl() {
   const { store, setting } = useBench();
   const chosen = useBenchState((state) => state.sureAt);
@@ -35,7 +35,7 @@ export function CertaintyControl() {
         <Slider label="Sure at, slider" unit="%" value={percent} {...PERCENT} step={0.1} onChange={choose} />
         <p className="mt-1 text-sm text-ink-soft">
           Sizes are taken so that this share of such patients is not larger. At 50 % they are taken as given. Verdict,
-          remedies, picture and opening all follow.
+          remedies, section and opening follow; the simulated picture keeps the sizes as given.
         </p>
         {chosen !== null && (
           <div className="mt-2 text-sm">

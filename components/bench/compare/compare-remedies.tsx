@@ -52,7 +52,9 @@ export function CompareRemedies({ remedies, now, linkedKey, triedKey, onLink, on
           if (remedy) onTry(remedy);
         }}
       />
-      <p className="mb-2 text-sm text-ink-soft">Dotted: nothing gives more SNR in less time. Below it, minutes buy nothing.</p>
+      {frontOf(points).length > 1 && (
+        <p className="mb-2 text-sm text-ink-soft">Dotted: nothing gives more SNR in less time. Below it, minutes buy nothing.</p>
+      )}
       <PriceAndGain rows={reference ? [...rows, reference] : rows} linkedKey={linkedKey} onLink={onLink} />
     </section>
   );

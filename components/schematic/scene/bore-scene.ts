@@ -129,7 +129,8 @@ function clearanceNodes(tight: Clearance, radius: number, bounds: Bounds, mmPerP
   const body = onScreen(x, up);
   const wall = onScreen((x / distance) * radius, (up / distance) * radius);
   const short = tight.clearanceMm < 0;
-  const rounded = Math.round(Math.abs(tight.clearanceMm) * 10) / 10;
+  // To the millimetre, as in the words beside it: the sizes are no better known.
+  const rounded = Math.round(Math.abs(tight.clearanceMm));
   const text = short ? `${rounded} mm too small, at the ${tight.section}` : `${rounded} mm, at the ${tight.section}`;
   // Inside the opening: outside it there may be no room.
   const { anchor } = anchorWithin(text, body, { ...bounds, left: -radius, right: radius }, mmPerPx);
