@@ -1,6 +1,9 @@
 import type { FoldProbability } from '@/lib/physics';
 import { formatPercent, formatProbability } from './percent';
 
+/** None, or all, of a few hundred sizes is not never, or always. */
+const LEAST = 0.001;
+
 /**
  * One sentence that names both figures: the probability counts no margin, the verdict does, and takes the sizes at the
  * certainty asked for.
@@ -12,7 +15,8 @@ export function describeProbability({ probability, method }: FoldProbability, su
     return `${subject}: ${folds} in the keep-clear area; the sizes have no spread, and the verdict adds the margin.`;
   }
   // A share of a few hundred sizes: a figure to the percent would claim more than it knows.
+  const shown = method === 'quasi-random' ? Math.min(1 - LEAST, Math.max(LEAST, probability)) : probability;
   const about = method === 'quasi-random' && probability > 0.01 && probability < 0.99 ? 'about ' : '';
-  const share = `${about}${formatProbability(probability)} of such patients`;
+  const share = `${about}${formatProbability(shown)} of such patients`;
   return `${subject}: fold in the keep-clear area in ${share}; the verdict adds it, sure at ${formatPercent(sureAt * 100, 1)}.`;
 }

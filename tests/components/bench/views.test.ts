@@ -63,6 +63,8 @@ describe('how sure', () => {
       'Without margin: fold in the keep-clear area in 34 % of such patients; the verdict adds it, sure at 95 %.',
     );
     expect(words(0.342, 'quasi-random')).toContain('in about 34 % of');
+    expect(words(0, 'quasi-random')).toContain('in < 1 % of');
+    expect(words(1, 'quasi-random')).toContain('in > 99 % of');
     expect(words(1e-9, 'exact')).toContain('in < 1 % of');
     expect(words(0, 'certain')).toContain(': no fold in the keep-clear area; the sizes have no spread');
     expect(words(1, 'certain')).toMatch(/: fold in the keep-clear area/);
