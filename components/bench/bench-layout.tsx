@@ -35,7 +35,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
         <div className="flex min-h-0 flex-col border-line bg-paper max-xl:border-t lg:order-3 xl:border-l">
           <RemediesPanel />
         </div>
-        <div className="min-h-0 border-line max-lg:border-t lg:order-1 lg:border-r lg:max-xl:row-span-2 xl:overflow-y-auto">
+        <div className="relative min-h-0 border-line max-lg:border-t lg:order-1 lg:border-r lg:max-xl:row-span-2 xl:overflow-y-auto">
           <PatientPanel />
           <PrescriptionPanel source={props.protocolLabel} />
           <KeepClearPanel preset={props.keepClearPreset} asked={props.keepClearAsked} />

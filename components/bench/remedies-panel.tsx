@@ -28,7 +28,7 @@ export function RemediesPanel() {
         </h2>
         <CostPoints />
       </div>
-      <div className="min-h-0 flex-1 overflow-y-auto">
+      <div className="relative min-h-0 flex-1 overflow-y-auto">
         {result.refusal ? (
           <p className="px-4 py-3 text-ink-soft">Remedies follow as soon as every value is allowed.</p>
         ) : ranking ? (

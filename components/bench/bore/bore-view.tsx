@@ -65,7 +65,7 @@ export function BoreView() {
       {typeof check === 'string' ? (
         <p className="px-5 py-3 xl:w-72 xl:flex-none">A value needs another look: {check}</p>
       ) : (
-        <div id="bore-in-words" className="px-5 py-3 text-sm text-ink-soft xl:w-72 xl:flex-none xl:overflow-y-auto">
+        <div id="bore-in-words" className="relative px-5 py-3 text-sm text-ink-soft xl:w-72 xl:flex-none xl:overflow-y-auto">
           <div aria-live="polite">
             {describeClearance(check, policy.sureAt).map((line) => (
               <p key={line} className="text-base font-medium text-ink">

@@ -25,7 +25,7 @@ export interface CompareRemediesProps {
 /** Most rows beside each other: more is a list again, and the list is below. */
 const ROWS = 4;
 
-/** Time against SNR for every remedy, and price and gain side by side for those on the front. */
+/** Time against SNR for every remedy, and price and gain side by side for those that cost least. */
 export function CompareRemedies({ remedies, now, linkedKey, triedKey, onLink, onTry }: CompareRemediesProps) {
   const { question } = useActiveResult();
   const points = useMemo(() => comparePoints(remedies, now), [remedies, now]);
@@ -33,7 +33,8 @@ export function CompareRemedies({ remedies, now, linkedKey, triedKey, onLink, on
   const reference = useMemo(() => coverRow(question, now), [question, now]);
   if (points.length === 0) return null;
 
-  const shown = frontOf(points).slice(0, ROWS);
+  const without = points.filter(({ leavesFold }) => !leavesFold);
+  const shown = (without.length > 0 ? without : points).slice(0, ROWS);
   for (const key of [triedKey, linkedKey]) {
     const extra = points.find((point) => point.key === key);
     if (extra && !shown.includes(extra)) shown.push(extra);
