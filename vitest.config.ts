@@ -37,7 +37,7 @@ export default defineConfig({
           include: WITH_DATABASE.flatMap(inFolder),
           exclude: never,
           globalSetup: ['tests/support/database/start-test-cluster.ts'],
-          setupFiles: ['tests/support/database/use-worker-database.ts'],
+          setupFiles: ['tests/support/database/use-file-database.ts'],
         },
       },
     ],
