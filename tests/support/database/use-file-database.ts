@@ -12,8 +12,8 @@ import { TEMPLATE } from './throw-away-cluster';
 const urls = inject('clusterUrls');
 const name = `file_${randomUUID().replaceAll('-', '')}`;
 
-async function asOwner(statement: string): Promise<void> {
-  const client = new pg.Client({ connectionString: `${urls.owner}postgres` });
+async function runAs(login: 'owner' | 'superuser', statement: string): Promise<void> {
+  const client = new pg.Client({ connectionString: `${urls[login]}postgres` });
   await client.connect();
   try {
     await client.query(statement);
@@ -22,7 +22,7 @@ async function asOwner(statement: string): Promise<void> {
   }
 }
 
-await asOwner(`create database ${name} template ${TEMPLATE}`);
+await runAs('owner', `create database ${name} template ${TEMPLATE}`);
 
 process.env.DATABASE_URL = `${urls.app}${name}`;
 process.env.MIGRATION_DATABASE_URL = `${urls.owner}${name}`;
@@ -33,5 +33,6 @@ process.env.SMTP_URL = 'smtp://127.0.0.1:9';
 afterAll(async () => {
   await closeDatabase();
   await closeOwnerDatabase();
-  await asOwner(`drop database ${name} with (force)`);
+  // A connection that has just been closed may still be ending on the server: only a superuser may hurry any login's along.
+  await runAs('superuser', `drop database ${name} with (force)`);
 });
