@@ -1,28 +1,25 @@
 import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
+import { availableParallelism } from 'node:os';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
 import { seededNumbers } from '@/tests/support/seeded-numbers';
 import { bundleTests, instrumentPhysics, ROOT, sourceText, type Bundle } from './bundle-tests';
 import type { Mutant } from './find-mutants';
+import { KillOrder, type PlayableTest } from './kill-order';
 import type { Answer } from './play-mutants';
 import { COUNTS, Player } from './player';
-import { equivalentReason, isLeft, keyOf, printReport, type Result } from './report';
+import { equivalentReason, folderOf, isLeft, keyOf, printReport, scoresOf, type Result } from './report';
 
 type Surveyed = Extract<Answer, { kind: 'surveyed' }>;
-
-interface PlayableTest {
-  readonly bundle: string;
-  readonly test: number;
-  readonly ms: number;
-  readonly loadMs: number;
-}
 
 interface Options {
   readonly sample?: number;
   readonly seed: number;
   readonly files: readonly string[];
+  readonly leastPerFolder: number;
+  readonly players: number;
   readonly budgetMs: number;
   readonly resume: boolean;
   readonly out: string;
@@ -34,6 +31,8 @@ function readOptions(args: readonly string[]): Options {
     options: {
       sample: { type: 'string' },
       seed: { type: 'string', default: '1' },
+      least: { type: 'string', default: '0' },
+      players: { type: 'string', default: String(Math.min(2, availableParallelism())) },
       file: { type: 'string', multiple: true, default: [] },
       budget: { type: 'string', default: '10' },
       resume: { type: 'boolean', default: false },
@@ -43,6 +42,8 @@ function readOptions(args: readonly string[]): Options {
   return {
     ...(values.sample === undefined ? {} : { sample: Number(values.sample) }),
     seed: Number(values.seed),
+    leastPerFolder: Number(values.least),
+    players: Number(values.players),
     files: values.file,
     budgetMs: Number(values.budget) * 1000,
     resume: values.resume,
@@ -52,17 +53,26 @@ function readOptions(args: readonly string[]): Options {
 
 const hashOf = (text: string): string => createHash('sha256').update(text).digest('hex').slice(0, 24);
 
-/** The mutants asked for: of some files, a seeded sample of them, or all. */
-function choose(mutants: readonly Mutant[], { files, sample, seed }: Options): Mutant[] {
+/** The mutants asked for: of some files, a seeded sample of them with so many of each folder at least, or all. */
+function choose(mutants: readonly Mutant[], { files, sample, seed, leastPerFolder }: Options): Mutant[] {
   const chosen = mutants.filter(
     ({ file }) => files.length === 0 || files.some((part) => file.includes(part)),
   );
   if (sample === undefined) return chosen;
   const next = seededNumbers(seed);
-  const drawn = chosen.map((mutant) => ({ mutant, at: next() })).sort((a, b) => a.at - b.at);
+  const drawn = chosen
+    .map((mutant) => ({ mutant, at: next() }))
+    .sort((a, b) => a.at - b.at)
+    .map(({ mutant }) => mutant);
+  const taken = new Map<string, number>();
   return drawn
-    .slice(0, sample)
-    .map(({ mutant }) => mutant)
+    .filter((mutant, rank) => {
+      const folder = folderOf(mutant);
+      const before = taken.get(folder) ?? 0;
+      if (rank >= sample && before >= leastPerFolder) return false;
+      taken.set(folder, before + 1);
+      return true;
+    })
     .sort((a, b) => a.id - b.id);
 }
 
@@ -88,60 +98,58 @@ async function survey(
 
 /** Which tests reach each mutant, quickest first. Tests that fail without any mutant are left out and named. */
 async function surveyTests(
-  player: Player,
+  players: readonly Player[],
   bundles: readonly Bundle[],
   mutants: number,
   out: string,
 ): Promise<PlayableTest[][]> {
   const reaching: PlayableTest[][] = Array.from({ length: mutants }, () => []);
-  for (const { testFile, bundle } of bundles) {
-    const answer = await survey(player, bundle, mutants, out);
-    if (answer === undefined) {
-      console.log(`left out: ${testFile}: it hangs, or ends the process`);
-      continue;
+  let next = 0;
+  const work = async (player: Player) => {
+    while (next < bundles.length) {
+      const { testFile, bundle } = bundles[next++]!;
+      const answer = await survey(player, bundle, mutants, out);
+      if (answer === undefined) {
+        console.log(`left out: ${testFile}: it hangs, or ends the process`);
+        continue;
+      }
+      answer.tests.forEach((test, index) => {
+        if (test.error !== undefined)
+          return console.log(`left out: ${testFile}: ${test.name}: ${test.error}`);
+        const { loadMs } = answer;
+        for (const id of test.hits) reaching[id]!.push({ bundle, test: index, ms: test.ms, loadMs });
+      });
     }
-    answer.tests.forEach((test, index) => {
-      if (test.error !== undefined) return console.log(`left out: ${testFile}: ${test.name}: ${test.error}`);
-      for (const id of test.hits)
-        reaching[id]!.push({ bundle, test: index, ms: test.ms, loadMs: answer.loadMs });
-    });
-  }
+  };
+  await Promise.all(players.map(work));
   for (const tests of reaching) tests.sort((a, b) => a.ms + a.loadMs - b.ms - b.loadMs);
   return reaching;
-}
-
-/** The quickest tests that fit the budget; at least one. */
-function planOf(tests: readonly PlayableTest[], budgetMs: number) {
-  const plan: { bundle: string; test: number; allowedMs: number }[] = [];
-  const loaded = new Set<string>();
-  let spent = 0;
-  for (const { bundle, test, ms, loadMs } of tests) {
-    const more = ms + (loaded.has(bundle) ? 0 : loadMs);
-    if (spent > 0 && spent + more > budgetMs) continue;
-    spent += more;
-    loaded.add(bundle);
-    // Slow machines and detours are given room; an endless loop is given up.
-    plan.push({ bundle, test, allowedMs: 20 * (ms + loadMs) + 8000 });
-  }
-  return plan;
 }
 
 async function playOne(
   player: Player,
   mutant: Mutant,
   tests: readonly PlayableTest[],
+  order: KillOrder,
   budgetMs: number,
 ): Promise<Result> {
   const from = hashOf(sourceText(mutant.file));
   if (tests.length === 0) return { ...mutant, from, outcome: 'not reached' };
-  const answer = await player.ask({ kind: 'play', id: mutant.id, tests: planOf(tests, budgetMs) }, 60_000);
+  const plan = order.plan(mutant, tests, budgetMs);
+  const answer = await player.ask({ kind: 'play', id: mutant.id, tests: plan }, 20_000);
   if (answer === 'hung' || answer === 'died') return { ...mutant, from, outcome: 'killed', by: answer };
-  if (answer.kind === 'played' && answer.killedBy !== undefined)
-    return { ...mutant, from, outcome: 'killed', by: answer.killedBy };
+  if (answer.kind !== 'played') throw new Error('a player was asked to play and surveyed');
+  order.note(mutant, plan, answer.killer);
+  if (answer.killedBy !== undefined) return { ...mutant, from, outcome: 'killed', by: answer.killedBy };
   const reason = equivalentReason(mutant);
-  return reason === undefined
-    ? { ...mutant, from, outcome: 'survived' }
-    : { ...mutant, from, outcome: 'equivalent', by: reason };
+  if (reason !== undefined) return { ...mutant, from, outcome: 'equivalent', by: reason };
+  const unplayed = tests.length - plan.length;
+  return {
+    ...mutant,
+    from,
+    outcome: 'survived',
+    by: `passes ${plan.length} tests that reach it${unplayed === 0 ? '' : `, ${unplayed} slow ones not played`}`,
+  };
 }
 
 /** The last run's killed mutants of files that are still the same. */
@@ -156,9 +164,9 @@ function killedBefore({ resume, out }: Options): Map<string, Result> {
 
 /**
  * `npm run mutate`: changes one sign, limit, constant or connective of lib/physics after another and runs the tests that
- * reach it; what no test notices is listed. --sample N --seed S draws some; --file PART takes some files; --resume plays
- * only what the last run left; --budget S is the most
- * processor time a mutant may cost.
+ * reach it; what no test notices is listed. --sample N --seed S draws some, --least N of each folder at least; --file PART
+ * takes some files; --resume plays only what the last run left; --budget S is the most processor time a mutant may cost;
+ * --players N processes play side by side.
  */
 export async function mutate(args: readonly string[]): Promise<void> {
   const options = readOptions(args);
@@ -166,34 +174,55 @@ export async function mutate(args: readonly string[]): Promise<void> {
   const at = () => `${Math.round((Date.now() - began) / 1000)} s`;
   const { mutants, codeOf } = instrumentPhysics();
   const { folder, bundles } = await bundleTests(codeOf);
-  const player = new Player(ROOT);
-  const results: Result[] = [];
+  const players = Array.from({ length: options.players }, () => new Player(ROOT));
+  const done: (Result | undefined)[] = [];
+  const finished = () => done.filter((result) => result !== undefined);
   const keep = () => {
+    const { sample, seed, leastPerFolder } = options;
+    const results = finished();
     mkdirSync(path.dirname(options.out), { recursive: true });
     writeFileSync(
       options.out,
-      JSON.stringify({ at: new Date().toISOString(), sample: options.sample ?? 'all', results }, null, 1),
+      JSON.stringify(
+        {
+          at: new Date().toISOString(),
+          sample: sample === undefined ? 'all' : { of: mutants.length, sample, seed, leastPerFolder },
+          scores: scoresOf(results, mutants),
+          results,
+        },
+        null,
+        1,
+      ),
     );
   };
   try {
     console.log(`${mutants.length} mutants in ${codeOf.size} files, ${bundles.length} test files (${at()})`);
-    const reaching = await surveyTests(player, bundles, mutants.length, options.out);
+    const reaching = await surveyTests(players, bundles, mutants.length, options.out);
     console.log(`tests surveyed (${at()})`);
     const before = killedBefore(options);
     const chosen = choose(mutants, options);
-    for (const mutant of chosen) {
-      const known = before.get(keyOf(mutant));
-      results.push(known ?? (await playOne(player, mutant, reaching[mutant.id]!, options.budgetMs)));
-      if (results.length % 200 !== 0) continue;
-      console.log(
-        `${results.length} of ${chosen.length}, ${results.filter(isLeft).length} survive (${at()})`,
-      );
-      keep();
-    }
+    const order = new KillOrder();
+    let next = 0;
+    const work = async (player: Player) => {
+      while (next < chosen.length) {
+        const index = next++;
+        const mutant = chosen[index]!;
+        done[index] =
+          before.get(keyOf(mutant)) ??
+          (await playOne(player, mutant, reaching[mutant.id]!, order, options.budgetMs));
+        const results = finished();
+        if (results.length % 50 !== 0) continue;
+        console.log(
+          `${results.length} of ${chosen.length}, ${results.filter(isLeft).length} survive (${at()})`,
+        );
+        keep();
+      }
+    };
+    await Promise.all(players.map(work));
     keep();
-    printReport(results, mutants);
+    printReport(finished(), mutants);
   } finally {
-    player.stop();
+    for (const player of players) player.stop();
     await rm(folder, { recursive: true, force: true });
   }
 }

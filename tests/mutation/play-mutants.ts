@@ -31,7 +31,8 @@ export interface SurveyedTest {
 export type Answer =
   | { readonly kind: 'surveyed'; readonly loadMs: number; readonly tests: readonly SurveyedTest[] }
   | { readonly kind: 'begun'; readonly allowedMs: number }
-  | { readonly kind: 'played'; readonly killedBy?: string };
+  /** `killer` is the place of the test that failed in what was asked. */
+  | { readonly kind: 'played'; readonly killedBy?: string; readonly killer?: number };
 
 const require = createRequire(import.meta.url);
 const scripts = new Map<string, vm.Script>();
@@ -106,7 +107,7 @@ async function failure(run: () => unknown): Promise<string | undefined> {
 
 async function play({ id, tests }: Extract<Request, { kind: 'play' }>): Promise<void> {
   const evaluated = new Map<string, RegisteredTest[]>();
-  for (const { bundle, test, allowedMs } of tests) {
+  for (const [killer, { bundle, test, allowedMs }] of tests.entries()) {
     say({ kind: 'begun', allowedMs });
     let registered: RegisteredTest[] | undefined = evaluated.get(bundle);
     let error: string | undefined;
@@ -119,7 +120,11 @@ async function play({ id, tests }: Extract<Request, { kind: 'play' }>): Promise<
     error ??=
       registered?.[test] === undefined ? 'the test is not registered' : await failure(registered[test].run);
     if (error !== undefined)
-      return say({ kind: 'played', killedBy: `${registered?.[test]?.name ?? 'loading'}: ${error}` });
+      return say({
+        kind: 'played',
+        killer,
+        killedBy: `${registered?.[test]?.name ?? 'loading'}: ${error}`,
+      });
   }
   say({ kind: 'played' });
 }
@@ -127,3 +132,5 @@ async function play({ id, tests }: Extract<Request, { kind: 'play' }>): Promise<
 process.on('message', (request: Request) => {
   void (request.kind === 'survey' ? survey(request.bundle, request.mutants) : play(request));
 });
+// Whoever asked is gone.
+process.on('disconnect', () => process.exit());

@@ -1,4 +1,5 @@
 import { fork, type ChildProcess } from 'node:child_process';
+import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import type { Answer, Request } from './play-mutants';
 
@@ -10,6 +11,23 @@ export const COUNTS = {
   SELVEDGE_RANKINGS: '4',
   SELVEDGE_ELLIPSE_FFT: '10',
 };
+
+/** What /proc counts processor time in. */
+const TICK_MS = 10;
+/** A process that waits for more than the processor is given up after this many times what it was allowed. */
+const MOST_WALL = 60;
+
+/** Processor time a process has had; undefined where the system does not tell. */
+function processorMs(pid: number | undefined): number | undefined {
+  try {
+    const text = readFileSync(`/proc/${pid}/stat`, 'utf8');
+    // The name before ") " may hold anything; user and system time are the 12th and 13th field after it.
+    const fields = text.slice(text.lastIndexOf(') ') + 2).split(' ');
+    return (Number(fields[11]) + Number(fields[12])) * TICK_MS;
+  } catch {
+    return undefined;
+  }
+}
 
 /** A process that plays mutants one after another; one that hangs or dies is replaced. */
 export class Player {
@@ -48,7 +66,21 @@ export class Player {
   ): Promise<Exclude<Answer, { kind: 'begun' }> | 'hung' | 'died'> {
     const child = (this.child ??= this.start());
     return new Promise((resolve) => {
-      let timer = setTimeout(hang, firstAllowedMs);
+      let timer: NodeJS.Timeout;
+      // Others use the machine: what was allowed is processor time, so a slow hour kills no mutant.
+      const allow = (allowedMs: number) => {
+        const spentBefore = processorMs(child.pid);
+        const last = Date.now() + MOST_WALL * allowedMs;
+        const look = () => {
+          const spent = processorMs(child.pid);
+          const left =
+            spent === undefined || spentBefore === undefined ? 0 : allowedMs - (spent - spentBefore);
+          if (left <= 0 || Date.now() >= last) return settle('hung');
+          timer = setTimeout(look, Math.max(left, 50));
+        };
+        clearTimeout(timer);
+        timer = setTimeout(look, allowedMs);
+      };
       const settle = (outcome: Exclude<Answer, { kind: 'begun' }> | 'hung' | 'died') => {
         clearTimeout(timer);
         child.off('message', hear);
@@ -59,17 +91,14 @@ export class Player {
         }
         resolve(outcome);
       };
-      function hang() {
-        settle('hung');
-      }
       const die = () => settle('died');
       const hear = (answer: Answer) => {
         if (answer.kind !== 'begun') return settle(answer);
-        clearTimeout(timer);
-        timer = setTimeout(hang, answer.allowedMs);
+        allow(answer.allowedMs);
       };
       child.on('message', hear);
       child.on('exit', die);
+      allow(firstAllowedMs);
       child.send(request);
     });
   }
