@@ -79,6 +79,13 @@ describe('a patient in a scanner’s opening', () => {
     const answer = checkBore(feetFirst, scanner, { hipsZMm: -900, halfLengthMm: 800 });
     expect(answer.sections.map(({ section }) => section)).toEqual(['trunk']);
     expect(answer.outside.map(({ name }) => name)).toEqual(['hips']);
+    // One at its very end is in it, on either side; what is nearer is too.
+    for (const hipsZMm of [-800, 800, -799])
+      expect(checkBore(feetFirst, scanner, { hipsZMm, halfLengthMm: 800 }).outside).toEqual([]);
+    for (const hipsZMm of [-800.1, 800.1])
+      expect(
+        checkBore(feetFirst, scanner, { hipsZMm, halfLengthMm: 800 }).outside.map(({ name }) => name),
+      ).toEqual(['hips']);
   });
 });
 

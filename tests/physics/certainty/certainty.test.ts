@@ -38,15 +38,42 @@ describe('standard normal', () => {
     [4.5, 0.9999966023],
   ])('Φ(%d) = %d', (x, p) => expect(normalCumulative(x)).toBeCloseTo(p, 9));
 
+  // The same to the last digits a double holds, by the C library's erfc: the stated error is 1e-14.
+  it.each([
+    [0.5, 0.6914624612740131],
+    [1, 0.8413447460685429],
+    [2, 0.9772498680518208],
+    [3, 0.9986501019683699],
+    [3.9, 0.9999519036559824],
+    [-4, 3.1671241833119965e-5],
+  ])('Φ(%d) = %d to 1e-14', (x, p) => expect(Math.abs(normalCumulative(x) - p)).toBeLessThan(1e-14));
+
+  it('keeps its digits far out, where a share is one in a thousand million', () => {
+    // Relative, by erfc as above; the continued fraction is used from 4 on.
+    for (const [x, tail] of [
+      [4, 3.1671241833119965e-5],
+      [4.5, 3.3976731247300615e-6],
+      [6, 9.865876450377012e-10],
+    ] as const)
+      expect(Math.abs(normalCumulative(-x) / tail - 1)).toBeLessThan(1e-12);
+    expect(normalCumulative(Infinity)).toBe(1);
+    expect(normalCumulative(-Infinity)).toBe(0);
+  });
+
   it('inverts itself', () => {
     // 1e-9: the quantile's own stopping step is 1e-14, Φ loses digits near 1.
     for (const p of [1e-6, 0.01, 0.3, 0.5, 0.77, 0.95, 0.999])
       expect(normalCumulative(normalQuantile(p))).toBeCloseTo(p, 9);
     expect(normalQuantile(0.95)).toBeCloseTo(1.6448536, 6);
+    // The median is no deviation, and not minus none.
+    expect(Object.is(normalQuantile(0.5), 0)).toBe(true);
+    // 1e-3: p is asked for by 1 − p, which keeps four digits of 1e-12.
+    for (const p of [1e-12, 1e-9])
+      expect(Math.abs(normalCumulative(normalQuantile(p)) / p - 1)).toBeLessThan(1e-3);
   });
 
   it('refuses a probability that is none', () => {
-    expect(() => normalQuantile(1)).toThrow(DomainError);
+    for (const p of [0, 1, -0.1, 1.1, Number.NaN]) expect(() => normalQuantile(p)).toThrow(DomainError);
   });
 });
 
