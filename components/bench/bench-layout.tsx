@@ -12,7 +12,6 @@ import { SaveCell } from './saving/save-cell';
 import { SaveNotices } from './saving/save-notices';
 import { usePlanSaving } from './saving/use-plan-saving';
 import { SolveAll } from './solve-all/solve-all-panel';
-import { SequenceStrip } from './sequence-strip';
 import { VerdictLine } from './verdict-line';
 
 /**
@@ -23,13 +22,11 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
   const plan = usePlanSaving(props.plan, props.basis, props.userId);
   return (
     <div className="flex flex-col xl:h-[calc(100dvh-3.5rem-1px)] xl:min-h-[40rem]">
-      <SequenceStrip>{props.children}</SequenceStrip>
-      {props.mayEdit && <SolveAll />}
+      <SolveAll mayEdit={props.mayEdit}>{props.children}</SolveAll>
       <SaveNotices plan={plan} />
       <div className="flex min-h-0 flex-1 flex-col lg:grid lg:grid-cols-[19.5rem_minmax(0,1fr)] lg:max-xl:grid-rows-[auto_1fr] xl:grid-cols-[19.5rem_minmax(0,1fr)_23.25rem]">
         <VerdictLine className="sticky top-0 z-20 border-b border-line bg-cloth lg:hidden" />
         <div className="flex min-h-0 min-w-0 flex-col lg:order-2 xl:overflow-y-auto">
-          <VerdictLine className="max-lg:hidden" />
           <PictureColumn />
         </div>
         <div className="flex min-h-0 flex-col border-line bg-paper max-xl:border-t lg:order-3 xl:border-l">

@@ -2,6 +2,7 @@
 
 import type { PatientBox, Side } from '@/lib/physics/model/axes';
 import { PlainNumber } from './bench-number';
+import { BOX_EDGE_MAX_MM } from './state/box-handles';
 import { edgeOf, withEdge } from './state/window-box';
 
 const NAMES: Readonly<Record<Side, string>> = {
@@ -12,8 +13,6 @@ const NAMES: Readonly<Record<Side, string>> = {
 export function sidesBeginningWith(inPlane: readonly Side[]): readonly Side[] {
   return [...inPlane, ...(Object.keys(NAMES) as Side[]).filter((side) => !inPlane.includes(side))];
 }
-
-const EDGE_MAX_MM = 400;
 
 /** A box by its six edges, each from the origin towards its side. */
 export function BoxEdges({
@@ -34,10 +33,10 @@ export function BoxEdges({
       label={NAMES[side]}
       value={Math.round(edgeOf(box, side) * 10) / 10}
       unit="mm"
-      min={-EDGE_MAX_MM}
-      max={EDGE_MAX_MM}
+      min={-BOX_EDGE_MAX_MM}
+      max={BOX_EDGE_MAX_MM}
       onEdit={(value, step) => {
-        if (value === null || !Number.isFinite(value) || Math.abs(value) > EDGE_MAX_MM) return;
+        if (value === null || !Number.isFinite(value) || Math.abs(value) > BOX_EDGE_MAX_MM) return;
         onEdit(withEdge(box, side, value), step);
       }}
     />

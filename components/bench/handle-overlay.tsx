@@ -1,6 +1,7 @@
 'use client';
 
 import { useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import type { BoxSize } from '@/components/schematic/canvas/use-box-size';
 import { fromPixels, toPixels, type Fit } from '@/components/schematic/scene/scene';
 import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { cx } from '@/components/ui/class-names';
@@ -24,16 +25,18 @@ let gestures = 0;
 export function HandleOverlay({
   handles,
   fit,
+  size,
   onHold,
 }: {
   handles: readonly BenchHandle[];
   fit: Fit;
+  size: BoxSize;
   onHold: (id: string | null) => void;
 }) {
-  return handles.map((handle) => <Handle key={handle.id} handle={handle} fit={fit} onHold={onHold} />);
+  return handles.map((handle) => <Handle key={handle.id} handle={handle} fit={fit} size={size} onHold={onHold} />);
 }
 
-function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold: (id: string | null) => void }) {
+function Handle({ handle, fit, size, onHold }: { handle: BenchHandle; fit: Fit; size: BoxSize; onHold: (id: string | null) => void }) {
   const { store, setting } = useBench();
   const grab = useRef<{ offset: ScreenPoint; step: string } | null>(null);
   const keyStep = useRef('');
@@ -102,7 +105,14 @@ function Handle({ handle, fit, onHold }: { handle: BenchHandle; fit: Fit; onHold
       }}
       className={cx('group absolute -m-3 size-6 touch-none rounded-sm outline-offset-0', cursor)}
     >
-      <span className="figures pointer-events-none absolute top-5 left-4 z-10 hidden rounded bg-ink px-2 py-0.5 text-sm whitespace-nowrap text-paper group-hover:block group-focus:block">
+      <span
+        className={cx(
+          'figures pointer-events-none absolute z-10 hidden rounded bg-ink px-2 py-0.5 text-sm whitespace-nowrap text-paper group-hover:block group-focus:block',
+          // Away from the nearer edges of the picture, which cuts off what lies over them.
+          x > size.widthPx / 2 ? 'right-4' : 'left-4',
+          y > size.heightPx / 2 ? 'bottom-5' : 'top-5',
+        )}
+      >
         {handle.figure}
       </span>
     </div>

@@ -18,7 +18,7 @@ const KEYS: readonly (readonly [string, string])[] = [
 /** What the keys do on the bench; in a text field they stay the field's own. */
 export function KeyHelp() {
   return (
-    <Popover label="Keys on the bench" trigger={<Button variant="quiet" size="sm">Keys</Button>}>
+    <Popover label="Keys on the bench" trigger={<Button variant="quiet" size="sm" className="px-2!">Keys</Button>}>
       <dl className="grid grid-cols-[auto_1fr] gap-x-4 gap-y-1 text-sm">
         {KEYS.map(([key, does]) => (
           <div key={key} className="contents">
@@ -29,7 +29,7 @@ export function KeyHelp() {
           </div>
         ))}
       </dl>
-      <p className="mt-2 text-sm text-ink-soft">The wheel zooms too; drag the ground of the zoomed picture to move it. On a Mac, ⌘ does what Ctrl does.</p>
+      <p className="mt-2 text-sm text-ink-soft">The wheel zooms too, as do two fingers; drag the ground of the zoomed picture to move it. On a Mac, ⌘ does what Ctrl does.</p>
     </Popover>
   );
 }

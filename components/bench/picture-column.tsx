@@ -4,14 +4,15 @@ import { Button } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/choice';
 import { useActiveResult, useBench, useBenchState } from './bench-context';
 import { BoreView } from './bore/bore-view';
-import { ProbabilityLine } from './certainty/probability-line';
+import { CertaintyControl } from './certainty/certainty-control';
 import { KeyHelp } from './key-help';
 import { PictureView } from './picture/picture-view';
 import { SectionView } from './section-view';
 import { SlabView } from './slab-view';
 import type { BenchView } from './state/bench-state';
+import { VerdictLine } from './verdict-line';
 
-/** The views of one state, with undo and redo beside them. */
+/** The views of one state under one row of controls and the verdict: the room below is the picture's. */
 export function PictureColumn() {
   const { store } = useBench();
   const chosen = useBenchState((state) => state.view);
@@ -21,8 +22,7 @@ export function PictureColumn() {
   const view: BenchView = chosen === 'slab' && !slab ? 'section' : chosen;
   return (
     <>
-      <ProbabilityLine />
-      <div className="flex items-center justify-between gap-4 px-5">
+      <div className="flex flex-wrap items-center justify-between gap-x-3 gap-y-1 px-5 pt-2.5">
         <Segmented<BenchView>
           size="sm"
           legend="View"
@@ -36,16 +36,18 @@ export function PictureColumn() {
           ]}
           onChange={(next) => store.dispatch({ type: 'choose-view', view: next })}
         />
-        <div className="flex gap-1">
-          <Button variant="quiet" size="sm" disabled={!canUndo} onClick={() => store.dispatch({ type: 'undo' })}>
+        <div className="flex flex-wrap items-center max-sm:-ml-2">
+          <Button variant="quiet" size="sm" className="px-2!" disabled={!canUndo} onClick={() => store.dispatch({ type: 'undo' })}>
             Undo
           </Button>
-          <Button variant="quiet" size="sm" disabled={!canRedo} onClick={() => store.dispatch({ type: 'redo' })}>
+          <Button variant="quiet" size="sm" className="px-2!" disabled={!canRedo} onClick={() => store.dispatch({ type: 'redo' })}>
             Redo
           </Button>
           <KeyHelp />
+          <CertaintyControl />
         </div>
       </div>
+      <VerdictLine className="max-lg:hidden" />
       {view === 'slab' && slab && <SlabView slab={slab} />}
       {view === 'section' && <SectionView />}
       {view === 'picture' && <PictureView />}

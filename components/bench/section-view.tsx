@@ -6,7 +6,6 @@ import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
 import { fitScene, fromPixels, type Fit } from '@/components/schematic/scene/scene';
 import { screenFrame } from '@/components/schematic/scene/section-frame';
 import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
-import { cx } from '@/components/ui/class-names';
 import { geometryCase } from '@/lib/physics/assess/assess';
 import { drawSection } from '@/lib/physics/section/draw-section';
 import type { Case } from '@/lib/physics/model/case';
@@ -18,10 +17,9 @@ import { SliceSlider } from './slice-slider';
 import { triedCase } from './state/case-of';
 import { benchHandles } from './state/handles';
 import { shownSlice } from './state/slices';
+import { PictureBox } from './zoom/picture-box';
 import { useZoom } from './zoom/use-zoom';
-import { ZoomButtons } from './zoom/zoom-buttons';
-
-const PICTURE_BOX = 'relative h-80 overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-h-80 xl:flex-1';
+import { ViewBar } from './zoom/view-bar';
 
 /** The section of the active sequence: where tissue is and where it lands, now and with what is tried. */
 export function SectionView() {
@@ -57,37 +55,34 @@ export function SectionView() {
   const shown = tried ?? now;
   // Written past React: it changes with every pixel.
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
-    if (picture.panned(event) || !place.current || !fit) return;
+    if (!place.current || !fit) return;
     const edge = event.currentTarget.getBoundingClientRect();
     const [u, v] = fromPixels(fit, [event.clientX - edge.left, event.clientY - edge.top]);
     place.current.textContent = describePlace(u, v, screenFrame(question.prescription).sides);
   };
   return (
     <div className="flex min-h-0 flex-1 flex-col">
-      <div
-        ref={box}
-        role="group"
-        aria-label={`Section, ${question.prescription.plane}`}
-        aria-describedby="section-in-words"
-        tabIndex={0}
-        aria-keyshortcuts="+ - 0 Control+ArrowUp Control+ArrowDown Control+ArrowLeft Control+ArrowRight"
-        {...picture.boxProps}
+      <PictureBox
+        box={box}
+        picture={picture}
+        label={`Section, ${question.prescription.plane}`}
+        describedBy="section-in-words"
         onPointerMove={onPointerMove}
         onPointerLeave={() => place.current && (place.current.textContent = '')}
-        className={cx(PICTURE_BOX, picture.zoom.factor === 1 ? 'touch-pan-y' : 'cursor-grab touch-none active:cursor-grabbing')}
       >
         {scene && fit && size && (
           <>
             <SceneCanvas name="section" scene={scene} fit={fit} {...size} still={heldFit !== null} onHover={(name) => setFocus(name ?? undefined)} />
             <PieceOverlay drawing={shown!.drawing} prescription={question.prescription} fit={fit} onFocus={setFocus} />
-            <HandleOverlay handles={handles} fit={fit} onHold={(id) => setHeldFit(id === null ? null : fitNow)} />
-            <ZoomButtons {...picture} />
+            <HandleOverlay handles={handles} fit={fit} size={size} onHold={(id) => setHeldFit(id === null ? null : fitNow)} />
             <p ref={place} aria-hidden="true" className="figures pointer-events-none absolute top-1 left-2 text-sm text-ink-soft" />
           </>
         )}
         {!now && <p className="p-4 text-ink-soft">The picture follows as soon as every value is allowed.</p>}
-      </div>
-      <SliceSlider prescription={question.prescription} slice={slice} />
+      </PictureBox>
+      <ViewBar picture={picture}>
+        <SliceSlider prescription={question.prescription} slice={slice} />
+      </ViewBar>
       <div id="section-in-words" className="sr-only" aria-live="off">
         {shown && assessment && (
           <ul>

@@ -56,11 +56,11 @@ const SequenceTab = memo(function SequenceTab({ id }: { id: string }) {
         aria-pressed={active}
         data-sequence={id}
         onClick={() => store.dispatch({ type: 'choose-sequence', id })}
-        className="flex h-full w-full flex-col items-start gap-0.5 px-4 py-3 text-left max-xl:px-3"
+        className="flex h-full w-full flex-col items-start gap-0.5 px-4 py-3 text-left max-xl:px-3 max-sm:grid max-sm:grid-cols-[1fr_auto] max-sm:items-baseline max-sm:gap-x-3 max-sm:px-4 max-sm:py-2"
       >
         <span className="font-semibold">{prescription.name}</span>
         <span className="text-sm text-ink-soft">{timeWords(prescription, assessment?.time)}</span>
-        <span className="mt-1 text-sm">
+        <span className="mt-1 text-sm max-sm:col-span-2 max-sm:mt-0">
           {assessment ? (
             <VerdictWords verdict={assessment.verdict} />
           ) : (

@@ -11,8 +11,9 @@ import { AXIS_WORDS } from '@/lib/presentation/anatomy-words';
 import { describeSlab } from '@/lib/presentation/describe-slab';
 import { phaseOversamplingSetting, sliceOversamplingSetting } from '@/lib/presentation/oversampling-form';
 import { useActiveResult, useBenchState } from './bench-context';
+import { PictureBox } from './zoom/picture-box';
 import { useZoom } from './zoom/use-zoom';
-import { ZoomButtons } from './zoom/zoom-buttons';
+import { ViewBar } from './zoom/view-bar';
 
 /** The slice direction of a 3D sequence, now or as it would be with what is tried. */
 export function SlabView({ slab }: { slab: SlabResult }) {
@@ -26,7 +27,8 @@ export function SlabView({ slab }: { slab: SlabResult }) {
 
   const acquiredSlabMm = slices.mode === 'slab' ? slices.acquiredPartitions * slices.partitionThicknessMm : 0;
   const whole = useMemo(() => size && fitScene(slabBounds(acquiredSlabMm), size.widthPx, size.heightPx), [size, acquiredSlabMm]);
-  const { fit, ...zoom } = useZoom(box, whole, size);
+  const zoomed = useZoom(box, whole, size);
+  const { fit } = zoomed;
   const picture = useMemo(() => {
     if (!size || !fit || slices.mode !== 'slab') return null;
     const [left, top] = fromPixels(fit, [0, 0]);
@@ -47,25 +49,16 @@ export function SlabView({ slab }: { slab: SlabResult }) {
   const phase = phaseOversamplingSetting(prescription, scanner);
   return (
     <div className="flex min-h-0 flex-1 flex-col">
-      <div
-        ref={box}
-        role="group"
-        aria-label="Slab, along the slice direction"
-        aria-describedby="slab-in-words"
-        tabIndex={0}
-        aria-keyshortcuts="+ - 0 Control+ArrowUp Control+ArrowDown Control+ArrowLeft Control+ArrowRight"
-        {...zoom.boxProps}
-        onPointerMove={zoom.panned}
-        className="relative h-80 overflow-hidden xl:h-auto xl:min-h-64 xl:flex-1"
-      >
+      <PictureBox box={box} picture={zoomed} label="Slab, along the slice direction" describedBy="slab-in-words">
         {picture && size && <SceneCanvas name="slab" {...picture} {...size} still />}
-        <ZoomButtons {...zoom} />
-      </div>
-      <div id="slab-in-words" className="px-5 pb-3 text-sm text-ink-soft">
-        <p>
+      </PictureBox>
+      <ViewBar picture={zoomed}>
+        <p className="text-ink-soft">
           Slice oversampling, {AXIS_WORDS[sliceAxisOf(prescription.plane)]}: <span className="figures text-ink">{slice?.value}</span>
           {' · '}phase oversampling, {AXIS_WORDS[prescription.phaseAxis]}: <span className="figures text-ink">{phase.value}</span>
         </p>
+      </ViewBar>
+      <div id="slab-in-words" className="px-5 pb-3 text-sm text-ink-soft">
         {describeSlab(shown).map((line) => (
           <p key={line}>{line}</p>
         ))}

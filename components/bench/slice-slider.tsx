@@ -18,7 +18,7 @@ export function SliceSlider({
   const noun = prescription.slices.mode === 'slab' ? 'Partition' : 'Slice';
   const offset = withMinus(String(Math.round(slice.offsetMm)));
   return (
-    <div className="flex items-center gap-4 px-5 pb-2 text-sm">
+    <div className="flex items-center gap-4">
       <p className="flex-none text-ink-soft">
         {noun} <span className="figures text-ink">{slice.index + 1}</span> of <span className="figures">{slice.count}</span> ·{' '}
         <span className="figures">{offset} mm</span>
@@ -29,7 +29,7 @@ export function SliceSlider({
         min={1}
         max={slice.count}
         onChange={(value) => store.dispatch({ type: 'choose-slice', index: value - 1 })}
-        className="max-w-md"
+        className="min-w-24"
       />
     </div>
   );

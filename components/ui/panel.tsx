@@ -74,9 +74,9 @@ export function Panel(props: PanelProps) {
               aria-expanded={open}
               aria-controls={contentId}
               onClick={toggle}
-              className="-mx-1 flex items-center gap-2 rounded px-1 text-left [text-transform:inherit]"
+              className="-mx-1 flex items-baseline gap-2 rounded px-1 text-left [text-transform:inherit]"
             >
-              <ChevronRightIcon className={cx('transition-transform', open && 'rotate-90')} />
+              <ChevronRightIcon className={cx('relative top-0.5 flex-none transition-transform', open && 'rotate-90')} />
               <span>{title}</span>
             </button>
           ) : (
@@ -88,7 +88,7 @@ export function Panel(props: PanelProps) {
         ) : (
           aside && <div className="flex-none text-sm">{aside}</div>
         )}
-        {actions && <div className="-my-1 -mr-2 flex flex-none self-center">{actions}</div>}
+        {actions && <div className="-my-1.5 -mr-2 flex flex-none items-center self-baseline">{actions}</div>}
       </div>
       <div id={contentId} hidden={!open} className="px-4 pt-2 pb-4">
         {children}

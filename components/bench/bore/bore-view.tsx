@@ -13,6 +13,9 @@ import { useActiveResult, useBench, useBenchState } from '../bench-context';
 import { PlainNumber } from '../bench-number';
 import { HandleOverlay } from '../handle-overlay';
 import { boreHandles, LATERAL_MAX_MM } from '../state/handles';
+import { PictureBox } from '../zoom/picture-box';
+import { useZoom } from '../zoom/use-zoom';
+import { ViewBar } from '../zoom/view-bar';
 
 const PAD_MAX_MM = 150;
 
@@ -33,14 +36,16 @@ export function BoreView() {
   const check = useMemo(() => boreOf(patient, scanner, padMm), [patient, scanner, padMm]);
   const handles = useMemo(() => boreHandles({ patient, scanner }), [patient, scanner]);
 
+  const whole = useMemo(() => size && fitScene(boreBounds(scanner), size.widthPx, size.heightPx), [size, scanner]);
+  const zoomed = useZoom(box, whole, size);
+  const { fit } = zoomed;
   const picture = useMemo(() => {
-    if (!size || typeof check === 'string') return null;
-    const fit = fitScene(boreBounds(scanner), size.widthPx, size.heightPx);
+    if (!size || !fit || typeof check === 'string') return null;
     const [left, top] = fromPixels(fit, [0, 0]);
     const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
     const bounds = { left, top, right, bottom };
     return { fit, scene: boreScene({ check, scanner, patient, padMm, bounds, mmPerPx: 1 / fit.scale, handles }) };
-  }, [size, check, scanner, patient, padMm, handles]);
+  }, [size, fit, check, scanner, patient, padMm, handles]);
 
   const setOffset = (value: number | null, step: string) => {
     if (value === null || !Number.isFinite(value) || Math.abs(value) > LATERAL_MAX_MM) return;
@@ -48,19 +53,16 @@ export function BoreView() {
   };
   return (
     <div className="flex min-h-0 flex-1 flex-col xl:flex-row">
-      <div
-        ref={box}
-        role="group"
-        aria-label={`Opening of ${scanner.name}, seen along the bore`}
-        aria-describedby="bore-in-words"
-        className="relative h-80 touch-none overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-w-0 xl:flex-1"
-      >
-        {picture && size && (
-          <>
-            <SceneCanvas name="bore" scene={picture.scene} fit={picture.fit} {...size} still />
-            <HandleOverlay handles={handles} fit={picture.fit} onHold={() => {}} />
-          </>
-        )}
+      <div className="flex min-h-0 min-w-0 flex-col xl:flex-1">
+        <PictureBox box={box} picture={zoomed} label={`Opening of ${scanner.name}, seen along the bore`} describedBy="bore-in-words">
+          {picture && size && (
+            <>
+              <SceneCanvas name="bore" scene={picture.scene} fit={picture.fit} {...size} still />
+              <HandleOverlay handles={handles} fit={picture.fit} size={size} onHold={() => {}} />
+            </>
+          )}
+        </PictureBox>
+        <ViewBar picture={zoomed} />
       </div>
       {typeof check === 'string' ? (
         <p className="px-5 py-3 xl:w-72 xl:flex-none">A value needs another look: {check}</p>

@@ -4,15 +4,21 @@ import { useMemo, useRef, useState, type PointerEvent } from 'react';
 import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
 import { SceneSvg } from '@/components/schematic/svg/scene-svg';
 import { pictureScene } from '@/components/schematic/scene/picture-scene';
-import { fitScene, fromPixels } from '@/components/schematic/scene/scene';
+import { fitScene, fromPixels, toPixels } from '@/components/schematic/scene/scene';
 import { Slider } from '@/components/ui/slider';
 import { describePicture } from '@/lib/presentation/describe-picture';
 import { useActiveResult, useBenchState } from '../bench-context';
 import { SliceSlider } from '../slice-slider';
 import { shownSlice } from '../state/slices';
+import { PictureBox } from '../zoom/picture-box';
+import { useZoom } from '../zoom/use-zoom';
+import { ViewBar } from '../zoom/view-bar';
 import { GreyCanvas } from './grey-canvas';
 import { pictureBounds, pictureBox } from './picture-layout';
 import { usePictures } from './use-pictures';
+
+/** As near as this to the line between now and tried it is taken hold of, pixels: a finger's half. */
+const LINE_PX = 22;
 
 /** A simulated picture of the slice shown; with something tried, a wipe between now and tried. */
 export function PictureView() {
@@ -22,6 +28,7 @@ export function PictureView() {
   const slice = shownSlice(question.prescription, chosen);
   const { answer, waiting } = usePictures(remedy, slice.offsetMm);
   const [wipe, setWipe] = useState(50);
+  const wiping = useRef(false);
   const box = useRef<HTMLDivElement>(null);
   const size = useBoxSize(box);
 
@@ -33,35 +40,54 @@ export function PictureView() {
   const shownTried = tried ? answer?.job.tried?.question.prescription : undefined;
   const keepClear = answer?.job.now.question.keepClear;
 
+  const bounds = useMemo(() => shownNow && pictureBounds(shownNow, shownTried), [shownNow, shownTried]);
+  const fitted = useMemo(() => (size && bounds ? fitScene(bounds, size.widthPx, size.heightPx) : null), [size, bounds]);
+  const zoomed = useZoom(box, fitted, size);
+  const { fit } = zoomed;
   const layout = useMemo(() => {
-    if (!size || !shownNow || !keepClear) return null;
-    const fit = fitScene(pictureBounds(shownNow, shownTried), size.widthPx, size.heightPx);
+    if (!size || !fit || !bounds || !shownNow || !keepClear) return null;
     const [left, top] = fromPixels(fit, [0, 0]);
     const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
-    const whole = pictureBounds(shownNow, shownTried);
-    const wipeAt = whole.left + ((whole.right - whole.left) * wipe) / 100;
+    const wipeAt = bounds.left + ((bounds.right - bounds.left) * wipe) / 100;
     const boxes = { now: pictureBox(shownNow), ...(shownTried ? { tried: pictureBox(shownTried) } : {}) };
-    const scene = pictureScene({ prescription: shownNow, keepClear, ...boxes, ...(shownTried ? { wipeAt } : {}), bounds: { left, top, right, bottom } });
-    return { fit, whole, wipeAt, boxes, scene };
-  }, [size, shownNow, shownTried, keepClear, wipe]);
+    const visible = { left, top, right, bottom };
+    const scene = pictureScene({ prescription: shownNow, keepClear, ...boxes, ...(shownTried ? { wipeAt } : {}), bounds: visible, mmPerPx: 1 / fit.scale });
+    return { fit, bounds, wipeAt, boxes, scene };
+  }, [size, fit, bounds, shownNow, shownTried, keepClear, wipe]);
 
-  const onPointer = (event: PointerEvent<HTMLDivElement>) => {
-    if (!layout || !tried || (event.type === 'pointermove' && !event.currentTarget.hasPointerCapture(event.pointerId))) return;
-    if (event.type === 'pointerdown') event.currentTarget.setPointerCapture(event.pointerId);
+  const wipeTo = (event: PointerEvent<HTMLDivElement>) => {
+    if (!layout || !wiping.current || event.buttons === 0) return;
     const edge = event.currentTarget.getBoundingClientRect();
     const [u] = fromPixels(layout.fit, [event.clientX - edge.left, 0]);
-    const { left, right } = layout.whole;
+    const { left, right } = layout.bounds;
     setWipe(Math.min(100, Math.max(0, Math.round(((u - left) / (right - left)) * 100))));
+  };
+  /** The whole picture is wiped wherever it is taken hold of; of an enlarged one only the line, its ground moves it. */
+  const takeWipe = (event: PointerEvent<HTMLDivElement>): boolean => {
+    wiping.current = false;
+    if (!layout || !tried || event.button !== 0 || !event.isPrimary) return false;
+    const whole = zoomed.zoom.factor === 1;
+    const edge = event.currentTarget.getBoundingClientRect();
+    const [x] = toPixels(layout.fit, [layout.wipeAt, 0]);
+    if (!whole && Math.abs(event.clientX - edge.left - x) > LINE_PX) return false;
+    wiping.current = true;
+    wipeTo(event);
+    // A finger on the whole picture may be the first of two that pinch.
+    if (whole && event.pointerType !== 'mouse') return false;
+    event.currentTarget.setPointerCapture(event.pointerId);
+    return true;
   };
   const words = describePicture(assessment, remedy?.assessment);
   return (
     <div className="flex min-h-0 flex-1 flex-col">
-      <div
-        ref={box}
-        aria-busy={waiting}
-        onPointerDown={onPointer}
-        onPointerMove={onPointer}
-        className="relative h-80 touch-none overflow-hidden select-none sm:h-[26rem] xl:h-auto xl:min-h-72 xl:flex-1"
+      <PictureBox
+        box={box}
+        picture={zoomed}
+        label="Simulated picture"
+        describedBy="picture-in-words"
+        busy={waiting}
+        onPointerDown={takeWipe}
+        onPointerMove={wipeTo}
       >
         {layout && size && now && (
           <>
@@ -75,21 +101,26 @@ export function PictureView() {
             {refusal ?? (assessment?.detail ? 'Painting the picture.' : 'There is no picture to simulate for this prescription.')}
           </p>
         )}
-      </div>
-      <div className="flex flex-wrap items-center gap-x-4 px-5 pb-1 text-sm">
-        {tried ? (
-          <>
-            <p className="flex-none text-ink-soft">
-              Wipe · now left of it, tried right · <span className="figures text-ink">{wipe} %</span>
-            </p>
-            <Slider label="Wipe between now and tried" unit="%" value={wipe} min={0} max={100} onChange={setWipe} className="max-w-md min-w-40 flex-1" />
-          </>
-        ) : (
-          <p className="text-ink-soft">Try a remedy to lay its picture beside this one.</p>
-        )}
-      </div>
-      <SliceSlider prescription={question.prescription} slice={slice} />
-      <p className="px-5 pb-3 text-sm text-ink-soft">{words[0]}</p>
+      </PictureBox>
+      <ViewBar picture={zoomed}>
+        <div className="flex flex-wrap gap-x-5">
+          {tried && (
+            <div className="flex min-w-44 flex-1 items-center gap-4">
+              <p className="flex-none text-ink-soft">
+                Wipe <span className="figures text-ink">{wipe} %</span>
+              </p>
+              <Slider label="Wipe between now and tried" unit="%" value={wipe} min={0} max={100} onChange={setWipe} className="min-w-24" />
+            </div>
+          )}
+          <div className="min-w-56 flex-1">
+            <SliceSlider prescription={question.prescription} slice={slice} />
+          </div>
+        </div>
+      </ViewBar>
+      <p id="picture-in-words" className="px-5 pb-2 text-sm text-ink-soft">
+        {words[0]}
+        {!tried && ' Try a remedy to lay its picture beside this one.'}
+      </p>
     </div>
   );
 }

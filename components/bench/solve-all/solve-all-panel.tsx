@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import { Figure } from '@/components/ui/figure';
 import { formatClock, formatClockChange } from '@/lib/presentation/duration';
 import { useBench } from '../bench-context';
+import { SequenceStrip } from '../sequence-strip';
 import { VerdictWords } from '../verdict-words';
 import type { SolvedPlan, SolvedSequence } from './solve-all';
 import { useSolveAll } from './use-solve-all';
@@ -16,11 +17,13 @@ function useFolding(): number {
   return useSyncExternalStore(live.subscribe, count, count);
 }
 
-/** Under the strip: the cheapest remedy for each sequence that folds, with the change in time, before any is adopted. */
-export function SolveAll() {
+/**
+ * The strip of sequences, and beside whose bench it is one button for all that fold: what it proposes lies under the
+ * strip, with the change in time, before any of it is adopted.
+ */
+export function SolveAll({ mayEdit, children }: { mayEdit: boolean; children: ReactNode }) {
   const [fault, setFault] = useState<unknown>(null);
   if (fault) throw fault;
-  const folding = useFolding();
   const { solving, stale, start, leave: close, adopt: adoptAll } = useSolveAll(setFault);
   // The pressed button goes with the proposal; whoever works by keyboard stays on the bench.
   const settle = (work: () => void) => () => {
@@ -28,37 +31,39 @@ export function SolveAll() {
     document.getElementById('remedies-title')?.focus();
   };
   const [leave, adopt] = [settle(close), settle(adoptAll)];
-  if (solving.kind === 'idle') {
-    if (folding === 0) return null;
-    return (
-      <Bar>
-        <p>
-          {folding === 1 ? 'One sequence folds' : <><span className="figures">{folding}</span> sequences fold</>} in the keep-clear area.
-        </p>
-        <Button size="sm" onClick={start}>
-          Solve all
-        </Button>
-      </Bar>
-    );
-  }
-  if (solving.kind === 'working') {
-    return (
-      <Bar>
-        <p role="status">
-          Looking for the cheapest remedy{solving.total > 0 && <>: sequence <span className="figures">{solving.done + 1} of {solving.total}</span></>}
-        </p>
-        <Button size="sm" onClick={leave}>
-          Stop
-        </Button>
-      </Bar>
-    );
-  }
-  return <Proposal plan={solving.plan} stale={stale} onAdopt={adopt} onLeave={leave} onAgain={start} />;
+  return (
+    <>
+      <SequenceStrip>
+        <div className="flex flex-wrap items-start justify-between gap-x-3 gap-y-2">
+          <div className="min-w-0 flex-1 basis-40">{children}</div>
+          {mayEdit && solving.kind === 'idle' && <Start onStart={start} />}
+          {solving.kind === 'working' && (
+            <p role="status" className="text-sm">
+              Looking for the cheapest{' '}
+              {solving.total > 0 && <span className="figures whitespace-nowrap">{solving.done + 1} of {solving.total}</span>}
+              <Button size="sm" className="ml-2" onClick={leave}>
+                Stop
+              </Button>
+            </p>
+          )}
+        </div>
+      </SequenceStrip>
+      {solving.kind === 'proposed' && <Proposal plan={solving.plan} stale={stale} onAdopt={adopt} onLeave={leave} onAgain={start} />}
+    </>
+  );
 }
 
-function Bar({ children }: { children: ReactNode }) {
+function Start({ onStart }: { onStart: () => void }) {
+  const folding = useFolding();
+  if (folding === 0) return null;
   return (
-    <div className="flex flex-wrap items-center gap-x-4 gap-y-1 border-b border-line bg-paper px-4 py-1.5 text-sm">{children}</div>
+    <Button
+      size="sm"
+      aria-description={`${folding === 1 ? 'One sequence folds' : `${folding} sequences fold`} in the keep-clear area.`}
+      onClick={onStart}
+    >
+      Solve all <span className="figures">{folding}</span>
+    </Button>
   );
 }
 

@@ -5,18 +5,18 @@ import { AXIS_SIDES, dot } from '@/lib/physics/geometry/vector';
 import type { Side } from '@/lib/physics/model/axes';
 import type { Case } from '@/lib/physics/model/case';
 import { AXIS_WORDS } from '@/lib/presentation/anatomy-words';
+import { boxHandles, withBoxHandle } from './box-handles';
 import { keepClearOf, sequenceById, type BenchSetting } from './bench-document';
 import type { BenchAction, BenchState } from './bench-state';
 import { caseOf } from './case-of';
 import { withValue } from './reading-edit';
 import { nudgedRotation, ROTATION_ID, rotationHandle, rotationTowards } from './rotation-handle';
-import { edgeOf, withEdge } from './window-box';
 
-export type HandleKind = 'fov-edge' | 'fov-rotation' | 'fov-centre' | 'keep-clear-edge' | 'extent' | 'lateral-offset';
+export type HandleKind = 'fov-edge' | 'fov-rotation' | 'fov-centre' | 'keep-clear-edge' | 'must-stay-edge' | 'extent' | 'lateral-offset';
 
 /** Something on the canvas that can be taken hold of, with the typed field that is its twin. */
 export interface BenchHandle {
-  /** Stable: "fov-phase-low", "fov-centre", "keep-clear-anterior", "extent-left". */
+  /** Stable: "fov-phase-low", "fov-centre", "keep-clear-anterior", "must-stay-left", "extent-left". */
   readonly id: string;
   readonly kind: HandleKind;
   /** What it is, for screen readers and the hint. */
@@ -29,7 +29,6 @@ export interface BenchHandle {
   /** The value of the twin field, with its range; absent for the centre, which moves both ways. */
   readonly value?: { readonly now: number; readonly min: number; readonly max: number };
 }
-
 
 /** Beside the furthest point of the body: there the edge of the window often lies. */
 const ASIDE_MM = 34;
@@ -66,28 +65,7 @@ export function benchHandles(question: Case): readonly BenchHandle[] {
     figure: `centre ${prescription.centreMm.map((c) => Math.round(c)).join(', ')} mm`,
   };
   // The last lies on top where handles meet: the window is what is moved most.
-  return [...extentHandles(question), ...keepClearHandles(question), centre, rotationHandle(prescription), ...fovEdges];
-}
-
-function keepClearHandles({ keepClear, prescription }: Case): BenchHandle[] {
-  if (keepClear.area.kind !== 'box') return [];
-  const frame = screenFrame(prescription);
-  const { box } = keepClear.area;
-  const middle = toScreen(frame, [mean(box.xMm), mean(box.yMm), mean(box.zMm)]);
-  return sidesOfPlane(prescription.plane).map((side): BenchHandle => {
-    const direction = toScreen(frame, sideVector(side));
-    const reach = edgeOf(box, side);
-    const along = middle[0] * direction[0] + middle[1] * direction[1];
-    return {
-      id: `keep-clear-${side}`,
-      kind: 'keep-clear-edge',
-      label: `Keep-clear area, ${side} edge`,
-      at: [middle[0] + direction[0] * (reach - along), middle[1] + direction[1] * (reach - along)],
-      along: direction,
-      figure: `keep-clear ${side} ${MM(reach)}`,
-      value: { now: reach, min: -400, max: 400 },
-    };
-  });
+  return [...extentHandles(question), ...boxHandles(question.keepClear, prescription), centre, rotationHandle(prescription), ...fovEdges];
 }
 
 function extentHandles({ patient, prescription }: Case): BenchHandle[] {
@@ -172,16 +150,14 @@ export function moveHandle(
     const fov = Math.max(state.document.scanner.limits.fovMinMm, Math.round(2 * sign * (isPhase ? phase : readout)));
     return { type: 'edit-prescription', patch: isPhase ? { fovPhaseMm: fov } : { fovReadoutMm: fov }, ...withStep };
   }
-  const side = id.replace(/^(keep-clear|extent)-/, '') as Side;
-  const direction = toScreen(frame, sideVector(side));
-  const reach = Math.round(to[0] * direction[0] + to[1] * direction[1]);
-  if (id.startsWith('keep-clear-')) {
-    const keepClear = keepClearOf(state.document, sequence);
-    if (keepClear.area.kind !== 'box') return null;
-    const area = { ...keepClear.area, box: withEdge(keepClear.area.box, side, reach) };
-    return { type: 'edit-keep-clear', keepClear: { ...keepClear, area }, ...withStep };
-  }
-  const reading = withValue(state.document.patient.extents[side], Math.max(0, reach), setting.today);
+  const reachOf = (side: Side): number => {
+    const direction = toScreen(frame, sideVector(side));
+    return Math.round(to[0] * direction[0] + to[1] * direction[1]);
+  };
+  const keepClear = withBoxHandle(keepClearOf(state.document, sequence), id, reachOf);
+  if (keepClear !== undefined) return keepClear && { type: 'edit-keep-clear', keepClear, ...withStep };
+  const side = id.replace(/^extent-/, '') as Side;
+  const reading = withValue(state.document.patient.extents[side], Math.max(0, reachOf(side)), setting.today);
   return { type: 'edit-extent', side, reading, ...withStep };
 }
 
@@ -205,8 +181,4 @@ export function nudgeHandle(
     if (Math.abs(share) < 1e-6) return null;
   }
   return moveHandle(state, setting, id, [handle.at[0] + by[0], handle.at[1] + by[1]], step);
-}
-
-function mean([low, high]: readonly [number, number]): number {
-  return (low + high) / 2;
 }

@@ -4,11 +4,11 @@ import type { ReactNode } from 'react';
 import { MOST_ZOOM } from './zoom';
 import type { PictureZoom } from './use-zoom';
 
-/** In the picture's corner; the same as the keys + − 0. */
+/** Under the picture, so that they cover nothing of it; the same as the keys + − 0. */
 export function ZoomButtons({ zoom, zoomIn, zoomOut, whole }: Pick<PictureZoom, 'zoom' | 'zoomIn' | 'zoomOut' | 'whole'>) {
   const { factor } = zoom;
   return (
-    <div className="absolute top-1 right-2 z-10 flex rounded border border-line-strong bg-paper" role="group" aria-label="Zoom">
+    <div className="flex flex-none rounded border border-line-strong bg-paper" role="group" aria-label="Zoom">
       <ZoomButton name="Zoom out" off={factor <= 1} onPress={zoomOut}>
         <path d="M3 8h10" />
       </ZoomButton>

@@ -8,6 +8,9 @@ export interface Zoom {
   readonly movedPx: ScreenPoint;
 }
 
+/** Where two fingers lie, pixels of the box. */
+export type Fingers = readonly [ScreenPoint, ScreenPoint];
+
 export const WHOLE_PICTURE: Zoom = { factor: 1, movedPx: [0, 0] };
 export const MOST_ZOOM = 8;
 /** One press of a key or button. */
@@ -34,6 +37,15 @@ export function zoomBy(zoom: Zoom, by: number, size: BoxSize, atPx?: ScreenPoint
 
 export function panBy(zoom: Zoom, [dx, dy]: ScreenPoint, size: BoxSize): Zoom {
   return kept({ ...zoom, movedPx: [zoom.movedPx[0] + dx, zoom.movedPx[1] + dy] }, size);
+}
+
+/** Two fingers: what lies between them stays there, enlarged as they part and moved as they move. */
+export function pinchBy(zoom: Zoom, from: Fingers, to: Fingers, size: BoxSize): Zoom {
+  const apart = ([a, b]: Fingers): number => Math.max(1, Math.hypot(a[0] - b[0], a[1] - b[1]));
+  const between = ([a, b]: Fingers): ScreenPoint => [(a[0] + b[0]) / 2, (a[1] + b[1]) / 2];
+  const [x, y] = between(from);
+  const [nextX, nextY] = between(to);
+  return panBy(zoomBy(zoom, apart(to) / apart(from), size, [x, y]), [nextX - x, nextY - y], size);
 }
 
 /** The picture never leaves its box: an edge of it goes to the box's edge, not further. */

@@ -144,14 +144,17 @@ function clearanceNodes(tight: Clearance, radius: number, bounds: Bounds, mmPerP
   ];
 }
 
-function letterNodes({ patient, scanner }: BoreSceneInput, radius: number): TextNode[] {
+function letterNodes({ patient, scanner, bounds, mmPerPx }: BoreSceneInput, radius: number): TextNode[] {
   const prone = patient.position.endsWith('prone');
   const at = radius + PAD_MM / 2;
-  const letter = (side: keyof typeof SIDE_LETTERS, point: ScreenPoint): TextNode => ({
+  const inset = 13 * mmPerPx;
+  // An enlarged picture keeps them at its edges.
+  const seen = (value: number, low: number, high: number): number => Math.min(high - inset, Math.max(low + inset, value));
+  const letter = (side: keyof typeof SIDE_LETTERS, [u, v]: ScreenPoint): TextNode => ({
     kind: 'text',
     name: `letter/${side}`,
     text: SIDE_LETTERS[side],
-    at: point,
+    at: [seen(u, bounds.left, bounds.right), seen(v, bounds.top, bounds.bottom)],
     offsetPx: [0, 6],
     anchor: 'middle',
     size: 'letter',

@@ -13,10 +13,12 @@ export interface PictureSceneInput {
   /** Where the wipe stands, mm on the screen: now is left of it. */
   readonly wipeAt?: number;
   readonly bounds: Bounds;
+  /** Size of a screen pixel, mm; absent: as when the whole picture lies in a small box. */
+  readonly mmPerPx?: number;
 }
 
 /** What lies over the simulated pictures: letters, the keep-clear area, and the wipe between now and tried. */
-export function pictureScene({ prescription, keepClear, now, tried, wipeAt, bounds }: PictureSceneInput): Scene {
+export function pictureScene({ prescription, keepClear, now, tried, wipeAt, bounds, mmPerPx }: PictureSceneInput): Scene {
   const frame = screenFrame(prescription);
   const nodes: SceneNode[] = [
     { kind: 'area', name: 'picture/now', rings: [ringOf(now)], stroke: { colour: 'ink', widthPx: 1.25, edge: 'solid' } },
@@ -37,7 +39,7 @@ export function pictureScene({ prescription, keepClear, now, tried, wipeAt, boun
   }
   const { sides } = frame;
   const middle: ScreenPoint = [(bounds.left + bounds.right) / 2, (bounds.top + bounds.bottom) / 2];
-  const inset = 11;
+  const inset = mmPerPx === undefined ? 11 : 13 * mmPerPx;
   nodes.push(
     letter(SIDE_LETTERS[sides.left], 'left', [bounds.left + inset, middle[1]]),
     letter(SIDE_LETTERS[sides.right], 'right', [bounds.right - inset, middle[1]]),
@@ -46,13 +48,14 @@ export function pictureScene({ prescription, keepClear, now, tried, wipeAt, boun
   );
   if (tried && wipeAt !== undefined) {
     const line = [[[wipeAt, bounds.top + 2 * inset], [wipeAt, bounds.bottom - 2 * inset]]] as const;
-    // Inside the picture: above it stands a letter.
-    const at: ScreenPoint = [wipeAt, Math.max(now.top, tried.top)];
+    // Over the picture's ends: there neither the line nor a letter nor the keep-clear area comes in their way.
+    const over = Math.max(Math.min(now.top, tried.top), bounds.top + 2 * inset);
+    const [left, right] = [Math.max(Math.min(now.left, tried.left), bounds.left), Math.min(Math.max(now.right, tried.right), bounds.right)];
     nodes.push(
       { kind: 'lines', name: 'wipe/rim', lines: line, stroke: { colour: 'paper', widthPx: 4.5, edge: 'solid', opacity: 0.7 } },
       { kind: 'lines', name: 'wipe', lines: line, stroke: { colour: 'indigo', widthPx: 2, edge: 'solid' } },
-      word('wipe/now', 'now', at, -8, 'end'),
-      word('wipe/tried', 'tried', at, 8, 'start'),
+      word('wipe/now', 'now', [left, over], 6, 'start'),
+      word('wipe/tried', 'tried', [right, over], -6, 'end'),
     );
   }
   return { bounds, nodes };
@@ -67,5 +70,5 @@ function letter(text: string, side: string, at: ScreenPoint): TextNode {
 }
 
 function word(name: string, text: string, at: ScreenPoint, dx: number, anchor: TextNode['anchor']): TextNode {
-  return { kind: 'text', name, text, at, offsetPx: [dx, 22], anchor, size: 'note', colour: 'indigo' };
+  return { kind: 'text', name, text, at, offsetPx: [dx, -7], anchor, size: 'note', colour: 'indigo' };
 }

@@ -87,7 +87,7 @@ export function landedNodes(piece: PieceDrawing, context: PieceContext, focused:
 }
 
 /** Dashed, without hatching, and said in words beside it. */
-function uncertainNodes(piece: PieceDrawing, placed: PlacedRings, context: PieceContext, focused: boolean): SceneNode[] {
+function uncertainNodes(piece: PieceDrawing | GhostDrawing, placed: PlacedRings, context: PieceContext, focused: boolean): SceneNode[] {
   const landed = placed.landed.map(context.toRing);
   const at = centroidOf(landed);
   if (!at) return [];
@@ -116,22 +116,28 @@ function uncertainNodes(piece: PieceDrawing, placed: PlacedRings, context: Piece
   ];
 }
 
+/** Hatched upright, unlike a landed piece; what comes from beyond the usable FOV is told apart as there. */
 export function ghostNodes(ghost: GhostDrawing, context: PieceContext, focused: boolean): SceneNode[] {
-  const landed = ghost.landed.map(context.toRing);
-  if (landed.length === 0) return [];
+  const { byPlace } = ghost;
+  const placed = byPlace?.certain ?? ghost;
+  const edge = byPlace ? certainEdge(ghost) : edgeOf(ghost);
   const spacing = HATCH_PX * context.mmPerPx;
-  const nodes: SceneNode[] = [
-    area(ghost.name, landed, 'ochre', focused ? 2.25 : 1, 'dashed', ghost.name),
-    strokes(`${ghost.name}/hatch`, landed, 90, spacing, 'ochre'),
-  ];
-  const inside = ghost.inKeepClear.map(context.toRing);
+  const nodes: SceneNode[] = [];
+  const landed = placed.landed.map(context.toRing);
+  if (landed.length > 0) {
+    nodes.push(
+      area(ghost.name, landed, 'ochre', focused ? 2.25 : 1, edge, ghost.name),
+      strokes(`${ghost.name}/hatch`, landed, 90, spacing, 'ochre'),
+    );
+  }
+  const inside = placed.inKeepClear.map(context.toRing);
   if (inside.length > 0) {
     nodes.push(
-      area(`${ghost.name}/in-keep-clear`, inside, 'thread', focused ? 2.25 : 1, 'dashed', ghost.name),
+      area(`${ghost.name}/in-keep-clear`, inside, 'thread', focused ? 2.25 : 1, edge, ghost.name),
       strokes(`${ghost.name}/in-keep-clear/hatch`, inside, 0, spacing, 'thread'),
     );
   }
-  return nodes;
+  return byPlace ? [...nodes, ...uncertainNodes(ghost, byPlace.uncertain, context, focused)] : nodes;
 }
 
 /** A straight thread from where the tissue is to where it lands, and what it says. */

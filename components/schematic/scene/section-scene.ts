@@ -83,7 +83,7 @@ export function sectionScene(input: SectionSceneInput): Scene {
         name: `handle/${id}`,
         at,
         shape: kind === 'fov-centre' ? 'centre' : kind === 'fov-rotation' ? 'ring' : 'handle',
-        colour: kind === 'keep-clear-edge' ? 'indigo' : kind === 'extent' ? 'ink-soft' : 'ink',
+        colour: kind === 'keep-clear-edge' ? 'indigo' : kind === 'extent' || kind === 'must-stay-edge' ? 'ink-soft' : 'ink',
       }),
     ),
   ];
@@ -100,7 +100,7 @@ export function sectionBounds(now: DrawnSection, tried?: DrawnSection): Bounds {
   const toRing = screener(now.drawing, screenFrame(now.question.prescription));
   const body = boundsOf(now.drawing.tissue.flatMap(({ rings }) => rings.map(toRing)));
   const all = joinBounds(joinBounds(cornersOf(now), body), tried ? cornersOf(tried) : null);
-  const step = 20;
+  const step = 10;
   const pad = 34;
   return {
     left: Math.floor((all.left - pad) / step) * step,
@@ -241,6 +241,18 @@ function areaNodes(drawing: SectionDrawing, question: Case, toRing: (ring: Secti
       name: 'must-stay-displayed',
       rings: [toRing(drawing.mustStayDisplayed)],
       stroke: { colour: 'ink-soft', widthPx: 1, edge: 'dotted' },
+    });
+    const { right, bottom } = boundsOf([toRing(drawing.mustStayDisplayed)])!;
+    // Below it and at its other end than the keep-clear area's words: the two boxes often share their edges.
+    nodes.push({
+      kind: 'text',
+      name: 'must-stay-displayed/label',
+      text: 'must stay displayed',
+      at: [right, bottom],
+      offsetPx: [0, 20],
+      anchor: 'end',
+      size: 'note',
+      colour: 'ink-soft',
     });
   }
   if (drawing.keepClear.length === 0) return nodes;

@@ -13,7 +13,7 @@ import { assess } from '@/lib/physics';
 import type { Assessment } from '@/lib/physics/model/assessment';
 import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
 import type { Remedy } from '@/lib/physics/model/remedy';
-import { describeProbability } from '@/lib/presentation/certainty-words';
+import { describeProbability, shortProbability } from '@/lib/presentation/certainty-words';
 import { benchDocument } from '@/tests/support/bench-documents';
 import { extentsOf, sketchCase, typicalPatient, typicalPrescription, typicalScanner } from '@/tests/support/physics-cases';
 
@@ -68,6 +68,15 @@ describe('how sure', () => {
     expect(words(1e-9, 'exact')).toContain('in < 1 % of');
     expect(words(0, 'certain')).toContain(': no fold in the keep-clear area; the sizes have no spread');
     expect(words(1, 'certain')).toMatch(/: fold in the keep-clear area/);
+  });
+});
+
+describe('how likely, in a few words', () => {
+  it('claims no more than the sentence does', () => {
+    expect(shortProbability({ probability: 0.934, method: 'quasi-random' }, false)).toBe('fold in about 93 %');
+    expect(shortProbability({ probability: 0, method: 'quasi-random' }, true)).toBe('tried: fold in < 1 %');
+    expect(shortProbability({ probability: 0, method: 'certain' }, false)).toBe('no fold');
+    expect(shortProbability({ probability: 1, method: 'certain' }, false)).toBe('fold');
   });
 });
 

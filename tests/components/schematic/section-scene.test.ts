@@ -73,6 +73,23 @@ describe('the section as a scene', () => {
     expect(named(sceneOf(draw(), { tried: draw({ fovPhaseMm: 320 }) }), 'tried-fov')).toHaveLength(1);
   });
 
+  it('hatches of a ghost only what has a certain place, and outlines the rest dashed and in words', () => {
+    const { question, drawing, asGiven } = draw({ acceleration: accelerated(2, { unfolding: 'image-domain-grid-ends' }) });
+    const whole = drawing.ghosts.find(({ landed }) => landed.length > 0)!;
+    const none = { source: [], landed: [], inKeepClear: [] };
+    const rest = { source: whole.source, landed: whole.landed, inKeepClear: whole.inKeepClear };
+    const sceneWith = (byPlace: NonNullable<typeof whole.byPlace>) =>
+      sceneOf({ question, drawing: { ...drawing, pieces: [], ghosts: [{ ...whole, placeUncertain: true, byPlace }] }, asGiven });
+    const unsure = sceneWith({ certain: none, uncertain: rest });
+    expect(named(unsure, `${whole.name}/hatch`)).toHaveLength(0);
+    expect(named(unsure, `${whole.name}/landed/uncertain`)[0]).toMatchObject({ stroke: { edge: 'dashed' } });
+    expect(named(unsure, `${whole.name}/landed/uncertain/label`)[0]).toMatchObject({ text: 'place uncertain' });
+    const sure = sceneWith({ certain: rest, uncertain: none });
+    expect(named(sure, `${whole.name}/hatch`)).toHaveLength(1);
+    expect(named(sure, `${whole.name}/landed/uncertain`)).toHaveLength(0);
+    expect(named(sure, whole.name)[0]).not.toMatchObject({ stroke: { edge: 'dashed' } });
+  });
+
   it('draws ghosts of an accelerated scan whose unfolding ends at the acquired width', () => {
     const ghosts = sceneOf(draw({ acceleration: accelerated(2, { unfolding: 'image-domain-grid-ends' }) }));
     expect(named(ghosts, /^ghost\/.*\/in-keep-clear$/).length).toBeGreaterThan(0);
