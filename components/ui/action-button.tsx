@@ -3,7 +3,7 @@
 import { useRef, useState, type ReactNode } from 'react';
 import type { ErrorView } from '@/lib/domain/errors';
 import type { ActionResult } from '@/lib/schemas/action-result';
-import { Button, type ButtonVariant } from './button';
+import { Button, type ButtonSize, type ButtonVariant } from './button';
 import { FormProblem } from './form-problem';
 
 /**
@@ -17,6 +17,7 @@ export function ActionButton({
   confirm,
   pendingLabel = 'Working …',
   variant = 'secondary',
+  size = 'md',
 }: {
   children: ReactNode;
   action: () => Promise<ActionResult<unknown>>;
@@ -24,6 +25,7 @@ export function ActionButton({
   confirm?: { question: ReactNode; yes: string; no: string };
   pendingLabel?: string;
   variant?: ButtonVariant;
+  size?: ButtonSize;
 }) {
   const [asking, setAsking] = useState(false);
   const [pending, setPending] = useState(false);
@@ -74,6 +76,7 @@ export function ActionButton({
       ) : (
         <Button
           variant={variant}
+          size={size}
           pending={pending}
           pendingLabel={pendingLabel}
           onClick={() => (confirm ? setAsking(true) : void run())}

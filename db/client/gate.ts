@@ -43,8 +43,8 @@ export interface DueWork {
   readonly id: string;
 }
 
-/** Work that a sweep finds when its wake-up call was lost: mail to send, plan sheets to make, bookings to check. */
-export async function dueWork(kind: 'mail' | 'plan-sheet' | 'pre-check' | 'size-request-expiry', atMost: number, db: Database = database()): Promise<DueWork[]> {
+/** Work that a sweep finds when its wake-up call was lost: mail to send, plan sheets and hand-outs to make, bookings to check. */
+export async function dueWork(kind: 'mail' | 'plan-sheet' | 'hand-out' | 'pre-check' | 'size-request-expiry', atMost: number, db: Database = database()): Promise<DueWork[]> {
   const { rows } = await sql<{ site_id: string; id: string }>`
     select site_id, id from gate.due_work(${kind}, ${atMost})`.execute(db);
   return rows.map((row) => ({ siteId: row.site_id, id: row.id }));

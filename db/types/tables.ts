@@ -130,9 +130,26 @@ export interface Demonstration {
   created_at: Generated<Timestamp>;
   created_by: string;
   id: Generated<string>;
+  put_away: Generated<number>;
   site_id: string;
   title: string;
   version: Generated<number>;
+}
+
+export interface DemonstrationHandOut {
+  attempts: Generated<number>;
+  bytes: Buffer | null;
+  content_hash: string;
+  demonstration_id: string;
+  finished_at: Timestamp | null;
+  id: Generated<string>;
+  last_error: Generated<string>;
+  next_attempt_at: Generated<Timestamp>;
+  paper: string;
+  requested_at: Generated<Timestamp>;
+  requested_by: string;
+  site_id: string;
+  status: Generated<string>;
 }
 
 export interface DemonstrationShare {
@@ -423,6 +440,7 @@ export interface DB {
   booking_tombstone: BookingTombstone;
   check_result: CheckResult;
   demonstration: Demonstration;
+  demonstration_hand_out: DemonstrationHandOut;
   demonstration_share: DemonstrationShare;
   import_batch: ImportBatch;
   import_row: ImportRow;

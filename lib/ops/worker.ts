@@ -1,10 +1,12 @@
 import PgBoss from 'pg-boss';
+import { paintHandOut } from '@/components/demonstration/pdf/paint-hand-out';
 import { paintSheet } from '@/components/plan/pdf/paint-sheet';
 import { closeDatabase, dueWork, requireSchema } from '@/db/client';
 import { environment } from '@/lib/env';
 import { type JobPayload, QUEUES } from '@/lib/jobs';
 import { smtpTransport } from '@/lib/mail';
 import { refreshBookings } from '@/lib/services/booking/refresh-bookings';
+import { makeHandOut } from '@/lib/services/demonstration/make-hand-out';
 import { expireSizeRequest } from '@/lib/services/size-request/end-size-request';
 import { deliverMail } from '@/lib/services/mail/deliver-mail';
 import { makeSheet } from '@/lib/services/plan-sheet/make-sheet';
@@ -39,6 +41,14 @@ async function main(): Promise<void> {
     for (const job of jobs) await paint(QUEUES['make-plan-sheet'].parse(job.data));
   });
 
+  const handOut = async (payload: JobPayload<'make-hand-out'>) => {
+    const result = await makeHandOut(payload, paintHandOut);
+    if (result !== 'nothing to do') console.log(`hand-out ${payload.handOutId}: ${result}`);
+  };
+  await boss.work('make-hand-out', { batchSize: 1, pollingIntervalSeconds: 1 }, async (jobs) => {
+    for (const job of jobs) await handOut(QUEUES['make-hand-out'].parse(job.data));
+  });
+
   await boss.work('refresh-bookings', { batchSize: 1, pollingIntervalSeconds: 1 }, async (jobs) => {
     for (const job of jobs) {
       const refreshed = await refreshBookings(QUEUES['refresh-bookings'].parse(job.data));
@@ -55,6 +65,10 @@ async function main(): Promise<void> {
     for (const { siteId, id } of await dueWork('plan-sheet', 10)) {
       if (stopping) return;
       await paint({ siteId, sheetId: id });
+    }
+    for (const { siteId, id } of await dueWork('hand-out', 10)) {
+      if (stopping) return;
+      await handOut({ siteId, handOutId: id });
     }
     for (const due of await dueWork('size-request-expiry', 50)) {
       if (stopping) return;

@@ -49,11 +49,13 @@ describe('plans of the everyday queries', () => {
     booking_entry_time: (trx, siteId) =>
       trx.selectFrom('booking_entry').select('note').where('site_id', '=', siteId).where('booking_id', '=', siteId).orderBy('written_at', 'desc').limit(50),
     demonstration_newest: (trx, siteId) =>
-      trx.selectFrom('demonstration').select('id').where('site_id', '=', siteId).orderBy('changed_at', 'desc').orderBy('id', 'desc').limit(200),
+      trx.selectFrom('demonstration').select('id').where('site_id', '=', siteId).where('put_away', '=', 0).orderBy('changed_at', 'desc').orderBy('id', 'desc').limit(200),
     scene_order: (trx, siteId) =>
       trx.selectFrom('scene').select('data').where('site_id', '=', siteId).where('demonstration_id', '=', siteId).where('removed', '=', 0).orderBy('position').orderBy('id'),
     demonstration_share_newest: (trx, siteId) =>
       trx.selectFrom('demonstration_share').select('openings').where('site_id', '=', siteId).where('demonstration_id', '=', siteId).orderBy('created_at', 'desc'),
+    demonstration_hand_out_site_id_demonstration_id_paper_conte_key: (trx, siteId) =>
+      trx.selectFrom('demonstration_hand_out').select('status').where('site_id', '=', siteId).where('demonstration_id', '=', siteId).where('paper', '=', 'A4').where('content_hash', '=', 'h'),
     audit_event_newest: (trx, siteId) =>
       trx.selectFrom('audit_event').select('id').where('site_id', '=', siteId).orderBy('at', 'desc').orderBy('id', 'desc').limit(50),
     mail_outbox_newest: (trx, siteId) =>

@@ -2,10 +2,12 @@
 
 import { environment } from '@/lib/env';
 import { runAction } from '@/lib/http/run-action';
-import type { AddSceneInput, CreateDemonstrationInput, CreateShareInput, ImportDemonstrationInput, SaveDemonstrationInput } from '@/lib/schemas/demonstration';
+import type { AddSceneInput, CreateDemonstrationInput, CreateShareInput, ImportDemonstrationInput, PutAwayInput, SaveDemonstrationInput } from '@/lib/schemas/demonstration';
 import { addScene } from '@/lib/services/demonstration/add-scene';
 import { createDemonstration } from '@/lib/services/demonstration/create-demonstration';
+import { duplicateDemonstration } from '@/lib/services/demonstration/duplicate-demonstration';
 import { importDemonstration } from '@/lib/services/demonstration/exchange-demonstration';
+import { putAwayDemonstration } from '@/lib/services/demonstration/put-away-demonstration';
 import { saveDemonstration } from '@/lib/services/demonstration/save-demonstration';
 import { createShare, revokeShare } from '@/lib/services/demonstration/share-demonstration';
 
@@ -19,6 +21,14 @@ export async function importDemonstrationAction(input: ImportDemonstrationInput)
 
 export async function saveDemonstrationAction(input: SaveDemonstrationInput) {
   return runAction('save a demonstration', (context) => saveDemonstration(context, input));
+}
+
+export async function duplicateDemonstrationAction(input: { readonly id: string }) {
+  return runAction('copy a demonstration', (context) => duplicateDemonstration(context, input));
+}
+
+export async function putAwayDemonstrationAction(input: PutAwayInput) {
+  return runAction('put a demonstration away', (context) => putAwayDemonstration(context, input));
 }
 
 export async function addSceneAction(input: AddSceneInput) {

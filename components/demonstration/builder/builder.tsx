@@ -1,12 +1,14 @@
 'use client';
 
-import { useCallback, useState } from 'react';
+import { useCallback, useRef, useState, type ReactNode } from 'react';
 import { Button, LinkButton } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/page';
 import { TextInput } from '@/components/ui/text-input';
 import { applies } from '@/lib/domain/demonstration/controls';
 import { CONTROL_IDS, SCENES_MAX, type Scene } from '@/lib/domain/demonstration/scene';
 import type { DemonstrationView } from '@/lib/schemas/demonstration';
+import { HandOut } from '../hand-out/hand-out';
+import { SaveScene } from '../save/save-scene';
 import { SceneControls } from '../controls/scene-controls';
 import { PictureEngine } from '../stage/picture-engine';
 import { SceneStage } from '../stage/scene-stage';
@@ -16,10 +18,11 @@ import { SceneList } from './scene-list';
 import { useAutosave, type SaveAction } from './use-autosave';
 
 /** Builds a demonstration: the order on the left, the chosen scene live in the middle, what is said about it on the right. */
-export function Builder({ demonstration, save }: { demonstration: DemonstrationView; save: SaveAction }) {
+export function Builder({ demonstration, save, children }: { demonstration: DemonstrationView; save: SaveAction; children: ReactNode }) {
   const [content, setContent] = useState({ title: demonstration.title, scenes: demonstration.scenes });
   const [chosenId, setChosenId] = useState(demonstration.scenes[0]?.id);
-  const autosave = useAutosave(demonstration, content, save);
+  const { storedVersion, ...autosave } = useAutosave(demonstration, content, save);
+  const stage = useRef<HTMLDivElement>(null);
   const { scenes } = content;
   const at = Math.max(0, scenes.findIndex(({ id }) => id === chosenId));
   const chosen = scenes[at];
@@ -72,8 +75,9 @@ export function Builder({ demonstration, save }: { demonstration: DemonstrationV
               <Button size="sm" onClick={() => remove(chosen)}>Take out</Button>
             </div>
           </div>
-          <div className="min-w-0 space-y-4">
+          <div className="min-w-0 space-y-4" ref={stage}>
             <SceneStage scene={chosen} onSlice={(sliceOffsetMm) => change(chosen.id, { sliceOffsetMm })} />
+            <div className="flex flex-wrap gap-2"><SaveScene stage={stage} number={at + 1} title={chosen.title} /></div>
             <SceneControls
               key={chosen.id}
               ids={CONTROL_IDS.filter((id) => applies(id, chosen.question))}
@@ -87,6 +91,10 @@ export function Builder({ demonstration, save }: { demonstration: DemonstrationV
           </div>
         </div>
       )}
+      <div className="mt-10 grid gap-x-12 gap-y-8 border-t border-line pt-6 lg:grid-cols-2">
+        {children}
+        {chosen && <HandOut id={demonstration.id} version={storedVersion} />}
+      </div>
     </PictureEngine>
   );
 }

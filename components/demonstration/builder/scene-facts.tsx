@@ -27,7 +27,7 @@ export function SceneFacts({ scene, onChange }: { scene: Scene; onChange: (patch
         error={blank ? 'Nothing given; allowed: text of 1 to 120 characters.' : undefined}
         onChange={(event) => onChange({ title: event.target.value })}
       />
-      <TextArea label="Speaker’s note" rows={5} maxLength={4000} value={scene.note} hint="Shown in the speaker’s window only; never by a shared link." onChange={(event) => onChange({ note: event.target.value })} />
+      <TextArea label="Presenter’s note" rows={5} maxLength={4000} value={scene.note} hint="Shown in the presenter’s window only; never by a shared link." onChange={(event) => onChange({ note: event.target.value })} />
       {signs.length > 0 && (
         <Notice title="Is this about one person?" live>
           The text holds what looks like {signs.join(' and ')}. A demonstration has no patient in it: take it out if it is one’s.

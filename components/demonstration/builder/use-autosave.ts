@@ -24,6 +24,7 @@ const LOST = { message: 'The server did not answer. Your changes are kept here a
 export function useAutosave(demonstration: DemonstrationView, content: Pick<DemonstrationView, 'title' | 'scenes'>, save: SaveAction) {
   const [saving, setSaving] = useState<Saving>({ state: 'saved' });
   const [storedContent, setStoredContent] = useState(content);
+  const [storedVersion, setStoredVersion] = useState(demonstration.version);
   const version = useRef(demonstration.version);
   const stored = useRef(content);
   const latest = useRef(content);
@@ -41,6 +42,7 @@ export function useAutosave(demonstration: DemonstrationView, content: Pick<Demo
         version.current = result.data.version;
         stored.current = sent;
         setStoredContent(sent);
+        setStoredVersion(result.data.version);
         setSaving({ state: 'saved' });
         continue;
       }
@@ -75,5 +77,5 @@ export function useAutosave(demonstration: DemonstrationView, content: Pick<Demo
     void send();
   };
   const shown: Saving = saving.state === 'saved' && storedContent !== content ? { state: 'waiting' } : saving;
-  return { saving: shown, saveNow: () => void send(), overwrite };
+  return { saving: shown, storedVersion, saveNow: () => void send(), overwrite };
 }

@@ -18,11 +18,13 @@ import type { ActionResult } from '@/lib/schemas/action-result';
 
 export interface CaptureProps {
   readonly demonstrations: readonly { readonly id: string; readonly title: string }[];
+  /** Of the booking on the bench: it must not come along. */
+  readonly reference?: string;
   readonly add: (input: { demonstrationId: string; scene: SceneDocument }) => Promise<ActionResult<{ id: string; title: string }>>;
 }
 
 /** Takes what the bench shows, with what is tried, as the next scene of a demonstration. */
-export function AddToDemonstration({ demonstrations, add }: CaptureProps) {
+export function AddToDemonstration({ demonstrations, add, reference }: CaptureProps) {
   const { store } = useBench();
   const { question } = useActiveResult();
   const sequenceName = useBenchState((state) => state.document.sequences.find(({ id }) => id === state.activeId)?.prescription.name ?? '');
@@ -33,7 +35,7 @@ export function AddToDemonstration({ demonstrations, add }: CaptureProps) {
   const [problem, setProblem] = useState<Pick<ErrorView, 'message' | 'incidentId'> | null>(null);
   const [added, setAdded] = useState<{ demonstrationId: string; title: string } | null>(null);
   const name = title.trim() || sequenceName;
-  const signs = personalSigns(name);
+  const signs = personalSigns(name, reference);
 
   const take = async () => {
     const { trial, activeId, view, sliceIndex } = store.read();

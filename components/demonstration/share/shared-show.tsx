@@ -1,6 +1,7 @@
 'use client';
 
 import { useState } from 'react';
+import { SHOWN_CAUTION } from '../caution';
 import type { ShownScene } from '../stage/shown-scene';
 import { PictureEngine } from '../stage/picture-engine';
 import { Show } from '../present/show';
@@ -20,7 +21,7 @@ export function SharedShow({ title, scenes }: { title: string; scenes: readonly 
           <Show title={title} scenes={scenes} index={index} onGo={setIndex} />
         )}
         <p className="px-4 pb-6 text-sm text-ink-soft sm:px-8">
-          Invented cases for teaching, worked out in this page. A planning aid: trained staff, implant screening, equipment labelling and local policy decide.
+          {SHOWN_CAUTION}
         </p>
       </main>
     </PictureEngine>

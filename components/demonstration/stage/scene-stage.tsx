@@ -42,7 +42,7 @@ export function SceneStage({ scene, onSlice, large = false, className }: SceneSt
           <VerdictWords verdict={assessment.verdict} />
           {assessment.reasons[0] && <p className={cx('mt-0.5 text-ink-soft', large ? 'text-lg' : 'text-base')}>{assessment.reasons[0].text}</p>}
         </div>
-        <div className="min-h-56 flex-1 py-2">
+        <div className="min-h-56 flex-1 py-2" data-stage-picture>
           {scene.view === 'picture' ? (
             <SimulatedPicture question={question} sliceOffsetMm={scene.sliceOffsetMm} size={size} label={`Simulated picture: ${scene.title}`} className="mx-auto aspect-[760/480] max-h-full" />
           ) : drawn ? (

@@ -56,6 +56,15 @@ export function drawScene(scene: ShownScene, { assessment }: Answer, size: Size)
   };
 }
 
+/** What a scene shows in words, whether it is drawn or simulated. */
+export function sceneWords(scene: ShownScene, answer: Answer): readonly string[] {
+  const { assessment } = answer;
+  if (!assessment) return [];
+  if (scene.view === 'slab') return assessment.slab ? describeSlab(assessment.slab) : [];
+  const drawing = drawSection(geometryCase(scene.question), { sliceOffsetMm: scene.sliceOffsetMm });
+  return describeSection(drawing, assessment.phaseAxis, assessment.readoutAxis);
+}
+
 const MATCHES: Readonly<Record<Exclude<Highlight, 'nothing'>, RegExp>> = {
   'what-wraps': /\/landed$|\/in-keep-clear$|ghost|\/alias$|^travel|^thread$/,
   'keep-clear': /^keep-clear$/,

@@ -1,8 +1,6 @@
 import { Document, Page, Path, Rect, StyleSheet, Svg, Text, View } from '@react-pdf/renderer';
 import type { ReactNode } from 'react';
-import { VERDICT_MARKS } from '@/components/bench/verdict-words';
 import { ScenePdf } from '@/components/schematic/pdf/scene-pdf';
-import { MARK_PATHS } from '@/components/ui/marks';
 import { qrPath } from '@/lib/presentation/qr-path';
 import { QR_QUIET_MODULES } from '@/lib/presentation/qr-quiet-zone';
 import { VERDICT_WORDS } from '@/lib/presentation/verdict-words';
@@ -12,6 +10,7 @@ import { sheetSequence, type SheetSequence } from '../sheet-facts';
 import { SHEET_PICTURE_PX, sheetScene } from '../sheet-scene';
 import { restRows, restsOn, SHEET_TITLES, sheetHeading, signatureRows, sizeRows } from '../sheet-words';
 import { FIGURE_FONT, printable, TEXT_FONT } from './sheet-fonts';
+import { VerdictMark } from './verdict-mark';
 
 /** 12 mm, as the printed page has. */
 const MARGIN_PT = 34;
@@ -60,17 +59,6 @@ function Setting({ s, setting }: { s: Styles; setting: SheetSequence['phase'] | 
       <Text style={s.value}>{printable(setting.value)}</Text>
       {setting.note ? <Text style={s.small}>{printable(setting.note)}</Text> : null}
     </>
-  );
-}
-
-function VerdictMark({ verdict, size }: { verdict: SheetSequence['verdict']; size: number }) {
-  const { edge, fill, thread, dashed } = MARK_PATHS[VERDICT_MARKS[verdict]];
-  return (
-    <Svg viewBox="0 0 20 20" style={{ width: size, height: size, marginRight: 3 }}>
-      <Path d={edge} fill="none" stroke="black" strokeWidth={1.75} {...(dashed ? { strokeDasharray: '2.5 2' } : {})} />
-      {fill ? <Path d={fill} fill="black" /> : null}
-      {thread ? <Path d={thread} fill="none" stroke="black" strokeWidth={1.25} /> : null}
-    </Svg>
   );
 }
 

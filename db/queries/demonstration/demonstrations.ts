@@ -7,6 +7,7 @@ export interface DemonstrationRecord {
   readonly id: string;
   readonly title: string;
   readonly version: number;
+  readonly putAway: boolean;
 }
 
 export interface DemonstrationSummary extends DemonstrationRecord {
@@ -18,7 +19,7 @@ export interface DemonstrationSummary extends DemonstrationRecord {
 /** More than a department makes in years; the page says when it shows the newest only. */
 export const DEMONSTRATIONS_SHOWN = 200;
 
-export async function listDemonstrations(trx: SiteTransaction, siteId: string, now: Date): Promise<DemonstrationSummary[]> {
+export async function listDemonstrations(trx: SiteTransaction, siteId: string, now: Date, putAway = false): Promise<DemonstrationSummary[]> {
   const rows = await trx
     .selectFrom('demonstration as d')
     .select(['d.site_id', 'd.id', 'd.title', 'd.version', 'd.changed_at'])
@@ -40,6 +41,7 @@ export async function listDemonstrations(trx: SiteTransaction, siteId: string, n
         .as('links'),
     ])
     .where('d.site_id', '=', siteId)
+    .where('d.put_away', '=', putAway ? 1 : 0)
     .orderBy('d.changed_at', 'desc')
     .orderBy('d.id', 'desc')
     .limit(DEMONSTRATIONS_SHOWN)
@@ -49,26 +51,29 @@ export async function listDemonstrations(trx: SiteTransaction, siteId: string, n
     id: row.id,
     title: row.title,
     version: row.version,
+    putAway,
     changedAt: row.changed_at,
     scenes: row.scenes ?? 0,
     links: row.links ?? 0,
   }));
 }
 
+/** What is put away is found by those only who bring it back. */
 export async function findDemonstration(
   trx: SiteTransaction,
   siteId: string,
   id: string,
-  options: { readonly forUpdate?: boolean } = {},
+  options: { readonly forUpdate?: boolean; readonly putAwayToo?: boolean } = {},
 ): Promise<DemonstrationRecord | null> {
   const row = await trx
     .selectFrom('demonstration')
-    .select(['site_id', 'id', 'title', 'version'])
+    .select(['site_id', 'id', 'title', 'version', 'put_away'])
     .where('site_id', '=', siteId)
     .where('id', '=', id)
+    .$if(options.putAwayToo !== true, (query) => query.where('put_away', '=', 0))
     .$if(options.forUpdate === true, (query) => query.forUpdate())
     .executeTakeFirst();
-  return row ? { siteId: row.site_id, id: row.id, title: row.title, version: row.version } : null;
+  return row ? { siteId: row.site_id, id: row.id, title: row.title, version: row.version, putAway: row.put_away === 1 } : null;
 }
 
 export async function insertDemonstration(
@@ -97,6 +102,15 @@ export async function changeDemonstration(
     .where('id', '=', id)
     .execute();
   return version + 1;
+}
+
+export async function setPutAway(trx: SiteTransaction, siteId: string, id: string, putAway: boolean, at: Date): Promise<void> {
+  await trx
+    .updateTable('demonstration')
+    .set({ put_away: putAway ? 1 : 0, changed_at: at })
+    .where('site_id', '=', siteId)
+    .where('id', '=', id)
+    .execute();
 }
 
 /** In their order, without those taken out. */

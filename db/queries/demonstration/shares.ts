@@ -75,6 +75,18 @@ export async function revokeShare(trx: SiteTransaction, siteId: string, id: stri
   return result.numUpdatedRows === 1n;
 }
 
+/** @returns how many worked until now */
+export async function revokeAllShares(trx: SiteTransaction, siteId: string, demonstrationId: string, at: Date): Promise<number> {
+  const result = await trx
+    .updateTable('demonstration_share')
+    .set({ revoked_at: at })
+    .where('site_id', '=', siteId)
+    .where('demonstration_id', '=', demonstrationId)
+    .where('revoked_at', 'is', null)
+    .executeTakeFirst();
+  return Number(result.numUpdatedRows);
+}
+
 /** Counts one opening of a link that works at this moment. @returns false when it does not */
 export async function countOpening(trx: SiteTransaction, siteId: string, id: string, at: Date): Promise<boolean> {
   const result = await trx

@@ -86,6 +86,7 @@ const TABLE = {
 
   'demonstration.read': { description: 'open and present demonstrations', roles: EVERYONE, system: true },
   'demonstration.edit': { description: 'build and change demonstrations', roles: TEACHERS },
+  'demonstration.render': { description: 'make a hand-out as PDF', roles: TEACHERS, system: true },
   'demonstration.share': { description: 'make and revoke share links', roles: TEACHERS },
   'demonstration.view': { description: 'look at a shared demonstration', roles: [], link: true },
 

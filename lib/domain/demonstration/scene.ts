@@ -33,7 +33,7 @@ export const SCENES_MAX = 40;
 export interface SceneDocument {
   readonly schemaVersion: 1;
   readonly title: string;
-  /** For the speaker alone; never leaves by a shared link. */
+  /** For the presenter alone; never leaves by a shared link. */
   readonly note: string;
   readonly question: Case;
   readonly view: SceneView;
@@ -53,22 +53,27 @@ export function readSceneDocument(stored: unknown): SceneDocument {
   return readDocument<SceneDocument>(stored, 1, UPCASTS);
 }
 
-/** A scene in the hands of people without an account: no note, no names of scanner or coil, no policy's author. */
-export function withoutPrivateParts(scene: Scene): Omit<Scene, 'note'> {
-  const { note: _note, question, ...rest } = scene;
-  return { ...rest, question: nameless(question) };
+/** Scenes in the hands of people without an account: no note, no id of a row, no names of scanner, coil or protocol. */
+export function withoutPrivateParts(scenes: readonly Scene[]): readonly Omit<Scene, 'note'>[] {
+  return scenes.map(({ note: _note, id: _id, question, ...rest }, index) => ({
+    ...rest,
+    id: `scene-${index + 1}`,
+    question: nameless(question),
+  }));
 }
 
 /** The same case without what names a scanner, a coil or a site's own words. */
 export function nameless(question: Case): Case {
-  const { scanner, prescription, keepClear } = question;
+  const { scanner, prescription, keepClear, policy } = question;
   const { coils: _coils, ...bare } = scanner;
   const { coilElements: _elements, ...sequence } = prescription;
   const { area } = keepClear;
   return {
     ...question,
     scanner: { ...bare, name: 'Scanner' },
-    prescription: { ...sequence, coil: 'coil' },
+    // A protocol's own name for a sequence can name a place or a person; its family says what it is.
+    prescription: { ...sequence, name: sequence.family, coil: 'coil' },
     keepClear: area.kind === 'box' ? { ...keepClear, area: { kind: 'box', box: area.box } } : keepClear,
+    policy: { ...policy, version: 1 },
   };
 }

@@ -1,6 +1,7 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
 import { CONTROL_IDS, HIGHLIGHTS, SCENE_VIEWS, SCENES_MAX, type Scene, type SceneDocument } from '@/lib/domain/demonstration/scene';
+import { PAPERS, type Paper, type SheetState } from '@/lib/domain/plan/sheet';
 import { caseSchema } from '@/lib/schemas/case';
 import { choice, count, quantity, refused, strict, words } from '@/lib/schemas/fields/fields';
 import { expectedVersionSchema, idSchema } from '@/lib/schemas/fields/ids';
@@ -17,7 +18,7 @@ const text = (max: number) =>
 const sceneShape = {
   schemaVersion: z.literal(1, { error: refused('schemaVersion 1') }),
   title: words(120, 'Title of the scene.'),
-  note: text(4000).describe('For the speaker alone.'),
+  note: text(4000).describe('For the presenter alone.'),
   question: caseSchema,
   view: choice(SCENE_VIEWS, 'View that is shown.'),
   highlight: choice(HIGHLIGHTS, 'What is painted heavier.'),
@@ -90,6 +91,25 @@ export const createShareInput = strict({
 });
 export type CreateShareInput = z.input<typeof createShareInput>;
 export const revokeShareInput = strict({ id: idSchema });
+
+export const requestHandOutBody = strict({ paper: choice(PAPERS, 'Paper size.').default('A4') });
+export const requestHandOutInput = strict({ demonstrationId: idSchema, ...requestHandOutBody.shape });
+export type RequestHandOutInput = z.input<typeof requestHandOutInput>;
+export const handOutParams = z.object({ id: idSchema, handOutId: idSchema });
+
+/** Where the making of a hand-out stands. */
+export interface HandOutView {
+  readonly id: string;
+  readonly demonstrationId: string;
+  readonly paper: Paper;
+  readonly state: SheetState;
+  /** Tries that did not end in a file. */
+  readonly attempts: number;
+  readonly sizeBytes?: number;
+}
+
+export const putAwayInput = strict({ id: idSchema, away: z.boolean({ error: refused('true or false') }) });
+export type PutAwayInput = z.input<typeof putAwayInput>;
 
 export interface DemonstrationLine {
   readonly id: string;

@@ -8,7 +8,7 @@ import type { ServiceContext } from '../context';
 import { storeDemonstration } from './create-demonstration';
 import { getDemonstration } from './get-demonstration';
 
-/** All scenes as a file for another site: notes stay, since a colleague is to speak to them; names of equipment do not. */
+/** All scenes as a file for another site: notes stay, since a colleague presents from them; names of equipment do not. */
 export async function exportDemonstration(context: ServiceContext, input: { readonly id: string }): Promise<DemonstrationFile> {
   const { title, scenes } = await getDemonstration(context, input);
   return {

@@ -19,7 +19,6 @@ export async function viewSharedDemonstration(input: { readonly token: string },
     authorise(linkActor(match.siteId, match.id), 'demonstration.view', share);
     const found = await findDemonstration(trx, match.siteId, share.demonstrationId);
     if (!found || !(await countOpening(trx, match.siteId, share.id, now))) throw new ServiceError('not-found');
-    const scenes = await listScenes(trx, match.siteId, share.demonstrationId);
-    return { title: found.title, scenes: scenes.map(withoutPrivateParts) };
+    return { title: found.title, scenes: withoutPrivateParts(await listScenes(trx, match.siteId, share.demonstrationId)) };
   });
 }

@@ -1,6 +1,6 @@
 import { expect, test } from '@/tests/support/e2e/journey';
 
-/** An educator builds, presents with the speaker's window, shares, and takes the link back. */
+/** An educator builds, presents with the presenter's window, shares, and takes the link back. */
 test('three scenes from set piece and bench, presented, shared, moved, revoked', async ({ signedIn, browser, baseURL, expectedErrors }) => {
   // The opened presentation goes on without the network; what the browser then says of it is no fault.
   expectedErrors.push(/ERR_INTERNET_DISCONNECTED/);
@@ -39,28 +39,28 @@ test('three scenes from set piece and bench, presented, shared, moved, revoked',
     await expect(page.getByRole('link', { name: `“${title}”` })).toBeVisible();
   });
 
-  await test.step('present by keyboard with the speaker’s window', async () => {
+  await test.step('present by keyboard with the presenter’s window', async () => {
     await page.goto(`${address}/present`);
-    const [speaker] = await Promise.all([
+    const [presenter] = await Promise.all([
       page.waitForEvent('popup'),
-      page.getByRole('button', { name: 'Start with the speaker’s window' }).click(),
+      page.getByRole('button', { name: 'Start with the presenter’s window' }).click(),
     ]);
-    await expect(speaker.locator('[data-speaker-scene="1"]')).toBeVisible();
-    await expect(speaker.locator('[data-speaker-note]')).toContainText('partitions hold it');
-    await expect(speaker.getByRole('region', { name: 'Next scene' })).toContainText('12 % slice oversampling');
+    await expect(presenter.locator('[data-presenter-scene="1"]')).toBeVisible();
+    await expect(presenter.locator('[data-presenter-note]')).toContainText('partitions hold it');
+    await expect(presenter.getByRole('region', { name: 'Next scene' })).toContainText('12 % slice oversampling');
     await page.bringToFront();
     await page.keyboard.press('PageDown');
     await expect(page.locator('[data-scene="2"]')).toBeVisible();
-    await expect(speaker.locator('[data-speaker-scene="2"]')).toBeVisible();
+    await expect(presenter.locator('[data-presenter-scene="2"]')).toBeVisible();
     // Opened, it needs no network.
     await page.context().setOffline(true);
     await page.keyboard.press('ArrowRight');
     await expect(page.getByRole('heading', { name: 'As on the bench' })).toBeVisible();
     await page.keyboard.press('PageUp');
     await page.keyboard.press('ArrowLeft');
-    await expect(speaker.locator('[data-speaker-scene="1"]')).toBeVisible();
+    await expect(presenter.locator('[data-presenter-scene="1"]')).toBeVisible();
     await page.context().setOffline(false);
-    await speaker.close();
+    await presenter.close();
   });
 
   await test.step('share, open signed out, move a control, revoke', async () => {

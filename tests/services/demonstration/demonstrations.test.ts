@@ -6,24 +6,20 @@ import { ROLES } from '@/lib/domain/access';
 import { findSetPiece } from '@/lib/domain/demonstration/set-pieces';
 import { addScene } from '@/lib/services/demonstration/add-scene';
 import { createDemonstration } from '@/lib/services/demonstration/create-demonstration';
+import { duplicateDemonstration } from '@/lib/services/demonstration/duplicate-demonstration';
 import { exportDemonstration, importDemonstration } from '@/lib/services/demonstration/exchange-demonstration';
 import { getDemonstration } from '@/lib/services/demonstration/get-demonstration';
 import { listDemonstrations } from '@/lib/services/demonstration/list-demonstrations';
+import { putAwayDemonstration } from '@/lib/services/demonstration/put-away-demonstration';
 import { saveDemonstration } from '@/lib/services/demonstration/save-demonstration';
 import { createShare, listShares, revokeShare } from '@/lib/services/demonstration/share-demonstration';
 import { viewSharedDemonstration } from '@/lib/services/demonstration/view-shared-demonstration';
 import { hashSecretToken } from '@/lib/services/session/secret-token';
 import { createTestSite } from '@/tests/support/database';
 import { activePerson, auditActions, outcomeOf } from '@/tests/support/database/accounts';
+import { siteWithDemonstration } from './site-with-demonstration';
 
 const DAY = 86_400_000;
-
-async function siteWithDemonstration() {
-  const site = await createTestSite();
-  const educator = await activePerson(site, 'educator');
-  const { id } = await createDemonstration({ actor: educator }, { title: 'Wrap, shown', setPiece: 'slab-wrap' });
-  return { site, educator, context: { actor: educator }, id };
-}
 
 describe('a demonstration', () => {
   it('is a copy of a set piece, in its order, listed and audited', async () => {
@@ -83,6 +79,48 @@ describe('a demonstration', () => {
     for (const trace of ['2026-11-02', 'Room 4', 'female', '173.4', 'heightCm', 'measured']) expect(text).not.toContain(trace);
   });
 
+  it('is duplicated under new ids, and its links stay its own', async () => {
+    const { context, id } = await siteWithDemonstration();
+    await createShare(context, { id, days: 7 });
+    const copy = await duplicateDemonstration(context, { id });
+    const [original, twin] = [await getDemonstration(context, { id }), await getDemonstration(context, { id: copy.id })];
+    expect(twin.title).toBe('Wrap, shown (copy)');
+    expect(twin.scenes.map(({ id: _id, ...document }) => document)).toEqual(original.scenes.map(({ id: _id, ...document }) => document));
+    expect(twin.scenes.filter(({ id: each }) => original.scenes.some((scene) => scene.id === each))).toEqual([]);
+    expect(await listShares(context, { id: copy.id })).toEqual([]);
+    await saveDemonstration(context, { id, expectedVersion: 1, title: 'x'.repeat(120), scenes: [] });
+    const long = await duplicateDemonstration(context, { id });
+    expect((await getDemonstration(context, { id: long.id })).title).toHaveLength(120);
+  });
+
+  it('put away leaves every list and page, takes its links with it, and comes back without them', async () => {
+    const { context, id, site } = await siteWithDemonstration();
+    const { secret } = await createShare(context, { id, days: 7 });
+    await createShare(context, { id, days: 7 });
+    const other = await createDemonstration(context, { title: 'Stays' });
+    const kept = await createShare(context, { id: other.id, days: 7 });
+    expect(await putAwayDemonstration(context, { id, away: true })).toEqual({ linksEnded: 2 });
+    expect(await putAwayDemonstration(context, { id, away: true })).toEqual({ linksEnded: 0 });
+    expect((await listDemonstrations(context)).map((line) => line.id)).toEqual([other.id]);
+    expect(await listDemonstrations(context, { putAway: true })).toMatchObject([{ id, links: 0 }]);
+    const gone = await Promise.all([
+      getDemonstration(context, { id }),
+      saveDemonstration(context, { id, expectedVersion: 1, title: 'Late', scenes: [] }),
+      addScene(context, { demonstrationId: id, scene: { ...findSetPiece('swap')!.scenes()[0]!, controls: [] } }),
+      createShare(context, { id, days: 1 }),
+      exportDemonstration(context, { id }),
+      duplicateDemonstration(context, { id }),
+      viewSharedDemonstration({ token: secret }),
+    ].map(outcomeOf));
+    expect(gone.filter((outcome) => !outcome.startsWith('not-found'))).toEqual([]);
+    expect(await viewSharedDemonstration({ token: kept.secret })).toMatchObject({ title: 'Stays' });
+    expect(await putAwayDemonstration(context, { id, away: false })).toEqual({ linksEnded: 0 });
+    expect((await getDemonstration(context, { id })).scenes).toHaveLength(5);
+    expect(await outcomeOf(viewSharedDemonstration({ token: secret }))).toMatch(/^not-found/);
+    expect((await listShares(context, { id })).map(({ state }) => state)).toEqual(['revoked', 'revoked']);
+    expect((await auditActions(site, id)).filter((action) => action === 'demonstration.edit')).toHaveLength(3);
+  });
+
   it('travels as a file to another site', async () => {
     const { context, id } = await siteWithDemonstration();
     const file = await exportDemonstration(context, { id });
@@ -113,7 +151,9 @@ describe('who may', () => {
     const changes = await outcomeOf(saveDemonstration({ actor }, { id, expectedVersion: 1, title: 'X', scenes: [] }));
     const makes = await outcomeOf(createDemonstration({ actor }, { title: 'Y' }));
     const shares = await outcomeOf(createShare({ actor }, { id, days: 1 }));
-    for (const outcome of [changes, makes, shares]) {
+    const copies = await outcomeOf(duplicateDemonstration({ actor }, { id }));
+    const ends = await outcomeOf(putAwayDemonstration({ actor }, { id, away: true }));
+    for (const outcome of [changes, makes, shares, copies, ends]) {
       if (teaches) expect(outcome).not.toMatch(/^not-found/);
       else expect(outcome).toMatch(/^not-found/);
     }
@@ -125,19 +165,33 @@ describe('who may', () => {
     expect(await outcomeOf(getDemonstration(stranger, { id }))).toMatch(/^not-found/);
     expect(await outcomeOf(createShare(stranger, { id, days: 1 }))).toMatch(/^not-found/);
     expect(await outcomeOf(listShares(stranger, { id }))).toMatch(/^not-found/);
+    expect(await outcomeOf(putAwayDemonstration(stranger, { id, away: true }))).toMatch(/^not-found/);
+    expect(await outcomeOf(duplicateDemonstration(stranger, { id }))).toMatch(/^not-found/);
   });
 });
 
 describe('a shared link', () => {
   it('shows the scenes without notes or names, counts its openings, and is stored as a hash only', async () => {
     const { site, context, id, educator } = await siteWithDemonstration();
+    const { scenes, version } = await getDemonstration(context, { id });
+    const named = scenes.map((scene) => ({
+      ...scene,
+      controls: [...scene.controls],
+      question: { ...scene.question, scanner: { ...scene.question.scanner, name: 'Room 4' }, prescription: { ...scene.question.prescription, name: 'Protocol of ours' } },
+    }));
+    await saveDemonstration(context, { id, expectedVersion: version, title: 'Wrap, shown', scenes: named });
     const { secret } = await createShare(context, { id, days: 7 });
     expect(secret).toMatch(/^[\w-]{43}$/);
     const shown = await viewSharedDemonstration({ token: secret });
     await viewSharedDemonstration({ token: secret });
     expect(shown.scenes).toHaveLength(5);
     const sent = JSON.stringify(shown);
-    for (const key of ['"note"', 'siteId', site.siteId, educator.userId, educator.displayName, id]) expect(sent).not.toContain(key);
+    const stored = (await getDemonstration(context, { id })).scenes;
+    const { site_name } = await site.withApp((trx) => trx.selectFrom('site').select('name as site_name').executeTakeFirstOrThrow());
+    const traces = ['"note"', 'siteId', site.siteId, site_name, educator.userId, educator.displayName, id, 'Room 4', 'Protocol of ours', 'coils', 'label'];
+    for (const trace of [...traces, ...stored.flatMap((scene) => [scene.id, scene.note.slice(0, 30)])]) expect(sent, trace).not.toContain(trace);
+    // Nothing that looks like the id of any row.
+    expect(sent).not.toMatch(/[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-/);
     expect(await listShares(context, { id })).toMatchObject([{ state: 'works', openings: 2 }]);
     const dump = await site.withApp((trx) => sql`select to_jsonb(t)::text from demonstration_share t`.execute(trx));
     expect(JSON.stringify(dump.rows)).not.toContain(secret);

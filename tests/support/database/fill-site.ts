@@ -188,6 +188,10 @@ async function insertAll(
   await trx.insertInto('demonstration').values({ site_id, id: demonstration_id, title: 'Shown', created_by: by }).execute();
   await trx.insertInto('scene').values({ site_id, id: randomUUID(), demonstration_id, position: 0, data: DOCUMENT }).execute();
   await trx
+    .insertInto('demonstration_hand_out')
+    .values({ site_id, demonstration_id, paper: 'A4', content_hash: '0'.repeat(64), requested_by: by })
+    .execute();
+  await trx
     .insertInto('demonstration_share')
     .values({ site_id, demonstration_id, token_hash: `d-${site_id}`, expires_at: later, created_by: by })
     .execute();

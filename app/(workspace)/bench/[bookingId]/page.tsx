@@ -5,18 +5,22 @@ import { identityOf } from '@/components/bench/saving/plan-identity';
 import { SizeNeeded } from '@/components/bench/size-needed';
 import { firstView } from '@/components/bench/state/first-view';
 import { basisOfBooking, documentOfBooking } from '@/components/bench/state/plan-document';
+import { AddToDemonstration } from '@/components/demonstration/capture/add-to-demonstration';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
 import { openBench } from '@/lib/services/booking/open-bench';
+import { listDemonstrations } from '@/lib/services/demonstration/list-demonstrations';
+import { addSceneAction } from '../../demonstrations/actions';
 
 export const metadata: Metadata = { title: 'Bench' };
 
 export default async function BookingBenchPage({ params }: { params: Promise<{ bookingId: string }> }) {
   const { bookingId } = await params;
-  const { view, userId, mayEdit } = await loadPage(async (context) => ({
+  const { view, userId, mayEdit, teaches } = await loadPage(async (context) => ({
     view: await openBench(context, { bookingId }),
     userId: context.actor.userId ?? '',
     mayEdit: mayAttempt(context.actor, 'plan.edit'),
+    teaches: mayAttempt(context.actor, 'demonstration.edit') ? await listDemonstrations(context) : null,
   }));
   const document = documentOfBooking(view);
   const heading = (
@@ -39,6 +43,7 @@ export default async function BookingBenchPage({ params }: { params: Promise<{ b
       protocolLabel={`${view.protocol.name} v${view.protocol.version}`}
     >
       {heading}
+      {teaches && <AddToDemonstration demonstrations={teaches} add={addSceneAction} reference={view.booking.accession} />}
     </Bench>
   );
 }

@@ -35,10 +35,9 @@ export default async function DemonstrationPage({ params }: { params: Promise<{ 
           )
         }
       />
-      <Builder demonstration={demonstration} save={saveDemonstrationAction} />
-      <div className="mt-10 max-w-3xl border-t border-line pt-6">
+      <Builder demonstration={demonstration} save={saveDemonstrationAction}>
         <SharePanel id={id} shares={shares} actions={{ createShare: createShareAction, revokeShare: revokeShareAction }} />
-      </div>
+      </Builder>
     </PageBody>
   );
 }

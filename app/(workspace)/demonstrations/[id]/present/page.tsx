@@ -1,13 +1,13 @@
 import type { Metadata } from 'next';
-import { Presenter } from '@/components/demonstration/present/presenter';
+import { Presentation } from '@/components/demonstration/present/presentation';
 import { NoScenes } from '@/components/demonstration/present/no-scenes';
 import { loadPage } from '@/lib/http/load-page';
 import { getDemonstration } from '@/lib/services/demonstration/get-demonstration';
 
 export const metadata: Metadata = { title: 'Present' };
 
-export default async function PresenterPage({ params }: { params: Promise<{ id: string }> }) {
+export default async function PresentPage({ params }: { params: Promise<{ id: string }> }) {
   const { id } = await params;
   const demonstration = await loadPage((context) => getDemonstration(context, { id }));
-  return demonstration.scenes.length > 0 ? <Presenter demonstration={demonstration} /> : <NoScenes />;
+  return demonstration.scenes.length > 0 ? <Presentation demonstration={demonstration} /> : <NoScenes />;
 }

@@ -8,7 +8,7 @@ import { openChannel } from './channel';
 import { Show } from './show';
 
 /** The window the room looks at. All it needs is loaded with it, so it goes on when the network does not. */
-export function Presenter({ demonstration }: { demonstration: DemonstrationView }) {
+export function Presentation({ demonstration }: { demonstration: DemonstrationView }) {
   const { id, title, scenes } = demonstration;
   const [index, setIndex] = useState(0);
   const [startedAt, setStartedAt] = useState<number | null>(null);
@@ -39,9 +39,9 @@ export function Presenter({ demonstration }: { demonstration: DemonstrationView 
     if (document.fullscreenElement) void document.exitFullscreen();
     else void room.current?.requestFullscreen?.().catch(() => undefined);
   }, []);
-  const start = (withSpeaker: boolean) => {
-    if (withSpeaker) {
-      const opened = window.open(`/demonstrations/${id}/speaker`, `selvedge-speaker-${id}`, 'popup,width=900,height=720');
+  const start = (withPresenter: boolean) => {
+    if (withPresenter) {
+      const opened = window.open(`/demonstrations/${id}/presenter`, `selvedge-presenter-${id}`, 'popup,width=900,height=720');
       setBlocked(opened === null);
     } else fullScreen();
     setStartedAt(Date.now());
@@ -58,7 +58,7 @@ export function Presenter({ demonstration }: { demonstration: DemonstrationView 
               {scenes.length} {scenes.length === 1 ? 'scene' : 'scenes'}. Step with the arrow keys, Page Up and Page Down, or a clicker. Once opened it needs no network.
             </p>
             <div className="flex flex-wrap gap-3">
-              <Button variant="primary" onClick={() => start(true)}>Start with the speaker’s window</Button>
+              <Button variant="primary" onClick={() => start(true)}>Start with the presenter’s window</Button>
               <Button onClick={() => start(false)}>Start without it</Button>
               <LinkButton href={`/demonstrations/${id}`}>Back to building</LinkButton>
             </div>
@@ -71,7 +71,7 @@ export function Presenter({ demonstration }: { demonstration: DemonstrationView 
         )}
         {blocked && startedAt !== null && (
           <p role="alert" className="fixed right-4 bottom-4 max-w-md bg-ink px-4 py-2 text-paper">
-            The browser kept the speaker’s window from opening. Allow windows for this site, leave, and start again.
+            The browser kept the presenter’s window from opening. Allow windows for this site, leave, and start again.
           </p>
         )}
       </PictureEngine>

@@ -1,13 +1,13 @@
 import type { Metadata } from 'next';
-import { Speaker } from '@/components/demonstration/present/speaker';
+import { PresenterWindow } from '@/components/demonstration/present/presenter-window';
 import { NoScenes } from '@/components/demonstration/present/no-scenes';
 import { loadPage } from '@/lib/http/load-page';
 import { getDemonstration } from '@/lib/services/demonstration/get-demonstration';
 
-export const metadata: Metadata = { title: 'Speaker’s window' };
+export const metadata: Metadata = { title: 'Presenter’s window' };
 
-export default async function SpeakerPage({ params }: { params: Promise<{ id: string }> }) {
+export default async function PresenterPage({ params }: { params: Promise<{ id: string }> }) {
   const { id } = await params;
   const demonstration = await loadPage((context) => getDemonstration(context, { id }));
-  return demonstration.scenes.length > 0 ? <Speaker demonstration={demonstration} /> : <NoScenes />;
+  return demonstration.scenes.length > 0 ? <PresenterWindow demonstration={demonstration} /> : <NoScenes />;
 }

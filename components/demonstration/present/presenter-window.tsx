@@ -8,8 +8,8 @@ import { openChannel } from './channel';
 import { NextScene } from './next-scene';
 import { stepOfKey } from './step-of-key';
 
-/** The speaker's own window: what to say, what comes next, and how long it has been. */
-export function Speaker({ demonstration }: { demonstration: DemonstrationView }) {
+/** The presenter's own window: what to say, what comes next, and how long it has been. */
+export function PresenterWindow({ demonstration }: { demonstration: DemonstrationView }) {
   const { id, title, scenes } = demonstration;
   const [at, setAt] = useState<{ index: number; startedAt: number } | null>(null);
   const [now, setNow] = useState(0);
@@ -45,17 +45,17 @@ export function Speaker({ demonstration }: { demonstration: DemonstrationView })
   return (
     <div className="fixed inset-0 z-40 overflow-y-auto bg-cloth px-6 py-5">
       <header className="flex flex-wrap items-baseline justify-between gap-4 border-b border-line pb-3">
-        <p className="text-ink-soft">{title} · speaker’s window</p>
+        <p className="text-ink-soft">{title} · presenter’s window</p>
         <p className="figures text-3xl" role="timer" aria-label="Time since the start">{formatClock(seconds)}</p>
       </header>
       {!at && <p className="mt-4 text-lg">Waiting for the presentation to start in the other window.</p>}
       {scene && (
         <div className="mt-4 grid gap-6 md:grid-cols-[minmax(0,3fr)_minmax(14rem,2fr)]">
           <section>
-            <h1 className="text-2xl" data-speaker-scene={index + 1}>
+            <h1 className="text-2xl" data-presenter-scene={index + 1}>
               {index + 1} / {scenes.length} {scene.title}
             </h1>
-            <p className="mt-4 text-xl whitespace-pre-wrap" data-speaker-note>{scene.note || 'No note for this scene.'}</p>
+            <p className="mt-4 text-xl whitespace-pre-wrap" data-presenter-note>{scene.note || 'No note for this scene.'}</p>
             <div className="mt-6 flex gap-3">
               <Button onClick={() => channel.current?.send({ kind: 'go', index: index - 1 })}>Back</Button>
               <Button variant="primary" onClick={() => channel.current?.send({ kind: 'go', index: index + 1 })}>Next</Button>
