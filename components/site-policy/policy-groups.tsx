@@ -8,7 +8,7 @@ import { marginShape, policyShape, swapShape, tissueT1Shape, weightsShape } from
 import { REGION_WORDS } from '@/lib/presentation/anatomy-words';
 import type { BodyRegion } from '@/lib/physics/model/patient';
 import type { Side } from '@/lib/physics/model/axes';
-import { policyFormSchema } from '@/lib/schemas/site-policy';
+import { pathwayShape, policyFormSchema } from '@/lib/schemas/site-policy';
 
 const GRID = 'grid gap-x-6 gap-y-5 sm:grid-cols-2 lg:grid-cols-3';
 
@@ -49,6 +49,13 @@ export function CertaintyGroup() {
           name="readingExpiryDays"
           schema={policyShape.readingExpiryDays}
           label="Sizes are asked for again after"
+          step={5}
+        />
+        <FormNumber
+          name="setUpMinutes"
+          schema={pathwayShape.setUpMinutes}
+          label="Set-up counted beside the scan"
+          hint="Positioning, coils and pauses; part of every slot"
           step={5}
         />
         <FormNumber

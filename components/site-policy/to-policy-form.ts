@@ -7,7 +7,7 @@ import { policyFormSchema, type PolicyForm, type PolicyView } from '@/lib/schema
 /** The stored policy as the form holds it: the version is counted by the server. */
 export function toPolicyForm(view: PolicyView): Versioned<PolicyForm> {
   const { version: _counted, ...form } = view.policy;
-  return { version: view.version, form: structuredClone(form) as unknown as PolicyForm };
+  return { version: view.version, form: structuredClone({ ...form, ...view.pathway }) as unknown as PolicyForm };
 }
 
 /** Rows of the history from the versions themselves, newest first; version 0 is the standard every site starts from. */

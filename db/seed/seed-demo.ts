@@ -5,6 +5,7 @@ import { findScanner, insertScanner } from '@/db/queries/scanner/scanners';
 import { addPolicyVersion } from '@/db/queries/site-policy/policies';
 import { insertSessions } from '@/db/queries/scanner-session/scanner-sessions';
 import { insertSizeReadings, listSizeReadings } from '@/db/queries/size-reading/size-readings';
+import { DEFAULT_PATHWAY } from '@/lib/domain/site-policy/document';
 import { assessAsBooked, stateOfAssessments } from '@/lib/domain/booking/assess-as-booked';
 import { DEFAULT_POLICY } from '@/lib/domain/case/model';
 import { composePatient } from '@/lib/domain/size-reading/compose-patient';
@@ -71,7 +72,7 @@ async function insertSetup(trx: SiteTransaction, createdBy: string): Promise<voi
       createdBy,
     });
   }
-  await addPolicyVersion(trx, { siteId, version: 1, document: { schemaVersion: 1, policy }, createdBy });
+  await addPolicyVersion(trx, { siteId, version: 1, document: { schemaVersion: 2, policy, pathway: DEFAULT_PATHWAY }, createdBy });
 }
 
 /** The state lists show, worked out from the stored rows like that of any other booking. */

@@ -1,6 +1,7 @@
 /** A site of its own with a scanner, a protocol of two sequences and a booking of a known size: what most tests of services begin with. */
 import type { Actor, UserActor } from '@/lib/domain/access';
 import { DEFAULT_POLICY, type Prescription } from '@/lib/domain/case/model';
+import { DEFAULT_PATHWAY } from '@/lib/domain/site-policy/document';
 import { createBooking } from '@/lib/services/booking/create-booking';
 import { createProtocol } from '@/lib/services/protocol/create-protocol';
 import { createScanner } from '@/lib/services/scanner/create-scanner';
@@ -63,5 +64,5 @@ export async function sizeBooking({ radiographer, booking }: Pick<EquippedSite, 
 /** The standard policy as its form holds it. */
 export function policyForm() {
   const { version: _version, ...form } = structuredClone(DEFAULT_POLICY);
-  return form;
+  return { ...form, ...DEFAULT_PATHWAY };
 }

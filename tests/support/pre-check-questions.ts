@@ -2,6 +2,7 @@
 import { DEFAULT_POLICY, type Prescription, type ReadingSource } from '@/lib/domain/case/model';
 import type { CheckedProtocol, CheckedScanner } from '@/lib/domain/pre-check/check-on-scanner';
 import type { PreCheckQuestion } from '@/lib/domain/pre-check/pre-check';
+import { DEFAULT_PATHWAY } from '@/lib/domain/site-policy/document';
 import type { SizeQuantity } from '@/lib/domain/size-reading/quantities';
 import type { SizeReading } from '@/lib/domain/size-reading/size-reading';
 import { typicalPrescription, typicalScanner } from './physics-cases';
@@ -54,6 +55,7 @@ export function preCheckQuestion(
     others: [],
     protocol: checkedProtocol(),
     policy: DEFAULT_POLICY,
+    pathway: DEFAULT_PATHWAY,
     sessions: [],
     ...rest,
   };

@@ -147,18 +147,15 @@ export async function markStale(trx: SiteTransaction, siteId: string, filter: St
   return Number(numAffectedRows ?? 0);
 }
 
-/** Bookings that wait for their check, longest first. */
+/** Bookings that wait for a check and whose time has come: the soonest scan first, what is past last. */
 export async function listStale(trx: SiteTransaction, siteId: string, now: Date, limit: number): Promise<string[]> {
-  const rows = await trx
-    .selectFrom('booking_state')
-    .select('booking_id')
-    .where('site_id', '=', siteId)
-    .where('stale', '=', 1)
-    .where('recheck_at', '<=', now)
-    .orderBy('recheck_at')
-    .orderBy('booking_id')
-    .limit(limit)
-    .execute();
+  const { rows } = await sql<{ booking_id: string }>`
+    select s.booking_id
+    from booking_state s
+    join booking b on b.site_id = s.site_id and b.id = s.booking_id
+    where s.site_id = ${siteId} and s.stale = 1 and s.recheck_at <= ${now}
+    order by b.scheduled_at < ${now}, b.scheduled_at, s.booking_id
+    limit ${limit}`.execute(trx);
   return rows.map((row) => row.booking_id);
 }
 

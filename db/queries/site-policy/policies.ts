@@ -12,12 +12,14 @@ export async function findPolicy(trx: SiteTransaction, siteId: string, version?:
   if (version !== undefined) query = query.where('version', '=', version);
   const row = await query.executeTakeFirst();
   if (!row) return null;
+  const { policy, pathway } = readPolicyDocument(row.data);
   return {
     siteId: row.site_id,
     version: row.version,
     changedAt: row.created_at,
     // The row's number is the one that counts, whatever the document was written with.
-    policy: { ...readPolicyDocument(row.data).policy, version: row.version },
+    policy: { ...policy, version: row.version },
+    pathway,
   };
 }
 

@@ -1,4 +1,6 @@
 import type { SitePolicy } from '@/lib/domain/case/model';
+import { policyForExam, type KeepClearRequestDocument } from '@/lib/domain/keep-clear-request/document';
+import type { PathwayPolicy } from '@/lib/domain/site-policy/document';
 import { composePatient } from '@/lib/domain/size-reading/compose-patient';
 import { QUANTITY_FACTS, type SizeQuantity } from '@/lib/domain/size-reading/quantities';
 import type { SizeReading } from '@/lib/domain/size-reading/size-reading';
@@ -8,9 +10,6 @@ import { currentReadings, type CurrentReadings } from './current-readings';
 import { nextAction } from './next-action';
 import { resultRank, worstResult, type Alternative, type Finding, type PreCheck, type ScannerCheck } from './result';
 import { sessionStanding, type Session } from './room';
-
-/** Positioning, coils and pauses, minutes (common practice, no source); said wherever minutes are shown. */
-export const SET_UP_MINUTES = 10;
 
 export interface PreCheckQuestion {
   readonly booking: {
@@ -25,6 +24,9 @@ export interface PreCheckQuestion {
   readonly others: readonly CheckedScanner[];
   readonly protocol: CheckedProtocol;
   readonly policy: SitePolicy;
+  readonly pathway: PathwayPolicy;
+  /** What a radiologist asked to be kept free of fold in this exam, and how much beside it is tolerated. */
+  readonly request?: Pick<KeepClearRequestDocument, 'keepClear' | 'keepClearPreset' | 'toleratedFoldOutsidePct'>;
   readonly plan?: CheckedPlan;
   /** Sessions of the booked scanner on the booked day. */
   readonly sessions: readonly Session[];
@@ -32,9 +34,16 @@ export interface PreCheckQuestion {
 
 const round = (minutes: number): number => Math.round(minutes * 10) / 10;
 
+/** The protocol with the keep-clear area that was asked for in place of its own. */
+const keepingClear = (protocol: CheckedProtocol, { keepClear, keepClearPreset }: NonNullable<PreCheckQuestion['request']>): CheckedProtocol => ({
+  ...protocol, document: { ...protocol.document, keepClear, keepClearPreset },
+});
+
 /** The booking on any of the site's scanners, as far as its own sizes say. */
 export function checkBookingOn(question: PreCheckQuestion, scanner: CheckedScanner, probabilities: boolean): ScannerCheck {
-  const { booking, policy, protocol } = question;
+  const { booking, request } = question;
+  const policy = policyForExam(question.policy, request?.toleratedFoldOutsidePct);
+  const protocol = request ? keepingClear(question.protocol, request) : question.protocol;
   const { current } = countingReadings(question);
   const composed = composePatient({
     readings: current,
@@ -65,13 +74,13 @@ export function standingOf(check: ScannerCheck): Alternative {
 }
 
 function slotFindings(question: PreCheckQuestion, scanMinutes: number): Finding[] {
-  const { booking, sessions, scanner } = question;
+  const { booking, sessions, scanner, pathway: { setUpMinutes } } = question;
   const findings: Finding[] = [];
-  const needed = round(scanMinutes + SET_UP_MINUTES);
+  const needed = round(scanMinutes + setUpMinutes);
   if (scanMinutes > 0 && needed > booking.slotMinutes) {
     findings.push({
       subject: 'minutes', code: 'slot-too-short', calls: 'plan-needed',
-      text: `${needed} min needed (${round(scanMinutes)} scan, ${SET_UP_MINUTES} set-up), ${booking.slotMinutes} booked.`,
+      text: `${needed} min needed (${round(scanMinutes)} scan, ${setUpMinutes} set-up), ${booking.slotMinutes} booked.`,
     });
   }
   if (sessionStanding({ startsAt: booking.scheduledAt, minutes: booking.slotMinutes }, sessions) === 'outside') {
@@ -95,7 +104,7 @@ function lapsedFindings({ lapsed }: CurrentReadings, findings: readonly Finding[
 }
 
 function basisOf(question: PreCheckQuestion, { current }: CurrentReadings): string[] {
-  const { scanner, protocol, policy, plan, sessions } = question;
+  const { scanner, protocol, policy, plan, sessions, request } = question;
   const names = [...new Set(current.map(({ quantity }) => QUANTITY_FACTS[quantity].label))];
   const { limitsOwner, limitsCheckedOn } = scanner.document;
   return [
@@ -103,6 +112,7 @@ function basisOf(question: PreCheckQuestion, { current }: CurrentReadings): stri
     `${scanner.document.scanner.name}, version ${scanner.version}, limits by ${limitsOwner || 'nobody'}, ${limitsCheckedOn || 'no date'}`,
     `${protocol.document.name}, version ${protocol.version}; site policy, version ${policy.version}; sure at ${Math.round(policy.sureAt * 100)} %`,
     planCounts(plan, scanner.id) ? `The plan ${plan.state}, version ${plan.version}` : 'The protocol as booked',
+    ...(request ? ['The keep-clear area a radiologist asked for'] : []),
     sessions.length === 0 ? 'Room unknown: no session of this scanner is entered for the day' : 'Sessions of the day as entered',
   ];
 }
@@ -130,7 +140,7 @@ export function preCheck(question: PreCheckQuestion): PreCheck {
       ? [{ subject: 'limits' as const, code: 'no-scanner-left', calls: 'escalate' as const, text: 'No scanner of this site is left: a lead decides.' }]
       : []),
   ].sort((a, b) => resultRank(b.calls) - resultRank(a.calls));
-  const minutesNeeded = booked.sequences.length > 0 ? round(booked.scanMinutes + SET_UP_MINUTES) : 0;
+  const minutesNeeded = booked.sequences.length > 0 ? round(booked.scanMinutes + question.pathway.setUpMinutes) : 0;
   return {
     result,
     findings,

@@ -1,7 +1,7 @@
 import type { SiteTransaction } from '@/db/client';
 import { listTaken } from '@/db/queries/move-proposal/move-proposals';
 import { listSessions } from '@/db/queries/scanner-session/scanner-sessions';
-import { checkBookingOn, SET_UP_MINUTES, standingOf } from '@/lib/domain/pre-check/pre-check';
+import { checkBookingOn, standingOf } from '@/lib/domain/pre-check/pre-check';
 import { freeSlots, freeSpans, type Session } from '@/lib/domain/pre-check/room';
 import type { Suggestion, Suggestions } from '@/lib/schemas/move-proposal';
 import type { CheckSetup } from '../pre-check/read-question';
@@ -21,7 +21,7 @@ export function searchSpan(scheduledAt: Date, now: Date): { readonly from: Date;
 /** Scan and set-up on whole five minutes, never shorter than what is booked. */
 export function slotFor(setup: CheckSetup): number {
   const { scanMinutes } = checkBookingOn(setup.question, setup.question.scanner, false);
-  const needed = scanMinutes > 0 ? Math.ceil((scanMinutes + SET_UP_MINUTES) / 5) * 5 : 0;
+  const needed = scanMinutes > 0 ? Math.ceil((scanMinutes + setup.question.pathway.setUpMinutes) / 5) * 5 : 0;
   return Math.min(480, Math.max(setup.booking.slotMinutes, needed));
 }
 

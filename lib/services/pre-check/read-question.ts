@@ -1,5 +1,6 @@
 import type { SiteTransaction } from '@/db/client';
 import { findBooking, type BookingOverview } from '@/db/queries/booking/bookings';
+import { findKeepClearRequest } from '@/db/queries/keep-clear-request/keep-clear-requests';
 import { findPlanOfBooking } from '@/db/queries/plan/plans';
 import { findProtocol } from '@/db/queries/protocol/protocols';
 import { listSessions } from '@/db/queries/scanner-session/scanner-sessions';
@@ -7,6 +8,7 @@ import { listScanners } from '@/db/queries/scanner/scanners';
 import { findPolicy } from '@/db/queries/site-policy/policies';
 import { listSizeReadings } from '@/db/queries/size-reading/size-readings';
 import { ServiceError } from '@/lib/domain/errors';
+import type { KeepClearRequestDocument } from '@/lib/domain/keep-clear-request/document';
 import type { PreCheckQuestion } from '@/lib/domain/pre-check/pre-check';
 import { effectivePolicy } from '../site-policy/effective-policy';
 import { dayOf } from './day-of';
@@ -17,7 +19,10 @@ export interface CheckSetup {
   readonly policyVersion: number;
 }
 
-/** Everything a check rests on, in its newest versions: seven queries, whatever the site holds. */
+/** Its note and who asked are no part of the question: they change no answer. */
+const askedFor = ({ keepClear, keepClearPreset, toleratedFoldOutsidePct }: KeepClearRequestDocument) => ({ keepClear, keepClearPreset, toleratedFoldOutsidePct });
+
+/** Everything a check rests on, in its newest versions: eight queries, whatever the site holds. */
 export async function readQuestion(trx: SiteTransaction, siteId: string, bookingId: string): Promise<CheckSetup | null> {
   const booking = await findBooking(trx, siteId, bookingId);
   if (!booking) return null;
@@ -27,6 +32,7 @@ export async function readQuestion(trx: SiteTransaction, siteId: string, booking
   // Foreign keys hold both; without them nothing could be checked.
   if (!scanner || !protocol) throw new ServiceError('not-found');
   const policy = effectivePolicy(await findPolicy(trx, siteId));
+  const request = await findKeepClearRequest(trx, siteId, bookingId);
   const readings = await listSizeReadings(trx, siteId, bookingId);
   const plan = await findPlanOfBooking(trx, siteId, bookingId);
   const sessions = await listSessions(trx, siteId, { ...dayOf(booking.scheduledAt), scannerId: scanner.id });
@@ -40,7 +46,9 @@ export async function readQuestion(trx: SiteTransaction, siteId: string, booking
       others: scanners.filter(({ id, archivedAt }) => id !== scanner.id && archivedAt === null),
       protocol,
       policy: policy.policy,
+      pathway: policy.pathway,
       sessions: sessions.map(({ startsAt, endsAt }) => ({ startsAt, endsAt })),
+      ...(request ? { request: askedFor(request.document) } : {}),
       ...(plan ? { plan: { state: plan.state, version: plan.version, document: plan.document } } : {}),
     },
   };

@@ -22,10 +22,11 @@ export async function editPolicy(context: ServiceContext, input: unknown): Promi
     if (before.version !== expectedVersion) throw staleVersion(before.version);
     const version = expectedVersion + 1;
     const { version: _counted, ...was } = before.policy;
-    const fields = changedFields(was, form);
+    const { setUpMinutes, ...policy } = form;
+    const fields = changedFields({ ...was, ...before.pathway }, form);
     if (fields.length === 0) return before;
     const added = await addPolicyVersion(trx, {
-      siteId, version, document: { schemaVersion: 1, policy: { ...form, version } }, createdBy: authorOf(actor),
+      siteId, version, document: { schemaVersion: 2, policy: { ...policy, version }, pathway: { setUpMinutes } }, createdBy: authorOf(actor),
     });
     const after = await findPolicy(trx, siteId);
     if (!added) throw staleVersion(after?.version ?? version);

@@ -20,7 +20,10 @@ const KINDS: Readonly<Record<string, (stored: unknown) => boolean>> = {
   scanner: (stored) => scannerSchema.safeParse(readScannerDocument(stored).scanner).success,
   protocol: (stored) => keepClearSchema.safeParse(readProtocolDocument(stored).keepClear).success,
   sequence: (stored) => prescriptionSchema.safeParse(readSequenceDocument(stored).prescription).success,
-  policy: (stored) => policySchema.safeParse(readPolicyDocument(stored).policy).success,
+  policy: (stored) => {
+    const { policy, pathway } = readPolicyDocument(stored);
+    return policySchema.safeParse(policy).success && pathway.setUpMinutes >= 10;
+  },
   plan: (stored) => {
     const { patient, keepClear, sequences } = readPlanDocument(stored);
     return (

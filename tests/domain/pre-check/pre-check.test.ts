@@ -139,4 +139,27 @@ describe('whatever the sizes', () => {
     expect(check.result).toBe('escalate');
     expect(codes(check)).toContain('over-table-limit');
   });
+
+  it('set-up is what the site says it is', () => {
+    const booking = { slotMinutes: 15 };
+    const without = preCheck(preCheckQuestion({ booking, pathway: { setUpMinutes: 0 } }));
+    const long = preCheck(preCheckQuestion({ booking, pathway: { setUpMinutes: 30 } }));
+    expect(without).toMatchObject({ result: 'as-booked', minutesOver: 0 });
+    expect(long.minutesNeeded).toBeCloseTo(without.minutesNeeded + 30, 6);
+    expect(long).toMatchObject({ result: 'plan-needed', next: { kind: 'propose-time' }, minutesOver: Math.round((long.minutesNeeded - 15) * 10) / 10 });
+    expect(long.findings.find(({ code }) => code === 'slot-too-short')!.text).toContain('30 set-up');
+  });
+
+  it('the radiologist’s area and tolerance for this exam go before the protocol’s and the policy’s', () => {
+    // In the protocol's whole picture this window folds; a small box in the middle stays free of it.
+    const narrow = checkedProtocol([wide({ fovPhaseMm: 230 })]);
+    const box = { keepClear: { area: { kind: 'box' as const, box: { xMm: [-5, 5], yMm: [-5, 5], zMm: [-300, 300] } as const }, followsWindow: false }, keepClearPreset: 'own' };
+    const protocols = preCheck(preCheckQuestion({ protocol: narrow }));
+    const tolerant = preCheck(preCheckQuestion({ protocol: narrow, request: { ...box, toleratedFoldOutsidePct: null } }));
+    const strict = preCheck(preCheckQuestion({ protocol: narrow, request: { ...box, toleratedFoldOutsidePct: 0 } }));
+    expect(protocols.booked.sequences[0]!.verdict).toBe('fold-in-keep-clear');
+    expect(tolerant).toMatchObject({ result: 'as-booked', booked: { sequences: [{ verdict: 'fold-outside-keep-clear' }] } });
+    expect(strict.findings.map(({ subject }) => subject)).toContain('fold');
+    expect(tolerant.basis).toContain('The keep-clear area a radiologist asked for');
+  });
 });
