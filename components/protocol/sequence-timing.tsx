@@ -28,6 +28,7 @@ export function TimingGroup({ at, refused }: GroupProps) {
     'echoSpacingMs',
     'shots',
     'volumes',
+    'fatDisplacedTowards',
     'sliceTimeMs',
     'preparationMs',
     'segments',
@@ -89,6 +90,17 @@ export function TimingGroup({ at, refused }: GroupProps) {
               schema={shape.volumes}
               label="Images acquired"
               hint="Sum over b-values of directions × averages"
+            />
+            <FormSelect
+              name={`${at}.fatDisplacedTowards`}
+              label="EPI displaces fat towards"
+              hint="Not known: both ends are taken"
+              placeholder="not known"
+              optional
+              options={[
+                { value: 'low-end', label: 'the right, front or foot end' },
+                { value: 'high-end', label: 'the left, back or head end' },
+              ]}
             />
           </>
         )}

@@ -18,7 +18,8 @@ export function describePiece(piece: PieceDrawing): string {
   const along = piece.order === 0 ? 'along the slab' : `on the ${OPPOSITE[piece.side]} side`;
   const area = piece.inKeepClear.length > 0 ? 'in the keep-clear area' : 'outside the keep-clear area';
   const order = Math.abs(piece.order) > 1 ? ` It has folded ${Math.abs(piece.order)} times.` : '';
-  return `${capital(piece.part)} tissue from the ${piece.side} side lands ${along}, ${where}, ${area}.${order}`;
+  const what = piece.fatDisplacedMm === undefined ? 'tissue' : `fat, displaced ${Math.round(Math.abs(piece.fatDisplacedMm))} mm by EPI,`;
+  return `${capital(piece.part)} ${what} from the ${piece.side} side lands ${along}, ${where}, ${area}.${order}`;
 }
 
 export function describeGhost(ghost: GhostDrawing): string {

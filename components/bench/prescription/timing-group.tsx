@@ -8,10 +8,16 @@ import { BenchChoice, optionsOf } from '../bench-choice';
 import { BenchFlag } from '../bench-flag';
 import { BenchNumber } from '../bench-number';
 import { Group, Pair, type GroupProps } from './group';
+import { OptionalChoice } from './optional-value';
 
 const FAMILY_OPTIONS = optionsOf<SequenceFamily>(FAMILY_WORDS);
 /** Families with a train of echoes, of which one echo is a train too. */
 const TRAINS: readonly SequenceFamily[] = ['echo-train-spin-echo', 'single-shot-echo-train', 'echo-train-spin-echo-3d'];
+const PHASE_ENDS = {
+  RL: { 'low-end': 'right', 'high-end': 'left' },
+  AP: { 'low-end': 'anterior', 'high-end': 'posterior' },
+  SI: { 'low-end': 'inferior', 'high-end': 'superior' },
+} as const;
 const BREATHING = { free: 'free', 'breath-hold': 'breath-hold', triggered: 'triggered' } as const;
 
 export function TimingGroup({ prescription: p, ...panel }: GroupProps) {
@@ -38,6 +44,9 @@ export function TimingGroup({ prescription: p, ...panel }: GroupProps) {
         {slab && <BenchNumber path="segments" schema={prescriptionShape.segments} label="Segments" sliderMax={200} />}
         {p.breathing === 'triggered' && <BenchNumber path="breathsPerTr" schema={prescriptionShape.breathsPerTr} label="Breaths" />}
       </Pair>
+      {planar && (
+        <OptionalChoice path="fatDisplacedTowards" value={p.fatDisplacedTowards} label="EPI displaces fat to" options={PHASE_ENDS[p.phaseAxis]} unknownLabel="not known: both ends" />
+      )}
       <BenchFlag path="fatSuppressed" label="Fat suppressed" />
     </Group>
   );

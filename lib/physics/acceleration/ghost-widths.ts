@@ -11,8 +11,11 @@ import type { AxisMargin } from '../fold/section-margin';
  *   (a − l)/M < W < (b − k)/M        the ghost meets keep-clear
  *   W < 2(b − c)                     some tissue lies beyond the acquired width
  *   (M − ½)·W > c − l                it does so for the same p
+ * With fat displaced by κW before it is unfolded (EPI), p + κW takes the place of p: (a − l)/(M − κ) < W < (b − k)/(M − κ)
+ * (the other way round where κ > M), (½ − κ)·W < b − c, and the third line as it stands.
  * All boundaries are straight in W and stay in the curve family in r; the set is convex in (r, W), so its extent in W
  * over all rows is one open interval with closed-form ends. Tissue at the low side: mirror phase first.
+ * @param share  κ of displaced fat, positive towards the high side
  * Source: derived; rule from [griswold-2004], [goldfarb-2004].
  */
 export function ghostWidths(
@@ -21,12 +24,13 @@ export function ghostWidths(
   margin: AxisMargin,
   centreMm: number,
   multiple: number,
+  share = 0,
 ): Interval | undefined {
   let low = Infinity;
   let high = -Infinity;
   for (const a of tissue) {
     for (const k of clear) {
-      for (const band of widthBands(a, k, margin, centreMm, multiple)) {
+      for (const band of widthBands(a, k, margin, centreMm, multiple, share)) {
         low = Math.min(low, minOn(band.lower, band.r0, band.r1));
         high = Math.max(high, maxOn(band.upper, band.r0, band.r1));
       }
@@ -42,14 +46,29 @@ function widthBands(
   margin: AxisMargin,
   centre: number,
   multiple: number,
+  share: number,
 ): RowBand[] {
   let r0 = Math.max(tissue.r0, clear.r0);
   let r1 = Math.min(tissue.r1, clear.r1);
   if (!(r1 - r0 > TOUCH_MM)) return [];
   const bottom = affine(tissue.lower, 1, -margin[0]);
   const top = affine(tissue.upper, 1, margin[1]);
-  const lowers: Curve[] = [difference(bottom, clear.upper, 1 / multiple), affine(clear.upper, 0, 0)];
-  const uppers: Curve[] = [difference(top, clear.lower, 1 / multiple), affine(top, 2, -2 * centre)];
+  const moved = multiple - share;
+  const beyond = 1 / Math.max(0.5 - share, NOTHING);
+  const lowers: Curve[] = [affine(clear.upper, 0, 0)];
+  const uppers: Curve[] = [affine(top, beyond, -centre * beyond)];
+  if (Math.abs(moved) > NOTHING) {
+    const nearest = difference(bottom, clear.upper, 1 / moved);
+    const farthest = difference(top, clear.lower, 1 / moved);
+    lowers.unshift(moved > 0 ? nearest : farthest);
+    uppers.unshift(moved > 0 ? farthest : nearest);
+  } else {
+    // The ghost lies on the tissue itself, whatever W: only in rows where that lies in keep-clear.
+    const overlap = bandsBetween([bottom, clear.lower], [top, clear.upper], r0, r1);
+    if (overlap.length === 0) return [];
+    r0 = overlap[0]!.r0;
+    r1 = overlap.at(-1)!.r1;
+  }
   const beyondHalf = multiple - 0.5;
   if (beyondHalf > 1e-12) {
     lowers.push(affine(clear.upper, -1 / beyondHalf, centre / beyondHalf));
@@ -68,6 +87,9 @@ function widthBands(
   }
   return bandsBetween(lowers, uppers, r0, r1);
 }
+
+/** A share of W so small that it moves nothing by a nanometre at any width. */
+const NOTHING = 1e-9;
 
 /** factor·(curve − line). */
 function difference(curve: Curve, line: Curve, factor: number): Curve {

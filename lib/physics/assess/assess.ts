@@ -146,6 +146,7 @@ export function assessChecked(
   const fold = solved.leftover(p.acquiredLines, partitions);
   const slab = slabResultOf(seen);
   const gap = gapReason(given, width, fold);
+  const fatShare = solved.problem.fatShares?.[0];
   const verdict = verdictOf(hard, fold, slab, gap);
   return {
     ...common,
@@ -158,6 +159,7 @@ export function assessChecked(
       fold,
       ...(slab === undefined ? {} : { slab }),
       keepClearIsDisplayed: solved.keepClearIsDisplayed,
+      ...(fatShare === undefined ? {} : { fatShare: Math.abs(fatShare) }),
     }),
     assumptions: withAssumptions ? assumptionsFor(given) : [],
     sampling: samplingOf(p),

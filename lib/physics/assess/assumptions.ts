@@ -5,6 +5,8 @@ import type { Case } from '../model/case';
 import type { Reading, ReadingSource } from '../model/patient';
 import { isAccelerated, unfoldingOf, withUnfolding } from './resolve-unfolding';
 import { solveClass, type FrozenCase } from './geometry-class';
+import { fatShares } from '../fold/fat-shares';
+import { acquiredWidthMmOf } from '../sequence/displacement';
 import { figure } from './words';
 
 const NOT_MEASURED: readonly ReadingSource[] = [
@@ -110,6 +112,29 @@ function slabAssumptions({ prescription: p, policy }: Case): Assumption[] {
   return assumptions;
 }
 
+/** Which way fat goes in EPI, and that suppression is not trusted outside the picture. */
+function displacementAssumptions({ prescription: p, scanner }: Case): Assumption[] {
+  const shares = fatShares(p, scanner.fieldStrengthT);
+  if (shares.length === 0) return [];
+  const mm = figure(Math.abs(shares[0]!) * acquiredWidthMmOf(p));
+  const assumptions: Assumption[] = [];
+  if (p.fatDisplacedTowards === undefined) {
+    assumptions.push({
+      field: 'prescription.fatDisplacedTowards',
+      used: 'both ends',
+      text: `Which way this EPI displaces fat is unknown: ${mm} mm to either end is taken. Knowing it would ask for less at one end.`,
+    });
+  }
+  if (p.fatSuppressed) {
+    assumptions.push({
+      field: 'prescription.fatSuppressed',
+      used: 'bright outside',
+      text: 'Fat suppression is tuned inside the picture: the rim of fat that folds counts at full brightness.',
+    });
+  }
+  return assumptions;
+}
+
 /**
  * Everything that stood in for something unknown, with what knowing it would change.
  * @param given sizes as recorded (not yet taken at the policy's certainty)
@@ -135,6 +160,7 @@ export function assumptionsFor(given: FrozenCase): readonly Assumption[] {
       : []),
     ...unfoldingAssumption(given),
     ...slabAssumptions(given),
+    ...displacementAssumptions(given),
     {
       field: 'prescription.coil',
       used: 'every weight 1',

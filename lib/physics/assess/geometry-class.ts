@@ -85,7 +85,9 @@ function prescriptionKey(p: Prescription): string {
     bands,
     p.coil,
     p.coilElements?.join('/'),
-    p.family === 'echo-planar' ? `${p.echoSpacingMs}/${p.shots}/${p.fatSuppressed}` : '',
+    p.family === 'echo-planar'
+      ? `${p.echoSpacingMs}/${p.shots}/${a.factorPhase}/${p.fatDisplacedTowards ?? ''}`
+      : '',
   ].join('|');
 }
 

@@ -12,8 +12,12 @@ import {
   squareCentimetres,
 } from './words';
 
-/** "Posterior tissue": the trunk goes by its side, every other part by its name. */
+/** "Posterior tissue": the trunk goes by its side, every other part by its name; fat that EPI displaced is named so. */
 function intruder(from: NonNullable<FoldResult['from']>): string {
+  if (from.fatDisplacedMm !== undefined) {
+    const whose = from.part === 'trunk' ? `on the ${from.side} side` : `of the ${from.part}`;
+    return `Fat ${whose}, displaced ${millimetres(from.fatDisplacedMm)} by EPI,`;
+  }
   return from.part === 'trunk' ? capitalised(`${from.side} tissue`) : `Tissue of the ${from.part}`;
 }
 
@@ -47,6 +51,15 @@ function foldOutsideReason(fold: FoldResult): Reason {
   return {
     code: 'fold-outside-keep-clear',
     text: `${where} outside the keep-clear area: ${share} of the picture.`,
+  };
+}
+
+/** EPI: how far fat is seen from its place, which by itself is not fold. */
+function displacedReason(p: Prescription, fatShare: number): Reason {
+  const mm = millimetres((fatShare * p.acquiredLines * p.fovPhaseMm) / p.linesAcrossFov);
+  return {
+    code: 'fat-displaced',
+    text: `EPI shows fat ${mm} from its place along ${AXIS_LETTERS[p.phaseAxis]}: displacement, counted as fold only where it leaves by one edge and comes in by the other.`,
   };
 }
 
@@ -109,6 +122,8 @@ export interface ReasonInputs {
   readonly fold?: FoldResult;
   readonly slab?: SlabResult;
   readonly keepClearIsDisplayed: boolean;
+  /** Share of the acquired width by which EPI displaces fat, > 0; absent: nothing is displaced. */
+  readonly fatShare?: number;
 }
 
 /** The sentences beside the verdict, the deciding one first. */
@@ -119,6 +134,7 @@ export function reasonsFor({
   fold,
   slab,
   keepClearIsDisplayed,
+  fatShare,
 }: ReasonInputs): readonly Reason[] {
   const reasons: Reason[] = [...hard];
   const slabInside = (slab?.contaminatedInKeepClear ?? 0) > 0;
@@ -132,6 +148,7 @@ export function reasonsFor({
     const folds = fold !== undefined && (fold.inKeepClear || fold.outsideKeepClear);
     reasons.push(folds ? enoughReason(prescription, width) : noFoldReason(prescription, width));
   }
+  if (fatShare !== undefined) reasons.push(displacedReason(prescription, fatShare));
   if (!keepClearIsDisplayed) {
     reasons.push({
       code: 'keep-clear-not-displayed',

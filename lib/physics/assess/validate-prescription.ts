@@ -81,6 +81,8 @@ function validateTiming(p: Prescription): void {
   requireWhole('prescription.echoTrainLength', p.echoTrainLength, 1, 4096);
   requireBetween('prescription.echoSpacingMs', p.echoSpacingMs, 0, 1000, 'ms');
   requireWhole('prescription.shots', p.shots, 1, 1024);
+  if (p.fatDisplacedTowards !== undefined)
+    requireOneOf('prescription.fatDisplacedTowards', p.fatDisplacedTowards, ['low-end', 'high-end']);
   requireWhole('prescription.volumes', p.volumes, 1, 10_000);
   requireBetween('prescription.bandwidthHzPerPixel', p.bandwidthHzPerPixel, 1, 20_000, 'Hz');
   requireBetween('prescription.sliceTimeMs', p.sliceTimeMs, 0, 60_000, 'ms');

@@ -10,11 +10,13 @@ import { NO_MARGIN } from './section-margin';
 import { overSliceMargin, sectionAt, type TissueSolid } from './tissue-sections';
 
 /**
- * Aliases that move tissue by i·W/factor along phase, i whole: they reach the target when i·W/factor lies in `moves`.
+ * Aliases that move tissue by (i/factor + share)·W along phase, i whole: they reach the target when that lies in `moves`.
  */
 export interface Lattice {
   readonly moves: Interval;
   readonly solid: number;
+  /** −κ of fat displaced in EPI (tissue that was displaced to larger coordinates moves less towards smaller ones); else 0. */
+  readonly share: number;
   /** j: the tissue lies j·W_z along the slab from where it lands; 0 in its own section. */
   readonly sliceOrder: number;
   readonly factor: number;
@@ -29,6 +31,8 @@ export interface Ghost {
   readonly end: 'low' | 'high';
   /** m along the slab, in units of W_z/R_z. */
   readonly sliceMultiple: number;
+  /** κ of fat displaced in EPI, positive towards the end the tissue lies at; else 0. */
+  readonly share: number;
 }
 
 /** Everything that can reach a target at one slice sampling. */
@@ -64,6 +68,7 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
   const margin = withMargin ? sections.margin : NO_MARGIN;
   const fov = problem.prescription.fovPhaseMm;
   const ghosting = rule.kind === 'grid-ends';
+  const shares = sharesSeen(problem);
   const lattices: Lattice[] = [];
   const ghosts: Ghost[] = [];
 
@@ -89,7 +94,9 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
       visit((one, source, evaluate) => overSliceMargin(one, source.sMm, NO_MARGIN.slice, evaluate));
     }
     visit(reach);
-    for (const moves of merged) lattices.push({ moves, solid, sliceOrder: sources[0]!.index, factor });
+    for (const moves of merged)
+      for (const share of shares)
+        lattices.push({ moves, solid, share: 0 - share, sliceOrder: sources[0]!.index, factor });
   };
 
   const addGhosts = (solid: number, sources: readonly Source[]) => {
@@ -100,21 +107,29 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
       const mirrored = mirrorPhase(clear);
       const phase = margin.phase;
       const sides = [
-        ['high', (bands: readonly RowBand[], m: number) => ghostWidths(bands, clear, phase, centre, m)],
+        [
+          'high',
+          (bands: readonly RowBand[], m: number, share: number) =>
+            ghostWidths(bands, clear, phase, centre, m, share),
+        ],
         [
           'low',
-          (bands: readonly RowBand[], m: number) =>
-            ghostWidths(mirrorPhase(bands), mirrored, mirrorMargin(phase), -centre, m),
+          (bands: readonly RowBand[], m: number, share: number) =>
+            ghostWidths(mirrorPhase(bands), mirrored, mirrorMargin(phase), -centre, m, share),
         ],
       ] as const;
       const moves = reach(tissue, source, (bands) => displacements(bands, clear, phase));
       if (!moves) return;
       for (const [end, widthsFor] of sides) {
         const farthest = end === 'high' ? moves[1] : -moves[0];
-        for (let m = 1; (farthest * rule.factorPhase) / m > fov; m++) {
-          const multiple = m / rule.factorPhase;
-          const widths = reach(tissue, source, (bands) => widthsFor(bands, multiple));
-          if (widths) ghosts.push({ widths, solid, multiple, end, sliceMultiple: source.index });
+        for (const towardsHigh of shares) {
+          const share = end === 'high' ? towardsHigh : 0 - towardsHigh;
+          const offset = share * rule.factorPhase;
+          for (let m = 1; m <= offset || (farthest * rule.factorPhase) / (m - offset) > fov; m++) {
+            const multiple = m / rule.factorPhase;
+            const widths = reach(tissue, source, (bands) => widthsFor(bands, multiple, share));
+            if (widths) ghosts.push({ widths, solid, multiple, end, share, sliceMultiple: source.index });
+          }
         }
       }
     });
@@ -147,6 +162,12 @@ export function aliasFamily(question: FamilyQuestion): AliasFamily {
   }
   return { lattices, ghosts, slabTooThin, widths: forbidden(lattices, ghosts, slabTooThin, fov) };
 }
+
+const UNDISPLACED: readonly number[] = [0];
+
+/** κ of everything that is seen: water in its place, and fat where EPI displaces it. */
+export const sharesSeen = ({ fatShares = [] }: FoldProblem): readonly number[] =>
+  fatShares.length === 0 ? UNDISPLACED : [...UNDISPLACED, ...fatShares];
 
 /** Visits every source; of those where an unvarying solid meets the same target outline, only the first. */
 function forDistinct(
@@ -304,10 +325,10 @@ function forbidden(
 ): WidthSet {
   if (slabTooThin) return EVERY_WIDTH;
   const pairs: number[] = [];
-  for (const { moves, factor, sliceOrder } of lattices) {
+  for (const { moves, factor, share, sliceOrder } of lattices) {
     // Along the slab, tissue that needs no move in phase reaches the target at every width.
     if (sliceOrder !== 0 && toMicrometres(moves[0]) < 0 && toMicrometres(moves[1]) > 0) return EVERY_WIDTH;
-    appendForbidden(moves, factor, fov, pairs);
+    appendForbidden(moves, factor, share, fov, pairs);
   }
   for (const { widths } of ghosts) if (widths[1] > fov) appendInterval(widths[0], widths[1], pairs);
   return mergeWidths(pairs);

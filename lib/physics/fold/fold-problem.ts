@@ -5,6 +5,7 @@ import type { Case } from '../model/case';
 import type { SolidPart } from '../model/patient';
 import type { Prescription } from '../model/prescription';
 import type { LineStep } from '../model/scanner';
+import { fatShares } from './fat-shares';
 
 /** Where the scanner maps tissue rightly, patient coordinates: an elliptic cylinder along z about the isocentre. */
 export interface UsableVolume {
@@ -41,6 +42,8 @@ export interface FoldProblem {
   readonly presaturatedT1Ms: readonly number[];
   /** True over nominal flip angle of presaturation bands. */
   readonly presaturationB1Scale: number;
+  /** Shares of the acquired width by which EPI displaces fat (see fatShares); absent: nothing is displaced. */
+  readonly fatShares?: readonly number[];
 }
 
 /**
@@ -87,6 +90,7 @@ export function foldProblem(question: Case, changes: Partial<FoldProblem> = {}):
       : 1,
     presaturatedT1Ms: [policy.tissueT1Ms.parenchyma, policy.tissueT1Ms.fat],
     presaturationB1Scale: 1,
+    fatShares: fatShares(prescription, scanner.fieldStrengthT),
     ...changes,
   };
 }

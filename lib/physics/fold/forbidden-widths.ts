@@ -8,18 +8,33 @@ export type WidthSet = readonly number[];
 export const EVERY_WIDTH: WidthSet = [0, Infinity];
 
 /**
- * Widths W ≥ `fromMm` at which some non-zero whole multiple of W/R lies in the displacement interval: for each n the
- * interval divided by n/R. Appends pairs to `into` (µm).
+ * Widths W ≥ `fromMm` at which (n/R + κ)·W lies in the displacement interval for some whole n ≠ 0: for each n the
+ * interval divided by n/R + κ. Appends pairs to `into` (µm).
+ * @param share  κ, between −1/R and 1/R (n/R + κ keeps the sign of n): see fatShares; 0 where nothing is displaced
  */
-export function appendForbidden(interval: Interval, factor: number, fromMm: number, into: number[]): void {
-  appendOneSign(interval[0], interval[1], factor, fromMm, into);
-  appendOneSign(-interval[1], -interval[0], factor, fromMm, into);
+export function appendForbidden(
+  interval: Interval,
+  factor: number,
+  share: number,
+  fromMm: number,
+  into: number[],
+): void {
+  const offset = share * factor;
+  appendOneSign(interval[0], interval[1], factor, offset, fromMm, into);
+  appendOneSign(-interval[1], -interval[0], factor, -offset, fromMm, into);
 }
 
-function appendOneSign(low: number, high: number, factor: number, from: number, into: number[]): void {
+function appendOneSign(
+  low: number,
+  high: number,
+  factor: number,
+  offset: number,
+  from: number,
+  into: number[],
+): void {
   // Past n = factor·high/from the interval lies below the widths asked for.
-  for (let n = 1; (high * factor) / n > from; n++) {
-    appendInterval((low * factor) / n, (high * factor) / n, into);
+  for (let n = 1; (high * factor) / (n + offset) > from; n++) {
+    appendInterval((low * factor) / (n + offset), (high * factor) / (n + offset), into);
     // An interval that begins at or below zero holds those of every larger n.
     if (low <= 0) return;
   }

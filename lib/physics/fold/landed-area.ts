@@ -39,6 +39,7 @@ export function landedArea(
   rule: UnfoldingRule,
   widthMm: number,
   usable: UsableVolume | undefined,
+  shares: readonly number[],
 ): LandedArea {
   const { window, frame } = sections;
   const low = window.lower.offset;
@@ -46,13 +47,21 @@ export function landedArea(
   const step = rule.kind === 'grid-ends' ? widthMm / rule.factorPhase : widthMm;
   const ghosting = rule.kind === 'grid-ends';
   const edges = [frame.centrePhaseMm - widthMm / 2, frame.centrePhaseMm + widthMm / 2];
-  const breaks = breakRows(window, solids, clear, step, ghosting ? edges : []);
+  const shifts = shares.map((share) => share * widthMm);
+  const breaks = breakRows(window, solids, clear, step, ghosting ? edges : [], shifts);
 
   let displayedMm2 = 0;
   let keepClearMm2 = 0;
   let placeUncertain = false;
   const landed: Interval[] = [];
-  const land = (from: number, to: number, r: number, sMm: number, everyOrder: boolean) => {
+  const land = (
+    from: number,
+    to: number,
+    r: number,
+    sMm: number,
+    everyOrder: boolean,
+    shift: number,
+  ) => {
     if (!(to > from)) return;
     const first = Math.ceil((from - high) / step);
     const last = Math.floor((to - low) / step);
@@ -63,7 +72,7 @@ export function landedArea(
       if (!(b > a)) continue;
       landed.push([a, b]);
       if (usable && !placeUncertain) {
-        placeUncertain = [a, b].some((p) => beyondUsable(usable, toPatient(frame, r, p + i * step, sMm)));
+        placeUncertain = [a, b].some((p) => beyondUsable(usable, toPatient(frame, r, p + i * step - shift, sMm)));
       }
     }
   };
@@ -79,12 +88,16 @@ export function landedArea(
       for (const solid of solids) {
         for (const band of solid.bands) {
           if (r <= band.r0 || r >= band.r1) continue;
-          const a = valueAt(band.lower, r);
-          const b = valueAt(band.upper, r);
-          if (!ghosting || solid.fromElsewhere) land(a, b, r, solid.sMm, solid.fromElsewhere);
-          else {
-            land(Math.max(a, edges[1]!), b, r, solid.sMm, false);
-            land(a, Math.min(b, edges[0]!), r, solid.sMm, false);
+          const lower = valueAt(band.lower, r);
+          const upper = valueAt(band.upper, r);
+          for (const shift of shifts) {
+            const a = lower + shift;
+            const b = upper + shift;
+            if (!ghosting || solid.fromElsewhere) land(a, b, r, solid.sMm, solid.fromElsewhere, shift);
+            else {
+              land(Math.max(a, edges[1]!), b, r, solid.sMm, false, shift);
+              land(a, Math.min(b, edges[0]!), r, solid.sMm, false, shift);
+            }
           }
         }
       }
@@ -125,6 +138,7 @@ function breakRows(
   clear: readonly RowBand[],
   step: number,
   edges: readonly number[],
+  shifts: readonly number[],
 ): number[] {
   const low = window.lower.offset;
   const high = window.upper.offset;
@@ -141,12 +155,12 @@ function breakRows(
   };
   const levels = [...edges];
   for (const edge of [low, high]) for (let i = -2; i <= 2; i++) if (i !== 0) levels.push(edge + i * step);
+  const lines = shifts.flatMap((shift) => levels.map((level) => straight(level - shift)));
   for (const { bands } of solids) {
     for (const band of bands) {
       add(band.r0);
       add(band.r1);
-      for (const level of levels) {
-        const line = straight(level);
+      for (const line of lines) {
         for (const curve of [band.lower, band.upper]) {
           for (const r of crossings(curve, line)) if (r > band.r0 && r < band.r1) add(r);
         }

@@ -2,7 +2,7 @@ import type { UnfoldingRule } from '../acceleration/unfolding-rule';
 import { roundToMicrometre, toMicrometres } from '../geometry/micrometres';
 import { AXIS_SIDES } from '../geometry/vector';
 import type { FoldResult } from '../model/assessment';
-import { alongSlabSources, type AliasFamily } from './alias-family';
+import { alongSlabSources, sharesSeen, type AliasFamily } from './alias-family';
 import type { DisplayedSections } from './displayed-sections';
 import type { FoldProblem } from './fold-problem';
 import { forbiddenUntilMm } from './forbidden-widths';
@@ -24,10 +24,12 @@ export interface LeftoverQuestion {
 interface Deepest {
   readonly depthMm: number;
   readonly solid: number;
-  /** Along phase, positive towards smaller coordinates: tissue came from the side of larger ones. */
+  /** Along phase, positive towards smaller coordinates. */
   readonly move: number;
   readonly order: number;
   readonly sliceOrder: number;
+  /** Fat displaced in EPI, by so much of the acquired width; 0 where nothing is displaced. */
+  readonly share: number;
 }
 
 /** The alias that reaches deepest into the target at this width. */
@@ -36,29 +38,31 @@ function deepest(family: AliasFamily, widthMm: number): Deepest | undefined {
   const offer = (candidate: Deepest) => {
     if (!best || toMicrometres(candidate.depthMm) > toMicrometres(best.depthMm)) best = candidate;
   };
-  for (const { moves, solid, sliceOrder, factor } of family.lattices) {
+  for (const { moves, solid, share, sliceOrder, factor } of family.lattices) {
     const [low, high] = moves;
     const step = widthMm / factor;
-    const from = Math.ceil(low / step);
-    const to = Math.floor(high / step);
+    const offset = share * factor;
+    const from = Math.ceil(low / step - offset);
+    const to = Math.floor(high / step - offset);
     for (let i = from; i <= to; i++) {
       if (i === 0 && sliceOrder === 0) continue;
-      const d = i * step;
+      const d = (i + offset) * step;
       if (toMicrometres(d) <= toMicrometres(low) || toMicrometres(d) >= toMicrometres(high)) continue;
       const depthMm = i > 0 ? high - d : i < 0 ? d - low : Math.min(high, -low);
-      offer({ depthMm, solid, move: d, order: i === 0 ? 0 : -i / factor, sliceOrder });
+      offer({ depthMm, solid, move: d, order: i === 0 ? 0 : -i / factor, sliceOrder, share: Math.abs(share) });
     }
   }
   const width = toMicrometres(widthMm);
-  for (const { widths, solid, multiple, end, sliceMultiple } of family.ghosts) {
+  for (const { widths, solid, multiple, end, share, sliceMultiple } of family.ghosts) {
     if (width <= toMicrometres(widths[0]) || width >= toMicrometres(widths[1])) continue;
     const sign = end === 'high' ? 1 : -1;
     offer({
-      depthMm: multiple * (widths[1] - widthMm),
+      depthMm: Math.abs(multiple - share) * (widths[1] - widthMm),
       solid,
-      move: sign * multiple * widthMm,
+      move: sign * (multiple - share) * widthMm,
       order: -sign * multiple,
       sliceOrder: sliceMultiple,
+      share: Math.abs(share),
     });
   }
   return best;
@@ -84,8 +88,9 @@ export function leftoverFold(question: LeftoverQuestion): FoldResult {
     side: sideOf(intruder, sections),
     order: intruder.order,
     distanceMm: roundToMicrometre(
-      intruder.move === 0 ? Math.abs(intruder.sliceOrder) * (slabMm ?? 0) : Math.abs(intruder.move),
+      intruder.order === 0 ? Math.abs(intruder.sliceOrder) * (slabMm ?? 0) : Math.abs(intruder.move),
     ),
+    ...(intruder.share > 0 && { fatDisplacedMm: roundToMicrometre(intruder.share * widthMm) }),
   };
   return {
     inKeepClear,
@@ -127,7 +132,7 @@ function deepestIsGhost(family: AliasFamily, widthMm: number): boolean {
 
 function sideOf(intruder: Deepest, sections: DisplayedSections) {
   const { frame } = sections;
-  if (intruder.move !== 0) return AXIS_SIDES[frame.phaseAxis][intruder.move > 0 ? 1 : 0];
+  if (intruder.order !== 0) return AXIS_SIDES[frame.phaseAxis][intruder.order < 0 ? 1 : 0];
   return AXIS_SIDES[frame.sliceAxis][intruder.sliceOrder > 0 ? 1 : 0];
 }
 
@@ -167,7 +172,7 @@ function worstAreas({ problem, sections, rule, widthMm, slabMm }: LeftoverQuesti
     for (const { solid, sMm, everyOrder } of elsewhere?.get(target) ?? []) add(solid, sMm, everyOrder);
     if (seen.has(key)) return;
     seen.add(key);
-    const area = landedArea(sections, solids, clear, rule, widthMm, problem.usable);
+    const area = landedArea(sections, solids, clear, rule, widthMm, problem.usable, sharesSeen(problem));
     const clearArea = polygonAreaMm2(clear);
     displayedMm2 = Math.max(displayedMm2, area.displayedMm2);
     keepClearMm2 = Math.max(keepClearMm2, area.keepClearMm2);

@@ -9,7 +9,7 @@ import type { PatientAxis, Vec3 } from '../model/axes';
 import type { Case } from '../model/case';
 import { DomainError } from '../model/domain-error';
 import type { Prescription, PresaturationBand } from '../model/prescription';
-import { epiDisplacementMm } from '../sequence/displacement';
+import { fatShares } from '../fold/fat-shares';
 import { foldOntoRow, type RowSampling } from './fold-row';
 import { noisyMagnitude } from './noise';
 import { paintLayers, type PaintLayer } from './paint-layers';
@@ -97,9 +97,12 @@ function paintRow(scene: Scene, sampling: RowSampling, row: number, sliceMm: num
   const segments = cutAtBands(topSegments(layers.map(({ solid }) => rowInterval(solid, r, sliceMm))), edges);
   const fatHz = fatWaterShiftHz(scanner.fieldStrengthT);
   const echoPlanar = p.family === 'echo-planar';
-  const fatAlongPhaseMm = echoPlanar
-    ? -epiDisplacementMm(fatHz, p.echoSpacingMs, sampling.widthMm, p.acceleration.factorPhase, p.shots)
-    : 0;
+  // One picture has one polarity of the blips: towards the low end where it is not known.
+  const [fatShare = 0] = fatShares(
+    { ...p, fatDisplacedTowards: p.fatDisplacedTowards ?? 'low-end' },
+    scanner.fieldStrengthT,
+  );
+  const fatAlongPhaseMm = fatShare * sampling.widthMm;
   const fatRows = echoPlanar ? 0 : (fatHz / p.bandwidthHzPerPixel) * (grid.rows / p.readoutMatrix);
   for (const { fromMm, toMm, layer } of segments) {
     const { tissue, weight } = layers[layer]!;

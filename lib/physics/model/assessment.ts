@@ -61,7 +61,14 @@ export interface FoldResult {
   readonly displayedShare: number;
   readonly keepClearShare: number;
   /** Part and side the deepest intruder comes from, and how far it travelled (|n|·W). */
-  readonly from?: { readonly part: string; readonly side: Side; readonly order: number; readonly distanceMm: number };
+  readonly from?: {
+    readonly part: string;
+    readonly side: Side;
+    readonly order: number;
+    readonly distanceMm: number;
+    /** EPI: it is fat, displaced by so much along phase before it folded (counted in the distance). */
+    readonly fatDisplacedMm?: number;
+  };
   readonly placeUncertain: boolean;
   /** Ghosts of image-domain unfolding reach the keep-clear area. */
   readonly ghosts: boolean;

@@ -104,6 +104,8 @@ export interface Prescription {
   readonly echoSpacingMs: number;
   /** Shots of a segmented echo-planar readout; 1 is single shot. */
   readonly shots: number;
+  /** Phase end that fat is displaced to in EPI, by the polarity of the blips; absent: unknown, both are taken. */
+  readonly fatDisplacedTowards?: 'low-end' | 'high-end';
   /** Images an EPI series acquires: Σ over b-values of directions · averages, or volumes; 1 elsewhere. */
   readonly volumes: number;
   readonly bandwidthHzPerPixel: number;

@@ -17,8 +17,10 @@ export const swapDirection: Change = (given) => {
   const sideEffects = ['Motion ghosts and chemical shift change direction'];
   if (readoutFovRaised) sideEffects.push(`Readout FOV rises to ${figure(sampling.fovReadoutMm)} mm`);
   if (p.family === 'echo-planar') sideEffects.push('EPI displacement changes direction');
+  // Which end fat is displaced to was known for the old direction only.
+  const { fatDisplacedTowards: _, ...unswapped } = p;
   return changed(
-    withPrescription(given, {
+    withPrescription({ ...given, prescription: unswapped }, {
       phaseAxis,
       ...sampling,
       acquiredLines: acquiredLines ?? sampling.linesAcrossFov,

@@ -1,7 +1,7 @@
 import { unfoldingRule } from '../acceleration/unfolding-rule';
 import { partSolids } from '../body/part-solids';
 import { acquiredSlabMm, acquiredWidthMm } from '../fold/acquired-lines';
-import { alongSlabSources } from '../fold/alias-family';
+import { alongSlabSources, sharesSeen } from '../fold/alias-family';
 import {
   displayedSections,
   regionSolid,
@@ -162,6 +162,8 @@ interface Draft {
   readonly moveMm: number;
   readonly sliceOrder: number;
   readonly multiple: number;
+  /** Displaced along phase before it folded (fat in EPI), mm; counted in moveMm. */
+  readonly displacedMm: number;
 }
 
 /** Bands of one solid that land in the window when moved by −moveMm, optionally only beyond an acquired edge. */
@@ -169,15 +171,16 @@ function draft(
   picture: Picture,
   tissue: TissueSolid,
   bands: readonly RowBand[],
-  move: Pick<Draft, 'moveMm' | 'sMm' | 'sliceOrder' | 'multiple'>,
+  move: Pick<Draft, 'moveMm' | 'sMm' | 'sliceOrder' | 'multiple' | 'displacedMm'>,
   beyond?: { readonly end: 'low' | 'high' },
 ): Draft | undefined {
   const { sections, frame, widthMm, keepClear, problem } = picture;
   const { window } = sections;
   const lowers = [straight(window.lower.offset + move.moveMm)];
   const uppers = [straight(window.upper.offset + move.moveMm)];
-  if (beyond?.end === 'high') lowers.push(straight(frame.centrePhaseMm + widthMm / 2));
-  if (beyond?.end === 'low') uppers.push(straight(frame.centrePhaseMm - widthMm / 2));
+  // Beyond the acquired edge as it is sampled: displaced.
+  if (beyond?.end === 'high') lowers.push(straight(frame.centrePhaseMm + widthMm / 2 - move.displacedMm));
+  if (beyond?.end === 'low') uppers.push(straight(frame.centrePhaseMm - widthMm / 2 - move.displacedMm));
   const source = cropBands(bands, { lowers, uppers, r0: window.r0, r1: window.r1 });
   if (source.length === 0) return undefined;
   const landed = moveBands(source, -move.moveMm);
@@ -190,11 +193,11 @@ function draft(
   };
 }
 
-/** Whole moves i·step that bring some of the bands into the window. */
-function movesInto(window: RowBand, bands: readonly RowBand[], step: number): number[] {
+/** Whole i for which a move by i·step − displaced brings some of the bands into the window. */
+function movesInto(window: RowBand, bands: readonly RowBand[], step: number, displacedMm: number): number[] {
   const rings = bandRings(bands).flat();
   if (rings.length === 0) return [];
-  const phases = rings.map(([, p]) => p);
+  const phases = rings.map(([, p]) => p + displacedMm);
   const from = Math.ceil((Math.min(...phases) - window.upper.offset) / step);
   const to = Math.floor((Math.max(...phases) - window.lower.offset) / step);
   return Array.from({ length: Math.max(0, to - from + 1) }, (_, k) => from + k);
@@ -210,6 +213,8 @@ function gather(drafts: readonly Draft[], picture: Picture, nameOf: (draft: Draf
     const rings = (pick: (one: Draft) => RowBand[]) => group.flatMap((one) => bandRings(pick(one)));
     const source = rings((one) => one.source);
     const placeUncertain = isUncertain(source, problem, frame, first.sMm);
+    // The side it came from is that of the fold, whatever displaced it before.
+    const foldedMm = first.moveMm + first.displacedMm;
     return {
       first,
       drawing: {
@@ -217,11 +222,12 @@ function gather(drafts: readonly Draft[], picture: Picture, nameOf: (draft: Draf
         part: first.part.name,
         estimated: first.part.estimated,
         side:
-          first.moveMm !== 0
-            ? AXIS_SIDES[frame.phaseAxis][first.moveMm > 0 ? 1 : 0]
+          foldedMm !== 0
+            ? AXIS_SIDES[frame.phaseAxis][foldedMm > 0 ? 1 : 0]
             : AXIS_SIDES[frame.sliceAxis][first.sliceOrder > 0 ? 1 : 0],
         distanceMm:
-          first.moveMm !== 0 ? Math.abs(first.moveMm) : Math.abs(first.sliceOrder) * (picture.slabMm ?? 0),
+          foldedMm !== 0 ? Math.abs(first.moveMm) : Math.abs(first.sliceOrder) * (picture.slabMm ?? 0),
+        ...(first.displacedMm !== 0 && { fatDisplacedMm: first.displacedMm }),
         placeUncertain,
         ...(placeUncertain && { byPlace: piecesByPlace(group, problem.usable, frame, picture.keepClear) }),
         source,
@@ -232,6 +238,9 @@ function gather(drafts: readonly Draft[], picture: Picture, nameOf: (draft: Draf
   });
 }
 
+const fatName = ({ displacedMm }: Draft): string =>
+  displacedMm === 0 ? '' : displacedMm > 0 ? '/fat-high' : '/fat-low';
+
 function drawPieces(picture: Picture): PieceDrawing[] {
   const { problem, sections, target, frame, widthMm, slabMm } = picture;
   const rule = unfoldingRule(problem.prescription);
@@ -239,15 +248,19 @@ function drawPieces(picture: Picture): PieceDrawing[] {
   const add = (solid: number, sMm: number, sliceOrder: number, step: number) => {
     const tissue = sections.tissue[solid]!;
     const bands = sectionAt(tissue, sMm);
-    for (const i of movesInto(sections.window, bands, step)) {
-      if (i === 0 && sliceOrder === 0) continue;
-      const one = draft(picture, tissue, bands, {
-        moveMm: i * step,
-        sMm,
-        sliceOrder,
-        multiple: (i * step) / widthMm,
-      });
-      if (one) drafts.push(one);
+    for (const share of sharesSeen(problem)) {
+      const displacedMm = share * widthMm;
+      for (const i of movesInto(sections.window, bands, step, displacedMm)) {
+        if (i === 0 && sliceOrder === 0) continue;
+        const one = draft(picture, tissue, bands, {
+          moveMm: i * step - displacedMm,
+          sMm,
+          sliceOrder,
+          multiple: (i * step) / widthMm,
+          displacedMm,
+        });
+        if (one) drafts.push(one);
+      }
     }
   };
   if (rule.kind === 'plain') sections.tissue.forEach((_, solid) => add(solid, frame.sliceMm, 0, widthMm));
@@ -261,7 +274,7 @@ function drawPieces(picture: Picture): PieceDrawing[] {
   const orderOf = (one: Draft) => 0 - one.multiple;
   return gather(drafts, picture, (one) => {
     const along = one.sliceOrder === 0 ? '' : `/${one.sliceOrder}`;
-    return `piece/${one.part.name}/${orderOf(one)}${along}`;
+    return `piece/${one.part.name}/${orderOf(one)}${along}${fatName(one)}`;
   }).map(({ first, drawing }) => ({ ...drawing, order: orderOf(first), sliceOrder: first.sliceOrder }));
 }
 
@@ -274,11 +287,16 @@ function drawGhosts(picture: Picture): GhostDrawing[] {
   const add = (solid: number, sMm: number, sliceOrder: number) => {
     const tissue = sections.tissue[solid]!;
     const bands = sectionAt(tissue, sMm);
-    for (const i of movesInto(sections.window, bands, step)) {
-      if (i === 0) continue;
-      const move = { moveMm: i * step, sMm, sliceOrder, multiple: Math.abs(i) };
-      const one = draft(picture, tissue, bands, move, { end: i > 0 ? 'high' : 'low' });
-      if (one) drafts.push(one);
+    for (const share of sharesSeen(problem)) {
+      const displacedMm = share * widthMm;
+      for (const i of movesInto(sections.window, bands, step, displacedMm)) {
+        if (i === 0) continue;
+        const moveMm = i * step - displacedMm;
+        const end = i > 0 ? 'high' : 'low';
+        const move = { moveMm, sMm, sliceOrder, multiple: Math.abs(i), displacedMm };
+        const one = draft(picture, tissue, bands, move, { end });
+        if (one) drafts.push(one);
+      }
     }
   };
   sections.tissue.forEach((_, solid) => add(solid, frame.sliceMm, 0));
@@ -290,7 +308,7 @@ function drawGhosts(picture: Picture): GhostDrawing[] {
     }
   }
   return gather(drafts, picture, (one) => {
-    const end = one.moveMm > 0 ? 'high' : 'low';
-    return `ghost/${one.part.name}/${end}/${one.multiple}/${one.sliceOrder}`;
+    const end = one.moveMm + one.displacedMm > 0 ? 'high' : 'low';
+    return `ghost/${one.part.name}/${end}/${one.multiple}/${one.sliceOrder}${fatName(one)}`;
   }).map(({ first, drawing }) => ({ ...drawing, multiple: first.multiple, sliceMultiple: first.sliceOrder }));
 }

@@ -47,8 +47,10 @@ export interface PieceDrawing {
   readonly order: number;
   /** Slab only: 0 when it folds within its own partition. */
   readonly sliceOrder: number;
-  /** |n|·W (or, with n = 0, |j|·W_z), mm. */
+  /** |n|·W (or, with n = 0, |j|·W_z), mm; for displaced fat |n + κ|·W. */
   readonly distanceMm: number;
+  /** EPI: fat, displaced by so much along phase (signed) before it folded; the name then ends in "/fat-low" or "/fat-high". */
+  readonly fatDisplacedMm?: number;
   readonly placeUncertain: boolean;
   /** Where it is; for a sliceOrder ≠ 0 its outline in the section it came from. */
   readonly source: readonly SectionRing[];
@@ -71,6 +73,8 @@ export interface GhostDrawing {
   readonly multiple: number;
   readonly sliceMultiple: number;
   readonly distanceMm: number;
+  /** As in PieceDrawing. */
+  readonly fatDisplacedMm?: number;
   readonly placeUncertain: boolean;
   readonly source: readonly SectionRing[];
   readonly landed: readonly SectionRing[];

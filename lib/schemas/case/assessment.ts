@@ -54,6 +54,7 @@ const foldSchema = z.strictObject({
   from: z
     .strictObject({
       part: z.string(), side: z.enum(SIDE_NAMES), order: z.number().describe('Widths travelled; a fraction for a ghost of unfolding.'), distanceMm: mm('Distance travelled'),
+      fatDisplacedMm: mm('EPI: it is fat, displaced by so much along phase before it folded').optional(),
     })
     .describe('Where the deepest intruder comes from.')
     .optional(),

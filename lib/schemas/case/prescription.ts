@@ -97,6 +97,8 @@ export const prescriptionShape = {
   echoTrainLength: count({ min: 1, max: 1024, text: 'Echoes in a train; 1 without a train' }),
   echoSpacingMs: quantity({ min: 0, max: 100, unit: 'ms', text: 'Spacing of echoes in a train; 0 without a train' }),
   shots: count({ min: 1, max: 256, text: 'Shots of a segmented echo-planar readout; 1 is single shot' }),
+  fatDisplacedTowards: choice(['low-end', 'high-end'], 'Phase end that EPI displaces fat to, by the polarity of its blips (low: towards right, anterior or inferior); left out: unknown, both are taken.')
+    .optional(),
   volumes: count({ min: 1, max: 5000, text: 'Images an echo-planar series acquires: sum over b-values of directions × averages' }),
   bandwidthHzPerPixel: quantity({ min: 1, max: 20000, unit: 'Hz', text: 'Receiver bandwidth per pixel' }),
   sliceTimeMs: quantity({ min: 0, max: 60000, unit: 'ms', text: 'Time one slice takes inside TR: train, fat suppression, presaturation' }),

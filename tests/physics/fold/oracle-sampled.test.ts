@@ -151,7 +151,11 @@ function sampleCase(seed: number): {
     isocentreZMm: real(-60, 60),
   });
   const lz = deep ? random.whole(partitions!, 4 * partitions!) : undefined;
-  return { problem, slab: deep ? lz! * thickness : undefined, partitions: lz };
+  // Fat displaced by EPI, which is never a slab; drawn last, so that the other cases stay what they were.
+  const echoPlanar = random.next() < 0.3 && !deep;
+  const share = real(-0.5, 0.5);
+  const fatShares = !echoPlanar ? [] : random.next() < 0.5 ? [share] : [share, -share];
+  return { problem: { ...problem, fatShares }, slab: deep ? lz! * thickness : undefined, partitions: lz };
 }
 
 describe('oracle B: general shapes, tilted planes and slabs, by looking at points', () => {

@@ -148,15 +148,18 @@ export function sampledHit(
       for (const p of columns) {
         if (!clearAt(at(r, p, s))) continue;
         for (let j = -jMax; j <= jMax; j++) {
-          const from = Math.ceil((-farthest - centreP - p) / shift);
-          const to = Math.floor((farthest - centreP - p) / shift);
-          for (let i = from; i <= to; i++) {
-            if (i === 0 && j === 0) continue;
-            const sourceP = p + i * shift;
-            if (accelerated && j === 0 && Math.abs(sourceP) <= width / 2) continue;
-            for (const [dr, dp, ds] of moves) {
-              const x = at(r - dr, sourceP - dp, s + j * (slab ?? 0) - ds);
-              if (parts.some((part) => inPart(part, x, problem))) return true;
+          // Displacement first: what is sampled at p + i·shift lies elsewhere in truth. Then the fold.
+          for (const displaced of [0, ...(problem.fatShares ?? [])].map((share) => share * width)) {
+            const from = Math.ceil((-farthest - centreP - p + displaced) / shift);
+            const to = Math.floor((farthest - centreP - p + displaced) / shift);
+            for (let i = from; i <= to; i++) {
+              if (i === 0 && j === 0) continue;
+              const sampledP = p + i * shift;
+              if (accelerated && j === 0 && Math.abs(sampledP) <= width / 2) continue;
+              for (const [dr, dp, ds] of moves) {
+                const x = at(r - dr, sampledP - displaced - dp, s + j * (slab ?? 0) - ds);
+                if (parts.some((part) => inPart(part, x, problem))) return true;
+              }
             }
           }
         }

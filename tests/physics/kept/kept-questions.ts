@@ -140,7 +140,8 @@ function profiles(): unknown {
 /** The figures in a sentence. The words around them may be put better any day. */
 const figures = (text: string): readonly string[] => text.match(/\d+(?:\.\d+)?/g) ?? [];
 
-const shortened = ({ slab, reasons, assumptions, ...rest }: Assessment) => ({
+/** Without the engine's version, which says only that some answer changed. */
+const shortened = ({ slab, reasons, assumptions, engineVersion: _, ...rest }: Assessment) => ({
   ...rest,
   reasons: reasons.map(({ code, text }) => [code, ...figures(text)]),
   assumptions: assumptions.map(({ field, used }) => [field, ...figures(used)]),
