@@ -139,7 +139,7 @@ test('300 rows and a bundle are brought in, come to what the engine says of them
   const { booking } = expected.find(({ booking: { accession }, alternatives }) => accession < 'HB-4500' && alternatives.some(({ standing }) => standing !== 'ruled-out'))!;
   const other = booking.scanner === 'A' ? 'Scanner B' : 'Scanner A';
   await page.goto(`/bookings?from=${2027 + YEARS_ON}-01-01&to=${2027 + YEARS_ON}-01-31&find=${booking.accession}`);
-  await page.getByRole('link', { name: booking.accession }).click();
+  await page.getByRole('link', { name: booking.accession, exact: true }).click();
   const day = new Date(Date.now() + 6 * 86_400_000).toISOString().slice(0, 10);
   const form = page.getByRole('form', { name: 'Propose a move' });
   await form.getByLabel('Scanner', { exact: true }).selectOption(other);
