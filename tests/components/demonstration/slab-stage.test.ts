@@ -90,6 +90,52 @@ describe('the slab made visible', () => {
   });
 });
 
+describe('where an intruder lands', () => {
+  // A small body of its own, to the patient's left and front, that lies beyond the high end: z 102, the slab ends at 96.
+  const alone = (zMm: number): Case => ({
+    ...before,
+    patient: {
+      ...before.patient,
+      parts: [{ name: 'piece', kind: 'other', signalWeight: 1, estimated: false, shape: { type: 'ellipsoid', centreMm: [60, -30, zMm], semiAxesMm: [30, 30, 12] } }],
+    },
+  });
+  const offsets = slabOf(before).partitions.map(({ offsetMm }) => offsetMm);
+  function seen(question: Case, sliceOffsetMm: number) {
+    const { values, widthPx, heightPx } = simulateImage(question, { sliceOffsetMm, sizePx: 200, noiseShare: 0 });
+    let [sum, x, y] = [0, 0, 0];
+    values.forEach((value, i) => {
+      sum += value;
+      x += value * ((i % widthPx) + 0.5);
+      y += value * (Math.floor(i / widthPx) + 0.5);
+    });
+    const { fovReadoutMm, fovPhaseMm } = question.prescription;
+    return { sum, leftMm: (x / sum / widthPx - 0.5) * fovReadoutMm, backMm: (y / sum / heightPx - 0.5) * fovPhaseMm };
+  }
+
+  it.each([[102, 'low'], [-102, 'high']] as const)('tissue at z = %s mm is in the partitions one acquired width away, at the %s end, and in no other', (zMm, end) => {
+    const question = alone(zMm);
+    // fold(z) = ((z + W/2) mod W) − W/2 with W = 48 · 4 mm, shifted and never mirrored; it reaches 12 mm each way.
+    const folded = zMm > 0 ? zMm - 192 : zMm + 192;
+    const holding = offsets.filter((offset) => Math.abs(offset - folded) < 12);
+    const own = offsets.filter((offset) => Math.abs(offset - zMm) < 12);
+    const lit = offsets.filter((offset) => seen(question, offset).sum > 1e-3);
+    expect(lit).toEqual([...holding, ...own].sort((a, b) => a - b));
+    expect(holding.every((offset) => (end === 'low' ? offset < 0 : offset > 0))).toBe(true);
+    // In the plane it stays where it was: not mirrored. A pixel is 2 mm; fat is displaced by 0.9 of a readout pixel of 1.4 mm.
+    const { leftMm, backMm } = seen(question, holding[Math.floor(holding.length / 2)]!);
+    expect(Math.abs(leftMm - 60)).toBeLessThan(3.5);
+    expect(Math.abs(backMm + 30)).toBeLessThan(2.5);
+  });
+
+  it('more slice oversampling than the distance leaves it out', () => {
+    const { slices } = before.prescription;
+    if (slices.mode !== 'slab') throw new Error('a slab is needed');
+    const wide = { ...alone(102), prescription: { ...before.prescription, slices: { ...slices, acquiredPartitions: 56 } } };
+    // W = 224: z 90 to 114 lands at −134 to −110, beyond the displayed −96.
+    expect(offsets.filter((offset) => seen(wide, offset).sum > 1e-3 && offset < 0)).toEqual([]);
+  });
+});
+
 describe('the curve', () => {
   it('is the engine’s count at every number of partitions', () => {
     const points = oversamplingCurve(before);

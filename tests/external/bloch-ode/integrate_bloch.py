@@ -28,8 +28,9 @@ def respond(tbw, flip_deg, z):
     return np.hypot(end[0], end[1]), end[2]
 
 
-print("tbw,flip_deg,z_over_slab,mxy,mz")
-for tbw, flip in CASES:
-    for z in POSITIONS:
-        mxy, mz = respond(tbw, flip, z)
-        print(f"{tbw},{flip},{z},{mxy:.9f},{mz:.9f}")
+if __name__ == "__main__":
+    print("tbw,flip_deg,z_over_slab,mxy,mz")
+    for tbw, flip in CASES:
+        for z in POSITIONS:
+            mxy, mz = respond(tbw, flip, z)
+            print(f"{tbw},{flip},{z},{mxy:.9f},{mz:.9f}")
