@@ -197,6 +197,22 @@ describe('extent of a part along a direction', () => {
   });
 });
 
+describe('a part’s ends under some of a coil’s elements', () => {
+  const part = (along: 'x' | 'z'): SolidPart => ({
+    name: 'a part',
+    kind: 'other',
+    shape: { type: 'elliptic-cylinder', along, centreMm: [0, 0, 0], semiAxesMm: [50, 40] },
+    signalWeight: 1,
+    estimated: false,
+  });
+  it('are what they see along z, and the site’s reach along x, which they do not tell', () => {
+    // The middle element sees from 90 mm below to 70 mm above the isocentre at 40 mm.
+    const given = withCoil(['middle']);
+    expect(partAlong(part('z'), [0, 0, 1], given)).toEqual([40 - 90, 40 + 70]);
+    expect(partAlong(part('x'), [1, 0, 0], given)).toEqual([-250, 250]);
+  });
+});
+
 describe('what coil elements see along z', () => {
   it('is the site’s reach without them, and about the isocentre', () => {
     expect(reachAlongZ(withCoil(undefined))).toEqual({ isocentreZMm: 40, tissueReachMm: 250 });

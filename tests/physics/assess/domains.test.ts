@@ -141,6 +141,7 @@ const REAL: readonly Row[] = [
   ['policy.slabTolerance', 0.0001, 1],
   ['policy.sureAt', 0.5, 0.999],
   ['policy.unknownTimeBandwidthProduct', 1, 64],
+  ['policy.presaturationB1Scale', 0.3, 2],
   ['policy.tissueT1Ms.parenchyma', 1, 10_000],
   ['policy.tissueT1Ms.fat', 1, 10_000],
   ['policy.tolerateFoldOutsidePct', 0, 100],
@@ -191,7 +192,9 @@ describe('what a case may hold', () => {
       expect(check(path, value, base), `${value}`).not.toThrow();
     // A thousandth of the range is far less than any change of a limit would be.
     const step = (high - low) / 1000;
-    for (const value of [low - step, high + step, Number.NaN, Number.POSITIVE_INFINITY]) {
+    // Below a limit that is itself far less than that, a hundredth of the limit.
+    const below = Math.min(step, low === 0 ? step : Math.abs(low) / 100);
+    for (const value of [low - below, high + step, Number.NaN, Number.POSITIVE_INFINITY]) {
       expect(check(path, value, base), `${value}`).toThrow(DomainError);
     }
   });

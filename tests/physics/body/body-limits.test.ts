@@ -75,6 +75,40 @@ describe('what presaturation may be', () => {
   });
 });
 
+describe('what a presaturation band weakens', () => {
+  const sphere: PartShape = { type: 'ellipsoid', centreMm: [0, 0, 0], semiAxesMm: [100, 100, 100] };
+  const [inner, thickness] = [20, 30];
+  it.each([
+    ['right', [-1, 0, 0]],
+    ['left', [1, 0, 0]],
+    ['anterior', [0, -1, 0]],
+    ['posterior', [0, 1, 0]],
+    ['inferior', [0, 0, -1]],
+    ['superior', [0, 0, 1]],
+  ] as const)('on the %s side: what lies between its edges there, and nothing else', (side, out) => {
+    const band = { side, innerEdgeMm: inner, thicknessMm: thickness, nominalFlipDeg: 80, delayMs: 10 };
+    const pieces = partSolids(
+      [{ name: 'a part', kind: 'other', shape: sphere, signalWeight: 1, estimated: false }],
+      { isocentreZMm: 0, tissueReachMm: 250 },
+      { bands: [band], b1Scale: 1, t1Ms: [300] },
+      0.05,
+    );
+    // Points of no symmetry: no coordinate stands for another.
+    for (let i = 0; i < 200; i++) {
+      const point = [((i * 37) % 113) - 56, ((i * 53) % 109) - 54, ((i * 71) % 103) - 51] as const;
+      const along = point[0] * out[0] + point[1] * out[1] + point[2] * out[2];
+      if (along === inner || along === inner + thickness) continue;
+      const holding = pieces.filter(({ solid }) =>
+        solid.halfSpaces.every(
+          ({ normal, limit }) => normal[0] * point[0] + normal[1] * point[1] + normal[2] * point[2] <= limit,
+        ),
+      );
+      const under = along > inner && along < inner + thickness;
+      expect(holding.map(({ weight }) => weight)).toEqual([under ? presaturatedWeight(80, 1, 10, 300) : 1]);
+    }
+  });
+});
+
 describe('neighbouring trapezoids', () => {
   it('are joined only when both lines are the same', () => {
     // A tent: the upper line breaks at u = 0, where both its halves have one height.

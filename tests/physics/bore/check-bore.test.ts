@@ -89,6 +89,25 @@ describe('a patient in a scanner’s opening', () => {
   });
 });
 
+describe('sections whose place along the body is not known', () => {
+  it('count in however short a bore: they are taken to lie at the target', () => {
+    const patient = { ...feetFirst, position: 'head-first-supine' as const };
+    const { sections, outside } = checkBore(patient, scanner, {
+      halfLengthMm: 0,
+      elbowBreadthMm: measured(480),
+    });
+    expect(sections.map(({ section }) => section)).toEqual(['trunk', 'hips', 'shoulders', 'elbows']);
+    expect(outside).toEqual([]);
+    const down = { ...patient, arms: { ...patient.arms, position: 'down' as const } };
+    expect(checkBore(down, scanner, { halfLengthMm: 0 }).sections.map(({ section }) => section)).toEqual([
+      'trunk',
+      'arms',
+      'hips',
+      'shoulders',
+    ]);
+  });
+});
+
 describe('shoulders from weight and height (girth and depth: Heinz 2003; the ratio: our model)', () => {
   const at = (weight: number, height: number, sex?: 'male' | 'female') =>
     shouldersFromWeightAndHeight(measured(weight), measured(height), sex);

@@ -40,6 +40,9 @@ describe('what a bore may be', () => {
       300,
     );
     expectLimits((coilMm) => clearance({ coilMm }), 'coil-out-of-range', 0, 300);
+    // Whether or not it lies on this part.
+    const bare = { ...part('trunk', 300), underCoil: false };
+    expectLimits((coilMm) => clearance({ coilMm }, bare), 'coil-out-of-range', 0, 300);
     expectLimits((padMm) => clearance({ padMm }), 'pad-out-of-range', 0, 300);
     expectLimits((lateralOffsetMm) => clearance({ lateralOffsetMm }), 'offset-out-of-range', -500, 500);
     expectLimits((mm) => chordMm(mm, 100), 'bore-out-of-range', 300, 1500);

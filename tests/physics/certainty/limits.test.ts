@@ -46,6 +46,10 @@ describe('which sizes vary', () => {
     expect(sizeVariables(unsure({ superior: 5 }))).toEqual([]);
     expect(sizeVariables(unsure({ superior: 5 }, 'head'))).toEqual([['superior']]);
   });
+  it('a variable that is not drawn stays at its mean', () => {
+    const { extents } = patientAtDraw(unsure({ anterior: 3, right: 8 }), [['anterior'], ['right']], [1]);
+    expect([extents.anterior.value, extents.right.value]).toEqual([173, 170]);
+  });
   it('a draw moves every side of its variable by its own spread, and none below 1 mm', () => {
     const drawn = patientAtDraw(
       unsure({ anterior: 3, posterior: 4, right: 80 }),
