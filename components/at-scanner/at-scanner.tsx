@@ -4,7 +4,7 @@ import { useEffect, useState } from 'react';
 import { BenchProvider } from '@/components/bench/bench-context';
 import { createBench } from '@/components/bench/create-bench';
 import type { Results } from '@/components/bench/live/results';
-import type { PlanIdentity } from '@/components/bench/saving/use-plan-saving';
+import type { PlanIdentity } from '@/components/bench/saving/plan-identity';
 import type { BenchDocument, BenchSetting } from '@/components/bench/state/bench-document';
 import type { PlanBasis } from '@/components/bench/state/plan-document';
 import { AtScannerLayout } from './at-scanner-layout';

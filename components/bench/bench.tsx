@@ -1,12 +1,13 @@
 'use client';
 
+import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { useEffect, useState, type KeyboardEvent, type ReactNode } from 'react';
 import type { KeepClear } from '@/lib/physics/model/keep-clear';
 import { BenchProvider } from './bench-context';
 import { BenchLayout } from './bench-layout';
 import { createBench } from './create-bench';
 import type { Results } from './live/results';
-import type { PlanIdentity } from './saving/use-plan-saving';
+import type { PlanIdentity } from './saving/plan-identity';
 import type { BenchDocument, BenchSetting } from './state/bench-document';
 import type { PlanBasis } from './state/plan-document';
 
@@ -36,6 +37,7 @@ export function Bench({ children, ...props }: BenchProps) {
   // A bench lives as long as its page: another booking is another page, with its own key.
   const [bench] = useState(() => createBench({ ...props, stored: props.plan.version > 0, onFault: setFault }));
   useEffect(() => bench.run(), [bench]);
+  const [queries] = useState(() => new QueryClient());
 
   const onKeyDown = (event: KeyboardEvent<HTMLElement>) => {
     const { store } = bench;
@@ -53,10 +55,12 @@ export function Bench({ children, ...props }: BenchProps) {
   };
 
   return (
-    <BenchProvider value={bench}>
-      <div onKeyDown={onKeyDown} className="contents">
-        <BenchLayout {...props}>{children}</BenchLayout>
-      </div>
-    </BenchProvider>
+    <QueryClientProvider client={queries}>
+      <BenchProvider value={bench}>
+        <div onKeyDown={onKeyDown} className="contents">
+          <BenchLayout {...props}>{children}</BenchLayout>
+        </div>
+      </BenchProvider>
+    </QueryClientProvider>
   );
 }

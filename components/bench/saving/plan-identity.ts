@@ -1,5 +1,12 @@
 import type { PlanView } from '@/lib/schemas/plan';
-import type { PlanIdentity } from './use-plan-saving';
+
+export interface PlanIdentity {
+  readonly planId: string;
+  /** The version the bench rests on; 0 before the first save. */
+  readonly version: number;
+  readonly state: PlanView['state'] | null;
+  readonly shortCode: string | null;
+}
 
 /**
  * Where saving starts: the newest plan, or one that does not exist yet under an id drawn here. A used plan stays as it

@@ -33,11 +33,12 @@ export function SaveCell({ plan }: { plan: PlanSaving }) {
   );
 }
 
-function stateWords({ identity, saving }: PlanSaving, unsaved: boolean): string {
+function stateWords({ identity, saving, restsOn }: PlanSaving, unsaved: boolean): string {
   if (saving.kind === 'saving' && saving.attempt > 1) {
     return `Not reached the server yet; trying again (${saving.attempt}). Your plan is kept in this tab.`;
   }
   if (identity.version === 0) return 'Not saved yet';
-  const version = `${identity.state ?? 'draft'}, version ${identity.version}`;
+  // A sign-off, or putting it for use, makes no new version: the newest state is asked for with it.
+  const version = `${restsOn?.state ?? identity.state ?? 'draft'}, version ${identity.version}${restsOn ? ` by ${restsOn.savedBy}` : ''}`;
   return unsaved ? `Unsaved changes since version ${identity.version}` : `Saved: ${version}`;
 }

@@ -5,9 +5,11 @@ import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
 import { planInput } from '@/lib/schemas/plan';
+import { formatTime } from '@/lib/presentation/moment';
 import { VERDICT_WORDS } from '@/lib/presentation/verdict-words';
 import type { Verdict } from '@/lib/physics/model/assessment';
 import { useBench } from '../bench-context';
+import type { NewestVersion } from './use-newest-version';
 import type { PlanSaving } from './use-plan-saving';
 
 /** What came of saving, when it is not simply saved. Nothing on the bench is lost in any of it. */
@@ -29,6 +31,7 @@ export function SaveNotices({ plan }: { plan: PlanSaving }) {
       </Notice>
     );
   }
+  if (plan.news && saving.kind === 'idle') return <News plan={plan} news={plan.news} />;
   if (differences.length > 0) {
     return (
       <Notice live title="The server worked it out with newer data, and stored its own answer." className="m-3">
@@ -52,6 +55,27 @@ export function SaveNotices({ plan }: { plan: PlanSaving }) {
   return null;
 }
 
+/** Told while both still work, in one line: what is on the bench stays until its owner decides. */
+function News({ plan, news }: { plan: PlanSaving; news: NewestVersion }) {
+  return (
+    <Notice
+      live
+      title={`${news.savedBy} saved version ${news.version} of this plan at ${clockOf(news.savedAt)}, ${whileOn(plan.identity.version)}.`}
+      className="m-3"
+    >
+      What is on your bench is kept.{' '}
+      <Button size="sm" onClick={plan.showNews} className="ml-2">
+        Show what differs
+      </Button>
+    </Notice>
+  );
+}
+
+const clockOf = (moment: string): string => formatTime(new Date(moment));
+
+const whileOn = (version: number): string =>
+  version === 0 ? 'while you were working on one that is not saved yet' : `while you were working on version ${version}`;
+
 function Overtaken({ plan, theirs }: { plan: PlanSaving; theirs: Extract<PlanSaving['saving'], { kind: 'overtaken' }>['theirs'] }) {
   const { store } = useBench();
   const { patient, keepClear, sequences } = store.read().document;
@@ -63,7 +87,7 @@ function Overtaken({ plan, theirs }: { plan: PlanSaving; theirs: Extract<PlanSav
       <Notice
         tone="error"
         live
-        title={`${theirs.savedBy} saved version ${theirs.version} while you were working on version ${plan.identity.version}.`}
+        title={`${theirs.savedBy} saved version ${theirs.version} ${whileOn(plan.identity.version)}.`}
       >
         Nothing was overwritten and nothing of yours is lost. Every version stays in the history.
       </Notice>

@@ -6,15 +6,9 @@ import { useBench } from '../bench-context';
 import type { BenchDocument } from '../state/bench-document';
 import { documentOfPlan, planInputOf, type PlanBasis } from '../state/plan-document';
 import { keptEditsKey, readKeptEdits, writeKeptEdits, type KeptEdits } from './kept-edits';
+import type { PlanIdentity } from './plan-identity';
 import { getStoredPlan, putPlan, type Problem, type PutPlan, type PutResult } from './put-plan';
-
-export interface PlanIdentity {
-  readonly planId: string;
-  /** The version the bench rests on; 0 before the first save. */
-  readonly version: number;
-  readonly state: PlanView['state'] | null;
-  readonly shortCode: string | null;
-}
+import { isNews, useNewestVersion, type NewestVersion } from './use-newest-version';
 
 export type Saving =
   | { readonly kind: 'idle' }
@@ -32,6 +26,12 @@ export interface PlanSaving {
   readonly differences: PlanView['differences'];
   /** Edits that an earlier visit in this tab left unsaved were put back on the bench. */
   readonly restored: boolean;
+  /** Who saved the version this bench rests on, and when; null while that is not known. */
+  readonly restsOn: NewestVersion | null;
+  /** A version that somebody saved while this bench was open. */
+  readonly news: NewestVersion | null;
+  /** Shows it beside what is on the bench, with the choice between them. */
+  readonly showNews: () => void;
   readonly save: (expectedVersion?: number) => void;
   readonly takeTheirs: () => void;
 }
@@ -48,6 +48,7 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
   const [saving, setSaving] = useState<Saving>({ kind: 'idle' });
   const [differences, setDifferences] = useState<PlanView['differences']>([]);
   const [restored, setRestored] = useState(false);
+  const newest = useNewestVersion(basis.bookingId);
   const known = useRef(identity);
   const gone = useRef(false);
   const key = keptEditsKey(userId, basis.bookingId ?? `${basis.scannerId}/${basis.protocolId ?? ''}`);
@@ -93,6 +94,14 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
     };
   }, [key, store]);
 
+  const meet = async (planId: string): Promise<boolean> => {
+    const theirs = await getStoredPlan(planId);
+    if (!theirs) return false;
+    setIdentity((now) => ({ ...now, planId: theirs.id }));
+    setSaving({ kind: 'overtaken', theirs });
+    return true;
+  };
+
   const settle = async (result: Exclude<PutResult, { kind: 'unreached' }>, put: PutPlan, document: BenchDocument) => {
     if (result.kind === 'saved') {
       const { id, version, state, shortCode } = result.plan;
@@ -107,11 +116,7 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
     if (problem.code === 'conflict' && typeof problem.details?.currentVersion === 'number') {
       // Somebody else may have begun the plan of this booking under an id of their own: then theirs is the plan.
       const { planId } = problem.details;
-      const theirs = await getStoredPlan(typeof planId === 'string' ? planId : put.id);
-      if (theirs) {
-        setIdentity((now) => ({ ...now, planId: theirs.id }));
-        return setSaving({ kind: 'overtaken', theirs });
-      }
+      if (await meet(typeof planId === 'string' ? planId : put.id)) return;
     }
     setSaving({ kind: 'refused', problem });
   };
@@ -139,6 +144,11 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
     saving,
     differences,
     restored,
+    restsOn: newest?.planId === identity.planId && newest.version === identity.version ? newest : null,
+    news: isNews(newest, identity) ? newest : null,
+    showNews() {
+      if (newest && saving.kind !== 'saving') void meet(newest.planId);
+    },
     save(expectedVersion) {
       if (saving.kind !== 'saving') void save(expectedVersion ?? identity.version);
     },

@@ -7,6 +7,14 @@ import type { SignOffDecision } from '@/lib/domain/plan/plan';
 import type { PlanHead, PlanRecord } from '@/lib/domain/plan/plan';
 import type { PlanState } from '@/lib/domain/plan/states';
 
+export interface NewestVersion {
+  readonly planId: string;
+  readonly state: PlanState;
+  readonly version: number;
+  readonly savedBy: string;
+  readonly savedAt: Date;
+}
+
 function versions(trx: SiteTransaction, siteId: string) {
   return trx
     .selectFrom('plan as p')
@@ -106,6 +114,24 @@ export async function findPlanOfBooking(trx: SiteTransaction, siteId: string, bo
     .limit(1)
     .executeTakeFirst();
   return row ? toPlan(row) : null;
+}
+
+/** Which version of a booking's plan is the newest, and who saved it when: little enough to be asked again and again. */
+export async function findNewestVersion(trx: SiteTransaction, siteId: string, bookingId: string): Promise<NewestVersion | null> {
+  const row = await trx
+    .selectFrom('plan as p')
+    .innerJoin('plan_version as v', (join) =>
+      join.onRef('v.site_id', '=', 'p.site_id').onRef('v.plan_id', '=', 'p.id').onRef('v.version', '=', 'p.current_version'))
+    .leftJoin('app_user as u', (join) => join.onRef('u.site_id', '=', 'v.site_id').onRef('u.id', '=', 'v.created_by'))
+    .select(['p.id', 'p.state', 'v.version', 'v.created_at', 'u.display_name'])
+    .where('p.site_id', '=', siteId)
+    .where('p.booking_id', '=', bookingId)
+    .orderBy('p.created_at', 'desc')
+    .orderBy('p.id')
+    .limit(1)
+    .executeTakeFirst();
+  if (!row) return null;
+  return { planId: row.id, state: row.state as PlanState, version: row.version, savedBy: row.display_name ?? '', savedAt: row.created_at };
 }
 
 /** The plan's own row, locked: two saves of one plan then follow each other instead of racing. */

@@ -15,7 +15,7 @@ import { changeBookedBody } from '@/lib/schemas/move-proposal';
 import { outcomeListSchema, outcomeViewSchema, recordOutcomeBody } from '@/lib/schemas/outcome';
 import { requestSheetBody, sheetViewSchema } from '@/lib/schemas/plan-sheet';
 import { movePlanBody, savePlanBody, signOffBody } from '@/lib/schemas/plan';
-import { planViewSchema } from '@/lib/schemas/plan/views';
+import { newestVersionViewSchema, planViewSchema } from '@/lib/schemas/plan/views';
 import { protocolListSchema, protocolViewSchema } from '@/lib/schemas/protocol/views';
 import { scannerListSchema, scannerViewSchema } from '@/lib/schemas/scanner/views';
 import { policyViewSchema } from '@/lib/schemas/site-policy/views';
@@ -77,6 +77,7 @@ export const ANSWERS = {
   ProtocolList: protocolListSchema,
   PolicyVersion: policyViewSchema,
   Plan: planViewSchema,
+  NewestVersion: newestVersionViewSchema,
   Outcome: outcomeViewSchema,
   OutcomeList: outcomeListSchema,
   Sheet: sheetViewSchema,

@@ -72,6 +72,10 @@ export const OPERATIONS: readonly Operation[] = [
     answer: 'Bench', summary: 'Everything the bench needs of a booking.',
   },
   {
+    method: 'get', path: '/api/v1/bookings/{id}/newest-version', id: 'getNewestVersion', scope: 'plans:read', params: idParams,
+    answer: 'NewestVersion', summary: 'Which version of a booking’s plan is the newest, and who saved it when.',
+  },
+  {
     method: 'get', path: '/api/v1/bookings/{id}/size-readings', id: 'getSizeRecord', scope: 'bookings:read',
     params: idParams, answer: 'SizeRecord', summary: 'Sizes of a booking’s patient.',
   },

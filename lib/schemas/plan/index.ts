@@ -112,6 +112,17 @@ export interface ResultDifference {
   readonly server: string;
 }
 
+/** Enough to see that somebody else has saved: no values of the plan. */
+export interface NewestVersionView {
+  readonly newest: {
+    readonly planId: string;
+    readonly state: PlanState;
+    readonly version: number;
+    readonly savedBy: string;
+    readonly savedAt: string;
+  } | null;
+}
+
 export interface PlanView {
   readonly id: string;
   readonly shortCode: string;

@@ -7,7 +7,7 @@ import { patientSchema } from '@/lib/schemas/case/patient';
 import { policySchema } from '@/lib/schemas/case/policy';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import { scannerSchema } from '@/lib/schemas/case/scanner';
-import type { PlannedSequence, PlanView, ResultDifference } from '@/lib/schemas/plan';
+import type { NewestVersionView, PlannedSequence, PlanView, ResultDifference } from '@/lib/schemas/plan';
 
 const plannedSequence = z.strictObject({
   id: z.string(),
@@ -53,3 +53,10 @@ export const planViewSchema = z.strictObject({
     .strictObject({ decision: z.enum(['signed off', 'sent back']), reason: z.string(), by: z.string(), at: z.iso.datetime() })
     .optional(),
 }) satisfies z.ZodType<PlanView>;
+
+export const newestVersionViewSchema = z.strictObject({
+  newest: z
+    .strictObject({ planId: z.uuid(), state: z.enum(PLAN_STATES), version: z.int(), savedBy: z.string(), savedAt: z.iso.datetime() })
+    .nullable()
+    .describe('Absent until the booking has a plan.'),
+}) satisfies z.ZodType<NewestVersionView>;

@@ -1,7 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { keptEditsKey, readKeptEdits, writeKeptEdits, type KeptEdits } from '@/components/bench/saving/kept-edits';
 import { putPlan, type PutPlan } from '@/components/bench/saving/put-plan';
-import { identityOfKept, type PlanIdentity } from '@/components/bench/saving/use-plan-saving';
+import type { PlanIdentity } from '@/components/bench/saving/plan-identity';
+import { isNews, type NewestVersion } from '@/components/bench/saving/use-newest-version';
+import { identityOfKept } from '@/components/bench/saving/use-plan-saving';
 import { documentOfPlan, planInputOf, type PlanBasis } from '@/components/bench/state/plan-document';
 import { changedLeaves, withLeaf } from '@/components/bench/bench-form';
 import type { Case } from '@/lib/physics/model/case';
@@ -106,5 +108,25 @@ describe('fields of a form', () => {
     expect(after.e).toBe(before.e);
     expect(after.a.c).toBe(before.a.c);
     expect(changedLeaves(before, after)).toEqual([['a.b.1', 9]]);
+  });
+});
+
+describe('what is news to an open bench', () => {
+  const newest = (planId: string, version: number, state: NewestVersion['state'] = 'draft'): NewestVersion => ({
+    planId, version, state, savedBy: 'Lee Warp', savedAt: '2026-03-02T09:00:00.000Z',
+  });
+  const bench = (planId: string, version: number): PlanIdentity => ({ planId, version, state: null, shortCode: null });
+
+  it('is a later version of its plan, and the first of another where it has none of its own', () => {
+    expect(isNews(newest('a', 3), bench('a', 2))).toBe(true);
+    expect(isNews(newest('b', 1), bench('a', 0))).toBe(true);
+    expect(isNews(newest('a', 2), bench('a', 2))).toBe(false);
+    // The answer to an older question, after this bench saved.
+    expect(isNews(newest('a', 2), bench('a', 3))).toBe(false);
+    expect(isNews(null, bench('a', 0))).toBe(false);
+  });
+
+  it('is not a plan that was used, which a new one follows', () => {
+    expect(isNews(newest('b', 4, 'used'), bench('a', 0))).toBe(false);
   });
 });

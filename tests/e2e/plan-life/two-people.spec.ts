@@ -16,8 +16,12 @@ test('two people begin one plan at once: the second is told, shown the differenc
   await one.getByRole('button', { name: 'Save plan' }).click();
   await expect(one.getByText('Saved: draft, version 1')).toBeVisible();
 
+  // While both work: whoever comes back to the page is told, and goes on working.
   await right(two).fill('262');
   await right(two).press('Tab');
+  await two.evaluate(() => window.dispatchEvent(new Event('visibilitychange')));
+  await expect(two.getByText(/saved version 1 of this plan at \d\d:\d\d, while you were working on one that is not saved yet/)).toBeVisible();
+  await expect(right(two)).toHaveValue('262');
   await two.getByRole('button', { name: 'Save plan' }).click();
   await expect(two.getByText(/saved version 1 while you were working/)).toBeVisible();
   const differing = two.getByRole('table', { name: 'Values that differ' });

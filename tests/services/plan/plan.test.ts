@@ -5,6 +5,7 @@ import type { PlanView } from '@/lib/schemas/plan';
 import { getBooking } from '@/lib/services/booking/get-booking';
 import { openBench } from '@/lib/services/booking/open-bench';
 import { getPlan, getPlanByShortCode } from '@/lib/services/plan/get-plan';
+import { getNewestVersion } from '@/lib/services/plan/get-newest-version';
 import { movePlan } from '@/lib/services/plan/move-plan';
 import { savePlan } from '@/lib/services/plan/save-plan';
 import { signOffPlan } from '@/lib/services/plan/sign-off-plan';
@@ -35,6 +36,24 @@ function remedied() {
     return { id, prescription: after, adopted: [{ key, sentence, costTenths }] };
   });
 }
+
+describe('the newest version of a booking’s plan', () => {
+  const ask = (actor = here.radiologist) => getNewestVersion(as(actor), { bookingId: here.booking.id });
+
+  it('is told with who saved it, before and after each save, and to nobody of another site', async () => {
+    expect(await ask()).toEqual({ newest: null });
+    const request = planBody(bench);
+    const first = await savePlan(as(here.radiographer), request);
+    expect(await ask()).toEqual({
+      newest: { planId: first.id, state: 'draft', version: 1, savedBy: first.savedBy, savedAt: first.savedAt },
+    });
+    const again = planBody(bench, { expectedVersion: 1 });
+    await savePlan(as(here.lead), { ...again, id: first.id });
+    expect(await ask(here.coordinator)).toMatchObject({ newest: { planId: first.id, version: 2 } });
+    const elsewhere = await equipSite();
+    await expect(getNewestVersion(as(elsewhere.radiographer), { bookingId: here.booking.id })).rejects.toMatchObject({ code: 'not-found' });
+  });
+});
 
 describe('saving a plan', () => {
   it('stores what was sent with the server’s own answer, and the booking shows it', async () => {
