@@ -5,8 +5,8 @@ interface Counts {
   readonly scanners: number;
   readonly protocols: number;
   readonly policyVersion: number;
-  /** Whether mail stays here: only with the local mail catcher. */
-  readonly catchesMail: boolean;
+  /** Mails that were given up. */
+  readonly undelivered: number;
 }
 
 /** The set-up pages a person may open, from the one permission table. */
@@ -57,16 +57,13 @@ export function siteEntries(actor: Actor, counts: Counts): SiteEntry[] {
       text: 'Who changed which record, and when',
       needs: 'audit.read',
     },
-    ...(counts.catchesMail
-      ? [
-          {
-            href: '/site/mail',
-            title: 'Caught mail',
-            text: 'What this installation would have sent',
-            needs: 'mail.read-caught' as const,
-          },
-        ]
-      : []),
+    {
+      href: '/site/mail',
+      title: 'Mail',
+      text: 'What went out, what waits, and what was not accepted',
+      ...(counts.undelivered === 0 ? {} : { state: `${counts.undelivered} not delivered` }),
+      needs: 'mail.read',
+    },
   ];
   return all.filter((entry) => mayAttempt(actor, entry.needs)).map(({ needs: _needs, ...entry }) => entry);
 }

@@ -20,6 +20,8 @@ export const MAIL_KINDS = {
   'sign-off-asked': planNews,
   'plan-for-use': planNews,
   'plan-sent-back': planNews,
+  /** A booking by its id and reference; why the lead is asked stands on its page. */
+  escalation: z.strictObject({ schemaVersion: z.literal(1), bookingId: z.uuid(), reference: z.string().max(64) }),
 } as const;
 
 export type MailKind = keyof typeof MAIL_KINDS;
@@ -87,6 +89,15 @@ const DRAFTS: Drafts = {
     subject: `Plan sent back: ${nameOf(payload)}`,
     paragraphs: [`At ${siteName} a radiologist sent your plan back: ${nameOf(payload)}. The reason stands on its page.`],
     link: { words: 'Open the plan', url },
+    closing: NO_SIZES,
+  }),
+  escalation: ({ reference }, siteName, url) => ({
+    subject: `A lead is asked to decide: ${reference}`,
+    paragraphs: [
+      `At ${siteName} nobody but a lead can decide how the booking ${reference} goes on.`,
+      'Why you are asked, and what was found, stands on its page.',
+    ],
+    link: { words: 'Open the booking', url },
     closing: NO_SIZES,
   }),
 };

@@ -91,14 +91,14 @@ describe('the outbox', () => {
     expect(server.mails.filter((mail) => mail.messageId === message_id)).toHaveLength(1);
   });
 
-  it('gives a mail up after its last try, visibly, and then empties its payload', async () => {
+  it('gives a mail up after its last try, visibly, and keeps what is needed to send it again', async () => {
     const person = await site.person('lead');
     const id = await invite(person.userId);
     server.refuse('550 no such mailbox');
     for (let attempt = 1; attempt < MAX_ATTEMPTS; attempt++) expect(await deliver(id, LATER(attempt))).toBe('put back');
     expect(await deliver(id, LATER(MAX_ATTEMPTS))).toBe('given up');
     server.accept();
-    expect(await row(id)).toMatchObject({ status: 'failed', attempts: MAX_ATTEMPTS, payload: { schemaVersion: 1 } });
+    expect(await row(id)).toMatchObject({ status: 'failed', attempts: MAX_ATTEMPTS, payload: { schemaVersion: 1, expiresAt: EXPIRES } });
     expect((await row(id)).last_error).toContain('no such mailbox');
   });
 

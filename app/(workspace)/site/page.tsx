@@ -4,7 +4,7 @@ import { siteEntries } from '@/components/site/site-entries';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
-import { catchesMail } from '@/lib/services/mail/list-caught-mail';
+import { countUndelivered } from '@/lib/services/mail/list-mail';
 import { listProtocols } from '@/lib/services/protocol/list-protocols';
 import { listScanners } from '@/lib/services/scanner/list-scanners';
 import { getPolicy } from '@/lib/services/site-policy/get-policy';
@@ -13,12 +13,13 @@ import { getSite } from '@/lib/services/site/get-site';
 export const metadata: Metadata = { title: 'Site' };
 
 export default async function SitePage() {
-  const { actor, site, scanners, protocols, policy } = await loadPage(async (context) => ({
+  const { actor, site, scanners, protocols, policy, undelivered } = await loadPage(async (context) => ({
     actor: context.actor,
     site: await getSite(context),
     scanners: await listScanners(context),
     protocols: await listProtocols(context),
     policy: await getPolicy(context),
+    undelivered: await countUndelivered(context),
   }));
   const set = scanners.length > 0 && protocols.length > 0;
   return (
@@ -32,7 +33,7 @@ export default async function SitePage() {
           scanners: scanners.length,
           protocols: protocols.length,
           policyVersion: policy.version,
-          catchesMail: catchesMail(),
+          undelivered,
         })}
       />
     </PageBody>

@@ -1,6 +1,6 @@
 import type { SiteTransaction } from '@/db/client';
 
-/** A mail that is sent or given up keeps no payload: a link in it would open an account for whoever reads the table. */
+/** A mail that is sent keeps no payload. One that is given up does: it may be sent again, and its payload holds no secret. */
 const ERASED = JSON.stringify({ schemaVersion: 1 });
 
 export async function recordSent(trx: SiteTransaction, siteId: string, id: string, now: Date): Promise<void> {
@@ -24,9 +24,7 @@ export async function recordFailure(
     .set((eb) => ({
       attempts: eb('attempts', '+', 1),
       last_error: failure.error.slice(0, 500),
-      ...(failure.nextAttemptAt
-        ? { next_attempt_at: failure.nextAttemptAt }
-        : { status: 'failed', payload: ERASED }),
+      ...(failure.nextAttemptAt ? { next_attempt_at: failure.nextAttemptAt } : { status: 'failed' }),
     }))
     .where('site_id', '=', siteId)
     .where('id', '=', id)

@@ -4,11 +4,13 @@ import { insertEntry } from '@/db/queries/booking-entry/booking-entries';
 import { authorise, type Action } from '@/lib/domain/access';
 import type { EntryDocument, EntryKind } from '@/lib/domain/booking/entry';
 import { ServiceError } from '@/lib/domain/errors';
+import { queueMail } from '@/lib/mail';
 import { addNoteInput } from '@/lib/schemas/booking-entry';
 import { surgeryInput } from '@/lib/schemas/pre-check';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { recordAudit } from '../audit/record-audit';
 import { nowOf, type ServiceContext } from '../context';
+import { thoseWhoMay } from '../mail/those-who-may';
 import { bookingsChanged } from '../pre-check/mark-changed';
 
 interface Line {
@@ -37,12 +39,15 @@ export async function addNote(context: ServiceContext, input: unknown): Promise<
   await writeLine(context, { bookingId, action: 'booking.note', kind: 'note', note, fields: ['note'] });
 }
 
-/** Asks a lead to decide, with why. */
+/** Asks a lead to decide, with why, and tells the leads by mail that one of them is asked. */
 export async function escalateBooking(context: ServiceContext, input: unknown): Promise<void> {
   const { bookingId, note } = parseInput(addNoteInput, input);
   await writeLine(context, { bookingId, action: 'booking.escalate', kind: 'escalated', note, fields: ['escalation'] }, async (trx, booking) => {
     if (booking.state.escalation === 'open') throw new ServiceError('conflict', { message: 'A lead has been asked already; add a note instead.' });
     await setEscalation(trx, booking.siteId, booking.id, 'open', nowOf(context));
+    for (const userId of await thoseWhoMay(trx, context.actor, 'booking.decide')) {
+      await queueMail(trx, booking.siteId, { kind: 'escalation', to: { userId }, payload: { bookingId: booking.id, reference: booking.accession } });
+    }
   });
 }
 

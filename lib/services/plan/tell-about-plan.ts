@@ -1,17 +1,8 @@
 import type { SiteTransaction } from '@/db/client';
-import { listPeople } from '@/db/queries/app-user/read-people';
-import { PERMISSIONS, type Action, type Actor } from '@/lib/domain/access';
+import type { Actor } from '@/lib/domain/access';
 import type { PlanRecord } from '@/lib/domain/plan/plan';
 import { queueMail } from '@/lib/mail';
-
-/** Everyone at work who may do this, but the one who has just acted. */
-async function thoseWhoMay(trx: SiteTransaction, actor: Actor, action: Action): Promise<string[]> {
-  const { roles } = PERMISSIONS[action];
-  const people = await listPeople(trx, actor.siteId);
-  return people
-    .filter((person) => person.status === 'active' && person.id !== actor.userId && roles.some((role) => person.roles.includes(role)))
-    .map(({ id }) => id);
-}
+import { thoseWhoMay } from '../mail/those-who-may';
 
 type News = 'sign-off-asked' | 'plan-for-use' | 'plan-sent-back';
 
