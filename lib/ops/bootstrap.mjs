@@ -77,11 +77,14 @@ function hasPostgres() {
   }
 }
 
+function requireRoot(what, packages) {
+  if (process.getuid?.() === 0) return;
+  stop(`${what} is not here, and only root may install it. As root: apt-get install ${packages.join(' ')}`);
+}
+
 function aptInstall(what, packages) {
-  if (process.getuid?.() !== 0) {
-    stop(`${what} is missing and only root may install it. As root: apt-get install ${packages.join(' ')}`);
-  }
-  if (!existsSync('/usr/bin/apt-get')) stop(`${what} is missing, and this is not a Debian machine: install it by hand.`);
+  requireRoot(what, packages);
+  if (!existsSync('/usr/bin/apt-get')) stop(`${what} is not here, and this is not a Debian machine: install it by hand.`);
   console.log(`Installing ${what} from Debian …`);
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   try {
@@ -97,6 +100,7 @@ function aptInstall(what, packages) {
 
 /** Debian's package would make and start a cluster of its own; we use one of ours and leave the machine's habits as they were. */
 function installPostgres() {
+  requireRoot('PostgreSQL', ['postgresql']);
   aptInstall('PostgreSQL’s cluster tools', ['postgresql-common']);
   const file = '/etc/postgresql-common/createcluster.conf';
   const before = existsSync(file) ? readFileSync(file, 'utf8') : null;
