@@ -36,7 +36,10 @@ describe('how far EPI displaces fat', () => {
 
   it('whole widths change nothing that is seen', () => {
     // 447.1 Hz · 2 ms = 0.894 widths one way is 0.106 the other way.
-    expect(fatShares(planar({ echoSpacingMs: 2, fatDisplacedTowards: 'high-end' }), 3)[0]).toBeCloseTo(-0.106, 3);
+    expect(fatShares(planar({ echoSpacingMs: 2, fatDisplacedTowards: 'high-end' }), 3)[0]).toBeCloseTo(
+      -0.106,
+      3,
+    );
   });
 
   it('nothing elsewhere, and nothing without an echo spacing', () => {
@@ -68,9 +71,13 @@ describe('the closed form with displaced fat', () => {
   it('one polarity can leave a smaller width clean than both do', () => {
     const one = (shares: readonly number[]) =>
       solveFold(
-        sampleProblem([boxPart('part', { xMm: [-50, 50], yMm: [150, 250], zMm: [-200, 200] })], samplePrescription(), {
-          fatShares: shares,
-        }),
+        sampleProblem(
+          [boxPart('part', { xMm: [-50, 50], yMm: [150, 250], zMm: [-200, 200] })],
+          samplePrescription(),
+          {
+            fatShares: shares,
+          },
+        ),
       ).requirement().alwaysCleanMm;
     expect(one([])).toBe(400);
     // The part lies at the high end: fat that goes on outwards asks for 400/0.8, fat that comes inwards for less than water.
@@ -148,9 +155,9 @@ describe('displaced, then folded: every cell of a lattice', () => {
 
   it(`${runs} cases, plain and unfolded in the image`, () => {
     const range = (low: number, high: number) =>
-      fc.tuple(fc.integer({ min: low, max: high - 1 }), fc.integer({ min: 1, max: high - low })).map(
-        ([from, length]): readonly [number, number] => [from, Math.min(high, from + length)],
-      );
+      fc
+        .tuple(fc.integer({ min: low, max: high - 1 }), fc.integer({ min: 1, max: high - low }))
+        .map(([from, length]): readonly [number, number] => [from, Math.min(high, from + length)]);
     const box = fc.tuple(range(-5, 5), range(-45, 45));
     let widths = 0;
     let folding = 0;
@@ -181,14 +188,22 @@ describe('displaced, then folded: every cell of a lattice', () => {
             centreMm: [0, centre * unit, 0],
             fovPhaseMm: 2 * fovHalf * unit,
             fovReadoutMm: 10 * unit,
-            acceleration: { ...samplePrescription().acceleration, factorPhase: factor, unfolding: 'image-domain-grid-ends' },
+            acceleration: {
+              ...samplePrescription().acceleration,
+              factorPhase: factor,
+              unfolding: 'image-domain-grid-ends',
+            },
           });
           const problem = sampleProblem(
             tissue.map(([r, p], i) => boxPart(`${i}`, { xMm: mm(r), yMm: mm(p), zMm: [-200, 200] })),
             prescription,
             {
               keepClear: {
-                axes: [[1, 0, 0], [0, 1, 0], [0, 0, 1]],
+                axes: [
+                  [1, 0, 0],
+                  [0, 1, 0],
+                  [0, 0, 1],
+                ],
                 rangesMm: [mm(area[0]), mm([p0, p1]), [-100, 100]],
               },
               marginMm: { ...NO_MARGIN_MM, anterior: margin[0] * unit, posterior: margin[1] * unit },
@@ -199,7 +214,15 @@ describe('displaced, then folded: every cell of a lattice', () => {
           // Multiples of 24 keep displacements by eighths and sixths, and thirds and quarters of W, on the lattice.
           for (let width = 24 * Math.ceil(fovHalf / 12); width <= 144; width += 24) {
             const found = (by: readonly number[]) =>
-              seenInArea(tissue, [area[0], [p0, p1]], margin, centre, width, by.map((one) => one * width), factor);
+              seenInArea(
+                tissue,
+                [area[0], [p0, p1]],
+                margin,
+                centre,
+                width,
+                by.map((one) => one * width),
+                factor,
+              );
             const expected = found([0, ...shares]);
             widths++;
             if (expected) folding++;
@@ -213,7 +236,11 @@ describe('displaced, then folded: every cell of a lattice', () => {
     // The cases are worth asking: a good part fold, and some only because fat is displaced.
     expect(folding).toBeGreaterThan(widths / 10);
     expect(onlyByFat).toBeGreaterThan(widths / 100);
-    tally('displaced fat on a lattice', runs, `${widths} widths, ${folding} fold, ${onlyByFat} only by fat, none differs`);
+    tally(
+      'displaced fat on a lattice',
+      runs,
+      `${widths} widths, ${folding} fold, ${onlyByFat} only by fat, none differs`,
+    );
   });
 });
 
@@ -240,7 +267,9 @@ describe('the drawing and the picture show what the rule says', () => {
         echoSpacingMs: 0.9,
         bandwidthHzPerPixel: 20000,
         slices: { mode: 'stack', slices: 1, thicknessMm: 5, gapMm: 0 },
-        acceleration: accelerated(factor, { unfolding: factor > 1 ? 'image-domain-grid-ends' : 'k-space-self-calibrating' }),
+        acceleration: accelerated(factor, {
+          unfolding: factor > 1 ? 'image-domain-grid-ends' : 'k-space-self-calibrating',
+        }),
         ...(towards && { fatDisplacedTowards: towards }),
       }),
     });
@@ -252,8 +281,12 @@ describe('the drawing and the picture show what the rule says', () => {
         for (let lines = 160; lines <= 300; lines += 7) {
           const asked = given(lines, 230, towards, factor);
           const drawing = drawSection(asked);
-          const drawn = [...drawing.pieces, ...drawing.ghosts].filter(({ inKeepClear }) => inKeepClear.length > 0);
-          expect(drawn.length > 0, `${lines} lines ${towards} R ${factor}`).toBe(assess(asked).fold!.inKeepClear);
+          const drawn = [...drawing.pieces, ...drawing.ghosts].filter(
+            ({ inKeepClear }) => inKeepClear.length > 0,
+          );
+          expect(drawn.length > 0, `${lines} lines ${towards} R ${factor}`).toBe(
+            assess(asked).fold!.inKeepClear,
+          );
           if (drawn.length > 0) inside++;
           const names = [...drawing.pieces, ...drawing.ghosts].map(({ name }) => name);
           expect(new Set(names).size).toBe(names.length);
@@ -265,7 +298,10 @@ describe('the drawing and the picture show what the rule says', () => {
   const brightness = (asked: ReturnType<typeof given>) => {
     // A part of no other kind is painted as fat through and through.
     const parts = asked.patient.parts!.map((part) => ({ ...part, kind: 'other' as const }));
-    const image = simulateImage({ ...asked, patient: { ...asked.patient, parts } }, { noiseShare: 0, sizePx: 160 });
+    const image = simulateImage(
+      { ...asked, patient: { ...asked.patient, parts } },
+      { noiseShare: 0, sizePx: 160 },
+    );
     return [...image.values].reduce((most, value, i) => {
       const x = -160 + ((i % 160) + 0.5) * 2;
       const y = -160 + (Math.floor(i / 160) + 0.5) * 2;

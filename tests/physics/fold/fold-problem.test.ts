@@ -13,7 +13,7 @@ import {
   typicalPrescription,
   typicalScanner,
 } from '@/tests/support/physics-cases';
-import { boxPart, NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-problem';
+import { boxPart, ellipsePart, NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-problem';
 
 describe('where the scanner maps rightly', () => {
   const volume = (position: 'head-first-supine' | 'head-first-prone') =>
@@ -110,5 +110,16 @@ describe('the width that covers the body', () => {
     expect(cover(160, 170, 0, { posterior: 3, anterior: 9 })).toBeCloseTo(358, 9);
     expect(cover(160, 170, 0, { posterior: 25, anterior: 9 })).toBeCloseTo(370, 9);
     expect(cover(100, 90, 0)).toBe(300);
+  });
+  it('asks only about rows that the picture shows', () => {
+    // An ellipse of half-depth 200 and half-breadth 150, in rows from x 10 to 110 and from −110 to −10: deepest at 10.
+    for (const centreX of [60, -60, 0]) {
+      const given = sampleProblem(
+        [ellipsePart('trunk', [0, 0], [150, 200])],
+        samplePrescription({ centreMm: [centreX, 0, 0], fovReadoutMm: 100 }),
+      );
+      const deepest = centreX === 0 ? 200 : 200 * Math.sqrt(1 - (10 / 150) ** 2);
+      expect(solveFold(given).requirement().coverBodyMm).toBeCloseTo(2 * deepest, 6);
+    }
   });
 });

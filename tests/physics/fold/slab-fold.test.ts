@@ -45,6 +45,16 @@ describe('phase and slice folds together', () => {
     // Arm 150–250 must not reach |z| < 100 from W_z away: W_z ≥ 350, 175 partitions of 2 mm, 176 in steps of 4.
     expect(solved.smallestCleanPartitions(360)).toBe(176);
     expect(solved.smallestCleanPartitions(600)).toBe(100 + 0);
+    // The scanner's own most is still allowed, and one less than needed is not enough.
+    const upTo = (acquiredPartitionsMax: number) =>
+      solveFold(
+        sampleProblem([trunk, arm], prescription, {
+          tissueReachMm: 260,
+          partitionStep: 4,
+          acquiredPartitionsMax,
+        }),
+      ).smallestCleanPartitions(360);
+    expect([upTo(176), upTo(175)]).toEqual([176, undefined]);
   });
 
   it('a non-selective slab sees all tissue within reach, an ideal slab none beyond its edges', () => {

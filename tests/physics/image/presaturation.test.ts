@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { simulateImage } from '@/lib/physics';
 import { presaturatedWeight } from '@/lib/physics/body/presaturated-weight';
 import type { Prescription, PresaturationBand } from '@/lib/physics/model/prescription';
-import { sketchCase, typicalPrescription } from '@/tests/support/physics-cases';
+import { prescriptionOf, sketchCase, slabOf, typicalPrescription } from '@/tests/support/physics-cases';
 
 /** The whole body inside the picture, 4 mm pixels, chemical shift of a fifth of a pixel: nothing folds or moves. */
 const open = (overrides: Partial<Prescription>): Prescription =>
@@ -66,7 +66,7 @@ describe('a presaturation band in the picture', () => {
     const band: PresaturationBand = {
       side: 'anterior',
       innerEdgeMm: 60,
-      thicknessMm: 400,
+      thicknessMm: 64,
       nominalFlipDeg: 90,
       delayMs: 10,
     };
@@ -82,9 +82,10 @@ describe('a presaturation band in the picture', () => {
         // Readout is turned 30° from left towards posterior, phase from posterior towards right.
         const [r, p] = [(x + 0.5) * 4 - 320, (y + 0.5) * 4 - 320];
         const anterior = -(r * Math.sin(Math.PI / 6) + p * Math.cos(Math.PI / 6));
-        if (Math.abs(anterior - band.innerEdgeMm) < 10) continue;
+        const beyond = anterior - band.innerEdgeMm;
+        if (Math.abs(beyond) < 10 || Math.abs(beyond - band.thicknessMm) < 10) continue;
         const after = under.values[y * 160 + x]!;
-        if (anterior > band.innerEdgeMm) {
+        if (beyond > 0 && beyond < band.thicknessMm) {
           darker++;
           if (!(after / before < 0.05)) wrong.push(`in it ${x}, ${y}: ${after / before}`);
         } else {
@@ -130,5 +131,41 @@ describe('a presaturation band in the picture', () => {
     expect(one / none).toBeGreaterThan(0.3);
     expect(two / none).toBeCloseTo((one / none) ** 2, 5);
     expect(one / none).toBeLessThanOrEqual(presaturatedWeight(70, 1, 10, 250) + 1e-6);
+  });
+});
+
+describe('a slab that is not selective', () => {
+  // Fat at the side of a trunk that goes on along z: tissue is seen 250 mm each way, so copies S apart that lie in it add up.
+  it.each([
+    [70, 7],
+    [100, 5],
+    [120, 5],
+    [130, 3],
+    [260, 1],
+  ])('of %d mm shows every copy that coil and magnet see: %d', (slabMm, copies) => {
+    const at = (thicknessMm: number) =>
+      simulateImage(
+        sketchCase({
+          prescription: {
+            ...prescriptionOf('gradient-echo-3d'),
+            ...({
+              fovPhaseMm: 640,
+              linesAcrossFov: 160,
+              acquiredLines: 160,
+              fovReadoutMm: 640,
+              readoutMatrix: 160,
+              bandwidthHzPerPixel: 1200,
+            } as const),
+            slices: slabOf({
+              selective: false,
+              partitions: 20,
+              acquiredPartitions: 20,
+              partitionThicknessMm: thicknessMm / 20,
+            }),
+          },
+        }),
+        { noiseShare: 0, sizePx: 160 },
+      ).values[80 * 160 + Math.floor((320 + 228) / 4)]!;
+    expect(at(slabMm) / at(600)).toBeCloseTo(copies, 5);
   });
 });

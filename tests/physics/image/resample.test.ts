@@ -106,6 +106,8 @@ describe('one row whose FOV centre lies off the origin', () => {
     [-65, 340, 1],
     [40, 300, 2],
     [25, 320, 3],
+    [200, 300, 1],
+    [-230, 310, 2],
   ])('centre %d mm, W %d mm, R %d', (centreMm, widthMm, ghostFactor) => {
     const sampling = { centreMm, fovMm: 280, widthMm, pixels: 280, ghostFactor };
     const row = new Float64Array(280);

@@ -366,7 +366,31 @@ describe('presaturation', () => {
     const band = remedy.prescription.presaturation[0]!;
     expect(band).toMatchObject({ side: 'posterior', innerEdgeMm: 150, thicknessMm: 20 });
     expect(remedy.prescription.sliceTimeMs).toBeGreaterThan(given.prescription.sliceTimeMs);
-    expect(remedy.sideEffects.join()).toContain('20 % at 80°');
+    expect(remedy.sideEffects.join()).toContain('3 % stays at a true 90°');
+  });
+
+  // What a band leaves of fat at the site's true flip: 3, 20 and 36 % at 90, 80 and 70° (fat T1 300 ms, 10 ms later).
+  it.each([
+    [1, '3 % stays at a true 90°', 'fold-outside-keep-clear'],
+    [80 / 90, '20 % stays at a true 80°', 'fold-in-keep-clear'],
+    [70 / 90, '36 % stays at a true 70°', 'fold-in-keep-clear'],
+    [undefined, '33 % stays at a true 72°, taken as this site has not measured it', 'fold-in-keep-clear'],
+  ] as const)('at a true flip of %s of nominal %s', (presaturationB1Scale, words, verdict) => {
+    const { presaturationB1Scale: _, ...unmeasured } = given.policy;
+    const policy = { ...unmeasured, ...(presaturationB1Scale !== undefined && { presaturationB1Scale }) };
+    const remedy = byKey(rankRemedies({ ...given, policy }), 'presaturation')!;
+    expect(remedy.sideEffects.join()).toContain(words);
+    expect(remedy.assessment.verdict).toBe(verdict);
+    const said = assess({ ...given, policy, prescription: remedy.prescription }).assumptions;
+    expect(said.some(({ field }) => field === 'policy.presaturationB1Scale')).toBe(
+      presaturationB1Scale === undefined,
+    );
+  });
+
+  it('follows the tolerance: dimmed to a fifth it counts no more where a quarter is tolerated', () => {
+    const policy = typicalPolicy({ ...given.policy, presaturationB1Scale: 80 / 90, tissueTolerance: 0.25 });
+    const remedy = byKey(rankRemedies({ ...given, policy }), 'presaturation')!;
+    expect(remedy.assessment.verdict).toBe('fold-outside-keep-clear');
   });
 
   it('never counts as nothing: with no tolerance the dimmed tissue still folds', () => {
