@@ -1,7 +1,7 @@
 import { hatch } from '@/components/schematic/scene/rings';
-import { fitScene, fromPixels, type Bounds, type Ring, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
+import { fitScene, fromPixels, type AreaNode, type Bounds, type Ring, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
 import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
-import { slabScene } from '@/components/schematic/scene/slab-scene';
+import { HEIGHT_SHARE, slabScene } from '@/components/schematic/scene/slab-scene';
 import { sliceAxisOf } from '@/lib/domain/case/lines';
 import { geometryCase } from '@/lib/physics/assess/assess';
 import { freeze } from '@/lib/physics/assess/geometry-class';
@@ -11,6 +11,7 @@ import type { PartitionResult, SlabResult } from '@/lib/physics/model/assessment
 import type { Case } from '@/lib/physics/model/case';
 import { slabSources } from '@/lib/physics/slab/assess-slab';
 import type { SlabSource, TissueAlongSlab } from '@/lib/physics/slab/slab-types';
+import { between, slabSketch, type Lane } from './slab-body';
 
 export interface SlabStageInput {
   readonly question: Case;
@@ -29,9 +30,19 @@ export interface Travel {
   readonly partitions: readonly PartitionResult[];
 }
 
-/** Height of the profile's plateau and of the body's lane below it, as shares of the acquired slab. */
-const PLATEAU = 0.42;
-const LANE = [0.13, 0.27] as const;
+/** Room for the highest bar above the base line, and the body's lane below it, as shares of the acquired slab. */
+const HIGHEST = 0.66;
+const LANE = [0.13, 0.41] as const;
+/** Below the lane: two paths and a line of words. */
+const BELOW = 0.62;
+
+const PROFILE_NAMES: Readonly<Record<SlabResult['profileKind'], string>> = {
+  'single-pulse': 'profile of a single pulse',
+  spoiled: 'profile of a spoiled steady state',
+  'non-selective': 'no slab is selected',
+};
+/** What the bench says at places where here something else is drawn. */
+const SAID_HERE = new Set(['partition/axis', 'keep-clear/label', 'acquired-edge/label']);
 
 const worstAt = (sources: readonly SlabSource[], slabMm: number, z: number): number =>
   Math.max(...sources.map(({ profile, shiftShare }) => profile.at(z / slabMm - shiftShare)));
@@ -76,23 +87,28 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
   const reach = Math.max(widthMm * 0.6, ...travels.flatMap(({ sourceMm }) => sourceMm.map((z) => Math.abs(z) + 0.04 * widthMm)));
   const highest = Math.max(...slab.partitions.map(({ signal, alias }) => signal + alias));
   const half = Math.min(reach, 1.5 * widthMm);
-  const wanted: Bounds = { left: -half * 1.04, right: half * 1.04, top: -widthMm * PLATEAU * Math.max(1.5, highest + 0.1), bottom: widthMm * 0.45 };
+  const heightShare = Math.min(HEIGHT_SHARE, HIGHEST / (highest + 0.1));
+  const plateau = widthMm * heightShare;
+  const wanted: Bounds = { left: -half * 1.04, right: half * 1.04, top: -plateau * Math.max(1.7, highest + 0.15), bottom: widthMm * BELOW };
   const fit = fitScene(wanted, size.widthPx, size.heightPx);
   const [left, top] = fromPixels(fit, [0, 0]);
   const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
   const bounds = { left, right, top, bottom };
   const mmPerPx = 1 / fit.scale;
-  const above = slabScene({ slab, sliceAxis: sliceAxisOf(plane), partitionThicknessMm: thickness, acquiredSlabMm: widthMm, bounds, mmPerPx });
+  const above = slabScene({ slab, sliceAxis: sliceAxisOf(plane), partitionThicknessMm: thickness, acquiredSlabMm: widthMm, bounds, mmPerPx, heightShare });
   const lane = [LANE[0] * widthMm, LANE[1] * widthMm] as const;
+  const sketch = slabSketch(given, lane).map((organ) => ({ ...organ, rings: organ.rings.map((ring) => between(ring, [left, right])) }));
   return {
     bounds,
     nodes: [
       ...bodyNodes(tissue, bounds, lane),
+      ...sketch,
       ...stackNodes(slab, slices, lane),
-      ...above.nodes.filter(({ name }) => name !== 'partition/axis'),
-      skirtNode(sources, slabMm, bounds, widthMm * PLATEAU),
-      ...travels.flatMap((travel) => travelNodes(travel, AXIS_SIDES[sliceAxisOf(plane)], lane, mmPerPx)),
-      ...chosenNodes(slab, sliceOffsetMm, thickness, widthMm, lane),
+      ...above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/')),
+      ...wordNodes(slab, { widthMm, thickness, plateau, bounds, mmPerPx }),
+      skirtNode(sources, slabMm, bounds, plateau),
+      ...travels.flatMap((travel) => travelNodes(travel, { sides: AXIS_SIDES[sliceAxisOf(plane)], lane, mmPerPx, bounds, sketch })),
+      ...chosenNodes(slab, sliceOffsetMm, thickness, 1.12 * plateau, lane),
     ],
   };
 }
@@ -100,8 +116,6 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
 const box = (from: number, to: number, [upper, lower]: readonly [number, number]): Ring => [
   [from, upper], [to, upper], [to, lower], [from, lower],
 ];
-
-type Lane = readonly [number, number];
 
 function bodyNodes(tissue: TissueAlongSlab, bounds: Bounds, lane: Lane): SceneNode[] {
   const [from, to] = [Math.max(tissue.rangeMm[0], bounds.left), Math.min(tissue.rangeMm[1], bounds.right)];
@@ -122,7 +136,7 @@ function stackNodes(slab: SlabResult, slices: { acquiredPartitions: number; part
   ] as const);
   const discarded = cuts.flatMap(([from, to]) => [box(-to, -from, lane), box(from, to, lane)]);
   return [
-    { kind: 'area', name: 'stack', rings, fill: 'tissue-lean', stroke: { colour: 'ink-soft', widthPx: 0.75, edge: 'solid' } },
+    { kind: 'area', name: 'stack', rings, stroke: { colour: 'ink', widthPx: 0.75, edge: 'solid' } },
     ...(discarded.length > 0
       ? [{ kind: 'area', name: 'stack/cut-off', rings: discarded, stroke: { colour: 'ink-soft', widthPx: 0.75, edge: 'dotted' } } as const]
       : []),
@@ -143,7 +157,46 @@ function skirtNode(sources: readonly SlabSource[], slabMm: number, bounds: Bound
   };
 }
 
-function travelNodes({ end, sourceMm, landedMm, partitions }: Travel, sides: readonly [string, string], lane: Lane, mmPerPx: number): SceneNode[] {
+/** Which profile it is, what is acquired, and what is to stay free: each where nothing else is drawn. */
+function wordNodes(
+  slab: SlabResult,
+  { widthMm, thickness, plateau, bounds, mmPerPx }: { widthMm: number; thickness: number; plateau: number; bounds: Bounds; mmPerPx: number },
+): SceneNode[] {
+  const kept = slab.partitions.filter(({ inKeepClear }) => inKeepClear);
+  const [first, last] = [kept[0], kept.at(-1)];
+  const note = (name: string, text: string, at: ScreenPoint, offsetPx: ScreenPoint, anchor: 'start' | 'middle' | 'end', colour: Token): SceneNode => ({
+    kind: 'text', name, text, at, offsetPx, anchor, size: 'note', colour,
+  });
+  const edge = Math.max(bounds.top + 20 * mmPerPx, -1.45 * plateau);
+  return [
+    note('acquired-edge/label', `acquired ${Math.round(widthMm)} mm`, [-widthMm / 2, edge], [-10, 0], 'end', 'ink-soft'),
+    note('profile/name', PROFILE_NAMES[slab.profileKind], [widthMm / 2, edge], [10, 0], 'start', 'ink'),
+    ...(first && last
+      ? [note('keep-clear/label', 'keep-clear area', [(first.offsetMm + last.offsetMm) / 2, -1.25 * plateau], [0, -6], 'middle', 'indigo')]
+      : []),
+    ...(slab.partitions.length === 0 ? [] : [note('stack/label', `${slab.partitions.length} partitions of ${Math.round(thickness * 10) / 10} mm`, [0, 0], [0, 18], 'middle', 'ink-soft')]),
+  ];
+}
+
+interface TravelFrame {
+  readonly sides: readonly [string, string];
+  readonly lane: Lane;
+  readonly mmPerPx: number;
+  readonly bounds: Bounds;
+  readonly sketch: readonly AreaNode[];
+}
+
+/** The organs of what travels, where it lands. */
+function landedOrgans({ end, sourceMm, landedMm }: Travel, sketch: readonly AreaNode[]): SceneNode[] {
+  const shift = landedMm[0] - sourceMm[0];
+  return sketch.flatMap((organ): SceneNode[] => {
+    const rings = organ.rings.map((ring) => between(ring, sourceMm).map(([z, v]) => [z + shift, v] as const)).filter((ring) => ring.length > 2);
+    return rings.length > 0 ? [{ ...organ, name: `${organ.name}/landed-${end}`, rings }] : [];
+  });
+}
+
+function travelNodes(travel: Travel, { sides, lane, mmPerPx, bounds, sketch }: TravelFrame): SceneNode[] {
+  const { end, sourceMm, landedMm, partitions } = travel;
   const kept = partitions.some(({ inKeepClear }) => inKeepClear);
   const colour: Token = kept ? 'thread' : 'ochre';
   const landed = box(landedMm[0], landedMm[1], lane);
@@ -152,7 +205,9 @@ function travelNodes({ end, sourceMm, landedMm, partitions }: Travel, sides: rea
   const [from, to] = [middle(sourceMm), middle(landedMm)];
   return [
     { kind: 'area', name: `travel/${end}/source`, rings: [box(sourceMm[0], sourceMm[1], lane)], stroke: { colour, widthPx: 1.5, edge: 'solid' } },
-    { kind: 'area', name: `travel/${end}/landed`, rings: [landed], fill: kept ? 'thread-wash' : 'ochre-wash', fillOpacity: 0.7, stroke: { colour, widthPx: 1.5, edge: 'solid' } },
+    { kind: 'area', name: `travel/${end}/ground`, rings: [landed], fill: 'tissue-fat' },
+    ...landedOrgans(travel, sketch),
+    { kind: 'area', name: `travel/${end}/landed`, rings: [landed], fill: kept ? 'thread-wash' : 'ochre-wash', fillOpacity: 0.35, stroke: { colour, widthPx: 1.5, edge: 'solid' } },
     { kind: 'lines', name: `travel/${end}/hatch`, lines: hatch([landed], end === 'high' ? 45 : -45, 6 * mmPerPx), stroke: { colour, widthPx: 1.25, edge: 'solid' } },
     {
       kind: 'lines', name: `travel/${end}/path`,
@@ -161,18 +216,18 @@ function travelNodes({ end, sourceMm, landedMm, partitions }: Travel, sides: rea
     },
     {
       kind: 'text', name: `travel/${end}/label`, text: `from beyond the ${end === 'high' ? sides[1] : sides[0]} end`,
-      at: [landedMm[end === 'high' ? 0 : 1], lane[1]], offsetPx: [0, 40], anchor: end === 'high' ? 'start' : 'end', size: 'note', colour,
+      at: [end === 'high' ? bounds.right : bounds.left, lane[1]], offsetPx: [end === 'high' ? -6 : 6, 42], anchor: end === 'high' ? 'end' : 'start', size: 'note', colour,
     },
   ];
 }
 
-function chosenNodes(slab: SlabResult, offsetMm: number, thickness: number, widthMm: number, lane: Lane): SceneNode[] {
+function chosenNodes(slab: SlabResult, offsetMm: number, thickness: number, top: number, lane: Lane): SceneNode[] {
   const chosen = nearestPartition(slab, offsetMm);
   if (!chosen) return [];
   const [from, to] = [chosen.offsetMm - thickness / 2, chosen.offsetMm + thickness / 2];
   return [
     {
-      kind: 'area', name: 'chosen-partition', rings: [box(from, to, [-PLATEAU * widthMm * 1.12, lane[1]])],
+      kind: 'area', name: 'chosen-partition', rings: [box(from, to, [-top, lane[1]])],
       stroke: { colour: 'indigo', widthPx: 1.75, edge: 'solid' },
     },
   ];

@@ -13,10 +13,12 @@ export interface SlabSceneInput {
   readonly acquiredSlabMm: number;
   readonly bounds: Bounds;
   readonly mmPerPx: number;
+  /** A signal of 1 is drawn this share of the acquired slab high. */
+  readonly heightShare?: number;
 }
 
 /** A signal of 1 is drawn this share of the acquired slab high. */
-const HEIGHT_SHARE = 0.42;
+export const HEIGHT_SHARE = 0.42;
 
 export function slabBounds(acquiredSlabMm: number): Bounds {
   const half = acquiredSlabMm / 2;
@@ -29,8 +31,8 @@ export function slabBounds(acquiredSlabMm: number): Bounds {
  * Low end of the slice axis on the left.
  */
 export function slabScene(input: SlabSceneInput): Scene {
-  const { slab, bounds, acquiredSlabMm, partitionThicknessMm, mmPerPx } = input;
-  const height = acquiredSlabMm * HEIGHT_SHARE;
+  const { slab, bounds, acquiredSlabMm, partitionThicknessMm, mmPerPx, heightShare = HEIGHT_SHARE } = input;
+  const height = acquiredSlabMm * heightShare;
   const bar = (partition: PartitionResult, from: number, to: number): Ring => {
     const half = partitionThicknessMm * 0.43;
     const { offsetMm: at } = partition;

@@ -50,6 +50,30 @@ describe('between two scenes', () => {
     expect(u(edge(middle))).toBeCloseTo((u(edge(from.picture)) + u(edge(to.picture))) / 2, 9);
   });
 
+  it('moves landed pieces whose outline has another number of points, and slides in those that are new', () => {
+    const [before, less, none] = ['axial-fold/0', 'axial-fold/1', 'axial-fold/2'].map((id) => drawn(shown.find((scene) => scene.id === id)!).picture);
+    const landed = (picture: typeof from.picture) => picture.nodes.filter(({ name }) => name.endsWith('/landed'));
+    const extent = (node: (typeof from.picture.nodes)[number]) => {
+      const points = node.kind === 'area' ? node.rings.flat() : [];
+      const [us, vs] = [points.map(([u]) => u), points.map(([, v]) => v)];
+      return [Math.min(...us), Math.max(...us), Math.min(...vs), Math.max(...vs)];
+    };
+    const pairs = landed(less!).map((node) => [landed(before!).find(({ name }) => name === node.name)!, node, landed(betweenScenes(before!, less!, 0.5)).find(({ name }) => name === node.name)!] as const);
+    expect(pairs).toHaveLength(2);
+    for (const [a, b, middle] of pairs) {
+      expect(extent(a)).not.toEqual(extent(b));
+      extent(middle).forEach((value, i) => expect(value).toBeCloseTo((extent(a)[i]! + extent(b)[i]!) / 2, 6));
+    }
+    // Back from a picture without any: each comes from where its tissue lies, one acquired width away.
+    expect(landed(none!)).toEqual([]);
+    const arriving = landed(betweenScenes(none!, before!, 0));
+    expect(arriving).toHaveLength(2);
+    for (const node of arriving) {
+      const there = landed(before!).find(({ name }) => name === node.name)!;
+      expect(Math.abs(extent(node)[2]! - extent(there)[2]!)).toBeCloseTo(300, 6);
+    }
+  });
+
   it('moves the numbers too', () => {
     const [a, b] = ['slab-wrap/0', 'slab-wrap/1'].map((id) => figuresOf(assess(shown.find((scene) => scene.id === id)!.question)));
     const middle = mixFigures(a!, b!, 0.5);

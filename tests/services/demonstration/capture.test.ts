@@ -39,7 +39,7 @@ describe('a scene captured from a booking’s bench', () => {
   });
 
   it('rounds arms, legs and the keep-clear area too, and keeps no outline of a person', () => {
-    const [{ question }] = findSetPiece('axial-fold')!.scenes() as [{ question: Case }];
+    const { question } = findSetPiece('axial-fold')!.scenes()[0]!;
     const measured: Case = {
       ...question,
       patient: {
