@@ -107,6 +107,13 @@ export function ModelGroup() {
           hint="1 to 40; smaller is more cautious"
           step={0.5}
         />
+        <FormNumber
+          name="presaturationB1Scale"
+          schema={policyShape.presaturationB1Scale}
+          label="True flip of presaturation bands"
+          hint="0.3 to 2 of nominal; empty: not measured, 0.8"
+          step={0.05}
+        />
         <FormNumber name="tissueT1Ms.parenchyma" schema={tissueT1Shape.parenchyma} step={10} />
         <FormNumber name="tissueT1Ms.fat" schema={tissueT1Shape.fat} step={10} />
       </div>

@@ -311,8 +311,10 @@ export const evenMargin = (mm: number): SitePolicy['marginMm'] => ({
   inferior: mm,
 });
 
+/** The default policy of a site that has measured its presaturation bands and found them true. */
 export const typicalPolicy = (overrides: Partial<SitePolicy> = {}): SitePolicy => ({
   ...DEFAULT_POLICY,
+  presaturationB1Scale: 1,
   ...overrides,
 });
 

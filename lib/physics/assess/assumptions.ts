@@ -5,6 +5,7 @@ import type { Case } from '../model/case';
 import type { Reading, ReadingSource } from '../model/patient';
 import { isAccelerated, unfoldingOf, withUnfolding } from './resolve-unfolding';
 import { solveClass, type FrozenCase } from './geometry-class';
+import { CAUTIOUS_B1_SCALE } from '../body/presaturated-weight';
 import { fatShares } from '../fold/fat-shares';
 import { acquiredWidthMmOf } from '../sequence/displacement';
 import { figure } from './words';
@@ -135,6 +136,20 @@ function displacementAssumptions({ prescription: p, scanner }: Case): Assumption
   return assumptions;
 }
 
+/** How true a band's flip is, where the site has not measured it. */
+function presaturationAssumptions({ prescription: p, policy }: Case): Assumption[] {
+  if (p.presaturation.length === 0 || policy.presaturationB1Scale !== undefined) return [];
+  return [
+    {
+      field: 'policy.presaturationB1Scale',
+      used: String(CAUTIOUS_B1_SCALE),
+      text:
+        `The true flip of presaturation bands is not measured here: ${figure(CAUTIOUS_B1_SCALE)} of nominal is taken. ` +
+        'At the nominal flip a band would leave 3 % of fat’s signal instead of a third.',
+    },
+  ];
+}
+
 /**
  * Everything that stood in for something unknown, with what knowing it would change.
  * @param given sizes as recorded (not yet taken at the policy's certainty)
@@ -161,6 +176,7 @@ export function assumptionsFor(given: FrozenCase): readonly Assumption[] {
     ...unfoldingAssumption(given),
     ...slabAssumptions(given),
     ...displacementAssumptions(given),
+    ...presaturationAssumptions(given),
     {
       field: 'prescription.coil',
       used: 'every weight 1',

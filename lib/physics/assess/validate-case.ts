@@ -71,6 +71,8 @@ function validatePolicy(policy: SitePolicy): void {
   requireBetween('policy.slabTolerance', policy.slabTolerance, 0.0001, 1, '');
   requireBetween('policy.sureAt', policy.sureAt, 0.5, 0.999, '');
   requireBetween('policy.unknownTimeBandwidthProduct', policy.unknownTimeBandwidthProduct, 1, 64, '');
+  if (policy.presaturationB1Scale !== undefined)
+    requireBetween('policy.presaturationB1Scale', policy.presaturationB1Scale, 0.3, 2, '');
   requireBetween('policy.tissueT1Ms.parenchyma', policy.tissueT1Ms.parenchyma, 1, 10_000, 'ms');
   requireBetween('policy.tissueT1Ms.fat', policy.tissueT1Ms.fat, 1, 10_000, 'ms');
   requireBetween('policy.tolerateFoldOutsidePct', policy.tolerateFoldOutsidePct, 0, 100, '%');

@@ -1,4 +1,5 @@
 import { buildBody } from '../body/build-body';
+import { b1ScaleOf } from '../body/presaturated-weight';
 import { keepClearRegion, type OrientedRegion } from '../geometry/oriented-region';
 import type { PerSide, Vec3 } from '../model/axes';
 import type { Case } from '../model/case';
@@ -89,7 +90,7 @@ export function foldProblem(question: Case, changes: Partial<FoldProblem> = {}):
       ? Math.floor(slab.partitions * (1 + limits.sliceOversamplingMaxPct / 100) + 1e-9)
       : 1,
     presaturatedT1Ms: [policy.tissueT1Ms.parenchyma, policy.tissueT1Ms.fat],
-    presaturationB1Scale: 1,
+    presaturationB1Scale: b1ScaleOf(policy),
     fatShares: fatShares(prescription, scanner.fieldStrengthT),
     ...changes,
   };

@@ -1,7 +1,7 @@
 import { unfoldingRule } from '../acceleration/unfolding-rule';
 import { geometryCase } from '../assess/assess';
 import { slabWeightFor } from '../assess/geometry-class';
-import { presaturatedWeight } from '../body/presaturated-weight';
+import { b1ScaleOf, presaturatedWeight } from '../body/presaturated-weight';
 import { fatWaterShiftHz } from '../constants/larmor';
 import { sectionFrame, type SectionFrame } from '../geometry/section-frame';
 import { AXIS_SIDES, AXIS_VECTOR, dot } from '../geometry/vector';
@@ -82,6 +82,7 @@ function paintRow(scene: Scene, sampling: RowSampling, row: number, sliceMm: num
   const { prescription: p, scanner } = given;
   const r = frame.centreReadoutMm - p.fovReadoutMm / 2 + ((row + 0.5) * p.fovReadoutMm) / grid.rows;
   const normals = p.presaturation.map(bandNormal);
+  const b1Scale = b1ScaleOf(given.policy);
   const offsets = normals.map(
     (normal) => dot(normal, frame.readout) * r + dot(normal, frame.slice) * sliceMm,
   );
@@ -111,7 +112,7 @@ function paintRow(scene: Scene, sampling: RowSampling, row: number, sliceMm: num
     p.presaturation.forEach((band, i) => {
       const along = offsets[i]! + dot(normals[i]!, frame.phase) * middle;
       if (along < band.innerEdgeMm || along > band.innerEdgeMm + band.thicknessMm) return;
-      signal *= presaturatedWeight(band.nominalFlipDeg, 1, band.delayMs, RELAXATION[tissue].t1Ms);
+      signal *= presaturatedWeight(band.nominalFlipDeg, b1Scale, band.delayMs, RELAXATION[tissue].t1Ms);
     });
     if (tissue === 'fat' && p.fatSuppressed) {
       // Suppression works where the field was evened out, which is the picture; rim fat beyond it stays bright.

@@ -45,6 +45,11 @@ export interface SitePolicy {
   /** Cautious time-bandwidth product used when a scanner's slab pulse is unknown. */
   readonly unknownTimeBandwidthProduct: number;
   readonly tissueT1Ms: { readonly parenchyma: number; readonly fat: number };
+  /**
+   * True over nominal flip of presaturation bands over outlying tissue, as measured on site, 0.3–2; absent: not measured,
+   * and the cautious CAUTIOUS_B1_SCALE is taken.
+   */
+  readonly presaturationB1Scale?: number;
   /** Geometry factor range by overlap count m (index 2, 3, 4) when the site has no table. */
   readonly geometryFactorByOverlap: Readonly<Record<'2' | '3' | '4', readonly [number, number]>>;
   readonly strictBreathHold: boolean;

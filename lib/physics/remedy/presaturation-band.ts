@@ -1,3 +1,5 @@
+import { b1ScaleOf, presaturatedWeight } from '../body/presaturated-weight';
+import type { Case } from '../model/case';
 import { figure, OPPOSITE_SIDE } from '../assess/words';
 import type { Prescription, PresaturationBand } from '../model/prescription';
 import { changed, NOTHING_TO_CHANGE, refused, withPrescription, type Change } from './change';
@@ -15,6 +17,14 @@ function bandTiming(p: Prescription): Partial<Prescription> | undefined {
   return p.slices.mode === 'slab'
     ? { trMs: p.trMs + BAND_TIME_MS }
     : { sliceTimeMs: p.sliceTimeMs + BAND_TIME_MS };
+}
+
+/** What stays of fat under the band, at the flip this site's policy expects. */
+function leftWords(band: PresaturationBand, { policy }: Case): string {
+  const scale = b1ScaleOf(policy);
+  const left = presaturatedWeight(band.nominalFlipDeg, scale, band.delayMs, policy.tissueT1Ms.fat);
+  const measured = policy.presaturationB1Scale === undefined ? ', taken as this site has not measured it' : '';
+  return `${Math.round(left * 100)} % stays at a true ${figure(band.nominalFlipDeg * scale)}°${measured}`;
 }
 
 /**
@@ -47,6 +57,6 @@ export const presaturation: Change = (given, solver) => {
   return changed(
     withPrescription(given, { presaturation: [...p.presaturation, band], ...timing }),
     `${figure(thicknessMm)} mm band on the ${side} side: more SAR and ${BAND_TIME_MS} ms more a slice`,
-    `Fold from the ${side} onto the ${OPPOSITE_SIDE[side]} side is dimmed, not removed: 3 % stays at a true 90°, 20 % at 80°`,
+    `Fold from the ${side} onto the ${OPPOSITE_SIDE[side]} side is dimmed, not removed: ${leftWords(band, given)}`,
   );
 };

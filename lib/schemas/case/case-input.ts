@@ -287,6 +287,7 @@ export const policyInput = strict(
     slabTolerance: policyShape.slabTolerance.optional(),
     sureAt: policyShape.sureAt.optional(),
     unknownTimeBandwidthProduct: policyShape.unknownTimeBandwidthProduct.optional(),
+    presaturationB1Scale: policyShape.presaturationB1Scale,
     tissueT1Ms: strict(tissueT1Shape).partial().describe('T1 for spoiled slab profiles [ms].').optional(),
     geometryFactorByOverlap: strict(geometryShape).partial().describe('Geometry factor range by overlap count.').optional(),
     strictBreathHold: policyShape.strictBreathHold.optional(),

@@ -72,6 +72,8 @@ export const policyShape = {
   slabTolerance: quantity({ min: 0.001, max: 1, unit: '1', text: 'A partition is contaminated above this share of plateau' }),
   sureAt: quantity({ min: 0.5, max: 0.999, unit: '1', text: 'How sure a verdict must be' }),
   unknownTimeBandwidthProduct: quantity({ min: 1, max: 40, unit: '1', text: 'Cautious time-bandwidth product used when the slab pulse is unknown' }),
+  presaturationB1Scale: quantity({ min: 0.3, max: 2, unit: '1', text: 'True over nominal flip of presaturation bands, as measured; left out: not measured, 0.8' })
+    .optional(),
   tissueT1Ms: strict(tissueT1Shape, 'T1 used for spoiled slab profiles [ms].'),
   geometryFactorByOverlap: strict(geometryShape, 'Geometry factor range by the number of overlapping aliases.'),
   strictBreathHold: flag('A hold beyond the patient’s limit rules a remedy out instead of costing points.'),

@@ -18,6 +18,17 @@ describe('the site policy', () => {
     expect(event).toMatchObject({ subject_id: site.siteId, fields: ['sureAt'] });
   });
 
+  it('holds the true flip of presaturation bands once it was measured, and not when it is taken back', async () => {
+    const site = await createTestSite();
+    const lead = await site.person('lead');
+    const { policy } = await editPolicy(as(lead), { expectedVersion: 0, form: { ...policyForm(), presaturationB1Scale: 0.9 } });
+    expect(policy.presaturationB1Scale).toBe(0.9);
+    expect((await editPolicy(as(lead), { expectedVersion: 1, form: policyForm() })).policy).not.toHaveProperty('presaturationB1Scale');
+    await expect(editPolicy(as(lead), { expectedVersion: 2, form: { ...policyForm(), presaturationB1Scale: 0.1 } })).rejects.toMatchObject({
+      fields: { 'form.presaturationB1Scale': '0.1 given; allowed: a number, 0.3 to 2' },
+    });
+  });
+
   it('of two edits of one version, one wins and the other is told', async () => {
     const site = await createTestSite();
     const lead = await site.person('lead');
