@@ -22,6 +22,7 @@ interface Options {
   readonly players: number;
   readonly budgetMs: number;
   readonly resume: boolean;
+  readonly again: boolean;
   readonly out: string;
 }
 
@@ -36,6 +37,7 @@ function readOptions(args: readonly string[]): Options {
       file: { type: 'string', multiple: true, default: [] },
       budget: { type: 'string', default: '10' },
       resume: { type: 'boolean', default: false },
+      again: { type: 'boolean', default: false },
       out: { type: 'string', default: '.data/mutation.json' },
     },
   });
@@ -47,14 +49,25 @@ function readOptions(args: readonly string[]): Options {
     files: values.file,
     budgetMs: Number(values.budget) * 1000,
     resume: values.resume,
+    again: values.again,
     out: path.resolve(ROOT, values.out),
   };
 }
 
 const hashOf = (text: string): string => createHash('sha256').update(text).digest('hex').slice(0, 24);
 
+function lastResults({ out }: Options): readonly Result[] {
+  if (!existsSync(out)) return [];
+  return (JSON.parse(readFileSync(out, 'utf8')) as { results: Result[] }).results;
+}
+
 /** The mutants asked for: of some files, a seeded sample of them with so many of each folder at least, or all. */
-function choose(mutants: readonly Mutant[], { files, sample, seed, leastPerFolder }: Options): Mutant[] {
+function choose(mutants: readonly Mutant[], options: Options): Mutant[] {
+  const { files, sample, seed, leastPerFolder } = options;
+  if (options.again) {
+    const left = new Set(lastResults(options).filter(isLeft).map(keyOf));
+    return mutants.filter((mutant) => left.has(keyOf(mutant)));
+  }
   const chosen = mutants.filter(
     ({ file }) => files.length === 0 || files.some((part) => file.includes(part)),
   );
@@ -153,10 +166,9 @@ async function playOne(
 }
 
 /** The last run's killed mutants of files that are still the same. */
-function killedBefore({ resume, out }: Options): Map<string, Result> {
-  if (!resume || !existsSync(out)) return new Map();
-  const { results } = JSON.parse(readFileSync(out, 'utf8')) as { results: Result[] };
-  const same = results.filter(
+function killedBefore(options: Options): Map<string, Result> {
+  if (!options.resume) return new Map();
+  const same = lastResults(options).filter(
     ({ outcome, file, from }) => outcome === 'killed' && from === hashOf(sourceText(file)),
   );
   return new Map(same.map((result) => [keyOf(result), result]));
@@ -165,8 +177,8 @@ function killedBefore({ resume, out }: Options): Map<string, Result> {
 /**
  * `npm run mutate`: changes one sign, limit, constant or connective of lib/physics after another and runs the tests that
  * reach it; what no test notices is listed. --sample N --seed S draws some, --least N of each folder at least; --file PART
- * takes some files; --resume plays only what the last run left; --budget S is the most processor time a mutant may cost;
- * --players N processes play side by side.
+ * takes some files; --resume takes over what the last run killed; --again plays what it left, and nothing else;
+ * --budget S is the most processor time a mutant may cost; --players N processes play side by side.
  */
 export async function mutate(args: readonly string[]): Promise<void> {
   const options = readOptions(args);
@@ -179,6 +191,7 @@ export async function mutate(args: readonly string[]): Promise<void> {
   const finished = () => done.filter((result) => result !== undefined);
   const keep = () => {
     const { sample, seed, leastPerFolder } = options;
+    if (options.again) return;
     const results = finished();
     mkdirSync(path.dirname(options.out), { recursive: true });
     writeFileSync(
