@@ -13,8 +13,10 @@ export function openDatabase(connectionString: string, options: { max?: number }
     idleTimeoutMillis: 30_000,
     application_name: 'selvedge',
   });
-  // An idle connection that the server drops would otherwise end the process; the next query reconnects.
+  // A connection that the server drops, idle or in the middle of a transaction, would otherwise end the process: what
+  // was running on it is told by its own rejection, and the next query reconnects.
   pool.on('error', () => {});
+  pool.on('connect', (client) => client.on('error', () => {}));
   return new Kysely<DB>({ dialect: new PostgresDialect({ pool }) });
 }
 

@@ -23,6 +23,12 @@ async function main(): Promise<void> {
   const transport = smtpTransport();
   const boss = new PgBoss({ connectionString: databaseUrl, max: 4, migrate: false, schedule: false });
   boss.on('error', (error) => console.error(`queue: ${error.message}`));
+  // The queue notes down how a job ended without waiting for the answer. While the database is away that note is lost,
+  // and the job with it: the sweep does what it would have done. Anything else that nobody caught still ends the process.
+  process.on('unhandledRejection', (error) => {
+    if (!(error instanceof Error) || !error.stack?.includes('pg-boss')) throw error;
+    console.error(`queue: ${error.message}`);
+  });
   await boss.start();
 
   const deliver = async (payload: JobPayload<'deliver-mail'>) => {

@@ -4,9 +4,9 @@ import path from 'node:path';
 import { type Cluster, ensureDatabase, startCluster } from '@/db/local';
 import { prepareDatabase } from '@/lib/ops/prepare-database';
 
-const PREFIX = 'selvedge-test-';
+export const PREFIX = 'selvedge-test-';
 /** Throw-away data behind passwords that everyone may read: nothing but invented rows ever gets there. */
-const SECRETS = { superuserPassword: 'test', ownerPassword: 'test', appPassword: 'test' };
+export const SECRETS = { superuserPassword: 'test', ownerPassword: 'test', appPassword: 'test' };
 
 export const TEMPLATE = 'selvedge_template';
 
