@@ -19,6 +19,9 @@ export interface ImportProps extends ImportBasis {
   readonly settings: ImportSettings;
 }
 
+/** Beside the 200 of one file at most; a site keeps up to 500. */
+const MOST_KEPT_NAMES = 250;
+
 export type Counts = Readonly<Record<RowOutcome, number>>;
 export type Step =
   | { readonly at: 'choose' }
@@ -38,6 +41,9 @@ function matchNames(names: readonly string[], known: readonly Named[], before: R
     }),
   );
 }
+
+/** The names matched last of those a site may keep, so that one file's names always have room beside them. */
+const mostRecent = (names: Readonly<Record<string, string>>) => Object.fromEntries(Object.entries(names).slice(-MOST_KEPT_NAMES));
 
 /** The columns of the last file that this one has too, else what the titles propose. */
 function startingColumns({ columns, proposed }: OpenedFile, kept: ImportSettings['columns']): ImportSettings['columns'] {
@@ -76,19 +82,30 @@ export function useImport({ mask, zone, slotMinutes, scanners, protocols, settin
       ...next,
       units: { ...found.units, ...Object.fromEntries(Object.entries(next.units).filter(([field]) => field in found.units)) },
       ...(found.dateOrder ? { dateOrder: found.dateOrder } : {}),
-      scanners: matchNames(found.scanners, scanners, next.scanners),
-      protocols: matchNames(found.protocols, protocols, next.protocols),
+      ...namesOf(found, next),
     });
   };
+  /** Names of this file beside those of earlier ones, which the next file may bring again. */
+  const namesOf = (found: Survey, before: ImportSettings) => ({
+    scanners: { ...mostRecent(before.scanners), ...matchNames(found.scanners, scanners, before.scanners) },
+    protocols: { ...mostRecent(before.protocols), ...matchNames(found.protocols, protocols, before.protocols) },
+  });
 
   return {
     step, file, survey, settings, problem, session,
     choose: (chosen: File) =>
       guarded({ at: 'choose' }, async () => {
         const opened = await session().open(chosen);
-        const columns = startingColumns(opened, kept.columns);
-        // Units kept from the last file hold only for its own columns.
-        await look({ ...kept, columns, units: columns === opened.proposed ? {} : kept.units });
+        if (opened.kind === 'fhir') {
+          // It has no columns: how tables are read stays as it was.
+          const found = await session().survey({});
+          setSurvey(found);
+          setSettings({ ...kept, ...namesOf(found, kept) });
+        } else {
+          const columns = startingColumns(opened, kept.columns);
+          // Units kept from the last file hold only for its own columns.
+          await look({ ...kept, columns, units: columns === opened.proposed ? {} : kept.units });
+        }
         setFile({ ...opened, name: chosen.name });
         setStep({ at: 'columns' });
       }),

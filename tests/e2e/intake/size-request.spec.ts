@@ -13,7 +13,7 @@ test('a size request is answered from its mail on a phone and flips the booking'
   await page.getByLabel('Protocol', { exact: true }).selectOption({ label: 'Pelvis' });
   await page.getByRole('button', { name: /^Add/ }).click();
   await expect(page).toHaveURL(/\/bookings\/[0-9a-f-]{36}/);
-  const panel = page.getByRole('region', { name: 'Pre-check' });
+  const panel = page.locator('section').filter({ has: page.getByRole('heading', { name: 'Pre-check' }) });
   const shown = async () => {
     await page.reload();
     return panel.textContent();
