@@ -25,7 +25,7 @@ const capital = (words: string): string => words.charAt(0).toUpperCase() + words
 const labelOf = (area: Area): string => capital(area.kind === 'box' ? (area.label ?? 'own box') : 'whole picture');
 
 /** What can be chosen: where the bench began, then every preset of the body part, laid into this patient. */
-export function keepClearChoices(start: KeepClear, patient: Patient, asked: boolean): KeepClearChoice[] {
+export function keepClearChoices(start: KeepClear, patient: Pick<Patient, 'extents' | 'region'>, asked: boolean): KeepClearChoice[] {
   const extents = Object.fromEntries(SIDES.map((side) => [side, patient.extents[side].value])) as Record<Side, number>;
   const presets = keepClearPresetsFor(patient.region).flatMap(({ key, label }) => {
     const area = keepClearOfPreset(key, extents)?.area;

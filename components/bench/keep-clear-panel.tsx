@@ -20,11 +20,12 @@ export function KeepClearPanel({ preset, asked }: { preset: KeepClear; asked?: s
   const frozen = useBenchState((state) => sequenceById(state.document, state.activeId).frozenKeepClear !== undefined);
   const plane = useBenchState((state) => sequenceById(state.document, state.activeId).prescription.plane);
   // Presets follow the body's size; while it is dragged the picture comes first.
-  const patient = useDeferredValue(useBenchState((state) => state.document.patient));
+  const extents = useDeferredValue(useBenchState((state) => state.document.patient.extents));
+  const region = useBenchState((state) => state.document.patient.region);
   const { area } = keepClear;
   const edit = (next: KeepClear['area'], step?: string) =>
     store.dispatch({ type: 'edit-keep-clear', keepClear: { ...keepClear, area: next }, ...(step === undefined ? {} : { step }) });
-  const choices = useMemo(() => keepClearChoices(preset, patient, asked !== undefined), [preset, patient, asked]);
+  const choices = useMemo(() => keepClearChoices(preset, { extents, region }, asked !== undefined), [preset, extents, region, asked]);
   const chosen = choices.find((choice) => isSameArea(choice.area, area))?.value ?? OWN;
   const sides = sidesBeginningWith(sidesOfPlane(plane));
   return (

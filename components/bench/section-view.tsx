@@ -86,7 +86,8 @@ export function SectionView() {
       <div id="section-in-words" className="sr-only" aria-live="off">
         {shown && assessment && (
           <ul>
-            {describeSection(shown.drawing, assessment.phaseAxis, assessment.readoutAxis).map((line) => (
+            {/* Displaced fat, and each multiple of a ghost, are pieces of their own that the same words may tell. */}
+            {[...new Set(describeSection(shown.drawing, assessment.phaseAxis, assessment.readoutAxis))].map((line) => (
               <li key={line}>{line}</li>
             ))}
           </ul>

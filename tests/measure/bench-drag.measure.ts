@@ -7,13 +7,20 @@ import playwright from '@/playwright.config';
 import { quantile, type Measure, type MeasureRow } from './row';
 
 const DRAG_MS = 5_000;
-const HANDLES: readonly (readonly [id: string, by: readonly [number, number]])[] = [
+type Begin = (page: Page) => Promise<void>;
+const mustStay: Begin = (page) => page.getByRole('checkbox', { name: 'More must stay displayed' }).check();
+const bore: Begin = (page) => page.getByRole('radio', { name: 'Bore', exact: true }).check();
+
+/** One handle of each kind, with what puts it in sight. */
+const HANDLES: readonly (readonly [id: string, by: readonly [number, number], begin?: Begin])[] = [
   ['fov-phase-low', [0, -30]],
   ['fov-readout-high', [30, 0]],
   ['fov-centre', [15, 20]],
   ['fov-rotation', [25, 25]],
   ['keep-clear-anterior', [0, 25]],
+  ['must-stay-posterior', [0, 15], mustStay],
   ['extent-anterior', [0, -15]],
+  ['lateral-offset', [25, 0], bore],
 ];
 
 interface TraceEvent {
@@ -50,9 +57,10 @@ function frameWork(events: readonly TraceEvent[]): FrameWork {
   };
 }
 
-async function dragged(browser: Browser, page: Page, id: string, by: readonly [number, number]): Promise<FrameWork> {
+async function dragged(browser: Browser, page: Page, id: string, by: readonly [number, number], begin?: Begin): Promise<FrameWork> {
   await page.reload();
   await benchAnswers(page);
+  await begin?.(page);
   await browser.startTracing(page, { categories: ['toplevel', 'devtools.timeline', 'disabled-by-default-devtools.timeline'] });
   await dragHandle(page, id, by, DRAG_MS);
   const trace = JSON.parse((await browser.stopTracing()).toString()) as { traceEvents: TraceEvent[] };
@@ -79,8 +87,8 @@ export const measure: Measure = async () => {
     await page.goto('/bench');
     await benchAnswers(page);
     const rows: MeasureRow[] = [];
-    for (const [id, by] of HANDLES) {
-      const { wall, processor, longTasks } = await dragged(browser, page, id, by);
+    for (const [id, by, begin] of HANDLES) {
+      const { wall, processor, longTasks } = await dragged(browser, page, id, by, begin);
       const against = `${wall.length} frames of a 5 s drag`;
       rows.push(
         { what: `main thread per frame, p95, ${id}`, value: quantile(wall, 0.95), unit: 'ms', against, aim: 'at most 12 ms' },

@@ -14,7 +14,7 @@ export default function QuickCheckPage() {
         lead="What folds, from four values. For a patient with a booking, plan on the bench."
         actions={<LinkButton href="/bench">Open the bench without a booking</LinkButton>}
       />
-      <QuickCheck />
+      <QuickCheck titled={false} />
     </PageBody>
   );
 }

@@ -34,11 +34,11 @@ export function SolveAll({ mayEdit, children }: { mayEdit: boolean; children: Re
   return (
     <>
       <SequenceStrip>
-        <div className="flex flex-wrap items-start justify-between gap-x-3 gap-y-2">
-          <div className="min-w-0 flex-1 basis-40">{children}</div>
+        <div className="relative">
+          {children}
           {mayEdit && solving.kind === 'idle' && <Start onStart={start} />}
           {solving.kind === 'working' && (
-            <p role="status" className="text-sm">
+            <p role="status" className="mt-1 text-sm">
               Looking for the cheapest{' '}
               {solving.total > 0 && <span className="figures whitespace-nowrap">{solving.done + 1} of {solving.total}</span>}
               <Button size="sm" className="ml-2" onClick={leave}>
@@ -59,6 +59,7 @@ function Start({ onStart }: { onStart: () => void }) {
   return (
     <Button
       size="sm"
+      className="min-h-6.5! px-2.5! max-lg:absolute max-lg:-top-0.5 max-lg:right-0 lg:max-xl:mt-2 xl:absolute xl:-top-0.5 xl:right-0"
       aria-description={`${folding === 1 ? 'One sequence folds' : `${folding} sequences fold`} in the keep-clear area.`}
       onClick={onStart}
     >

@@ -8,7 +8,7 @@ import { ZoomButtons } from './zoom-buttons';
 export function ViewBar({ picture, children }: { picture: PictureZoom; children?: ReactNode }) {
   return (
     <div className="flex flex-wrap items-center justify-end gap-x-4 gap-y-1 px-5 pt-1 pb-2 text-sm">
-      {children && <div className="min-w-52 flex-1">{children}</div>}
+      {children && <div className="min-w-64 flex-1">{children}</div>}
       <ZoomButtons {...picture} />
     </div>
   );

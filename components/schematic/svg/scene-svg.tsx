@@ -101,9 +101,12 @@ function SvgNode({ node, fit, ground }: { node: SceneNode; fit: Fit; ground: Gro
   }
 }
 
-/** What lies under tissue only to tint it says nothing in black and white. */
+/**
+ * What only tints says nothing in black and white: the sketch under tissue, and the band between two outlines that are
+ * both drawn, which would print as one thick black line.
+ */
 export function onPaper(node: SceneNode): boolean {
-  return node.name !== 'outside-the-picture' && !node.name.startsWith('sketch/');
+  return node.name !== 'outside-the-picture' && !node.name.startsWith('sketch/') && !/^tissue\/.*\/band$/.test(node.name);
 }
 
 /** The same scene as the canvas, for the sheet, print and shared pages. */

@@ -1,7 +1,8 @@
+import type { Page } from '@playwright/test';
 import { expect, test } from '@/tests/support/e2e/journey';
 import { countsSoFar, dragHandle, watchDrags, type DragCounts } from '@/tests/support/e2e/drag-handle';
 import { countOf } from '@/tests/support/tally';
-import { benchAnswers, sceneNodes, sceneText, verdict } from '@/tests/support/e2e/bench-page';
+import { benchAnswers, sceneNodes, sceneText, verdict, type Stage } from '@/tests/support/e2e/bench-page';
 
 /** Each handle is swung for this long; several moves fall into one frame, so that an assessment per move would be noticed. */
 const DRAG_MS = 1_000 * countOf('SELVEDGE_DRAG_SECONDS', 5);
@@ -11,31 +12,54 @@ const MOST_NODES = 200;
 type Panel = keyof DragCounts['changes'];
 type Drag = readonly [id: string, dx: number, dy: number, untouched: readonly Panel[]];
 
+interface Drags {
+  /** What puts the handles in sight. */
+  readonly begin?: (page: Page) => Promise<void>;
+  readonly stage?: Stage;
+  readonly drags: readonly Drag[];
+}
+
 /** A panel that shows nothing of what is dragged is not to change. */
-const DRAGS: Readonly<Record<string, readonly Drag[]>> = {
-  'the window': [
-    ['fov-phase-low', 0, -30, ['patient', 'keepClear']],
-    ['fov-phase-high', 0, 30, ['patient', 'keepClear']],
-    ['fov-readout-high', 30, 0, ['patient', 'keepClear']],
-    ['fov-centre', 15, 20, ['patient', 'keepClear']],
-    ['fov-rotation', 25, 25, ['patient', 'keepClear']],
-  ],
-  'the body and the keep-clear area': [
-    ['keep-clear-anterior', 0, 25, ['patient', 'prescription']],
-    ['keep-clear-left', 25, 0, ['patient', 'prescription']],
-    ['extent-anterior', 0, -15, ['prescription']],
-    ['extent-right', -15, 0, ['prescription']],
-  ],
+const DRAGS: Readonly<Record<string, Drags>> = {
+  'the window': {
+    drags: [
+      ['fov-phase-low', 0, -30, ['patient', 'keepClear']],
+      ['fov-phase-high', 0, 30, ['patient', 'keepClear']],
+      ['fov-readout-high', 30, 0, ['patient', 'keepClear']],
+      ['fov-centre', 15, 20, ['patient', 'keepClear']],
+      ['fov-rotation', 25, 25, ['patient', 'keepClear']],
+    ],
+  },
+  'the body and the areas': {
+    begin: (page) => page.getByRole('checkbox', { name: 'More must stay displayed' }).check(),
+    drags: [
+      ['keep-clear-anterior', 0, 25, ['patient', 'prescription']],
+      ['keep-clear-left', 25, 0, ['patient', 'prescription']],
+      ['must-stay-posterior', 0, 15, ['patient', 'prescription']],
+      ['extent-anterior', 0, -15, ['prescription']],
+      ['extent-right', -15, 0, ['prescription']],
+    ],
+  },
+  'the opening': {
+    begin: (page) => page.getByRole('radio', { name: 'Bore', exact: true }).check(),
+    stage: 'bore',
+    drags: [['lateral-offset', 25, 0, ['prescription', 'keepClear']]],
+  },
 };
 
-for (const [what, drags] of Object.entries(DRAGS)) {
+for (const [what, { begin, stage = 'section', drags }] of Object.entries(DRAGS)) {
   test(`handles of ${what} drag with one assessment and one draw an animation frame, and can be taken back in one step`, async ({ signedIn }) => {
     test.setTimeout(90_000 + drags.length * DRAG_MS);
     const page = await signedIn('radiographer');
     await page.goto('/bench');
     await benchAnswers(page);
-    await watchDrags(page);
+    await begin?.(page);
+    await expect(page.locator('[aria-busy="true"]')).toHaveCount(0);
+    await watchDrags(page, stage);
     for (const [id, dx, dy, untouched] of drags) {
+      const handle = page.locator(`[data-handle="${id}"]`);
+      const told = async () => (await handle.getAttribute('aria-valuetext')) ?? (await handle.getAttribute('aria-label'));
+      const start = await told();
       const before = await countsSoFar(page);
       await dragHandle(page, id, [dx, dy], DRAG_MS);
       await expect.poll(async () => (await countsSoFar(page)).assessments, { message: id }).toBeGreaterThan(before.assessments);
@@ -47,10 +71,10 @@ for (const [what, drags] of Object.entries(DRAGS)) {
       expect(after.draws - before.draws, id).toBeLessThanOrEqual(frames);
       expect(after.mostNodes, id).toBeLessThanOrEqual(MOST_NODES);
       for (const panel of untouched) expect(after.changes[panel] - before.changes[panel], `${panel} while ${id} is dragged`).toBe(0);
-      const undo = page.getByRole('button', { name: 'Undo' });
-      await undo.click();
-      await expect(undo, `${id} is one step`).toBeDisabled();
-      await benchAnswers(page);
+      expect(await told(), id).not.toBe(start);
+      await page.getByRole('button', { name: 'Undo' }).click();
+      await expect.poll(told, { message: `${id} is one step` }).toBe(start);
+      await expect(page.locator('[aria-busy="true"]')).toHaveCount(0);
     }
   });
 }
@@ -96,6 +120,38 @@ test('the picture is zoomed by wheel, keys and buttons, moved, and brought back 
   await expect(whole(100)).toBeVisible();
 });
 
+test('two fingers enlarge the picture, and every view is zoomed and moved by the same keys and buttons', async ({ signedIn }) => {
+  const page = await signedIn('radiographer');
+  await page.goto('/bench');
+  await benchAnswers(page);
+  const whole = (percent: number) => page.getByRole('button', { name: `Whole picture, now ${percent} %` });
+  const section = (await page.getByRole('group', { name: /^Section, / }).boundingBox())!;
+  const fingers = (apart: number) =>
+    [-apart, apart].map((dx, id) => ({ x: section.x + section.width / 2 + dx, y: section.y + 24, id }));
+  const touch = await page.context().newCDPSession(page);
+  await touch.send('Input.dispatchTouchEvent', { type: 'touchStart', touchPoints: fingers(60) });
+  for (const apart of [80, 100, 120]) await touch.send('Input.dispatchTouchEvent', { type: 'touchMove', touchPoints: fingers(apart) });
+  await touch.send('Input.dispatchTouchEvent', { type: 'touchEnd', touchPoints: [] });
+  await expect(whole(200)).toBeVisible();
+  for (const [view, picture] of [['Picture', 'Simulated picture'], ['Bore', /^Opening of /]] as const) {
+    await page.getByRole('radio', { name: view, exact: true }).check();
+    await expect(whole(100)).toBeVisible();
+    const box = page.getByRole('group', { name: picture });
+    await box.focus();
+    await page.keyboard.press('+');
+    await page.getByRole('button', { name: 'Zoom in' }).click();
+    await expect(whole(156)).toBeVisible();
+    const canvas = box.locator('canvas').first();
+    const seen = () => (view === 'Picture' ? canvas.boundingBox().then((at) => at?.x) : page.locator('[data-handle="lateral-offset"]').boundingBox().then((at) => at?.x));
+    const before = (await seen())!;
+    await box.focus();
+    await page.keyboard.press('ArrowRight');
+    await expect.poll(async () => Math.round((await seen())! - before)).toBe(-40);
+    await page.keyboard.press('0');
+    await expect(whole(100)).toBeVisible();
+  }
+});
+
 test('the window turns by its corner, by key and by the typed field', async ({ signedIn }) => {
   const page = await signedIn('radiographer');
   await page.goto('/bench');
@@ -132,6 +188,16 @@ test('every handle has a typed twin and arrow-key steps', async ({ signedIn }) =
   await field.fill('4000');
   await expect(page.getByText('4000 is too large. Allowed: 0 to 1000 mm.')).toBeVisible();
   await expect(extent).toHaveAttribute('aria-valuenow', String(start));
+
+  await page.getByRole('checkbox', { name: 'More must stay displayed' }).check();
+  const edge = page.getByRole('slider', { name: 'Must stay displayed, left edge' });
+  const twin = page.getByRole('group', { name: 'Must stay displayed' }).getByRole('spinbutton', { name: 'Left' });
+  const from = Number(await twin.inputValue());
+  await edge.focus();
+  await page.keyboard.press('Shift+ArrowRight');
+  await expect(twin).toHaveValue(String(from + 10));
+  await twin.fill(String(from));
+  await expect(edge).toHaveAttribute('aria-valuenow', String(from));
 });
 
 test('a landed piece is tied to where it comes from, and says so', async ({ signedIn }) => {

@@ -17,7 +17,7 @@ export async function benchAnswers(page: Page): Promise<void> {
 /** The verdict of the active sequence, in the words on the screen. */
 export const verdict = (page: Page) => page.locator('[data-verdict]:visible');
 
-type Stage = 'section' | 'slab' | 'bore';
+export type Stage = 'section' | 'slab' | 'bore';
 
 /** Names of the nodes a stage paints now: the scene is read instead of pixels. */
 export function sceneNodes(page: Page, stage: Stage): Promise<string[]> {

@@ -1,4 +1,5 @@
 import type { Page } from '@playwright/test';
+import type { Stage } from './bench-page';
 
 /** Swings there and back once in this time: a quick hand. */
 const SWING_MS = 1_500;
@@ -29,15 +30,15 @@ export interface DragCounts {
   /** Most assessments that fell between two animation frames. */
   readonly mostInAFrame: number;
   readonly draws: number;
-  /** Most nodes painted in one draw of the section. */
+  /** Most nodes painted in one draw of the picture. */
   readonly mostNodes: number;
   /** Changes of the page inside a panel. */
   readonly changes: Readonly<Record<'patient' | 'prescription' | 'keepClear', number>>;
 }
 
-/** Begins to count what the page does; `countsSoFar` reads it. */
-export async function watchDrags(page: Page): Promise<void> {
-  await page.evaluate(() => {
+/** Begins to count what the page does while one of its pictures is dragged; `countsSoFar` reads it. */
+export async function watchDrags(page: Page, picture: Stage = 'section'): Promise<void> {
+  await page.evaluate((name) => {
     const counts = { frames: 0, assessments: 0, mostInAFrame: 0, draws: 0, mostNodes: 0, changes: { patient: 0, prescription: 0, keepClear: 0 } };
     Object.assign(window, { dragCounts: counts });
     const frameTimes: number[] = [0];
@@ -57,8 +58,9 @@ export async function watchDrags(page: Page): Promise<void> {
         counts.mostInAFrame = Math.max(counts.mostInAFrame, count);
       }
     }).observe({ type: 'measure' });
-    const stage = window.selvedgeStages?.['section'];
-    stage?.getLayers()[0]?.on('draw', () => {
+    const stage = window.selvedgeStages?.[name];
+    if (!stage) throw new Error(`No picture "${name}" in sight.`);
+    stage.getLayers()[0]?.on('draw', () => {
       counts.draws += 1;
       counts.mostNodes = Math.max(counts.mostNodes, stage.find('Shape').length);
     });
@@ -67,14 +69,14 @@ export async function watchDrags(page: Page): Promise<void> {
       prescription: document.querySelector('form[aria-label^="Prescription,"]'),
       keepClear: document.querySelector('[data-field="mustStayDisplayed"]')?.closest('section') ?? null,
     };
-    for (const name of ['patient', 'prescription', 'keepClear'] as const) {
-      const panel = panels[name];
-      if (!panel) throw new Error(`No panel "${name}".`);
+    for (const side of ['patient', 'prescription', 'keepClear'] as const) {
+      const panel = panels[side];
+      if (!panel) throw new Error(`No panel "${side}".`);
       new MutationObserver((changes) => {
-        counts.changes[name] += changes.length;
+        counts.changes[side] += changes.length;
       }).observe(panel, { attributes: true, characterData: true, childList: true, subtree: true });
     }
-  });
+  }, picture);
 }
 
 export function countsSoFar(page: Page): Promise<DragCounts> {
