@@ -1,6 +1,7 @@
 import { expose, transfer } from 'comlink';
 import { foldProbability, simulateImage, toGreyLevels, type FoldProbability } from '@/lib/physics';
 import type { Case } from '@/lib/physics/model/case';
+import { fitWhite } from '../picture/fit-white';
 import type { AskedPicture, PaintedPicture } from '../picture/painted-picture';
 import { refusalOf } from './results';
 
@@ -9,7 +10,7 @@ const views = {
   picture(asked: AskedPicture): PaintedPicture {
     try {
       const { values, ...picture } = simulateImage(asked.question, asked);
-      const levels = toGreyLevels(values);
+      const levels = toGreyLevels(asked.fitWhite ? fitWhite(values) : values);
       return transfer({ ...picture, levels }, [levels.buffer]);
     } catch (error) {
       return { refusal: refusalOf(error) };

@@ -3,6 +3,8 @@ import type { Case } from '@/lib/physics/model/case';
 
 export interface AskedPicture extends ImageOptions {
   readonly question: Case;
+  /** White follows the picture; otherwise it is the sequence's own, so that now and tried can be compared. */
+  readonly fitWhite?: boolean;
 }
 
 /** Grey levels instead of brightness: a quarter of the bytes, and ready to be painted. */

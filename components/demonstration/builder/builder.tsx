@@ -76,15 +76,16 @@ export function Builder({ demonstration, save, children }: { demonstration: Demo
             </div>
           </div>
           <div className="min-w-0 space-y-4" ref={stage}>
-            <SceneStage scene={chosen} onSlice={(sliceOffsetMm) => change(chosen.id, { sliceOffsetMm })} />
+            <SceneStage scene={chosen} onSlice={(sliceOffsetMm) => change(chosen.id, { sliceOffsetMm })}>
+              <SceneControls
+                key={chosen.id}
+                ids={CONTROL_IDS.filter((id) => applies(id, chosen.question))}
+                question={chosen.question}
+                onChange={(question) => change(chosen.id, { question })}
+                className="mt-4 border-t border-line pt-3 xl:grid-cols-3"
+              />
+            </SceneStage>
             <div className="flex flex-wrap gap-2"><SaveScene stage={stage} number={at + 1} title={chosen.title} /></div>
-            <SceneControls
-              key={chosen.id}
-              ids={CONTROL_IDS.filter((id) => applies(id, chosen.question))}
-              question={chosen.question}
-              onChange={(question) => change(chosen.id, { question })}
-              className="border-t border-line pt-3 xl:grid-cols-3"
-            />
           </div>
           <div className="lg:col-span-2 2xl:col-span-1">
             <SceneFacts key={chosen.id} scene={chosen} onChange={(patch) => change(chosen.id, patch)} />

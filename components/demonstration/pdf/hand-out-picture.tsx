@@ -1,5 +1,6 @@
 import { Image, View } from '@react-pdf/renderer';
 import { pictureBounds, pictureBox } from '@/components/bench/picture/picture-layout';
+import { fitWhite } from '@/components/bench/picture/fit-white';
 import { TEXT_FONT } from '@/components/plan/pdf/sheet-fonts';
 import { ScenePdf } from '@/components/schematic/pdf/scene-pdf';
 import { pictureScene } from '@/components/schematic/scene/picture-scene';
@@ -34,7 +35,7 @@ export function SimulatedPdf({ question, sliceOffsetMm, width, size = PICTURE_PX
     <View style={{ position: 'relative', width, height: heightPx * scale }}>
       {/* A PDF's picture has no alternative text here; its words stand beside it. */}
       {/* eslint-disable-next-line jsx-a11y/alt-text */}
-      <Image src={{ data: greyPng(toGreyLevels(simulated.values), simulated.widthPx, simulated.heightPx), format: 'png' }} style={place} />
+      <Image src={{ data: greyPng(toGreyLevels(fitWhite(simulated.values)), simulated.widthPx, simulated.heightPx), format: 'png' }} style={place} />
       <View style={{ position: 'absolute', left: 0, top: 0 }}>
         <ScenePdf scene={pictureScene({ prescription, keepClear, now, bounds })} widthPx={widthPx} heightPx={heightPx} font={TEXT_FONT} width={width} />
       </View>

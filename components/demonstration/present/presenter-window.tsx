@@ -6,17 +6,17 @@ import type { DemonstrationView } from '@/lib/schemas/demonstration';
 import { formatClock } from '@/lib/presentation/duration';
 import { openChannel } from './channel';
 import { NextScene } from './next-scene';
-import { stepOfKey } from './step-of-key';
+import { isBlankKey, stepOfKey } from './step-of-key';
 
 /** The presenter's own window: what to say, what comes next, and how long it has been. */
 export function PresenterWindow({ demonstration }: { demonstration: DemonstrationView }) {
   const { id, title, scenes } = demonstration;
-  const [at, setAt] = useState<{ index: number; startedAt: number } | null>(null);
+  const [at, setAt] = useState<{ index: number; startedAt: number; blank: boolean } | null>(null);
   const [now, setNow] = useState(0);
   const channel = useRef<ReturnType<typeof openChannel> | null>(null);
   useEffect(() => {
     channel.current = openChannel(id, (message) => {
-      if (message.kind === 'at') setAt({ index: message.index, startedAt: message.startedAt });
+      if (message.kind === 'at') setAt({ index: message.index, startedAt: message.startedAt, blank: message.blank });
     });
     channel.current.send({ kind: 'ask' });
     const tick = setInterval(() => setNow(Date.now()), 500);
@@ -27,9 +27,11 @@ export function PresenterWindow({ demonstration }: { demonstration: Demonstratio
   }, [id]);
 
   const index = at?.index ?? 0;
+  const blank = at?.blank ?? false;
   const last = scenes.length - 1;
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
+      if (isBlankKey(event)) return channel.current?.send({ kind: 'blank', blank: !blank });
       const to = stepOfKey(event, index, last);
       if (to === null) return;
       event.preventDefault();
@@ -37,7 +39,7 @@ export function PresenterWindow({ demonstration }: { demonstration: Demonstratio
     };
     window.addEventListener('keydown', onKey);
     return () => window.removeEventListener('keydown', onKey);
-  }, [index, last]);
+  }, [index, last, blank]);
 
   const scene = scenes[index];
   const next = scenes[index + 1];
@@ -59,6 +61,7 @@ export function PresenterWindow({ demonstration }: { demonstration: Demonstratio
             <div className="mt-6 flex gap-3">
               <Button onClick={() => channel.current?.send({ kind: 'go', index: index - 1 })}>Back</Button>
               <Button variant="primary" onClick={() => channel.current?.send({ kind: 'go', index: index + 1 })}>Next</Button>
+              <Button aria-pressed={blank} onClick={() => channel.current?.send({ kind: 'blank', blank: !blank })}>{blank ? 'Bring the screen back' : 'Darken the screen'}</Button>
             </div>
           </section>
           <section aria-label="Next scene">

@@ -49,8 +49,8 @@ export function curveScene(points: readonly CurvePoint[], acquiredPartitions: nu
     return next ? [[x, y], [place(next)[0], y]] : [[x, y]];
   });
   const here = points.find((point) => point.acquiredPartitions === acquiredPartitions);
-  const label = (name: string, text: string, at: ScreenPoint, offsetPx: ScreenPoint, anchor: 'start' | 'middle' | 'end'): SceneNode => ({
-    kind: 'text', name, text, at, offsetPx, anchor, size: 'note', colour: 'ink-soft',
+  const label = (name: string, text: string, at: ScreenPoint, offsetPx: ScreenPoint, anchor: 'start' | 'middle' | 'end', colour: 'ink' | 'ink-soft' = 'ink-soft'): SceneNode => ({
+    kind: 'text', name, text, at, offsetPx, anchor, size: 'note', colour,
   });
   return {
     bounds: { left: -34, right: WIDTH + 24, top: -HEIGHT - 18, bottom: 38 },
@@ -65,6 +65,7 @@ export function curveScene(points: readonly CurvePoint[], acquiredPartitions: nu
       ...(here
         ? [
             { kind: 'lines', name: 'here/drop', lines: [[place(here), [place(here)[0], 0]]], stroke: { colour: 'indigo', widthPx: 1.25, edge: 'dotted' } } as const,
+            label('here/count', `${here.contaminated} at ${Math.round(here.oversamplingPct * 10) / 10} %`, place(here), [8, -8], 'start', 'ink'),
             { kind: 'marker', name: 'here', at: place(here), shape: 'dot', colour: 'indigo' } as const,
           ]
         : []),

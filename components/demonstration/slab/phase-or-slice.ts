@@ -7,6 +7,7 @@ import { answerOf } from '../stage/shown-scene';
 export interface DirectionLine {
   readonly key: 'as-set' | 'phase' | 'slice';
   readonly label: string;
+  readonly question: Case;
   readonly contaminated: number;
   readonly foldAlongPhase: boolean;
 }
@@ -31,6 +32,6 @@ export function phaseOrSlice(question: Case): readonly DirectionLine[] {
     // The area of fold counts both directions; the pieces of the middle section are those of the phase direction alone.
     const { pieces, ghosts } = drawSection(geometryCase(each));
     const foldAlongPhase = [...pieces, ...ghosts].length > 0;
-    return [{ key, label, contaminated: assessment.slab.contaminated, foldAlongPhase }];
+    return [{ key, label, question: each, contaminated: assessment.slab.contaminated, foldAlongPhase }];
   });
 }

@@ -37,9 +37,9 @@ const LANE = [0.13, 0.41] as const;
 const BELOW = 0.62;
 
 const PROFILE_NAMES: Readonly<Record<SlabResult['profileKind'], string>> = {
-  'single-pulse': 'profile of a single pulse',
-  spoiled: 'profile of a spoiled steady state',
-  'non-selective': 'no slab is selected',
+  'single-pulse': 'single-pulse profile',
+  spoiled: 'spoiled profile',
+  'non-selective': 'no slab selected',
 };
 /** What the bench says at places where here something else is drawn. */
 const SAID_HERE = new Set(['partition/axis', 'keep-clear/label', 'acquired-edge/label']);

@@ -25,6 +25,6 @@ export function useSimulated(question: Case | null, sliceOffsetMm: number, sizeP
   const engine = useContext(EngineContext);
   if (!engine) throw new Error('Only inside a PictureEngine.');
   const run = useCallback(async (asked: AskedPicture): Promise<PaintedPicture> => engine.engine().picture(asked), [engine]);
-  const job = useMemo(() => (question ? { question, sliceOffsetMm, sizePx } : null), [question, sliceOffsetMm, sizePx]);
+  const job = useMemo(() => (question ? { question, sliceOffsetMm, sizePx, fitWhite: true } : null), [question, sliceOffsetMm, sizePx]);
   return useLatest(job, run);
 }
