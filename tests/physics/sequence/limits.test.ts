@@ -5,7 +5,10 @@ import {
   acquiredViewsTwoWay,
   requirePartialFourier,
 } from '@/lib/physics/sequence/acquired-views';
-import { parallelImagingSnr } from '@/lib/physics/sequence/detail';
+import { parallelImagingSnr, snrRatio } from '@/lib/physics/sequence/detail';
+import { minimumTeMs } from '@/lib/physics/sequence/displacement';
+import { echoTrainTimeS } from '@/lib/physics/sequence/scan-time-formulas';
+import { swapAxes } from '@/lib/physics/sequence/swap-axes';
 import { scanTime } from '@/lib/physics/sequence/scan-time';
 import {
   sequentialBreathHolds,
@@ -76,6 +79,24 @@ describe('what a sequence may be', () => {
       time({ ...triggered, family: 'gradient-echo-3d', slices: slabOf(), segments: 1, averages: 1 }).scanS,
     ).toBe(4);
   });
+  it('at least one slice, line, sample and shot', () => {
+    expect(() => time({ slices: stackOf(0, 5) })).toThrow(
+      expect.objectContaining({ code: 'slices-not-whole' }),
+    );
+    expect(() => minimumTeMs(0.75, 200, 5, 2, 0)).toThrow(
+      expect.objectContaining({ code: 'shots-not-whole' }),
+    );
+    expect(minimumTeMs(0.75, 200, 5, 2, 1)).toBeCloseTo(125, 9);
+    const square = { fovPhaseMm: 300, fovReadoutMm: 300, linesAcrossFov: 200, readoutMatrix: 200 };
+    for (const none of [{ linesAcrossFov: 0 }, { readoutMatrix: 0 }])
+      expect(() => swapAxes({ ...square, ...none }, true)).toThrow(
+        expect.objectContaining({ code: 'lines-not-whole' }),
+      );
+    expect(swapAxes({ ...square, linesAcrossFov: 1, readoutMatrix: 1 }, true)).toMatchObject({
+      linesAcrossFov: 1,
+      readoutMatrix: 1,
+    });
+  });
   it('slice groups need whole slices and positive times', () => {
     expect(() => sliceBatches(0, 4)).toThrow(expect.objectContaining({ code: 'slices-not-whole' }));
     expect(sliceBatches(1, 1)).toBe(1);
@@ -130,5 +151,21 @@ describe('what a sequence may be', () => {
     expect(() => acquiredLinesOneWay(256, 0.75, 2, 129)).toThrow('referenceLines is 129; allowed: 0 to 128');
     // 256 · (2 · 0.75 − 1) = 128, exactly allowed.
     expect(acquiredLinesOneWay(256, 0.75, 2, 128)).toBe(32 + 128);
+  });
+});
+
+describe('figures compared', () => {
+  it('an SNR ratio’s range takes low with low and high with high, whichever comes first', () => {
+    const of = (snr: number, low: number, high: number) => ({
+      voxelMm: [1, 1, 1] as const,
+      snr,
+      snrRange: [low, high] as const,
+    });
+    expect(snrRatio(of(10, 8, 16), of(20, 12, 40))).toEqual({ ratio: 2, range: [1.5, 2.5] });
+    expect(snrRatio(of(10, 8, 16), of(20, 24, 20))).toEqual({ ratio: 2, range: [1.25, 3] });
+  });
+  it('an echo train’s time is TR for every train, average and batch (TR·⌈views/ETL⌉·averages·batches)', () => {
+    // 250 views in trains of 16: 16 trains; 3 s · 16 · 2 · 4.
+    expect(echoTrainTimeS(3, 250, 16, 2, 4)).toBeCloseTo(384, 9);
   });
 });

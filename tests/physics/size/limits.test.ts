@@ -6,9 +6,12 @@ import { hipBreadthFromHipGirth, hipGirthFromBmi } from '@/lib/physics/size/esti
 import {
   breadthFromGirth,
   breadthFromMeasuredGirthAndDepth,
+  breadthFromWeightAndHeight,
   depthFromGirth,
   depthFromWeightAndHeight,
+  girthFromWeightAndHeight,
 } from '@/lib/physics/size/estimate-trunk';
+import { olderDate } from '@/lib/physics/size/older-date';
 import { populationPercentileMm } from '@/lib/physics/size/population';
 import { dayNumber, readingAge } from '@/lib/physics/size/reading-age';
 import { measured } from '@/tests/support/physics-cases';
@@ -116,6 +119,50 @@ describe('fixed figures of the model', () => {
       combineReadings([exact(340, 'a'), exact(value, 'b')], { today: '2026-06-30', expiryDays: 60 }).conflicts
         .length;
     expect([apart(341.38), apart(341.39)]).toEqual([0, 1]);
+  });
+  it('three readings that scatter widen the spread by √(χ²/2), two by √χ²', () => {
+    const one = (value: number, origin: string) => ({
+      reading: { ...measured(value, 10), takenOn: '2026-06-20' },
+      origin,
+    });
+    const rule = { today: '2026-06-30', expiryDays: 60 };
+    // 300, 340, 350 about 330: χ² = (900 + 100 + 400)/100 = 14, so √7 · 10/√3.
+    expect(combineReadings([one(300, 'a'), one(340, 'b'), one(350, 'c')], rule).reading).toMatchObject({
+      value: expect.closeTo(330, 9) as number,
+      spread: expect.closeTo((Math.sqrt(7) * 10) / Math.sqrt(3), 9) as number,
+    });
+    // 300 and 340 about 320: χ² = 8.
+    expect(combineReadings([one(300, 'a'), one(340, 'b')], rule).reading!.spread).toBeCloseTo(
+      (Math.sqrt(8) * 10) / Math.sqrt(2),
+      9,
+    );
+    // Each pair is told once.
+    expect(combineReadings([one(300, 'a'), one(340, 'b'), one(345, 'c')], rule).conflicts).toHaveLength(2);
+  });
+  it('a BMI of exactly 35 is enough for weight and height', () => {
+    // 140 kg at 200 cm is 35; 139.9 kg is not.
+    const known = (kg: number) => ({ weightKg: measured(kg), heightCm: measured(200) });
+    for (const estimate of [
+      (kg: number) => depthFromWeightAndHeight(known(kg), 'male', 'liver'),
+      (kg: number) => girthFromWeightAndHeight(known(kg), 'male'),
+      (kg: number) => breadthFromWeightAndHeight(known(kg), 'male'),
+    ]) {
+      expect(estimate(140)).not.toHaveProperty('sizeNeeded');
+      expect(estimate(139.9)).toHaveProperty('sizeNeeded', true);
+    }
+    // The girth's own line for the heavy begins there as well.
+    expect(depthFromGirth(measured(1300), 'male', 35, 'iliac-crest').words).toContain('BMI 35 and over');
+    expect(depthFromGirth(measured(1300), 'male', 34.99, 'iliac-crest').words).toContain('all');
+  });
+  it('an estimate is as old as the older of what it was worked out from, and undated where one of them is', () => {
+    const on = (takenOn: string | undefined, value: number) => ({ ...measured(value), takenOn });
+    expect(hipBreadthFromHipGirth(on('2026-05-02', 1200), 'male', 30).takenOn).toBe('2026-05-02');
+    expect(hipBreadthFromHipGirth(measured(1200), 'male', 30)).not.toHaveProperty('takenOn');
+    const both = (a: string | undefined, b: string | undefined) => olderDate(on(a, 1), on(b, 1));
+    expect(both('2026-05-02', '2026-04-30')).toBe('2026-04-30');
+    expect(both('2026-04-30', '2026-05-02')).toBe('2026-04-30');
+    expect(both('2026-04-30', undefined)).toBeUndefined();
+    expect(both(undefined, '2026-04-30')).toBeUndefined();
   });
   it('of one origin the surest stands; then the better kind, then the later', () => {
     const rule = { today: '2026-06-30', expiryDays: 60 };

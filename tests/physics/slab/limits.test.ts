@@ -4,10 +4,13 @@ import {
   slabPartitionsAt,
   smallestCleanPartitions,
 } from '@/lib/physics/slab/contaminated-partitions';
-import { transitionProduct } from '@/lib/physics/slab/skirt-rules';
+import { mostPartitions } from '@/lib/physics/slab/assess-slab';
+import { SINGLE_PULSE_SKIRT_RULE, transitionProduct } from '@/lib/physics/slab/skirt-rules';
 import { slabProfile } from '@/lib/physics/slab/slab-profile';
 import type { SlabQuestion } from '@/lib/physics/slab/slab-types';
 import { expectLimits } from '@/tests/support/expect-limits';
+import { slabOf, typicalScanner } from '@/tests/support/physics-cases';
+import { readPublished } from '@/tests/support/read-published';
 
 const profile = slabProfile({ timeBandwidthProduct: 8, flipDeg: 10, kind: 'single-pulse' });
 const question = (overrides: Partial<SlabQuestion>): SlabQuestion => ({
@@ -89,5 +92,33 @@ describe('what a slab may be', () => {
     }
     // Half the plateau lies at the nominal edge: no skirt beyond it at 90 %.
     expect(profile.skirtShare(0.9)).toBe(0);
+  });
+});
+
+describe('whole partitions and rules of thumb', () => {
+  it('the most a scanner takes is its percentage of the slab, a whole result kept whole', () => {
+    // 50 · 1.1, 30 · 1.1 and 70 · 1.15 are off by the last bits of a double.
+    for (const [partitions, percent, expected] of [
+      [50, 10, 55],
+      [30, 10, 33],
+      [70, 15, 80],
+      [60, 15, 69],
+      [40, 33, 53],
+      [64, 0, 64],
+    ] as const)
+      expect(
+        mostPartitions(
+          slabOf({ partitions }),
+          typicalScanner({ limits: { sliceOversamplingMaxPct: percent } }),
+        ),
+      ).toBe(expected);
+  });
+  it('k of skirt ≈ k/TBW is the measured mean at 10°, to the two decimals it is given in', () => {
+    const rows = readPublished('slab-profile').filter((row) => row.number('flip_deg') === 10);
+    for (const percent of [1, 2, 5, 10] as const) {
+      const ks = rows.map((row) => row.number('tbw') * row.number(`skirt_${percent}pct`));
+      const mean = ks.reduce((sum, k) => sum + k, 0) / ks.length;
+      expect(Math.abs(SINGLE_PULSE_SKIRT_RULE[percent] - mean)).toBeLessThan(0.005);
+    }
   });
 });
