@@ -2,8 +2,10 @@ import { chromium, type Browser, type Page } from '@playwright/test';
 import { benchAnswers } from '@/tests/support/e2e/bench-page';
 import { dragHandle } from '@/tests/support/e2e/drag-handle';
 import { signIn } from '@/tests/support/e2e/journey';
-import { demoAccountsOf, removeDataFolder, startSelvedge } from '@/tests/support/e2e/running-selvedge';
+import { demoAccountsOf } from '@/tests/support/e2e/running-selvedge';
 import playwright from '@/playwright.config';
+import { frameWork, type FrameWork } from './frame-work';
+import { measuredSelvedge } from './measured-selvedge';
 import { quantile, type Measure, type MeasureRow } from './row';
 
 const DRAG_MS = 5_000;
@@ -23,61 +25,16 @@ const HANDLES: readonly (readonly [id: string, by: readonly [number, number], be
   ['lateral-offset', [25, 0], bore],
 ];
 
-interface TraceEvent {
-  readonly name: string;
-  readonly ph: string;
-  readonly ts: number;
-  readonly dur?: number;
-  readonly tdur?: number;
-  readonly pid: number;
-  readonly tid: number;
-}
-
-interface FrameWork {
-  /** Milliseconds of the page's main thread in each animation frame: by the clock, and of the processor. */
-  readonly wall: readonly number[];
-  readonly processor: readonly number[];
-  readonly longTasks: number;
-}
-
-/** Tasks of the main thread, summed from one animation frame to the next. */
-function frameWork(events: readonly TraceEvent[]): FrameWork {
-  const frames = events.filter(({ name }) => name === 'FireAnimationFrame').sort((a, b) => a.ts - b.ts);
-  const main = frames[0];
-  if (!main) throw new Error('The trace holds no animation frame.');
-  const tasks = events.filter(({ name, ph, pid, tid }) => name === 'RunTask' && ph === 'X' && pid === main.pid && tid === main.tid);
-  // Several callbacks fire in one frame, in one task: its end is the frame's.
-  const ends = tasks.filter(({ ts, dur = 0 }) => frames.some((frame) => frame.ts >= ts && frame.ts <= ts + dur)).map(({ ts, dur = 0 }) => ts + dur);
-  const sums = (of: (task: TraceEvent) => number): number[] =>
-    ends.slice(1).map((end, i) => tasks.filter(({ ts }) => ts >= ends[i]! && ts < end).reduce((sum, task) => sum + of(task) / 1_000, 0));
-  return {
-    wall: sums(({ dur = 0 }) => dur),
-    processor: sums(({ tdur, dur = 0 }) => tdur ?? dur),
-    longTasks: tasks.filter(({ dur = 0 }) => dur >= 50_000).length,
-  };
-}
-
 async function dragged(browser: Browser, page: Page, id: string, by: readonly [number, number], begin?: Begin): Promise<FrameWork> {
   await page.reload();
   await benchAnswers(page);
   await begin?.(page);
-  await browser.startTracing(page, { categories: ['toplevel', 'devtools.timeline', 'disabled-by-default-devtools.timeline'] });
-  await dragHandle(page, id, by, DRAG_MS);
-  const trace = JSON.parse((await browser.stopTracing()).toString()) as { traceEvents: TraceEvent[] };
-  return frameWork(trace.traceEvents);
-}
-
-/** A Selvedge of its own, unless one is named as for the journeys. */
-async function running() {
-  const { SELVEDGE_E2E_URL: address, SELVEDGE_E2E_DATA_DIR: dataDir } = process.env;
-  if (address && dataDir) return { address, dataDir, end: async () => {} };
-  const own = await startSelvedge();
-  return { ...own, end: async () => void (await own.stop(), await removeDataFolder(own.dataDir)) };
+  return frameWork(browser, page, () => dragHandle(page, id, by, DRAG_MS));
 }
 
 /** Work of the page's main thread while a handle is dragged for five seconds. */
 export const measure: Measure = async () => {
-  const selvedge = await running();
+  const selvedge = await measuredSelvedge();
   const browser = await chromium.launch(playwright.use!.launchOptions);
   try {
     const context = await browser.newContext({ baseURL: selvedge.address, viewport: { width: 1440, height: 900 } });
