@@ -5,7 +5,7 @@ import {
   acquiredViewsTwoWay,
   requirePartialFourier,
 } from '@/lib/physics/sequence/acquired-views';
-import { parallelImagingSnr, snrRatio } from '@/lib/physics/sequence/detail';
+import { parallelImagingSnr, referenceShareOf, snrRatio } from '@/lib/physics/sequence/detail';
 import { minimumTeMs } from '@/lib/physics/sequence/displacement';
 import { echoTrainTimeS } from '@/lib/physics/sequence/scan-time-formulas';
 import { swapAxes } from '@/lib/physics/sequence/swap-axes';
@@ -155,6 +155,15 @@ describe('what a sequence may be', () => {
 });
 
 describe('figures compared', () => {
+  it('nothing refers to itself without acceleration', () => {
+    const share = (factorPhase: number) =>
+      referenceShareOf(
+        typicalPrescription({ acceleration: { ...accelerated(factorPhase), referenceInImage: true } }),
+      );
+    expect(share(1)).toBe(0);
+    // 24 reference lines of 240.
+    expect(share(2)).toBeCloseTo(0.1, 12);
+  });
   it('an SNR ratio’s range takes low with low and high with high, whichever comes first', () => {
     const of = (snr: number, low: number, high: number) => ({
       voxelMm: [1, 1, 1] as const,
