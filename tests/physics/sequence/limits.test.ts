@@ -130,6 +130,10 @@ describe('what a sequence may be', () => {
       time({ family: 'gradient-echo-3d', slices: slabOf(), breathing: 'triggered', segments: 2 }).batches,
     ).toBe(1);
   });
+  it('a slab is one batch in every family', () => {
+    for (const family of ['spin-echo', 'gradient-echo', 'echo-train-spin-echo'] as const)
+      expect(time({ family, slices: slabOf(), trMs: 10, sliceTimeMs: 10 }).batches).toBe(1);
+  });
   it('a single shot is one shot, an echo-planar series has its own', () => {
     expect(time({ family: 'single-shot-echo-train', trMs: 1200 }).shots).toBe(1);
     expect(time({ family: 'echo-planar', shots: 3 }).shots).toBe(3);
