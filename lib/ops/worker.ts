@@ -7,6 +7,7 @@ import { type JobPayload, QUEUES } from '@/lib/jobs';
 import { smtpTransport } from '@/lib/mail';
 import { refreshBookings } from '@/lib/services/booking/refresh-bookings';
 import { makeHandOut } from '@/lib/services/demonstration/make-hand-out';
+import { eraseStaged } from '@/lib/services/import/erase-staged-rows';
 import { expireSizeRequest } from '@/lib/services/size-request/end-size-request';
 import { deliverMail } from '@/lib/services/mail/deliver-mail';
 import { makeSheet } from '@/lib/services/plan-sheet/make-sheet';
@@ -60,6 +61,10 @@ async function main(): Promise<void> {
       const refreshed = await refreshBookings(QUEUES['refresh-bookings'].parse(job.data));
       console.log(`bookings worked out again: ${refreshed}`);
     }
+  });
+
+  await boss.work('erase-staged-rows', { batchSize: 1, pollingIntervalSeconds: 2 }, async (jobs) => {
+    for (const job of jobs) await eraseStaged(QUEUES['erase-staged-rows'].parse(job.data));
   });
 
   let stopping = false;

@@ -10,7 +10,7 @@ const APPEND_ONLY = [
   'audit_event',
   'booking_entry',
   'check_result',
-  'import_row',
+
   'keep_clear_request',
   'outcome',
   'plan_version',
@@ -46,9 +46,14 @@ describe('what the application role may do', () => {
     expect(appendOnly.map(({ name }) => name)).toEqual(APPEND_ONLY);
   });
 
-  it('may delete from no table', async () => {
+  it('may delete from no table but the staged rows of imports, and there only once the import is over', async () => {
     const tables = await tenantTables(ownerDatabase());
-    expect(tables.filter(({ deletable }) => deletable)).toEqual([]);
+    expect(tables.filter(({ deletable }) => deletable).map(({ name }) => name)).toEqual(['import_row']);
+    const { siteId } = await fillSite();
+    const erase = () => inTransaction(siteId, async (trx) => (await sql`delete from import_row`.execute(trx)).numAffectedRows);
+    expect(await erase(), 'of an import that goes on').toBe(0n);
+    await inTransaction(siteId, (trx) => sql`update import_batch set status = 'committed'`.execute(trx));
+    expect(await erase()).toBe(1n);
   });
 
   it.each(APPEND_ONLY)('is refused a change and a deletion in %s', async (table) => {

@@ -1,3 +1,4 @@
+import { sql } from 'kysely';
 import type { SiteTransaction } from '@/db/client';
 import type { ImportSettings } from '@/lib/domain/import';
 
@@ -59,6 +60,18 @@ export async function closeImportBatch(
     .where('site_id', '=', siteId)
     .where('id', '=', id)
     .execute();
+}
+
+/**
+ * Erases the rows of imports that are committed or stopped, and of those that nobody has come back to for a day. The
+ * database lets no other row go. @returns how many
+ */
+export async function eraseStagedRows(trx: SiteTransaction, siteId: string): Promise<number> {
+  const { numAffectedRows } = await sql`
+    delete from import_row i using import_batch b
+    where i.site_id = ${siteId} and b.site_id = i.site_id and b.id = i.batch_id
+      and (b.status <> 'staging' or b.created_at < now() - interval '1 day')`.execute(trx);
+  return Number(numAffectedRows ?? 0n);
 }
 
 /** How this site's files are read, as stored; null before the first import. */

@@ -2,6 +2,7 @@ import { inTransaction } from '@/db/client';
 import { closeImportBatch, lockImportBatch } from '@/db/queries/import/import-batches';
 import { authorise } from '@/lib/domain/access';
 import { ServiceError } from '@/lib/domain/errors';
+import { enqueue } from '@/lib/jobs';
 import { recordAudit } from '../audit/record-audit';
 import { nowOf, type ServiceContext } from '../context';
 
@@ -15,6 +16,7 @@ export async function cancelImport(context: ServiceContext, { id }: { readonly i
     if (batch.status === 'committed') throw new ServiceError('conflict', { message: 'This import is committed already.' });
     if (batch.status === 'cancelled') return;
     await closeImportBatch(trx, siteId, id, { status: 'cancelled', created: 0, changed: 0, same: 0, at: nowOf(context) });
+    await enqueue(trx, 'erase-staged-rows', { siteId });
     await recordAudit(trx, context, { action: 'booking.import', subjectType: 'import', subjectId: id, fields: ['cancelled'] });
   });
 }

@@ -21,6 +21,7 @@ export async function commitStaged(trx: SiteTransaction, context: ServiceContext
   });
   await closeImportBatch(trx, siteId, importId, { status: 'committed', ...done, at });
   await recordAudit(trx, context, { action: 'booking.import', subjectType: 'import', subjectId: importId, fields: ['committed'] });
+  await enqueue(trx, 'erase-staged-rows', { siteId });
   if (done.created + done.changed > 0) await enqueue(trx, 'refresh-bookings', { siteId });
   return { id: importId, ...done };
 }

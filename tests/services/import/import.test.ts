@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { sql } from 'kysely';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { ImportRow } from '@/lib/domain/import';
 import { createScanner } from '@/lib/services/scanner/create-scanner';
@@ -6,9 +7,12 @@ import { listBookings } from '@/lib/services/booking/list-bookings';
 import { cancelImport } from '@/lib/services/import/cancel-import';
 import { commitImport } from '@/lib/services/import/commit-import';
 import { openImport } from '@/lib/services/import/open-import';
+import { eraseStaged } from '@/lib/services/import/erase-staged-rows';
 import { stageRows } from '@/lib/services/import/stage-rows';
 import { startImport } from '@/lib/services/import/start-import';
 import { getSizeRecord } from '@/lib/services/size-reading/get-size-record';
+import { inTransaction } from '@/db/client';
+import { ownerDatabase } from '@/tests/support/database';
 import { as, equipSite, scannerForm, type EquippedSite } from '@/tests/support/equipped-site';
 
 let here: EquippedSite;
@@ -131,5 +135,28 @@ describe('an import', () => {
     const settings = { ...(await openImport(as(here.coordinator))).settings, columns: { accession: 'Acc no', day: 'Date' }, scanners: { 'room 2': here.scanner.id } };
     await startImport(as(here.coordinator), { id: randomUUID(), format: 'csv', settings });
     expect((await openImport(as(here.coordinator))).settings).toEqual(settings);
+  });
+
+  it('keeps no staged row once it is over, and keeps those of one that goes on', async () => {
+    const committed = await stage([row(2, 'GH-0070'), row(3, 'GH-0071')]);
+    const stopped = await stage([row(2, 'GH-0072')]);
+    const going = await stage([row(2, 'GH-0073')]);
+    const { siteId } = here.site;
+    await commitImport(as(here.coordinator), { importId: committed.id, expectedRows: 2 });
+    await cancelImport(as(here.coordinator), { id: stopped.id });
+    expect(await eraseStaged({ siteId })).toBeGreaterThanOrEqual(3);
+    const left = await here.site.withApp((trx) => trx.selectFrom('import_row').select(['batch_id', 'accession']).where('batch_id', 'in', [committed.id, stopped.id, going.id]).execute());
+    expect(left).toEqual([{ batch_id: going.id, accession: 'GH-0073' }]);
+    expect(await eraseStaged({ siteId })).toBe(0);
+    // Sent again after its rows are gone, a commit answers what it did.
+    expect(await commitImport(as(here.coordinator), { importId: committed.id, expectedRows: 2 })).toMatchObject({ created: 2 });
+    expect(await commitImport(as(here.coordinator), { importId: going.id, expectedRows: 1 })).toMatchObject({ created: 1 });
+  });
+
+  it('that was left lying for a day loses its rows, and cannot be committed without them', async () => {
+    const { id } = await stage([row(2, 'GH-0080')]);
+    await inTransaction(here.site.siteId, (trx) => sql`update import_batch set created_at = now() - interval '25 hours' where id = ${id}`.execute(trx), ownerDatabase());
+    await eraseStaged({ siteId: here.site.siteId });
+    await expect(commitImport(as(here.coordinator), { importId: id, expectedRows: 1 })).rejects.toMatchObject({ code: 'conflict' });
   });
 });
