@@ -147,14 +147,16 @@ export async function markStale(trx: SiteTransaction, siteId: string, filter: St
   return Number(numAffectedRows ?? 0);
 }
 
-/** Bookings that wait for a check and whose time has come: the soonest scan first, what is past last. */
+const DAY_MS = 86_400_000;
+
+/** Bookings that wait for a check and whose time has come: today's and the soonest scans first, older ones last. */
 export async function listStale(trx: SiteTransaction, siteId: string, now: Date, limit: number): Promise<string[]> {
   const { rows } = await sql<{ booking_id: string }>`
     select s.booking_id
     from booking_state s
     join booking b on b.site_id = s.site_id and b.id = s.booking_id
     where s.site_id = ${siteId} and s.stale = 1 and s.recheck_at <= ${now}
-    order by b.scheduled_at < ${now}, b.scheduled_at, s.booking_id
+    order by b.scheduled_at < ${new Date(now.getTime() - DAY_MS)}, b.scheduled_at, s.booking_id
     limit ${limit}`.execute(trx);
   return rows.map((row) => row.booking_id);
 }
