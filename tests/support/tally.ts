@@ -9,6 +9,19 @@ export function tally(name: string, cases: number, note = ''): void {
   appendFileSync(path.join(folder, `${process.pid}.jsonl`), `${JSON.stringify({ name, cases, note })}\n`);
 }
 
+/** Time a test of many cases may take: it is the machine's load that decides, and nobody waits for the long run. */
+export const NO_HURRY_MS = 12 * 3600_000;
+
+/**
+ * How far a long count is, now and then; the count itself follows under the same name. Gives way to the runner, which
+ * takes a worker that does not answer for minutes for dead.
+ */
+export async function progress(name: string, done: number, of: number, every = 250): Promise<void> {
+  if (done % every !== 0) return;
+  tally(name, done, `of ${of} so far, none differs`);
+  await new Promise((resolve) => setImmediate(resolve));
+}
+
 /** How many cases to try: the short count here, more when the variable asks for it. */
 export function countOf(variable: string, short: number): number {
   const asked = process.env[variable];

@@ -7,7 +7,7 @@ import { PRE_CHECK_RESULTS, type PreCheck } from '@/lib/domain/pre-check/result'
 import type { SizeReading } from '@/lib/domain/size-reading/size-reading';
 import { drawnAdults, type DrawnAdult } from '@/tests/support/drawn-adults';
 import { preCheckQuestion, reading, readingsOf } from '@/tests/support/pre-check-questions';
-import { countOf, tally } from '@/tests/support/tally';
+import { countOf, NO_HURRY_MS, progress, tally } from '@/tests/support/tally';
 
 /** Adults in `npm test`; test:long sets 1,000. */
 const ADULTS = countOf('SELVEDGE_POPULATION', 16);
@@ -88,13 +88,20 @@ describe('a population of adults at the standard policy, the demonstration’s s
 
   it(
     `what ${ADULTS} of them are told, by what is known`,
-    () => {
+    async () => {
       const folds = ({ findings }: PreCheck) => findings.some(({ subject }) => subject === 'fold');
       const share = (checks: readonly PreCheck[], where: (one: PreCheck) => boolean) => checks.filter(where).length / checks.length;
       // Three binomial SDs of a share near a half.
       const slack = 1.5 / Math.sqrt(ADULTS);
       for (const booked of ['A', 'B'] as const) {
-        const told = Object.fromEntries(Object.keys(KNOWN).map((known) => [known, adults.map((adult) => check(adult, known, booked))]));
+        const told: Record<string, PreCheck[]> = {};
+        for (const known of Object.keys(KNOWN)) {
+          const checks: PreCheck[] = (told[known] = []);
+          for (const adult of adults) {
+            await progress(`population, ${booked}, ${known}`, checks.length, ADULTS);
+            checks.push(check(adult, known, booked));
+          }
+        }
         const asBooked = (known: string) => share(told[known]!, ({ result }) => result === 'as-booked');
         for (const [known, checks] of Object.entries(told)) {
           const percent = (where: (one: PreCheck) => boolean) => `${Math.round(100 * share(checks, where))} %`;
@@ -125,6 +132,6 @@ describe('a population of adults at the standard policy, the demonstration’s s
         expect(folding(byGirth.slice(half))).toBeGreaterThan(folding(byGirth.slice(0, half)));
       }
     },
-    60 * 60_000,
+    NO_HURRY_MS,
   );
 });

@@ -2,20 +2,20 @@ import { describe, expect, it } from 'vitest';
 import { solveFold } from '@/lib/physics/fold/solve-fold';
 import { latticeSample, seeded } from './lattice-case';
 import { latticeOracle } from './oracle-lattice';
-import { countOf, tally } from '@/tests/support/tally';
+import { countOf, NO_HURRY_MS, progress, tally } from '@/tests/support/tally';
 
 /** Cases in 2D and, unless said, a fifth as many in 3D. test:long sets 100,000 and 20,000. */
 const CASES_2D = countOf('SELVEDGE_ORACLE_A', 5000);
 const CASES_3D = countOf('SELVEDGE_ORACLE_A_3D', Math.round(CASES_2D / 5));
-const MANY_MINUTES = 30 * 60_000;
 
 describe('oracle A: the engine and an independent count of lattice cells never differ', () => {
   it(
     `in 2D: ${CASES_2D} cases, every number of lines`,
-    () => {
+    async () => {
       let clean = 0;
       let fouled = 0;
       for (let seed = 1; seed <= CASES_2D; seed++) {
+        await progress('oracle A in 2D', seed - 1, CASES_2D);
         const { lattice, problem, lineUnits, lines } = latticeSample(seed, false);
         const oracle = latticeOracle(lattice);
         const solved = solveFold(problem);
@@ -43,15 +43,16 @@ describe('oracle A: the engine and an independent count of lattice cells never d
       expect(Math.min(clean, fouled)).toBeGreaterThan(CASES_2D);
       tally('oracle A in 2D', CASES_2D, `${clean} widths clean, ${fouled} not, none differs`);
     },
-    MANY_MINUTES,
+    NO_HURRY_MS,
   );
 
   it(
     `in 3D: ${CASES_3D} cases, pairs of lines and partitions`,
-    () => {
+    async () => {
       let clean = 0;
       let fouled = 0;
       for (let seed = 1; seed <= CASES_3D; seed++) {
+        await progress('oracle A in 3D', seed - 1, CASES_3D);
         const { lattice, problem, lineUnits, lines, partitions, partitionMultiple } = latticeSample(
           1e6 + seed,
           true,
@@ -74,6 +75,6 @@ describe('oracle A: the engine and an independent count of lattice cells never d
       expect(Math.min(clean, fouled)).toBeGreaterThan(CASES_3D);
       tally('oracle A in 3D', CASES_3D, `${clean} pairs clean, ${fouled} not, none differs`);
     },
-    MANY_MINUTES,
+    NO_HURRY_MS,
   );
 });

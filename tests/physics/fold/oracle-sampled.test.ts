@@ -7,7 +7,7 @@ import type { FoldProblem } from '@/lib/physics/fold/fold-problem';
 import type { PartShape, SolidPart } from '@/lib/physics/model/patient';
 import type { Plane } from '@/lib/physics/model/prescription';
 import { PLANE_AXES } from '@/lib/physics/geometry/section-frame';
-import { countOf, tally } from '@/tests/support/tally';
+import { countOf, NO_HURRY_MS, progress, tally } from '@/tests/support/tally';
 import { seeded } from './lattice-case';
 import { oracleAxes, sampledHit } from './oracle-sampled';
 import { NO_MARGIN_MM, samplePrescription, sampleProblem } from './sample-problem';
@@ -172,11 +172,12 @@ describe('oracle B: general shapes, tilted planes and slabs, by looking at point
 
   it(
     `agrees on ${CASES} cases within the sampling step`,
-    () => {
+    async () => {
       let judged = 0;
       let near = 0;
       let hits = 0;
       for (let seed = 1; seed <= CASES; seed++) {
+        await progress('oracle B', seed - 1, CASES);
         const { problem, slab, partitions } = sampleCase(seed);
         const random = seeded(seed + 77);
         const solved = solveFold(problem);
@@ -212,6 +213,6 @@ describe('oracle B: general shapes, tilted planes and slabs, by looking at point
       expect(near / judged).toBeLessThan(0.02);
       tally('oracle B', CASES, `${judged} widths, ${hits} fold, ${near} too near to judge, none differs`);
     },
-    60 * 60_000,
+    NO_HURRY_MS,
   );
 });
