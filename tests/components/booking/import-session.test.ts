@@ -86,3 +86,38 @@ it.each([['', /empty/], ['one column', /one column only/], ['{"resourceType": "P
   const session = new ImportSession({} as ConstructorParameters<typeof ImportSession>[0]);
   await expect(session.open(new Blob([text]))).rejects.toThrow(reason);
 });
+
+/** A file that is never given out whole: only pieces of it, and it remembers the largest. */
+class PiecewiseFile extends Blob {
+  largest = 0;
+  override slice(from?: number, to?: number): Blob {
+    this.largest = Math.max(this.largest, Math.min(to ?? this.size, this.size) - (from ?? 0));
+    return super.slice(from, to);
+  }
+  override arrayBuffer(): Promise<ArrayBuffer> {
+    return Promise.reject(new Error('The whole file was read at once.'));
+  }
+  override text(): Promise<string> {
+    return Promise.reject(new Error('The whole file was read at once.'));
+  }
+}
+
+it('a large file is neither read nor sent whole: pieces of a quarter of a megabyte and of 500 rows', async () => {
+  const lines = Array.from({ length: 12_000 }, (_, index) => `${['A', 'B'][index % 2]}${String(index).padStart(5, '0')};2027-01-02;10:00;Room 1;Abdo;${'x'.repeat(40)}`);
+  const file = new PiecewiseFile([['Accession;Date;Time;Scanner;Protocol;Notes', ...lines].join('\n')]);
+  expect(file.size).toBeGreaterThan(3 * 256 * 1024);
+  const pieces: number[] = [];
+  const session = new ImportSession({
+    start: async () => {}, commit: async () => ({ id: '', created: 0, changed: 0, same: 0 }), cancel: async () => {},
+    stage: async (_id, rows) => {
+      pieces.push(rows.length);
+      return { rows: rows.map(({ number }) => ({ number, outcome: 'created', note: '' })) };
+    },
+  });
+  const { proposed } = await session.open(file);
+  const settings: ImportSettings = { ...NO_SETTINGS, columns: { ...proposed, accession: 'Accession', scanner: 'Scanner', protocol: 'Protocol' }, scanners: { 'room 1': ONE }, protocols: { abdo: ABDOMEN } };
+  expect(await session.stage('i', settings, { ...BASIS, mask: '@#####' }, () => {})).toBe(true);
+  expect(session.counts()).toMatchObject({ created: 12_000, skipped: 0 });
+  expect(Math.max(...pieces)).toBe(500);
+  expect(file.largest).toBeLessThanOrEqual(256 * 1024);
+});
