@@ -34,7 +34,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
         </div>
         <div className="relative min-h-0 border-line max-lg:border-t lg:order-1 lg:border-r lg:max-xl:row-span-2 xl:overflow-y-auto">
           <PatientPanel />
-          <PrescriptionPanel source={props.protocolLabel} />
+          <PrescriptionPanel source={props.protocolLabel} protocol={props.protocolPrescriptions} />
           <KeepClearPanel preset={props.keepClearPreset} asked={props.keepClearAsked} />
         </div>
       </div>

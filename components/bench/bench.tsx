@@ -5,6 +5,7 @@ import { useEffect, useState, type KeyboardEvent, type ReactNode } from 'react';
 import type { KeepClear } from '@/lib/physics/model/keep-clear';
 import { BenchProvider } from './bench-context';
 import { BenchLayout } from './bench-layout';
+import type { ProtocolPrescriptions } from './prescription-panel';
 import { createBench } from './create-bench';
 import type { Results } from './live/results';
 import type { PlanIdentity } from './saving/plan-identity';
@@ -26,6 +27,7 @@ export interface BenchProps {
   /** Who asked for the keep-clear area and what for, in a sentence; absent when nobody did. */
   readonly keepClearAsked?: string;
   readonly protocolLabel: string;
+  readonly protocolPrescriptions: ProtocolPrescriptions;
   /** Whose bench it is: the booking, or the choice of scanner and protocol. */
   readonly children: ReactNode;
 }

@@ -36,7 +36,7 @@ export function Ledger({ children }: { children?: ReactNode }) {
   const range = assessment && scanRangeFigure(after ?? assessment);
   return (
     <section aria-label="Ledger, now and tried" className="flex flex-wrap border-t border-line bg-paper xl:flex-nowrap">
-      <Cell name={remedy ? 'Ledger, now → tried' : 'Ledger'} className="lg:w-78 lg:flex-none">
+      <Cell name={remedy ? 'Ledger, now → tried' : 'Ledger'} className="lg:w-78 lg:flex-none xl:px-4!">
         <span className="line-clamp-2 font-semibold">
           {remedy ? remedyTitle(remedy) : adopted ? adopted.sentence : 'As planned, nothing tried'}
         </span>
@@ -63,7 +63,7 @@ export function Ledger({ children }: { children?: ReactNode }) {
 
 function Cell({ name, children, className }: { name: string; children: ReactNode; className?: string }) {
   return (
-    <div className={cx('min-w-0 flex-auto border-line px-4 py-2.5 not-last:border-r', className)}>
+    <div className={cx('min-w-0 flex-auto border-line px-4 py-2.5 not-last:border-r xl:px-3', className)}>
       <p className="text-sm whitespace-nowrap text-ink-soft">{name}</p>
       <div className="leading-snug">{children}</div>
     </div>

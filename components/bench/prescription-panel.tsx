@@ -6,6 +6,7 @@ import type { Prescription, SequenceFamily } from '@/lib/physics/model/prescript
 import { useBench, useBenchState } from './bench-context';
 import { BenchForm, withLeaf } from './bench-form';
 import { AccelerationGroup } from './prescription/acceleration-group';
+import { FromProtocol } from './prescription/from-protocol';
 import { OversamplingGroup } from './prescription/oversampling-group';
 import { PresaturationGroup } from './prescription/presaturation-group';
 import { ReceiveGroup } from './prescription/receive-group';
@@ -18,6 +19,9 @@ import { FAMILIES_3D } from './state/prescription-edit';
 
 export type GroupKey = 'window' | 'oversampling' | 'slices' | 'timing' | 'acceleration' | 'presaturation' | 'receive';
 
+/** What the protocol has on this scanner, by sequence. */
+export type ProtocolPrescriptions = Readonly<Record<string, Prescription>>;
+
 /** What is usually changed first in a family, so that its group is the one that lies open. */
 function firstGroup({ family, breathing }: Prescription): GroupKey {
   if (FAMILIES_3D.includes(family)) return 'slices';
@@ -26,13 +30,13 @@ function firstGroup({ family, breathing }: Prescription): GroupKey {
 }
 
 /** Every field of the active sequence; groups roll up to one line, and the open one follows the sequence. */
-export function PrescriptionPanel({ source }: { source: string }) {
+export function PrescriptionPanel({ source, protocol }: { source: string; protocol: ProtocolPrescriptions }) {
   const id = useBenchState((state) => state.activeId);
   // A form of its own for each sequence: a refused value waits where it was typed.
-  return <SequenceForm key={id} id={id} source={source} />;
+  return <SequenceForm key={id} id={id} source={source} protocol={protocol[id]} />;
 }
 
-function SequenceForm({ id, source }: { id: string; source: string }) {
+function SequenceForm({ id, source, protocol }: { id: string; source: string; protocol: Prescription | undefined }) {
   const { store } = useBench();
   const select = useCallback((state: BenchState) => sequenceById(state.document, id).prescription, [id]);
   // Summaries and derived figures follow a drag when there is time for it; the picture comes first.
@@ -55,7 +59,7 @@ function SequenceForm({ id, source }: { id: string; source: string }) {
     <BenchForm schema={prescriptionSchema} select={select} label={`Prescription, ${prescription.name}`} onEdit={onEdit}>
       <div className="flex items-baseline justify-between gap-4 px-4 pt-3 pb-1">
         <h2 className="text-sm font-semibold tracking-wider text-ink-soft uppercase">Prescription</h2>
-        <p className="min-w-0 truncate text-sm text-ink-soft">{source}</p>
+        <FromProtocol source={source} protocol={protocol} prescription={prescription} />
       </div>
       <OversamplingGroup {...group('oversampling')} />
       <WindowGroup {...group('window')} />

@@ -12,7 +12,8 @@ export function PlanOverview({ plan }: { plan: PlanView }) {
   return (
     <>
       <Table caption="Sequences of the plan">
-        <thead>
+        {/* On a phone each row stacks: nobody scrolls sideways for a verdict. */}
+        <thead className="max-sm:sr-only">
           <tr>
             <Th>Sequence</Th>
             <Th>Scanner takes</Th>
@@ -22,8 +23,8 @@ export function PlanOverview({ plan }: { plan: PlanView }) {
         </thead>
         <tbody>
           {rows.map((row) => (
-            <Tr key={row.id}>
-              <Td>
+            <Tr key={row.id} className="max-sm:grid max-sm:grid-cols-2 max-sm:py-1">
+              <Td className="max-sm:col-span-2">
                 <span className="font-semibold">{row.name}</span>
                 <span className="block text-sm text-ink-soft">{row.geometry}</span>
                 {row.adopted.map((sentence) => (
@@ -32,12 +33,12 @@ export function PlanOverview({ plan }: { plan: PlanView }) {
                   </span>
                 ))}
               </Td>
-              <Td className="figures">
+              <Td className="figures max-sm:pl-4">
                 {row.slice ? `phase ${row.phase.value}, slice ${row.slice.value}` : row.phase.value}
                 <span className="block text-sm text-ink-soft">{row.phase.note}</span>
               </Td>
               <Td className="figures">{row.time}</Td>
-              <Td>
+              <Td className="max-sm:col-span-2 max-sm:pl-4">
                 <VerdictWords verdict={row.verdict} />
               </Td>
             </Tr>

@@ -16,11 +16,11 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
   const heading = sheetHeading(plan);
   const sequences = plan.sequences.map((sequence, i) => sheetSequence(sequence, plan.results[i]!, plan));
   return (
-    <article className="plan-sheet mx-auto max-w-4xl border border-line bg-paper p-6">
-      <header className="grid grid-cols-[1fr_auto] gap-6 border-b border-ink pb-3">
+    <article className="plan-sheet mx-auto max-w-4xl border border-line bg-paper p-6 max-sm:p-4">
+      <header className="grid grid-cols-[1fr_auto] gap-6 max-sm:grid-cols-1 max-sm:gap-3 border-b border-ink pb-3">
         <div>
-          <p className="flex items-center gap-2 text-sm">
-            <Logo className="size-5" />
+          <p className="flex items-center gap-2 text-sm [&>span]:whitespace-nowrap">
+            <Logo className="size-5 flex-none" />
             <span className="font-semibold">Plan sheet</span> · {heading.kind}
           </p>
           <h1 className="sheet-reference figures mt-1 text-4xl font-bold">{heading.reference}</h1>
@@ -28,7 +28,7 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
             {heading.version}
           </p>
         </div>
-        <div className="sheet-small flex h-24 w-64 flex-col print:h-20 justify-between border border-dashed border-ink p-2 text-sm">
+        <div className="sheet-small flex h-24 w-64 flex-col max-sm:w-full print:h-20 justify-between border border-dashed border-ink p-2 text-sm">
           {SHEET_TITLES.label.map((words) => (
             <p key={words}>{words}</p>
           ))}
@@ -47,10 +47,10 @@ export function PlanSheet({ plan, link }: { plan: PlanView; link: string }) {
         </ul>
       </Block>
       <SheetSignatures plan={plan} />
-      <footer className="sheet-small mt-3 flex items-end justify-between gap-x-6 border-t border-ink pt-2 text-sm print:mt-1 print:pt-1">
+      <footer className="sheet-small mt-3 flex items-end justify-between gap-x-6 gap-y-2 border-t max-sm:flex-wrap border-ink pt-2 text-sm print:mt-1 print:pt-1">
         <div>
           <p>
-            {SHEET_TITLES.link} <span className="figures font-semibold">{link}</span>
+            {SHEET_TITLES.link} <span className="figures font-semibold break-all">{link}</span>
           </p>
           <p className="figures mt-1">{restsOn(plan)}</p>
         </div>
@@ -71,8 +71,8 @@ function Block({ title, children }: { title: string; children: ReactNode }) {
 
 function SequenceTable({ sequences }: { sequences: readonly SheetSequence[] }) {
   return (
-    <div className="overflow-x-auto">
-      <table className="mt-3 w-full border-collapse text-left">
+    <div role="region" aria-label="Settings of each sequence" tabIndex={0} className="overflow-x-auto">
+      <table className="mt-3 w-full min-w-[38rem] border-collapse text-left">
         <caption className="sr-only">Sequences, as they are set at the scanner</caption>
         <thead className="sheet-small text-sm">
           <tr className="border-b border-ink align-bottom">
@@ -122,7 +122,7 @@ function Setting({ setting }: { setting: { value: string; note: string } }) {
 
 function SheetSignatures({ plan }: { plan: PlanView }) {
   return (
-    <section aria-label="Signatures" className="sheet-small mt-4 grid grid-cols-3 gap-6 text-sm print:mt-1">
+    <section aria-label="Signatures" className="sheet-small mt-4 grid grid-cols-3 gap-6 text-sm max-sm:grid-cols-1 max-sm:gap-3 print:mt-1">
       {signatureRows(plan).map(([title, note]) => (
         <div key={title}>
           <p className="h-8 border-b border-ink" />

@@ -28,7 +28,7 @@ export function sheetSequence(sequence: PlannedSequence, result: Assessment, pla
     name: p.name,
     geometry:
       `${PLANE_WORDS[p.plane]}, phase ${AXIS_WORDS[p.phaseAxis]} ${formatShort(p.fovPhaseMm, 0.1)} × ` +
-      `${AXIS_WORDS[readoutAxis]} ${formatShort(p.fovReadoutMm, 0.1)} mm, ${p.linesAcrossFov} × ${p.readoutMatrix}`,
+      `${AXIS_WORDS[readoutAxis]} ${formatShort(p.fovReadoutMm, 0.1)} mm, ${p.linesAcrossFov}\u00a0×\u00a0${p.readoutMatrix}`,
     phase: phaseOversamplingSetting(p, plan.scanner),
     ...(slice ? { slice } : {}),
     averages: formatShort(p.averages, 0.1),

@@ -4,7 +4,7 @@ import { BenchChoiceHeading } from '@/components/bench/bench-choice-heading';
 import { NothingSetUp } from '@/components/bench/nothing-set-up';
 import { identityOf } from '@/components/bench/saving/plan-identity';
 import { firstView } from '@/components/bench/state/first-view';
-import { documentOfProtocol } from '@/components/bench/state/plan-document';
+import { documentOfProtocol, prescriptionsOf } from '@/components/bench/state/plan-document';
 import { AddToDemonstration } from '@/components/demonstration/capture/add-to-demonstration';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
@@ -50,6 +50,7 @@ export default async function FreeBenchPage({ searchParams }: { searchParams: Pr
       mayEdit={mayAttempt(actor, 'plan.edit')}
       keepClearPreset={protocol.keepClear}
       protocolLabel={`${protocol.name} v${protocol.version}`}
+      protocolPrescriptions={prescriptionsOf(protocol, scanner.scanner)}
     >
       <BenchChoiceHeading
         scanners={scanners.map(({ id, scanner: { name } }) => ({ id, name }))}

@@ -12,7 +12,7 @@ export function SaveCell({ plan }: { plan: PlanSaving }) {
   const busy = saving.kind === 'saving';
   return (
     <div className="flex flex-auto items-center justify-end gap-3 px-4 py-2.5 max-xl:w-full max-xl:border-t max-xl:border-line">
-      <p role="status" className="text-right text-sm text-ink-soft max-xl:mr-auto max-xl:text-left">
+      <p role="status" className="text-right text-sm text-balance text-ink-soft max-xl:mr-auto max-xl:text-left xl:max-w-44">
         {stateWords(plan, unsaved)}
       </p>
       {identity.version > 0 && (

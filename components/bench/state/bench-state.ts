@@ -35,6 +35,8 @@ export type BenchAction =
   | { type: 'edit-patient'; patch: Partial<Patient>; step?: string }
   | { type: 'edit-extent'; side: Side; reading: Reading; step?: string }
   | { type: 'edit-prescription'; patch: Partial<Prescription>; step?: string }
+  /** The active sequence as its protocol has it, without what was adopted. */
+  | { type: 'back-to-protocol'; prescription: Prescription }
   | { type: 'edit-keep-clear'; keepClear: KeepClear; step?: string }
   | { type: 'choose-scanner'; scanner: Scanner }
   | { type: 'settle' }

@@ -1,4 +1,5 @@
 import { onScanner } from '@/lib/domain/case/lines';
+import type { Prescription } from '@/lib/physics/model/prescription';
 import type { Scanner } from '@/lib/physics/model/scanner';
 import type { BenchView } from '@/lib/schemas/booking';
 import type { PlanInput, PlanView } from '@/lib/schemas/plan';
@@ -57,6 +58,11 @@ export function basisOfBooking({ booking, scanner, protocol, policy, plan }: Ben
     protocolVersion: plan ? plan.protocolVersion : protocol.version,
     policyVersion: policy.version,
   };
+}
+
+/** The protocol's own prescriptions on this scanner, by sequence: what a changed one can go back to. */
+export function prescriptionsOf({ sequences }: Pick<ProtocolView, 'sequences'>, scanner: Scanner): Record<string, Prescription> {
+  return Object.fromEntries(sequences.map(({ id, prescription }) => [id, onScanner(prescription, scanner)]));
 }
 
 /** A bench without a booking: a protocol on a scanner, over a body that is assumed until it is typed. */

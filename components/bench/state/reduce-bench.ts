@@ -18,6 +18,10 @@ export function reduceBench(state: BenchState, action: BenchAction): BenchState 
       const prescription = tidyPrescription(sequence.prescription, action.patch, document.scanner);
       return edited(state, replaceSequence(document, { ...sequence, prescription }), action.step);
     }
+    case 'back-to-protocol': {
+      const { id } = sequenceById(document, state.activeId);
+      return edited(state, replaceSequence(document, { id, prescription: action.prescription, adopted: [] }));
+    }
     case 'edit-keep-clear':
       // A newly drawn area is meant for every sequence, so what a remedy froze before no longer applies.
       return edited(

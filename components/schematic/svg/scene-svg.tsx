@@ -129,6 +129,8 @@ export function SceneSvg({
   const nodes = ground === 'paper' ? scene.nodes.filter(onPaper) : scene.nodes;
   return (
     <svg viewBox={`0 0 ${widthPx} ${heightPx}`} role="img" aria-label={label} className={className}>
+      {/* Black on white wherever it is shown: in a dark room a sheet is looked at on a screen first. */}
+      {ground === 'paper' && <rect width={widthPx} height={heightPx} fill="white" />}
       {nodes.map((node) => (
         <SvgNode key={node.name} node={node} fit={fit} ground={ground} />
       ))}

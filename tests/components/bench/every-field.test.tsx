@@ -50,7 +50,7 @@ function prescriptionFields(): Set<string> {
       slices: slices.mode === 'slab' ? { ...slices, timeBandwidthProduct: 4, pulseDurationMs: 2, fatShiftTowards: 'low-end' } : slices,
     };
   }));
-  const names = all.flatMap((prescription) => [...fieldsOf(benchOf(prescription), createElement(PrescriptionPanel, { source: 'Protocol' }))]);
+  const names = all.flatMap((prescription) => [...fieldsOf(benchOf(prescription), createElement(PrescriptionPanel, { source: 'Protocol', protocol: {} }))]);
   return new Set(names);
 }
 
@@ -75,7 +75,7 @@ describe('every field of the engine’s input has a control on the bench', () =>
   it('says "not known" for what a protocol leaves out, and asks for no figure then', () => {
     const { scanner, sequences } = benchDocument();
     const slab = tidyPrescription(sequences[0]!.prescription, { family: 'gradient-echo-3d' }, scanner);
-    const names = fieldsOf(benchOf(slab), createElement(PrescriptionPanel, { source: 'Protocol' }));
+    const names = fieldsOf(benchOf(slab), createElement(PrescriptionPanel, { source: 'Protocol', protocol: {} }));
     for (const path of ['slices.timeBandwidthProduct', 'slices.pulseDurationMs', 'acceleration.geometryFactor']) {
       expect(names.has(`${path}.known`), path).toBe(true);
       expect(names.has(path), path).toBe(false);

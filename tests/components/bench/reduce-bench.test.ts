@@ -13,6 +13,7 @@ import {
 } from '@/components/bench/state/prescription-edit';
 import { withSource, withValue } from '@/components/bench/state/reading-edit';
 import { reduceBench } from '@/components/bench/state/reduce-bench';
+import { changedFields } from '@/components/bench/prescription/from-protocol';
 import { DEFAULT_POLICY } from '@/lib/physics/model/default-policy';
 import type { Prescription } from '@/lib/physics/model/prescription';
 import type { Remedy } from '@/lib/physics/model/remedy';
@@ -132,6 +133,28 @@ describe('sizes corrected by hand', () => {
       value: 310, source: 'localiser', spread: 2, takenOn: '2026-03-02',
     });
     expect(withSource(estimate, 'localiser', '2026-03-02')).toMatchObject({ value: 300, source: 'localiser', spread: 3 });
+  });
+});
+
+describe('back to the protocol', () => {
+  const protocol = typicalPrescription();
+
+  it('says which fields differ from it, a pair of figures as one field', () => {
+    const now = typicalPrescription({ fovPhaseMm: 322, centreMm: [4, -6, 0] });
+    const fields = changedFields(protocol, now);
+    expect([...fields.keys()].sort()).toEqual(['centreMm', 'fovPhaseMm']);
+    expect(fields.get('fovPhaseMm')).toMatchObject([{ theirs: '300', mine: '322' }]);
+    expect(fields.get('centreMm')).toHaveLength(2);
+    expect(changedFields(protocol, typicalPrescription()).size).toBe(0);
+  });
+
+  it('puts one sequence back with what was adopted for it, in one step of undo', () => {
+    const adopted = reduceBench(start(), { type: 'adopt', remedy: remedy(typicalPrescription({ acquiredLines: 252 })) });
+    const back = reduceBench(adopted, { type: 'back-to-protocol', prescription: protocol });
+    expect(back.document.sequences[0]).toEqual({ id: 'a', prescription: protocol, adopted: [] });
+    expect(back.document.sequences[1]).toBe(adopted.document.sequences[1]);
+    expect(back.document.keepClear).toBe(adopted.document.keepClear);
+    expect(reduceBench(back, { type: 'undo' }).document).toBe(adopted.document);
   });
 });
 

@@ -4,7 +4,7 @@ import { BookingHeading } from '@/components/bench/booking-heading';
 import { identityOf } from '@/components/bench/saving/plan-identity';
 import { SizeNeeded } from '@/components/bench/size-needed';
 import { firstView } from '@/components/bench/state/first-view';
-import { basisOfBooking, documentOfBooking } from '@/components/bench/state/plan-document';
+import { basisOfBooking, documentOfBooking, prescriptionsOf } from '@/components/bench/state/plan-document';
 import { AddToDemonstration } from '@/components/demonstration/capture/add-to-demonstration';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
@@ -41,6 +41,7 @@ export default async function BookingBenchPage({ params }: { params: Promise<{ b
       keepClearPreset={view.requested?.keepClear ?? view.protocol.keepClear}
       keepClearAsked={view.requested && `Asked for by ${view.requested.by}. ${view.requested.note}`.trim()}
       protocolLabel={`${view.protocol.name} v${view.protocol.version}`}
+      protocolPrescriptions={prescriptionsOf(view.protocol, view.scanner.scanner)}
     >
       {heading}
       {teaches && <AddToDemonstration demonstrations={teaches} add={addSceneAction} reference={view.booking.accession} />}
