@@ -26,6 +26,6 @@ const config = {
   // Types are checked by "npm test", once, over the whole project; a start must not wait for it.
   typescript: { ignoreBuildErrors: true },
   serverExternalPackages: ['@node-rs/argon2', 'pg', 'pg-boss', '@react-pdf/renderer'],
-  headers: async () => [{ source: '/:path*', headers }, { source: '/size', headers: privateLink }],
+  headers: async () => [{ source: '/:path*', headers }, { source: '/size', headers: privateLink }, { source: '/shown/:token', headers: privateLink }],
 };
 export default config;

@@ -29,7 +29,7 @@ export function PhaseOrSlicePanel({ question, wide = false }: { question: Case; 
   );
   return (
     <section aria-label="Phase or slice oversampling" className={cx(wide && 'mt-6 border-t border-line pt-3')}>
-      <h3 className="font-semibold text-ink-soft">Phase or slice oversampling</h3>
+      <h2 className="font-semibold text-ink-soft">Phase or slice oversampling</h2>
       <ul className={cx('mt-1 grid gap-x-8 gap-y-2', wide && 'sm:grid-cols-2')}>
         {lines.map(({ key, foldAlongPhase, contaminated, drawn }) => (
           <li key={key} className={cx(wide && key === 'as-set' && 'sm:col-span-2')} data-direction={key}>

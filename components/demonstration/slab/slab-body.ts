@@ -42,3 +42,8 @@ export function slabSketch({ patient, prescription }: Case, lane: Lane): readonl
     rings: organ.rings.map((ring) => ring.map(turned)),
   }));
 }
+
+/** A stretch of the slab axis as high as its lane. */
+export const box = (from: number, to: number, [upper, lower]: Lane): Ring => [
+  [from, upper], [to, upper], [to, lower], [from, lower],
+];

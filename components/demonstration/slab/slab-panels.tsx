@@ -66,7 +66,7 @@ export function SlabPanels({ question, slab, sliceOffsetMm, onSlice, fill = fals
         </label>
       </section>
       <section aria-label="Partitions with wrap against slice oversampling">
-        <h3 className="font-semibold text-ink-soft">Partitions with wrap, by slice oversampling</h3>
+        <h2 className="font-semibold text-ink-soft">Partitions with wrap, by slice oversampling</h2>
         <SceneSvg scene={curveScene(curve, acquired)} label={`At ${acquired} acquired partitions ${slab.contaminated} hold wrap`} {...CURVE_SIZE} className="block w-full" />
         {!fill && <p className="text-sm text-ink-soft">{PROFILE_WORDS[slab.profileKind]}</p>}
       </section>

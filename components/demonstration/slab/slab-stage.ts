@@ -1,5 +1,4 @@
-import { hatch } from '@/components/schematic/scene/rings';
-import { fitScene, fromPixels, type AreaNode, type Bounds, type Ring, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
+import { fitScene, fromPixels, type AreaNode, type Bounds, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
 import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { HEIGHT_SHARE, slabScene } from '@/components/schematic/scene/slab-scene';
 import { sliceAxisOf } from '@/lib/domain/case/lines';
@@ -11,7 +10,8 @@ import type { PartitionResult, SlabResult } from '@/lib/physics/model/assessment
 import type { Case } from '@/lib/physics/model/case';
 import { slabSources } from '@/lib/physics/slab/assess-slab';
 import type { SlabSource, TissueAlongSlab } from '@/lib/physics/slab/slab-types';
-import { between, slabSketch, type Lane } from './slab-body';
+import { between, box, slabSketch, type Lane } from './slab-body';
+import { travelNodes, travelsOf } from './slab-travel';
 
 export interface SlabStageInput {
   readonly question: Case;
@@ -19,15 +19,6 @@ export interface SlabStageInput {
   readonly size: { readonly widthPx: number; readonly heightPx: number };
   /** Partition looked at, by its offset, mm. */
   readonly sliceOffsetMm: number;
-}
-
-/** Where tissue is excited and where the engine finds it: one end of the slab to the other. */
-export interface Travel {
-  /** End beyond which the tissue lies. */
-  readonly end: 'low' | 'high';
-  readonly sourceMm: readonly [number, number];
-  readonly landedMm: readonly [number, number];
-  readonly partitions: readonly PartitionResult[];
 }
 
 /** Room for the highest bar above the base line, and the body's lane below it, as shares of the acquired slab. */
@@ -46,27 +37,6 @@ const SAID_HERE = new Set(['partition/axis', 'keep-clear/label', 'acquired-edge/
 
 const worstAt = (sources: readonly SlabSource[], slabMm: number, z: number): number =>
   Math.max(...sources.map(({ profile, shiftShare }) => profile.at(z / slabMm - shiftShare)));
-
-/** The contaminated partitions by the end their intruder comes from: the one whose alias the profile weighs more. */
-export function travelsOf(
-  slab: SlabResult,
-  widthMm: number,
-  thicknessMm: number,
-  weightAt: (z: number) => number,
-): readonly Travel[] {
-  const contaminated = slab.partitions.filter(({ state }) => state === 'contaminated');
-  return (['high', 'low'] as const).flatMap((end): Travel[] => {
-    const shift = end === 'high' ? widthMm : -widthMm;
-    const partitions = contaminated.filter(({ offsetMm }) => {
-      const [mine, other] = [weightAt(offsetMm + shift), weightAt(offsetMm - shift)];
-      return end === 'high' ? mine >= other : mine > other;
-    });
-    const [first, last] = [partitions[0], partitions.at(-1)];
-    if (!first || !last) return [];
-    const landedMm = [first.offsetMm - thicknessMm / 2, last.offsetMm + thicknessMm / 2] as const;
-    return [{ end, landedMm, sourceMm: [landedMm[0] + shift, landedMm[1] + shift], partitions }];
-  });
-}
 
 /**
  * The slab with the body lying in it. Above: the bench's own profile with its partitions, drawn on into the skirts.
@@ -104,7 +74,7 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
       ...bodyNodes(tissue, bounds, lane),
       ...sketch,
       ...stackNodes(slab, slices, lane),
-      ...above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/')),
+      ...oneBar(above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/'))),
       ...wordNodes(slab, { widthMm, thickness, plateau, bounds, mmPerPx }),
       skirtNode(sources, slabMm, bounds, plateau),
       ...travels.flatMap((travel) => travelNodes(travel, { sides: AXIS_SIDES[sliceAxisOf(plane)], lane, mmPerPx, bounds, sketch })),
@@ -112,10 +82,6 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
     ],
   };
 }
-
-const box = (from: number, to: number, [upper, lower]: readonly [number, number]): Ring => [
-  [from, upper], [to, upper], [to, lower], [from, lower],
-];
 
 function bodyNodes(tissue: TissueAlongSlab, bounds: Bounds, lane: Lane): SceneNode[] {
   const [from, to] = [Math.max(tissue.rangeMm[0], bounds.left), Math.min(tissue.rangeMm[1], bounds.right)];
@@ -157,6 +123,17 @@ function skirtNode(sources: readonly SlabSource[], slabMm: number, bounds: Bound
   };
 }
 
+/** The partitions' own bars as one node for each kind of edge: they are moved together, forty-eight at a time. */
+function oneBar(nodes: readonly SceneNode[]): SceneNode[] {
+  const bars = nodes.filter((node): node is AreaNode => node.kind === 'area' && /^partition\/\d+$/.test(node.name));
+  const joined = [...new Set(bars.map(({ stroke }) => stroke?.edge))].flatMap((edge): AreaNode[] => {
+    const alike = bars.filter(({ stroke }) => stroke?.edge === edge);
+    return alike[0] ? [{ ...alike[0], name: `partitions/${edge}`, rings: alike.flatMap(({ rings }) => rings) }] : [];
+  });
+  const names = new Set(bars.map(({ name }) => name));
+  return [...joined, ...nodes.filter(({ name }) => !names.has(name))];
+}
+
 /** Which profile it is, what is acquired, and what is to stay free: each where nothing else is drawn. */
 function wordNodes(
   slab: SlabResult,
@@ -175,49 +152,6 @@ function wordNodes(
       ? [note('keep-clear/label', 'keep-clear area', [(first.offsetMm + last.offsetMm) / 2, -1.25 * plateau], [0, -6], 'middle', 'indigo')]
       : []),
     ...(slab.partitions.length === 0 ? [] : [note('stack/label', `${slab.partitions.length} partitions of ${Math.round(thickness * 10) / 10} mm`, [0, 0], [0, 18], 'middle', 'ink-soft')]),
-  ];
-}
-
-interface TravelFrame {
-  readonly sides: readonly [string, string];
-  readonly lane: Lane;
-  readonly mmPerPx: number;
-  readonly bounds: Bounds;
-  readonly sketch: readonly AreaNode[];
-}
-
-/** The organs of what travels, where it lands. */
-function landedOrgans({ end, sourceMm, landedMm }: Travel, sketch: readonly AreaNode[]): SceneNode[] {
-  const shift = landedMm[0] - sourceMm[0];
-  return sketch.flatMap((organ): SceneNode[] => {
-    const rings = organ.rings.map((ring) => between(ring, sourceMm).map(([z, v]) => [z + shift, v] as const)).filter((ring) => ring.length > 2);
-    return rings.length > 0 ? [{ ...organ, name: `${organ.name}/landed-${end}`, rings }] : [];
-  });
-}
-
-function travelNodes(travel: Travel, { sides, lane, mmPerPx, bounds, sketch }: TravelFrame): SceneNode[] {
-  const { end, sourceMm, landedMm, partitions } = travel;
-  const kept = partitions.some(({ inKeepClear }) => inKeepClear);
-  const colour: Token = kept ? 'thread' : 'ochre';
-  const landed = box(landedMm[0], landedMm[1], lane);
-  const middle = ([from, to]: readonly [number, number]): number => (from + to) / 2;
-  const below = lane[1] + (end === 'high' ? 9 : 21) * mmPerPx;
-  const [from, to] = [middle(sourceMm), middle(landedMm)];
-  return [
-    { kind: 'area', name: `travel/${end}/source`, rings: [box(sourceMm[0], sourceMm[1], lane)], stroke: { colour, widthPx: 1.5, edge: 'solid' } },
-    { kind: 'area', name: `travel/${end}/ground`, rings: [landed], fill: 'tissue-fat' },
-    ...landedOrgans(travel, sketch),
-    { kind: 'area', name: `travel/${end}/landed`, rings: [landed], fill: kept ? 'thread-wash' : 'ochre-wash', fillOpacity: 0.35, stroke: { colour, widthPx: 1.5, edge: 'solid' } },
-    { kind: 'lines', name: `travel/${end}/hatch`, lines: hatch([landed], end === 'high' ? 45 : -45, 6 * mmPerPx), stroke: { colour, widthPx: 1.25, edge: 'solid' } },
-    {
-      kind: 'lines', name: `travel/${end}/path`,
-      lines: [[[from, lane[1]], [from, below], [to, below], [to, lane[1]]]],
-      stroke: { colour, widthPx: 1.25, edge: 'dotted' },
-    },
-    {
-      kind: 'text', name: `travel/${end}/label`, text: `from beyond the ${end === 'high' ? sides[1] : sides[0]} end`,
-      at: [end === 'high' ? bounds.right : bounds.left, lane[1]], offsetPx: [end === 'high' ? -6 : 6, 42], anchor: end === 'high' ? 'end' : 'start', size: 'note', colour,
-    },
   ];
 }
 

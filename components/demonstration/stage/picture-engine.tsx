@@ -5,6 +5,7 @@ import { useLatest } from '@/components/bench/live/use-latest';
 import { createViewsEngine, type ViewsEngine } from '@/components/bench/live/views-engine';
 import type { AskedPicture, PaintedPicture } from '@/components/bench/picture/painted-picture';
 import type { Case } from '@/lib/physics/model/case';
+import { useSettled } from './use-settled';
 
 const EngineContext = createContext<ViewsEngine | null>(null);
 
@@ -21,10 +22,11 @@ export function PictureEngine({ children }: { children: ReactNode }) {
 }
 
 /** The newest simulated picture; while the next is worked out the one before it stays. */
-export function useSimulated(question: Case | null, sliceOffsetMm: number, sizePx: number) {
+export function useSimulated(asked: Case | null, sliceOffsetMm: number, sizePx: number) {
+  const question = useSettled(asked);
   const engine = useContext(EngineContext);
   if (!engine) throw new Error('Only inside a PictureEngine.');
-  const run = useCallback(async (asked: AskedPicture): Promise<PaintedPicture> => engine.engine().picture(asked), [engine]);
+  const run = useCallback(async (wanted: AskedPicture): Promise<PaintedPicture> => engine.engine().picture(wanted), [engine]);
   const job = useMemo(() => (question ? { question, sliceOffsetMm, sizePx, fitWhite: true } : null), [question, sliceOffsetMm, sizePx]);
   return useLatest(job, run);
 }

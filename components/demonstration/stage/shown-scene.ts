@@ -20,13 +20,22 @@ export interface Size {
 /** The answer to one scene: what the engine says, or why it refuses. */
 export type Answer = { readonly assessment: Assessment; readonly refusal?: undefined } | { readonly assessment?: undefined; readonly refusal: string };
 
-export function answerOf(question: Case): Answer {
+/** Stage, panels and figures ask about one and the same question; it is worked out once. */
+const answers = new WeakMap<Case, Answer>();
+
+function workOut(question: Case): Answer {
   try {
     return { assessment: assess(question) };
   } catch (error) {
     if (error instanceof Error && error.name === 'DomainError') return { refusal: error.message };
     throw error;
   }
+}
+
+export function answerOf(question: Case): Answer {
+  const known = answers.get(question) ?? workOut(question);
+  answers.set(question, known);
+  return known;
 }
 
 export interface Drawn {

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { oversamplingCurve, curveScene } from '@/components/demonstration/slab/oversampling-curve';
 import { COMPARED_PCT, phaseOrSlice } from '@/components/demonstration/slab/phase-or-slice';
-import { slabStage, travelsOf } from '@/components/demonstration/slab/slab-stage';
+import { slabStage } from '@/components/demonstration/slab/slab-stage';
+import { travelsOf } from '@/components/demonstration/slab/slab-travel';
 import { CONTROLS } from '@/lib/domain/demonstration/controls';
 import { findSetPiece } from '@/lib/domain/demonstration/set-pieces';
 import { assess, simulateImage } from '@/lib/physics';
