@@ -8,10 +8,10 @@ import { PlaceWords } from './place-words';
 const STATUS = { open: 'open', agreed: 'followed', withdrawn: 'taken back', replaced: 'replaced' } as const;
 
 /** Moves side by side: what is booked now, and what was proposed. */
-export function MoveTasks({ moves, caption }: { moves: readonly MoveView[]; caption: string }) {
+export function MoveTasks({ moves, caption, settled = false }: { moves: readonly MoveView[]; caption: string; settled?: boolean }) {
   return (
     <Table caption={caption}>
-      <thead><tr><Th>Accession</Th><Th>Booked now</Th><Th>Proposed</Th><Th>Why</Th><Th>By</Th><Th>State</Th></tr></thead>
+      <thead><tr><Th>Accession</Th><Th>{settled ? 'Was booked' : 'Booked now'}</Th><Th>Proposed</Th><Th>Why</Th><Th>By</Th><Th>State</Th></tr></thead>
       <tbody>
         {moves.map((move) => (
           <Tr key={move.id} className="align-top">

@@ -15,11 +15,7 @@ export const formatLongDay = (moment: Date): string => LONG_DAY.format(moment);
 export const formatDate = (moment: Date): string => DATE.format(moment);
 export const formatMoment = (moment: Date): string => `${DATE.format(moment)}, ${TIME.format(moment)}`;
 
-/** The local calendar day, YYYY-MM-DD. */
-export function dayKey(moment: Date): string {
-  const two = (value: number) => String(value).padStart(2, '0');
-  return `${moment.getFullYear()}-${two(moment.getMonth() + 1)}-${two(moment.getDate())}`;
-}
+export { localDay as dayKey } from '@/lib/domain/site/local-day';
 
 /** The same wall-clock day so many days later; noon keeps clear of the hours a clock change skips or repeats. */
 export function addDays(moment: Date, days: number): Date {

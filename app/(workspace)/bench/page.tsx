@@ -8,6 +8,7 @@ import { documentOfProtocol, prescriptionsOf } from '@/components/bench/state/pl
 import { AddToDemonstration } from '@/components/demonstration/capture/add-to-demonstration';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
+import { dayKey } from '@/lib/presentation/moment';
 import { listDemonstrations } from '@/lib/services/demonstration/list-demonstrations';
 import { getPolicy } from '@/lib/services/site-policy/get-policy';
 import { getProtocol } from '@/lib/services/protocol/get-protocol';
@@ -30,7 +31,7 @@ export default async function FreeBenchPage({ searchParams }: { searchParams: Pr
   });
   if (!scanner || !protocol) return <NothingSetUp scanner={scanner !== undefined} mayEdit={mayAttempt(actor, 'scanner.edit')} />;
   const document = documentOfProtocol(protocol, scanner.scanner);
-  const setting = { policy: policy.policy, today: new Date().toISOString().slice(0, 10) };
+  const setting = { policy: policy.policy, today: dayKey(new Date()) };
   return (
     <Bench
       key={`${scanner.id}/${protocol.id}`}

@@ -2,6 +2,7 @@
 
 import { bookingFormSchema, type BookingForm } from '@/components/booking/booking-form-schema';
 import { moveFormSchema, sessionFormSchema, sessionsOf, type MoveForm, type NoteForm, type SessionForm, type SurgeryForm } from '@/components/booking/coordinator-forms';
+import { atClock } from '@/lib/domain/site/local-day';
 import { runAction } from '@/lib/http/run-action';
 import { parseInput } from '@/lib/schemas/parse-input';
 import type { RecordReadings } from '@/lib/schemas/size-reading';
@@ -19,8 +20,7 @@ import { recordReadings } from '@/lib/services/size-reading/record-readings';
 export async function addBooking(form: BookingForm) {
   return runAction('add a booking', async (context) => {
     const { day, time, ...rest } = parseInput(bookingFormSchema, form);
-    // Wall-clock time of the site, whose zone this server keeps.
-    return createBooking(context, { ...rest, scheduledAt: new Date(`${day}T${time}:00`).toISOString() });
+    return createBooking(context, { ...rest, scheduledAt: atClock(day, time).toISOString() });
   });
 }
 
@@ -43,7 +43,7 @@ export async function proposeChosen(bookingIds: string[]) {
 export async function proposePlace(bookingId: string, form: MoveForm) {
   return runAction('propose a move', (context) => {
     const { day, time, ...rest } = parseInput(moveFormSchema, form);
-    return proposeMove(context, { bookingId, ...rest, scheduledAt: new Date(`${day}T${time}:00`).toISOString() });
+    return proposeMove(context, { bookingId, ...rest, scheduledAt: atClock(day, time).toISOString() });
   });
 }
 

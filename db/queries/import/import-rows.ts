@@ -3,6 +3,7 @@ import type { SiteTransaction } from '@/db/client';
 import type { ImportRow } from '@/lib/domain/import';
 import { settleAgreedMoves } from '@/db/queries/move-proposal/move-proposals';
 import { spreadOf } from '@/lib/domain/import';
+import { localDay } from '@/lib/domain/site/local-day';
 
 /** A reading as a row keeps it, short: a file has many. */
 const toStored = (reading: ImportRow['readings'][number]) => ({
@@ -164,7 +165,7 @@ async function addReadings(trx: SiteTransaction, { siteId, batchId, by, at }: Co
     with added as (
       insert into size_reading (site_id, booking_id, quantity, value, source, spread, taken_on, tape_site, recorded_by, recorded_at)
       select b.site_id, b.id, q.quantity, q.value, q.source, q.spread,
-        coalesce(nullif(q.taken_on, ''), ${at.toISOString().slice(0, 10)}), q.tape_site, ${by}::uuid, ${at}::timestamptz
+        coalesce(nullif(q.taken_on, ''), ${localDay(at)}), q.tape_site, ${by}::uuid, ${at}::timestamptz
       from import_row i
       join booking b on b.site_id = i.site_id and b.accession = i.accession
       cross join ${READINGS}

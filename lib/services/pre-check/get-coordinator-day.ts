@@ -2,10 +2,10 @@ import { inTransaction } from '@/db/client';
 import { countResults, listEscalated } from '@/db/queries/booking/booking-table';
 import { listMoves } from '@/db/queries/move-proposal/move-proposals';
 import { authorise } from '@/lib/domain/access';
+import { dayOf } from '@/lib/domain/site/local-day';
 import type { BookingListItem } from '@/lib/schemas/booking';
 import { toBookingListItem } from '../booking/to-booking-view';
 import { nowOf, type ServiceContext } from '../context';
-import { dayOf } from './day-of';
 
 const DAYS = 14;
 const MOST = 20;

@@ -5,6 +5,7 @@ import { listSessions, type SessionRecord } from '@/db/queries/scanner-session/s
 import { authorise } from '@/lib/domain/access';
 import { invalidField } from '@/lib/domain/errors';
 import { PRE_CHECK_RESULTS } from '@/lib/domain/pre-check/result';
+import { localDay, startOfDay } from '@/lib/domain/site/local-day';
 import type { WeekCell, WeekView } from '@/lib/schemas/pre-check';
 import { nowOf, type ServiceContext } from '../context';
 
@@ -12,8 +13,6 @@ const DAYS = 7;
 const DAY_MS = 86_400_000;
 const MOST_CHANGES = 100;
 
-const two = (value: number) => String(value).padStart(2, '0');
-const keyOf = (moment: Date) => `${moment.getFullYear()}-${two(moment.getMonth() + 1)}-${two(moment.getDate())}`;
 const changedSince = ({ before, result, isNew }: WeekBooking): boolean => isNew || (before !== null && before !== result);
 
 function cellOf(day: string, scanner: { readonly id: string; readonly name: string }, bookings: readonly WeekBooking[], sessions: readonly SessionRecord[]): WeekCell {
@@ -40,9 +39,9 @@ export async function getWeek(context: ServiceContext, input: { readonly from: s
   const { actor } = context;
   const { siteId } = actor;
   authorise(actor, 'booking.read');
-  const first = new Date(`${input.from}T00:00:00`);
+  const first = startOfDay(input.from);
   if (!/^\d{4}-\d{2}-\d{2}$/.test(input.from) || Number.isNaN(first.getTime())) throw invalidField('from', `${input.from} given; allowed: a day`);
-  const dayAt = (index: number) => new Date(first.getFullYear(), first.getMonth(), first.getDate() + index);
+  const dayAt = (index: number) => startOfDay(input.from, index);
   const span = { from: first, before: dayAt(DAYS) };
   const since = new Date(nowOf(context).getTime() - DAY_MS);
   return inTransaction(siteId, async (trx) => {
@@ -51,11 +50,11 @@ export async function getWeek(context: ServiceContext, input: { readonly from: s
     const scanners = (await listScanners(trx, siteId, { includeArchived: true }))
       .filter(({ id, archivedAt }) => archivedAt === null || bookings.some(({ scannerId }) => scannerId === id))
       .map(({ id, document }) => ({ id, name: document.scanner.name }));
-    const days = Array.from({ length: DAYS }, (_, index) => keyOf(dayAt(index)));
+    const days = Array.from({ length: DAYS }, (_, index) => localDay(dayAt(index)));
     const cells = scanners.flatMap((scanner) => days.map((day) => cellOf(
       day, scanner,
-      bookings.filter((one) => one.scannerId === scanner.id && keyOf(one.scheduledAt) === day),
-      sessions.filter((one) => one.scannerId === scanner.id && keyOf(one.startsAt) === day),
+      bookings.filter((one) => one.scannerId === scanner.id && localDay(one.scheduledAt) === day),
+      sessions.filter((one) => one.scannerId === scanner.id && localDay(one.startsAt) === day),
     )));
     const changes = bookings.filter(changedSince).slice(0, MOST_CHANGES).map((one) => ({
       bookingId: one.id, accession: one.accession, scheduledAt: one.scheduledAt.toISOString(),

@@ -3,6 +3,7 @@ import { countResults, readBookingTable, type TableFilter, type TablePosition, t
 import { authorise } from '@/lib/domain/access';
 import { writeCsv } from '@/lib/csv/write-csv';
 import { invalidField } from '@/lib/domain/errors';
+import { startOfDay } from '@/lib/domain/site/local-day';
 import type { BookingListItem } from '@/lib/schemas/booking';
 import { bookingTableInput } from '@/lib/schemas/pre-check';
 import { parseInput } from '@/lib/schemas/parse-input';
@@ -30,13 +31,10 @@ function readCursor(text: string | undefined): TablePosition | undefined {
 
 const cursorOf = ({ key, scheduledAt, id }: TableRow): string => `${key}_${scheduledAt.toISOString()}_${id}`;
 
-/** Days are the site's own, on the wall clock of the machine that keeps its time. */
 function windowOf(asked: ReturnType<typeof bookingTableInput.parse>): TableFilter {
   if (asked.to < asked.from) throw invalidField('to', `${asked.to} given; allowed: ${asked.from} or later`);
-  const before = new Date(`${asked.to}T00:00:00`);
-  before.setDate(before.getDate() + 1);
   return {
-    from: new Date(`${asked.from}T00:00:00`), before,
+    from: startOfDay(asked.from), before: startOfDay(asked.to, 1),
     ...(asked.result ? { result: asked.result } : {}),
     ...(asked.scanner ? { scannerId: asked.scanner } : {}),
     ...(asked.protocol ? { protocolId: asked.protocol } : {}),

@@ -1,7 +1,7 @@
 import type { SiteTransaction } from '@/db/client';
+import { dayOf } from '@/lib/domain/site/local-day';
 import { markStale, type StaleFilter } from '@/db/queries/pre-check/check-results';
 import { enqueue } from '@/lib/jobs';
-import { dayOf } from './day-of';
 
 /** Something these bookings rest on changed: shown as stale from this transaction on, checked again in the background. */
 export async function bookingsChanged(trx: SiteTransaction, siteId: string, bookingIds: readonly string[], now: Date): Promise<void> {

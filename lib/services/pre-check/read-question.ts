@@ -10,8 +10,8 @@ import { listSizeReadings } from '@/db/queries/size-reading/size-readings';
 import { ServiceError } from '@/lib/domain/errors';
 import type { KeepClearRequestDocument } from '@/lib/domain/keep-clear-request/document';
 import type { PreCheckQuestion } from '@/lib/domain/pre-check/pre-check';
+import { dayOf } from '@/lib/domain/site/local-day';
 import { effectivePolicy } from '../site-policy/effective-policy';
-import { dayOf } from './day-of';
 
 export interface CheckSetup {
   readonly booking: BookingOverview;

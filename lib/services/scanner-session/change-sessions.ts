@@ -3,12 +3,12 @@ import { findScanner } from '@/db/queries/scanner/scanners';
 import { findSession, insertSessions, listSessions, lockScanner, removeSession as setRemoved } from '@/db/queries/scanner-session/scanner-sessions';
 import { authorise } from '@/lib/domain/access';
 import { invalidField, ServiceError } from '@/lib/domain/errors';
+import { dayOf } from '@/lib/domain/site/local-day';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { addSessionsInput } from '@/lib/schemas/scanner-session';
 import { recordAudit } from '../audit/record-audit';
 import { authorOf } from '../author';
 import { nowOf, type ServiceContext } from '../context';
-import { dayOf } from '../pre-check/day-of';
 import { setupChanged } from '../pre-check/mark-changed';
 
 interface Span {

@@ -5,6 +5,7 @@ import { findSite } from '@/db/queries/site/sites';
 import { authorise, linkActor, NOBODY_ID } from '@/lib/domain/access';
 import { ServiceError } from '@/lib/domain/errors';
 import { findSlips, toReadings } from '@/lib/domain/size-request/answer';
+import { localDay } from '@/lib/domain/site/local-day';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { sizeAnswerInput, type SizeFormView } from '@/lib/schemas/size-request';
 import { recordAudit } from '../audit/record-audit';
@@ -66,7 +67,7 @@ export async function answerSizeRequest(claim: string | undefined, input: unknow
     const request = await lockSizeRequest(trx, siteId, requestId);
     if (!request || request.expiresAt <= now || !(await settleSizeRequest(trx, siteId, requestId, 'answered', now))) throw ENDED();
     authorise(actor, 'size-request.answer', request);
-    const takenOn = now.toISOString().slice(0, 10);
+    const takenOn = localDay(now);
     const readings = toReadings(given).map((reading) => ({ ...reading, takenOn }));
     await insertSizeReadings(trx, siteId, request.bookingId, readings, { by: NOBODY_ID, at: now });
     await recordAudit(trx, { actor }, {

@@ -6,6 +6,10 @@ const PAGES = [
   '/today',
   '/bookings',
   '/bookings/new',
+  '/bookings/import',
+  '/bookings/week',
+  '/bookings/moves',
+  '/bookings/sessions',
   '/site',
   '/site/scanners',
   '/site/scanners/new',
@@ -13,6 +17,8 @@ const PAGES = [
   '/site/protocols/new',
   '/site/policy',
   '/site/details',
+  '/site/mail',
+  '/size',
   '/account',
 ];
 
@@ -42,7 +48,7 @@ const LISTS = [
 // Colours differ by theme and layout by width; the two do not mix, so three of the four pairs say all.
 for (const [theme, width] of [['day', 1440], ['control-room', 1440], ['day', 390]] as const) {
   test(`every page passes axe and fits, ${theme}, ${width} px wide`, async ({ signedIn, baseURL, expectedErrors }) => {
-    // Seventeen pages, each searched whole.
+    // Some two dozen pages, each searched whole.
     test.setTimeout(240_000);
     expectedErrors.push(/404/);
     const page = await signedIn('lead');

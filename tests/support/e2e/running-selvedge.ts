@@ -15,6 +15,8 @@ export interface RunningSelvedge {
   /** All it has printed so far. */
   printed(): string;
   stop(signal?: NodeJS.Signals): Promise<number | null>;
+  /** Resolves with its exit code when it ends, by itself or asked to. */
+  readonly ended: Promise<number | null>;
 }
 
 export interface StartOptions {
@@ -82,9 +84,9 @@ export function spawnSelvedge(options: {
 export async function startSelvedge(options: StartOptions = {}): Promise<RunningSelvedge> {
   const dataDir = options.dataDir ?? (await newDataFolder());
   const port = options.port ?? (await freePort());
-  const { pid, printed, prints, stop } = spawnSelvedge({ dataDir, port });
+  const { pid, printed, prints, stop, exited } = spawnSelvedge({ dataDir, port });
   await prints('Ctrl-C stops everything.');
-  return { address: `http://127.0.0.1:${port}`, dataDir, pid, printed, stop };
+  return { address: `http://127.0.0.1:${port}`, dataDir, pid, printed, stop, ended: exited };
 }
 
 export interface DemoAccount {

@@ -8,6 +8,7 @@ import { basisOfBooking, documentOfBooking, prescriptionsOf } from '@/components
 import { AddToDemonstration } from '@/components/demonstration/capture/add-to-demonstration';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
+import { dayKey } from '@/lib/presentation/moment';
 import { openBench } from '@/lib/services/booking/open-bench';
 import { listDemonstrations } from '@/lib/services/demonstration/list-demonstrations';
 import { addSceneAction } from '../../demonstrations/actions';
@@ -27,7 +28,7 @@ export default async function BookingBenchPage({ params }: { params: Promise<{ b
     <BookingHeading booking={view.booking} scannerName={view.scanner.scanner.name} opening={view.scanner.scanner.boreDiameterMm} />
   );
   if (!document) return <SizeNeeded bookingId={bookingId} accession={view.booking.accession} missing={view.sizeRecord.missing} />;
-  const setting = { policy: view.policy.policy, today: new Date().toISOString().slice(0, 10) };
+  const setting = { policy: view.policy.policy, today: dayKey(new Date()) };
   return (
     <Bench
       key={bookingId}

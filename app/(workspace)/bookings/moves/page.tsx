@@ -30,7 +30,7 @@ export default async function MovesPage() {
       {settled.length > 0 && (
         <>
           <h2 className="mt-8 mb-3 text-xl">Settled last</h2>
-          <MoveTasks moves={settled} caption="Moves settled last" />
+          <MoveTasks moves={settled} caption="Moves settled last" settled />
         </>
       )}
     </PageBody>

@@ -7,6 +7,7 @@ import { firstView } from '@/components/bench/state/first-view';
 import { basisOfBooking, documentOfBooking } from '@/components/bench/state/plan-document';
 import { mayAttempt } from '@/lib/domain/access';
 import { loadPage } from '@/lib/http/load-page';
+import { dayKey } from '@/lib/presentation/moment';
 import { openBench } from '@/lib/services/booking/open-bench';
 
 export const metadata: Metadata = { title: 'At the scanner' };
@@ -21,7 +22,7 @@ export default async function AtScannerPage({ params }: { params: Promise<{ book
   if (!mayEdit) notFound();
   const document = documentOfBooking(view);
   if (!document) return <SizeNeeded bookingId={bookingId} accession={view.booking.accession} missing={view.sizeRecord.missing} />;
-  const setting = { policy: view.policy.policy, today: new Date().toISOString().slice(0, 10) };
+  const setting = { policy: view.policy.policy, today: dayKey(new Date()) };
   return (
     <AtScanner
       key={bookingId}
