@@ -1,5 +1,6 @@
 import { fitScene, fromPixels, type AreaNode, type Bounds, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
 import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
+import { anchorWithin } from '@/components/schematic/scene/place-text';
 import { HEIGHT_SHARE, slabScene } from '@/components/schematic/scene/slab-scene';
 import { sliceAxisOf } from '@/lib/domain/case/lines';
 import { geometryCase } from '@/lib/physics/assess/assess';
@@ -26,6 +27,9 @@ const HIGHEST = 0.66;
 const LANE = [0.13, 0.41] as const;
 /** Below the lane: two paths and a line of words. */
 const BELOW = 0.62;
+/** A phone's width, where words that stand beside the slab go below it. */
+const NARROW_PX = 480;
+const BELOW_NARROW = 0.86;
 
 const PROFILE_NAMES: Readonly<Record<SlabResult['profileKind'], string>> = {
   'single-pulse': 'single-pulse profile',
@@ -59,7 +63,7 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
   const half = Math.min(reach, 1.5 * widthMm);
   const heightShare = Math.min(HEIGHT_SHARE, HIGHEST / (highest + 0.1));
   const plateau = widthMm * heightShare;
-  const wanted: Bounds = { left: -half * 1.04, right: half * 1.04, top: -plateau * Math.max(1.7, highest + 0.15), bottom: widthMm * BELOW };
+  const wanted: Bounds = { left: -half * 1.04, right: half * 1.04, top: -plateau * Math.max(1.7, highest + 0.15), bottom: widthMm * (size.widthPx < NARROW_PX ? BELOW_NARROW : BELOW) };
   const fit = fitScene(wanted, size.widthPx, size.heightPx);
   const [left, top] = fromPixels(fit, [0, 0]);
   const [right, bottom] = fromPixels(fit, [size.widthPx, size.heightPx]);
@@ -74,7 +78,7 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
       ...bodyNodes(tissue, bounds, lane),
       ...sketch,
       ...stackNodes(slab, slices, lane),
-      ...oneBar(above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/'))),
+      ...joined(above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/'))),
       ...wordNodes(slab, { widthMm, thickness, plateau, bounds, mmPerPx }),
       skirtNode(sources, slabMm, bounds, plateau),
       ...travels.flatMap((travel) => travelNodes(travel, { sides: AXIS_SIDES[sliceAxisOf(plane)], lane, mmPerPx, bounds, sketch })),
@@ -123,15 +127,29 @@ function skirtNode(sources: readonly SlabSource[], slabMm: number, bounds: Bound
   };
 }
 
-/** The partitions' own bars as one node for each kind of edge: they are moved together, forty-eight at a time. */
-function oneBar(nodes: readonly SceneNode[]): SceneNode[] {
-  const bars = nodes.filter((node): node is AreaNode => node.kind === 'area' && /^partition\/\d+$/.test(node.name));
-  const joined = [...new Set(bars.map(({ stroke }) => stroke?.edge))].flatMap((edge): AreaNode[] => {
-    const alike = bars.filter(({ stroke }) => stroke?.edge === edge);
-    return alike[0] ? [{ ...alike[0], name: `partitions/${edge}`, rings: alike.flatMap(({ rings }) => rings) }] : [];
-  });
-  const names = new Set(bars.map(({ name }) => name));
-  return [...joined, ...nodes.filter(({ name }) => !names.has(name))];
+const PARTITION = /^partition\/\d+(?<part>\/alias\/hatch|\/alias|)$/;
+const PARTS: Readonly<Record<string, string>> = { '': 'signal', '/alias': 'alias', '/alias/hatch': 'hatch' };
+
+/**
+ * The partitions' bars, what wraps on them and its hatching, one node for each look instead of three a partition: a
+ * control moves all of them in every frame. Ring by ring they stay what the bench draws.
+ */
+function joined(nodes: readonly SceneNode[]): SceneNode[] {
+  const groups = new Map<string, SceneNode>();
+  const rest: SceneNode[] = [];
+  for (const node of nodes) {
+    const part = PARTITION.exec(node.name)?.groups?.part;
+    if (part === undefined || (node.kind !== 'area' && node.kind !== 'lines')) {
+      rest.push(node);
+      continue;
+    }
+    const name = `partitions/${PARTS[part]}/${node.stroke?.colour}/${node.stroke?.edge}`;
+    const group = groups.get(name);
+    if (node.kind === 'area' && group?.kind === 'area') groups.set(name, { ...group, rings: [...group.rings, ...node.rings] });
+    else if (node.kind === 'lines' && group?.kind === 'lines') groups.set(name, { ...group, lines: [...group.lines, ...node.lines] });
+    else groups.set(name, { ...node, name });
+  }
+  return [...groups.values(), ...rest];
 }
 
 /** Which profile it is, what is acquired, and what is to stay free: each where nothing else is drawn. */
@@ -145,9 +163,14 @@ function wordNodes(
     kind: 'text', name, text, at, offsetPx, anchor, size: 'note', colour,
   });
   const edge = Math.max(bounds.top + 20 * mmPerPx, -1.45 * plateau);
+  const acquired = `acquired ${Math.round(widthMm)} mm`;
+  const profile = PROFILE_NAMES[slab.profileKind];
+  // Beside the slab where there is room, else together below everything.
+  const beside = anchorWithin(acquired, [widthMm / 2, edge], bounds, mmPerPx).sign === 1;
   return [
-    note('acquired-edge/label', `acquired ${Math.round(widthMm)} mm`, [-widthMm / 2, edge], [-10, 0], 'end', 'ink-soft'),
-    note('profile/name', PROFILE_NAMES[slab.profileKind], [widthMm / 2, edge], [10, 0], 'start', 'ink'),
+    ...(beside
+      ? [note('acquired-edge/label', acquired, [-widthMm / 2, edge], [-10, 0], 'end', 'ink-soft'), note('profile/name', profile, [widthMm / 2, edge], [10, 0], 'start', 'ink')]
+      : [note('acquired-edge/label', `${acquired}, ${profile}`, [0, bounds.bottom], [0, -6], 'middle', 'ink-soft')]),
     ...(first && last
       ? [note('keep-clear/label', 'keep-clear area', [(first.offsetMm + last.offsetMm) / 2, -1.25 * plateau], [0, -6], 'middle', 'indigo')]
       : []),

@@ -50,6 +50,12 @@ function landedOrgans({ end, sourceMm, landedMm }: Travel, sketch: readonly Area
   });
 }
 
+/** Both ends' words stand on one line, so each has half of it. */
+function travelWords(side: string, widthPx: number): string {
+  const words = `from beyond the ${side} end`;
+  return words.length * 7.6 < widthPx / 2 - 10 ? words : `from beyond ${side.charAt(0).toUpperCase()}`;
+}
+
 /** What is excited beyond an end, outlined; its path; and hatched where it lands. */
 export function travelNodes(travel: Travel, { sides, lane, mmPerPx, bounds, sketch }: TravelFrame): SceneNode[] {
   const { end, sourceMm, landedMm, partitions } = travel;
@@ -71,7 +77,7 @@ export function travelNodes(travel: Travel, { sides, lane, mmPerPx, bounds, sket
       stroke: { colour, widthPx: 1.25, edge: 'dotted' },
     },
     {
-      kind: 'text', name: `travel/${end}/label`, text: `from beyond the ${end === 'high' ? sides[1] : sides[0]} end`,
+      kind: 'text', name: `travel/${end}/label`, text: travelWords(sides[end === 'high' ? 1 : 0], (bounds.right - bounds.left) / mmPerPx),
       at: [end === 'high' ? bounds.right : bounds.left, lane[1]], offsetPx: [end === 'high' ? -6 : 6, 42], anchor: end === 'high' ? 'end' : 'start', size: 'note', colour,
     },
   ];

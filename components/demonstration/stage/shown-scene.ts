@@ -75,7 +75,7 @@ export function sceneWords(scene: ShownScene, answer: Answer): readonly string[]
 }
 
 const MATCHES: Readonly<Record<Exclude<Highlight, 'nothing'>, RegExp>> = {
-  'what-wraps': /\/landed$|\/in-keep-clear$|ghost|\/alias$|^travel|^thread$/,
+  'what-wraps': /\/landed$|\/in-keep-clear$|ghost|^partitions\/alias\/(thread|ochre)|^travel|^thread$/,
   'keep-clear': /^keep-clear$/,
   'acquired-edge': /^acquired-edge/,
 };

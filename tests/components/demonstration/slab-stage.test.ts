@@ -7,6 +7,7 @@ import { CONTROLS } from '@/lib/domain/demonstration/controls';
 import { findSetPiece } from '@/lib/domain/demonstration/set-pieces';
 import { assess, simulateImage } from '@/lib/physics';
 import type { Case } from '@/lib/physics/model/case';
+import { partitionsWithWrap } from '@/tests/support/drawn-partitions';
 
 const SIZE = { widthPx: 760, heightPx: 480 };
 const scenes = findSetPiece('slab-wrap')!.scenes();
@@ -26,8 +27,7 @@ describe('the slab made visible', () => {
     expect(new Set(names).size).toBe(names.length);
     expect(nodes.find(({ name }) => name === 'stack')).toMatchObject({ rings: { length: slab.partitions.length } });
     expect(names).toContain('profile/skirts');
-    const hatched = names.filter((name) => /^partition\/\d+\/alias\/hatch$/.test(name)).map((name) => Number(name.split('/')[1]));
-    expect(hatched).toEqual(slab.partitions.filter(({ state }) => state === 'contaminated').map(({ index }) => index));
+    expect(partitionsWithWrap(nodes, slab)).toEqual(slab.partitions.filter(({ state }) => state === 'contaminated').map(({ index }) => index));
   });
 
   it('sends every contaminated partition’s intruder one acquired width, from one end to the other', () => {
@@ -65,8 +65,8 @@ describe('the slab made visible', () => {
     'shows the engine’s own count with %s at %s',
     (id, value) => {
       const question = moved(id, value);
-      const hatched = stage(question).nodes.filter(({ name }) => /^partition\/\d+\/alias\/hatch$/.test(name));
-      expect(hatched).toHaveLength(slabOf(question).contaminated);
+      const slab = slabOf(question);
+      expect(partitionsWithWrap(stage(question).nodes, slab)).toHaveLength(slab.contaminated);
     },
   );
 

@@ -10,6 +10,7 @@ import { findSetPiece } from '@/lib/domain/demonstration/set-pieces';
 import { assess } from '@/lib/physics';
 import type { Case } from '@/lib/physics/model/case';
 import { slabProfile } from '@/lib/physics/slab/slab-profile';
+import { partitionsWithWrap } from '@/tests/support/drawn-partitions';
 import { parseRows, type PublishedRow, readPublished } from '@/tests/support/read-published';
 
 /* scipy's solve_ivp on the Bloch equations; where Python with scipy is absent the committed values stand in. */
@@ -37,7 +38,7 @@ function spoiled(row: PublishedRow, trOverT1: number): number {
 function shown(question: Case) {
   const slab = assess(question).slab!;
   const { nodes } = slabStage({ question, slab, size: { widthPx: 760, heightPx: 480 }, sliceOffsetMm: 0 });
-  const drawn = nodes.flatMap(({ name }) => /^partition\/(\d+)\/alias\/hatch$/.exec(name)?.[1] ?? []).map(Number);
+  const drawn = partitionsWithWrap(nodes, slab);
   return { slab, drawn, figure: figuresOf(assess(question)).contaminated };
 }
 
