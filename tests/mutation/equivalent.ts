@@ -20,6 +20,7 @@ const TIE = 'Differs only where two figures are equal to the last bit, and both 
 const NONE_OR_MUCH = 'What is compared is nothing but rounding or far more than either limit.';
 const FINER_ROWS = 'More rows to break at: areas are summed in smaller pieces to the same sum.';
 const NO_NODE = 'No node of the sum lies on the end of a band.';
+const NO_TRAIN = 'No echo and one echo are both within every scanner’s longest train.';
 const EITHER = 'Of two equally tight places either may be named; the clearance is the same.';
 
 /** Changes of one source line that are equivalent for one reason. */
@@ -327,4 +328,17 @@ export const EQUIVALENT: readonly EquivalentMutant[] = [
     ['0.5', '0.505'],
     ['Math.ceil', 'Math.floor'],
   ),
+  ...at('acceleration/ghost-widths', 'lowers.unshift(moved > 0 ? nearest : farthest);', NONE_OR_MUCH, [
+    'moved > 0',
+    'moved >= 0',
+  ]),
+  ...at('acceleration/ghost-widths', 'uppers.unshift(moved > 0 ? farthest : nearest);', NONE_OR_MUCH, [
+    'moved > 0',
+    'moved >= 0',
+  ]),
+  ...at('assess/hard-limits', 'return Math.ceil((time?.acquiredViews ?? 1) / p.shots);', NO_TRAIN, [
+    '1',
+    '0',
+  ]),
+  ...at('assess/hard-limits', 'return time?.acquiredViews ?? 1;', NO_TRAIN, ['1', '0']),
 ];

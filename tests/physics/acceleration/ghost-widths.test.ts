@@ -102,3 +102,27 @@ describe('widths at which a ghost lies in keep-clear', () => {
     expect(mirrorMargin([3, 8])).toEqual([8, 3]);
   });
 });
+
+describe('the centre ghost of two', () => {
+  it('reaches an area whose edge rises from the FOV centre, from either end of its rows', () => {
+    const tissue: RowBand[] = [{ r0: -100, r1: 100, lower: straight(120), upper: straight(200) }];
+    const rising = (slope: number, r0: number, r1: number, offset = 0): RowBand[] => [
+      { r0, r1, lower: straight(-50), upper: straight(offset, slope) },
+    ];
+    // The edge lies at the centre in its first or last row, and 50 mm beyond it at the other end.
+    for (const [slope, r0, r1] of [
+      [0.5, 0, 100],
+      [-0.5, -100, 0],
+    ] as const) {
+      const found = ghostWidths(tissue, rising(slope, r0, r1), [0, 0], 0, 0.5)!;
+      const nearly = ghostWidths(tissue, rising(slope, r0, r1, 1e-7), [0, 0], 0, 0.5)!;
+      // A ghost at p − W/2 within −50…50 of tissue 120…200 beyond W/2: 2·(120 − 50) < W < 2·200.
+      expect(found[0]).toBeCloseTo(140, 4);
+      expect(found[1]).toBeCloseTo(400, 4);
+      expect(found[0]).toBeCloseTo(nearly[0], 4);
+      expect(found[1]).toBeCloseTo(nearly[1], 4);
+    }
+    // Wholly on the near side of the centre there is none.
+    expect(ghostWidths(tissue, rising(0.5, -100, 0), [0, 0], 0, 0.5)).toBeUndefined();
+  });
+});
