@@ -1,14 +1,16 @@
 'use client';
 
-import { useMemo, useRef, useState, type PointerEvent } from 'react';
+import { memo, useDeferredValue, useMemo, useRef, useState, type PointerEvent } from 'react';
 import { SceneCanvas } from '@/components/schematic/canvas/scene-canvas';
 import { useBoxSize } from '@/components/schematic/canvas/use-box-size';
 import { fitScene, fromPixels, type Fit } from '@/components/schematic/scene/scene';
 import { screenFrame } from '@/components/schematic/scene/section-frame';
 import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
 import { geometryCase } from '@/lib/physics/assess/assess';
+import type { Assessment } from '@/lib/physics/model/assessment';
 import { drawSection } from '@/lib/physics/section/draw-section';
 import type { Case } from '@/lib/physics/model/case';
+import type { SectionDrawing } from '@/lib/physics/section/section-drawing';
 import { describeSection, describePlace } from '@/lib/presentation/describe-section';
 import { useActiveResult, useActiveSequence, useBenchState } from './bench-context';
 import { HandleOverlay } from './handle-overlay';
@@ -53,6 +55,9 @@ export function SectionView() {
   }, [fit, size, now, tried, focus, handles]);
 
   const shown = tried ?? now;
+  // Nobody reads along while a handle is held: the words come when there is time for them.
+  const told = useDeferredValue(shown);
+  const toldOf = useDeferredValue(assessment);
   // Written past React: it changes with every pixel.
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
     if (!place.current || !fit) return;
@@ -83,19 +88,27 @@ export function SectionView() {
       <ViewBar picture={picture}>
         <SliceSlider prescription={question.prescription} slice={slice} />
       </ViewBar>
-      <div id="section-in-words" className="sr-only" aria-live="off">
-        {shown && assessment && (
-          <ul>
-            {/* Displaced fat, and each multiple of a ghost, are pieces of their own that the same words may tell. */}
-            {[...new Set(describeSection(shown.drawing, assessment.phaseAxis, assessment.readoutAxis))].map((line) => (
-              <li key={line}>{line}</li>
-            ))}
-          </ul>
-        )}
-      </div>
+      <SectionWords drawing={told?.drawing} assessment={toldOf} />
     </div>
   );
 }
+
+/** The picture in words, for whoever does not see it. */
+const SectionWords = memo(function SectionWords({ drawing, assessment }: { drawing: SectionDrawing | undefined; assessment: Assessment | undefined }) {
+  // Displaced fat, and each multiple of a ghost, are pieces of their own that the same words may tell.
+  const lines = drawing && assessment ? [...new Set(describeSection(drawing, assessment.phaseAxis, assessment.readoutAxis))] : [];
+  return (
+    <div id="section-in-words" className="sr-only" aria-live="off">
+      {lines.length > 0 && (
+        <ul>
+          {lines.map((line, i) => (
+            <li key={i}>{line}</li>
+          ))}
+        </ul>
+      )}
+    </div>
+  );
+});
 
 /** What the engine refuses to assess cannot be drawn either; the refusal is told beside the verdict. */
 function drawn(question: Case, sliceOffsetMm: number): DrawnSection | undefined {

@@ -237,4 +237,6 @@ test('a 3D sequence shows its slab, with the partitions that hold tissue from th
   await page.getByText('Slab', { exact: true }).first().click();
   await expect.poll(() => sceneNodes(page, 'slab')).toEqual(expect.arrayContaining(['profile', 'keep-clear', 'partition/0', 'acquired-edge/high']));
   await expect(page.getByText(/Slice oversampling, S–I/)).toBeVisible();
+  await page.getByRole('group', { name: 'Slab, along the slice direction' }).press('+');
+  await expect(page.getByRole('button', { name: 'Whole picture, now 125 %' })).toBeVisible();
 });

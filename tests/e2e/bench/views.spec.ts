@@ -31,6 +31,15 @@ test('section, picture and bore are three looks at one state, by keyboard', asyn
   for (let k = 0; k < 5; k += 1) await page.keyboard.press('ArrowRight');
   await expect(wipe).toHaveAttribute('aria-valuenow', '55');
   expect(await cut()).not.toBe(half);
+
+  // By pointer the wipe is taken hold of on the picture itself.
+  const picture = (await page.getByRole('group', { name: 'Simulated picture' }).boundingBox())!;
+  const middle = picture.y + picture.height / 2;
+  await page.mouse.move(picture.x + picture.width * 0.6, middle);
+  await page.mouse.down();
+  await page.mouse.move(picture.x + picture.width * 0.4, middle);
+  await page.mouse.up();
+  await expect.poll(async () => Number(await wipe.getAttribute('aria-valuenow'))).toBeLessThan(50);
 });
 
 test('one slider of certainty changes how far the body is taken, and the sentence', async ({ signedIn }) => {
@@ -47,6 +56,14 @@ test('one slider of certainty changes how far the body is taken, and the sentenc
   await expect(sentence).toContainText('sure at 50 %');
   await expect.poll(() => sceneNodes(page, 'section')).not.toContain('tissue/trunk/band');
   await expect(page.getByText('Site policy is 95 %: a saved plan is judged at that.')).toBeVisible();
+  await page.getByRole('spinbutton', { name: 'Sure at' }).fill('80');
+  await expect(sentence).toContainText('sure at 80 %');
+  const knob = (await slider.boundingBox())!;
+  await page.mouse.move(knob.x + knob.width / 2, knob.y + knob.height / 2);
+  await page.mouse.down();
+  await page.mouse.move(knob.x + 400, knob.y);
+  await page.mouse.up();
+  await expect(sentence).toContainText('sure at 99.9 %');
   await page.getByRole('button', { name: 'Back to site policy' }).press('Enter');
   await expect(sentence).toContainText('sure at 95 %');
 });
@@ -68,4 +85,13 @@ test('"show all" lays remedies out as time against SNR, linked with the list', a
   await page.keyboard.press('Enter');
   await expect(page.locator(`[data-remedy="${second}"]`).getByRole('heading').getByRole('button')).toHaveAttribute('aria-pressed', 'true');
   await expect.poll(() => sceneNodes(page, 'section')).toContain('tried-edge/low');
+
+  // By pointer: the point that lies on top of the others is tried, and a filter leaves only what keeps the voxel.
+  const onTop = await points.last().getAttribute('data-point');
+  await points.last().click();
+  await expect(page.locator(`[data-remedy="${onTop}"]`).getByRole('heading').getByRole('button')).toHaveAttribute('aria-pressed', String(onTop !== second));
+  await page.getByRole('checkbox', { name: 'Keep the voxel' }).check();
+  const voxels = page.locator('[data-remedy] dl > div').filter({ hasText: 'voxel' });
+  await expect(voxels.filter({ hasText: '→' })).toHaveCount(0);
+  expect(await voxels.count()).toBeGreaterThan(0);
 });

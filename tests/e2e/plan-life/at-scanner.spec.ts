@@ -41,7 +41,7 @@ test('what waits outlives a reload of the tab', async ({ signedIn, expectedError
   await page.goto(`/bench/${booking.id}/at-scanner`);
   await page.route('**/api/v1/bookings/*/size-readings', (route) => route.fulfill({ status: 503, body: '{}' }));
   await page.getByRole('spinbutton', { name: 'Left' }).fill('251');
-  await page.getByRole('button', { name: 'Save sizes and plan' }).tap();
+  await page.getByRole('button', { name: 'Save sizes and plan' }).press('Enter');
   await expect(page.getByText(/^No network\. 2 changes wait/)).toBeVisible();
   await page.unroute('**/api/v1/bookings/*/size-readings');
   await page.reload();

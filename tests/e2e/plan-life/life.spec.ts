@@ -34,7 +34,7 @@ test('a plan with fold left: asked, sent back with a reason, signed off, and its
   await release.click();
   await expect(page.getByRole('heading', { name: 'Waits for a radiologist’s sign-off' })).toBeVisible();
   await radiologist.reload();
-  await radiologist.getByRole('button', { name: 'Sign off version 1' }).click();
+  await radiologist.getByRole('button', { name: 'Sign off version 1' }).press('Enter');
   await expect(radiologist.getByText('Plan, version 1, signed off')).toBeVisible();
   await radiologist.context().close();
 
@@ -57,8 +57,8 @@ test('two versions side by side say what changed, with both verdicts', async ({ 
   await benchAnswers(page);
   await page.getByRole('button', { name: 'Save plan' }).click();
   await expect(page.getByText('Saved: draft, version 1')).toBeVisible();
-  await page.locator('[data-remedy]').first().getByRole('button', { name: /^Adopt/ }).click();
-  await page.getByRole('button', { name: 'Save plan' }).click();
+  await page.locator('[data-remedy]').first().getByRole('button', { name: /^Adopt/ }).press('Enter');
+  await page.getByRole('button', { name: 'Save plan' }).press('Enter');
   await expect(page.getByText('Saved: draft, version 2')).toBeVisible();
 
   await page.goto(`/bookings/${booking.id}`);

@@ -14,7 +14,7 @@ test('the sheet has a code to scan, a PDF from the worker, and a short link that
   await expect(page.getByRole('img', { name: /^Code to scan/ })).toBeVisible();
   const link = await page.getByText(/\/p\/[2-9A-Z]{8}\?v=1$/).innerText();
 
-  await page.getByRole('button', { name: 'Make a PDF, A4' }).click();
+  await page.getByRole('button', { name: 'Make a PDF, A4' }).press('Enter');
   const file = page.getByRole('link', { name: /^Download the PDF, A4, \d+ kB$/ });
   await expect(file).toBeVisible({ timeout: 30_000 });
   const [download] = await Promise.all([page.waitForEvent('download'), file.click()]);

@@ -1,4 +1,4 @@
-import { benchAnswers } from '@/tests/support/e2e/bench-page';
+import { benchAnswers, tabTo } from '@/tests/support/e2e/bench-page';
 import { expect, test } from '@/tests/support/e2e/journey';
 import { anotherPerson, newBooking } from '@/tests/support/e2e/new-booking';
 
@@ -23,6 +23,18 @@ test('solve all proposes a remedy for each sequence that folds, says the minutes
   await expect(folding).toHaveCount(0);
   await page.keyboard.press('Control+z');
   await expect(folding).toHaveCount(before);
+
+  // The same by keyboard alone: left, asked for again, adopted.
+  await tabTo(page, /^Solve all/);
+  await page.keyboard.press('Enter');
+  await expect(proposal).toBeVisible();
+  await page.keyboard.press('Escape');
+  await expect(proposal).toHaveCount(0);
+  await page.getByRole('button', { name: 'Solve all' }).press('Enter');
+  await expect(proposal).toBeVisible();
+  await tabTo(page, /^Adopt (all \d+|it)$/, 2);
+  await page.keyboard.press('Enter');
+  await expect(folding).toHaveCount(0);
 });
 
 test('an area asked for by a radiologist is on the bench under their name', async ({ signedIn, browser }) => {
