@@ -12,6 +12,7 @@ import { SaveScene } from '../save/save-scene';
 import { SceneControls } from '../controls/scene-controls';
 import { PictureEngine } from '../stage/picture-engine';
 import { SceneStage } from '../stage/scene-stage';
+import { AddSetPiece } from './add-set-piece';
 import { SaveState } from './save-state';
 import { SceneFacts } from './scene-facts';
 import { SceneList } from './scene-list';
@@ -44,6 +45,10 @@ export function Builder({ demonstration, save, children }: { demonstration: Demo
     setContent((each) => ({ ...each, scenes: [...each.scenes.slice(0, at + 1), copy, ...each.scenes.slice(at + 1)] }));
     setChosenId(copy.id);
   };
+  const add = (added: readonly Scene[]) => {
+    setContent((each) => ({ ...each, scenes: [...each.scenes, ...added] }));
+    setChosenId(added[0]?.id);
+  };
   const remove = (scene: Scene) => {
     setContent((each) => ({ ...each, scenes: each.scenes.filter(({ id }) => id !== scene.id) }));
     setChosenId((scenes[at + 1] ?? scenes[at - 1])?.id);
@@ -63,9 +68,12 @@ export function Builder({ demonstration, save, children }: { demonstration: Demo
         <SaveState {...autosave} />
       </div>
       {!chosen ? (
+        <div className="space-y-6">
         <EmptyState title="No scenes yet" action={<LinkButton href="/bench" variant="primary">Open the bench</LinkButton>}>
-          Set something up on the bench and press “Add to a demonstration”, or copy a set piece from the list of demonstrations.
+          Set something up on the bench and press “Add to a demonstration”, or begin with the scenes of a set piece.
         </EmptyState>
+        <div className="max-w-md"><AddSetPiece scenes={scenes} onAdd={add} /></div>
+        </div>
       ) : (
         <div className="grid gap-6 lg:grid-cols-[15rem_minmax(0,1fr)] 2xl:grid-cols-[15rem_minmax(0,1fr)_19rem]">
           <div>
@@ -74,6 +82,7 @@ export function Builder({ demonstration, save, children }: { demonstration: Demo
               <Button size="sm" disabled={scenes.length >= SCENES_MAX} onClick={() => duplicate(chosen)}>Duplicate</Button>
               <Button size="sm" onClick={() => remove(chosen)}>Take out</Button>
             </div>
+            <div className="mt-4 border-t border-line pt-4"><AddSetPiece scenes={scenes} onAdd={add} /></div>
           </div>
           <div className="min-w-0 space-y-4" ref={stage}>
             <SceneStage scene={chosen} onSlice={(sliceOffsetMm) => change(chosen.id, { sliceOffsetMm })}>
