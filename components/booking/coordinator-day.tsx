@@ -18,12 +18,13 @@ const NEXT_STEP: Readonly<Record<(typeof RESULT_FILTERS)[number], string>> = {
 const ORDER = ['escalate', 'another-scanner', 'size-needed', 'plan-needed', 'unchecked', 'as-booked'] as const;
 
 /** The coordinator's work, worst first: each line opens the bookings it counts. */
-export function CoordinatorDay({ counts, days, from, to, openMoves, escalated }: {
+export function CoordinatorDay({ counts, days, from, to, openMoves, undelivered, escalated }: {
   counts: Readonly<Record<string, number>>;
   days: number;
   from: string;
   to: string;
   openMoves: number;
+  undelivered: number;
   escalated: readonly BookingRow[];
 }) {
   return (
@@ -48,6 +49,14 @@ export function CoordinatorDay({ counts, days, from, to, openMoves, escalated }:
             <LinkButton href="/bookings/moves" size="sm">Open the list</LinkButton>
           </p>
         </Panel>
+        {undelivered > 0 && (
+          <Panel title="Mail">
+            <p className="flex flex-wrap items-center justify-between gap-3">
+              <span><span className="figures text-xl">{undelivered}</span> {undelivered === 1 ? 'mail was' : 'mails were'} not accepted by the mail server</span>
+              <LinkButton href="/site/mail" size="sm">See which</LinkButton>
+            </p>
+          </Panel>
+        )}
         <Panel title="A lead was asked to decide">
           {escalated.length === 0 ? <p className="text-ink-soft">Nothing waits for a lead.</p> : (
             <ul className="space-y-1">

@@ -1,6 +1,7 @@
 import { inTransaction } from '@/db/client';
 import { countResults, listEscalated } from '@/db/queries/booking/booking-table';
 import { listMoves } from '@/db/queries/move-proposal/move-proposals';
+import { countFailedMail } from '@/db/queries/outbox';
 import { authorise } from '@/lib/domain/access';
 import { dayOf } from '@/lib/domain/site/local-day';
 import type { BookingListItem } from '@/lib/schemas/booking';
@@ -14,6 +15,8 @@ export interface CoordinatorDay {
   readonly days: number;
   readonly counts: Readonly<Record<string, number>>;
   readonly openMoves: number;
+  /** Mails that were given up. */
+  readonly undelivered: number;
   readonly escalated: readonly BookingListItem[];
 }
 
@@ -27,6 +30,7 @@ export async function getCoordinatorDay(context: ServiceContext): Promise<Coordi
     days: DAYS,
     counts: await countResults(trx, actor.siteId, { from, before }),
     openMoves: (await listMoves(trx, actor.siteId, 'open', 2000)).length,
+    undelivered: await countFailedMail(trx, actor.siteId),
     escalated: (await listEscalated(trx, actor.siteId, from, MOST)).map(toBookingListItem),
   }));
 }
