@@ -69,10 +69,10 @@ export function Builder({ demonstration, save, children }: { demonstration: Demo
       </div>
       {!chosen ? (
         <div className="space-y-6">
-        <EmptyState title="No scenes yet" action={<LinkButton href="/bench" variant="primary">Open the bench</LinkButton>}>
-          Set something up on the bench and press “Add to a demonstration”, or begin with the scenes of a set piece.
-        </EmptyState>
-        <div className="max-w-md"><AddSetPiece scenes={scenes} onAdd={add} /></div>
+          <EmptyState title="No scenes yet" action={<LinkButton href="/bench" variant="primary">Open the bench</LinkButton>}>
+            Set something up on the bench and press “Add to a demonstration”, or begin with the scenes of a set piece.
+          </EmptyState>
+          <div className="max-w-md"><AddSetPiece scenes={scenes} onAdd={add} /></div>
         </div>
       ) : (
         <div className="grid gap-6 lg:grid-cols-[15rem_minmax(0,1fr)] 2xl:grid-cols-[15rem_minmax(0,1fr)_19rem]">

@@ -10,7 +10,7 @@ import { SHOWN_CAUTION } from '../caution';
 import { curveScene, oversamplingCurve } from '../slab/oversampling-curve';
 import { nearestPartition } from '../slab/slab-stage';
 import { figureLines, figuresOf } from '../stage/figures';
-import { answerOf, sceneWords, type ShownScene } from '../stage/shown-scene';
+import { type Answer, answerOf, sceneWords, type ShownScene } from '../stage/shown-scene';
 import { HandOutPicture, SimulatedPdf } from './hand-out-picture';
 
 /** 12 mm, as the plan sheet has. */
@@ -53,6 +53,16 @@ function SlabAside({ scene, assessment }: { scene: ShownScene; assessment: Asses
   );
 }
 
+function SceneWords({ scene, answer }: { scene: ShownScene; answer: Answer }) {
+  return (
+    <>
+      {sceneWords(scene, answer).slice(0, WORDS_MAX).map((words) => (
+        <Text key={words} style={[s.small, { marginTop: 4, maxLines: scene.view === 'slab' ? 1 : 5 }]}>{printable(words)}</Text>
+      ))}
+    </>
+  );
+}
+
 function ScenePage({ printed, index, paper }: { printed: HandOut; index: number; paper: Paper }) {
   const scene = printed.scenes[index]!;
   const answer = answerOf(scene.question);
@@ -78,6 +88,7 @@ function ScenePage({ printed, index, paper }: { printed: HandOut; index: number;
               </View>
             </View>
             <HandOutPicture scene={scene} answer={answer} width={pictureWidth} />
+            {scene.view === 'slab' ? <SceneWords scene={scene} answer={answer} /> : null}
           </View>
           <View style={{ width: SIDE_PT, paddingTop: 4 }}>
             {figureLines(figuresOf(assessment), assessment, scene.question.prescription).map(({ key, label, value }) => (
@@ -86,13 +97,7 @@ function ScenePage({ printed, index, paper }: { printed: HandOut; index: number;
                 <Text style={s.figures}>{printable(value)}</Text>
               </View>
             ))}
-            {scene.view === 'slab' ? (
-              <SlabAside scene={scene} assessment={assessment} />
-            ) : (
-              sceneWords(scene, answer).slice(0, WORDS_MAX).map((words) => (
-                <Text key={words} style={[s.small, { marginTop: 4, maxLines: 5 }]}>{printable(words)}</Text>
-              ))
-            )}
+            {scene.view === 'slab' ? <SlabAside scene={scene} assessment={assessment} /> : <SceneWords scene={scene} answer={answer} />}
           </View>
         </View>
       )}
