@@ -341,4 +341,16 @@ export const EQUIVALENT: readonly EquivalentMutant[] = [
     '0',
   ]),
   ...at('assess/hard-limits', 'return time?.acquiredViews ?? 1;', NO_TRAIN, ['1', '0']),
+  ...at(
+    'body/outline-trapezoids',
+    'for (let j = i + 1; j < edges.length && edges[j]!.u0 < a.u1; j++) {',
+    'An edge that begins where the other ends crosses it nowhere inside.',
+    ['edges[j]!.u0 < a.u1', 'edges[j]!.u0 <= a.u1'],
+  ),
+  ...at(
+    'bore/bore-clearance',
+    'const tightest = clearances.reduce((least, one) => (one.clearanceMm < least.clearanceMm ? one : least));',
+    EITHER,
+    ['one.clearanceMm < least.clearanceMm', 'one.clearanceMm <= least.clearanceMm'],
+  ),
 ];

@@ -78,15 +78,17 @@ function choose(mutants: readonly Mutant[], options: Options): Mutant[] {
     .sort((a, b) => a.at - b.at)
     .map(({ mutant }) => mutant);
   const taken = new Map<string, number>();
-  return drawn
-    .filter((mutant, rank) => {
-      const folder = folderOf(mutant);
-      const before = taken.get(folder) ?? 0;
-      if (rank >= sample && before >= leastPerFolder) return false;
-      taken.set(folder, before + 1);
-      return true;
-    })
-    .sort((a, b) => a.id - b.id);
+  const kept = drawn.flatMap((mutant, rank) => {
+    const folder = folderOf(mutant);
+    const before = taken.get(folder) ?? 0;
+    if (rank >= sample && before >= leastPerFolder) return [];
+    taken.set(folder, before + 1);
+    return [{ mutant, folder, before }];
+  });
+  // Folders in step, so that a run cut short speaks for all of them.
+  return kept
+    .sort((a, b) => a.before / taken.get(a.folder)! - b.before / taken.get(b.folder)!)
+    .map(({ mutant }) => mutant);
 }
 
 /** What is known of a bundle's tests; asked again only when the bundle is another one. */
