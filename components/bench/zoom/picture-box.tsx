@@ -5,7 +5,7 @@ import { cx } from '@/components/ui/class-names';
 import type { PictureZoom } from './use-zoom';
 
 /** As high as the column leaves it; where the page scrolls instead, of one height in every view. */
-const BOX = 'relative h-80 overflow-hidden select-none sm:h-[26rem] lg:h-96 xl:h-auto xl:min-h-80 xl:flex-1';
+const BOX = 'relative h-80 overflow-hidden -outline-offset-2 select-none sm:h-[26rem] lg:h-96 xl:h-auto xl:min-h-80 xl:flex-1';
 
 /** The box of a picture that can be zoomed and moved, by pointer, fingers and keys. */
 export function PictureBox({
