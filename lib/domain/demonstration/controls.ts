@@ -176,7 +176,7 @@ export const CONTROLS: Readonly<Record<ControlId, Control>> = {
       })),
   },
   'pulse-sharpness': {
-    kind: 'number', label: 'Pulse sharpness (time-bandwidth product)', unit: '', min: 2, max: 16, step: 0.5,
+    kind: 'number', label: 'Pulse sharpness (TBW)', unit: '', min: 2, max: 16, step: 0.5,
     read: (question) => { const slab = slabOf(question); return slab ? timeBandwidthProductOf(slab, question.policy) : 0; },
     write: (question, value) => slabbed(question, (slab) => ({ ...slab, timeBandwidthProduct: value })),
   },

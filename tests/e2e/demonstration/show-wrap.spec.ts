@@ -47,6 +47,12 @@ test('three scenes from set piece and bench, presented, shared, moved, revoked',
     await expect(scenes.getByRole('button', { name: /^2 The dome/ })).toBeVisible();
     await page.keyboard.press('Alt+ArrowUp');
     await expect(first).toBeVisible();
+    // The same by dragging.
+    const entry = (words: string) => scenes.getByRole('listitem').filter({ hasText: words });
+    await entry('The dome').dragTo(entry('12 % slice'));
+    await expect(scenes.getByRole('button', { name: /^2 The dome/ })).toBeVisible();
+    await entry('The dome').dragTo(entry('12 % slice'));
+    await expect(first).toBeVisible();
     await expect(page.getByText('All changes are saved.')).toBeVisible();
   });
   const address = page.url();
@@ -75,6 +81,24 @@ test('three scenes from set piece and bench, presented, shared, moved, revoked',
     await page.keyboard.press('PageDown');
     await expect(page.locator('[data-scene="2"]')).toBeVisible();
     await expect(presenter.locator('[data-presenter-scene="2"]')).toBeVisible();
+    // Numbers are on their way for half a second, and for nobody who asked for less motion.
+    const seen = (steps: string) =>
+      page.evaluate(
+        (key) =>
+          new Promise<number>((resolve) => {
+            const figure = document.querySelector('[data-figure="contaminated"]')!;
+            const values = new Set([figure.textContent]);
+            const look = new MutationObserver(() => values.add(figure.textContent));
+            look.observe(figure, { characterData: true, childList: true, subtree: true });
+            window.dispatchEvent(new KeyboardEvent('keydown', { key }));
+            setTimeout(() => (look.disconnect(), resolve(values.size)), 900);
+          }),
+        steps,
+      );
+    expect(await seen('PageUp')).toBeGreaterThan(2);
+    await page.emulateMedia({ reducedMotion: 'reduce' });
+    expect(await seen('PageDown')).toBe(2);
+    await page.emulateMedia({ reducedMotion: null });
     // Opened, it needs no network.
     await page.context().setOffline(true);
     await page.keyboard.press('ArrowRight');
