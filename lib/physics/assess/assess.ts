@@ -128,15 +128,17 @@ export function assessChecked(
   geometry?: SolvedGeometry,
 ): Assessment {
   const { prescription: p, policy } = given;
-  const common = {
-    engineVersion: ENGINE_VERSION,
-    policyVersion: policy.version,
-    phaseAxis: p.phaseAxis,
-    readoutAxis: readoutAxisOf(p),
-  };
   const unmodelled = notModelledReason(p);
   if (unmodelled !== undefined)
-    return { ...common, verdict: 'not-modelled', reasons: [unmodelled], assumptions: [] };
+    return {
+      engineVersion: ENGINE_VERSION,
+      policyVersion: policy.version,
+      phaseAxis: p.phaseAxis,
+      readoutAxis: readoutAxisOf(p),
+      verdict: 'not-modelled',
+      reasons: [unmodelled],
+      assumptions: [],
+    };
 
   const { time, stops } = timeOf(given);
   const hard = [...hardLimits(given, time), ...stops];
@@ -148,8 +150,12 @@ export function assessChecked(
   const gap = gapReason(given, width, fold);
   const fatShare = solved.problem.fatShares?.[0];
   const verdict = verdictOf(hard, fold, slab, gap);
-  return {
-    ...common,
+  // Filled in place: asked for every candidate of a ranking.
+  const answer: { -readonly [K in keyof Assessment]: Assessment[K] } = {
+    engineVersion: ENGINE_VERSION,
+    policyVersion: policy.version,
+    phaseAxis: p.phaseAxis,
+    readoutAxis: readoutAxisOf(p),
     verdict,
     reasons: reasonsFor({
       verdict,
@@ -157,18 +163,19 @@ export function assessChecked(
       prescription: p,
       width,
       fold,
-      ...(slab === undefined ? {} : { slab }),
+      slab,
       keepClearIsDisplayed: solved.keepClearIsDisplayed,
-      ...(fatShare === undefined ? {} : { fatShare: Math.abs(fatShare) }),
+      fatShare: fatShare === undefined ? undefined : Math.abs(fatShare),
     }),
     assumptions: withAssumptions ? assumptionsFor(given) : [],
     sampling: samplingOf(p),
     width,
     fold,
-    ...(slab === undefined ? {} : { slab }),
-    ...(time === undefined ? {} : { time }),
-    detail: detailOf(seen),
   };
+  if (slab !== undefined) answer.slab = slab;
+  if (time !== undefined) answer.time = time;
+  answer.detail = detailOf(seen);
+  return answer;
 }
 
 /**

@@ -120,10 +120,10 @@ export interface ReasonInputs {
   readonly prescription: Prescription;
   readonly width?: WidthRequirement;
   readonly fold?: FoldResult;
-  readonly slab?: SlabResult;
+  readonly slab?: SlabResult | undefined;
   readonly keepClearIsDisplayed: boolean;
   /** Share of the acquired width by which EPI displaces fat, > 0; absent: nothing is displaced. */
-  readonly fatShare?: number;
+  readonly fatShare?: number | undefined;
 }
 
 /** The sentences beside the verdict, the deciding one first. */

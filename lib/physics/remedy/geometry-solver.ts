@@ -115,10 +115,23 @@ function cleanPartitions(given: TargetedCase, geometry: RankingGeometry): number
   return together ?? firstPartitions(given, alone, someWidthHelps) ?? alone;
 }
 
-/** Range of a region along a direction [mm]. */
+const cornersOf = new WeakMap<OrientedRegion, readonly Vec3[]>();
+
+/** Range of a region along a direction [mm]. Its corners are kept: areas are asked about for every candidate. */
 function alongDirection(region: OrientedRegion, direction: Vec3): RangeMm {
-  const along = regionCorners(region).map((corner) => dot(corner, direction));
-  return [Math.min(...along), Math.max(...along)];
+  let corners = cornersOf.get(region);
+  if (corners === undefined) {
+    corners = regionCorners(region);
+    cornersOf.set(region, corners);
+  }
+  let low = Infinity;
+  let high = -Infinity;
+  for (let i = 0; i < corners.length; i++) {
+    const at = dot(corners[i]!, direction);
+    low = Math.min(low, at);
+    high = Math.max(high, at);
+  }
+  return [low, high];
 }
 
 /** Whether what of `area` was displayed in `before` is still displayed in `after`, axis by axis of the window. */
@@ -144,17 +157,15 @@ function staysInside(
 const SLICE = 2;
 
 function leavesPictureOf(original: FrozenCase, before: OrientedRegion) {
+  const { area, mustStayDisplayed } = original.keepClear;
+  const mustStay = mustStayDisplayed && regionOfBox(mustStayDisplayed);
   return (planned: TargetedCase): Reason | undefined => {
     const after = windowRegion(planned.prescription);
-    const { area, mustStayDisplayed } = original.keepClear;
     const reason = (what: string): Reason => ({
       code: 'area-leaves-picture',
       text: `Not possible: ${what} leaves the picture.`,
     });
-    if (
-      mustStayDisplayed !== undefined &&
-      !staysInside(regionOfBox(mustStayDisplayed), before, after, undefined)
-    ) {
+    if (mustStay !== undefined && !staysInside(mustStay, before, after, undefined)) {
       return reason('the anatomy that must stay displayed');
     }
     const keepClear = planned.frozen ?? original.frozen;

@@ -91,10 +91,13 @@ export function compareRemedies(a: Remedy, b: Remedy): number {
 }
 
 /** A refusal already told for a part of this set is not told again. */
-function isTold(told: readonly RemedyNotPossible[], parts: readonly string[], code: string): boolean {
-  return told.some(
-    (entry) => entry.reason.code === code && entry.key.split('+').every((part) => parts.includes(part)),
-  );
+function isTold(told: readonly Told[], parts: readonly string[], code: string): boolean {
+  return told.some((entry) => entry.code === code && entry.parts.every((part) => parts.includes(part)));
+}
+
+interface Told {
+  readonly code: string;
+  readonly parts: readonly string[];
 }
 
 /**
@@ -119,6 +122,7 @@ export function rankRemedies(
   const steps = new TakenSteps(start, now.time, solver);
   const remedies: Remedy[] = [];
   const notPossible: RemedyNotPossible[] = [];
+  const told: Told[] = [];
   const seen = new Set<string>([outcomeKey(start)]);
   let candidates = 0;
 
@@ -129,7 +133,9 @@ export function rankRemedies(
     reason: Reason,
   ): void => {
     const key = keyOf(options, payback);
-    if (isTold(notPossible, key.split('+'), reason.code)) return;
+    const parts = key.split('+');
+    if (isTold(told, parts, reason.code)) return;
+    told.push({ code: reason.code, parts });
     const changes = options.map((option) => option.kind);
     notPossible.push({
       key,

@@ -89,3 +89,21 @@ export function crossings(a: Curve, b: Curve): number[] {
   const root = Math.sqrt(discriminant);
   return [(-g * h - root) / square, (-g * h + root) / square].map((t) => arc.arcCentre + arc.arcHalf * t);
 }
+
+/** Visits what crossings(curve, straight(level)) lists, without listing it. */
+export function visitLevel(curve: Curve, level: number, visit: (r: number) => void): void {
+  const offset = curve.offset - level;
+  const { slope, bulge, arcCentre, arcHalf } = curve;
+  if (bulge === 0) {
+    if (slope !== 0) visit(-offset / slope);
+    return;
+  }
+  const g = offset + slope * arcCentre;
+  const h = slope * arcHalf;
+  const square = h * h + bulge * bulge;
+  const discriminant = g * g * h * h - square * (g * g - bulge * bulge);
+  if (discriminant < 0) return;
+  const root = Math.sqrt(discriminant);
+  visit(arcCentre + arcHalf * ((-g * h - root) / square));
+  visit(arcCentre + arcHalf * ((-g * h + root) / square));
+}

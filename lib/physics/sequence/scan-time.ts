@@ -1,4 +1,3 @@
-import type { RangeMm } from '../model/axes';
 import type { TimeResult } from '../model/assessment';
 import type { Patient } from '../model/patient';
 import type { Prescription } from '../model/prescription';
@@ -116,33 +115,27 @@ export function scanTime(prescription: Prescription, patient: Patient, scanner: 
   const train = trainMs(p);
   const echoPlanar = p.family === 'echo-planar';
   const factor = p.acceleration.factorPhase;
-  const common = {
-    shots: encoding.shots,
-    acquiredViews: encoding.views,
-    ...(train === undefined
-      ? {}
-      : {
-          trainMs: train,
-          minimumTeMs: minimumTeMs(
-            p.partialFourierPhase,
-            p.acquiredLines,
-            p.echoSpacingMs,
-            factor,
-            echoPlanar ? p.shots : 1,
-          ),
-        }),
-    ...(echoPlanar
-      ? {
-          displacementPer100HzMm: epiDisplacementMm(
-            100,
-            p.echoSpacingMs,
-            acquiredWidthMmOf(p),
-            factor,
-            p.shots,
-          ),
-        }
-      : {}),
-  };
+  // Asked for every candidate of a ranking: filled in place, where spreading optional parts took half its time.
+  const result: Draft<TimeResult> = { shots: encoding.shots, acquiredViews: encoding.views };
+  if (train !== undefined) {
+    const shots = echoPlanar ? p.shots : 1;
+    result.trainMs = train;
+    result.minimumTeMs = minimumTeMs(
+      p.partialFourierPhase,
+      p.acquiredLines,
+      p.echoSpacingMs,
+      factor,
+      shots,
+    );
+  }
+  if (echoPlanar)
+    result.displacementPer100HzMm = epiDisplacementMm(
+      100,
+      p.echoSpacingMs,
+      acquiredWidthMmOf(p),
+      factor,
+      p.shots,
+    );
 
   if (p.breathing === 'triggered') {
     const { scanS, rangeS, batches } = triggeredTime(
@@ -151,8 +144,12 @@ export function scanTime(prescription: Prescription, patient: Patient, scanner: 
       patient.breathPeriodS,
       scanner.respiratoryWindow,
     );
-    const scanRangeS: RangeMm = [rangeS[0] + calibrationS, rangeS[1] + calibrationS];
-    return { ...common, scanS: scanS + calibrationS, scanRangeS, batches, breathHolds: 0, longestHoldS: 0 };
+    result.scanS = scanS + calibrationS;
+    result.scanRangeS = [rangeS[0] + calibrationS, rangeS[1] + calibrationS];
+    result.batches = batches;
+    result.breathHolds = 0;
+    result.longestHoldS = 0;
+    return result as TimeResult;
   }
   const held = p.breathing === 'breath-hold';
   // Held freely the limit plays no part; any positive number keeps the arithmetic defined.
@@ -160,14 +157,15 @@ export function scanTime(prescription: Prescription, patient: Patient, scanner: 
     ? requirePositive('breath-hold-not-positive', 'breathHoldS', patient.breathHoldS.value)
     : 1;
   const { scanS, batches, breathHolds, longestHoldS } = untriggered(p, encoding, limitS);
-  return {
-    ...common,
-    scanS: scanS + calibrationS,
-    batches,
-    breathHolds: held ? breathHolds : 0,
-    longestHoldS: held ? longestHoldS : 0,
-  };
+  result.scanS = scanS + calibrationS;
+  result.batches = batches;
+  result.breathHolds = held ? breathHolds : 0;
+  result.longestHoldS = held ? longestHoldS : 0;
+  return result as TimeResult;
 }
+
+/** A result while its parts are filled in. */
+type Draft<T> = { -readonly [K in keyof T]?: T[K] };
 
 /**
  * Smallest TR that holds what is played inside it [ms]: EPI: slices·t_slice; single shot: t_slice; other families: one
