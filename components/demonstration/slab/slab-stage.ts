@@ -1,4 +1,4 @@
-import { fitScene, fromPixels, type AreaNode, type Bounds, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
+import { fitScene, fromPixels, type Bounds, type Scene, type SceneNode, type Token } from '@/components/schematic/scene/scene';
 import type { ScreenPoint } from '@/components/schematic/scene/section-frame';
 import { anchorWithin } from '@/components/schematic/scene/place-text';
 import { HEIGHT_SHARE, slabScene } from '@/components/schematic/scene/slab-scene';
