@@ -45,6 +45,8 @@ export class ImportSession {
   private bundle = EMPTY_BUNDLE;
   private ledger = new RowLedger();
   private stopped = false;
+  private first = '';
+  private last = '';
 
   constructor(private readonly server: ImportServer) {}
 
@@ -94,6 +96,7 @@ export class ImportSession {
   async stage(importId: string, settings: ImportSettings, basis: ImportBasis, report: (progress: Progress) => void): Promise<boolean> {
     this.stopped = false;
     this.ledger = new RowLedger();
+    [this.first, this.last] = ['', ''];
     let piece: ImportRow[] = [];
     const flush = async () => {
       if (piece.length === 0) return;
@@ -104,7 +107,11 @@ export class ImportSession {
     for await (const read of this.read(settings, basis)) {
       if (this.stopped) return false;
       if ('reason' in read) this.ledger.addSkipped(read);
-      else piece.push(read);
+      else {
+        piece.push(read);
+        if (this.first === '' || read.scheduledAt < this.first) this.first = read.scheduledAt;
+        if (read.scheduledAt > this.last) this.last = read.scheduledAt;
+      }
       if (piece.length === ROWS_PER_PIECE) await flush();
     }
     await flush();
@@ -118,6 +125,12 @@ export class ImportSession {
 
   counts(): Readonly<Record<RowOutcome, number>> {
     return this.ledger.counts();
+  }
+  /** The days of what is booked, YYYY-MM-DD in the site's zone; null when nothing is. */
+  days(zone: string): { readonly from: string; readonly to: string } | null {
+    // The only locale whose dates are written as ISO 8601 writes them.
+    const day = (moment: string) => new Intl.DateTimeFormat('sv-SE', { timeZone: zone }).format(new Date(moment));
+    return this.first === '' ? null : { from: day(this.first), to: day(this.last) };
   }
   page(outcome: RowOutcome | 'all', from: number, size: number): LedgerPage {
     return this.ledger.page(outcome, from, size);

@@ -5,6 +5,7 @@ import { Button, LinkButton } from '@/components/ui/button';
 import { Checkbox } from '@/components/ui/choice';
 import { Notice } from '@/components/ui/notice';
 import { missingColumns, SIZE_FIELDS, IMPORT_FIELD_LABELS } from '@/lib/domain/import';
+import { tableHref } from '../table-query';
 import { ChooseFile } from './choose-file';
 import { ComparedRows } from './compared-rows';
 import { MatchColumns } from './match-columns';
@@ -101,7 +102,7 @@ export function ImportView(props: ImportProps) {
           title={`${step.done.created} booked, ${step.done.changed} changed`}
           actions={
             <>
-              <LinkButton href="/bookings" variant="primary">
+              <LinkButton href={tableHref({}, step.days ?? {})} variant="primary">
                 Open the bookings
               </LinkButton>
               <Button onClick={state.again}>Bring in another file</Button>

@@ -23,13 +23,17 @@ export interface ImportProps extends ImportBasis {
 const MOST_KEPT_NAMES = 250;
 
 export type Counts = Readonly<Record<RowOutcome, number>>;
+export interface Days {
+  readonly from: string;
+  readonly to: string;
+}
 export type Step =
   | { readonly at: 'choose' }
   | { readonly at: 'columns' }
   | { readonly at: 'reading'; readonly rows: number }
-  | { readonly at: 'compared'; readonly importId: string; readonly counts: Counts }
-  | { readonly at: 'booking'; readonly importId: string; readonly counts: Counts }
-  | { readonly at: 'done'; readonly done: ImportDone; readonly skipped: number };
+  | { readonly at: 'compared'; readonly importId: string; readonly counts: Counts; readonly days: Days | null }
+  | { readonly at: 'booking'; readonly importId: string; readonly counts: Counts; readonly days: Days | null }
+  | { readonly at: 'done'; readonly done: ImportDone; readonly skipped: number; readonly days: Days | null };
 
 /** Ids by name: what was matched before, else a scanner or protocol of exactly that name. */
 function matchNames(names: readonly string[], known: readonly Named[], before: Readonly<Record<string, string>>): Record<string, string> {
@@ -122,7 +126,7 @@ export function useImport({ mask, zone, slotMinutes, scanners, protocols, settin
           setStep({ at: 'columns' });
           return;
         }
-        setStep({ at: 'compared', importId, counts: await session().counts() });
+        setStep({ at: 'compared', importId, counts: await session().counts(), days: await session().days(zone) });
       }),
     stop: () => void session().stop(),
     back: () =>
@@ -132,11 +136,11 @@ export function useImport({ mask, zone, slotMinutes, scanners, protocols, settin
       }),
     book: () => {
       if (step.at !== 'compared') return;
-      const { importId, counts } = step;
+      const { importId, counts, days } = step;
       void guarded(step, async () => {
-        setStep({ at: 'booking', importId, counts });
+        setStep({ at: 'booking', importId, counts, days });
         const done = await importServer.commit(importId, counts.created + counts.changed + counts.same);
-        setStep({ at: 'done', done, skipped: counts.skipped });
+        setStep({ at: 'done', done, skipped: counts.skipped, days });
       });
     },
     again: () => {

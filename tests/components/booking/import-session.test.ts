@@ -55,6 +55,7 @@ describe('the 300 rows of the demo file', () => {
       'Accession number', 'Sex', 'Accession number',
     ]);
     expect(sent).toHaveLength(288);
+    expect(session.days('Europe/Berlin')).toEqual({ from: '2027-01-07', to: '2027-01-18' });
     // Row 90 says "131 cm" in a column of inches.
     expect(sent.find(({ accession }) => accession === 'HB-4090')!.readings).toContainEqual(expect.objectContaining({ quantity: 'girth-cm', value: 131 }));
     expect(sent.find(({ accession }) => accession === 'HB-4110')!.readings.map(({ quantity }) => quantity)).not.toContain('weight-kg');
