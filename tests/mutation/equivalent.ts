@@ -353,4 +353,17 @@ export const EQUIVALENT: readonly EquivalentMutant[] = [
     EITHER,
     ['one.clearanceMm < least.clearanceMm', 'one.clearanceMm <= least.clearanceMm'],
   ),
+  ...at(
+    'image/row-intervals',
+    '!(intervals[layer] !== undefined && intervals[layer]![0] < middle && intervals[layer]![1] > middle)',
+    'The middle of a stretch lies on no edge: edges are its ends.',
+    ['intervals[layer]![0] < middle', 'intervals[layer]![0] <= middle'],
+    ['intervals[layer]![1] > middle', 'intervals[layer]![1] >= middle'],
+  ),
+  ...at(
+    'image/resample',
+    'for (let x = 0; x < widthPx; x++) {',
+    'One pixel past a row is the next row’s first, written again in its turn; past the last there is none.',
+    ['x < widthPx', 'x <= widthPx'],
+  ),
 ];
