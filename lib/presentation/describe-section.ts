@@ -24,7 +24,8 @@ export function describePiece(piece: PieceDrawing): string {
 
 export function describeGhost(ghost: GhostDrawing): string {
   const area = ghost.inKeepClear.length > 0 ? 'in the keep-clear area' : 'outside the keep-clear area';
-  return `Unfolding shows ${ghost.part} tissue from the ${ghost.side} side again, ${area}.`;
+  const what = ghost.fatDisplacedMm === undefined ? 'tissue' : 'fat, displaced by EPI,';
+  return `Unfolding shows ${ghost.part} ${what} from the ${ghost.side} side again, ${area}.`;
 }
 
 /** The picture in words, for those who do not see it. */
