@@ -9,14 +9,12 @@ import type { PolicyView } from '@/lib/schemas/site-policy';
 import type { ProtocolView } from '@/lib/schemas/protocol';
 import type { ScannerView } from '@/lib/schemas/scanner';
 import type { SizeRecordView } from '@/lib/schemas/size-reading';
-import { count, day, refused, strict, words } from '@/lib/schemas/fields/fields';
+import { count, day, moment, refused, strict, words } from '@/lib/schemas/fields/fields';
 import { idSchema } from '@/lib/schemas/fields/ids';
 
 export const createBookingInput = strict({
   accession: words(64, 'Accession or request number exactly as the worklist shows it; never a name or a date.'),
-  scheduledAt: z.iso
-    .datetime({ offset: true, error: refused('a moment with its offset, such as 2026-12-01T10:40:00+01:00') })
-    .describe('Start of the slot.'),
+  scheduledAt: moment('Start of the slot.'),
   slotMinutes: count({ min: 5, max: 480, unit: 'minutes', text: 'Length of the slot' }),
   scannerId: idSchema.describe('Booked scanner.'),
   protocolId: idSchema.describe('Booked protocol.'),

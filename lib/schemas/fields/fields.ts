@@ -77,6 +77,18 @@ export function day(text: string) {
   return z.iso.date({ error: refused('a day written YYYY-MM-DD') }).describe(text);
 }
 
+/** Bookings of a year beyond are a slip of the keyboard; far beyond, no database takes them. */
+const YEARS = { first: 2000, last: 2199 } as const;
+
+/** An ISO 8601 moment with its offset, in a year a booking can be in. */
+export function moment(text: string) {
+  const error = refused(`a moment with its offset, such as 2026-12-01T10:40:00+01:00, in the years ${YEARS.first} to ${YEARS.last}`);
+  return z.iso
+    .datetime({ offset: true, error })
+    .refine((written) => Number(written.slice(0, 4)) >= YEARS.first && Number(written.slice(0, 4)) <= YEARS.last, { error })
+    .describe(text);
+}
+
 /** An object that refuses keys it does not know, naming them and the keys it takes. */
 export function strict<const S extends z.ZodRawShape>(shape: S, text?: string) {
   const keys = Object.keys(shape);

@@ -6,7 +6,7 @@ import {
 } from '@/lib/domain/import';
 import { QUANTITY_FACTS } from '@/lib/domain/size-reading/quantities';
 import { TAPE_SITES } from '@/lib/domain/size-reading/tape-site';
-import { choice, count, day, quantity, refused, strict, words } from '@/lib/schemas/fields/fields';
+import { choice, count, day, moment, quantity, refused, strict, words } from '@/lib/schemas/fields/fields';
 import { idSchema } from '@/lib/schemas/fields/ids';
 
 const importedReading = strict({
@@ -23,7 +23,7 @@ const importedReading = strict({
 const importRow = strict({
   number: count({ min: 1, max: 10_000_000, text: 'Line of the file' }),
   accession: words(64, 'Accession or request number exactly as the worklist shows it; never a name or a date.'),
-  scheduledAt: z.iso.datetime({ offset: true, error: refused('a moment with its offset') }).describe('Start of the slot.'),
+  scheduledAt: moment('Start of the slot.'),
   slotMinutes: count({ ...SLOT_MINUTES, unit: 'minutes', text: 'Length of the slot' }),
   scannerId: idSchema.describe('Booked scanner.'),
   protocolId: idSchema.describe('Booked protocol.'),

@@ -1,9 +1,8 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
-import { count, refused, strict } from '@/lib/schemas/fields/fields';
+import { count, moment, refused, strict } from '@/lib/schemas/fields/fields';
 import { idSchema } from '@/lib/schemas/fields/ids';
 
-const moment = z.iso.datetime({ offset: true, error: refused('a moment with its offset, such as 2026-12-01T10:40:00+01:00') });
 const slotMinutes = count({ min: 5, max: 480, unit: 'minutes', text: 'Length of the slot' });
 const reason = z
   .string({ error: refused('text of up to 500 characters') }).trim().max(500, { error: refused('text of up to 500 characters') })
@@ -12,7 +11,7 @@ const reason = z
 export const proposeMoveInput = strict({
   bookingId: idSchema,
   scannerId: idSchema.describe('Scanner to move to.'),
-  scheduledAt: moment.describe('Start of the slot to move to.'),
+  scheduledAt: moment('Start of the slot to move to.'),
   slotMinutes,
   reason,
 });
@@ -21,7 +20,7 @@ export type ProposeMove = z.output<typeof proposeMoveInput>;
 /** What the booking system says now; only imports and the API change what is booked. */
 export const changeBookedBody = strict({
   expectedVersion: z.int({ error: refused('the version that was read') }).min(1).describe('Version the change was made on.'),
-  scheduledAt: moment.describe('Start of the slot.'),
+  scheduledAt: moment('Start of the slot.'),
   slotMinutes,
   scannerId: idSchema.describe('Booked scanner.'),
   protocolId: idSchema.describe('Booked protocol.'),

@@ -1,14 +1,13 @@
 import '@/lib/schemas/fields/jitless';
 import * as z from 'zod';
-import { refused, strict } from '@/lib/schemas/fields/fields';
+import { moment, refused, strict } from '@/lib/schemas/fields/fields';
 import { idSchema } from '@/lib/schemas/fields/ids';
 
-const moment = z.iso.datetime({ offset: true, error: refused('a moment with its offset') });
 const error = refused('1 to 60 sessions');
 
 export const addSessionsInput = strict({
   scannerId: idSchema.describe('Scanner that is staffed.'),
-  sessions: z.array(strict({ startsAt: moment, endsAt: moment }), { error }).min(1, { error }).max(60, { error }),
+  sessions: z.array(strict({ startsAt: moment('Begin of the session.'), endsAt: moment('End of the session.') }), { error }).min(1, { error }).max(60, { error }),
 });
 
 export interface SessionView {

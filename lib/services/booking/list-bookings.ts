@@ -1,25 +1,23 @@
 import { inTransaction } from '@/db/client';
-import { listBookings as readBookings, type BookingOverview } from '@/db/queries/booking/bookings';
+import { listBookings as readBookings } from '@/db/queries/booking/bookings';
 import { authorise } from '@/lib/domain/access';
 import { invalidField } from '@/lib/domain/errors';
 import { localDay, startOfDay } from '@/lib/domain/site/local-day';
 import { type BookingPage, listBookingsInput } from '@/lib/schemas/booking';
 import { parseInput } from '@/lib/schemas/parse-input';
+import { readPlace, writePlace } from './booking-place';
 import { nowOf, type ServiceContext } from '../context';
 import { toBookingListItem } from './to-booking-view';
 
 /** Days shown when no end is asked for. */
 const DEFAULT_DAYS = 14;
-const CURSOR = /^(\d{4}-\d{2}-\d{2}T\d{2}:\d{2}:\d{2}\.\d{3}Z)_([0-9a-f-]{36})$/;
 
 function readCursor(text: string | undefined): { scheduledAt: Date; id: string } | undefined {
   if (text === undefined) return undefined;
-  const [, at, id] = CURSOR.exec(text) ?? [];
-  if (!at || !id) throw invalidField('after', 'a cursor that no page gave; allowed: the “next” of the page before');
-  return { scheduledAt: new Date(at), id };
+  const place = readPlace(text);
+  if (!place) throw invalidField('after', 'a cursor that no page gave; allowed: the “next” of the page before');
+  return place;
 }
-
-const cursorOf = (booking: BookingOverview): string => `${booking.scheduledAt.toISOString()}_${booking.id}`;
 
 /** Bookings between two days (of the site, both included), by time, in pages that nothing written meanwhile can shift. */
 export async function listBookings(context: ServiceContext, input: unknown): Promise<BookingPage> {
@@ -38,7 +36,7 @@ export async function listBookings(context: ServiceContext, input: unknown): Pro
   const last = page.at(-1);
   return {
     bookings: page.map(toBookingListItem),
-    ...(found.length > page.length && last ? { next: cursorOf(last) } : {}),
+    ...(found.length > page.length && last ? { next: writePlace(last) } : {}),
   };
 }
 

@@ -9,6 +9,7 @@ import { bookingTableInput } from '@/lib/schemas/pre-check';
 import { parseInput } from '@/lib/schemas/parse-input';
 import { recordAudit } from '../audit/record-audit';
 import type { ServiceContext } from '../context';
+import { readPlace, writePlace } from '../booking/booking-place';
 import { toBookingListItem } from '../booking/to-booking-view';
 
 export interface BookingTablePage {
@@ -18,18 +19,19 @@ export interface BookingTablePage {
   readonly next?: string;
 }
 
-const CURSOR = /^(-?\d+(?:\.\d+)?)_(\d{4}-\d{2}-\d{2}T\d{2}:\d{2}:\d{2}\.\d{3}Z)_([0-9a-f-]{36})$/;
+const CURSOR = /^(-?\d{1,16}(?:\.\d{1,20})?)_(.*)$/;
 /** More than a person reads; a file that was cut says so in its last line. */
 const MOST_EXPORTED = 20_000;
 
 function readCursor(text: string | undefined): TablePosition | undefined {
   if (text === undefined) return undefined;
-  const [, key, at, id] = CURSOR.exec(text) ?? [];
-  if (!key || !at || !id) throw invalidField('after', 'a cursor that no page gave; allowed: the “next” of the page before');
-  return { key: Number(key), scheduledAt: new Date(at), id };
+  const [, key, rest] = CURSOR.exec(text) ?? [];
+  const place = readPlace(rest);
+  if (!key || !place) throw invalidField('after', 'a cursor that no page gave; allowed: the “next” of the page before');
+  return { key: Number(key), ...place };
 }
 
-const cursorOf = ({ key, scheduledAt, id }: TableRow): string => `${key}_${scheduledAt.toISOString()}_${id}`;
+const cursorOf = (row: TableRow): string => `${row.key}_${writePlace(row)}`;
 
 function windowOf(asked: ReturnType<typeof bookingTableInput.parse>): TableFilter {
   if (asked.to < asked.from) throw invalidField('to', `${asked.to} given; allowed: ${asked.from} or later`);
