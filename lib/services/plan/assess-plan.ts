@@ -2,7 +2,7 @@ import type { Assessment, Case, Scanner, SitePolicy } from '@/lib/domain/case/mo
 import type { PlanDifference, PlanDocument, PlanResultDocument } from '@/lib/domain/plan/document';
 import { assess } from '@/lib/physics';
 import type { PlanInput } from '@/lib/schemas/plan';
-import { inputHash } from '../check/input-hash';
+import { canonicalJson, inputHash } from '../check/input-hash';
 
 export interface AssessedPlan {
   readonly document: PlanDocument;
@@ -21,7 +21,7 @@ interface Today {
 /** The bench shows tenths of a second; anything beyond half of one is a real difference. */
 const SAME_SCAN_S = 0.051;
 
-function toDocument(plan: PlanInput, today: Today): PlanDocument {
+function toDocument(plan: PlanInput, today: Pick<Today, 'scannerVersion' | 'policyVersion'>): PlanDocument {
   return {
     schemaVersion: 1,
     scannerId: plan.scannerId,
@@ -33,6 +33,11 @@ function toDocument(plan: PlanInput, today: Today): PlanDocument {
     keepClear: plan.keepClear,
     sequences: plan.sequences.map(({ seen: _seen, ...sequence }) => sequence),
   };
+}
+
+/** Whether this is the plan that was stored, whatever scanner and policy were the newest then. */
+export function isStoredPlan(plan: PlanInput, stored: { readonly document: PlanDocument; readonly note: string }): boolean {
+  return plan.note === stored.note && canonicalJson(toDocument(plan, stored.document)) === canonicalJson(stored.document);
 }
 
 /** The questions a plan puts to the engine, one a sequence. */

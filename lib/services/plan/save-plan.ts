@@ -21,7 +21,7 @@ import { refreshBookingState } from '../booking/refresh-booking-state';
 import { readPlannedSetup } from '../booking/read-booking-setup';
 import { nowOf, type ServiceContext } from '../context';
 import { effectivePolicy } from '../site-policy/effective-policy';
-import { assessPlan, type AssessedPlan } from './assess-plan';
+import { assessPlan, type AssessedPlan, isStoredPlan } from './assess-plan';
 import { logDifferences } from './log-differences';
 import { toPlanView } from './to-plan-view';
 
@@ -93,9 +93,13 @@ async function assessToday(trx: SiteTransaction, siteId: string, plan: PlanInput
   }
 }
 
-async function viewOf(trx: SiteTransaction, siteId: string, id: string, version: number): Promise<PlanView> {
+/** A version as it is shown. A key that is sent again must bring the plan it made: another one would be lost unsaid. */
+async function viewOf(trx: SiteTransaction, siteId: string, id: string, version: number, sentAgain?: PlanInput): Promise<PlanView> {
   const plan = await findPlan(trx, siteId, id, version);
   if (!plan) throw new ServiceError('not-found');
+  if (sentAgain && !isStoredPlan(sentAgain, plan)) {
+    throw invalidField('Idempotency-Key', 'a key that saved another plan given; allowed: the same plan again, or a new key');
+  }
   return toPlanView(plan, await readPlannedSetup(trx, plan));
 }
 
@@ -120,7 +124,7 @@ export async function savePlan(context: ServiceContext, input: SavePlan): Promis
   return inTransaction(siteId, async (trx) => {
     const head = await openPlan(trx, context, input.id, plan);
     const repeated = await versionOfKey(trx, siteId, head.id, idempotencyKey);
-    if (repeated !== null) return viewOf(trx, siteId, head.id, repeated);
+    if (repeated !== null) return viewOf(trx, siteId, head.id, repeated, plan);
     if (head.currentVersion !== expectedVersion) throw staleVersion(head.currentVersion);
     if (head.state === 'used') throw new ServiceError('conflict', { message: 'A used plan stays as it was used. Make a new plan instead.' });
     if (head.bookingId !== plan.bookingId) throw invalidField('plan.bookingId', 'another booking than the plan was made for; allowed: the same');

@@ -77,6 +77,21 @@ describe('saving a plan', () => {
     expect(await versions(request.id)).toHaveLength(1);
   });
 
+  it('a key that is sent again with another plan is refused, and with the same plan answered, whatever is newest by then', async () => {
+    const key = 'one-key-for-two';
+    const first = planBody(bench, { key });
+    const saved = await savePlan(as(here.radiographer), first);
+    for (const plan of [{ note: 'another note' }, { patient: { ...bench.sizeRecord.patient!, breathHoldS: { value: 3, source: 'measured' as const, spread: 1 } } }]) {
+      const other = planBody(bench, { id: first.id, key, plan });
+      await expect(savePlan(as(here.radiographer), other)).rejects.toMatchObject({ code: 'invalid', fields: { 'Idempotency-Key': expect.stringContaining('a new key') } });
+    }
+    // A new policy and a later version in between change nothing about the first answer.
+    await editPolicy(as(here.lead), { expectedVersion: 0, form: { ...policyForm(), presaturationB1Scale: 0.9 } });
+    await savePlan(as(here.lead), planBody(bench, { id: first.id, expectedVersion: 1, plan: { note: 'later' } }));
+    expect(await savePlan(as(here.radiographer), first)).toMatchObject({ version: 1, note: saved.note, inputHash: saved.inputHash });
+    expect(await versions(first.id)).toHaveLength(2);
+  });
+
   it('the second of two people is told the present version and nothing is overwritten', async () => {
     const first = planBody(bench);
     await savePlan(as(here.radiographer), first);
