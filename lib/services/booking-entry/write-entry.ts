@@ -1,5 +1,5 @@
 import { inTransaction, type SiteTransaction } from '@/db/client';
-import { findBooking, setEscalation, setSurgery, type BookingOverview } from '@/db/queries/booking/bookings';
+import { findBooking, lockBooking, setEscalation, setSurgery, type BookingOverview } from '@/db/queries/booking/bookings';
 import { insertEntry } from '@/db/queries/booking-entry/booking-entries';
 import { authorise, type Action } from '@/lib/domain/access';
 import type { EntryDocument, EntryKind } from '@/lib/domain/booking/entry';
@@ -25,6 +25,8 @@ interface Line {
 async function writeLine(context: ServiceContext, line: Line, act?: (trx: SiteTransaction, booking: BookingOverview) => Promise<void>): Promise<void> {
   const { actor } = context;
   await inTransaction(actor.siteId, async (trx) => {
+    // Of two who ask or decide in the same moment, the second sees what the first did.
+    if (act) await lockBooking(trx, actor.siteId, line.bookingId);
     const booking = await findBooking(trx, actor.siteId, line.bookingId);
     authorise(actor, line.action, booking);
     await act?.(trx, booking);

@@ -263,6 +263,22 @@ describe('notes', () => {
     await expect(addNote(as(educator), { bookingId, note: 'Hello.' })).rejects.toSatisfy(failsWith('not-found'));
   });
 
+  it('two who ask, or decide, in the same moment: one does, the other is told', async () => {
+    const here = await equipSite();
+    const bookingId = here.booking.id;
+    const ask = (note: string) => escalateBooking(as(here.coordinator), { bookingId, note });
+    const decide = (note: string) => decideBooking(as(here.lead), { bookingId, note });
+    for (const act of [ask, decide]) {
+      const done = await Promise.allSettled(['one', 'two', 'three'].map(act));
+      expect(done.filter(({ status }) => status === 'fulfilled')).toHaveLength(1);
+      for (const each of done) if (each.status === 'rejected') expect(each.reason).toMatchObject({ code: 'conflict' });
+    }
+    // Notes are not taken turns for: all stay.
+    await Promise.all(['a', 'b'].map((note) => addNote(as(here.radiologist), { bookingId, note })));
+    const lines = await listHistory(as(here.radiographer), { bookingId });
+    expect(lines.filter(({ note }) => note).map(({ kind }) => kind).sort()).toEqual(['decided', 'escalated', 'note', 'note']);
+  });
+
   it('of another site are neither read nor written', async () => {
     const [here, there] = [await equipSite(), await equipSite()];
     await expect(addNote(as(there.coordinator), { bookingId: here.booking.id, note: 'Hello.' })).rejects.toSatisfy(failsWith('not-found'));
