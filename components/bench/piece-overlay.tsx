@@ -7,6 +7,7 @@ import { ringOnScreen } from '@/components/schematic/scene/section-scene';
 import type { Prescription } from '@/lib/physics/model/prescription';
 import type { SectionDrawing } from '@/lib/physics/section/section-drawing';
 import { describeGhost, describePiece } from '@/lib/presentation/describe-section';
+import { spreadPoints } from './spread-points';
 import { usePlaced } from './use-placed';
 
 /** Landed pieces can be focused, so that the thread to where they come from is not only for a mouse. */
@@ -26,10 +27,12 @@ export function PieceOverlay({
     ...drawing.pieces.map((piece) => ({ ...piece, words: describePiece(piece) })),
     ...drawing.ghosts.map((ghost) => ({ ...ghost, words: describeGhost(ghost) })),
   ];
-  return pieces.map(({ name, landed, inKeepClear, words }) => {
+  const seen = pieces.flatMap(({ name, landed, inKeepClear, words }) => {
     const at = centroidOf((inKeepClear.length > 0 ? inKeepClear : landed).map(toRing));
-    return at && <PieceButton key={name} name={name} words={words} at={toPixels(fit, at)} onFocus={onFocus} />;
+    return at ? [{ name, words, at: toPixels(fit, at) }] : [];
   });
+  const places = spreadPoints(seen.map(({ at }) => at));
+  return seen.map(({ name, words }, i) => <PieceButton key={name} name={name} words={words} at={places[i]!} onFocus={onFocus} />);
 }
 
 function PieceButton({
