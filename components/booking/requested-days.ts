@@ -1,6 +1,7 @@
 import { addDays, dayKey } from '@/lib/presentation/moment';
 
-const DAY = /^\d{4}-\d{2}-\d{2}$/;
+/** In the years a booking can be in: beyond, days before and after could not be named. */
+const DAY = /^2[01]\d{2}-\d{2}-\d{2}$/;
 /** Yesterday is still written up; a fortnight ahead is what is planned. */
 const BACK = 1;
 const AHEAD = 14;

@@ -6,11 +6,13 @@ export type TableSearch = Partial<Record<'from' | 'to' | 'result' | 'scanner' | 
 const ID = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i;
 
 /** What the address asks for; what it says wrongly is left out, so that an old link still opens. */
-export function tableQuery(search: TableSearch, now: Date): BookingTableInput & { from: string; to: string } {
+export function tableQuery(address: TableSearch, now: Date): BookingTableInput & { from: string; to: string } {
+  // A name that stands twice in an address comes as a list, whatever the type says.
+  const search: TableSearch = Object.fromEntries(Object.entries(address).filter(([, text]) => typeof text === 'string'));
   const id = (text: string | undefined) => (text && ID.test(text) ? text : undefined);
   const result = RESULT_FILTERS.find((one) => one === search.result);
   const sort = BOOKING_SORTS.find((one) => one === search.sort?.replace(/^-/, ''));
-  const find = search.find?.trim().slice(0, 64);
+  const find = search.find?.replace(/\p{Cc}/gu, '').trim().slice(0, 64);
   return {
     ...dayRange(search, now),
     ...(result ? { result } : {}),

@@ -5,6 +5,14 @@ import type { UserActor } from '@/lib/domain/access';
 import { ServiceError } from '@/lib/domain/errors';
 import type { ServiceContext } from '@/lib/services/context';
 
+/** PostgreSQL's invalid_text_representation and character_not_in_repertoire: of what a page asks for, only ids that are none are refused so. */
+const NO_ID: readonly unknown[] = ['22P02', '22021'];
+
+function namesNothing(error: unknown): boolean {
+  if (error instanceof ServiceError) return error.code === 'not-found' || error.code === 'invalid';
+  return error instanceof Error && NO_ID.includes((error as { code?: unknown }).code);
+}
+
 /**
  * What a page of the workspace starts with: sign-in when there is no session, and our own 404 both for what is
  * missing and for what is not the reader's to see.
@@ -17,7 +25,7 @@ export async function loadPage<T>(
     return (await work({ actor, requestId: randomUUID() }))!;
   } catch (error) {
     // An id in the address that is no id names nothing.
-    if (error instanceof ServiceError && (error.code === 'not-found' || error.code === 'invalid')) notFound();
+    if (namesNothing(error)) notFound();
     throw error;
   }
 }
