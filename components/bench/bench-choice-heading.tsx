@@ -26,7 +26,7 @@ export function BenchChoiceHeading({
   return (
     <>
       <h1 className="text-sm text-ink-soft">Bench without a booking</h1>
-      <div className="mt-1 space-y-1">
+      <div className="mt-2.5 space-y-1">
         <Select compact layout="row" label="Scanner" value={scannerId} options={options(scanners)} onChange={(event) => go(event.target.value, protocolId)} />
         <Select compact layout="row" label="Protocol" value={protocolId} options={options(protocols)} onChange={(event) => go(scannerId, event.target.value)} />
       </div>

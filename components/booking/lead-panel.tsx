@@ -18,7 +18,7 @@ export function LeadPanel({ escalation, ask, decide }: { escalation?: 'open' | '
   }
   if (!ask) return null;
   return (
-    <Panel id="lead" title={escalation === 'decided' ? 'Ask a lead again' : 'Ask a lead to decide'} collapsible defaultOpen={false} summary="When no scanner, slot or plan works">
+    <Panel id="lead" title={escalation === 'decided' ? 'Ask a lead again' : 'Ask a lead to decide'} collapsible defaultOpen={false} summary="When nothing works">
       <NoteForm label="What is to be decided" button="Ask a lead" pending="Asking…" done="The leads of your site see it on their Today page." save={ask} />
     </Panel>
   );
