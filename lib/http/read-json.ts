@@ -27,14 +27,33 @@ async function readBytes(request: Request, maxBytes: number): Promise<Uint8Array
   return Buffer.concat(chunks);
 }
 
+/** Nothing we take goes a quarter as deep; what reads a value inside a value calls itself, and a thousandfold nest would end it. */
+const MOST_NESTED = 64;
+
+const isHolder = (value: unknown): value is object => typeof value === 'object' && value !== null;
+
+/** Level by level, so that the question itself cannot nest. */
+function isNestedTooDeep(value: unknown): boolean {
+  let level = [value].filter(isHolder);
+  for (let depth = 0; depth < MOST_NESTED && level.length > 0; depth += 1) {
+    const next: object[] = [];
+    for (const each of level) for (const inner of Object.values(each)) if (isHolder(inner)) next.push(inner);
+    level = next;
+  }
+  return level.length > 0;
+}
+
 /** The JSON body of a request. A wrong content type is refused: it is what a foreign form could send unasked. */
 export async function readJson(request: Request, maxBytes: number = DEFAULT_MAX_BODY_BYTES): Promise<unknown> {
   const type = (request.headers.get('content-type') ?? '').split(';')[0]?.trim().toLowerCase();
   if (type !== 'application/json' && !type?.endsWith('+json')) throw new ServiceError('not-json');
   const bytes = await readBytes(request, maxBytes);
+  let value: unknown;
   try {
-    return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
+    value = JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
   } catch {
     throw new ServiceError('bad-request', { message: 'The body is not valid JSON in UTF-8.' });
   }
+  if (isNestedTooDeep(value)) throw new ServiceError('bad-request', { message: `The body is nested too deep; allowed: ${MOST_NESTED} levels.` });
+  return value;
 }

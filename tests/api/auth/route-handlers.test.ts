@@ -200,6 +200,17 @@ describe('the body', () => {
     expect(await (await open(post({}, fits), segment())).json()).toEqual({ body: 'x'.repeat(98) });
   });
 
+  it('is refused when it nests deeper than anything we take, before anything reads it', async () => {
+    const nested = (levels: number) => '['.repeat(levels) + ']'.repeat(levels);
+    const strict = handlePublicRoute({ body: z.strictObject({ name: z.string() }), maxBodyBytes: 1_000_000 }, async () => undefined);
+    const any = handlePublicRoute({ body: z.unknown(), maxBodyBytes: 1_000_000 }, async () => undefined);
+    for (const deep of [nested(65), nested(400_000), '{"a":'.repeat(65) + '1' + '}'.repeat(65)]) {
+      for (const route of [strict, any]) expect((await problemOf(await route(post({}, deep), segment()))).code).toBe('bad-request');
+    }
+    expect((await any(post({}, nested(64)), segment())).status).toBe(204);
+    expect((await any(post({}, `[${'[],'.repeat(1000)}1]`), segment())).status).toBe(204);
+  });
+
   it('is refused when it is no JSON or no UTF-8', async () => {
     for (const body of ['{', '', new Uint8Array([0x22, 0xff, 0x22])]) {
       expect((await problemOf(await open(post({}, body as BodyInit), segment()))).code).toBe('bad-request');
