@@ -81,7 +81,7 @@ describe('saving a plan', () => {
     const key = 'one-key-for-two';
     const first = planBody(bench, { key });
     const saved = await savePlan(as(here.radiographer), first);
-    for (const plan of [{ note: 'another note' }, { patient: { ...bench.sizeRecord.patient!, breathHoldS: { value: 3, source: 'measured' as const, spread: 1 } } }]) {
+    for (const plan of [{ note: 'another note' }, { patient: { ...bench.sizeRecord.patient!, breathHoldS: { value: 3, source: 'measured' as const, spread: 1 } } as never }]) {
       const other = planBody(bench, { id: first.id, key, plan });
       await expect(savePlan(as(here.radiographer), other)).rejects.toMatchObject({ code: 'invalid', fields: { 'Idempotency-Key': expect.stringContaining('a new key') } });
     }
