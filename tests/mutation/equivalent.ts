@@ -130,7 +130,6 @@ export const EQUIVALENT: readonly EquivalentMutant[] = [
     'f(middle) > f(answer)',
     'f(middle) >= f(answer)',
   ]),
-  ...at('bore/farthest-point', 'if (f(c) > f(d)) high = d;', TIE, ['f(c) > f(d)', 'f(c) >= f(d)']),
   ...at(
     'certainty/fold-probability',
     'return other === middle || Math.abs(other - middle) < 1e-6;',
