@@ -119,7 +119,8 @@ async function play({ id, tests }: Extract<Request, { kind: 'play' }>): Promise<
     }
     error ??=
       registered?.[test] === undefined ? 'the test is not registered' : await failure(registered[test].run);
-    if (error !== undefined)
+    // Another program that had no time to start says nothing about the mutant.
+    if (error !== undefined && !/spawnSync .*ETIMEDOUT/.test(error))
       return say({
         kind: 'played',
         killer,

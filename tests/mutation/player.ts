@@ -15,7 +15,7 @@ export const COUNTS = {
 /** What /proc counts processor time in. */
 const TICK_MS = 10;
 /** A process that waits for more than the processor is given up after this many times what it was allowed. */
-const MOST_WALL = 60;
+const MOST_WALL = 1000;
 
 /** Processor time a process has had; undefined where the system does not tell. */
 function processorMs(pid: number | undefined): number | undefined {
