@@ -1,9 +1,14 @@
-/** Characters with which a spreadsheet takes a cell for a formula. */
-const FORMULA = /^[=+\-@\t\r]/;
+/** Where a spreadsheet may take a cell for a formula: its start, or what follows a tab or return there. */
+const AT_START = /^(?=[=+\-@\t\r])/;
+/**
+ * A spreadsheet set to semicolons or tabs honours no quotes that begin in the middle of what it takes for a cell: it
+ * splits within the text, at line breaks too, and may drop quotes that follow.
+ */
+const AFTER_SPLIT = /(?<=[;\t\r\n])(?="*[=+\-@])/g;
 
-/** A cell as text: an apostrophe before what would run, quotes round what would split. */
+/** A cell as text: an apostrophe before whatever would run, quotes round what would split. */
 export function csvCell(value: string | number): string {
-  const text = typeof value === 'string' && FORMULA.test(value) ? `'${value}` : String(value);
+  const text = typeof value === 'string' ? value.replace(AFTER_SPLIT, "'").replace(AT_START, "'") : String(value);
   return /[",;\r\n\t]/.test(text) || text !== text.trim() ? `"${text.replaceAll('"', '""')}"` : text;
 }
 
