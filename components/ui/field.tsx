@@ -31,6 +31,12 @@ export const controlClass = cx(
   'disabled:cursor-not-allowed disabled:bg-sunk disabled:text-ink-soft [&[readonly]]:bg-sunk',
 );
 
+/** Refusals are written to be joined in one line of an answer; beside a field each is a sentence. */
+export function asSentence(text: string): string {
+  const plain = text.trim();
+  return `${plain.charAt(0).toUpperCase()}${plain.slice(1)}${/[.!?…]$/.test(plain) ? '' : '.'}`;
+}
+
 export function FieldError({ id, children }: { id?: string; children: ReactNode }) {
   return (
     <p
@@ -40,7 +46,7 @@ export function FieldError({ id, children }: { id?: string; children: ReactNode 
       <svg viewBox="0 0 8 16" aria-hidden="true" className="mt-0.5 h-4 w-2 flex-none">
         <path d="M1 2 L7 5 M1 6 L7 9 M1 10 L7 13" stroke="currentColor" strokeWidth="1.5" fill="none" />
       </svg>
-      <span>{children}</span>
+      <span>{typeof children === 'string' && children.trim() !== '' ? asSentence(children) : children}</span>
     </p>
   );
 }

@@ -44,13 +44,13 @@ export function numberProblem(
         : limits.max !== undefined
           ? `${formatPlain(limits.max)}${unit} or less`
           : 'any number';
-  if (value === null) return limits.optional ? undefined : `Nothing given. Allowed: ${allowed}.`;
-  if (Number.isNaN(value)) return `“${text.trim()}” is not a number. Allowed: ${allowed}.`;
+  if (value === null) return limits.optional ? undefined : `nothing given; allowed: ${allowed}`;
+  if (Number.isNaN(value)) return `“${text.trim()}” is not a number; allowed: ${allowed}`;
   if (limits.whole && !Number.isInteger(value))
-    return `${text.trim()} is not a whole number. Allowed: ${allowed}.`;
+    return `${text.trim()} is not a whole number; allowed: ${allowed}`;
   if (limits.min !== undefined && value < limits.min)
-    return `${text.trim()} is too small. Allowed: ${allowed}.`;
+    return `${text.trim()} is too small; allowed: ${allowed}`;
   if (limits.max !== undefined && value > limits.max)
-    return `${text.trim()} is too large. Allowed: ${allowed}.`;
+    return `${text.trim()} is too large; allowed: ${allowed}`;
   return undefined;
 }

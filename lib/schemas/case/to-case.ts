@@ -44,7 +44,7 @@ function toExtents(input: ParsedCaseInput['patient'], report: Report): Record<Si
     if (size !== undefined) return { value: size / 2, source: 'measured', spread: 0 };
     if (bounds) return { value: bounds[side], source: 'measured', spread: 0 };
     if (whole === undefined) return { value: CASE_DEFAULTS.patient.reachMm, source: 'policy-default', spread: 0 };
-    report(`patient.extents.${side}`, `needed: a number, 0 to 1000 mm, or patient.${whole}, or patient.parts`);
+    report(`patient.extents.${side}`, `nothing given; allowed: a number, 0 to 1000 mm, or patient.${whole}, or patient.parts`);
     return { value: 0, source: 'policy-default', spread: 0 };
   };
   return Object.fromEntries(SIDES.map((side) => [side, extentOf(side)])) as Record<Side, Reading>;

@@ -21,7 +21,7 @@ function shown(value: unknown): string {
 /** Every message names what was given and what is allowed. */
 function refused(allowed: string) {
   return (issue: { readonly input?: unknown }): string =>
-    issue.input === undefined || issue.input === '' ? `needed: ${allowed}` : `${shown(issue.input)} given; allowed: ${allowed}`;
+    issue.input === undefined || issue.input === '' ? `nothing given; allowed: ${allowed}` : `${shown(issue.input)} given; allowed: ${allowed}`;
 }
 
 function span(field: NumberField): string {

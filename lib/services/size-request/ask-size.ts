@@ -64,7 +64,7 @@ export async function sendSizeRequest(context: ServiceContext, input: unknown): 
     const request = await lockSizeRequest(trx, siteId, id);
     authorise(actor, 'size-request.send', request);
     if (request.status !== 'open') throw new ServiceError('conflict', { message: `This size request is ${request.status}.` });
-    if (!address && request.addressSealed === '') throw invalidField('address', 'needed: the address to send to');
+    if (!address && request.addressSealed === '') throw invalidField('address', 'nothing given; allowed: the address to send to');
     await mail(trx, siteId, { id, reminder: request.sentCount > 0 && !address, now: nowOf(context), ...(address ? { address } : {}) });
     await recordAudit(trx, context, { action: 'size-request.send', subjectType: 'size-request', subjectId: id, fields: [address ? 'mailed' : 'reminded'] });
     return { id, link: requestLink(id) };

@@ -1,4 +1,5 @@
 import fc from 'fast-check';
+import { asSentence } from '@/components/ui/field';
 import { describe, expect, it } from 'vitest';
 import { formatPlain, numberProblem, parseNumber, stepNumber } from '@/components/ui/parse-number';
 
@@ -57,14 +58,25 @@ describe('stepping', () => {
 describe('what is wrong with a number', () => {
   it('names what was given and what is allowed', () => {
     expect(numberProblem('1200', 1200, { min: 100, max: 600, unit: 'mm' })).toBe(
-      '1200 is too large. Allowed: 100 to 600 mm.',
+      '1200 is too large; allowed: 100 to 600 mm',
     );
-    expect(numberProblem('12 5', Number.NaN, { min: 0 })).toBe('“12 5” is not a number. Allowed: 0 or more.');
+    expect(numberProblem('12 5', Number.NaN, { min: 0 })).toBe('“12 5” is not a number; allowed: 0 or more');
     expect(numberProblem('2.5', 2.5, { min: 1, max: 8, whole: true })).toBe(
-      '2.5 is not a whole number. Allowed: 1 to 8.',
+      '2.5 is not a whole number; allowed: 1 to 8',
     );
-    expect(numberProblem('', null, { min: 1 })).toBe('Nothing given. Allowed: 1 or more.');
+    expect(numberProblem('', null, { min: 1 })).toBe('nothing given; allowed: 1 or more');
     expect(numberProblem('', null, { min: 1, optional: true })).toBeUndefined();
     expect(numberProblem('300', 300, { min: 100, max: 600 })).toBeUndefined();
+  });
+});
+
+describe('a refusal beside its field', () => {
+  it.each([
+    ['nothing given; allowed: text of 1 to 60 characters', 'Nothing given; allowed: text of 1 to 60 characters.'],
+    ['nothing given; allowed: 1 or more', 'Nothing given; allowed: 1 or more.'],
+    ['“x” given; allowed: a number, 1 to 8 T', '“x” given; allowed: a number, 1 to 8 T.'],
+    ['Take one out first.', 'Take one out first.'],
+  ])('%s', (written, read) => {
+    expect(asSentence(written)).toBe(read);
   });
 });

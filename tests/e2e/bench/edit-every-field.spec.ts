@@ -21,7 +21,7 @@ test('a presaturation band is added, edited, taken back and removed', async ({ s
   await expect(page.getByRole('group', { name: 'Band 1, posterior' }).getByRole('spinbutton', { name: 'Thick' })).toHaveValue('80');
 
   await thick.fill('9000');
-  await expect(band.getByText('9000 is too large. Allowed: 1 to 500 mm.')).toBeVisible();
+  await expect(band.getByText('9000 is too large; allowed: 1 to 500 mm.')).toBeVisible();
   await thick.fill('70');
   await page.getByRole('button', { name: 'Remove band 1, posterior' }).click();
   await expect(page.getByRole('group', { name: /^Band 1, / })).toHaveCount(0);

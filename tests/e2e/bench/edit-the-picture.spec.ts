@@ -186,7 +186,7 @@ test('every handle has a typed twin and arrow-key steps', async ({ signedIn }) =
   await expect(extent).toHaveAttribute('aria-valuenow', String(start));
 
   await field.fill('4000');
-  await expect(page.getByText('4000 is too large. Allowed: 0 to 1000 mm.')).toBeVisible();
+  await expect(page.getByText('4000 is too large; allowed: 0 to 1000 mm.')).toBeVisible();
   await expect(extent).toHaveAttribute('aria-valuenow', String(start));
 
   await page.getByRole('checkbox', { name: 'More must stay displayed' }).check();

@@ -25,7 +25,7 @@ test('a lead adds a scanner: what is missing is said beside each field, what was
   await field(page, 'Name').fill(name);
   await field(page, 'Diameter of the opening').fill('12000');
   await page.getByRole('button', { name: 'Add this scanner' }).click();
-  await expect(page.getByText('12000 is too large. Allowed: 300 to 1200 mm.')).toBeVisible();
+  await expect(page.getByText('12000 is too large; allowed: 300 to 1200 mm.')).toBeVisible();
   await expect(page.getByText('The scanner was not saved: 9 fields need another look.')).toBeVisible();
   await expect(field(page, 'Diameter of the opening')).toHaveValue('12000');
   await expect(field(page, 'Name')).toHaveValue(name);

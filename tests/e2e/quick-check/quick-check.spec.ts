@@ -14,7 +14,7 @@ test('four fields on the home page, without an account, give the engine’s answ
   await check.getByRole('spinbutton', { name: 'Phase oversampling at present' }).fill('12');
   await expect(check.locator('[data-verdict]')).toHaveText('No fold expected');
   await check.getByRole('spinbutton', { name: 'FOV along phase' }).fill('12');
-  await expect(check.getByText('12 is too small. Allowed: 50 to 600 mm.')).toBeVisible();
+  await expect(check.getByText('12 is too small; allowed: 50 to 600 mm.')).toBeVisible();
   await check.getByRole('spinbutton', { name: 'FOV along phase' }).fill('320');
   await check.getByRole('combobox', { name: 'Sequence' }).selectOption('balanced');
   await expect(check.locator('[data-assumed="Phase direction"]')).toContainText('right–left, coronal');
