@@ -74,6 +74,7 @@ const ABDOMEN: readonly Prescription[] = [
     fovPhaseMm: 390,
     fovReadoutMm: 450,
     linesAcrossFov: 104,
+    acquiredLines: 120,
     readoutMatrix: 120,
     slices: { mode: 'stack', slices: 30, thicknessMm: 5, gapMm: 1 },
     trMs: 6000,
