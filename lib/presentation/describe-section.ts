@@ -22,10 +22,14 @@ export function describePiece(piece: PieceDrawing): string {
   return `${capital(piece.part)} ${what} from the ${piece.side} side lands ${along}, ${where}, ${area}.${order}`;
 }
 
+/** "Unfolding shows a ghost of trunk tissue from the anterior side, 150 mm away, in the keep-clear area." */
 export function describeGhost(ghost: GhostDrawing): string {
   const area = ghost.inKeepClear.length > 0 ? 'in the keep-clear area' : 'outside the keep-clear area';
-  const what = ghost.fatDisplacedMm === undefined ? 'tissue' : 'fat, displaced by EPI,';
-  return `Unfolding shows ${ghost.part} ${what} from the ${ghost.side} side again, ${area}.`;
+  const fat = ghost.fatDisplacedMm;
+  const what = fat === undefined ? 'tissue' : 'fat';
+  const displaced = fat === undefined ? '' : `, displaced ${Math.round(Math.abs(fat))} mm by EPI`;
+  const where = ghost.placeUncertain ? 'at an uncertain place' : `${Math.round(ghost.distanceMm)} mm away`;
+  return `Unfolding shows a ghost of ${ghost.part} ${what} from the ${ghost.side} side${displaced}, ${where}, ${area}.`;
 }
 
 /** The picture in words, for those who do not see it. */

@@ -166,7 +166,7 @@ export function threadNodes(
       : distance;
   const down = shift[1] > 0;
   const upright = Math.abs(shift[1]) >= Math.abs(shift[0]);
-  const text = ghost ? `ghost of tissue ${where}` : where;
+  const text = ghost ? `ghost of ${ghost.fatDisplacedMm === undefined ? 'tissue' : 'fat'} ${where}` : where;
   const { anchor, sign } = anchorWithin(text, origin, context.bounds, context.mmPerPx);
   return [
     { kind: 'lines', name: 'thread', lines: [[origin, target]], stroke: { colour, widthPx: 1.5, edge: 'dotted' } },

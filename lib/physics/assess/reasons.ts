@@ -21,6 +21,15 @@ function intruder(from: NonNullable<FoldResult['from']>): string {
   return from.part === 'trunk' ? capitalised(`${from.side} tissue`) : `Tissue of the ${from.part}`;
 }
 
+/** Image-domain unfolding shows tissue again m·W/R away, not on the opposite side; the words are the picture's. */
+function ghostOf(from: NonNullable<FoldResult['from']>): string {
+  const { part, side, distanceMm, fatDisplacedMm } = from;
+  const what = fatDisplacedMm === undefined ? 'tissue' : 'fat';
+  const whose = part === 'trunk' ? what : `${what} of the ${part}`;
+  const displaced = fatDisplacedMm === undefined ? '' : `, displaced ${millimetres(fatDisplacedMm)} by EPI`;
+  return `Unfolding shows a ghost of ${whose} from the ${side} side${displaced}, ${millimetres(distanceMm)} away`;
+}
+
 /** How far the fold reaches, saying which figure counts the margin. */
 function depthWords(fold: FoldResult): string {
   if (fold.depthMm <= 0)
@@ -28,7 +37,7 @@ function depthWords(fold: FoldResult): string {
   return `${millimetres(fold.depthWithMarginMm)} deep with margin`;
 }
 
-function foldInReason(fold: FoldResult): Reason {
+function foldInReason(fold: FoldResult, p: Prescription): Reason {
   const { from } = fold;
   const where = from === undefined ? 'Tissue' : intruder(from);
   if (fold.ghosts && fold.depthWithMarginMm <= 0) {
@@ -37,9 +46,11 @@ function foldInReason(fold: FoldResult): Reason {
       text: `${where} lies beyond the acquired width, and unfolding leaves ghosts of it in the keep-clear area.`,
     };
   }
+  const place = fold.placeUncertain ? ' Beyond the usable FOV its place is uncertain.' : '';
+  if (fold.ghosts && from !== undefined && sidesOf(p.phaseAxis).includes(from.side))
+    return { code: 'fold-in-keep-clear', text: `${ghostOf(from)}, ${depthWords(fold)}.${place}` };
   const lands =
     from === undefined ? 'lands in the keep-clear area' : `lands on the ${OPPOSITE_SIDE[from.side]} side`;
-  const place = fold.placeUncertain ? ' Beyond the usable FOV its place is uncertain.' : '';
   return { code: 'fold-in-keep-clear', text: `${where} ${lands}, ${depthWords(fold)}.${place}` };
 }
 
@@ -140,10 +151,10 @@ export function reasonsFor({
   const slabInside = (slab?.contaminatedInKeepClear ?? 0) > 0;
   const alongSlab =
     slabInside && fold?.from !== undefined && !sidesOf(prescription.phaseAxis).includes(fold.from.side);
-  if (fold?.inKeepClear && !alongSlab) reasons.push(foldInReason(fold));
-  if (slab !== undefined && slabInside) reasons.push(slabReason(slab));
+  if (fold?.inKeepClear && !alongSlab) reasons.push(foldInReason(fold, prescription));
+  // Wrap along the slab lays a whole section over the picture, in-plane fold only a rim: it decides the area told after it.
+  if (slab !== undefined && slab.contaminated > 0) reasons.push(slabReason(slab));
   if (fold?.outsideKeepClear && !fold.inKeepClear) reasons.push(foldOutsideReason(fold));
-  if (slab !== undefined && !slabInside && slab.contaminated > 0) reasons.push(slabReason(slab));
   if (width !== undefined) {
     const folds = fold !== undefined && (fold.inKeepClear || fold.outsideKeepClear);
     reasons.push(folds ? enoughReason(prescription, width) : noFoldReason(prescription, width));

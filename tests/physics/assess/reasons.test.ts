@@ -139,6 +139,26 @@ describe('how fold in the keep-clear area is told', () => {
     expect(codes({ fold: fold({ ghosts: true, depthWithMarginMm: 0.4 }) })).toEqual(['fold-in-keep-clear']);
     expect(codes({ fold: fold({ depthWithMarginMm: 0 }) })).toEqual(['fold-in-keep-clear']);
   });
+  it('a ghost of unfolding is told as one, with where it appears', () => {
+    const ghost = (from: Partial<NonNullable<FoldResult['from']>>) =>
+      words({
+        fold: fold({
+          ghosts: true,
+          from: { part: 'trunk', side: 'anterior', order: 0.5, distanceMm: 150, ...from },
+        }),
+      });
+    expect(ghost({})).toBe(
+      'Unfolding shows a ghost of tissue from the anterior side, 150 mm away, 14 mm deep with margin.',
+    );
+    expect(ghost({ part: 'left arm', side: 'posterior' })).toContain(
+      'a ghost of tissue of the left arm from the posterior side, 150 mm away',
+    );
+    expect(ghost({ fatDisplacedMm: 18.4 })).toContain(
+      'a ghost of fat from the anterior side, displaced 18 mm by EPI, 150 mm away',
+    );
+    // What comes along the slab has not come through unfolding along phase.
+    expect(ghost({ side: 'superior' })).not.toContain('ghost');
+  });
   it('says when its place is not certain', () => {
     expect(words({ fold: fold({ placeUncertain: true }) })).toContain('its place is uncertain');
     expect(words({ fold: fold() })).not.toContain('uncertain');
@@ -164,6 +184,12 @@ describe('how fold in the keep-clear area is told', () => {
     expect(codes({ fold: along, slab: slabOf(3, 0) })).toEqual([
       'fold-in-keep-clear',
       'slab-wrap-outside-keep-clear',
+    ]);
+    // Outside the keep-clear area the slab's wrap leads: it is what covers most of the picture.
+    const outside: FoldResult = { ...NO_FOLD, outsideKeepClear: true, displayedAreaMm2: 123200 };
+    expect(codes({ fold: outside, slab: slabOf(3, 0) })).toEqual([
+      'slab-wrap-outside-keep-clear',
+      'fold-outside-keep-clear',
     ]);
     // Tissue that comes along phase is told beside the slab's wrap.
     expect(codes({ fold: fold(), slab: slabOf(3, 2) })).toEqual([
