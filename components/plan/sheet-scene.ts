@@ -2,6 +2,7 @@ import { fitScene, fromPixels, type Scene } from '@/components/schematic/scene/s
 import { sectionBounds, sectionScene, type DrawnSection } from '@/components/schematic/scene/section-scene';
 import { geometryCase } from '@/lib/physics/assess/assess';
 import type { Case } from '@/lib/physics/model/case';
+import type { SectionDrawing } from '@/lib/physics/section/section-drawing';
 import { drawSection } from '@/lib/physics/section/draw-section';
 import { describeSection } from '@/lib/presentation/describe-section';
 import type { PlanView } from '@/lib/schemas/plan';
@@ -36,6 +37,17 @@ export function sheetScene(plan: PlanView): SheetScene | undefined {
   return {
     scene: sectionScene({ ...drawn, bounds: { left, top, right, bottom }, mmPerPx: 1 / fit.scale }),
     words: describeSection(drawn.drawing, result.phaseAxis, result.readoutAxis).join(' '),
-    caption: `${sequence.prescription.name}, middle slice. Hatched: tissue that lands here from the other side. Dotted edge: estimated.`,
+    caption: `${sequence.prescription.name}, middle slice.${keyTo(drawn.drawing)}`,
   };
+}
+
+/** Explains only what is drawn. */
+function keyTo({ pieces, ghosts, tissue }: SectionDrawing): string {
+  const lands = pieces.some(({ landed }) => landed.length > 0);
+  const shown = [
+    lands ? ' Hatched: tissue that lands here from the other side.' : '',
+    ghosts.length > 0 ? ` ${lands ? 'Hatched upright' : 'Hatched'}: ghosts of tissue that unfolding shows again.` : '',
+    tissue.some(({ estimated }) => estimated) ? ' Dotted edge: estimated.' : '',
+  ];
+  return shown.join('');
 }

@@ -10,10 +10,10 @@ import type { PlanView } from '@/lib/schemas/plan';
 
 /** What a sheet says in words; the page, its print and its PDF say the same. */
 export const SHEET_TITLES = {
-  sizes: 'Sizes from the origin, one standard deviation, and how they were got',
+  sizes: 'Sizes, from the FOV centre to the skin, ± one standard deviation, and how they were got',
   cautions: 'Cautions',
   label: ['patient label here', 'checked by'],
-  link: 'Newest version and whether this one is still it:',
+  link: 'Look here for a newer version of this sheet:',
 } as const;
 
 export function sheetHeading(plan: PlanView): { kind: string; reference: string; version: string } {
