@@ -26,7 +26,7 @@ export default async function FrontPage() {
       <main id="main" className="mx-auto grid max-w-6xl gap-x-14 gap-y-10 px-4 py-10 sm:px-6 lg:grid-cols-[5fr_6fr] lg:py-14">
         <FrontText entry={entry} />
         <FoldExample />
-        <div className="lg:col-span-2">
+        <div id="quick-check" tabIndex={-1} className="scroll-mt-4 lg:col-span-2">
           <QuickCheck />
         </div>
       </main>

@@ -35,10 +35,14 @@ export function FrontText({ entry }: { entry: { href: string; label: string } })
           </div>
         ))}
       </dl>
-      <p className="mt-8">
+      <p className="mt-8 flex flex-wrap gap-3">
         <LinkButton href={entry.href} variant="primary">
           {entry.label}
         </LinkButton>
+        <LinkButton href="#quick-check">Try the quick check</LinkButton>
+      </p>
+      <p className="mt-3 max-w-prose text-ink-soft">
+        The quick check is on this page: four fields and an answer, without an account.
       </p>
       <p className="mt-6 max-w-prose text-sm text-ink-soft">
         Planning aid. Trained staff, implant screening, equipment labelling and local policy decide. Licensed

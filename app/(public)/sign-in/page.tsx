@@ -24,7 +24,7 @@ export default async function SignInPage({
           Forgotten your password?
         </Link>
       </p>
-      <p className="mt-2 text-sm text-ink-soft">Accounts are made by the MR lead of your site.</p>
+      <p className="mt-2 text-sm text-ink-soft">Accounts are made by the MR lead of your site. The <Link href="/#quick-check" className="text-link">quick check</Link> needs none.</p>
     </DoorPage>
   );
 }
