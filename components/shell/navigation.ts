@@ -23,9 +23,13 @@ export function navigationFor(actor: Actor): NavigationItem[] {
   return MAIN.filter((entry) => mayAttempt(actor, entry.needs)).map(({ href, label }) => ({ href, label }));
 }
 
-/** Where a person lands: the first entry of their own navigation. */
+/** Where work begins, first that is theirs: who sees no bookings teaches, and comes to the bench only to fetch a scene. */
+const HOMES = ['/today', '/demonstrations', '/bench'] as const;
+
+/** Where a person lands. */
 export function homeFor(actor: Actor): string {
-  return navigationFor(actor)[0]?.href ?? '/';
+  const theirs = navigationFor(actor);
+  return HOMES.find((home) => theirs.some(({ href }) => href === home)) ?? theirs[0]?.href ?? '/';
 }
 
 /** Whether a page belongs to an entry: itself or anything below it. */

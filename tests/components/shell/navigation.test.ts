@@ -23,9 +23,9 @@ describe('navigation per role', () => {
     expect(homeFor(actor('lead'))).toBe('/today');
   });
 
-  it('an educator sees no bookings and lands on the bench', () => {
+  it('an educator sees no bookings and lands on demonstrations', () => {
     expect(labels('educator')).toEqual(['Bench', 'Demonstrations', 'Site']);
-    expect(homeFor(actor('educator'))).toBe('/bench');
+    expect(homeFor(actor('educator'))).toBe('/demonstrations');
   });
 
   it('several roles see the union, and none at all sees nothing', () => {
