@@ -10,15 +10,17 @@ export function NextBooking({ row, today }: { row: BookingRow; today: boolean })
       <WovenEdge />
       <div className="flex flex-wrap items-center justify-between gap-x-8 gap-y-4 border-x border-line px-5 py-5">
         <div className="flex flex-wrap items-center gap-x-6 gap-y-2">
-          <p className="figures text-3xl">{row.time}</p>
+          <p className="text-3xl">
+            {!today && <span className="block text-xl font-semibold">{row.day}</span>}
+            <span className="figures">{row.time}</span>
+          </p>
           <div>
             <h2 id="next-booking" className="text-lg">
-              <span className="sr-only">Next booking: </span>
+              <span className="sr-only">Next booking{today ? '' : `, ${row.day}`}: </span>
               <span className="figures">{row.accession}</span>
               <span className="font-normal"> · {row.region}</span>
             </h2>
             <p className="text-ink-soft">
-              {!today && `${row.day} · `}
               {row.protocol} · {row.scanner}
             </p>
           </div>

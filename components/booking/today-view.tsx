@@ -33,6 +33,7 @@ export function TodayView({
   return (
     <>
       {next && <NextBooking row={next} today={next.dayKey === today} />}
+      {todays.length > 0 && next?.dayKey !== today && <h2 className="mb-2 text-lg">Today: every slot is over</h2>}
       {todays.length > 0 ? (
         <BookingList rows={todays} label="Today’s bookings" />
       ) : (
