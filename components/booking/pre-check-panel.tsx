@@ -83,7 +83,13 @@ function Sequences({ check }: { check: PreCheckView }) {
 }
 
 /** What the last pre-check came to, why, and the one thing to do. */
-export function PreCheckPanel({ check, checkedAt, next }: { check: PreCheckView | null; checkedAt: string; next?: { label: string; href: string } }) {
+export function PreCheckPanel({ check, checkedAt, next, here }: {
+  check: PreCheckView | null;
+  checkedAt: string;
+  next?: { label: string; href: string };
+  /** The page's own address: what leads only here is somebody else's to do. */
+  here: string;
+}) {
   if (!check) {
     return <Panel title="Pre-check" aside={<ResultWords />}><p>The first check is on its way; it runs in the background. Look again shortly.</p></Panel>;
   }
@@ -91,7 +97,8 @@ export function PreCheckPanel({ check, checkedAt, next }: { check: PreCheckView 
     <Panel title="Pre-check" aside={<ResultWords result={check.result} stale={check.stale} />}>
       <div className="space-y-5">
         <Reasons findings={check.findings} />
-        {next && (
+        {next?.href === here && <p>A radiographer plans it. Sizes, another place, a note and a question to a lead can be seen to from here.</p>}
+        {next && next.href !== here && (
           <p className="flex flex-wrap items-center gap-3">
             <LinkButton href={next.href} variant="primary">{next.label}</LinkButton>
             {next.label !== check.next.text && <span className="text-ink-soft">{check.next.text}</span>}

@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { BookingFilter } from '@/components/booking/booking-filter';
-import { toBookingRow } from '@/components/booking/booking-row';
+import { toBookingRows } from '@/components/booking/booking-row';
 import { BookingTable } from '@/components/booking/booking-table';
 import { BookingViews } from '@/components/booking/booking-views';
 import { tableHref, tableQuery, type TableSearch } from '@/components/booking/table-query';
@@ -42,7 +42,7 @@ export default async function BookingsPage({ searchParams }: { searchParams: Pro
         <EmptyState title="No booking matches" action={add}>Choose other days or another filter above.</EmptyState>
       ) : (
         <BookingTable
-          rows={page.bookings.map(toBookingRow)}
+          rows={toBookingRows(page.bookings, mayAttempt(actor, 'plan.edit'))}
           search={search}
           may={{ check: mayAttempt(actor, 'booking.check'), propose: mayAttempt(actor, 'booking.propose'), export: mayAttempt(actor, 'booking.export') }}
           doers={{ recheck: recheckChosen, propose: proposeChosen }}

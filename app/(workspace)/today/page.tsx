@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { CoordinatorDay } from '@/components/booking/coordinator-day';
 import { TodayView } from '@/components/booking/today-view';
-import { toBookingRow } from '@/components/booking/booking-row';
+import { toBookingRows } from '@/components/booking/booking-row';
 import { LinkButton } from '@/components/ui/button';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { mayAttempt } from '@/lib/domain/access';
@@ -17,16 +17,17 @@ const DAYS_AHEAD = 7;
 
 export default async function TodayPage() {
   const now = new Date();
-  const { page, mayAdd, work } = await loadPage(async (context) => ({
+  const { page, mayAdd, plans, work } = await loadPage(async (context) => ({
     work: mayAttempt(context.actor, 'booking.propose') ? await getCoordinatorDay(context) : null,
     page: await listBookings(context, {
       from: dayKey(now),
       to: dayKey(addDays(now, DAYS_AHEAD)),
       limit: 200,
     }),
+    plans: mayAttempt(context.actor, 'plan.edit'),
     mayAdd: mayAttempt(context.actor, 'booking.create'),
   }));
-  const rows = page.bookings.map(toBookingRow);
+  const rows = toBookingRows(page.bookings, plans);
   return (
     <PageBody>
       <PageHeader
@@ -47,7 +48,7 @@ export default async function TodayPage() {
           {...work}
           from={dayKey(now)}
           to={dayKey(addDays(now, work.days - 1))}
-          escalated={work.escalated.map(toBookingRow)}
+          escalated={toBookingRows(work.escalated, plans)}
         />
       )}
       <TodayView rows={rows} today={dayKey(now)} now={now.toISOString()} mayAdd={mayAdd} />

@@ -22,6 +22,7 @@ export async function getBookingPage(context: ServiceContext, { bookingId }: { r
     move: await getOpenMove(context, { bookingId }),
     places: mayPropose ? await suggestPlaces(context, { bookingId }) : null,
     may: {
+      plan: mayAttempt(actor, 'plan.edit'),
       record: mayAttempt(actor, 'size-reading.record'),
       note: mayAttempt(actor, 'booking.note'),
       escalate: mayAttempt(actor, 'booking.escalate'),

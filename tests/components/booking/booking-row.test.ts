@@ -16,7 +16,7 @@ describe('the next step of a booking', () => {
     [{ verdict: 'no-fold-expected', planState: 'for use', planId: 'p1' }, 'Open the plan', '/plans/p1'],
     [{ verdict: 'no-fold-expected', planState: 'used', planId: 'p1' }, 'Open the plan', '/plans/p1'],
   ] as const)('%j: %s', (state, label, href) => {
-    expect(nextStep({ id, ...state })).toEqual({ label, href });
+    expect(nextStep({ id, ...state }, true)).toEqual({ label, href });
   });
 
   it('names the plan’s state in the words of plans', () => {
@@ -33,12 +33,25 @@ describe('what a check says to do', () => {
     ['propose', 'Propose Scanner B', '/bookings/3f0c#move'],
     ['escalate', 'Ask a lead to decide', '/bookings/3f0c#lead'],
   ] as const)('%s: %s', (kind, label, href) => {
-    expect(checkedStep({ id, result: 'escalate', next: { kind, text: label } })).toEqual({ label, href });
+    expect(checkedStep({ id, result: 'escalate', next: { kind, text: label } }, true)).toEqual({ label, href });
   });
 
   it('is nothing where nothing is to do, or nothing was checked', () => {
-    expect(checkedStep({ id, result: 'as-booked', next: { kind: 'none', text: 'Nothing to do' } })).toBeUndefined();
-    expect(checkedStep({ id })).toBeUndefined();
+    expect(checkedStep({ id, result: 'as-booked', next: { kind: 'none', text: 'Nothing to do' } }, true)).toBeUndefined();
+    expect(checkedStep({ id }, true)).toBeUndefined();
+  });
+});
+
+describe('for who does not plan', () => {
+  const booking = { label: 'Open the booking', href: '/bookings/3f0c' };
+  it('planning is nobody’s next step, the rest is the same', () => {
+    expect(nextStep({ id, verdict: 'fold-in-keep-clear' }, false)).toEqual(booking);
+    expect(nextStep({ id, verdict: 'fold-in-keep-clear', planState: 'draft', planId: 'p1' }, false)).toEqual(booking);
+    for (const kind of ['plan', 'finish-plan'] as const) expect(checkedStep({ id, result: 'plan-needed', next: { kind, text: 'x' } }, false)).toEqual(booking);
+    for (const kind of ['ask-sizes', 'propose', 'escalate'] as const) {
+      const asked = { id, result: 'escalate', next: { kind, text: 'x' } } as const;
+      expect(checkedStep(asked, false)).toEqual(checkedStep(asked, true));
+    }
   });
 });
 

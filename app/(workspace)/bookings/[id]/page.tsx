@@ -6,25 +6,26 @@ import { HistoryPanel } from '@/components/booking/history-panel';
 import { LeadPanel } from '@/components/booking/lead-panel';
 import { MovePanel } from '@/components/booking/move-panel';
 import { PreCheckPanel } from '@/components/booking/pre-check-panel';
-import { ReadingForm } from '@/components/booking/reading-form';
-import { SizeRecord } from '@/components/booking/size-record';
 import { SurgeryForm } from '@/components/booking/surgery-form';
 import { LinkButton } from '@/components/ui/button';
 import { PageBody, PageHeader } from '@/components/ui/page';
 import { loadPage } from '@/lib/http/load-page';
 import { dayKey, formatMoment } from '@/lib/presentation/moment';
 import { getBookingPage } from '@/lib/services/pre-check/get-booking-page';
-import { addReadings, askLead, decideAsLead, noteBooking, proposePlace, setSurgery, withdrawPlace } from '../actions';
+import { askLead, decideAsLead, noteBooking, proposePlace, setSurgery, withdrawPlace } from '../actions';
 import { PlanLife } from './plan-life';
-import { SizeRequests } from './size-requests';
+import { Sizes } from './sizes';
 
 export const metadata: Metadata = { title: 'Booking' };
 
 export default async function BookingPage({ params }: { params: Promise<{ id: string }> }) {
   const { id } = await params;
   const { booking, record, check, history, may, places, move } = await loadPage((context) => getBookingPage(context, { bookingId: id }));
-  const row = toBookingRow(booking);
+  const row = toBookingRow(booking, may.plan);
   const today = dayKey(new Date());
+  const asksSizes = check?.next.kind === 'ask-sizes' || check?.next.kind === 'measure';
+  // What the check asks for comes right below it.
+  const sizes = <Sizes bookingId={id} record={record} today={today} mayRecord={may.record} asked={asksSizes} />;
   return (
     <PageBody>
       <PageHeader
@@ -47,15 +48,11 @@ export default async function BookingPage({ params }: { params: Promise<{ id: st
           <HistoryPanel lines={shownLines(history)} addNote={may.note ? noteBooking.bind(null, id) : undefined} />
         </div>
         <div className="space-y-6">
-          <PreCheckPanel check={check} checkedAt={check ? formatMoment(new Date(check.checkedAt)) : ''} next={checkedStep(booking)} />
+          <PreCheckPanel check={check} checkedAt={check ? formatMoment(new Date(check.checkedAt)) : ''} next={checkedStep(booking, may.plan)} here={`/bookings/${id}`} />
+          {asksSizes && sizes}
           {places && <MovePanel slotMinutes={places.slotMinutes} scanners={scannerPlaces(places)} open={openMove(move)} propose={proposePlace.bind(null, id)} withdraw={withdrawPlace.bind(null, id)} />}
           <PlanLife booking={booking} />
-          <section id="sizes" aria-labelledby="sizes-title" className="space-y-4">
-            <h2 id="sizes-title" className="text-xl">Size record</h2>
-            <SizeRecord record={record} />
-            {may.record && <ReadingForm today={today} add={addReadings.bind(null, id)} />}
-          </section>
-          <SizeRequests bookingId={id} />
+          {!asksSizes && sizes}
         </div>
       </div>
     </PageBody>
