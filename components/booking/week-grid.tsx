@@ -31,6 +31,7 @@ function Cell({ cell }: { cell: WeekCell }) {
         <br />
         {cell.sessionMinutes === undefined ? 'room unknown' : <Figure value={Math.max(0, cell.sessionMinutes - cell.minutesBooked)} unit={`min left of ${cell.sessionMinutes}`} />}
         {cell.changed > 0 && <><br />{cell.changed} changed since yesterday</>}
+        {cell.added > 0 && <><br />{cell.added} new since yesterday</>}
       </p>
     </div>
   );

@@ -54,6 +54,7 @@ export interface WeekCell {
   /** Minutes of sessions; absent: room unknown. */
   readonly sessionMinutes?: number;
   readonly changed: number;
+  readonly added: number;
 }
 
 export interface WeekChange {
@@ -69,5 +70,8 @@ export interface WeekView {
   readonly days: readonly string[];
   readonly scanners: readonly { readonly id: string; readonly name: string }[];
   readonly cells: readonly WeekCell[];
+  /** Whose result is another one than a day ago, and what came since; the first ones of each, all of them counted. */
   readonly changes: readonly WeekChange[];
+  readonly added: readonly WeekChange[];
+  readonly changeCounts: { readonly changed: number; readonly added: number };
 }

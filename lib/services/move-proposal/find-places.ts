@@ -11,10 +11,23 @@ const DAY_MS = 86_400_000;
 const DAYS_BEFORE = 3;
 const DAYS_AFTER = 14;
 const PLACES = 6;
+/**
+ * How soon a place is offered: a full hour at least two hours away. Someone must change the booking, reach the patient
+ * and have them come and change; common practice, no source. A sooner place can still be typed, for who is here already.
+ */
+const NOTICE_MS = 2 * 3_600_000;
 
-/** The span in which another place is looked for: never before now. */
+function soonestOffered(now: Date): Date {
+  const soonest = new Date(now.getTime() + NOTICE_MS);
+  const onTheHour = soonest.getMinutes() + soonest.getSeconds() + soonest.getMilliseconds() === 0;
+  // The site's clock: a zone may lie a half hour off.
+  soonest.setHours(soonest.getHours() + (onTheHour ? 0 : 1), 0, 0, 0);
+  return soonest;
+}
+
+/** The span in which another place is looked for: never before the soonest that can be kept. */
 export function searchSpan(scheduledAt: Date, now: Date): { readonly from: Date; readonly before: Date } {
-  const from = new Date(Math.max(now.getTime(), scheduledAt.getTime() - DAYS_BEFORE * DAY_MS));
+  const from = new Date(Math.max(soonestOffered(now).getTime(), scheduledAt.getTime() - DAYS_BEFORE * DAY_MS));
   return { from, before: new Date(Math.max(from.getTime(), scheduledAt.getTime()) + DAYS_AFTER * DAY_MS) };
 }
 

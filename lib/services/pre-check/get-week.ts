@@ -13,7 +13,8 @@ const DAYS = 7;
 const DAY_MS = 86_400_000;
 const MOST_CHANGES = 100;
 
-const changedSince = ({ before, result, isNew }: WeekBooking): boolean => isNew || (before !== null && before !== result);
+const changedSince = ({ before, result }: WeekBooking): boolean => before !== null && before !== result;
+const addedSince = ({ before, isNew }: WeekBooking): boolean => isNew && before === null;
 
 function cellOf(day: string, scanner: { readonly id: string; readonly name: string }, bookings: readonly WeekBooking[], sessions: readonly SessionRecord[]): WeekCell {
   const results = Object.fromEntries([...PRE_CHECK_RESULTS, 'unchecked' as const].map((result) => [
@@ -31,6 +32,7 @@ function cellOf(day: string, scanner: { readonly id: string; readonly name: stri
       sessionMinutes: sessions.reduce((sum, { startsAt, endsAt }) => sum + (endsAt.getTime() - startsAt.getTime()) / 60_000, 0),
     }),
     changed: bookings.filter(changedSince).length,
+    added: bookings.filter(addedSince).length,
   };
 }
 
@@ -56,11 +58,12 @@ export async function getWeek(context: ServiceContext, input: { readonly from: s
       bookings.filter((one) => one.scannerId === scanner.id && localDay(one.scheduledAt) === day),
       sessions.filter((one) => one.scannerId === scanner.id && localDay(one.startsAt) === day),
     )));
-    const changes = bookings.filter(changedSince).slice(0, MOST_CHANGES).map((one) => ({
+    const shown = (some: readonly WeekBooking[]) => some.slice(0, MOST_CHANGES).map((one) => ({
       bookingId: one.id, accession: one.accession, scheduledAt: one.scheduledAt.toISOString(),
       scannerName: scanners.find(({ id }) => id === one.scannerId)?.name ?? '',
       before: one.before, result: one.result,
     }));
-    return { days, scanners, cells, changes };
+    const [changed, added] = [bookings.filter(changedSince), bookings.filter(addedSince)];
+    return { days, scanners, cells, changes: shown(changed), added: shown(added), changeCounts: { changed: changed.length, added: added.length } };
   });
 }

@@ -107,6 +107,21 @@ describe('moves', () => {
     expect(session).toMatchObject({ minutes: 120, minutesFree: 120 - before.slotMinutes });
   });
 
+  it('are not offered within two hours nor off the hour first, and a sooner one can still be typed', async () => {
+    const { here, other } = await moving();
+    const now = new Date('2026-05-05T12:07:00Z');
+    await addSessions(as(here.coordinator), { scannerId: other.id, sessions: [{ startsAt: noon, endsAt: '2026-05-05T20:00:00Z' }, { startsAt: '2026-05-06T08:00:00Z', endsAt: '2026-05-06T12:00:00Z' }] });
+    const asked = async (at: Date) => {
+      const found = await suggestPlaces({ actor: here.coordinator, now: at }, { bookingId: here.booking.id });
+      return { starts: found.scanners.find(({ scannerId }) => scannerId === other.id)!.starts, slotMinutes: found.slotMinutes };
+    };
+    const { starts, slotMinutes } = await asked(now);
+    expect(starts).toEqual(['2026-05-05T15:00:00.000Z', '2026-05-06T08:00:00.000Z']);
+    expect((await asked(new Date(noon))).starts![0]).toBe('2026-05-05T14:00:00.000Z');
+    const soon = '2026-05-05T12:15:00.000Z';
+    expect(await proposeMove({ actor: here.coordinator, now }, { bookingId: here.booking.id, scannerId: other.id, scheduledAt: soon, slotMinutes })).toMatchObject({ proposed: { scheduledAt: soon } });
+  });
+
   it('are a task until the API says the same, and are shown side by side while it says something else', async () => {
     const { here, other } = await moving();
     const place = { scannerId: other.id, scheduledAt: noon, slotMinutes: 45 };
@@ -235,6 +250,9 @@ describe('the week', () => {
     expect(cell).toMatchObject({ bookings: 1, minutesBooked: 40, minutesUnknown: 0 });
     expect(cell.sessionMinutes).toBeUndefined();
     expect(early.days).toHaveLength(7);
+    // What came today has no result of yesterday to differ from.
+    expect(early).toMatchObject({ changes: [], added: [{ accession: 'AB-1234', before: null }], changeCounts: { added: 1, changed: 0 } });
+    expect(cell).toMatchObject({ added: 1, changed: 0 });
     const result = (await getBooking(as(here.coordinator), { id: here.booking.id })).result!;
     expect(cell.results[result]).toBe(1);
 
@@ -243,6 +261,7 @@ describe('the week', () => {
     await run(here, later);
     const week = await getWeek({ actor: here.coordinator, now: new Date(later.getTime() + 1000) }, { from: '2026-05-04' });
     expect(week.changes).toMatchObject([{ accession: 'AB-1234', before: result, result: 'escalate' }]);
+    expect(week).toMatchObject({ added: [], changeCounts: { added: 0, changed: 1 } });
   });
 });
 
