@@ -82,7 +82,7 @@ async function firstLoadScripts(browser: Browser, address: string): Promise<numb
 async function makeLink(page: Page, address: string): Promise<string> {
   await page.goto(address);
   await page.getByRole('button', { name: 'Make a link' }).click();
-  return page.locator('[data-share-address]').innerText();
+  return page.getByLabel('Link to the demonstration').inputValue();
 }
 
 async function educator(context: BrowserContext, dataDir: string, address: string): Promise<Page> {

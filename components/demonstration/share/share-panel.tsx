@@ -4,6 +4,7 @@ import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { ActionButton } from '@/components/ui/action-button';
 import { Button } from '@/components/ui/button';
+import { CopyOnce } from '@/components/ui/copy-once';
 import { FormProblem } from '@/components/ui/form-problem';
 import { Notice } from '@/components/ui/notice';
 import { Select } from '@/components/ui/select';
@@ -46,10 +47,12 @@ export function SharePanel({ id, shares, actions }: { id: string; shares: readon
       </div>
       <FormProblem problem={problem} />
       {made && (
-        <Notice tone="done" live title="The link is made. It is shown this once.">
-          <p className="figures text-sm break-all" data-share-address>{made.address}</p>
-          <p className="text-sm">Works until {formatDate(new Date(made.expiresAt))}.</p>
-        </Notice>
+        <>
+          <Notice tone="done" live title="The link is made. It is shown this once.">
+            Works until {formatDate(new Date(made.expiresAt))}.
+          </Notice>
+          <CopyOnce key={made.address} label="Link to the demonstration" button="Copy the link" value={made.address} />
+        </>
       )}
       {shares.length > 0 && (
         <ul className="divide-y divide-line border-y border-line">
