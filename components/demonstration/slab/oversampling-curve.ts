@@ -48,7 +48,10 @@ export function curveScene(points: readonly CurvePoint[], acquiredPartitions: nu
     const next = points[i + 1];
     return next ? [[x, y], [place(next)[0], y]] : [[x, y]];
   });
+  const countWords = ({ contaminated, oversamplingPct }: CurvePoint) => `${contaminated} ${contaminated === 1 ? 'partition' : 'partitions'} at ${Math.round(oversamplingPct * 10) / 10} %`;
   const here = points.find((point) => point.acquiredPartitions === acquiredPartitions);
+  // The curve falls to the right, so words beside a point are free of it there; near the end they stand to its left.
+  const beside = here && place(here)[0] > WIDTH / 2 ? -1 : 1;
   const label = (name: string, text: string, at: ScreenPoint, offsetPx: ScreenPoint, anchor: 'start' | 'middle' | 'end', colour: 'ink' | 'ink-soft' = 'ink-soft'): SceneNode => ({
     kind: 'text', name, text, at, offsetPx, anchor, size: 'note', colour,
   });
@@ -65,7 +68,7 @@ export function curveScene(points: readonly CurvePoint[], acquiredPartitions: nu
       ...(here
         ? [
             { kind: 'lines', name: 'here/drop', lines: [[place(here), [place(here)[0], 0]]], stroke: { colour: 'indigo', widthPx: 1.25, edge: 'dotted' } } as const,
-            label('here/count', `${here.contaminated} at ${Math.round(here.oversamplingPct * 10) / 10} %`, place(here), [8, -8], 'start', 'ink'),
+            label('here/count', countWords(here), place(here), [8 * beside, -8], beside === 1 ? 'start' : 'end', 'ink'),
             { kind: 'marker', name: 'here', at: place(here), shape: 'dot', colour: 'indigo' } as const,
           ]
         : []),

@@ -31,7 +31,8 @@ const wrapped = (question: Case): number => assess(question).slab?.contaminated 
 /** The slab in five steps; every count in a note is the engine's for the scene it stands beside. */
 export function slabScenes(): readonly SceneDocument[] {
   const before = slabCase();
-  const some = moved(before, 'slice-oversampling', 12);
+  // 54 partitions instead of 48: what is named is what whole partitions come to.
+  const some = moved(before, 'slice-oversampling', 12.5);
   const slab = assess(before).slab;
   const partitions = before.prescription.slices.mode === 'slab' ? before.prescription.slices.partitions : 1;
   const enoughPartitions = slab?.smallestCleanPartitions;
@@ -48,7 +49,7 @@ export function slabScenes(): readonly SceneDocument[] {
       note: `The pulse does not end where the slab ends. What it excites beyond one end is sampled as if it lay at the other: ${wrapped(before)} partitions hold it.`,
       question: before, sliceOffsetMm: -94,
     }),
-    scene({ title: '12 % slice oversampling', note: `${wrapped(some)} partitions are left with it, at both ends.`, question: some }),
+    scene({ title: '12.5 % slice oversampling', note: `${wrapped(some)} partitions are left with it, at both ends.`, question: some }),
     scene({
       title: 'Enough slice oversampling',
       note: `${enoughPartitions ?? 'No number of'} acquired partitions leave the keep-clear area free; time grows with them.`,
