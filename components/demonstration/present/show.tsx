@@ -58,7 +58,7 @@ export function Show({ title, scenes, index, onGo, children, large = false }: Sh
           {children}
         </div>
       </header>
-      <h1 className={cx('text-pretty', large ? 'text-3xl sm:text-4xl' : 'text-2xl')} aria-live="polite" data-scene={index + 1}>{scene.title}</h1>
+      <h1 className={cx('mt-4 text-pretty sm:mt-2', large ? 'text-3xl sm:text-4xl' : 'text-2xl')} aria-live="polite" data-scene={index + 1}>{scene.title}</h1>
       <SceneStage scene={scene} onSlice={setSlice} large={large} className="mt-2 flex-1">{!large && controls}</SceneStage>
       {large && (open || moved) && controls}
     </div>
