@@ -32,6 +32,19 @@ export default async function AccountPage({ searchParams }: { searchParams: Prom
           </dl>
           <p className="mt-3 text-sm text-ink-soft">A lead of your site can change them.</p>
         </Panel>
+        <Panel title="Signing out">
+          <dl className="space-y-2">
+            <div>
+              <dt className="font-semibold">Sign out</dt>
+              <dd className="text-ink-soft">This browser forgets that you are signed in. Other devices stay signed in, each for up to 12 hours.</dd>
+            </div>
+            <div>
+              <dt className="font-semibold">Sign out everywhere</dt>
+              <dd className="text-ink-soft">Every session ends at once, here and on all other devices. Use it when a device is lost, or someone may have copied a session.</dd>
+            </div>
+          </dl>
+          <p className="mt-3 text-sm text-ink-soft">Both are in the menu under your name.</p>
+        </Panel>
         <Panel title="Password">
           <ChangePasswordForm email={account.email} changePassword={changePasswordAction} />
         </Panel>
