@@ -15,7 +15,7 @@ import { getProtocol } from '@/lib/services/protocol/get-protocol';
 import { listProtocols } from '@/lib/services/protocol/list-protocols';
 import { listScanners } from '@/lib/services/scanner/list-scanners';
 
-import { addSceneAction } from '../demonstrations/actions';
+import { addSceneAction, createDemonstrationAction } from '../demonstrations/actions';
 
 export const metadata: Metadata = { title: 'Bench' };
 
@@ -59,7 +59,7 @@ export default async function FreeBenchPage({ searchParams }: { searchParams: Pr
         scannerId={scanner.id}
         protocolId={protocol.id}
       />
-      {teaches && <AddToDemonstration demonstrations={teaches} add={addSceneAction} />}
+      {teaches && <AddToDemonstration demonstrations={teaches} add={addSceneAction} begin={createDemonstrationAction} />}
     </Bench>
   );
 }

@@ -8,7 +8,7 @@ import { Form, FormText } from '@/components/ui/form';
 import { FormProblem } from '@/components/ui/form-problem';
 import { useFormAction } from '@/components/ui/use-form-action';
 import type { ActionResult } from '@/lib/schemas/action-result';
-import { type CreateDemonstrationInput, createDemonstrationInput } from '@/lib/schemas/demonstration';
+import { type CreateDemonstrationInput, type NewDemonstrationForm, newDemonstrationForm } from '@/lib/schemas/demonstration';
 
 export type CreateAction = (input: CreateDemonstrationInput) => Promise<ActionResult<{ id: string }>>;
 
@@ -16,7 +16,7 @@ export type CreateAction = (input: CreateDemonstrationInput) => Promise<ActionRe
 export function NewDemonstration({ create }: { create: CreateAction }) {
   const router = useRouter();
   // No default for the title: it would wipe what was typed before the script had loaded.
-  const form = useForm<CreateDemonstrationInput>({ resolver: zodResolver(createDemonstrationInput) });
+  const form = useForm<NewDemonstrationForm>({ resolver: zodResolver(newDemonstrationForm) });
   const { submit, problem } = useFormAction(form, create, ({ id }) => router.push(`/demonstrations/${id}`));
   return (
     <Form form={form} onSubmit={submit} label="Make a demonstration" className="flex flex-wrap items-end gap-3">

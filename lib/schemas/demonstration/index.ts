@@ -34,11 +34,20 @@ export const sceneSchema = strict({ id: idSchema, ...sceneShape }, 'One scene wi
 
 const scenes = z.array(sceneSchema).max(SCENES_MAX, { error: refused(`0 to ${SCENES_MAX} scenes`) });
 
+/** What is typed for an empty one. */
+export const newDemonstrationForm = strict({ title: demonstrationTitle });
+export type NewDemonstrationForm = z.input<typeof newDemonstrationForm>;
+
 export const createDemonstrationInput = strict({
   title: demonstrationTitle,
   setPiece: z.string({ error: refused('the key of a set piece') }).max(60).describe('Set piece to copy; left out: begin empty.').optional(),
-});
-export type CreateDemonstrationInput = z.input<typeof createDemonstrationInput>;
+  scene: sceneDocumentSchema.describe('First scene, taken from the bench.').optional(),
+}).refine(({ setPiece, scene }) => setPiece === undefined || scene === undefined, { error: 'a set piece and a scene given; allowed: one of them' });
+export interface CreateDemonstrationInput {
+  readonly title: string;
+  readonly setPiece?: string;
+  readonly scene?: SceneDocument;
+}
 
 /** The whole demonstration as it is edited: what is not in the list any more is taken out. */
 export const saveDemonstrationInput = strict({

@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { inTransaction } from '@/db/client';
 import { insertDemonstration, putScene } from '@/db/queries/demonstration/demonstrations';
 import { authorise } from '@/lib/domain/access';
+import { captureCase } from '@/lib/domain/demonstration/capture';
 import type { SceneDocument } from '@/lib/domain/demonstration/scene';
 import { findSetPiece } from '@/lib/domain/demonstration/set-pieces';
 import { invalidField, ServiceError } from '@/lib/domain/errors';
@@ -33,11 +34,12 @@ export async function storeDemonstration(
   });
 }
 
-/** An empty demonstration, or a copy of a set piece. */
+/** An empty demonstration, one that begins with a scene from the bench, or a copy of a set piece. What could be one person's is taken out of the scene. */
 export async function createDemonstration(context: ServiceContext, input: CreateDemonstrationInput): Promise<{ id: string }> {
   authorise(context.actor, 'demonstration.edit');
-  const { title, setPiece } = parseInput(createDemonstrationInput, input);
+  const { title, setPiece, scene } = parseInput(createDemonstrationInput, input);
   const piece = setPiece === undefined ? undefined : findSetPiece(setPiece);
   if (setPiece !== undefined && !piece) throw invalidField('setPiece', `“${setPiece}” given; allowed: a set piece of the list`);
-  return storeDemonstration(context, title, piece?.scenes() ?? []);
+  const first = scene ? [{ ...scene, question: captureCase(scene.question) }] : [];
+  return storeDemonstration(context, title, piece?.scenes() ?? first);
 }

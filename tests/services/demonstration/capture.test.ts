@@ -24,8 +24,14 @@ describe('a scene captured from a booking’s bench', () => {
     const lead = await here.site.person('lead');
     const { id } = await createDemonstration(as(lead), { title: 'From a booking' });
     const scene = findSetPiece('axial-fold')!.scenes()[0]!;
-    await addScene(as(lead), { demonstrationId: id, scene: { ...scene, controls: [], question } });
-    const stored = await here.site.withApp((trx) => trx.selectFrom('scene').selectAll().where('demonstration_id', '=', id).executeTakeFirstOrThrow());
+    const captured = { ...scene, controls: [], question };
+    await addScene(as(lead), { demonstrationId: id, scene: captured });
+    const storedOf = (demonstrationId: string) => here.site.withApp((trx) => trx.selectFrom('scene').selectAll().where('demonstration_id', '=', demonstrationId).execute());
+    const [stored] = await storedOf(id);
+    // One made with it as its first scene holds the very same.
+    const begun = await storedOf((await createDemonstration(as(lead), { title: 'Begun on the bench', scene: captured })).id);
+    expect(begun.map(({ data, position }) => ({ data, position }))).toEqual([{ data: stored!.data, position: 0 }]);
+    await expect(createDemonstration(as(lead), { title: 'Both', setPiece: 'axial-fold', scene: captured })).rejects.toMatchObject({ code: 'invalid' });
     const text = JSON.stringify(stored);
     const { accession } = view.booking;
     const taken = Object.values(question.patient.extents).flatMap(({ takenOn }) => takenOn ?? []);
@@ -33,7 +39,7 @@ describe('a scene captured from a booking’s bench', () => {
     for (const trace of [accession, here.booking.id, view.scanner.scanner.name, view.protocol.name, question.prescription.name, ...taken, 'takenOn', 'measured', 'localiser', 'label']) {
       expect(text, trace).not.toContain(trace);
     }
-    const { patient, keepClear } = (stored.data as unknown as { question: Case }).question;
+    const { patient, keepClear } = (stored!.data as unknown as { question: Case }).question;
     const sizes = [...Object.values(patient.extents).map(({ value }) => value), patient.lateralOffsetMm, patient.isocentreZMm, ...numbersIn(keepClear.area)];
     expect(sizes.filter((size) => size % 5 !== 0)).toEqual([]);
   });
@@ -69,7 +75,7 @@ describe('a warning before a text is stored', () => {
     ['a@b.example', 'an e-mail address'], ['Mrs Example', 'a person’s name'], ['aged 54', 'a birth date or age'],
   ])('%s looks like %s', (text, sign) => expect(personalSigns(text)).toContain(sign));
 
-  it.each(['12 % slice oversampling', 'T1 3D gradient echo, TR 4', 'FOV 300 mm', 'W = 1.25 × F', 'Swap 300/256'])('“%s” looks like nobody', (text) =>
+  it.each(['12.5 % slice oversampling', 'T1 3D gradient echo, TR 4', 'FOV 300 mm', 'W = 1.25 × F', 'Swap 300/256'])('“%s” looks like nobody', (text) =>
     expect(personalSigns(text)).toEqual([]));
 
   it('knows the reference of the booking it stands on, however it is typed', () => {

@@ -11,7 +11,7 @@ import { loadPage } from '@/lib/http/load-page';
 import { dayKey } from '@/lib/presentation/moment';
 import { openBench } from '@/lib/services/booking/open-bench';
 import { listDemonstrations } from '@/lib/services/demonstration/list-demonstrations';
-import { addSceneAction } from '../../demonstrations/actions';
+import { addSceneAction, createDemonstrationAction } from '../../demonstrations/actions';
 
 export const metadata: Metadata = { title: 'Bench' };
 
@@ -45,7 +45,7 @@ export default async function BookingBenchPage({ params }: { params: Promise<{ b
       protocolPrescriptions={prescriptionsOf(view.protocol, view.scanner.scanner)}
     >
       {heading}
-      {teaches && <AddToDemonstration demonstrations={teaches} add={addSceneAction} reference={view.booking.accession} />}
+      {teaches && <AddToDemonstration demonstrations={teaches} add={addSceneAction} begin={createDemonstrationAction} reference={view.booking.accession} />}
     </Bench>
   );
 }
