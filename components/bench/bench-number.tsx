@@ -1,6 +1,6 @@
 'use client';
 
-import { useRef } from 'react';
+import { memo, useRef } from 'react';
 import { Controller, useFormContext } from 'react-hook-form';
 import type * as z from 'zod';
 import { cx } from '@/components/ui/class-names';
@@ -84,8 +84,8 @@ export interface BenchNumberProps extends Shown {
   readonly schema: z.ZodType;
 }
 
-/** The same, bound to the form by name and judged by the schema that the route uses. */
-export function BenchNumber({ path, schema, step, ...shown }: BenchNumberProps) {
+/** The same, bound to the form by name and judged by the schema that the route uses; its own field renders it, not the form. */
+export const BenchNumber = memo(function BenchNumber({ path, schema, step, ...shown }: BenchNumberProps) {
   const facts = numberFacts(schema);
   const { control } = useFormContext();
   const commit = useCommit();
@@ -112,4 +112,4 @@ export function BenchNumber({ path, schema, step, ...shown }: BenchNumberProps) 
       )}
     />
   );
-}
+});

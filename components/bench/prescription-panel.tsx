@@ -1,12 +1,13 @@
 'use client';
 
-import { useCallback, useDeferredValue, useState } from 'react';
+import { memo, useCallback, useDeferredValue, useMemo, useState, type ComponentType } from 'react';
 import { prescriptionSchema } from '@/lib/schemas/case/prescription';
 import type { Prescription, SequenceFamily } from '@/lib/physics/model/prescription';
 import { useBench, useBenchState } from './bench-context';
 import { BenchForm, withLeaf } from './bench-form';
 import { AccelerationGroup } from './prescription/acceleration-group';
 import { FromProtocol } from './prescription/from-protocol';
+import type { GroupProps } from './prescription/group';
 import { OversamplingGroup } from './prescription/oversampling-group';
 import { PresaturationGroup } from './prescription/presaturation-group';
 import { ReceiveGroup } from './prescription/receive-group';
@@ -17,7 +18,19 @@ import { sequenceById } from './state/bench-document';
 import type { BenchState } from './state/bench-state';
 import { FAMILIES_3D } from './state/prescription-edit';
 
-export type GroupKey = 'window' | 'oversampling' | 'slices' | 'timing' | 'acceleration' | 'presaturation' | 'receive';
+/** In the order they stand in. Rendered again only for another prescription, or to open or close: a drag moves few fields. */
+const GROUPS = {
+  oversampling: memo(OversamplingGroup),
+  window: memo(WindowGroup),
+  slices: memo(SlicesGroup),
+  timing: memo(TimingGroup),
+  acceleration: memo(AccelerationGroup),
+  presaturation: memo(PresaturationGroup),
+  receive: memo(ReceiveGroup),
+} satisfies Record<string, ComponentType<GroupProps>>;
+export type GroupKey = keyof typeof GROUPS;
+const GROUP_KEYS = Object.keys(GROUPS) as GroupKey[];
+const Source = memo(FromProtocol);
 
 /** What the protocol has on this scanner, by sequence. */
 export type ProtocolPrescriptions = Readonly<Record<string, Prescription>>;
@@ -50,24 +63,21 @@ function SequenceForm({ id, source, protocol }: { id: string; source: string; pr
     const head = path.split('.')[0] as keyof Prescription;
     store.dispatch({ type: 'edit-prescription', patch: { [head]: after[head] }, ...(step === undefined ? {} : { step }) });
   };
-  const group = (key: GroupKey) => ({
-    prescription,
-    open: open === key,
-    onOpenChange: (next: boolean) => setChosen({ family: prescription.family, key: next ? key : null }),
-  });
+  const { family } = prescription;
+  const groups = useMemo(
+    () => GROUP_KEYS.map((key) => ({ key, choose: (next: boolean) => setChosen({ family, key: next ? key : null }) })),
+    [family],
+  );
   return (
     <BenchForm schema={prescriptionSchema} select={select} label={`Prescription, ${prescription.name}`} onEdit={onEdit}>
       <div className="flex items-baseline justify-between gap-4 px-4 pt-3 pb-1">
         <h2 className="text-sm font-semibold tracking-wider text-ink-soft uppercase">Prescription</h2>
-        <FromProtocol source={source} protocol={protocol} prescription={prescription} />
+        <Source source={source} protocol={protocol} prescription={prescription} />
       </div>
-      <OversamplingGroup {...group('oversampling')} />
-      <WindowGroup {...group('window')} />
-      <SlicesGroup {...group('slices')} />
-      <TimingGroup {...group('timing')} />
-      <AccelerationGroup {...group('acceleration')} />
-      <PresaturationGroup {...group('presaturation')} />
-      <ReceiveGroup {...group('receive')} />
+      {groups.map(({ key, choose }) => {
+        const Group = GROUPS[key];
+        return <Group key={key} prescription={prescription} open={open === key} onOpenChange={choose} />;
+      })}
     </BenchForm>
   );
 }

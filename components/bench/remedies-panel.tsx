@@ -8,7 +8,7 @@ import type { Ranking, Remedy } from '@/lib/physics/model/remedy';
 import { useActiveResult, useActiveSequence, useBenchState } from './bench-context';
 import { listedFirst } from './compare/compare-points';
 import { CompareRemedies } from './compare/compare-remedies';
-import { presentRanking } from './live/results';
+import { presentRanking, type Ranked } from './live/results';
 import { NotPossible } from './not-possible';
 import { RemedyCard } from './remedy-card';
 import { useToggleTrial } from './use-toggle-trial';
@@ -19,7 +19,7 @@ export function RemediesPanel() {
   const { id } = useActiveSequence();
   const present = presentRanking(result);
   // While a handle is dragged rankings follow one another: the list waits for the picture, never the other way round.
-  const ranking = useDeferredValue(present ?? result.ranked?.ranking);
+  const ranked = useDeferredValue(result.ranked);
   return (
     <section aria-labelledby="remedies-title" className="flex min-h-0 flex-1 flex-col">
       <div className="flex items-baseline justify-between gap-4 border-b border-line px-4 py-2.5">
@@ -31,9 +31,9 @@ export function RemediesPanel() {
       <div className="relative min-h-0 flex-1 overflow-y-auto">
         {result.refusal ? (
           <p className="px-4 py-3 text-ink-soft">Remedies follow as soon as every value is allowed.</p>
-        ) : ranking ? (
+        ) : ranked ? (
           <div aria-busy={!present}>
-            <RankedList key={id} ranking={ranking} />
+            <RankedList key={id} ranked={ranked} />
           </div>
         ) : (
           <p className="px-4 py-3 text-ink-soft">Working out the remedies.</p>
@@ -43,7 +43,7 @@ export function RemediesPanel() {
   );
 }
 
-const RankedList = memo(function RankedList({ ranking }: { ranking: Ranking }) {
+const RankedList = memo(function RankedList({ ranked: { ranking, question } }: { ranked: Ranked }) {
   const [showAll, setShowAll] = useState(false);
   const [keepHold, setKeepHold] = useState(false);
   const [keepVoxel, setKeepVoxel] = useState(false);
@@ -73,6 +73,7 @@ const RankedList = memo(function RankedList({ ranking }: { ranking: Ranking }) {
             key={remedy.key}
             remedy={remedy}
             now={now}
+            present={question.prescription}
             tried={remedy.key === triedKey}
             linked={showAll && remedy.key === linkedKey}
             onLink={showAll ? setLinkedKey : undefined}

@@ -5,12 +5,13 @@ import { cx } from '@/components/ui/class-names';
 import { Figure } from '@/components/ui/figure';
 import { useStatus } from '@/components/ui/status';
 import type { Assessment } from '@/lib/physics/model/assessment';
+import type { Prescription } from '@/lib/physics/model/prescription';
 import type { Remedy } from '@/lib/physics/model/remedy';
 import { foldFigure, scanTimeFigure, voxelChange } from '@/lib/presentation/assessment-figures';
 import { costBreakdown, formatCost } from '@/lib/presentation/cost-words';
 import { formatSignedPercent } from '@/lib/presentation/percent';
 import { remedyChange, remedyTitle } from '@/lib/presentation/remedy-words';
-import { useActiveSequence, useBench } from './bench-context';
+import { useBench } from './bench-context';
 import { CostBar } from './cost-bar';
 import { isPresentRemedy, useToggleTrial } from './use-toggle-trial';
 import { VerdictWords } from './verdict-words';
@@ -18,6 +19,8 @@ import { VerdictWords } from './verdict-words';
 export interface RemedyCardProps {
   readonly remedy: Remedy;
   readonly now: Assessment;
+  /** What the remedy changes. */
+  readonly present: Prescription;
   readonly tried: boolean;
   /** Tenths of a point that fill the bar. */
   readonly scale: number;
@@ -26,16 +29,15 @@ export interface RemedyCardProps {
   readonly onLink?: (key: string | null) => void;
 }
 
-export function RemedyCard({ remedy, now, tried, scale, linked = false, onLink }: RemedyCardProps) {
+export function RemedyCard({ remedy, now, present, tried, scale, linked = false, onLink }: RemedyCardProps) {
   const { store, live } = useBench();
   const { say } = useStatus();
   const toggleTrial = useToggleTrial();
-  const { id, prescription: present } = useActiveSequence();
   const title = remedyTitle(remedy);
   const after = remedy.assessment;
   const voxel = voxelChange(now, after);
   const adopt = () => {
-    if (!isPresentRemedy(live, id, remedy)) return;
+    if (!isPresentRemedy(live, store.read().activeId, remedy)) return;
     store.dispatch({ type: 'adopt', remedy });
     say(`Adopted: ${title}. Undo takes it back.`);
     // The pressed button goes with its card; whoever works by keyboard stays in this column.

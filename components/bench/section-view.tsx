@@ -55,9 +55,6 @@ export function SectionView() {
   }, [fit, size, now, tried, focus, handles]);
 
   const shown = tried ?? now;
-  // Nobody reads along while a handle is held: the words come when there is time for them.
-  const told = useDeferredValue(shown);
-  const toldOf = useDeferredValue(assessment);
   // Written past React: it changes with every pixel.
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
     if (!place.current || !fit) return;
@@ -88,13 +85,20 @@ export function SectionView() {
       <ViewBar picture={picture}>
         <SliceSlider prescription={question.prescription} slice={slice} />
       </ViewBar>
-      <SectionWords drawing={told?.drawing} assessment={toldOf} />
+      <SectionWords drawing={shown?.drawing} assessment={assessment} />
     </div>
   );
 }
 
 /** The picture in words, for whoever does not see it. */
-const SectionWords = memo(function SectionWords({ drawing, assessment }: { drawing: SectionDrawing | undefined; assessment: Assessment | undefined }) {
+const SectionWords = memo(function SectionWords(shown: { drawing: SectionDrawing | undefined; assessment: Assessment | undefined }) {
+  // Nobody reads along while a handle is held: the words come when there is time for them, and make nothing else wait.
+  const drawing = useDeferredValue(shown.drawing);
+  const assessment = useDeferredValue(shown.assessment);
+  return <WordList drawing={drawing} assessment={assessment} />;
+});
+
+const WordList = memo(function WordList({ drawing, assessment }: { drawing: SectionDrawing | undefined; assessment: Assessment | undefined }) {
   // Displaced fat, and each multiple of a ghost, are pieces of their own that the same words may tell.
   const lines = drawing && assessment ? [...new Set(describeSection(drawing, assessment.phaseAxis, assessment.readoutAxis))] : [];
   return (

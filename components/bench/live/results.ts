@@ -2,6 +2,12 @@ import type { Assessment } from '@/lib/physics/model/assessment';
 import type { Case } from '@/lib/physics/model/case';
 import type { Ranking } from '@/lib/physics/model/remedy';
 
+/** A ranking with the question it answers. */
+export interface Ranked {
+  readonly question: Case;
+  readonly ranking: Ranking;
+}
+
 /** What the engine says about one sequence as it stands. */
 export interface SequenceResult {
   /** The question that was answered; another object means the answer is stale. */
@@ -9,8 +15,8 @@ export interface SequenceResult {
   readonly assessment?: Assessment;
   /** Why the question could not be put: which value, and what is allowed. */
   readonly refusal?: string;
-  /** The newest ranking there is, with the question it answers: it follows the assessment from a Worker. */
-  readonly ranked?: { readonly question: Case; readonly ranking: Ranking };
+  /** The newest ranking there is: it follows the assessment from a Worker. */
+  readonly ranked?: Ranked;
 }
 
 export type Results = Readonly<Record<string, SequenceResult>>;
