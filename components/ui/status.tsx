@@ -35,7 +35,8 @@ export function StatusProvider({ children }: { children: ReactNode }) {
       {children}
       <div
         role="status"
-        className="pointer-events-none fixed inset-x-0 top-16 z-50 flex justify-end px-4 print:hidden"
+        // In the corner that holds least: on the bench it lies over the ledger's cell that says the same.
+        className="pointer-events-none fixed bottom-0 left-0 z-50 flex w-full max-w-md p-2 lg:max-w-78 print:hidden"
       >
         {message && (
           <div
@@ -44,7 +45,7 @@ export function StatusProvider({ children }: { children: ReactNode }) {
             onMouseLeave={() => setHeld(false)}
             onFocus={() => setHeld(true)}
             onBlur={() => setHeld(false)}
-            className="pointer-events-auto flex max-w-prose items-center gap-3 rounded border border-ink bg-paper py-2 pr-2 pl-4 shadow-lg"
+            className="pointer-events-auto flex w-full items-center justify-between gap-3 rounded border border-ink bg-paper py-2 pr-2 pl-4 shadow-lg"
           >
             <span>{message.text}</span>
             <IconButton label="Dismiss" onClick={() => setMessage(null)}>
