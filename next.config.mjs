@@ -26,6 +26,11 @@ const config = {
   // Types are checked by "npm test", once, over the whole project; a start must not wait for it.
   typescript: { ignoreBuildErrors: true },
   serverExternalPackages: ['@node-rs/argon2', 'pg', 'pg-boss', '@react-pdf/renderer'],
+  // A router's fetch of a page that is not there streams "not found" with status 200. A shared show is only ever loaded
+  // whole, so what asks for its stream is sent where nothing is: 404, whatever the token.
+  rewrites: async () => ({
+    beforeFiles: ['rsc', 'next-router-prefetch'].map((key) => ({ source: '/shown/:token', has: [{ type: 'header', key }], destination: '/shown' })),
+  }),
   headers: async () => [{ source: '/:path*', headers }, { source: '/size', headers: privateLink }, { source: '/shown/:token', headers: privateLink }],
 };
 export default config;
