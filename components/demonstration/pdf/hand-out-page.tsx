@@ -45,7 +45,7 @@ function SlabAside({ scene, assessment }: { scene: ShownScene; assessment: Asses
   const curve = curveScene(oversamplingCurve(scene.question), slices.acquiredPartitions);
   return (
     <>
-      <Text style={[s.bold, { marginTop: 8 }]}>Partition {chosen.index + 1} of {slab.partitions.length}, simulated</Text>
+      <Text style={[s.bold, { marginTop: 8, marginBottom: 4 }]}>Partition {chosen.index + 1} of {slab.partitions.length}, simulated</Text>
       <SimulatedPdf question={scene.question} sliceOffsetMm={chosen.offsetMm} width={SIDE_PT} size={PARTITION} />
       <Text style={[s.bold, { marginTop: 4 }]}>Partitions with wrap against slice oversampling</Text>
       <ScenePdf scene={curve} {...CURVE} font={TEXT_FONT} width={SIDE_PT} />

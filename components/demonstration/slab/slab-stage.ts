@@ -78,7 +78,7 @@ export function slabStage({ question, slab, size, sliceOffsetMm }: SlabStageInpu
       ...bodyNodes(tissue, bounds, lane),
       ...sketch,
       ...stackNodes(slab, slices, lane),
-      ...joined(above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/'))),
+      ...joined(above.nodes.filter(({ name }) => !SAID_HERE.has(name) && !name.startsWith('level/'))).map((node) => offLines(node, bounds, mmPerPx)),
       ...wordNodes(slab, { widthMm, thickness, plateau, bounds, mmPerPx }),
       skirtNode(sources, slabMm, bounds, plateau),
       ...travels.flatMap((travel) => travelNodes(travel, { sides: AXIS_SIDES[sliceAxisOf(plane)], lane, mmPerPx, bounds, sketch })),
@@ -125,6 +125,19 @@ function skirtNode(sources: readonly SlabSource[], slabMm: number, bounds: Bound
     lines: [Array.from({ length: steps + 1 }, (_, i) => at(i))],
     stroke: { colour: 'ink', widthPx: 1.5, edge: 'dashed' },
   };
+}
+
+/**
+ * Words of the bench's slab that here would lie on a line: the sides' letters stand at the picture's ends, where the
+ * skirts have come down; the outermost numbers stand inside the acquired edge.
+ */
+function offLines(node: SceneNode, { left, right }: Bounds, mmPerPx: number): SceneNode {
+  if (node.kind !== 'text') return node;
+  if (node.name === 'partition/first') return { ...node, anchor: 'start', offsetPx: [0, 18] };
+  if (node.name === 'partition/last') return { ...node, anchor: 'end', offsetPx: [0, 18] };
+  if (!node.name.startsWith('letter/')) return node;
+  const inset = 12 * mmPerPx;
+  return { ...node, at: [node.name === 'letter/low' ? left + inset : right - inset, 0], offsetPx: [0, -10] };
 }
 
 const PARTITION = /^partition\/\d+(?<part>\/alias\/hatch|\/alias|)$/;
@@ -184,7 +197,8 @@ function chosenNodes(slab: SlabResult, offsetMm: number, thickness: number, top:
   const [from, to] = [chosen.offsetMm - thickness / 2, chosen.offsetMm + thickness / 2];
   return [
     {
-      kind: 'area', name: 'chosen-partition', rings: [box(from, to, [-top, lane[1]])],
+      // In two, so that the line of words between profile and body is crossed by nothing.
+      kind: 'area', name: 'chosen-partition', rings: [box(from, to, [-top, 0]), box(from, to, lane)],
       stroke: { colour: 'indigo', widthPx: 1.75, edge: 'solid' },
     },
   ];

@@ -46,7 +46,12 @@ describe('the slab made visible', () => {
   it('frames the partition that is looked at', () => {
     const { nodes } = stage(before, -94);
     const chosen = nodes.find(({ name }) => name === 'chosen-partition');
-    expect(chosen).toMatchObject({ rings: [[[-96, expect.any(Number)], [-92, expect.any(Number)], [-92, expect.any(Number)], [-96, expect.any(Number)]]] });
+    const ring = [[-96, expect.any(Number)], [-92, expect.any(Number)], [-92, expect.any(Number)], [-96, expect.any(Number)]];
+    expect(chosen).toMatchObject({ rings: [ring, ring] });
+    // Above the base line and in the body's lane: the words between the two are crossed by nothing.
+    const [above, below] = chosen?.kind === 'area' ? chosen.rings.map((one) => one.map(([, v]) => v)) : [];
+    expect(Math.max(...above!)).toBe(0);
+    expect(Math.min(...below!)).toBeGreaterThan(0);
   });
 
   it('cuts off what is acquired beyond the slab, whatever the number', () => {
