@@ -37,13 +37,13 @@ export function MailTable({ title, rows, empty, sendAgain }: {
           <tbody>
             {rows.map((row) => (
               <Tr key={row.id} className="align-top">
-                <Td className="whitespace-nowrap">{row.what}</Td>
+                <Td className="sm:whitespace-nowrap">{row.what}</Td>
                 <Td className="min-w-40">
                   {row.to}
                   {row.booking && <> · <Link href={`/bookings/${row.booking.id}`} className="text-link figures whitespace-nowrap">{row.booking.accession}</Link></>}
                 </Td>
                 <Td className="whitespace-nowrap">{row.since}</Td>
-                <Td className="min-w-60"><State row={row} /></Td>
+                <Td className="min-w-40 sm:min-w-60"><State row={row} /></Td>
                 <Td>
                   {row.maySendAgain && (
                     <ActionButton size="sm" action={() => sendAgain(row.id)} onDone={() => { say('The mail is on its way again.'); router.refresh(); }}>
