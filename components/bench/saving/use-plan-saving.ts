@@ -1,6 +1,7 @@
 'use client';
 
 import { useEffect, useRef, useState } from 'react';
+import { benchOfPlan } from '@/lib/presentation/bench-of-plan';
 import type { PlanView } from '@/lib/schemas/plan';
 import { useBench } from '../bench-context';
 import type { BenchDocument } from '../state/bench-document';
@@ -42,6 +43,11 @@ export function identityOfKept(kept: KeptEdits, stored: PlanIdentity): PlanIdent
   return stored.version > 0 ? { ...stored, version: 0 } : { ...stored, planId: kept.planId, version: kept.version };
 }
 
+/** What unsaved edits are kept for: the booking, the saved plan, or the choice of scanner and protocol. */
+export function keptSubject(bookingId: string | null, choice: string, { planId, version }: PlanIdentity): string {
+  return bookingId ?? (version > 0 ? `plan/${planId}` : choice);
+}
+
 export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: string): PlanSaving {
   const { store, live } = useBench();
   const [identity, setIdentity] = useState(first);
@@ -51,7 +57,8 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
   const newest = useNewestVersion(basis.bookingId);
   const known = useRef(identity);
   const gone = useRef(false);
-  const key = keptEditsKey(userId, basis.bookingId ?? `${basis.scannerId}/${basis.protocolId ?? ''}`);
+  const { bookingId } = basis;
+  const choice = `${basis.scannerId}/${basis.protocolId ?? ''}`;
 
   useEffect(() => {
     known.current = identity;
@@ -67,16 +74,18 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
   useEffect(() => {
     let waiting: ReturnType<typeof setTimeout> | null = null;
     let closed = false;
+    // Without a booking a saved plan has a bench of its own, and its edits wait there.
+    const keyNow = () => keptEditsKey(userId, keptSubject(bookingId, choice, known.current));
     const keep = (): void => {
       waiting = null;
       const { document, saved, past } = store.read();
       const untouched = document === saved || (saved === null && past.length === 0);
       const { planId, version } = known.current;
-      writeKeptEdits(sessionStorage, key, untouched ? null : { shape: 1, planId, version, document });
+      writeKeptEdits(sessionStorage, keyNow(), untouched ? null : { shape: 1, planId, version, document });
     };
     // After the first paint: the page that came from the server is the one that hydrates.
     queueMicrotask(() => {
-      const kept = closed ? null : readKeptEdits(sessionStorage, key);
+      const kept = closed ? null : readKeptEdits(sessionStorage, keyNow());
       if (!kept) return;
       store.dispatch({ type: 'replace-document', document: kept.document, saved: false });
       setIdentity((now) => identityOfKept(kept, now));
@@ -92,7 +101,7 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
       clearTimeout(waiting);
       keep();
     };
-  }, [key, store]);
+  }, [bookingId, choice, store, userId]);
 
   const meet = async (planId: string): Promise<boolean> => {
     const theirs = await getStoredPlan(planId);
@@ -105,7 +114,13 @@ export function usePlanSaving(first: PlanIdentity, basis: PlanBasis, userId: str
   const settle = async (result: Exclude<PutResult, { kind: 'unreached' }>, put: PutPlan, document: BenchDocument) => {
     if (result.kind === 'saved') {
       const { id, version, state, shortCode } = result.plan;
-      setIdentity({ planId: id, version, state, shortCode });
+      if (bookingId === null) {
+        // What was kept under the choice is saved now; the page, opened again, shows the plan and not the protocol.
+        writeKeptEdits(sessionStorage, keptEditsKey(userId, keptSubject(null, choice, identity)), null);
+        window.history.replaceState(null, '', benchOfPlan({ id, bookingId }));
+      }
+      known.current = { planId: id, version, state, shortCode };
+      setIdentity(known.current);
       setDifferences(result.plan.differences);
       setSaving({ kind: 'idle' });
       setRestored(false);

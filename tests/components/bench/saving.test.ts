@@ -3,7 +3,7 @@ import { keptEditsKey, readKeptEdits, writeKeptEdits, type KeptEdits } from '@/c
 import { putPlan, type PutPlan } from '@/components/bench/saving/put-plan';
 import type { PlanIdentity } from '@/components/bench/saving/plan-identity';
 import { isNews, type NewestVersion } from '@/components/bench/saving/use-newest-version';
-import { identityOfKept } from '@/components/bench/saving/use-plan-saving';
+import { identityOfKept, keptSubject } from '@/components/bench/saving/use-plan-saving';
 import { documentOfPlan, planInputOf, type PlanBasis } from '@/components/bench/state/plan-document';
 import { changedLeaves, withLeaf } from '@/components/bench/bench-form';
 import type { Case } from '@/lib/physics/model/case';
@@ -128,5 +128,14 @@ describe('what is news to an open bench', () => {
 
   it('is not a plan that was used, which a new one follows', () => {
     expect(isNews(newest('b', 4, 'used'), bench('a', 0))).toBe(false);
+  });
+});
+
+describe('what unsaved edits are kept for', () => {
+  it('is the booking; without one the saved plan, and before that the choice of scanner and protocol', () => {
+    const identity = (version: number): PlanIdentity => ({ planId: 'p', version, state: null, shortCode: null });
+    expect(keptSubject('b', 's/p', identity(2))).toBe('b');
+    expect(keptSubject(null, 's/p', identity(0))).toBe('s/p');
+    expect(keptSubject(null, 's/p', identity(1))).toBe('plan/p');
   });
 });

@@ -11,6 +11,7 @@ import { PageBody, PageHeader } from '@/components/ui/page';
 import { mayAttempt } from '@/lib/domain/access';
 import { asVersion } from '@/lib/http/as-version';
 import { loadPage } from '@/lib/http/load-page';
+import { benchOfPlan } from '@/lib/presentation/bench-of-plan';
 import { recentVersions } from '@/lib/presentation/recent-versions';
 import { listOutcomes } from '@/lib/services/outcome/list-outcomes';
 import { getPlan } from '@/lib/services/plan/get-plan';
@@ -46,7 +47,7 @@ export default async function PlanPage({ params, searchParams }: Props) {
         lead={`Plan, version ${plan.version}, ${plan.state}`}
         actions={
           <>
-            {plan.bookingId && <LinkButton href={`/bench/${plan.bookingId}`}>Open on the bench</LinkButton>}
+            <LinkButton href={benchOfPlan(plan)}>Open on the bench</LinkButton>
             <LinkButton variant="primary" href={sheet}>
               Plan sheet
             </LinkButton>
