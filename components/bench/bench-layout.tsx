@@ -38,7 +38,7 @@ export function BenchLayout(props: Omit<BenchProps, 'children'> & { children: Re
           <KeepClearPanel preset={props.keepClearPreset} asked={props.keepClearAsked} />
         </div>
       </div>
-      <Ledger>{props.mayEdit && <SaveCell plan={plan} />}</Ledger>
+      <Ledger protocol={props.protocolPrescriptions}>{props.mayEdit && <SaveCell plan={plan} />}</Ledger>
     </div>
   );
 }

@@ -1,6 +1,6 @@
 'use client';
 
-import type { ReactNode } from 'react';
+import { useMemo, type ReactNode } from 'react';
 import { Figure } from '@/components/ui/figure';
 import { cx } from '@/components/ui/class-names';
 import {
@@ -15,10 +15,17 @@ import {
 } from '@/lib/presentation/assessment-figures';
 import { phaseOversamplingSetting, sliceOversamplingSetting } from '@/lib/presentation/oversampling-form';
 import { remedyTitle } from '@/lib/presentation/remedy-words';
+import { geometryCase } from '@/lib/physics/assess/assess';
+import { detailOf } from '@/lib/physics/assess/detail-of';
+import type { Assessment } from '@/lib/physics/model/assessment';
+import type { Case } from '@/lib/physics/model/case';
+import type { Prescription } from '@/lib/physics/model/prescription';
+import { answerTo } from './live/results';
+import type { ProtocolPrescriptions } from './prescription-panel';
 import { useActiveResult, useActiveSequence, useBenchState } from './bench-context';
 
 /** Time, shots, SNR, voxel and fold of the active sequence, now and with what is tried; and what to tell the scanner. */
-export function Ledger({ children }: { children?: ReactNode }) {
+export function Ledger({ protocol, children }: { protocol: ProtocolPrescriptions; children?: ReactNode }) {
   const { assessment, question } = useActiveResult();
   const sequence = useActiveSequence();
   const trial = useBenchState((state) => state.trial);
@@ -33,6 +40,10 @@ export function Ledger({ children }: { children?: ReactNode }) {
   const sliceNext = next && sliceOversamplingSetting(next, scanner);
   const adopted = sequence.adopted.at(-1);
   const told = (a: typeof phase, b: typeof slice): string => (b ? `phase ${a.value}, slice ${b.value}` : a.value);
+  const base = protocol[sequence.id];
+  // What was adopted keeps showing what it gained: both figures are measured against the protocol's own prescription.
+  const planned = useMemo(() => (base ? detailOr(question, base) : undefined), [question, base]);
+  const reference = planned ?? assessment?.detail;
   const range = assessment && scanRangeFigure(after ?? assessment);
   return (
     <section aria-label="Ledger, now and tried" className="flex flex-wrap border-t border-line bg-paper xl:flex-nowrap">
@@ -45,7 +56,11 @@ export function Ledger({ children }: { children?: ReactNode }) {
         <>
           <FigureCell name="Scan time" value={pair(scanTimeFigure(assessment, now), after && next && scanTimeFigure(after, next))} note={range} />
           <FigureCell name="Shots" value={pair(shotsFigure(assessment), after && shotsFigure(after))} />
-          <FigureCell name="SNR" value={pair('1.00', after && snrFigure(after, assessment))} />
+          <FigureCell
+            name="SNR"
+            value={pair(snrFigure(assessment, { detail: reference }), after && snrFigure(after, { detail: reference }))}
+            note={planned ? 'of protocol' : 'of now'}
+          />
           <FigureCell name="Voxel, mm" value={pair(voxelFigure(assessment), after && voxelFigure(after))} wide />
           <FigureCell name="Fold" value={pair(foldFigure(assessment), after && foldFigure(after))} wide />
           <FigureCell
@@ -59,6 +74,11 @@ export function Ledger({ children }: { children?: ReactNode }) {
       {children}
     </section>
   );
+}
+
+/** Voxel and SNR of the protocol's prescription for this patient on this scanner; absent where the engine refuses a value. */
+function detailOr(question: Case, prescription: Prescription): Assessment['detail'] {
+  return answerTo((asked) => ({ detail: detailOf(geometryCase(asked)) }) as Assessment, { ...question, prescription }).assessment?.detail;
 }
 
 function Cell({ name, children, className }: { name: string; children: ReactNode; className?: string }) {

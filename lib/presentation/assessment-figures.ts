@@ -28,8 +28,8 @@ export function scanRangeFigure({ time }: Assessment): string | undefined {
   return range.includes('–') ? range : undefined;
 }
 
-/** SNR against the present prescription; alone it would have no unit. */
-export function snrFigure(assessment: Assessment, present: Assessment): string {
+/** SNR against another prescription's; alone it would have no unit. */
+export function snrFigure(assessment: Pick<Assessment, 'detail'>, present: Pick<Assessment, 'detail'>): string {
   if (!assessment.detail || !present.detail) return '—';
   return formatQuantity(assessment.detail.snr / present.detail.snr, 'ratio');
 }
