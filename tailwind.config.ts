@@ -22,6 +22,7 @@ const config: Config = {
       'indigo-deep': 'var(--indigo-deep)',
       'on-indigo': 'var(--on-indigo)',
       wash: 'var(--wash)',
+      unlit: 'var(--unlit)',
       thread: 'var(--thread)',
       'thread-wash': 'var(--thread-wash)',
       ochre: 'var(--ochre)',

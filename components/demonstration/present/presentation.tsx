@@ -87,7 +87,7 @@ export function Presentation({ demonstration }: { demonstration: DemonstrationVi
             {leave}
           </Show>
         )}
-        {blank && <div role="status" className="fixed inset-0 bg-black" data-blank><span className="sr-only">The screen is dark. B brings it back.</span></div>}
+        {blank && <div role="status" className="fixed inset-0 bg-unlit" data-blank><span className="sr-only">The screen is dark. B brings it back.</span></div>}
         {blocked && startedAt !== null && (
           <p role="alert" className="fixed right-4 bottom-4 max-w-md bg-ink px-4 py-2 text-paper">
             The browser kept the presenter’s window from opening. Allow windows for this site, leave, and start again.
