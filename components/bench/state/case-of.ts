@@ -19,6 +19,16 @@ export function caseOf(
   };
 }
 
+/** Whether a question was put about the document as it stands: edits replace objects, they never change them. */
+export function isAbout(question: Case, document: BenchDocument, sequence: BenchSequence): boolean {
+  return (
+    question.patient === document.patient &&
+    question.prescription === sequence.prescription &&
+    question.keepClear === keepClearOf(document, sequence) &&
+    question.scanner === document.scanner
+  );
+}
+
 /** The same question after a remedy, for drawing what is tried. */
 export function triedCase(present: Case, remedy: Remedy): Case {
   return {

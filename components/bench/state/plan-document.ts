@@ -7,6 +7,7 @@ import type { ProtocolView } from '@/lib/schemas/protocol';
 import { assumedPatient } from '../free-patient';
 import type { Results } from '../live/results';
 import type { BenchDocument } from './bench-document';
+import { isAbout } from './case-of';
 
 /** What a plan rests on besides what is edited: named by id and version, never sent whole. */
 export interface PlanBasis {
@@ -79,18 +80,22 @@ export function documentOfProtocol(protocol: ProtocolView, scanner: Scanner): Be
   };
 }
 
-/** What is sent to be saved, with what the bench showed, so that the server can say where its own answer differs. */
+/**
+ * What is sent to be saved, with what the bench showed, so that the server can say where its own answer differs. An
+ * answer to what stood there before, while the newer one is on its way, is nothing the bench showed of this.
+ */
 export function planInputOf(document: BenchDocument, basis: PlanBasis, results: Results): PlanInput {
   return {
     ...basis,
     patient: document.patient,
     keepClear: document.keepClear,
     sequences: document.sequences.map((sequence) => {
-      const assessment = results[sequence.id]?.assessment;
+      const { question, assessment } = results[sequence.id] ?? {};
+      const shown = question && isAbout(question, document, sequence) ? assessment : undefined;
       return {
         ...sequence,
         adopted: [...sequence.adopted],
-        ...(assessment ? { seen: seenOf(assessment) } : {}),
+        ...(shown ? { seen: seenOf(shown) } : {}),
       };
     }),
     note: '',

@@ -25,14 +25,18 @@ const answer = (status: number, body: unknown) => () => Promise.resolve(new Resp
 describe('what is sent to be saved', () => {
   it('is what the schema takes, with what the bench showed, and comes back as the same bench', () => {
     const document = benchDocument();
-    const results = { a: { question: {} as Case, assessment: { verdict: 'no-fold-expected', time: { scanS: 128.04 } } as Assessment } };
+    const { patient, keepClear, scanner, sequences } = document;
+    const question = { patient, keepClear, scanner, prescription: sequences[0]!.prescription } as Case;
+    const results = { a: { question, assessment: { verdict: 'no-fold-expected', time: { scanS: 128.04 } } as Assessment } };
     const sent = planInput.parse(planInputOf(document, basis, results));
     expect(sent.sequences[0]?.seen).toEqual({ verdict: 'no-fold-expected', scanS: 128 });
     expect(sent.sequences[1]?.seen).toBeUndefined();
+    const older = { a: { ...results.a, question: { ...question, patient: { ...patient } } } };
+    expect(planInputOf(document, basis, older).sequences[0]?.seen).toBeUndefined();
     const { seen: _seen, ...first } = sent.sequences[0]!;
     expect(first).toEqual(document.sequences[0]);
-    const sequences = sent.sequences.map(({ seen: _, ...sequence }) => sequence);
-    expect(documentOfPlan({ ...sent, sequences, scanner: document.scanner })).toEqual(document);
+    const stored = sent.sequences.map(({ seen: _, ...sequence }) => sequence);
+    expect(documentOfPlan({ ...sent, sequences: stored, scanner })).toEqual(document);
   });
 });
 
