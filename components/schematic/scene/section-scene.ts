@@ -209,7 +209,10 @@ function sameWindow(a: WindowFrame, b: WindowFrame): boolean {
   return figures(a).every((figure, i) => Math.abs(figure - figures(b)[i]!) < 1e-6);
 }
 
-/** Beside the end of the edge, off the picture: now below the line, what is tried above it. */
+/**
+ * Beside the end of the edge, off the picture: now below the line, what is tried above it. Where there is no room beside
+ * a level edge the words go to the corner, clear of those over and under the body that say where tissue comes from.
+ */
 function edgeLabel(name: string, text: string, frame: WindowFrame, which: 'now' | 'tried', input: SectionSceneInput): TextNode {
   const across = Math.abs(frame.phase[1]) > Math.abs(frame.phase[0]);
   const towards = across ? frame.phase[1] : frame.phase[0];
@@ -219,18 +222,11 @@ function edgeLabel(name: string, text: string, frame: WindowFrame, which: 'now' 
   const end = readoutSign * (frame.halfReadoutMm + OVERHANG_MM);
   const at = inWindow(frame, sign * frame.halfAcquiredMm, end);
   const { anchor } = anchorWithin(text, at, input.bounds, input.mmPerPx);
-  const beside = across && anchor === 'start';
-  const above = which === 'now' ? -10 : -26;
-  return {
-    kind: 'text',
-    name,
-    text,
-    at,
-    offsetPx: beside ? [8, which === 'now' ? 13 : -5] : [0, above],
-    anchor: across ? anchor : 'middle',
-    size: 'note',
-    colour: which === 'now' ? 'ink-soft' : 'indigo',
-  };
+  const words = { kind: 'text', name, text, size: 'note', colour: which === 'now' ? 'ink-soft' : 'indigo' } as const;
+  if (!across) return { ...words, at, offsetPx: [0, which === 'now' ? -10 : -26], anchor: 'middle' };
+  if (anchor === 'start') return { ...words, at, offsetPx: [8, which === 'now' ? 13 : -5], anchor };
+  const { right, top } = input.bounds;
+  return { ...words, at: [right, top], offsetPx: [-8, which === 'now' ? 36 : 18], anchor: 'end' };
 }
 
 function areaNodes(drawing: SectionDrawing, question: Case, toRing: (ring: SectionRing) => Ring): SceneNode[] {

@@ -73,6 +73,16 @@ describe('the section as a scene', () => {
     expect(named(sceneOf(draw(), { tried: draw({ fovPhaseMm: 320 }) }), 'tried-fov')).toHaveLength(1);
   });
 
+  it('keeps the words of both widths off the body where there is no room beside the window', () => {
+    const [now, tried] = [draw(), draw({ acquiredLines: 256 })];
+    const bounds = sectionBounds(now, tried);
+    // A phone: a pixel for 2 mm.
+    const narrow = sectionScene({ ...now, tried, bounds, mmPerPx: 2 });
+    const labels = ['tried-edge/label', 'acquired-edge/label'].map((name) => named(narrow, name)[0] as TextNode);
+    for (const label of labels) expect(label).toMatchObject({ at: [bounds.right, bounds.top], anchor: 'end' });
+    expect(labels[1]!.offsetPx[1] - labels[0]!.offsetPx[1]).toBeGreaterThanOrEqual(16);
+  });
+
   it('hatches of a ghost only what has a certain place, and outlines the rest dashed and in words', () => {
     const { question, drawing, asGiven } = draw({ acceleration: accelerated(2, { unfolding: 'image-domain-grid-ends' }) });
     const whole = drawing.ghosts.find(({ landed }) => landed.length > 0)!;
