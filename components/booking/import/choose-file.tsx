@@ -1,12 +1,22 @@
 'use client';
 
-import { useId, useState } from 'react';
+import { useEffect, useEffectEvent, useId, useRef, useState } from 'react';
 import { cx } from '@/components/ui/class-names';
 
 /** A file by dropping or by the platform's own chooser. It stays in the browser. */
 export function ChooseFile({ onChosen, mask }: { onChosen: (file: File) => void; mask: string }) {
   const id = useId();
   const [over, setOver] = useState(false);
+  const chooser = useRef<HTMLInputElement>(null);
+  const take = () => {
+    const chosen = chooser.current?.files?.[0];
+    if (!chosen) return;
+    chooser.current!.value = '';
+    onChosen(chosen);
+  };
+  // A quick hand has chosen before the script ran: then nothing told us.
+  const takeEarly = useEffectEvent(take);
+  useEffect(() => takeEarly(), []);
   return (
     <div
       onDragOver={(event) => {
@@ -30,15 +40,12 @@ export function ChooseFile({ onChosen, mask }: { onChosen: (file: File) => void;
         Accession numbers have to be in the form <span className="figures">{mask}</span>.
       </p>
       <input
+        ref={chooser}
         id={id}
         type="file"
         aria-describedby={`${id}-note`}
         accept=".csv,.tsv,.txt,.json,text/csv,application/json,application/fhir+json"
-        onChange={(event) => {
-          const chosen = event.target.files?.[0];
-          if (chosen) onChosen(chosen);
-          event.target.value = '';
-        }}
+        onChange={take}
         className="mx-auto mt-5 block max-w-full rounded border border-line-strong bg-paper p-2 file:mr-4 file:min-h-9 file:cursor-pointer file:rounded file:border-0 file:bg-indigo file:px-4 file:font-semibold file:text-on-indigo"
       />
     </div>

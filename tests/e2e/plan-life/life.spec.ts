@@ -41,7 +41,13 @@ test('a plan with fold left: asked, sent back with a reason, signed off, and its
   await page.goto(planUrl);
   // Everything is filled in as planned: what was seen, and record.
   await page.getByText('None', { exact: true }).click();
-  await page.getByRole('button', { name: 'Record the outcome; the plan becomes used' }).click();
+  // The same by keys: on to the next answer, back again, and record.
+  const none = page.getByRole('radio', { name: 'None', exact: true });
+  await none.press('ArrowRight');
+  await expect(none).not.toBeChecked();
+  await page.keyboard.press('ArrowLeft');
+  await expect(none).toBeChecked();
+  await page.getByRole('button', { name: 'Record the outcome; the plan becomes used' }).press('Enter');
   await expect(page.getByText('Plan, version 1, used')).toBeVisible();
   await expect(page.locator('[data-outcome="none"]')).toContainText('as planned');
   await expect(page.getByRole('button', { name: /for use|draft/ })).toHaveCount(0);
