@@ -45,7 +45,7 @@ export function VersionHistory({
                   Version <span className="figures">{row.version}</span>
                 </Link>
               </Td>
-              <Td className="align-top whitespace-nowrap">{row.when}</Td>
+              <Td className="align-top sm:whitespace-nowrap">{row.when}</Td>
               <Td>
                 {row.changes.length === 0 ? (
                   <span className="text-ink-soft">first version</span>
